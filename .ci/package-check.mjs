@@ -1,0 +1,81 @@
+// Checks the package that was built: it holds what a user needs and nothing else, stays small, and comes out the same,
+// byte for byte, when it is built again with the same SOURCE_DATE_EPOCH. Knows nothing of what the programs do.
+// Source of the archive's layout: the .ZIP file format specification, section 4.3.12 (central directory).
+import { spawnSync } from 'node:child_process';
+import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import os from 'node:os';
+import path from 'node:path';
+
+const root = path.resolve(import.meta.dirname, '..');
+const LARGEST_BYTES = 2_000_000;
+const CONTENTS = [
+  '[Content_Types].xml',
+  'extension.vsixmanifest',
+  'extension/LICENSE.txt',
+  'extension/changelog.md',
+  'extension/client/media/icon.png',
+  'extension/client/media/language-dark.svg',
+  'extension/client/media/language-light.svg',
+  'extension/dist/ThirdPartyNotices.txt',
+  ...(existsSync(path.join(root, 'server/cli.ts')) ? ['extension/dist/cli.cjs'] : []),
+  'extension/dist/extension.cjs',
+  'extension/dist/server.cjs',
+  'extension/grammar/language-configuration.json',
+  'extension/grammar/stokehold.tmLanguage.json',
+  'extension/package.json',
+  'extension/package.nls.json',
+  'extension/readme.md',
+];
+
+/** The checks by name; each throws saying what is wrong. */
+export const packageChecks = {
+  'the package holds what it should and nothing else'() {
+    const found = entriesOf(readFileSync(packagePath(path.join(root, 'dist'))));
+    const surplus = found.filter((entry) => !CONTENTS.includes(entry));
+    const missing = CONTENTS.filter((entry) => !found.includes(entry));
+    if (surplus.length + missing.length > 0) {
+      throw new Error(`in the package but not expected: [${surplus.join(', ')}]; missing: [${missing.join(', ')}]`);
+    }
+  },
+  'the package is smaller than 2 MB'() {
+    const { length } = readFileSync(packagePath(path.join(root, 'dist')));
+    if (length >= LARGEST_BYTES) throw new Error(`it has ${length} bytes`);
+  },
+  'the package is the same when built again'() {
+    const first = buildAside();
+    const second = buildAside();
+    if (!first.equals(second)) throw new Error('two builds with one SOURCE_DATE_EPOCH differ');
+  },
+};
+
+function buildAside() {
+  const folder = mkdtempSync(path.join(os.tmpdir(), 'stokehold-package-'));
+  try {
+    const args = ['run', '--silent', 'package', '--', '--out', `${folder}${path.sep}`];
+    const env = { ...process.env, SOURCE_DATE_EPOCH: '1700000000' };
+    const result = spawnSync('npm', args, { cwd: root, env, encoding: 'utf8' });
+    if (result.status !== 0)
+      throw new Error(`packaging ended with ${result.status}:\n${result.stdout}${result.stderr}`);
+    return readFileSync(packagePath(folder));
+  } finally {
+    rmSync(folder, { recursive: true });
+  }
+}
+
+function packagePath(folder) {
+  const { version } = JSON.parse(readFileSync(path.join(root, 'package.json'), 'utf8'));
+  return path.join(folder, `stokehold-${version}.vsix`);
+}
+
+/** The names in an archive's central directory. */
+function entriesOf(archive) {
+  const end = archive.lastIndexOf(Buffer.from('PK\x05\x06', 'latin1'));
+  const names = [];
+  let offset = archive.readUInt32LE(end + 16);
+  for (let left = archive.readUInt16LE(end + 10); left > 0; left -= 1) {
+    const nameLength = archive.readUInt16LE(offset + 28);
+    names.push(archive.toString('utf8', offset + 46, offset + 46 + nameLength));
+    offset += 46 + nameLength + archive.readUInt16LE(offset + 30) + archive.readUInt16LE(offset + 32);
+  }
+  return names;
+}
