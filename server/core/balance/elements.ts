@@ -1,0 +1,88 @@
+// Sums of atoms: of a mixture per kilogram, and of the two sides of a written equation with what is missing on each.
+// Knows no energies and changes no coefficient. Invariant: an equation's sums are exact, `balanced` has no tolerance.
+// Charge is conserved like an element and is listed under `charge`.
+
+import Fraction from 'fraction.js';
+import type { Formula } from '../substance/formula.ts';
+import type { Substance } from '../substance/substance.ts';
+import { exactNumber, zero } from './exact-linear.ts';
+
+/** A substance and its share of the mixture's mass, 0 to 1. */
+export interface Portion {
+  readonly substance: Substance;
+  readonly massShare: number;
+}
+
+/** mol of each element per kg of a mixture. The shares are taken as they are; they should add up to 1. */
+export function mixtureMolPerKg(portions: readonly Portion[]): ReadonlyMap<string, number> {
+  const total = new Map<string, number>();
+  for (const { substance, massShare } of portions) {
+    for (const [symbol, mol] of substance.molPerKg) total.set(symbol, (total.get(symbol) ?? 0) + massShare * mol);
+  }
+  return total;
+}
+
+/** A coefficient as written: a number, or numerator and denominator. */
+export type Coefficient = number | readonly [number, number];
+
+export interface EquationTerm {
+  readonly coefficient: Coefficient;
+  readonly formula: Formula;
+}
+
+/** One line of an equation's account. `difference` is right less left: positive when the left side lacks atoms. */
+export interface ElementSum {
+  /** An element symbol, or `charge`. */
+  readonly element: string;
+  readonly left: number;
+  readonly right: number;
+  readonly difference: number;
+}
+
+/** The sums of both sides, elements in order of first appearance, charge last where any species carries one. */
+export function equationElements(
+  left: readonly EquationTerm[],
+  right: readonly EquationTerm[],
+): { readonly sums: readonly ElementSum[]; readonly balanced: boolean } {
+  const elements = elementsOfFormulas([...left, ...right].map((term) => term.formula));
+  const sums = elements.map((element) => ({
+    element,
+    left: sumOfSide(left, element),
+    right: sumOfSide(right, element),
+  }));
+  return {
+    sums: sums.map((sum) => ({
+      element: sum.element,
+      left: sum.left.valueOf(),
+      right: sum.right.valueOf(),
+      difference: sum.right.sub(sum.left).valueOf(),
+    })),
+    balanced: sums.every((sum) => sum.left.equals(sum.right)),
+  };
+}
+
+/** What must be conserved among these formulas: their elements, and `charge` where one of them is charged. */
+export function elementsOfFormulas(formulas: readonly Formula[]): readonly string[] {
+  const elements = new Set(formulas.flatMap((formula) => [...formula.composition.keys()]));
+  return formulas.some((formula) => formula.charge !== 0) ? [...elements, chargeElement] : [...elements];
+}
+
+/** Exact atoms of an element (or elementary charges) in one formula unit. */
+export function countOfElement(formula: Formula, element: string): Fraction {
+  return exactNumber(element === chargeElement ? formula.charge : (formula.composition.get(element) ?? 0));
+}
+
+export const chargeElement = 'charge';
+
+function sumOfSide(side: readonly EquationTerm[], element: string): Fraction {
+  return side.reduce(
+    (sum, term) => sum.add(exactCoefficient(term.coefficient).mul(countOfElement(term.formula, element))),
+    zero,
+  );
+}
+
+function exactCoefficient(coefficient: Coefficient): Fraction {
+  if (typeof coefficient === 'number') return exactNumber(coefficient);
+  const [numerator, denominator] = coefficient;
+  return denominator === 0 ? zero : exactNumber(numerator).div(exactNumber(denominator));
+}
