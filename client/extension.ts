@@ -1,10 +1,15 @@
 // Starts the language server when the editor first shows a scenario and hands everything else to the language client.
-// Knows no syntax, does no arithmetic and reads no file: the server answers, the editor shows. Invariant: one server a
-// window, ended with the window. Source: the language client's own documentation of `vscode-languageclient/node`.
+// Knows no syntax and does no arithmetic: the server answers, the editor shows. Invariant: one server a window, ended
+// with the window. Source: the language client's own documentation of `vscode-languageclient/node`.
 import * as path from 'node:path';
-import type { ExtensionContext } from 'vscode';
-import { LanguageClient, TransportKind } from 'vscode-languageclient/node';
-import type { LanguageClientOptions, ServerOptions } from 'vscode-languageclient/node';
+import { commands, type ExtensionContext } from 'vscode';
+import {
+  LanguageClient,
+  TransportKind,
+  type LanguageClientOptions,
+  type ServerOptions,
+} from 'vscode-languageclient/node';
+import { readFile } from './read-file.ts';
 
 /** What other extensions and the editor tests may ask of the activated extension. */
 export interface StokeholdApi {
@@ -18,10 +23,21 @@ let client: LanguageClient | undefined;
 export function activate(context: ExtensionContext): StokeholdApi {
   const serverModule = context.asAbsolutePath(path.join('dist', 'server.cjs'));
   const serverOptions: ServerOptions = { module: serverModule, transport: TransportKind.ipc };
-  // No scheme is named: scenarios in unsaved buffers, remote folders and virtual workspaces are served alike.
-  const clientOptions: LanguageClientOptions = { documentSelector: [{ language: 'stokehold' }] };
+  const clientOptions: LanguageClientOptions = {
+    // No scheme is named: scenarios in unsaved buffers, remote folders and virtual workspaces are served alike.
+    documentSelector: [{ language: 'stokehold' }],
+    initializationOptions: { readFile: true },
+  };
   const started = new LanguageClient('stokehold', 'Stokehold', serverOptions, clientOptions);
   client = started;
+  context.subscriptions.push(
+    started.onRequest('stokehold/readFile', ({ uri }: { uri: string }) => readFile(uri)),
+    // A server that failed too often is not started again by the client itself, so there is a way to ask for it.
+    commands.registerCommand('stokehold.restartServer', () => started.restart()),
+    commands.registerCommand('stokehold.showLog', () => {
+      started.outputChannel.show();
+    }),
+  );
   return { ready: started.start() };
 }
 
