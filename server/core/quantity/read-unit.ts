@@ -38,7 +38,7 @@ export type UnitFault =
       readonly fault: 'unknown';
       readonly index: number;
       readonly word: string;
-      /** Up to three units that may be meant, best first. */
+      /** Up to three texts that may be meant, best first; each replaces the word together with its power. */
       readonly offers: readonly string[];
       readonly why?: string;
     }
@@ -123,7 +123,7 @@ interface Factor {
 function readAfresh(tokens: readonly UnitTokenLike[]): UnitReading {
   for (const [index, token] of tokens.entries()) {
     if (token.kind !== 'word' || findUnitWord(token.text)) continue;
-    return failed({ fault: 'unknown', index, word: token.text, ...explainUnitWord(token.text) });
+    return failed({ fault: 'unknown', index, word: token.text, ...explainUnitWord(token.text, token.power) });
   }
   const factors = readFactors(tokens);
   if ('fault' in factors) return failed(factors);
@@ -144,6 +144,8 @@ function readFactors(tokens: readonly UnitTokenLike[]): Factor[] | UnitFault {
   let bracketStart = -1;
   let divided = false;
   let wantsOperand = true;
+  // The first product behind a division; it is read on as if all that follows divides, which is what is offered.
+  let ambiguousIndex: number | undefined;
   for (const [index, token] of tokens.entries()) {
     const stray: UnitFault = { fault: 'stray', index };
     switch (token.kind) {
@@ -173,7 +175,6 @@ function readFactors(tokens: readonly UnitTokenLike[]): Factor[] | UnitFault {
         // `per year` and `/year` may open a unit, but only once and only at its start.
         if (wantsOperand && index > 0) return stray;
         if (bracketStart >= 0) {
-          if (index > 0 && tokens[index - 1]?.kind === 'open') return stray;
           sign = divided ? 1 : -1;
         } else {
           divided = true;
@@ -183,14 +184,13 @@ function readFactors(tokens: readonly UnitTokenLike[]): Factor[] | UnitFault {
         break;
       case 'times':
         if (wantsOperand) return stray;
-        if (bracketStart >= 0 ? sign !== (divided ? -1 : 1) : divided) {
-          return { fault: 'ambiguous', index, offer: writeWithBrackets(tokens) };
-        }
+        if (bracketStart >= 0 ? sign !== (divided ? -1 : 1) : divided) ambiguousIndex ??= index;
         wantsOperand = true;
         break;
     }
   }
   if (tokens.length > 0 && (wantsOperand || bracketStart >= 0)) return { fault: 'stray', index: tokens.length - 1 };
+  if (ambiguousIndex !== undefined) return { fault: 'ambiguous', index: ambiguousIndex, offer: writeInSteps(factors) };
   return factors;
 }
 
@@ -206,31 +206,8 @@ function raiseFrom(factors: Factor[], start: number, power: number): void {
   }
 }
 
-/** The tokens as text, each run of words that follows a division put in brackets: `J/kg K/s` becomes `J/(kg K)/s`. */
-function writeWithBrackets(tokens: readonly UnitTokenLike[]): string {
-  const parts: string[] = [];
-  let run: string[] | undefined;
-  const endRun = (): void => {
-    if (run) parts.push(run.length > 1 ? `(${run.join(' ')})` : run.join(''));
-    run = undefined;
-  };
-  for (const token of tokens) {
-    if (token.kind === 'over') {
-      endRun();
-      parts.push('/');
-      run = [];
-    } else if (token.kind === 'word') {
-      const text = writeWord(token.text, token.power);
-      if (run) run.push(text);
-      else parts.push(parts.length > 0 ? ` ${text}` : text);
-    }
-  }
-  endRun();
-  return parts.join('');
-}
-
 function writeWord(symbol: string, power: number): string {
-  return power === 1 ? symbol : `${symbol}${power < 0 ? '^' : ''}${power}`;
+  return power === 1 ? symbol : `${symbol}${power}`;
 }
 
 const stepUnits: Readonly<Record<string, string>> = {
@@ -246,13 +223,14 @@ function findScaleInCompound(tokens: readonly UnitTokenLike[], factors: readonly
   for (const [index, token] of tokens.entries()) {
     const word = token.kind === 'word' ? findUnitWord(token.text) : undefined;
     if (!word || (word.scale !== 'temperature' && word.scale !== 'gauge-pressure')) continue;
-    const steps = factors.map(({ word: factor, power }) => ({
-      symbol: stepUnits[factor.symbol] ?? factor.symbol,
-      power,
-    }));
-    return { fault: 'scale-in-compound', index, word: token.text, offer: writeFactors(steps) };
+    return { fault: 'scale-in-compound', index, word: token.text, offer: writeInSteps(factors) };
   }
   return undefined;
+}
+
+/** The compound with the step of each scale in the scale's place: kelvins for degrees Celsius. */
+function writeInSteps(factors: readonly Factor[]): string {
+  return writeFactors(factors.map(({ word, power }) => ({ symbol: stepUnits[word.symbol] ?? word.symbol, power })));
 }
 
 function combine(factors: readonly Factor[]): UnitReading {

@@ -3,7 +3,7 @@
 // It offers at most three and explains those where every guess would be dangerous (a `ton` is three things).
 // Invariant: whatever is offered can be read by read-unit.ts, which a test checks for the whole table.
 
-import { listUnitWords } from './unit-words.ts';
+import { isUnitWord, listUnitWords } from './unit-words.ts';
 
 /** Near spellings, best first, and a sentence where the word needs one. */
 export interface UnitSuggestions {
@@ -18,12 +18,16 @@ export function suggestUnits(word: string): readonly string[] {
   return explainUnitWord(word).offers;
 }
 
-/** `suggestUnits` with a sentence for words that are no slip but have no single meaning here. */
-export function explainUnitWord(word: string): UnitSuggestions {
-  const known = otherSpellings.get(word) ?? otherSpellings.get(word.toLowerCase());
+/**
+ * `suggestUnits` with a sentence for words that are no slip but have no single meaning here. The offers carry the word's
+ * power (`in3` gets `inch3`); what cannot carry one is not offered then.
+ */
+export function explainUnitWord(word: string, power = 1): UnitSuggestions {
+  const known = findOtherSpelling(power === 1 ? word : `${word}${power}`);
   if (known) return known;
-  const offers = [...byName(word), ...byCase(word), ...bySlip(word)];
-  return { offers: [...new Set(offers)].slice(0, mostOffers) };
+  const bare = findOtherSpelling(word) ?? { offers: [...byName(word), ...byCase(word), ...bySlip(word)] };
+  const offers = power === 1 ? bare.offers : bare.offers.filter(isUnitWord).map((offer) => raised(offer, power));
+  return { ...bare, offers: [...new Set(offers)].slice(0, mostOffers) };
 }
 
 /** The words that `explainUnitWord` answers from its table, for the tests. */
@@ -47,8 +51,9 @@ const otherSpellings: ReadonlyMap<string, UnitSuggestions> = new Map(
       ['ton', ['t', 'short_ton', 'long_ton'], threeTons],
       ['tons', ['t', 'short_ton', 'long_ton'], threeTons],
       ['Mg', ['t', 'mg'], 'Mg is magnesium here.'],
-      ['Nm', ['N m'], referenceState],
-      ['Sm', ['m3'], referenceState],
+      ['Nm', ['N m']],
+      ['Nm3', ['m3'], referenceState],
+      ['Sm3', ['m3'], referenceState],
       ['scf', ['ft3'], referenceState],
       ['month', ['d', 'week', 'year'], 'Months differ in length.'],
       ['months', ['d', 'week', 'year'], 'Months differ in length.'],
@@ -82,6 +87,8 @@ const otherSpellings: ReadonlyMap<string, UnitSuggestions> = new Map(
       ['cc', ['cm3']],
       ['ccm', ['cm3']],
       ['sqm', ['m2']],
+      ['sqft', ['ft2']],
+      ['cuft', ['ft3']],
       ['cbm', ['m3']],
       ['gallon', ['gal', 'gal_imp']],
       ['gallons', ['gal', 'gal_imp']],
@@ -108,6 +115,14 @@ const otherSpellings: ReadonlyMap<string, UnitSuggestions> = new Map(
     ] as const
   ).map(([word, offers, why]) => [word, why === undefined ? { offers } : { offers, why }]),
 );
+
+function findOtherSpelling(word: string): UnitSuggestions | undefined {
+  return otherSpellings.get(word) ?? otherSpellings.get(word.toLowerCase());
+}
+
+function raised(word: string, power: number): string {
+  return power < 0 ? `${word}^${power}` : `${word}${power}`;
+}
 
 function byName(word: string): string[] {
   const lower = word.toLowerCase();

@@ -52,6 +52,8 @@ describe('a unit is read', () => {
     ['(kg m)^2', 'kg2 m2', 1, 1],
     ['J/(kg K)^2', 'J/(kg2 K2)', 1, 1],
     ['W/(m2/K)', 'W K/m2', 1, 1],
+    ['(J/K) mol', 'J mol/K', 1, 1],
+    ['J/(kg K)/s', 'J/(kg K s)', 1, 1],
     ['per year', '1/year', 1, 31557600],
     ['t per year', 't/year', 1000, 31557600],
     ['/h', '1/h', 1, 3600],
@@ -139,7 +141,10 @@ describe('a slip is a fault with its place', () => {
   test.each([
     ['J/kg K', 2 + 1, 'J/(kg K)'],
     ['J/kg*K', 3, 'J/(kg K)'],
-    ['J/mol K/s', 3, 'J/(mol K)/s'],
+    ['J/mol K/s', 3, 'J/(mol K s)'],
+    ['J/kg degC', 3, 'J/(kg K)'],
+    ['W/(kg/m K)', 6, 'W m K/kg'],
+    ['(W/m K)', 4, 'W/(m K)'],
     ['kg m/s2 K mol', 5, 'kg m/(s2 K mol)'],
     ['J/(kg K) m', 7, 'J/(kg K m)'],
   ])('%s is ambiguous and %s is offered', (text, index, offer) => {
@@ -270,6 +275,23 @@ describe('words', () => {
     expect(found.slice(0, offers.length)).toEqual(offers);
     expect(found.length).toBeLessThanOrEqual(3);
     if (offers.length === 0) expect(found).toEqual([]);
+  });
+
+  test.each([
+    ['Nm3', ['m3']],
+    ['Nm', ['N m']],
+    ['kg/Nm3', ['m3']],
+    ['in^3', ['inch3']],
+    ['sec^-2', ['s^-2']],
+    ['kph2', []],
+  ])('offers for %s carry its power', (text, offers) => {
+    expect(fault(text)).toMatchObject({ fault: 'unknown', offers });
+    for (const offer of offers) expect(readUnitText(offer).ok).toBe(true);
+  });
+
+  test('a gas volume without its reference state is explained', () => {
+    expect(fault('Nm3')).toMatchObject({ why: expect.stringContaining('reference state') as string });
+    expect(fault('ton')).toMatchObject({ why: expect.stringContaining('2240 lb') as string });
   });
 
   test('a card defines the unit and names its source', () => {

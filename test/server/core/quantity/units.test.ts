@@ -4,6 +4,11 @@
 import Fraction from 'fraction.js';
 import { describe, expect, test } from 'vitest';
 import { BASIS_WORDS, KIND_WORDS, RESERVED_WORDS } from '../../../../grammar/words.ts';
+import {
+  celsiusZeroK,
+  molarGasConstantJPerMolK,
+  standardAtmospherePa,
+} from '../../../../server/core/quantity/constants.ts';
 import { readUnitText, fromSi, toSi, unitCard } from '../../../../server/core/quantity/read-unit.ts';
 import type { Unit } from '../../../../server/core/quantity/read-unit.ts';
 import { listOtherSpellings } from '../../../../server/core/quantity/suggest-units.ts';
@@ -132,4 +137,11 @@ describe(`factors against ${reference.source}`, () => {
 test('a gauge unit has the step of its absolute unit', () => {
   expect(toSi(1, unit('barg'))).toBe(toSi(1, unit('bar')));
   expect(toSi(1, unit('psig'))).toBe(toSi(1, unit('psi')));
+});
+
+test('the constants agree with the table', () => {
+  expect(toSi(1, unit('atm'))).toBe(standardAtmospherePa);
+  expect(toSi(0, unit('degC'))).toBe(celsiusZeroK);
+  // SI Brochure, 9th edition: k = 1.380649e-23 J/K and N_A = 6.02214076e23 /mol, both exact.
+  expect(molarGasConstantJPerMolK).toBe(new Fraction('1.380649').mul('6.02214076').valueOf());
 });
