@@ -1,0 +1,66 @@
+/**
+ * An equation that does not balance: some element has more atoms on one side than on the other. The deficit of each is
+ * given; where coefficients exist that balance it, the balanced equation is offered as a quick fix. Where there is more
+ * than one independent way, that is said and the simplest is offered.
+ */
+import { formatNumber } from '../wording/numbers.ts';
+import { quoted, sentences } from '../wording/words.ts';
+import type { Place } from '../scenario/scenario.ts';
+import type { FactOf, Rule, Site } from './rule.ts';
+
+type Unbalanced = FactOf<'balance/elements'>;
+
+const MOST_ELEMENTS = 4;
+
+export const balanceElements: Rule<Unbalanced> = {
+  severity: 'error',
+  message: (fact) => sentences('The equation is not balanced.', deficits(fact), way(fact)),
+  fixes: ({ solution }, site) => {
+    if (solution.kind === 'none') return [];
+    const title =
+      solution.kind === 'unique' ? `Balance: ${solution.equation}` : `Balance the simplest way: ${solution.equation}`;
+    return [
+      {
+        title,
+        preferred: solution.kind === 'unique',
+        edits: [{ place: equationAround(site), newText: solution.equation }],
+      },
+    ];
+  },
+};
+
+function deficits({ differences }: Unbalanced): string {
+  const said = differences
+    .slice(0, MOST_ELEMENTS)
+    .map(
+      ({ element, left, right }) =>
+        `${element}: ${formatNumber(left)} on the left, ${formatNumber(right)} on the right`,
+    );
+  const more = differences.length - said.length;
+  if (said.length === 0) return '';
+  return `${said.join('; ')}${more > 0 ? `; and ${more} more` : ''}.`;
+}
+
+function way({ solution }: Unbalanced): string {
+  switch (solution.kind) {
+    case 'unique':
+      return `Balanced it reads ${quoted(solution.equation)}.`;
+    case 'several':
+      return `There are ${solution.freedom} independent ways to balance it; the simplest is ${quoted(solution.equation)}.`;
+    case 'none':
+      return `No coefficients balance it: ${solution.reason.replace(/\.$/, '')}.`;
+  }
+}
+
+/** The whole equation, though the finding may stand at a part of it. */
+function equationAround({ place, file }: Site): Place {
+  for (const { start, section } of file.tree.sections) {
+    if (section.statement.kind !== 'definition') continue;
+    for (const line of section.statement.lines) {
+      if (line.kind !== 'equation') continue;
+      const equation = { path: place.path, start: start + line.span.start, end: start + line.span.end };
+      if (equation.start <= place.start && place.end <= equation.end) return equation;
+    }
+  }
+  return place;
+}

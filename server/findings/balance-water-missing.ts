@@ -1,0 +1,13 @@
+/**
+ * The blend has too little hydrogen for all its alkali to end as hydroxide, as it would in moist exhaust. The water that
+ * would have to come from outside is given; it may come from the air, a pilot fuel or injection.
+ */
+import { formatNumber } from '../wording/numbers.ts';
+import { quoted } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const balanceWaterMissing: Rule<FactOf<'balance/water-missing'>> = {
+  severity: 'information',
+  message: ({ name, waterKgPerKg }) =>
+    `${quoted(name)} makes too little water for all its alkali to end as hydroxide: ${formatNumber(waterKgPerKg)} kg of water per kg would have to come from outside.`,
+};

@@ -1,0 +1,20 @@
+/**
+ * An `acknowledge` line that cannot count. Only hazards can be acknowledged (`hazard/…`), by a code that exists and with
+ * a reason in quotes, so that whoever reads the scenario later knows who looked at what, and why it is in order.
+ */
+import { quoted } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const nameAcknowledged: Rule<FactOf<'name/acknowledged'>> = {
+  severity: 'error',
+  message: ({ why, acknowledged }) => {
+    switch (why) {
+      case 'not-a-hazard':
+        return `${quoted(acknowledged)} is not a hazard, and only hazards can be acknowledged. Mend what is found, or remove this line.`;
+      case 'no-reason':
+        return `The reason is missing. Say why ${quoted(acknowledged)} is in order here, in quotes: \`acknowledge ${acknowledged}: "…"\`.`;
+      case 'no-code':
+        return 'What is acknowledged is missing. Write the code of the hazard: `acknowledge hazard/…: "reason"`.';
+    }
+  },
+};

@@ -1,0 +1,17 @@
+/**
+ * A definition or value needs itself, directly or through others, so there is nothing to start from. Reported once, at
+ * the name that closes the ring; everything on the ring stays unknown until it is broken.
+ */
+import { listed, quoted } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const nameCycle: Rule<FactOf<'name/cycle'>> = {
+  severity: 'error',
+  message: ({ path }) => {
+    const [first = '', second] = path;
+    if (path.length <= 2) return `${quoted(first)} is defined by itself. Give it a value that does not need it.`;
+    const steps = path.slice(1, -1).map((name, index) => `${quoted(path[index] ?? '')} needs ${quoted(name)}`);
+    const closing = `${quoted(path.at(-2) ?? second ?? '')} needs ${quoted(path.at(-1) ?? first)} again`;
+    return `These definitions go round in a ring: ${listed([...steps, closing])}. Break it at one of them.`;
+  },
+};

@@ -1,0 +1,14 @@
+/**
+ * A definition lacks an entry without which nothing can be worked out of it. Reported at the definition's header.
+ */
+import { listed, quoted } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const nameMissingEntry: Rule<FactOf<'name/missing-entry'>> = {
+  severity: 'error',
+  message: ({ kind, name, entries }) =>
+    `The ${kind} ${quoted(name)} needs ${listed(
+      entries.map((entry) => quoted(`${entry}: …`)),
+      'or',
+    )}. Add it inside the braces.`,
+};

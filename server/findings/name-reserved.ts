@@ -1,0 +1,21 @@
+/**
+ * A definition or value is named by a word that already means something: a word of the language (`rest`, `per`), a unit
+ * (`bar`, `t`) or a definition kind (`blend`). Read as a name it would be misread elsewhere, so it cannot be one.
+ */
+import { quoted } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+const meanings = {
+  'reserved-word': 'a word of the language',
+  unit: 'a unit',
+  kind: 'a kind of definition',
+} as const;
+
+export const nameReserved: Rule<FactOf<'name/reserved'>> = {
+  severity: 'error',
+  message: ({ name, why }) =>
+    `${quoted(name)} is ${meanings[why]} and cannot be a name. Choose another, for example ${quoted(`${name}_1`)}.`,
+  fixes: ({ name }, { place }) => [
+    { title: `Rename to \`${name}_1\``, preferred: false, edits: [{ place, newText: `${name}_1` }] },
+  ],
+};

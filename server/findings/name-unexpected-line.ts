@@ -1,0 +1,15 @@
+/**
+ * A line of a form that this kind of definition does not have: a portion in a reaction, or an equation in a blend.
+ */
+import { capitalised, withArticle } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const nameUnexpectedLine: Rule<FactOf<'name/unexpected-line'>> = {
+  severity: 'error',
+  message: ({ kind, line }) => {
+    const here = capitalised(withArticle(kind));
+    return line === 'portion'
+      ? `${here} has no portions. If this is an entry, write a colon behind its words; portions belong in a \`blend\` or an \`oxidant\`.`
+      : `${here} has no equation. Put it in a definition of its own: \`reaction name { … }\`.`;
+  },
+};

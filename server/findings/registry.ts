@@ -1,0 +1,147 @@
+// The findings of a scenario: each fact handed to the file that bears its code, sorted as they stand in the text. The
+// map is over the codes of all facts, so that the compiler asks for a missing file. Knows no wording and no editor.
+// Invariant: the findings of a file are in order of their places, and the same facts give the same list.
+
+import type { Fact } from '../scenario/facts.ts';
+import type { EvaluatedFile, EvaluatedScenario, PlacedFact } from '../scenario/scenario.ts';
+import { balanceContradiction } from './balance-contradiction.ts';
+import { balanceElements } from './balance-elements.ts';
+import { balanceNegative } from './balance-negative.ts';
+import { balanceNoData } from './balance-no-data.ts';
+import { balanceNoDensity } from './balance-no-density.ts';
+import { balanceNoPortions } from './balance-no-portions.ts';
+import { balanceProducts } from './balance-products.ts';
+import { balanceShares } from './balance-shares.ts';
+import { balanceTwoRests } from './balance-two-rests.ts';
+import { balanceWaterMissing } from './balance-water-missing.ts';
+import { expectFailed } from './expect-failed.ts';
+import { expectNotAClaim } from './expect-not-a-claim.ts';
+import type { Finding } from './finding.ts';
+import { kindNotEvaluated } from './kind-not-evaluated.ts';
+import { nameAcknowledged } from './name-acknowledged.ts';
+import { nameArguments } from './name-arguments.ts';
+import { nameCycle } from './name-cycle.ts';
+import { nameDuplicate } from './name-duplicate.ts';
+import { nameLikeCatalogue } from './name-like-catalogue.ts';
+import { nameMissingEntry } from './name-missing-entry.ts';
+import { nameMissingFile } from './name-missing-file.ts';
+import { nameMissingPhrase } from './name-missing-phrase.ts';
+import { nameRepeatedEntry } from './name-repeated-entry.ts';
+import { nameReserved } from './name-reserved.ts';
+import { nameUnexpectedLine } from './name-unexpected-line.ts';
+import { nameUnknownEntry } from './name-unknown-entry.ts';
+import { nameUnknownKind } from './name-unknown-kind.ts';
+import { nameUnknownPhrase } from './name-unknown-phrase.ts';
+import { nameUnknown } from './name-unknown.ts';
+import { nameUseCycle } from './name-use-cycle.ts';
+import { nameWrongKind } from './name-wrong-kind.ts';
+import { programFailed } from './program-failed.ts';
+import { rangeNumber } from './range-number.ts';
+import { rangePositive } from './range-positive.ts';
+import { rangeShare } from './range-share.ts';
+import { rangeTemperature } from './range-temperature.ts';
+import type { FactOf, Rule } from './rule.ts';
+import { syntax } from './syntax.ts';
+import { unitAmbiguous } from './unit-ambiguous.ts';
+import { unitExponent } from './unit-exponent.ts';
+import { unitGauge } from './unit-gauge.ts';
+import { unitMismatch } from './unit-mismatch.ts';
+import { unitMissing } from './unit-missing.ts';
+import { unitTemperature } from './unit-temperature.ts';
+import { unitTwoTemperatures } from './unit-two-temperatures.ts';
+import { unitUncertainty } from './unit-uncertainty.ts';
+import { unitUnknown } from './unit-unknown.ts';
+
+/** The findings of all files of a scenario, in the order of its files, each file's in order of place. */
+export function findingsOf(scenario: EvaluatedScenario): readonly Finding[] {
+  return scenario.files.flatMap(findingsIn);
+}
+
+/** The findings of one file, in order of place. */
+export function findingsIn(file: EvaluatedFile): readonly Finding[] {
+  const findings = file.facts.map((placed) => findingOf(placed, file));
+  return findings.sort(
+    (left, right) =>
+      left.place.start - right.place.start ||
+      left.place.end - right.place.end ||
+      (left.code < right.code ? -1 : left.code > right.code ? 1 : 0),
+  );
+}
+
+/** Every code there is, in alphabetical order. */
+export function allCodes(): readonly Fact['code'][] {
+  // The keys of a mapped type are its codes; Object.keys forgets that.
+  return (Object.keys(rules) as Fact['code'][]).sort();
+}
+
+/** How grave a finding of this code is. */
+export function severityOf(code: Fact['code']): Finding['severity'] {
+  return rules[code].severity;
+}
+
+const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
+  'syntax/unexpected': syntax,
+  'syntax/missing': syntax,
+  'syntax/unclosed': syntax,
+  'syntax/too-deep': syntax,
+  'syntax/too-large': syntax,
+  'name/unknown': nameUnknown,
+  'name/unknown-kind': nameUnknownKind,
+  'name/duplicate': nameDuplicate,
+  'name/reserved': nameReserved,
+  'name/like-catalogue': nameLikeCatalogue,
+  'name/cycle': nameCycle,
+  'name/use-cycle': nameUseCycle,
+  'name/missing-file': nameMissingFile,
+  'name/unknown-entry': nameUnknownEntry,
+  'name/repeated-entry': nameRepeatedEntry,
+  'name/missing-entry': nameMissingEntry,
+  'name/unknown-phrase': nameUnknownPhrase,
+  'name/missing-phrase': nameMissingPhrase,
+  'name/arguments': nameArguments,
+  'name/unexpected-line': nameUnexpectedLine,
+  'name/wrong-kind': nameWrongKind,
+  'name/acknowledged': nameAcknowledged,
+  'unit/unknown': unitUnknown,
+  'unit/missing': unitMissing,
+  'unit/mismatch': unitMismatch,
+  'unit/two-temperatures': unitTwoTemperatures,
+  'unit/temperature': unitTemperature,
+  'unit/gauge': unitGauge,
+  'unit/exponent': unitExponent,
+  'unit/uncertainty': unitUncertainty,
+  'unit/ambiguous': unitAmbiguous,
+  'balance/elements': balanceElements,
+  'balance/shares': balanceShares,
+  'balance/two-rests': balanceTwoRests,
+  'balance/negative': balanceNegative,
+  'balance/no-density': balanceNoDensity,
+  'balance/no-portions': balanceNoPortions,
+  'balance/no-data': balanceNoData,
+  'balance/products': balanceProducts,
+  'balance/water-missing': balanceWaterMissing,
+  'balance/contradiction': balanceContradiction,
+  'range/number': rangeNumber,
+  'range/temperature': rangeTemperature,
+  'range/share': rangeShare,
+  'range/positive': rangePositive,
+  'expect/failed': expectFailed,
+  'expect/not-a-claim': expectNotAClaim,
+  'kind/not-evaluated': kindNotEvaluated,
+  'program/failed': programFailed,
+};
+
+function findingOf({ fact, place }: PlacedFact, file: EvaluatedFile): Finding {
+  // The map gives each code the rule of its own fact; the compiler cannot follow that through a union of codes.
+  const rule = rules[fact.code] as Rule<Fact>;
+  const site = { place, file };
+  return {
+    code: fact.code,
+    severity: rule.severity,
+    message: rule.message(fact, site),
+    place,
+    related: rule.related?.(fact, site) ?? [],
+    fixes: rule.fixes?.(fact, site) ?? [],
+    acknowledged: false,
+  };
+}

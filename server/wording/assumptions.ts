@@ -1,0 +1,29 @@
+// What was assumed on the way to a figure, one sentence an assumption; shown under "why?" and in reports.
+// One row an id; the compiler asks for the missing one. Knows no numbers. Invariant: each sentence stands by itself.
+// Source: language reference, "Conventions the answers rest on".
+
+import type { AssumptionId } from '../scenario/working.ts';
+
+/** The sentence of an assumption. */
+export function assumptionText(assumption: AssumptionId): string {
+  return assumptions[assumption];
+}
+
+const assumptions: Readonly<Record<AssumptionId, string>> = {
+  'reference-state': 'Everything starts and ends at the reference state, 25 °C and 1 bar.',
+  'ideal-mixing-enthalpy': 'Mixing the portions sets no heat free and takes none up.',
+  'volumes-add': 'The volumes of the portions add up.',
+  'carbonate-slate':
+    'Alkali ends as chloride, fluoride and sulphate, then as carbonate as far as the carbon reaches, then as hydroxide, then as oxide.',
+  'hydroxide-slate': 'Alkali ends as hydroxide as far as the hydrogen reaches; all carbon leaves as carbon dioxide.',
+  'oxide-slate': 'Alkali ends as oxide; all carbon leaves as carbon dioxide.',
+  'given-slate': 'The products are those named under `products:`.',
+  'dry-air': 'Dry air by mole: N2 78.084 %, O2 20.946 %, Ar 0.934 %, CO2 0.036 %.',
+  'shares-scaled': 'The composition given does not add up to 100 % exactly and was scaled to it.',
+  'stable-phase': 'Where no phase is written, the phase stable at the state given is meant.',
+  'remainder-hydrogen': 'What the composition leaves open is taken as hydrogen.',
+  'ideal-gas': 'Gases are ideal.',
+  'fossil-by-default': 'Carbon whose origin is not stated is taken as fossil.',
+  'several-alkalis-proportional':
+    'Several alkali metals share the acids and the carbon in proportion to their amounts.',
+};

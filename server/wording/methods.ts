@@ -1,0 +1,144 @@
+// What each method of the working is, in words and symbols, where it holds, and where it comes from in the literature.
+// One row a method; the compiler asks for the missing one. Knows no numbers: those are in the working itself.
+// Invariant: every symbol of an equation is named in the words beside it.
+// Sources of the methods: language reference, "Conventions the answers rest on", and the textbooks named in the rows.
+
+import type { MethodId } from '../scenario/working.ts';
+
+export interface MethodText {
+  /** What was done, one sentence. */
+  readonly words: string;
+  /** The equation in symbols, or null where there is nothing to write down. */
+  readonly equation: string | null;
+  /** What the symbols mean; empty without an equation. */
+  readonly symbols: string;
+  /** Where the result is valid; one sentence. */
+  readonly validity: string;
+}
+
+/** The text of a method. */
+export function methodText(method: MethodId): MethodText {
+  return methods[method];
+}
+
+const methods: Readonly<Record<MethodId, MethodText>> = {
+  'as-given': {
+    words: 'Taken as it is given.',
+    equation: null,
+    symbols: '',
+    validity: 'As good as its source, at the condition stated there.',
+  },
+  'molar-mass': {
+    words: 'The standard atomic weights of the formula, added up.',
+    equation: 'M = Σ nᵢ Aᵢ',
+    symbols: 'nᵢ atoms of element i in the formula, Aᵢ its standard atomic weight',
+    validity: 'Holds for elements of ordinary isotopic make-up.',
+  },
+  'mean-molar-mass': {
+    words: 'The mass of the blend over its amount of substance.',
+    equation: 'M = 1 / Σ (wᵢ / Mᵢ)',
+    symbols: 'wᵢ mass share and Mᵢ molar mass of portion i',
+    validity: 'Holds where every portion has a molar mass of its own.',
+  },
+  'ideal-volume-mixing': {
+    words: 'The mass over the sum of the volumes that the portions have by themselves.',
+    equation: 'ρ = 1 / Σ (wᵢ / ρᵢ)',
+    symbols: 'wᵢ mass share and ρᵢ density of portion i',
+    validity:
+      'Good for oils among themselves and for solids in a liquid; water with alcohols or salts takes up to a few percent less.',
+  },
+  'lower-heating-value': {
+    words:
+      'Heat set free when 1 kg burns completely at 25 °C and the products are brought back to 25 °C, water staying vapour.',
+    equation: 'LHV = (Σ nᵣ ΔfHᵣ − Σ nₚ ΔfHₚ) / m',
+    symbols:
+      'nᵣ, ΔfHᵣ amount and enthalpy of formation of what burns (oxygen has none), nₚ, ΔfHₚ of each product of the slate, m mass of what burns',
+    validity: 'Holds for complete oxidation to the products listed; it is not the work an engine can have of the fuel.',
+  },
+  'higher-heating-value': {
+    words: 'The lower heating value and the heat of condensing the water made.',
+    equation: 'HHV = LHV + n(H₂O) ΔvapH / m',
+    symbols:
+      'n(H₂O) water vapour made, ΔvapH its enthalpy of condensation at 25 °C (44.0 kJ/mol), m mass of what burns',
+    validity: 'Holds for complete oxidation to the products listed, all the water made being liquid at 25 °C.',
+  },
+  'volumetric-heating-value': {
+    words: 'The heating value per mass times the density.',
+    equation: 'H(volume) = H ρ',
+    symbols: 'H heating value per mass, ρ density at the stored state',
+    validity: 'Per litre of what stands in the tank at its stored state, without its blanket gas.',
+  },
+  'stoichiometric-air': {
+    words: 'The oxygen demand by valence, and the dry air that brings it.',
+    equation: 'L = (Σ nᵢ vᵢ / 4) M(air) / x(O₂)',
+    symbols:
+      'nᵢ moles of element i per kg, vᵢ its valence (C 4, H 1, O −2, Na 1, Mg 2 …), M(air) molar mass of dry air, x(O₂) its mole share of oxygen',
+    validity: 'The same whether alkali ends as oxide, hydroxide or carbonate; sulphates and peroxides take more.',
+  },
+  'carbon-factor': {
+    words: 'Carbon dioxide per kg if all the carbon left as carbon dioxide.',
+    equation: 'C = w(C) M(CO₂) / M(C)',
+    symbols: 'w(C) mass share of carbon',
+    validity: 'An upper bound: carbon held back as carbonate or soot is still counted here.',
+  },
+  'biogenic-carbon-share': {
+    words: 'The share of the carbon that is of biological origin.',
+    equation: 'b = Σ w(C)ᵢ bᵢ / Σ w(C)ᵢ',
+    symbols: 'w(C)ᵢ carbon brought by portion i, bᵢ its biogenic share',
+    validity: 'As good as what is stated of each portion.',
+  },
+  'water-made': {
+    words: 'Water among the products of complete combustion, less the water that was already in the blend.',
+    equation: null,
+    symbols: '',
+    validity: 'Holds for the product slate listed.',
+  },
+  'water-missing': {
+    words: 'Water that would have to come from outside for all the alkali to end as hydroxide.',
+    equation: null,
+    symbols: '',
+    validity: 'Counts the hydrogen of the blend itself; moisture of the air is not counted.',
+  },
+  'alkali-carbon-ratio': {
+    words: 'Moles of alkali metal over moles of carbon; 2 is just enough alkali to hold all carbon as carbonate.',
+    equation: 'r = n(alkali) / n(C)',
+    symbols: 'n(alkali) moles of Li, Na, K, Rb and Cs, n(C) moles of carbon',
+    validity: 'A count of atoms; it says nothing of how far the exhaust really goes.',
+  },
+  'formation-enthalpy': {
+    words: 'The enthalpy of making it from the elements in their reference states.',
+    equation: 'ΔfH = Σ nᵢ ΔfHᵢ',
+    symbols: 'nᵢ, ΔfHᵢ amount and enthalpy of formation of each portion',
+    validity: 'At 25 °C and 1 bar.',
+  },
+  'formation-enthalpy-from-heating-value': {
+    words: 'Worked back from the heating value and the products of complete combustion.',
+    equation: 'ΔfH = LHV m + Σ nₚ ΔfHₚ',
+    symbols: 'LHV lower heating value, m mass, nₚ, ΔfHₚ amount and enthalpy of formation of each product',
+    validity: 'As good as the heating value and the composition together, at 25 °C.',
+  },
+  'reaction-enthalpy': {
+    words: 'Enthalpies of formation of what is made, less those of what is used up.',
+    equation: 'ΔH = Σ νₚ ΔfHₚ − Σ νᵣ ΔfHᵣ',
+    symbols: 'νₚ, νᵣ coefficients of the equation as written; negative means that heat is set free',
+    validity: 'Per equation as written, all at the state given, ideal gases and pure condensed phases.',
+  },
+  'reaction-gibbs-energy': {
+    words: 'Gibbs energies of formation of what is made, less those of what is used up.',
+    equation: 'ΔG = Σ νₚ ΔfGₚ − Σ νᵣ ΔfGᵣ',
+    symbols: 'νₚ, νᵣ coefficients of the equation as written',
+    validity: 'Per equation as written, each substance in its standard state at 1 bar.',
+  },
+  'equilibrium-constant': {
+    words: 'The equilibrium constant of the equation as written.',
+    equation: 'log₁₀ K = −ΔG / (R T ln 10)',
+    symbols: 'ΔG reaction Gibbs energy, R gas constant, T temperature',
+    validity: 'For the equation as written, gases against 1 bar.',
+  },
+  'specific-reaction-enthalpy': {
+    words: 'The enthalpy of the reaction per kg of everything on its left side.',
+    equation: 'Δh = ΔH / Σ νᵣ Mᵣ',
+    symbols: 'νᵣ, Mᵣ coefficient and molar mass of each substance on the left',
+    validity: 'Oxygen on the left side counts in the mass; negative means that heat is set free.',
+  },
+};
