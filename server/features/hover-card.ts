@@ -1,0 +1,35 @@
+// Tells what is known of a substance or blend: its formula and phase first, then each property with its condition and
+// source. Shows the card as it is handed over. Invariant: no property without its unit and where it comes from.
+import type { MaterialCard, Place } from '../scenario/scenario.ts';
+import { listed } from '../wording/words.ts';
+import { figureText } from '../wording/quantities.ts';
+import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
+
+export function hoverCard(place: Place, card: MaterialCard): HoverText {
+  return { place, title: cardTitle(card), origin: cardOrigin(card), lines: cardLines(card) };
+}
+
+/** `sodium: Na, crystal`. */
+export function cardTitle({ name, formula, phase }: MaterialCard): string {
+  const nature = [formula === name ? null : formula, phase].filter((part) => part !== null && part !== '');
+  return nature.length > 0 ? `${name}: ${nature.join(', ')}` : name;
+}
+
+export function cardLines({ properties }: MaterialCard): HoverLine[] {
+  return properties.map((property) => {
+    const { label, condition, source } = property;
+    const value = condition === '' ? figureText(property) : `${figureText(property)} ${condition}`;
+    return { label, text: source === '' ? value : `${value} (${shortened(source, 90)})` };
+  });
+}
+
+function cardOrigin({ origin, aliases }: MaterialCard): string {
+  const from = ORIGINS[origin];
+  return aliases.length > 0 ? `${from}; also ${listed(aliases.slice(0, 4))}` : from;
+}
+
+const ORIGINS: Readonly<Record<MaterialCard['origin'], string>> = {
+  catalogue: 'Catalogue substance',
+  scenario: 'Defined in this scenario',
+  formula: 'Known by its formula alone',
+};

@@ -1,0 +1,44 @@
+// Tells about a definition: its first figure, its kind and name, what its author wrote above it, then its further
+// figures. Shows what the evaluation found and works nothing out. Invariant: a definition without figures still says its
+// kind and name.
+import type { EvaluatedDefinition, Place } from '../scenario/scenario.ts';
+import { capitalised, listed } from '../wording/words.ts';
+import { figureText } from '../wording/quantities.ts';
+import { balanceText } from './hover-equation.ts';
+import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
+import { leadingFigures } from './leading-figures.ts';
+
+const MOST_FIGURES = 7;
+const MOST_ABSENT = 2;
+
+export function hoverDefinition(place: Place, definition: EvaluatedDefinition): HoverText {
+  const [first, ...others] = leadingFigures(definition);
+  const what = capitalised(`${definition.kind} ${definition.name}`.trim());
+  const doc = shortened(definition.doc);
+  const balance = balanceText(definition.tables.find(({ id }) => id === 'elements'));
+  const shown = others.slice(0, MOST_FIGURES);
+  const lines: HoverLine[] = [
+    ...(balance === null ? [] : [{ sentence: balance }]),
+    ...shown.map((figure) => ({ label: figure.label, text: figureText(figure) })),
+    ...absentLines(definition),
+    ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),
+  ];
+  if (!first) return { place, title: what, origin: doc === '' ? null : doc, lines };
+  return {
+    place,
+    title: `${figureText(first)}: ${first.label}`,
+    origin: doc === '' ? what : `${what}. ${doc}`,
+    lines,
+  };
+}
+
+/** The first figures that could not be had for want of data, with what is missing. */
+function absentLines({ absent }: EvaluatedDefinition): HoverLine[] {
+  return [...absent]
+    .flatMap(([id, missing]) => (missing && missing.length > 0 ? [{ id, missing }] : []))
+    .slice(0, MOST_ABSENT)
+    .map(({ id, missing }) => ({
+      label: capitalised(id.replaceAll('-', ' ')),
+      text: `not known: ${listed(missing)} missing`,
+    }));
+}

@@ -1,0 +1,31 @@
+// Which of a definition's figures a person looks for first. An order of ids and nothing else: figures that are not named
+// here follow in the order the kind gives them. Invariant: every figure of the definition is there, once.
+import type { EvaluatedDefinition, Figure } from '../scenario/scenario.ts';
+
+/** The figures of a definition, the most asked-for first. */
+export function leadingFigures(definition: EvaluatedDefinition): readonly Figure[] {
+  return definition.figures
+    .map((figure, index) => ({ figure, rank: RANKS.get(figure.id) ?? RANKS.size + index }))
+    .sort((left, right) => left.rank - right.rank)
+    .map(({ figure }) => figure);
+}
+
+const RANKS: ReadonlyMap<string, number> = new Map(
+  [
+    'enthalpy',
+    'specific-enthalpy',
+    'gibbs-energy',
+    'log10-k',
+    'lower-heating-value',
+    'higher-heating-value',
+    'stoichiometric-air',
+    'density',
+    'carbon-factor',
+    'biogenic-carbon-share',
+    'volumetric-lower-heating-value',
+    'alkali-carbon-ratio',
+    'water-missing',
+    'molar-mass',
+    'formation-enthalpy',
+  ].map((id, rank) => [id, rank]),
+);

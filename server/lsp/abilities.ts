@@ -1,0 +1,70 @@
+// What the client said it can do, read from the first request. Nothing in that request is trusted to be there: whatever is
+// missing or misshapen counts as "cannot". Knows no connection.
+// Source: Language Server Protocol 3.18, "Client Capabilities".
+import { addressOf } from './addresses.ts';
+
+export interface Abilities {
+  /** Shows hovers written in Markdown. */
+  readonly markdown: boolean;
+  /** Takes an outline as a tree with details, not only as a flat list. */
+  readonly outlineTree: boolean;
+  /** Shows places related to a finding. */
+  readonly related: boolean;
+  /** Takes quick fixes as edits, not only as commands. */
+  readonly codeActions: boolean;
+  /** Takes edits that name the version they belong to. */
+  readonly versionedEdits: boolean;
+  /** Answers questions for settings. */
+  readonly configuration: boolean;
+  readonly configurationNews: boolean;
+  /** Tells of changed files once asked to. */
+  readonly watching: boolean;
+  readonly folderNews: boolean;
+  /** Answers `stokehold/readFile`, as it said in the initialization options. */
+  readonly readFile: boolean;
+  /** Addresses of the workspace's folders at the start. */
+  readonly folders: readonly string[];
+}
+
+/** @param params what came with `initialize`, whatever its shape. */
+export function abilitiesOf(params: unknown): Abilities {
+  const has = (...keys: string[]): boolean => at(params, 'capabilities', ...keys) === true;
+  const list = (...keys: string[]): readonly unknown[] => {
+    const found = at(params, 'capabilities', ...keys);
+    return Array.isArray(found) ? found : [];
+  };
+  return {
+    markdown: list('textDocument', 'hover', 'contentFormat').includes('markdown'),
+    outlineTree: has('textDocument', 'documentSymbol', 'hierarchicalDocumentSymbolSupport'),
+    related: has('textDocument', 'publishDiagnostics', 'relatedInformation'),
+    codeActions: at(params, 'capabilities', 'textDocument', 'codeAction', 'codeActionLiteralSupport') !== undefined,
+    versionedEdits: has('workspace', 'workspaceEdit', 'documentChanges'),
+    configuration: has('workspace', 'configuration'),
+    configurationNews: has('workspace', 'didChangeConfiguration', 'dynamicRegistration'),
+    watching: has('workspace', 'didChangeWatchedFiles', 'dynamicRegistration'),
+    folderNews: has('workspace', 'workspaceFolders'),
+    readFile: at(params, 'initializationOptions', 'readFile') === true,
+    folders: foldersOf(params),
+  };
+}
+
+function foldersOf(params: unknown): readonly string[] {
+  const folders = at(params, 'workspaceFolders');
+  if (Array.isArray(folders)) {
+    return folders
+      .map((folder) => at(folder, 'uri'))
+      .filter((uri) => typeof uri === 'string')
+      .map(addressOf);
+  }
+  const root = at(params, 'rootUri'); // how older clients say it
+  return typeof root === 'string' ? [addressOf(root)] : [];
+}
+
+function at(value: unknown, ...keys: string[]): unknown {
+  let found = value;
+  for (const key of keys) {
+    if (typeof found !== 'object' || found === null || !Object.hasOwn(found, key)) return undefined;
+    found = Reflect.get(found, key);
+  }
+  return found;
+}

@@ -1,0 +1,73 @@
+// Settings and abilities: whatever a client sends, there is a sensible value for each.
+import { describe, expect, it } from 'vitest';
+import { abilitiesOf } from '../../../server/lsp/abilities.ts';
+import { asSettings, DEFAULT_SETTINGS } from '../../../server/lsp/settings.ts';
+
+describe('settings', () => {
+  it.each([null, undefined, 3, 'pause', [], {}, { pause: 'long' }, { pause: NaN, severity: null }])(
+    '%j gives the defaults',
+    (sent) => {
+      expect(asSettings(sent)).toEqual(DEFAULT_SETTINGS);
+    },
+  );
+
+  it.each([
+    [0, 0],
+    [250, 250],
+    [-5, 0],
+    [1e9, 10_000],
+  ])('a pause of %d is %d', (pause, read) => {
+    expect(asSettings({ pause }).pauseMs).toBe(read);
+  });
+
+  it('take single severities and leave out what is none', () => {
+    const { severities } = asSettings({
+      severity: { 'name/unknown': 'hint', 'unit/missing': 'off', 'x/y': 'loud', 'x/z': 3 },
+    });
+    expect([...severities]).toEqual([
+      ['name/unknown', 'hint'],
+      ['unit/missing', 'off'],
+    ]);
+  });
+});
+
+describe('abilities', () => {
+  it.each([
+    null,
+    undefined,
+    'client',
+    {},
+    { capabilities: null },
+    { capabilities: { textDocument: 7 }, workspaceFolders: [null, 3] },
+  ])('of %j are none', (params) => {
+    const { folders, ...abilities } = abilitiesOf(params);
+    expect(folders).toEqual([]);
+    expect(Object.values(abilities).every((ability) => ability === false)).toBe(true);
+  });
+
+  it('are read where they are said', () => {
+    expect(
+      abilitiesOf({
+        capabilities: {
+          textDocument: {
+            hover: { contentFormat: ['plaintext', 'markdown'] },
+            codeAction: { codeActionLiteralSupport: {} },
+          },
+          workspace: { configuration: true },
+        },
+        initializationOptions: { readFile: true },
+        workspaceFolders: [{ uri: 'file:///C%3A/ships', name: 'ships' }],
+      }),
+    ).toMatchObject({
+      markdown: true,
+      codeActions: true,
+      configuration: true,
+      readFile: true,
+      folders: ['file:///c%3A/ships'],
+    });
+  });
+
+  it('take the one root of older clients for a folder', () => {
+    expect(abilitiesOf({ rootUri: 'file:///ships' }).folders).toEqual(['file:///ships']);
+  });
+});
