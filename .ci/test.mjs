@@ -29,8 +29,8 @@ if (total.failed === 0) {
     tool('unused and undeclared', 'knip', 'knip/bin/knip.js', ['--no-progress', '--no-config-hints']);
   });
   stage('types', () => {
-    tool('types', 'tsc', '@typescript/native/bin/tsc', ['-p', '.']);
-    tool('types without Node', 'tsc', '@typescript/native/bin/tsc', ['-p', 'server']);
+    tool('types', 'tsc', 'typescript-native/bin/tsc', ['-p', '.']);
+    tool('types without Node', 'tsc', 'typescript-native/bin/tsc', ['-p', 'server']);
   });
   stage('build and package', () => check('package', () => run('npm', ['run', '--silent', 'package'])));
   stage('unit, reference and protocol tests', () => {
