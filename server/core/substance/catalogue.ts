@@ -17,16 +17,18 @@ export function allSubstances(): readonly Substance[] {
 }
 
 /**
- * The catalogue substance of a word: a name or alias (`gas_oil`, `'sodium oleate'`; blanks and `_` are alike, case is not
- * looked at), else a formula (`Na2CO3`, `H2O(g)`). Without a phase the one stable at 25 °C and 1 bar is meant.
+ * The catalogue substance of a word: a name or alias (`gas_oil`, `'sodium oleate'`; blanks and `_` are alike), or a formula
+ * (`Na2CO3`, `H2O(g)`). Case matters only where a word with capitals is a known formula: `MgO` is magnesium oxide, `mgo`
+ * marine gas oil. Without a phase the one stable at 25 °C and 1 bar is meant.
  * Undefined when nothing is found, also when the substance is known but not in that phase.
  */
 export function findSubstance(word: string, phase?: Phase): Substance | undefined {
-  const named = catalogue().byWord.get(wordKey(word));
-  if (named !== undefined)
-    return phase === undefined ? named : phasesOfSubstance(named.name).find((s) => s.phase === phase);
   const formula = parseFormula(word, phase);
-  return formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
+  const written = formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
+  if (written !== undefined) return written;
+  const named = catalogue().byWord.get(wordKey(word));
+  if (named === undefined || phase === undefined) return named;
+  return phasesOfSubstance(named.name).find((substance) => substance.phase === phase);
 }
 
 /** The first of `substancesOfFormula`: a guess where isomers share a formula. */
