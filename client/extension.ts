@@ -9,7 +9,7 @@ import {
   type LanguageClientOptions,
   type ServerOptions,
 } from 'vscode-languageclient/node';
-import { readFile } from './read-file.ts';
+import { readFile, type FileAnswer } from './read-file.ts';
 
 /** What other extensions and the editor tests may ask of the activated extension. */
 export interface StokeholdApi {
@@ -31,7 +31,7 @@ export function activate(context: ExtensionContext): StokeholdApi {
   const started = new LanguageClient('stokehold', 'Stokehold', serverOptions, clientOptions);
   client = started;
   context.subscriptions.push(
-    started.onRequest('stokehold/readFile', ({ uri }: { uri: string }) => readFile(uri)),
+    started.onRequest<FileAnswer, void>('stokehold/readFile', ({ uri }: { uri: string }) => readFile(uri)),
     // A server that failed too often is not started again by the client itself, so there is a way to ask for it.
     commands.registerCommand('stokehold.restartServer', () => started.restart()),
     commands.registerCommand('stokehold.showLog', () => {
