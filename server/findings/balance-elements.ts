@@ -3,12 +3,14 @@
  * given; where coefficients exist that balance it, the balanced equation is offered as a quick fix. Where there is more
  * than one independent way, that is said and the simplest is offered.
  */
+import { formulaTextWithPhase, type Formula } from '../core/substance/formula.ts';
 import { formatNumber } from '../wording/numbers.ts';
-import { quoted, sentences } from '../wording/words.ts';
+import { listed, quoted, sentences } from '../wording/words.ts';
 import type { Place } from '../scenario/scenario.ts';
 import type { FactOf, Rule, Site } from './rule.ts';
 
 type Unbalanced = FactOf<'balance/elements'>;
+type NoBalance = Extract<Unbalanced['solution'], { readonly kind: 'none' }>['why'];
 
 const MOST_ELEMENTS = 4;
 
@@ -48,8 +50,29 @@ function way({ solution }: Unbalanced): string {
     case 'several':
       return `There are ${solution.freedom} independent ways to balance it; the simplest is ${quoted(solution.equation)}.`;
     case 'none':
-      return `No coefficients balance it: ${solution.reason.replace(/\.$/, '')}.`;
+      return `No coefficients balance it: ${reason(solution.why)}.`;
   }
+}
+
+function reason(why: NoBalance): string {
+  switch (why.reason) {
+    case 'empty-side':
+      return `there is nothing on the ${why.side}`;
+    case 'one-sided':
+      return listed(why.elements.map(({ element, side }) => `${element} stands on the ${side} only`));
+    case 'wrong-side':
+      return `${species(why.species)} would have to stand on the other side`;
+    case 'takes-no-part':
+      return `${species(why.species)} can take no part in it`;
+    case 'conflict':
+      return `the amounts of ${listed(why.elements)} cannot be met together`;
+    case 'too-large':
+      return 'they would be too large to be meant';
+  }
+}
+
+function species(places: readonly { readonly formula: Formula }[]): string {
+  return listed(places.map(({ formula }) => quoted(formulaTextWithPhase(formula))));
 }
 
 /** The whole equation, though the finding may stand at a part of it. */

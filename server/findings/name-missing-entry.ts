@@ -7,8 +7,10 @@ import type { FactOf, Rule } from './rule.ts';
 export const nameMissingEntry: Rule<FactOf<'name/missing-entry'>> = {
   severity: 'error',
   message: ({ kind, name, entries }) =>
-    `The ${kind} ${quoted(name)} needs ${listed(
-      entries.map((entry) => quoted(`${entry}: …`)),
-      'or',
-    )}. Add it inside the braces.`,
+    `The ${kind} ${quoted(name)} needs ${listed(entries.map(wanted), 'or')}. Add it inside the braces.`,
 };
+
+/** An entry as it would be written; `an equation` is no entry and stays as it is. */
+function wanted(entry: string): string {
+  return /^an? /.test(entry) ? entry : quoted(`${entry}: …`);
+}

@@ -74,11 +74,6 @@ export function allCodes(): readonly Fact['code'][] {
   return (Object.keys(rules) as Fact['code'][]).sort();
 }
 
-/** How grave a finding of this code is. */
-export function severityOf(code: Fact['code']): Finding['severity'] {
-  return rules[code].severity;
-}
-
 const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'syntax/unexpected': syntax,
   'syntax/missing': syntax,
@@ -137,7 +132,7 @@ function findingOf({ fact, place }: PlacedFact, file: EvaluatedFile): Finding {
   const site = { place, file };
   return {
     code: fact.code,
-    severity: rule.severity,
+    severity: typeof rule.severity === 'string' ? rule.severity : rule.severity(fact),
     message: rule.message(fact, site),
     place,
     related: rule.related?.(fact, site) ?? [],

@@ -13,7 +13,8 @@ export type FactOf<Code extends Fact['code']> = Code extends SyntaxFact['code']
   : Extract<Fact, { readonly code: Code }>;
 
 export interface Rule<F extends Fact> {
-  readonly severity: Severity;
+  /** One for all, or by what the fact says. */
+  readonly severity: Severity | ((fact: F) => Severity);
   readonly message: (fact: F, site: Site) => string;
   readonly related?: (fact: F, site: Site) => Finding['related'];
   readonly fixes?: (fact: F, site: Site) => readonly Fix[];

@@ -1,7 +1,8 @@
 // Builds evaluated scenarios by hand, so that views can be tested without the evaluation. Every part has a plain default;
 // a test names what it is about and nothing else. Invariant: what is built has the shape that the evaluation promises.
 
-import { readUnitText, toSi } from '../../server/core/quantity/read-unit.ts';
+import { parse } from '../../grammar/parse.ts';
+import { isUnitWord, readUnitText, toSi } from '../../server/core/quantity/read-unit.ts';
 import type { Quantity, QuantityKind } from '../../server/core/quantity/quantity.ts';
 import type { Fact } from '../../server/scenario/facts.ts';
 import type {
@@ -60,7 +61,7 @@ export function file(
   return {
     path,
     used: false,
-    tree: { text, sections: [], fileProblems: [], truncated: false },
+    tree: parse(text, isUnitWord),
     title: null,
     definitions: [],
     values: [],
@@ -81,20 +82,18 @@ export function definition(
 ): EvaluatedDefinition {
   const path = 'trial.stoke';
   const header = placeIn(path, text, `${kind} ${name}`);
-  const end = text.indexOf('}', header.start) + 1;
-  const span = { start: 0, end: end - header.start };
+  const section = parse(text, isUnitWord).sections.find(
+    ({ start, end }) => start <= header.start && header.start < end,
+  );
+  if (!section) throw new Error(`${kind} ${name} is no section of the text`);
   return {
     kind,
     name,
-    doc: '',
-    place: { ...header, end },
+    doc: section.section.doc,
+    place: { path, start: section.start, end: section.end },
     header,
     namePlace: { path, start: header.end - name.length, end: header.end },
-    section: {
-      start: header.start,
-      end,
-      section: { text: text.slice(header.start, end), doc: '', statement: { kind: 'broken', span }, problems: [] },
-    },
+    section,
     figures,
     tables,
     absent: new Map(),

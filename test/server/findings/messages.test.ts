@@ -1,7 +1,7 @@
 // What every code says, one row a shape of its fact: the messages are read here as a person reads them.
 import { describe, expect, test } from 'vitest';
 import { dimensionOf } from '../../../server/core/quantity/dimension.ts';
-import { allCodes, findingsIn, severityOf } from '../../../server/findings/registry.ts';
+import { allCodes, findingsIn } from '../../../server/findings/registry.ts';
 import type { Fact, Sided } from '../../../server/scenario/facts.ts';
 import { file, quantity } from '../../support/scenario-builder.ts';
 
@@ -121,6 +121,10 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     'The substance `x` needs `formula: …` or `composition: …`. Add it inside the braces.',
   ],
   [
+    { code: 'name/missing-entry', kind: 'reaction', name: 'x', entries: ['an equation'] },
+    'The reaction `x` needs an equation. Add it inside the braces.',
+  ],
+  [
     { code: 'name/unknown-phrase', entry: 'stored', text: 'red', takes: 'a temperature and a pressure' },
     '`stored` cannot be read with `red`. It takes a temperature and a pressure.',
   ],
@@ -135,6 +139,10 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   [
     { code: 'name/unexpected-line', kind: 'blend', line: 'equation' },
     'A blend has no equation. Put it in a definition of its own: `reaction name { … }`.',
+  ],
+  [
+    { code: 'name/unexpected-line', kind: 'reaction', line: 'equation' },
+    'A reaction has one equation, and this is a second one. Put it in a reaction of its own.',
   ],
   [
     { code: 'name/unexpected-line', kind: 'reaction', line: 'portion' },
@@ -215,9 +223,9 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     {
       code: 'balance/elements',
       differences: [{ element: 'N', left: 2, right: 0 }],
-      solution: { kind: 'none', reason: 'N stands on one side only.' },
+      solution: { kind: 'none', why: { reason: 'one-sided', elements: [{ element: 'N', side: 'left' }] } },
     },
-    'The equation is not balanced. N: 2 on the left, 0 on the right. No coefficients balance it: N stands on one side only.',
+    'The equation is not balanced. N: 2 on the left, 0 on the right. No coefficients balance it: N stands on the left only.',
   ],
   [
     { code: 'balance/shares', why: 'sum', name: 'slurry', sum: 0.97, mends: [] },
@@ -261,6 +269,18 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   [
     { code: 'range/positive', text: '0 kg/m3', entry: 'density' },
     '`density` must be more than zero, and `0 kg/m3` is not.',
+  ],
+  [
+    { code: 'range/temperature', text: '900 degC', why: 'only-reference' },
+    'Nothing is known here at `900 degC`: this version works reactions out at 25 °C only. Leave the temperature out, or write `25 degC`.',
+  ],
+  [
+    { code: 'balance/products', fault: { kind: 'fault', reason: 'element-without-product', elements: ['Na', 'S'] } },
+    'No product under `products` holds the Na and S of the fuel. Add one that does.',
+  ],
+  [
+    { code: 'expect/not-a-claim', text: 'density of x' },
+    '`density of x` is not a claim. Compare it with something: `… > 33 MJ/kg`, or `… within 33 MJ/kg ± 1 MJ/kg`.',
   ],
   [
     {
@@ -316,13 +336,24 @@ describe('every code', () => {
     expect(code).toMatch(/^[a-z]+\/[a-z]+(-[a-z]+)*$/);
   });
 
+  test('has a row here', () => {
+    const shown = new Set(ROWS.map(([fact]) => fact.code));
+    const syntax = ['syntax/too-deep', 'syntax/too-large', 'syntax/unclosed', 'syntax/unexpected'];
+    expect(allCodes().filter((code) => !shown.has(code))).toEqual(syntax);
+  });
+
   test('is an error only where the program cannot mean anything', () => {
-    expect(allCodes().filter((code) => severityOf(code) !== 'error')).toEqual([
-      'balance/contradiction',
-      'balance/no-data',
-      'balance/water-missing',
-      'kind/not-evaluated',
-      'name/like-catalogue',
+    const mild = ROWS.flatMap(([fact]) => {
+      const [finding] = findingsIn(file('10', { facts: [['10', fact]] }));
+      return finding && finding.severity !== 'error' ? [`${finding.severity} ${finding.code}`] : [];
+    });
+    expect(mild.sort()).toEqual([
+      'information balance/water-missing',
+      'information kind/not-evaluated',
+      'information name/like-catalogue',
+      'warning balance/contradiction',
+      'warning balance/no-data',
+      'warning range/temperature',
     ]);
   });
 });

@@ -119,7 +119,11 @@ describe('mends', () => {
   });
 
   test('an equation that nothing balances has none', () => {
-    const fact: Fact = { code: 'balance/elements', differences: [], solution: { kind: 'none', reason: 'x' } };
+    const fact: Fact = {
+      code: 'balance/elements',
+      differences: [],
+      solution: { kind: 'none', why: { reason: 'too-large' } },
+    };
     expect(only('->', ['->', fact]).fixes).toEqual([]);
   });
 

@@ -1,0 +1,194 @@
+// What a person reads on a terminal: for each named file its definitions with their figures in line, portions and
+// products as tables, equations with their energies, then what was expected, then what was found wrong, then one line
+// that sums up. Files reached by `use` show their findings only; name them to see their figures.
+// Invariant: no line of figures or tables is painted inside a column, so that they align with and without colour.
+
+import { readUnit } from '../core/quantity/read-unit.ts';
+import type { Finding } from '../findings/finding.ts';
+import type { EvaluatedDefinition, EvaluatedFile, EvaluatedValue, Table } from '../scenario/scenario.ts';
+import { figureCells, toldText } from '../wording/quantities.ts';
+import { counted, countedFindings, listed } from '../wording/words.ts';
+import { alignedAtPoint, columns, cut, tableLines } from './columns.ts';
+import { findingLines, printable } from './finding-text.ts';
+import type { ReportedFile } from './gather.ts';
+import type { Extent } from './json.ts';
+import type { Paint } from './paint.ts';
+import { Lines } from './positions.ts';
+
+export interface TextOptions {
+  readonly extent: Extent;
+  readonly paint: Paint;
+  /** Columns of the terminal. */
+  readonly width: number;
+}
+
+const WIDEST = 100;
+const NARROWEST = 40;
+
+/** The whole text, ending with a newline. */
+export function textReport(files: readonly ReportedFile[], { extent, paint, width }: TextOptions): string {
+  const room = Math.max(NARROWEST, Math.min(WIDEST, width));
+  const kept = new Map(files.map(({ file }) => [file.path, new Lines(file.tree.text)]));
+  const linesOf = (path: string): Lines | undefined => kept.get(path);
+  const blocks = files.flatMap(({ file, used, findings }) => [
+    ...(extent === 'evaluate' && !used ? fileBlocks(file, paint, room) : []),
+    ...findingBlocks(findings, linesOf, paint, room),
+  ]);
+  return `${[...blocks, ...notEvaluated(files, room), summary(files, paint)].join('\n\n')}\n`;
+}
+
+const NOT_EVALUATED = 'kind/not-evaluated';
+
+/** A finding with its source is a block of its own; those of one line each stand together. */
+function findingBlocks(
+  findings: readonly Finding[],
+  linesOf: (path: string) => Lines | undefined,
+  paint: Paint,
+  width: number,
+): string[] {
+  const blocks: string[][] = [];
+  let open = false;
+  for (const finding of findings) {
+    if (finding.code === NOT_EVALUATED) continue;
+    const lines = findingLines(finding, linesOf, paint, width);
+    if (lines.length === 1 && open) blocks.at(-1)?.push(...lines);
+    else blocks.push(lines);
+    open = lines.length === 1;
+  }
+  return blocks.map((lines) => lines.join('\n'));
+}
+
+function fileBlocks(file: EvaluatedFile, paint: Paint, width: number): string[] {
+  const title = file.title === null ? '' : `  ${printable(file.title)}`;
+  const heading = paint.strong(printable(file.path)) + cut(title, Math.max(0, width - file.path.length));
+  const shown = file.definitions.filter(({ figures, tables }) => figures.length > 0 || tables.length > 0);
+  return [
+    heading,
+    ...valuesBlock(file),
+    ...shown.map((definition) => definitionBlock(definition, paint, width)),
+    ...expectationsBlock(file, paint, width),
+  ];
+}
+
+function valuesBlock(file: EvaluatedFile): string[] {
+  const rows = file.values.flatMap((value) =>
+    value.quantity ? [[printable(value.name), '=', toldText(value.quantity, unitAsWritten(value, file))]] : [],
+  );
+  return rows.length === 0 ? [] : [indented(columns(rows), 2)];
+}
+
+/** A value given as one quantity is told in the unit it was given in; any other in a handy one (null). */
+function unitAsWritten({ place }: EvaluatedValue, file: EvaluatedFile): string | null {
+  const placed = file.tree.sections.find(({ start, end }) => start <= place.start && place.start < end);
+  const statement = placed?.section.statement;
+  if (statement?.kind !== 'let' || statement.value?.kind !== 'quantity') return null;
+  const reading = readUnit(statement.value.unit?.tokens ?? []);
+  return reading.ok ? reading.unit.text : null;
+}
+
+function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: number): string {
+  const { kind, name, doc, figures, tables } = definition;
+  const told = figures.map(figureCells);
+  const numbers = alignedAtPoint(told.map(({ number }) => number));
+  const rows = figures.map(({ label }, index) => {
+    const { unit = '', note = '' } = told[index] ?? {};
+    return [label, numbers[index] ?? '', note === '' ? unit : `${unit} (${note})`];
+  });
+  const [about = ''] = doc.split('\n');
+  return [
+    `${paint.informing(kind)} ${paint.strong(printable(name))}`,
+    ...(about === '' ? [] : [`  ${paint.faint(cut(printable(about), width - 2))}`]),
+    ...equations(definition).map((equation) => `  ${cut(printable(equation), width - 2)}`),
+    ...(rows.length === 0 ? [] : [indented(columns(rows), 2)]),
+    ...missing(definition, width).map((line) => paint.faint(line)),
+    ...tables
+      .filter(saysSomething)
+      .map((table) => `\n  ${paint.faint(table.label)}\n${indented(tableLines(table), 4)}`),
+  ].join('\n');
+}
+
+function equations({ section }: EvaluatedDefinition): string[] {
+  const { statement, text } = section.section;
+  if (statement.kind !== 'definition') return [];
+  return statement.lines.flatMap((line) =>
+    line.kind === 'equation'
+      ? [text.slice(line.span.start, line.span.end).replace(/\s+/g, ' ').replace('->', '→')]
+      : [],
+  );
+}
+
+/** What is not there for lack of data, by what is missing: one reason is told once for all figures it costs. */
+function missing({ absent }: EvaluatedDefinition, width: number): string[] {
+  const figuresByReason = new Map<string, string[]>();
+  for (const [id, reasons] of absent) {
+    if (reasons === null || reasons.length === 0) continue;
+    const reason = listed(reasons);
+    figuresByReason.set(reason, [...(figuresByReason.get(reason) ?? []), id.replaceAll('-', ' ')]);
+  }
+  return [...figuresByReason].flatMap(([reason, names]) =>
+    wrapped(`Not known for lack of ${reason}: ${names.join(', ')}.`, width - 2)
+      .split('\n')
+      .map((line) => `  ${line}`),
+  );
+}
+
+/** A table of differences that are all zero says no more than that the equation balances. */
+function saysSomething({ columns: heads, rows }: Table): boolean {
+  const difference = heads.findIndex(({ id }) => id === 'difference');
+  return rows.length > 0 && (difference < 0 || rows.some((row) => row[difference] !== 0));
+}
+
+function expectationsBlock(file: EvaluatedFile, paint: Paint, width: number): string[] {
+  if (file.expectations.length === 0) return [];
+  const lines = file.expectations.map(({ place, holds, found, unit }) => {
+    const claim = file.tree.text
+      .slice(place.start, place.end)
+      .replace(/^expect\s+/, '')
+      .replace(/\s+/g, ' ');
+    const mark = holds === null ? paint.faint('–') : holds ? paint.good('✓') : paint.bad('✗');
+    const value = found === null ? 'not worked out' : `found ${toldText(found, unit)}`;
+    return `  ${mark} ${cut(printable(claim), width - 4)}  ${paint.faint(value)}`;
+  });
+  return [['Expected', ...lines].join('\n')];
+}
+
+/** One sentence instead of one note a definition. */
+function notEvaluated(files: readonly ReportedFile[], width: number): string[] {
+  const names = files.flatMap(({ file, findings }) => {
+    const places = findings.filter(({ code }) => code === NOT_EVALUATED).map(({ place }) => place.start);
+    return file.definitions
+      .filter(({ place }) => places.some((start) => place.start <= start && start < place.end))
+      .map(({ kind, name }) => `${kind} ${printable(name)}`);
+  });
+  if (names.length === 0) return [];
+  return [wrapped(`Read but not worked out by this version: ${names.join(', ')}.`, width)];
+}
+
+function summary(files: readonly ReportedFile[], paint: Paint): string {
+  const findings = files.flatMap((file) => file.findings);
+  const expectations = files.flatMap(({ file }) => file.expectations);
+  const counts: Record<string, number> = {};
+  for (const { severity } of findings) counts[severity] = (counts[severity] ?? 0) + 1;
+  const holding = expectations.filter(({ holds }) => holds === true).length;
+  const claims = expectations.length === 0 ? '' : `, ${holding} of ${counted(expectations.length, 'expectation')} met`;
+  const line = `${counted(files.length, 'file')}: ${countedFindings(counts)}${claims}`;
+  const failed =
+    findings.some(({ severity }) => severity === 'error') || expectations.some(({ holds }) => holds === false);
+  return failed ? paint.bad(line) : paint.good(line);
+}
+
+function indented(lines: readonly string[], by: number): string {
+  return lines.map((line) => (line === '' ? '' : ' '.repeat(by) + line)).join('\n');
+}
+
+function wrapped(text: string, width: number): string {
+  const lines: string[] = [];
+  let line = '';
+  for (const word of text.split(' ')) {
+    if (line !== '' && line.length + 1 + word.length > width) {
+      lines.push(line);
+      line = `  ${word}`;
+    } else line = line === '' ? word : `${line} ${word}`;
+  }
+  return [...lines, line].join('\n');
+}
