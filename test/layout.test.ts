@@ -83,6 +83,18 @@ const RULES: readonly HouseRule[] = [
     to: { path: OURS, pathNot: '^server/(drawing|wording)/' },
   },
   {
+    name: 'nothing-imports-an-entry',
+    reason: 'the programs stand at the end of the way; what they share lives in a room of its own',
+    from: { path: '^(grammar|client|server/(core|scenario|wording|findings|features|report|drawing|jobs|lsp)/)' },
+    to: { path: '^server/(cli/|[^/]+\\.ts$)' },
+  },
+  {
+    name: 'lsp-reports-nothing',
+    reason: "the server converts and schedules; documents for printing are the command line's",
+    from: { path: '^server/lsp/' },
+    to: { path: `^server/(report|drawing)/|${SOLVERS}` },
+  },
+  {
     name: 'protocol-in-lsp',
     reason: 'only lsp/ and the entries that choose a transport know the language server protocol',
     from: { path: '^(grammar|server)/', pathNot: '^server/(lsp/|main\\.ts$|browser\\.ts$|cli\\.ts$)' },
