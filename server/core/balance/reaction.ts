@@ -3,15 +3,20 @@
 // is written. Invariant: reversing the sides changes every sign. Standard states: ideal gas and pure condensed phases at
 // 1 bar. Method: sums over products less reactants; log10 K = -ΔG / (R T ln 10), R of the SI (2019).
 
+import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { referenceTemperatureK } from '../substance/substance.ts';
 import type { Substance } from '../substance/substance.ts';
-import type { SourceRecord } from '../substance/record.ts';
 import { formationEnthalpyOf } from './formation-enthalpy.ts';
 
-/** A species with its stoichiometric amount in mol. */
+/** A species with its stoichiometric amount in mol. What is not known is left undefined. */
 export interface ReactionTerm {
+  readonly name: string;
   readonly coefficient: number;
-  readonly substance: Substance;
+  readonly molarMassKgPerMol: number | undefined;
+  /** J/mol from the elements at 298.15 K. */
+  readonly enthalpyJPerMol: number | undefined;
+  /** J/(mol K) at 298.15 K and 1 bar. */
+  readonly entropyJPerMolK: number | undefined;
 }
 
 export interface ReactionValues {
@@ -24,48 +29,48 @@ export interface ReactionValues {
   readonly gibbsEnergyJ: number | undefined;
   readonly log10K: number | undefined;
   readonly withoutEntropy: readonly string[];
-  readonly sources: readonly SourceRecord[];
 }
 
-export type ReactionFault =
-  /** Property functions over temperature are not there; only 298.15 K can be answered. */
-  | { readonly kind: 'fault'; readonly reason: 'temperature-not-available'; readonly temperatureK: number }
-  /** No formation enthalpy, or no molar mass to count a mole with. */
-  | { readonly kind: 'fault'; readonly reason: 'no-data'; readonly substances: readonly string[] };
+/** No formation enthalpy, or no molar mass to weigh a mole with. */
+export interface ReactionFault {
+  readonly kind: 'fault';
+  readonly reason: 'no-data';
+  readonly substances: readonly string[];
+}
 
-/** Values of `left -> right` at a temperature, 298.15 K within 0.005 K; a fault says what is missing. */
+/** A term of a known substance. */
+export function reactionTermOf(substance: Substance, coefficient: number): ReactionTerm {
+  const molarMass = substance.molarMassKgPerMol;
+  const enthalpy = formationEnthalpyOf(substance);
+  return {
+    name: substance.name,
+    coefficient,
+    molarMassKgPerMol: molarMass,
+    enthalpyJPerMol:
+      enthalpy.kind === 'known' && molarMass !== undefined ? enthalpy.jPerKg.value * molarMass : undefined,
+    entropyJPerMolK: substance.entropyJPerMolK?.value,
+  };
+}
+
+/** Values of `left -> right` at 298.15 K; a fault says what is missing. */
 export function reactionValues(
   left: readonly ReactionTerm[],
   right: readonly ReactionTerm[],
-  temperatureK: number = referenceTemperatureK,
 ): ReactionValues | ReactionFault {
-  if (!(Math.abs(temperatureK - referenceTemperatureK) < 0.005)) {
-    return { kind: 'fault', reason: 'temperature-not-available', temperatureK };
-  }
   const signed = [...left.map((term) => ({ ...term, sign: -1 })), ...right.map((term) => ({ ...term, sign: 1 }))];
   let enthalpyJ = 0;
   let entropyJPerK = 0;
-  const sources = new Set<SourceRecord>();
-  const missing: string[] = [];
-  const withoutEntropy: string[] = [];
-  for (const { coefficient, substance, sign } of signed) {
-    const molarMass = substance.molarMassKgPerMol;
-    const enthalpy = formationEnthalpyOf(substance);
-    if (molarMass === undefined || enthalpy.kind === 'fault') {
-      missing.push(substance.name);
-      continue;
-    }
-    enthalpyJ += sign * coefficient * enthalpy.jPerKg.value * molarMass;
-    sources.add(enthalpy.jPerKg.source);
-    if (substance.entropyJPerMolK === undefined) withoutEntropy.push(substance.name);
-    else {
-      entropyJPerK += sign * coefficient * substance.entropyJPerMolK.value;
-      sources.add(substance.entropyJPerMolK.source);
-    }
+  const missing = new Set<string>();
+  const withoutEntropy = new Set<string>();
+  for (const { name, coefficient, molarMassKgPerMol, enthalpyJPerMol, entropyJPerMolK, sign } of signed) {
+    if (molarMassKgPerMol === undefined || enthalpyJPerMol === undefined) missing.add(name);
+    else enthalpyJ += sign * coefficient * enthalpyJPerMol;
+    if (entropyJPerMolK === undefined) withoutEntropy.add(name);
+    else entropyJPerK += sign * coefficient * entropyJPerMolK;
   }
-  if (missing.length > 0) return { kind: 'fault', reason: 'no-data', substances: [...new Set(missing)] };
-  const gibbsEnergyJ = withoutEntropy.length > 0 ? undefined : enthalpyJ - referenceTemperatureK * entropyJPerK;
-  const leftKg = left.reduce((sum, term) => sum + term.coefficient * (term.substance.molarMassKgPerMol ?? 0), 0);
+  if (missing.size > 0) return { kind: 'fault', reason: 'no-data', substances: [...missing] };
+  const gibbsEnergyJ = withoutEntropy.size > 0 ? undefined : enthalpyJ - referenceTemperatureK * entropyJPerK;
+  const leftKg = left.reduce((sum, term) => sum + term.coefficient * (term.molarMassKgPerMol ?? 0), 0);
   return {
     kind: 'reaction',
     enthalpyJ,
@@ -74,10 +79,7 @@ export function reactionValues(
     log10K:
       gibbsEnergyJ === undefined
         ? undefined
-        : -gibbsEnergyJ / (gasConstantJPerMolK * referenceTemperatureK * Math.LN10),
-    withoutEntropy: [...new Set(withoutEntropy)],
-    sources: [...sources],
+        : -gibbsEnergyJ / (molarGasConstantJPerMolK * referenceTemperatureK * Math.LN10),
+    withoutEntropy: [...withoutEntropy],
   };
 }
-
-const gasConstantJPerMolK = 8.31446261815324;

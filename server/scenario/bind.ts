@@ -1,0 +1,77 @@
+// The names of a scenario: which statement each stands for, over all files reached. Says what is wrong with a name itself:
+// given twice, reserved, spelt like a unit, or like a catalogue substance. Works nothing out.
+// Invariant: a name given twice stands for nothing, so that no answer depends on which of the two comes first.
+
+import type { Definition, LetStatement, PlacedSection, Word } from '../../grammar/tree.ts';
+import { isReservedWord } from '../../grammar/words.ts';
+import { isUnitWord } from '../core/quantity/read-unit.ts';
+import { findSubstance } from '../core/substance/catalogue.ts';
+import type { Fact } from './facts.ts';
+import type { LoadedFile } from './files.ts';
+import { placeOf } from './scenario.ts';
+
+/** A named statement and where it stands. */
+export interface Binding {
+  readonly name: string;
+  readonly word: Word;
+  readonly file: LoadedFile;
+  readonly placed: PlacedSection;
+  readonly statement: Definition | LetStatement;
+}
+
+export interface Bindings {
+  /** Every name that stands for exactly one statement. */
+  readonly unique: ReadonlyMap<string, Binding>;
+  /** Names given more than once: they stand for nothing. */
+  readonly ambiguous: ReadonlySet<string>;
+  /** All named statements in file order, those of ambiguous names too. */
+  readonly all: readonly Binding[];
+}
+
+/** Binds the names of all files; facts about names go to the file they stand in. */
+export function bindNames(files: readonly LoadedFile[]): Bindings {
+  const all = files.flatMap((file) => file.tree.sections.flatMap((placed) => bindingOf(file, placed) ?? []));
+  const byName = new Map<string, Binding[]>();
+  for (const binding of all) {
+    const others = byName.get(binding.name);
+    if (others) others.push(binding);
+    else byName.set(binding.name, [binding]);
+  }
+  const unique = new Map<string, Binding>();
+  const ambiguous = new Set<string>();
+  for (const [name, bindings] of byName) {
+    const [only, second] = bindings;
+    if (only && !second) unique.set(name, only);
+    else ambiguous.add(name);
+    for (const binding of bindings) reportName(binding, bindings);
+  }
+  return { unique, ambiguous, all };
+}
+
+function bindingOf(file: LoadedFile, placed: PlacedSection): Binding | undefined {
+  const { statement } = placed.section;
+  if (statement.kind !== 'definition' && statement.kind !== 'let') return undefined;
+  return statement.name && { name: statement.name.text, word: statement.name, file, placed, statement };
+}
+
+function reportName(binding: Binding, sameName: readonly Binding[]): void {
+  const { name, word, file, placed } = binding;
+  const say = (fact: Fact): void => {
+    file.facts.push({ fact, place: placeOf(file.path, placed, word.span) });
+  };
+  if (sameName.length > 1) {
+    const others = sameName.filter((other) => other !== binding);
+    say({
+      code: 'name/duplicate',
+      name,
+      others: others.map((other) => placeOf(other.file.path, other.placed, other.word.span)),
+    });
+    return;
+  }
+  if (word.form !== 'quoted' && isReservedWord(name)) return say({ code: 'name/reserved', name, why: 'reserved-word' });
+  if (word.form !== 'quoted' && isUnitWord(name)) return say({ code: 'name/reserved', name, why: 'unit' });
+  const substance = findSubstance(name);
+  if (substance && binding.statement.kind === 'definition') {
+    say({ code: 'name/like-catalogue', name, substance: substance.name });
+  }
+}

@@ -1,0 +1,116 @@
+// Entry tables: what a definition kind takes, one row an entry, and the one reader of definitions against such a table.
+// A row says the entry's words, what its value looks like (a reader), whether it must be there, its default with the
+// default's source, and its help. Checking, completion, hover help, the printed reference and the snippets come from it.
+// Invariant: whatever is written inside a definition is either read by a row or reported; nothing stays silent.
+
+import type { Definition, Entry } from '../../grammar/tree.ts';
+import { near, type Context } from './context.ts';
+
+/** Reads the value of an entry. `undefined` means it could not be read, and that has been said. */
+export interface Reader<T> {
+  /** What the entry takes, for a message and the reference: "a specific energy, such as `44 MJ/kg`". */
+  readonly takes: string;
+  /** Words that may be written as they are, for completion. */
+  readonly words?: readonly string[];
+  /** A unit that fits, for completion and examples. */
+  readonly unit?: string;
+  /** Bare words here name substances or definitions. */
+  readonly names?: boolean;
+  read(entry: Entry, context: Context): T | undefined;
+}
+
+export interface EntryRow<T> {
+  readonly name: string;
+  readonly reader: Reader<T>;
+  readonly help: string;
+  readonly needed?: boolean;
+  /** What holds when the entry is not written, and whose word that is. */
+  readonly default?: { readonly text: string; readonly source: string };
+}
+
+export type EntryTable = Readonly<Record<string, EntryRow<unknown>>>;
+
+/** What was read, by the table's own keys. An entry that is absent or could not be read is not there. */
+export type EntriesRead<Table extends EntryTable> = {
+  readonly [Key in keyof Table]?: ReadEntry<Table[Key] extends EntryRow<infer T> ? T : never>;
+};
+
+export interface ReadEntry<T> {
+  readonly value: T;
+  readonly entry: Entry;
+}
+
+export interface DefinitionRead<Table extends EntryTable> {
+  readonly entries: EntriesRead<Table>;
+  /** Keys of entries that are written but could not be read: what depends on them is unknown, and silent. */
+  readonly broken: ReadonlySet<keyof Table>;
+}
+
+/** Reads a definition's entries by its kind's table. Portions and equations are left to the kind. */
+export function readEntries<Table extends EntryTable>(
+  definition: Definition,
+  table: Table,
+  context: Context,
+): DefinitionRead<Table> {
+  const keyOf = new Map<string, keyof Table>();
+  for (const key of Object.keys(table)) keyOf.set(table[key]?.name ?? key, key);
+  const firsts = new Map<string, Entry>();
+  const read: { [Key in keyof Table]?: ReadEntry<unknown> } = {};
+  const broken = new Set<keyof Table>();
+  for (const line of definition.lines) {
+    if (line.kind !== 'entry') continue;
+    const key = keyOf.get(line.words);
+    if (key === undefined) {
+      const known = [...keyOf.keys()];
+      context.report(line.wordsSpan, {
+        code: 'name/unknown-entry',
+        entry: line.words,
+        kind: definition.keyword.text,
+        near: near(line.words, known),
+        known,
+      });
+      continue;
+    }
+    context.mean(line.wordsSpan, { kind: 'entry', definitionKind: definition.keyword.text, entry: line.words });
+    const first = firsts.get(line.words);
+    if (first) {
+      context.report(line.wordsSpan, {
+        code: 'name/repeated-entry',
+        entry: line.words,
+        first: context.place(first.wordsSpan),
+      });
+      continue;
+    }
+    firsts.set(line.words, line);
+    const row = table[key];
+    if (!row) continue;
+    context.startLine(line.words);
+    const value = line.phrases.length === 0 ? undefined : row.reader.read(line, context);
+    if (value === undefined) broken.add(key);
+    else read[key] = { value, entry: line };
+  }
+  const missing = Object.values(table).filter((row) => row.needed && !firsts.has(row.name));
+  if (missing.length > 0) {
+    context.report(definition.name?.span ?? definition.header, {
+      code: 'name/missing-entry',
+      kind: definition.keyword.text,
+      name: definition.name?.text ?? '',
+      entries: missing.map((row) => row.name),
+    });
+  }
+  // Each value was made by the reader of its own row, which is what the mapped type says; the loop cannot show it.
+  return { entries: read as EntriesRead<Table>, broken };
+}
+
+/** Reports lines of a form this kind does not take. */
+export function refuseLines(
+  definition: Definition,
+  taken: readonly ('portion' | 'equation')[],
+  context: Context,
+): void {
+  for (const line of definition.lines) {
+    if ((line.kind === 'portion' || line.kind === 'equation') && !taken.includes(line.kind)) {
+      context.report(line.span, { code: 'name/unexpected-line', kind: definition.keyword.text, line: line.kind });
+    }
+  }
+}

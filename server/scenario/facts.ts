@@ -1,0 +1,187 @@
+// What the evaluation has to say about a scenario: one variant a finding code, each with the numbers and names its
+// message needs and nothing of its wording. The place is kept beside the fact (see PlacedFact). findings/ has one file
+// for each variant; the registry there is a map over `Fact['code']`, so the compiler asks for the missing one.
+
+import type { Problem } from '../../grammar/tree.ts';
+import type { GivenProductsFault } from '../core/balance/given-products.ts';
+import type { NoBalance } from '../core/balance/equation.ts';
+import type { Dimension } from '../core/quantity/dimension.ts';
+import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Place } from './scenario.ts';
+
+export type Fact =
+  | SyntaxFact
+  /** A word stands for nothing. `what` says what was looked for. */
+  | {
+      readonly code: 'name/unknown';
+      readonly what:
+        'substance' | 'definition' | 'figure' | 'value' | 'function' | 'element' | 'portion' | 'code' | 'word';
+      readonly word: string;
+      readonly near: readonly string[];
+      /** For a figure or portion: the definition it was looked for in. For a listed word: the entry. */
+      readonly owner?: string;
+      /** For a listed word: what is allowed. */
+      readonly allowed?: readonly string[];
+    }
+  | { readonly code: 'name/unknown-kind'; readonly word: string; readonly near: readonly string[] }
+  | { readonly code: 'name/duplicate'; readonly name: string; readonly others: readonly Place[] }
+  | { readonly code: 'name/reserved'; readonly name: string; readonly why: 'reserved-word' | 'unit' | 'kind' }
+  | { readonly code: 'name/like-catalogue'; readonly name: string; readonly substance: string }
+  | { readonly code: 'name/cycle'; readonly path: readonly string[] }
+  | { readonly code: 'name/use-cycle'; readonly path: readonly string[] }
+  | {
+      readonly code: 'name/missing-file';
+      readonly path: string;
+      readonly why: 'missing' | 'unreadable' | 'outside' | 'not-relative';
+      readonly detail?: string;
+    }
+  | {
+      readonly code: 'name/unknown-entry';
+      readonly entry: string;
+      readonly kind: string;
+      readonly near: readonly string[];
+      readonly known: readonly string[];
+    }
+  | { readonly code: 'name/repeated-entry'; readonly entry: string; readonly first: Place }
+  | {
+      readonly code: 'name/missing-entry';
+      readonly kind: string;
+      readonly name: string;
+      readonly entries: readonly string[];
+    }
+  /** A phrase of an entry that its table does not take. */
+  | { readonly code: 'name/unknown-phrase'; readonly entry: string; readonly text: string; readonly takes: string }
+  | { readonly code: 'name/missing-phrase'; readonly entry: string; readonly takes: string }
+  /** A function called with too many or too few values. */
+  | { readonly code: 'name/arguments'; readonly name: string; readonly takes: string; readonly given: number }
+  /** A line that this kind does not take: a portion in a reaction, an equation in a blend. */
+  | { readonly code: 'name/unexpected-line'; readonly kind: string; readonly line: 'portion' | 'equation' }
+  /** Something of another kind stands where, say, a number is needed. */
+  | { readonly code: 'name/wrong-kind'; readonly name: string; readonly is: string; readonly needed: string }
+  /** `hint` says in a sentence why a well-known word is no unit here (`Nm3` has no agreed state). */
+  | {
+      readonly code: 'unit/unknown';
+      readonly word: string;
+      readonly near: readonly string[];
+      readonly hint: string | null;
+    }
+  /** A number stands without a unit where one is needed. */
+  | { readonly code: 'unit/missing'; readonly needed: Dimension; readonly example: string }
+  /** One value against what its place needs. */
+  | {
+      readonly code: 'unit/mismatch';
+      readonly form: 'place';
+      readonly found: Sided;
+      readonly needed: Pick<Quantity, 'dimension' | 'kind'>;
+      /** A unit that would fit, for "write for example". */
+      readonly example: string;
+    }
+  /** Two values that cannot be added, compared, … */
+  | {
+      readonly code: 'unit/mismatch';
+      readonly form: 'sides';
+      readonly operation: 'add' | 'subtract' | 'compare';
+      readonly left: Sided;
+      readonly right: Sided;
+    }
+  /** Two temperatures are added; `asDifference` is the second as a difference in K (`100 K`), where it is a literal. */
+  | {
+      readonly code: 'unit/two-temperatures';
+      readonly left: Sided;
+      readonly right: Sided;
+      readonly asDifference: string | null;
+    }
+  /** A temperature where only a difference makes sense, or the other way round, or one that is multiplied or negated. */
+  | {
+      readonly code: 'unit/temperature';
+      readonly why: 'difference-needed' | 'temperature-needed' | 'scaled';
+      readonly text: string;
+    }
+  /** `absolutePa` is the gauge pressure as an absolute one. */
+  | {
+      readonly code: 'unit/gauge';
+      readonly why: 'absolute-needed' | 'gauge-needed' | 'scaled';
+      readonly text: string;
+      readonly absolutePa: number | null;
+    }
+  | { readonly code: 'unit/exponent'; readonly text: string; readonly base: Sided }
+  | { readonly code: 'unit/uncertainty'; readonly text: string; readonly why: 'negative' | 'mismatch' | 'relative' }
+  /** A unit that may mean two things, or may not stand so; `offers` are spellings that say one of them. */
+  | {
+      readonly code: 'unit/ambiguous';
+      readonly text: string;
+      readonly offers: readonly string[];
+      readonly why: 'brackets' | 'scale' | 'form';
+    }
+  | {
+      readonly code: 'balance/elements';
+      readonly differences: readonly { readonly element: string; readonly left: number; readonly right: number }[];
+      readonly solution:
+        | { readonly kind: 'unique'; readonly equation: string }
+        | { readonly kind: 'several'; readonly equation: string; readonly freedom: number }
+        | { readonly kind: 'none'; readonly why: NoBalance };
+    }
+  | {
+      readonly code: 'balance/shares';
+      readonly why: 'sum' | 'inconsistent' | 'no-room' | 'mixed-amounts' | 'rest-with-amounts';
+      readonly name: string;
+      /** The sum of the shares as a fraction, where there is one. */
+      readonly sum: number | null;
+      /** Edits that would mend it. */
+      readonly mends: readonly Mend[];
+    }
+  | { readonly code: 'balance/two-rests'; readonly name: string }
+  | { readonly code: 'balance/negative'; readonly text: string }
+  | { readonly code: 'balance/no-density'; readonly substance: string; readonly why: 'density' | 'molar-mass' }
+  | { readonly code: 'balance/no-portions'; readonly name: string }
+  | { readonly code: 'balance/no-data'; readonly what: string; readonly missing: readonly string[] }
+  /** The named products cannot be what the fuel burns to. */
+  | { readonly code: 'balance/products'; readonly fault: GivenProductsFault }
+  | { readonly code: 'balance/water-missing'; readonly name: string; readonly waterKgPerKg: number }
+  | { readonly code: 'balance/contradiction'; readonly what: string; readonly first: string; readonly second: string }
+  | {
+      readonly code: 'range/number';
+      readonly text: string;
+      readonly why: 'not-finite' | 'division-by-zero' | 'outside-function';
+    }
+  /** `only-reference`: values are known at 25 °C alone. */
+  | {
+      readonly code: 'range/temperature';
+      readonly text: string;
+      readonly why: 'below-absolute-zero' | 'only-reference';
+    }
+  | { readonly code: 'range/share'; readonly text: string; readonly low: number; readonly high: number }
+  | { readonly code: 'range/positive'; readonly text: string; readonly entry: string }
+  | {
+      readonly code: 'expect/failed';
+      readonly claim: string;
+      readonly found: Quantity;
+      readonly unit: string | null;
+      /** How far the found value is from holding, in SI, and the limit it missed. */
+      readonly limit: Quantity;
+      readonly tolerance: Quantity | null;
+    }
+  | { readonly code: 'expect/not-a-claim'; readonly text: string }
+  | { readonly code: 'kind/not-evaluated'; readonly kind: string; readonly name: string }
+  /** An `acknowledge` line that cannot count: only hazards can be acknowledged, by a known code, with a reason. */
+  | { readonly code: 'name/acknowledged'; readonly why: 'not-a-hazard' | 'no-reason'; readonly acknowledged: string }
+  | { readonly code: 'program/failed'; readonly message: string };
+
+/** A problem of form, already in words by the grammar. */
+export interface SyntaxFact {
+  readonly code: Problem['code'];
+  readonly problem: Problem;
+}
+
+export interface Sided {
+  readonly text: string;
+  readonly dimension: Dimension;
+  readonly kind: Quantity['kind'];
+}
+
+/** One textual change, by place, that would mend what is said. */
+export interface Mend {
+  readonly title: string;
+  readonly place: Place;
+  readonly newText: string;
+}

@@ -1,0 +1,106 @@
+// Reaches the files of a scenario: parses the one asked about and follows each `use`, relative to the file it stands in.
+// Reads nothing itself; a reader is handed in that answers with a text, a fault, or "wanted" when the text must first be
+// fetched. Each file is reached once. A cycle of files is one fact, at the `use` that closes it.
+// Invariant: the walk is iterative, so that a long chain of files cannot exhaust the stack.
+
+import { parse } from '../../grammar/parse.ts';
+import type { PlacedSection, SyntaxTree, UseStatement } from '../../grammar/tree.ts';
+import { isUnitWord } from '../core/quantity/read-unit.ts';
+import type { Fact } from './facts.ts';
+import { placeOf, type PlacedFact } from './scenario.ts';
+
+/** What a reader says of an address. `detail` is a plain sentence for the person, without the address. */
+export type ReadAnswer =
+  | { readonly text: string }
+  | { readonly fault: 'missing' | 'unreadable' | 'outside'; readonly detail?: string }
+  | 'wanted';
+
+export interface LoadedFile {
+  readonly path: string;
+  readonly used: boolean;
+  readonly tree: SyntaxTree;
+  readonly facts: PlacedFact[];
+}
+
+export interface LoadedFiles {
+  readonly files: readonly LoadedFile[];
+  readonly wanted: readonly string[];
+}
+
+/** The file at `root` and all it reaches, in the order reached. Empty when the root itself cannot be read. */
+export function loadFiles(root: string, read: (path: string) => ReadAnswer): LoadedFiles {
+  const answer = read(root);
+  if (answer === 'wanted') return { files: [], wanted: [root] };
+  if (!('text' in answer)) return { files: [], wanted: [] };
+
+  const files = new Map<string, LoadedFile>();
+  const wanted = new Set<string>();
+  const open: { file: LoadedFile; next: number }[] = [];
+  const enter = (path: string, used: boolean, text: string): void => {
+    const file = { path, used, tree: parse(text, isUnitWord), facts: [] };
+    files.set(path, file);
+    open.push({ file, next: 0 });
+  };
+
+  enter(root, false, answer.text);
+  for (let top = open.at(-1); top; top = open.at(-1)) {
+    const placed = top.file.tree.sections[top.next++];
+    if (!placed) {
+      open.pop();
+      continue;
+    }
+    if (placed.section.statement.kind !== 'use') continue;
+    followUse(top.file, placed, placed.section.statement);
+  }
+  return { files: [...files.values()], wanted: [...wanted] };
+
+  function followUse(file: LoadedFile, placed: PlacedSection, statement: UseStatement): void {
+    const written = statement.path;
+    if (!written) return; // the grammar has said that the path is missing
+    const say = (fact: Fact): void => {
+      file.facts.push({ fact, place: placeOf(file.path, placed, written.span) });
+    };
+    const path = resolveUse(file.path, written.value);
+    if (path === null) return say({ code: 'name/missing-file', path: written.value, why: 'not-relative' });
+    const onPath = open.findIndex((entry) => entry.file.path === path);
+    if (onPath >= 0) {
+      return say({ code: 'name/use-cycle', path: [...open.slice(onPath).map((entry) => entry.file.path), path] });
+    }
+    if (files.has(path)) return;
+    const found = read(path);
+    if (found === 'wanted') wanted.add(path);
+    else if ('text' in found) enter(path, true, found.text);
+    else {
+      const fact = { code: 'name/missing-file', path: written.value, why: found.fault } as const;
+      say(found.detail === undefined ? fact : { ...fact, detail: found.detail });
+    }
+  }
+}
+
+/**
+ * The address a `use` means: relative to the file it stands in, with `/` and `..`; null when it is absolute, has a
+ * scheme or drive, or is no path at all. Where the using file is named by a URI, the path's characters are escaped.
+ */
+export function resolveUse(from: string, path: string): string | null {
+  if (
+    path === '' ||
+    path.startsWith('/') ||
+    path.includes('\\') ||
+    path.includes('\0') ||
+    /^[A-Za-z][\w+.-]*:/.test(path)
+  ) {
+    return null;
+  }
+  const uri = /^([A-Za-z][\w+.-]*:\/\/[^/]*)(\/.*)$/s.exec(from);
+  const [origin, base] = uri ? [uri[1] ?? '', uri[2] ?? ''] : ['', from];
+  const segments = base.split('/').slice(0, -1);
+  for (const part of path.split('/')) {
+    if (part === '' || part === '.') continue;
+    const last = segments.at(-1);
+    if (part === '..' && last !== undefined && last !== '' && last !== '..') segments.pop();
+    else if (part === '..' && last === '')
+      return null; // above the root of a file system
+    else segments.push(uri && part !== '..' ? encodeURIComponent(part) : part);
+  }
+  return origin + segments.join('/');
+}

@@ -1,0 +1,44 @@
+// What a definition kind is to the rest of the scenario: its help, its entry table, the figures it may have, and the
+// function that works a definition out. A kind without one is known to the language but not evaluated yet.
+
+import type { Definition } from '../../../grammar/tree.ts';
+import type { Context } from '../context.ts';
+import type { EntryTable } from '../entries.ts';
+import type { Material } from '../material.ts';
+import type { FigureRow } from '../material-figures.ts';
+import type { Absent, Figure, LineResult, Table } from '../scenario.ts';
+
+export interface Kind {
+  readonly kind: string;
+  /** One sentence for a hover and the reference. */
+  readonly help: string;
+  readonly evaluated: EvaluatedKind | null;
+}
+
+export interface EvaluatedKind {
+  readonly entries: EntryTable;
+  /** The lines it takes besides entries. */
+  readonly lines: readonly ('portion' | 'equation')[];
+  readonly figures: readonly FigureRow[];
+  evaluate(definition: Definition, context: Context): KindAnswer;
+}
+
+export interface KindAnswer {
+  readonly figures: readonly Figure[];
+  readonly tables: readonly Table[];
+  readonly absent: Absent;
+  readonly lines: readonly LineResult[];
+  /** What the definition is as a portion of something else; null when it is no material or could not be worked out. */
+  readonly material: Material | null;
+}
+
+/** An answer that says nothing: the cause has been reported. Its figures are all absent for that reason. */
+export function unknownAnswer(kind: Pick<EvaluatedKind, 'figures'>): KindAnswer {
+  return {
+    figures: [],
+    tables: [],
+    absent: new Map(kind.figures.map((figure) => [figure.id, null])),
+    lines: [],
+    material: null,
+  };
+}

@@ -1,0 +1,278 @@
+// `reaction`: one written equation. Its elements are counted on both sides; where they do not close, the balanced equation
+// is offered. A balanced equation is valued: enthalpy, Gibbs energy and log10 K at 25 °C, per equation as written and
+// per kilogram of its left side.
+
+import type { Definition, Equation, Term } from '../../../grammar/tree.ts';
+import { equationElements } from '../../core/balance/elements.ts';
+import { balanceEquation, type Balance } from '../../core/balance/equation.ts';
+import { reactionValues, type ReactionTerm } from '../../core/balance/reaction.ts';
+import { knownUnit } from '../../core/quantity/convert.ts';
+import { noParts } from '../../core/quantity/parts.ts';
+import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
+import { propagate } from '../../core/quantity/uncertainty.ts';
+import type { Formula } from '../../core/substance/formula.ts';
+import { referenceTemperatureK } from '../../core/substance/substance.ts';
+import type { Context } from '../context.ts';
+import { readEntries, refuseLines } from '../entries.ts';
+import type { Material } from '../material.ts';
+import type { FigureRow } from '../material-figures.ts';
+import { materialNamed } from '../materials.ts';
+import { stateReader } from '../readers.ts';
+import type { Figure, Table } from '../scenario.ts';
+import type { Working, WorkingInput } from '../working.ts';
+import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+
+const entries = {
+  state: {
+    name: 'state',
+    reader: stateReader,
+    help: 'The temperature and pressure it is valued at.',
+    default: { text: '25 °C, 1 bar', source: 'standard reference state' },
+  },
+};
+
+const figures = [
+  { id: 'enthalpy', label: 'Enthalpy of reaction, per equation as written', unit: 'kJ', method: 'reaction-enthalpy' },
+  {
+    id: 'specific-enthalpy',
+    label: 'Enthalpy of reaction, per kg of the left side',
+    unit: 'kJ/kg',
+    method: 'specific-reaction-enthalpy',
+  },
+  {
+    id: 'gibbs-energy',
+    label: 'Gibbs energy of reaction, per equation as written',
+    unit: 'kJ',
+    method: 'reaction-gibbs-energy',
+  },
+  { id: 'log10-k', label: 'Decimal logarithm of the equilibrium constant', unit: '1', method: 'equilibrium-constant' },
+] as const satisfies readonly FigureRow[];
+
+const evaluated: EvaluatedKind = { entries, lines: ['equation'], figures, evaluate };
+
+export const reaction: Kind = {
+  kind: 'reaction',
+  help: 'One written equation: whether it balances, and what it releases.',
+  evaluated,
+};
+
+/** A term with its formula; its material may lack data, never a formula. */
+interface ReadTerm {
+  readonly term: Term;
+  readonly coefficient: number;
+  readonly material: Material;
+  readonly formula: Formula;
+}
+
+function evaluate(definition: Definition, context: Context): KindAnswer {
+  const { entries: read, broken } = readEntries(definition, entries, context);
+  refuseLines(definition, ['equation'], context);
+  const equations = definition.lines.flatMap((line, index) => (line.kind === 'equation' ? [{ line, index }] : []));
+  const [first, second] = equations;
+  const header = definition.name?.span ?? definition.header;
+  if (second) {
+    context.report(second.line.span, { code: 'name/unexpected-line', kind: 'reaction', line: 'equation' });
+  }
+  if (!first) {
+    const isBroken = definition.lines.some((line) => line.kind === 'broken-line' || line.kind === 'portion');
+    const name = definition.name?.text ?? '';
+    if (!isBroken)
+      context.report(header, { code: 'name/missing-entry', kind: 'reaction', name, entries: ['an equation'] });
+    return unknownAnswer(evaluated);
+  }
+  const left = readSide(first.line.left, context);
+  const right = readSide(first.line.right, context);
+  if (!left || !right) return unknownAnswer(evaluated);
+
+  const count = equationElements(left.map(countedTerm), right.map(countedTerm));
+  const tables = [elementsTable(count.sums)];
+  if (!count.balanced) {
+    reportUnbalanced(first.line, count.sums, left, right, context);
+    return { ...unknownAnswer(evaluated), tables };
+  }
+  const temperature = read.state?.value.temperature;
+  if (temperature && Math.abs(temperature.value - referenceTemperatureK) > 0.01 && read.state) {
+    const text = context.written(read.state.entry.span);
+    context.report(read.state.entry.span, { code: 'range/temperature', text, why: 'only-reference' });
+  }
+  if (broken.has('state') || (temperature && Math.abs(temperature.value - referenceTemperatureK) > 0.01)) {
+    return { ...unknownAnswer(evaluated), tables };
+  }
+  const answer = value(left, right, first.line, context);
+  const line = { kind: 'equation', line: first.index, figures: answer.figures.map((figure) => figure.id) } as const;
+  return { ...answer, tables, lines: [line], material: null };
+}
+
+function readSide(terms: readonly Term[], context: Context): readonly ReadTerm[] | null {
+  const read: ReadTerm[] = [];
+  let isComplete = true;
+  for (const term of terms) {
+    const material = materialNamed(term.species, context, 'composition');
+    if (material?.formula) {
+      read.push({ term, coefficient: term.coefficient?.value ?? 1, material, formula: material.formula });
+      continue;
+    }
+    isComplete = false;
+    if (material) {
+      const needed = 'a substance with a formula';
+      context.report(term.species.span, { code: 'name/wrong-kind', name: material.name, is: 'a mixture', needed });
+    }
+  }
+  return isComplete ? read : null;
+}
+
+function countedTerm({ term, formula }: ReadTerm): {
+  coefficient: number | readonly [number, number];
+  formula: Formula;
+} {
+  return { coefficient: term.coefficient?.fraction ?? term.coefficient?.value ?? 1, formula };
+}
+
+function reportUnbalanced(
+  equation: Equation,
+  sums: readonly {
+    readonly element: string;
+    readonly left: number;
+    readonly right: number;
+    readonly difference: number;
+  }[],
+  left: readonly ReadTerm[],
+  right: readonly ReadTerm[],
+  context: Context,
+): void {
+  const balance = balanceEquation(
+    left.map((term) => term.formula),
+    right.map((term) => term.formula),
+  );
+  context.report(equation.span, {
+    code: 'balance/elements',
+    differences: sums.filter((sum) => sum.difference !== 0),
+    solution: solutionOf(balance, equation, context),
+  });
+}
+
+function solutionOf(balance: Balance, equation: Equation, context: Context) {
+  if (balance.kind === 'none') return { kind: 'none', why: balance.why } as const;
+  const side = (terms: readonly Term[], coefficients: readonly number[]): string =>
+    terms
+      .map((term, index) => {
+        const coefficient = coefficients[index] ?? 1;
+        const species = context.written(term.species.span);
+        return coefficient === 1 ? species : `${coefficient} ${species}`;
+      })
+      .join(' + ');
+  const arrow = context.written(equation.arrow);
+  const { coefficients } = balance;
+  const text = `${side(equation.left, coefficients.left)} ${arrow} ${side(equation.right, coefficients.right)}`;
+  return balance.kind === 'unique'
+    ? ({ kind: 'unique', equation: text } as const)
+    : ({ kind: 'several', equation: text, freedom: balance.dimension } as const);
+}
+
+function value(
+  left: readonly ReadTerm[],
+  right: readonly ReadTerm[],
+  equation: Equation,
+  context: Context,
+): Pick<KindAnswer, 'figures' | 'absent'> {
+  const terms = [...left, ...right];
+  const missing = [
+    ...new Set(terms.filter(({ material }) => !material.formationEnthalpy).map(({ material }) => material.name)),
+  ];
+  if (missing.length > 0) {
+    const names = missing.map((name) => `the enthalpy of formation of ${name}`);
+    context.report(equation.span, { code: 'balance/no-data', what: 'enthalpy of reaction', missing: names });
+    return unknownAnswer(evaluated);
+  }
+  const unknown = quantityOf(NaN);
+  const inputs = terms.flatMap(({ material }) => [material.formationEnthalpy ?? unknown, material.entropy ?? unknown]);
+  const outcomes = propagate(inputs, (values) => {
+    const termAt = (read: ReadTerm, index: number): ReactionTerm => {
+      const molarMass = read.material.molarMass?.value;
+      const enthalpy = values[2 * index] ?? NaN;
+      const entropy = values[2 * index + 1] ?? NaN;
+      return {
+        name: read.material.name,
+        coefficient: read.coefficient,
+        molarMassKgPerMol: molarMass,
+        enthalpyJPerMol: molarMass === undefined ? undefined : enthalpy * molarMass,
+        entropyJPerMolK: Number.isNaN(entropy) ? undefined : entropy,
+      };
+    };
+    const answer = reactionValues(
+      left.map((read, index) => termAt(read, index)),
+      right.map((read, index) => termAt(read, left.length + index)),
+    );
+    if (answer.kind === 'fault') return [NaN, NaN, NaN, NaN];
+    return [answer.enthalpyJ, answer.enthalpyJPerKgOfLeft ?? NaN, answer.gibbsEnergyJ ?? NaN, answer.log10K ?? NaN];
+  });
+  const withoutEntropy = terms.filter(({ material }) => !material.entropy).map(({ material }) => material.name);
+  const found: Figure[] = [];
+  const absent = new Map<string, readonly string[] | null>();
+  for (const [index, row] of figures.entries()) {
+    const outcome = outcomes[index];
+    if (!outcome || !Number.isFinite(outcome.value)) {
+      absent.set(
+        row.id,
+        [...new Set(withoutEntropy)].map((name) => `the entropy of ${name}`),
+      );
+      continue;
+    }
+    const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
+    found.push({
+      id: row.id,
+      label: row.label,
+      quantity,
+      unit: row.unit,
+      working: workingOf(row, left, right, context),
+    });
+  }
+  return { figures: found, absent };
+}
+
+function workingOf(row: FigureRow, left: readonly ReadTerm[], right: readonly ReadTerm[], context: Context): Working {
+  const inputs: WorkingInput[] = [];
+  for (const [terms, sign] of [
+    [left, -1],
+    [right, 1],
+  ] as const) {
+    for (const { term, coefficient, material } of terms) {
+      const place = context.place(term.span);
+      const counted = `${sign * coefficient} × ${context.written(term.species.span)}`;
+      const enthalpy = perMole(material.formationEnthalpy, material.molarMass);
+      if (row.id !== 'log10-k' && enthalpy) {
+        inputs.push({ label: `${counted}, enthalpy of formation`, quantity: enthalpy, unit: 'kJ/mol', place });
+      }
+      if ((row.id === 'gibbs-energy' || row.id === 'log10-k') && material.entropy) {
+        inputs.push({ label: `${counted}, entropy`, quantity: material.entropy, unit: 'J/(mol K)', place });
+      }
+    }
+  }
+  const sources = [...left, ...right].flatMap(({ material }) => material.sources);
+  return { method: row.method, inputs, sources: [...new Set(sources)], assumptions: ['reference-state', 'ideal-gas'] };
+}
+
+function perMole(perKg: Quantity | null, molarMass: Quantity | null): Quantity | null {
+  return perKg && molarMass && quantityOf(perKg.value * molarMass.value, knownUnit('J/mol').dimension);
+}
+
+function elementsTable(
+  sums: readonly {
+    readonly element: string;
+    readonly left: number;
+    readonly right: number;
+    readonly difference: number;
+  }[],
+): Table {
+  return {
+    id: 'elements',
+    label: 'Elements on both sides',
+    columns: [
+      { id: 'element', label: 'Element', unit: null },
+      { id: 'left', label: 'left', unit: '1' },
+      { id: 'right', label: 'right', unit: '1' },
+      { id: 'difference', label: 'right less left', unit: '1' },
+    ],
+    rows: sums.map((sum) => [sum.element, sum.left, sum.right, sum.difference]),
+  };
+}

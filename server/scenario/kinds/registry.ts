@@ -1,0 +1,59 @@
+// All definition kinds by their word. The words themselves are the grammar's; a test holds the two lists against each
+// other. A kind that is not evaluated yet still has its help, so that hovers and completion can speak of it.
+
+import { blend } from './blend.ts';
+import type { Kind } from './kind.ts';
+import { reaction } from './reaction.ts';
+import { substance } from './substance.ts';
+
+export const kinds: readonly Kind[] = [
+  substance,
+  blend,
+  later('oxidant', 'What a blend is burnt in: dry or humid air, oxygen, steam, water or recycled exhaust.'),
+  reaction,
+  later('burn', 'A blend burnt in an oxidant to chemical equilibrium, and its products as they cool.'),
+  later('engine', 'An engine, by the cycle it works or by its measured consumption against load.'),
+  later('duty', 'What an engine has to do: legs by time or by distance and speed, or a named test cycle.'),
+  later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),
+  later('supply', 'How a substance is made: electricity, heat, emissions, price and by-products.'),
+  later('sea', 'The water that takes up what is released: salinity, temperature and its carbonate system.'),
+  later('space', 'An enclosed volume with its air changes, and what a leak, spill or boil-off does in it.'),
+  later('site', 'Who and what is near a release, the wind and the stack.'),
+  later('account', 'The whole: stack, supply, sea, regulation, money and people.'),
+  later('fleet', 'A service many times over, year by year.'),
+  later('sweep', 'One to three quantities varied over points, and the figures shown for each.'),
+  later('find', 'A quantity adjusted until a claim holds.'),
+  later('compare', 'Blends set side by side over one service.'),
+];
+
+const byWord: ReadonlyMap<string, Kind> = new Map(kinds.map((kind) => [kind.kind, kind]));
+
+/** The kind of that word, if there is one. */
+export function kindOf(word: string): Kind | undefined {
+  return byWord.get(word);
+}
+
+/** The help of an entry of a kind, for a hover: what it is, what it takes, its default. */
+export function entryHelp(kind: string, entry: string): EntryHelp | undefined {
+  const rows = Object.values(byWord.get(kind)?.evaluated?.entries ?? {});
+  const row = rows.find((candidate) => candidate.name === entry);
+  return row && { help: row.help, takes: row.reader.takes, default: row.default ?? null };
+}
+
+export interface EntryHelp {
+  readonly help: string;
+  readonly takes: string;
+  readonly default: { readonly text: string; readonly source: string } | null;
+}
+
+/** Whether bare words of an entry of this kind may name things; an entry nobody knows may. */
+export function entryNamesThings(kind: string, entry: string): boolean {
+  const entries = byWord.get(kind)?.evaluated?.entries;
+  if (!entries) return true;
+  const row = Object.values(entries).find((candidate) => candidate.name === entry);
+  return row?.reader.names ?? row === undefined;
+}
+
+function later(kind: string, help: string): Kind {
+  return { kind, help, evaluated: null };
+}

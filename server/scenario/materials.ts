@@ -1,0 +1,272 @@
+// From a word to a material: a definition in reach, a catalogue substance by name, alias or formula, or, where only the
+// composition matters, any formula at all. Also builds the material of a catalogue substance, once each.
+// Says at the word what it could not make of it. Knows no entries and no blends.
+
+import type { Word } from '../../grammar/tree.ts';
+import { formationEnthalpyOf } from '../core/balance/formation-enthalpy.ts';
+import { celsiusZeroK } from '../core/quantity/constants.ts';
+import { knownUnit } from '../core/quantity/convert.ts';
+import { dimensionless } from '../core/quantity/dimension.ts';
+import { quantityOf, type Parts, type Quantity } from '../core/quantity/quantity.ts';
+import { findSubstance, phasesOfSubstance, suggestSubstances } from '../core/substance/catalogue.ts';
+import { molPerKgOfFormula } from '../core/substance/composition.ts';
+import { formulaTextWithPhase, molarMassKgPerMol, parseFormula, type Formula } from '../core/substance/formula.ts';
+import type { SourceRecord } from '../core/substance/record.ts';
+import type { Datum, Substance } from '../core/substance/substance.ts';
+import { near, type Context } from './context.ts';
+import type { Material, MissingProperty } from './material.ts';
+import type { CardProperty, MaterialCard } from './scenario.ts';
+
+/**
+ * `data`: a material whose numbers are wanted. `composition`: any formula will do, in the catalogue or not.
+ * `quiet`: as `data`, but nothing is said when there is none.
+ */
+export type Wanted = 'data' | 'composition' | 'quiet';
+
+/** The material a word stands for; null when there is none (said at the word, unless the cause was said elsewhere). */
+export function materialNamed(word: Word, context: Context, wanted: Wanted = 'data'): Material | null {
+  const named = word.phase === undefined ? context.scope.lookup(word.text) : undefined;
+  if (named?.kind === 'unknown') return null;
+  if (named?.kind === 'unevaluated') {
+    context.mean(word.span, { kind: 'definition', name: word.text, definition: named.definition });
+    return null;
+  }
+  if (named?.kind === 'definition') {
+    context.mean(word.span, { kind: 'definition', name: word.text, definition: named.definition });
+    if (named.material) return named.material;
+    const { kind } = named.definition;
+    if (wanted !== 'quiet' && kind !== 'blend' && kind !== 'substance') {
+      context.report(word.span, {
+        code: 'name/wrong-kind',
+        name: word.text,
+        is: `a ${kind}`,
+        needed: 'a substance or blend',
+      });
+    }
+    return null;
+  }
+  if (named) {
+    if (wanted !== 'quiet') {
+      context.report(word.span, {
+        code: 'name/wrong-kind',
+        name: word.text,
+        is: 'a number',
+        needed: 'a substance or blend',
+      });
+    }
+    return null;
+  }
+  const substance = findSubstance(word.text, word.phase);
+  if (substance) {
+    const material = materialOfSubstance(substance);
+    context.mean(word.span, { kind: 'catalogue', card: material.card });
+    return material;
+  }
+  if (wanted === 'composition') {
+    const formula = formulaOfWord(word, context);
+    return formula && materialOfFormula(formula);
+  }
+  if (wanted === 'data') reportUnknownSubstance(word, context);
+  return null;
+}
+
+/** The formula a word is; null when it is none (said). */
+export function formulaOfWord(word: Word, context: Context): Formula | null {
+  const formula = parseFormula(word.text, word.phase);
+  if (formula.kind === 'formula') return formula;
+  reportUnknownSubstance(word, context);
+  return null;
+}
+
+function reportUnknownSubstance(word: Word, context: Context): void {
+  const text = word.phase === undefined ? word.text : `${word.text}(${word.phase})`;
+  const otherPhases = word.phase === undefined ? [] : phasesOfWord(word.text);
+  const suggestions =
+    otherPhases.length > 0
+      ? otherPhases
+      : [...new Set([...near(word.text, context.scope.names()), ...suggestSubstances(word.text)])];
+  context.report(word.span, { code: 'name/unknown', what: 'substance', word: text, near: suggestions.slice(0, 3) });
+}
+
+/** The phases a known substance does have, spelt out, for one that was asked for in a phase the catalogue lacks. */
+function phasesOfWord(text: string): readonly string[] {
+  const stable = findSubstance(text);
+  if (!stable) return [];
+  return phasesOfSubstance(stable.name).map((substance) =>
+    substance.formula ? formulaTextWithPhase(substance.formula) : substance.name,
+  );
+}
+
+/** The material of a catalogue substance; the same object every time. */
+export function materialOfSubstance(substance: Substance): Material {
+  const known = substances.get(substance);
+  if (known) return known;
+  const material = buildMaterial(substance);
+  substances.set(substance, material);
+  return material;
+}
+
+const substances = new WeakMap<Substance, Material>();
+
+/** A material of which only the formula is known. */
+function materialOfFormula(formula: Formula): Material {
+  const text = formulaTextWithPhase(formula);
+  const molPerKg = molPerKgOfFormula(formula) ?? new Map<string, number>();
+  const molarMass = molarMassKgPerMol(formula);
+  const card: MaterialCard = {
+    name: text,
+    origin: 'formula',
+    formula: formula.text,
+    phase: formula.phase ?? null,
+    aliases: [],
+    properties: [],
+  };
+  return {
+    name: text,
+    origin: 'formula',
+    formula,
+    phase: formula.phase ?? null,
+    elements: elementsOf(molPerKg),
+    molarMass: molarMass === undefined ? null : quantityOf(molarMass, units.molarMass),
+    formationEnthalpy: null,
+    entropy: null,
+    density: null,
+    biogenicShare: quantityOf(0, dimensionless),
+    products: null,
+    portions: null,
+    assumptions: [],
+    sources: [],
+    card,
+    missing: new Map([
+      ['formationEnthalpy', [text]],
+      ['density', [text]],
+    ]),
+  };
+}
+
+function buildMaterial(substance: Substance): Material {
+  const label = substance.name;
+  const text = substance.formula ? formulaTextWithPhase(substance.formula) : label;
+  const energy = formationEnthalpyOf(substance);
+  const energyDatum = energy.kind === 'fault' ? undefined : energy.jPerKg;
+  const enthalpy = datumQuantity(energyDatum, units.specificEnergy, `${text}/energy`);
+  const density = datumQuantity(substance.density, units.density, `${text}/density`);
+  const molarMass =
+    substance.molarMassKgPerMol === undefined ? null : quantityOf(substance.molarMassKgPerMol, units.molarMass);
+  const missing = new Map<MissingProperty, readonly string[]>();
+  if (!enthalpy) missing.set('formationEnthalpy', [label]);
+  if (!density) missing.set('density', [label]);
+  if (!molarMass) missing.set('molarMass', [label]);
+  const used = [energyDatum?.source, substance.compositionSource, substance.density?.source];
+  return {
+    name: label,
+    origin: 'catalogue',
+    formula: substance.formula ?? null,
+    phase: substance.phase,
+    elements: elementsOf(substance.molPerKg),
+    molarMass,
+    formationEnthalpy: enthalpy,
+    entropy: datumQuantity(substance.entropyJPerMolK, units.molarEntropy, `${text}/entropy`),
+    density,
+    biogenicShare: quantityOf(substance.carbonBiogenicShare, dimensionless),
+    products: null,
+    portions: null,
+    assumptions: [],
+    sources: [...new Set(used.flatMap((source) => (source ? [sourceText(source)] : [])))],
+    card: cardOf(substance, molarMass, enthalpy, density, energyDatum?.source),
+    missing,
+  };
+}
+
+function cardOf(
+  substance: Substance,
+  molarMass: Quantity | null,
+  enthalpy: Quantity | null,
+  density: Quantity | null,
+  energySource: SourceRecord | undefined,
+): MaterialCard {
+  const properties: CardProperty[] = [];
+  const add = (
+    id: string,
+    label: string,
+    quantity: Quantity | null,
+    unit: string,
+    source: SourceRecord | undefined,
+    condition = '',
+  ): void => {
+    if (quantity)
+      properties.push({
+        id,
+        label,
+        quantity,
+        unit,
+        source: source ? sourceText(source) : 'standard atomic weights, IUPAC 2021',
+        condition,
+      });
+  };
+  add('molar-mass', 'Molar mass', molarMass, 'g/mol', undefined);
+  if (enthalpy && molarMass) {
+    const molar = quantityOf(enthalpy.value * molarMass.value, units.molarEnergy);
+    add('formation-enthalpy', 'Enthalpy of formation', molar, 'kJ/mol', energySource, 'at 25 °C');
+  }
+  const condition = substance.density
+    ? `at ${Math.round((substance.density.temperatureK - celsiusZeroK) * 100) / 100} °C`
+    : '';
+  add('density', 'Density', density, 'kg/m3', substance.density?.source, condition);
+  if (substance.heatCapacityJPerKgK) {
+    const heatCapacity = quantityOf(substance.heatCapacityJPerKgK.value, knownUnit('kJ/(kg K)').dimension);
+    add(
+      'heat-capacity',
+      'Heat capacity',
+      heatCapacity,
+      'kJ/(kg K)',
+      substance.heatCapacityJPerKgK.source,
+      'near 25 °C',
+    );
+  }
+  if (substance.flashPointK) {
+    const flashPoint = quantityOf(substance.flashPointK.value, knownUnit('K').dimension, undefined, 'temperature');
+    add('flash-point', 'Flash point', flashPoint, 'K', substance.flashPointK.source);
+  }
+  for (const rule of substance.rules) {
+    if (rule.lowerHeatingValueJPerKg === undefined) continue;
+    const value = quantityOf(rule.lowerHeatingValueJPerKg, units.specificEnergy);
+    add('rule-lower-heating-value', 'Lower heating value by rule', value, 'MJ/kg', rule.source);
+  }
+  return {
+    name: substance.name,
+    origin: 'catalogue',
+    formula: substance.formula?.text ?? null,
+    phase: substance.phase,
+    aliases: substance.aliases,
+    properties,
+  };
+}
+
+/** A source in words: author, year, title, where. */
+export function sourceText(source: SourceRecord): string {
+  const year = source.year > 0 ? ` (${source.year})` : '';
+  const where = source.where ? `, ${source.where}` : '';
+  const remembered = source.provenance === 'from memory' ? ' [from memory]' : '';
+  return `${source.author}${year}, ${source.title}${where}${remembered}`;
+}
+
+function elementsOf(molPerKg: ReadonlyMap<string, number>): ReadonlyMap<string, Quantity> {
+  return new Map([...molPerKg].map(([symbol, mol]) => [symbol, quantityOf(mol, units.molPerMass)]));
+}
+
+/** A catalogue number is one independent input where its source gives an uncertainty. */
+function datumQuantity(datum: Datum | undefined, dimension: Quantity['dimension'], input: string): Quantity | null {
+  if (!datum) return null;
+  const parts: Parts = datum.uncertainty ? new Map([[`catalogue/${input}`, datum.uncertainty]]) : new Map();
+  return quantityOf(datum.value, dimension, parts);
+}
+
+const units = {
+  molarMass: knownUnit('kg/mol').dimension,
+  molPerMass: knownUnit('mol/kg').dimension,
+  specificEnergy: knownUnit('J/kg').dimension,
+  molarEnergy: knownUnit('J/mol').dimension,
+  molarEntropy: knownUnit('J/(mol K)').dimension,
+  density: knownUnit('kg/m3').dimension,
+};

@@ -1,0 +1,265 @@
+// The readers entry tables are made of: a quantity (with a temperature it holds at), a listed word, a text, a formula or
+// substance, a list of them, a composition by element, a state. Each reports what it cannot take, at that phrase.
+// They know syntax and quantities, not kinds. Invariant: a reader looks at every item of every phrase it is given.
+
+import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
+import { knownUnit } from '../core/quantity/convert.ts';
+import { sameDimension } from '../core/quantity/dimension.ts';
+import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Formula } from '../core/substance/formula.ts';
+import { near, type Context } from './context.ts';
+import type { Reader } from './entries.ts';
+import { evaluateExpression } from './expressions.ts';
+import type { Material } from './material.ts';
+import { formulaOfWord, materialNamed } from './materials.ts';
+import { fit, type Needed } from './read-quantity.ts';
+
+export interface QuantityAt {
+  readonly quantity: Quantity;
+  /** The temperature it holds at, K, where one was written. */
+  readonly at: Quantity | null;
+}
+
+/** What a value must be besides its dimension. */
+export type Range = 'any' | 'positive' | 'share';
+
+/** One quantity of the unit's dimension; with `at`, a temperature may follow (`780 kg/m3 at 15 degC`). */
+export function quantityReader(
+  unit: string,
+  what: string,
+  options: { readonly range?: Range; readonly temperature?: boolean; readonly at?: boolean } = {},
+): Reader<QuantityAt> {
+  const { dimension } = knownUnit(unit);
+  const isThermal = sameDimension(dimension, knownUnit('K').dimension);
+  const kind = options.temperature ? 'temperature' : isThermal ? 'temperature-difference' : 'plain';
+  const needed: Needed = { dimension, kind, example: unit };
+  const takes = options.at ? `${what}, with \`at\` and a temperature if it has one` : what;
+  return {
+    takes,
+    unit,
+    read(entry, context) {
+      const phrase = onlyPhrase(entry, takes, context);
+      const [first, ...rest] = phrase?.items ?? [];
+      if (!phrase || !first) return undefined;
+      if (first.kind === 'connective') return refuse(entry, phrase, takes, context);
+      const quantity = readQuantityItem(first, needed, context);
+      let at: Quantity | null = null;
+      const [connective, temperature, ...beyond] = rest;
+      if (connective) {
+        const isAt = options.at && connective.kind === 'connective' && connective.word === 'at';
+        if (!isAt || !temperature || temperature.kind === 'connective' || beyond.length > 0) {
+          return refuseItem(entry, isAt ? (beyond[0] ?? connective) : connective, takes, context);
+        }
+        at = readQuantityItem(temperature, temperatureNeeded, context);
+        if (!at) return undefined;
+      }
+      if (!quantity || !isInRange(quantity, options.range ?? 'any', entry, first, context)) return undefined;
+      return { quantity, at };
+    },
+  };
+}
+
+/** One of the listed words. */
+export function wordReader<const Listed extends string>(words: readonly Listed[]): Reader<Listed> {
+  const takes = `one of ${words.map((word) => `\`${word}\``).join(', ')}`;
+  return {
+    takes,
+    words,
+    read(entry, context) {
+      const phrase = onlyPhrase(entry, takes, context);
+      const [item, ...rest] = phrase?.items ?? [];
+      if (!phrase || !item) return undefined;
+      const extra = rest[0];
+      if (extra) return refuseItem(entry, extra, takes, context);
+      if (item.kind !== 'word') return refuse(entry, phrase, takes, context);
+      const found = words.find((word) => word === item.text);
+      if (found === undefined) reportListedWord(item, entry.words, words, context);
+      return found;
+    },
+  };
+}
+
+/** `"text"` */
+export function textReader(what: string): Reader<string> {
+  return {
+    takes: what,
+    read(entry, context) {
+      const phrase = onlyPhrase(entry, what, context);
+      const [item, ...rest] = phrase?.items ?? [];
+      if (!phrase || !item) return undefined;
+      const extra = rest[0];
+      if (extra) return refuseItem(entry, extra, what, context);
+      return item.kind === 'text' ? item.value : refuse(entry, phrase, what, context);
+    },
+  };
+}
+
+/** A chemical formula. */
+export const formulaReader: Reader<Formula> = {
+  takes: 'a formula, such as `Na2CO3` or `H2O(l)`',
+  read(entry, context) {
+    const phrase = onlyPhrase(entry, formulaReader.takes, context);
+    const [item, ...rest] = phrase?.items ?? [];
+    if (!phrase || !item) return undefined;
+    const extra = rest[0];
+    if (extra) return refuseItem(entry, extra, formulaReader.takes, context);
+    if (item.kind !== 'word') return refuse(entry, phrase, formulaReader.takes, context);
+    return formulaOfWord(item, context) ?? undefined;
+  },
+};
+
+/** Formulas or substances, one a phrase. */
+export const formulasReader: Reader<readonly Formula[]> = {
+  takes: 'formulas with commas between them, such as `NaOH(cr), CO2(g), H2O(g)`',
+  names: true,
+  read(entry, context) {
+    const formulas: Formula[] = [];
+    for (const phrase of entry.phrases) {
+      const [item, ...rest] = phrase.items;
+      const extra = rest[0];
+      if (extra) return refuseItem(entry, extra, formulasReader.takes, context);
+      if (item?.kind !== 'word') return refuse(entry, phrase, formulasReader.takes, context);
+      const formula = materialNamed(item, context, 'composition')?.formula;
+      if (!formula) return undefined;
+      formulas.push(formula);
+    }
+    return formulas;
+  },
+};
+
+/** One substance or blend. */
+export const materialReader: Reader<Material> = {
+  takes: 'a substance or blend by name',
+  names: true,
+  read(entry, context) {
+    const phrase = onlyPhrase(entry, materialReader.takes, context);
+    const [item, ...rest] = phrase?.items ?? [];
+    if (!phrase || !item) return undefined;
+    const extra = rest[0];
+    if (extra) return refuseItem(entry, extra, materialReader.takes, context);
+    if (item.kind !== 'word') return refuse(entry, phrase, materialReader.takes, context);
+    return materialNamed(item, context) ?? undefined;
+  },
+};
+
+export interface State {
+  readonly temperature?: Quantity;
+  readonly pressure?: Quantity;
+}
+
+/** A temperature, a pressure, or both, in any order: `20 degC, 1 atm`. */
+export const stateReader: Reader<State> = {
+  takes: 'a temperature and a pressure, such as `25 degC, 1 bar`',
+  unit: 'degC',
+  read(entry, context) {
+    let state: State = {};
+    for (const phrase of entry.phrases) {
+      const [item, ...rest] = phrase.items;
+      const extra = rest[0];
+      if (extra) return refuseItem(entry, extra, stateReader.takes, context);
+      if (!item || item.kind === 'connective') return refuse(entry, phrase, stateReader.takes, context);
+      const quantity = evaluateExpression(item, context);
+      if (!quantity) return undefined;
+      const isPressure = sameDimension(quantity.dimension, pressureNeeded.dimension);
+      const read = fit(quantity, isPressure ? pressureNeeded : temperatureNeeded, item.span, context);
+      if (!read) return undefined;
+      const key = isPressure ? 'pressure' : 'temperature';
+      if (state[key]) return refuse(entry, phrase, stateReader.takes, context);
+      if (!isInRange(read, 'positive', entry, item, context)) return undefined;
+      state = { ...state, [key]: read };
+    }
+    return state;
+  },
+};
+
+/** `biogenic`, `fossil`, or either with a share: the biogenic share of the carbon, 0 to 1. */
+export const carbonOriginReader: Reader<Quantity> = {
+  takes: '`biogenic` or `fossil`, with a share if it is not all: `biogenic 98 %`',
+  words: ['biogenic', 'fossil'],
+  unit: '%',
+  read(entry, context) {
+    const phrase = onlyPhrase(entry, carbonOriginReader.takes, context);
+    const [word, share, ...rest] = phrase?.items ?? [];
+    if (!phrase || !word) return undefined;
+    const extra = rest[0] ?? (share?.kind === 'connective' ? share : undefined);
+    if (extra) return refuseItem(entry, extra, carbonOriginReader.takes, context);
+    if (word.kind !== 'word') return refuse(entry, phrase, carbonOriginReader.takes, context);
+    if (word.text !== 'biogenic' && word.text !== 'fossil') {
+      reportListedWord(word, entry.words, carbonOriginReader.words ?? [], context);
+      return undefined;
+    }
+    const whole: Quantity = { value: 1, dimension: shareNeeded.dimension, kind: 'plain', parts: new Map() };
+    const given = share && share.kind !== 'connective' ? readQuantityItem(share, shareNeeded, context) : whole;
+    if (!given || !isInRange(given, 'share', entry, share ?? word, context)) return undefined;
+    if (word.text === 'biogenic') return given;
+    return {
+      ...given,
+      value: 1 - given.value,
+      parts: new Map([...given.parts].map(([input, part]) => [input, -part])),
+    };
+  },
+};
+
+export const shareNeeded: Needed = { dimension: knownUnit('%').dimension, kind: 'plain', example: '%' };
+export const temperatureNeeded: Needed = { dimension: knownUnit('K').dimension, kind: 'temperature', example: 'degC' };
+const pressureNeeded: Needed = { dimension: knownUnit('bar').dimension, kind: 'plain', example: 'bar' };
+
+/** Says that a phrase is not what the entry takes. */
+export function refuse(entry: Entry, phrase: Phrase, takes: string, context: Context): undefined {
+  context.report(phrase.span, {
+    code: 'name/unknown-phrase',
+    entry: entry.words,
+    text: context.written(phrase.span),
+    takes,
+  });
+  return undefined;
+}
+
+/** Says that one item of a phrase, and what follows it, is too much. */
+export function refuseItem(entry: Entry, item: PhraseItem, takes: string, context: Context): undefined {
+  const text = context.written(item.span);
+  context.report(item.span, { code: 'name/unknown-phrase', entry: entry.words, text, takes });
+  return undefined;
+}
+
+/** Whether the value lies in the range its entry asks for (said when it does not). */
+export function isInRange(
+  quantity: Quantity,
+  range: Range,
+  entry: Pick<Entry, 'words'>,
+  item: Pick<Expression, 'span'>,
+  context: Context,
+): boolean {
+  const text = context.written(item.span);
+  if (range === 'positive' && !(quantity.value > 0)) {
+    context.report(item.span, { code: 'range/positive', text, entry: entry.words });
+    return false;
+  }
+  if (range === 'share' && !(quantity.value >= 0 && quantity.value <= 1)) {
+    context.report(item.span, { code: 'range/share', text, low: 0, high: 1 });
+    return false;
+  }
+  return true;
+}
+
+function readQuantityItem(item: Expression, needed: Needed, context: Context): Quantity | null {
+  const quantity = evaluateExpression(item, context);
+  return quantity && fit(quantity, needed, item.span, context);
+}
+
+function onlyPhrase(entry: Entry, takes: string, context: Context): Phrase | undefined {
+  const [phrase, second] = entry.phrases;
+  if (second) return refuse(entry, second, takes, context);
+  return phrase;
+}
+
+function reportListedWord(word: Word, owner: string, allowed: readonly string[], context: Context): void {
+  context.report(word.span, {
+    code: 'name/unknown',
+    what: 'word',
+    word: word.text,
+    near: near(word.text, allowed),
+    owner,
+    allowed,
+  });
+}

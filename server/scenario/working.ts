@@ -1,0 +1,60 @@
+// How a figure came about: the record behind "why?". It names the method, the inputs with their places, the sources of
+// the constants, what was assumed and where the result is valid. It holds no sentences: wording/ turns the ids into text.
+
+import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Place } from './scenario.ts';
+
+export interface Working {
+  readonly method: MethodId;
+  readonly inputs: readonly WorkingInput[];
+  /** Each source once, in words (author, year, title). */
+  readonly sources: readonly string[];
+  readonly assumptions: readonly AssumptionId[];
+}
+
+export interface WorkingInput {
+  readonly label: string;
+  readonly quantity: Quantity | null;
+  /** The unit to show it in. */
+  readonly unit: string;
+  /** Where in the text it comes from, if it does. */
+  readonly place?: Place;
+  readonly source?: string;
+}
+
+export type MethodId =
+  | 'as-given'
+  | 'molar-mass'
+  | 'mean-molar-mass'
+  | 'ideal-volume-mixing'
+  | 'lower-heating-value'
+  | 'higher-heating-value'
+  | 'volumetric-heating-value'
+  | 'stoichiometric-air'
+  | 'carbon-factor'
+  | 'biogenic-carbon-share'
+  | 'water-made'
+  | 'water-missing'
+  | 'alkali-carbon-ratio'
+  | 'formation-enthalpy'
+  | 'formation-enthalpy-from-heating-value'
+  | 'reaction-enthalpy'
+  | 'reaction-gibbs-energy'
+  | 'equilibrium-constant'
+  | 'specific-reaction-enthalpy';
+
+export type AssumptionId =
+  | 'reference-state'
+  | 'ideal-mixing-enthalpy'
+  | 'volumes-add'
+  | 'carbonate-slate'
+  | 'hydroxide-slate'
+  | 'oxide-slate'
+  | 'given-slate'
+  | 'dry-air'
+  | 'shares-scaled'
+  | 'stable-phase'
+  | 'remainder-hydrogen'
+  | 'ideal-gas'
+  | 'fossil-by-default'
+  | 'several-alkalis-proportional';
