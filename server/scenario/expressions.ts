@@ -19,6 +19,7 @@ import {
   type Quantity,
 } from '../core/quantity/quantity.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
+import { explainUnitWord } from '../core/quantity/suggest-units.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
@@ -49,11 +50,20 @@ export function evaluateExpression(expression: Expression, context: Context): Un
       return evaluateMembership(expression, context);
     case 'call':
       return evaluateCall(expression, context);
-    case 'text':
     case 'lone-unit':
+      // A name spelt like a unit has been refused where it is given; its uses are not told off again.
+      if (context.scope.lookup(context.written(expression.span))) return null;
+      context.report(expression.span, {
+        code: 'name/wrong-kind',
+        name: context.written(expression.span),
+        is: 'a unit without a number',
+        needed: 'a number',
+      });
+      return null;
+    case 'text':
     case 'comparison':
     case 'within': {
-      const is = { text: 'a text', 'lone-unit': 'a unit without a number', comparison: 'a claim', within: 'a claim' };
+      const is = { text: 'a text', comparison: 'a claim', within: 'a claim' };
       const name = context.written(expression.span);
       context.report(expression.span, { code: 'name/wrong-kind', name, is: is[expression.kind], needed: 'a number' });
       return null;
@@ -83,6 +93,18 @@ function chain(expression: Binary, context: Context): Unknowable {
 }
 
 const operators = { '+': add, '-': subtract, '*': multiply, '/': divide, '^': raise } as const;
+
+/** A word that stands for nothing: a misspelt name, or a misspelt unit (`3 kJ/kgg` divides by a word of that name). */
+function reportUnknownName(word: Word, context: Context): void {
+  const suggestions = near(word.text, context.scope.names());
+  const units = suggestions.length > 0 ? null : explainUnitWord(word.text);
+  if (units && units.offers.length > 0) {
+    const { offers, why } = units;
+    context.report(word.span, { code: 'unit/unknown', word: word.text, near: offers, hint: why ?? null });
+  } else {
+    context.report(word.span, { code: 'name/unknown', what: 'value', word: word.text, near: suggestions });
+  }
+}
 
 function evaluateCall(call: Call, context: Context): Unknowable {
   const known = functions.get(call.name.text);
@@ -126,8 +148,7 @@ function evaluateName(word: Word, context: Context): Unknowable {
   } else if (findSubstance(word.text)) {
     context.report(word.span, { code: 'name/wrong-kind', name: word.text, is: 'a substance', needed: 'a number' });
   } else {
-    const suggestions = near(word.text, context.scope.names());
-    context.report(word.span, { code: 'name/unknown', what: 'value', word: word.text, near: suggestions });
+    reportUnknownName(word, context);
   }
   return null;
 }

@@ -34,8 +34,8 @@ export type MixtureFault =
   | { readonly fault: 'nothing' }
   | { readonly fault: 'no-density' | 'no-molar-mass'; readonly index: number };
 
-/** Shares that miss 1 by no more than this are taken as rounded and scaled to 1 (a tenth of a percentage point). */
-export const roundingOfShares = 1e-3;
+/** Shares that miss 1 by no more than this are taken as rounded and scaled to 1 (a tenth of a percentage point; the last digit lets 99.9 % itself through). */
+export const roundingOfShares = 1e-3 + 1e-9;
 
 /** Mass shares of the parts, in their order; `scaled` when rounding was taken up. */
 export function massSharesOf(

@@ -1,0 +1,121 @@
+// Names over one file and several, and `use`: what is reached, what is refused, what is said where.
+import { describe, expect, test } from 'vitest';
+import { evaluate } from '../../../server/scenario/evaluate.ts';
+import { resolveUse } from '../../../server/scenario/files.ts';
+import { checkFacts, figureOf, valueOf } from '../../support/facts.ts';
+
+describe('names', () => {
+  test('given twice: a fact at both, and the name stands for neither', () => {
+    checkFacts(`
+      let p = 1
+      #   ^ name/duplicate
+      let p = 2
+      #   ^ name/duplicate
+      let q = p + 1
+    `);
+  });
+
+  test('given twice over two files', () => {
+    checkFacts(`
+      use "other.stoke"
+      let p = 1
+      #   ^ name/duplicate
+      #- other.stoke
+      let p = 2
+      #   ^ name/duplicate
+    `);
+  });
+
+  test('spelt like a unit', () => {
+    checkFacts(`
+      let bar = 3
+      #   ^^^ name/reserved
+      let q = 3 * 2
+    `);
+  });
+
+  test('a definition may be called like a catalogue substance, with an information; it then stands for it', () => {
+    const scenario = checkFacts(`
+      substance methanol {
+      #         ^^^^^^^^ name/like-catalogue
+        formula: CH3OH
+        lower heating value: 19.9 MJ/kg
+      }
+      blend b {
+        100 % methanol
+      }
+    `);
+    expect(figureOf(scenario, 'b', 'lower-heating-value')).toBeCloseTo(19.9, 9);
+  });
+
+  test('an unknown kind of definition', () => {
+    checkFacts(`
+      let x = 1
+        blends x2 {
+      # ^^^^^^ name/unknown-kind
+          100 % gas_oil
+        }
+    `);
+  });
+});
+
+describe('use', () => {
+  test('reaches on, and each file once', () => {
+    const scenario = checkFacts(`
+      use "a.stoke"
+      use "b.stoke"
+      let x = of_a + of_b
+      #- a.stoke
+      use "b.stoke"
+      let of_a = of_b + 1
+      #- b.stoke
+      let of_b = 2
+    `);
+    expect(scenario.files.map((file) => file.path)).toEqual(['main.stoke', 'a.stoke', 'b.stoke']);
+    expect(scenario.files.map((file) => file.used)).toEqual([false, true, true]);
+    expect(valueOf(scenario, 'x')).toBe(5);
+  });
+
+  test('a cycle of files is one fact, at the `use` that closes it, and the files are answered', () => {
+    const scenario = checkFacts(`
+      use "a.stoke"
+      let x = of_a
+      #- a.stoke
+      use "main.stoke"
+      #   ^^^^^^^^^^^^ name/use-cycle
+      let of_a = 7
+    `);
+    expect(valueOf(scenario, 'x')).toBe(7);
+  });
+
+  test('a missing file, and paths that are not relative', () => {
+    checkFacts(`
+      use "nowhere.stoke"
+      #   ^^^^^^^^^^^^^^^ name/missing-file
+      use "/etc/passwd"
+      #   ^^^^^^^^^^^^^ name/missing-file
+      use "file:///a.stoke"
+      #   ^^^^^^^^^^^^^^^^^ name/missing-file
+      use "C:/a.stoke"
+      #   ^^^^^^^^^^^^ name/missing-file
+      let x = 1
+    `);
+  });
+
+  test('a file still to be fetched: it is asked for, and names that may be in it are not called unknown', () => {
+    const scenario = evaluate('main.stoke', (path) =>
+      path === 'main.stoke' ? { text: 'use "a.stoke"\nlet x = of_a + 1\n' } : 'wanted',
+    );
+    expect(scenario.wanted).toEqual(['a.stoke']);
+    expect(scenario.files[0]?.facts).toEqual([]);
+  });
+
+  test('paths are resolved against the using file, plain or URI', () => {
+    expect(resolveUse('a/b.stoke', 'c.stoke')).toBe('a/c.stoke');
+    expect(resolveUse('a/b.stoke', '../c.stoke')).toBe('c.stoke');
+    expect(resolveUse('b.stoke', '../c.stoke')).toBe('../c.stoke');
+    expect(resolveUse('file:///w/b.stoke', 'my house/c.stoke')).toBe('file:///w/my%20house/c.stoke');
+    expect(resolveUse('file:///b.stoke', '../c.stoke')).toBeNull();
+    expect(resolveUse('b.stoke', 'a\\c.stoke')).toBeNull();
+  });
+});
