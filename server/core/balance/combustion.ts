@@ -6,7 +6,7 @@
 // metals compete for too little of a partner, each gets of it in proportion to its amount still free.
 
 import { alkaliMetals } from '../substance/elements.ts';
-import { formulaTextWithPhase, parseFormula } from '../substance/formula.ts';
+import { parseFormula } from '../substance/formula.ts';
 import type { Formula } from '../substance/formula.ts';
 import { findSubstance } from '../substance/catalogue.ts';
 
@@ -196,9 +196,4 @@ function formulaOfSpecies(species: string): Formula {
     parsed.kind === 'formula' ? parsed : { kind: 'formula', text: species, composition: new Map(), charge: 0 };
   formulas.set(species, formula);
   return formula;
-}
-
-/** A product list's species text, as slates print it. */
-export function speciesOfFormula(formula: Formula): string {
-  return formulaTextWithPhase(formula);
 }

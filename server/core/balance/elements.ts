@@ -1,26 +1,10 @@
-// Sums of atoms: of a mixture per kilogram, and of the two sides of a written equation with what is missing on each.
+// Sums of atoms on the two sides of a written equation, with what is missing on each.
 // Knows no energies and changes no coefficient. Invariant: an equation's sums are exact, `balanced` has no tolerance.
 // Charge is conserved like an element and is listed under `charge`.
 
 import Fraction from 'fraction.js';
 import type { Formula } from '../substance/formula.ts';
-import type { Substance } from '../substance/substance.ts';
 import { exactNumber, zero } from './exact-linear.ts';
-
-/** A substance and its share of the mixture's mass, 0 to 1. */
-export interface Portion {
-  readonly substance: Substance;
-  readonly massShare: number;
-}
-
-/** mol of each element per kg of a mixture. The shares are taken as they are; they should add up to 1. */
-export function mixtureMolPerKg(portions: readonly Portion[]): ReadonlyMap<string, number> {
-  const total = new Map<string, number>();
-  for (const { substance, massShare } of portions) {
-    for (const [symbol, mol] of substance.molPerKg) total.set(symbol, (total.get(symbol) ?? 0) + massShare * mol);
-  }
-  return total;
-}
 
 /** A coefficient as written: a number, or numerator and denominator. */
 export type Coefficient = number | readonly [number, number];

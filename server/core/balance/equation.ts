@@ -123,7 +123,7 @@ function balanceOfSeveral(matrix: Matrix, dimension: number, places: readonly Sp
   };
 }
 
-const mostTrials = 60_000;
+const mostTrials = 10_000;
 
 /**
  * Tries whole numbers for the free species by rising sum; the pivot species then follow. Stops once no smaller total can

@@ -3,9 +3,7 @@
 // Invariant: burning a substance that was given by a heating value, on the ruled slate, gives that very value back.
 // Reference: elements at 298.15 K and 1 bar; products from the catalogue, water as vapour.
 
-import { findSubstanceOfFormula } from '../substance/catalogue.ts';
-import { parseFormula } from '../substance/formula.ts';
-import type { Formula } from '../substance/formula.ts';
+import { findSubstance, findSubstanceOfFormula } from '../substance/catalogue.ts';
 import type { SourceRecord } from '../substance/record.ts';
 import type { Datum, Substance } from '../substance/substance.ts';
 import { completeCombustion } from './combustion.ts';
@@ -40,14 +38,24 @@ export function formationEnthalpyOf(substance: Substance): FormationEnthalpy | E
   if (energy.kind === 'formation-enthalpy') return { kind: 'known', jPerKg: energy.jPerKg };
   const slate = completeCombustion(substance.molPerKg);
   if (slate.kind === 'fault') return slate;
-  const products = enthalpyOfProducts(slate);
-  if (products.kind === 'fault') return products;
-  const productsJPerKg = energy.basis === 'lower' ? products.jPerKg : products.jPerKg - products.condensationJPerKg;
+  const jPerKg = enthalpyBehindHeatingValue(slate, energy.basis, energy.jPerKg.value);
+  if (typeof jPerKg !== 'number') return jPerKg;
   return {
     kind: 'known',
-    jPerKg: { ...energy.jPerKg, value: energy.jPerKg.value + productsJPerKg },
+    jPerKg: { ...energy.jPerKg, value: jPerKg },
     derivedFrom: { basis: energy.basis, heatingValueJPerKg: energy.jPerKg.value, slate },
   };
+}
+
+/** The formation enthalpy of a fuel, J/kg, that gives this heating value (J/kg) on a slate. */
+export function enthalpyBehindHeatingValue(
+  slate: Slate,
+  basis: 'lower' | 'higher',
+  heatingValueJPerKg: number,
+): number | EnergyFault {
+  const products = enthalpyOfProducts(slate);
+  if (products.kind === 'fault') return products;
+  return heatingValueJPerKg + products.jPerKg - (basis === 'lower' ? 0 : products.condensationJPerKg);
 }
 
 export interface ProductsEnthalpy {
@@ -66,7 +74,7 @@ export function enthalpyOfProducts(slate: Slate): ProductsEnthalpy | EnergyFault
   const sources = new Set<SourceRecord>();
   const missing: string[] = [];
   for (const { formula, species, molPerKg } of slate.products) {
-    const molar = molarEnthalpy(formula);
+    const molar = molarEnthalpy(findSubstanceOfFormula(formula));
     if (molar === undefined) {
       missing.push(species);
       continue;
@@ -79,9 +87,10 @@ export function enthalpyOfProducts(slate: Slate): ProductsEnthalpy | EnergyFault
   return { kind: 'products', jPerKg, condensationJPerKg, sources: [...sources] };
 }
 
-/** J/mol of the catalogue's substance of that formula and phase. */
-function molarEnthalpy(formula: Formula): { readonly jPerMol: number; readonly source: SourceRecord } | undefined {
-  const substance = findSubstanceOfFormula(formula);
+/** J/mol and source of a catalogue substance. */
+function molarEnthalpy(
+  substance: Substance | undefined,
+): { readonly jPerMol: number; readonly source: SourceRecord } | undefined {
   if (substance?.molarMassKgPerMol === undefined || substance.energy.kind !== 'formation-enthalpy') return undefined;
   const { value, source } = substance.energy.jPerKg;
   return { jPerMol: value * substance.molarMassKgPerMol, source };
@@ -89,8 +98,6 @@ function molarEnthalpy(formula: Formula): { readonly jPerMol: number; readonly s
 
 /** About 44 kJ/mol; 0 only if the catalogue lost its water. */
 function condensationJPerMol(): number {
-  const vapour = parseFormula('H2O(g)');
-  const liquid = parseFormula('H2O(l)');
-  if (vapour.kind === 'fault' || liquid.kind === 'fault') return 0;
-  return (molarEnthalpy(vapour)?.jPerMol ?? 0) - (molarEnthalpy(liquid)?.jPerMol ?? 0);
+  const [vapour, liquid] = [findSubstance('water', 'g'), findSubstance('water', 'l')].map(molarEnthalpy);
+  return (vapour?.jPerMol ?? 0) - (liquid?.jPerMol ?? 0);
 }

@@ -1,4 +1,4 @@
-// Lower and higher heating values of mixtures at 25 °C.
+// Lower and higher heating values of a fuel at 25 °C, and the formation enthalpy behind a heating value.
 // Rests on a combustion slate and on formation enthalpies of fuel and products; atomic weights are conventional.
 // Invariant: higher less lower is the heat of condensation of the slate's water. Values are per kg of fuel, positive when
 // heat is released; O2 from the air counts zero; there is no heat of mixing.
@@ -7,9 +7,7 @@ import type { Formula } from '../substance/formula.ts';
 import type { SourceRecord } from '../substance/record.ts';
 import { completeCombustion } from './combustion.ts';
 import type { Slate, SlateFault, SlateRule } from './combustion.ts';
-import { mixtureMolPerKg } from './elements.ts';
-import type { Portion } from './elements.ts';
-import { enthalpyOfProducts, formationEnthalpyOf } from './formation-enthalpy.ts';
+import { enthalpyBehindHeatingValue, enthalpyOfProducts } from './formation-enthalpy.ts';
 import type { EnergyFault } from './formation-enthalpy.ts';
 import { combustionToProducts } from './given-products.ts';
 import type { GivenProductsFault } from './given-products.ts';
@@ -29,20 +27,6 @@ export interface HeatingValue {
 
 /** Lets a slate be chosen: a rule, or named products that override it. */
 export type SlateChoice = SlateRule | { readonly products: readonly Formula[] };
-
-/**
- * Heating values of a mixture whose mass shares add up to 1. Returns a fault that names what is missing when a portion has
- * no energy, an element no ruled product, or a product no data.
- */
-export function heatingValueOfMixture(
-  portions: readonly Portion[],
-  choice: SlateChoice = 'as-ruled',
-): HeatingValue | EnergyFault {
-  const fuel = formationEnthalpyOfMixture(portions);
-  if (fuel.kind === 'fault') return fuel;
-  const value = heatingValueOfFuel(mixtureMolPerKg(portions), fuel.jPerKg, choice);
-  return value.kind === 'fault' ? value : { ...value, sources: [...new Set([...fuel.sources, ...value.sources])] };
-}
 
 /**
  * Heating values of a fuel by its elements (mol per kg) and its formation enthalpy (J/kg). `sources` are those of the
@@ -77,39 +61,17 @@ export function formationEnthalpyBehind(
   heatingValueJPerKg: number,
   choice: SlateChoice = 'as-ruled',
 ): { readonly kind: 'formation-enthalpy'; readonly jPerKg: number; readonly slate: Slate } | EnergyFault {
-  const ofNothing = heatingValueOfFuel(fuelMolPerKg, 0, choice);
-  if (ofNothing.kind === 'fault') return ofNothing;
-  const zero = basis === 'lower' ? ofNothing.lowerJPerKg : ofNothing.higherJPerKg;
-  return { kind: 'formation-enthalpy', jPerKg: heatingValueJPerKg - zero, slate: ofNothing.slate };
+  const slate = slateOfChoice(fuelMolPerKg, choice);
+  if (slate.kind === 'fault') return slate;
+  const jPerKg = enthalpyBehindHeatingValue(slate, basis, heatingValueJPerKg);
+  return typeof jPerKg === 'number' ? { kind: 'formation-enthalpy', jPerKg, slate } : jPerKg;
 }
 
-/** The slate of a mixture's elements (mol/kg) by rule or on named products. */
-export function slateOfChoice(
+function slateOfChoice(
   fuelMolPerKg: ReadonlyMap<string, number>,
   choice: SlateChoice,
 ): Slate | SlateFault | GivenProductsFault {
   return typeof choice === 'string'
     ? completeCombustion(fuelMolPerKg, choice)
     : combustionToProducts(fuelMolPerKg, choice.products);
-}
-
-/** Formation enthalpy of a mixture in J/kg, without any heat of mixing; a fault names the substances without energy. */
-export function formationEnthalpyOfMixture(
-  portions: readonly Portion[],
-):
-  | { readonly kind: 'formation-enthalpy'; readonly jPerKg: number; readonly sources: readonly SourceRecord[] }
-  | EnergyFault {
-  let jPerKg = 0;
-  const sources = new Set<SourceRecord>();
-  const unknown: string[] = [];
-  for (const { substance, massShare } of portions) {
-    const enthalpy = formationEnthalpyOf(substance);
-    if (enthalpy.kind === 'known') {
-      jPerKg += massShare * enthalpy.jPerKg.value;
-      sources.add(enthalpy.jPerKg.source);
-    } else if (enthalpy.reason === 'no-fuel-data') unknown.push(...enthalpy.substances);
-    else return enthalpy;
-  }
-  if (unknown.length > 0) return { kind: 'fault', reason: 'no-fuel-data', substances: [...new Set(unknown)] };
-  return { kind: 'formation-enthalpy', jPerKg, sources: [...sources] };
 }

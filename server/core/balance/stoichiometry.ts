@@ -1,12 +1,10 @@
-// What a fuel needs and makes by its elements alone: oxygen by valence, air, carbon dioxide, water, alkali against carbon.
+// What a fuel needs and makes by its elements alone: oxygen by valence, air, water, alkali against carbon.
 // Knows no energies. Invariant: the oxygen demand by valence does not depend on where the alkali ends; only sulphate and
 // peroxide would take more. All amounts are per kg of fuel, with conventional atomic weights.
 
 import { findSubstance } from '../substance/catalogue.ts';
 import { alkaliMetals, atomicWeightKgPerMol, elementOfSymbol } from '../substance/elements.ts';
 import type { Slate } from './combustion.ts';
-import { mixtureMolPerKg } from './elements.ts';
-import type { Portion } from './elements.ts';
 
 /** mol O2 per kg for λ = 1, and the elements for which λ has no valence (they count as nothing). */
 export interface OxygenDemand {
@@ -40,25 +38,6 @@ export function stoichiometricAirKgPerKg(fuelMolPerKg: ReadonlyMap<string, numbe
   return demand.molPerKg / offered;
 }
 
-/** CO2 in kg per kg of blend if all its carbon left as CO2, and the biogenic share of that carbon (0 to 1). */
-export interface CarbonFactor {
-  readonly kgPerKg: number;
-  /** 0 when there is no carbon. */
-  readonly biogenicShare: number;
-}
-
-export function carbonFactor(portions: readonly Portion[]): CarbonFactor {
-  let carbon = 0;
-  let biogenic = 0;
-  for (const { substance, massShare } of portions) {
-    const mol = massShare * (substance.molPerKg.get('C') ?? 0);
-    carbon += mol;
-    biogenic += mol * substance.carbonBiogenicShare;
-  }
-  const carbonDioxide = (atomicWeightKgPerMol('C') ?? 0) + 2 * (atomicWeightKgPerMol('O') ?? 0);
-  return { kgPerKg: carbon * carbonDioxide, biogenicShare: carbon > 0 ? biogenic / carbon : 0 };
-}
-
 /** Water on a slate, kg per kg of fuel. */
 export function waterMadeKgPerKg(slate: Slate): number {
   return slate.products.reduce(
@@ -85,23 +64,6 @@ export function alkaliCarbonRatio(fuelMolPerKg: ReadonlyMap<string, number>): nu
   const carbon = fuelMolPerKg.get('C') ?? 0;
   const alkali = alkaliMetals.reduce((sum, metal) => sum + (fuelMolPerKg.get(metal) ?? 0), 0);
   return carbon > 0 ? alkali / carbon : undefined;
-}
-
-/** kg/mol of a mixture; undefined when a portion has no molar mass or the shares are nothing. */
-export function molarMassOfMixtureKgPerMol(portions: readonly Portion[]): number | undefined {
-  let molPerKg = 0;
-  let mass = 0;
-  for (const { substance, massShare } of portions) {
-    if (substance.molarMassKgPerMol === undefined) return undefined;
-    molPerKg += massShare / substance.molarMassKgPerMol;
-    mass += massShare;
-  }
-  return molPerKg > 0 ? mass / molPerKg : undefined;
-}
-
-/** Oxygen demand of a mixture, mol O2 per kg. */
-export function oxygenDemandOfMixture(portions: readonly Portion[]): OxygenDemand {
-  return oxygenDemand(mixtureMolPerKg(portions));
 }
 
 function waterKgPerMol(): number {

@@ -1,5 +1,5 @@
 // Finds substances: by name, by alias, by formula and phase, and suggests the nearest when a word finds nothing.
-// Knows no user's definitions (define-substance.ts builds those) and no energies beyond what the records say.
+// Knows no user's definitions and no energies beyond what the records say.
 // The index is built at the first question, once. Invariant: a word finds at most one substance, the same every time.
 
 import { compositionKey, parseFormula } from './formula.ts';
@@ -23,8 +23,9 @@ export function allSubstances(): readonly Substance[] {
  * Undefined when nothing is found, also when the substance is known but not in that phase.
  */
 export function findSubstance(word: string, phase?: Phase): Substance | undefined {
-  const formula = parseFormula(word, phase);
-  const written = formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
+  // Every formula but the electron's holds a capital, so most names need no second reading.
+  const formula = /[A-Z]|^e-/.test(word) ? parseFormula(word, phase) : undefined;
+  const written = formula?.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
   if (written !== undefined) return written;
   const named = catalogue().byWord.get(wordKey(word));
   if (named === undefined || phase === undefined) return named;

@@ -29,8 +29,3 @@ export function molPerKgOfMassShares(
   }
   return withoutWeight.length > 0 ? { withoutWeight } : { molPerKg };
 }
-
-/** Mass share of each element, from moles per kilogram. */
-export function massSharesOfMolPerKg(molPerKg: ReadonlyMap<string, number>): ReadonlyMap<string, number> {
-  return new Map([...molPerKg].map(([symbol, mol]) => [symbol, mol * (atomicWeightKgPerMol(symbol) ?? 0)]));
-}

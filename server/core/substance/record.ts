@@ -5,8 +5,8 @@
 import type { Phase } from './formula.ts';
 
 /**
- * A number's origin. `provenance` says how we know the value: seen in the source, from memory, by common practice, by an
- * estimate of our own; `stated` is a scenario's own definition and occurs in no record.
+ * A number's origin. `provenance` says how we know the value: seen in the source, from memory, by common practice, or by
+ * an estimate of our own.
  */
 export interface SourceRecord {
   readonly id: string;
@@ -15,7 +15,7 @@ export interface SourceRecord {
   readonly title: string;
   /** Table, page, section or address; empty when the title says enough. */
   readonly where: string;
-  readonly provenance: 'seen' | 'from memory' | 'common practice' | 'estimate' | 'stated';
+  readonly provenance: 'seen' | 'from memory' | 'common practice' | 'estimate';
 }
 
 /** A number in a record with its source, and its standard uncertainty in the same unit where the source has one. */
