@@ -9,7 +9,6 @@ import type { Item, PrintMarks } from './print-marks.ts';
 import * as t from './tokens.ts';
 import type { Token } from './tokens.ts';
 import type { IsUnit } from './unit-run.ts';
-import { asPhaseWord } from './words.ts';
 
 /** Replaces the text from `start` to `end` (UTF-16 offsets, half-open). */
 export interface TextEdit {
@@ -62,7 +61,8 @@ function formatLines(text: string, isUnit: IsUnit): { readonly line: SourceLine;
     const formatted = printer.print();
     const changed = changedLines(lines, formatted).filter((index) => !printer.isKept(index));
     if (changed.length === 0) return lines.map((line, index) => ({ line, formatted: formatted[index] ?? '' }));
-    // A safety net: a line that would be read otherwise than before stays as typed.
+    // A line that would be read otherwise than before stays as typed: without its spaces `K( g )`, a call, would turn
+    // into the gas K(g).
     for (const index of changed) printer.keep(index);
   }
 }
@@ -222,11 +222,7 @@ class Printer {
     const after = next.tokenType;
     if (before === t.OpenBrace && after === t.CloseBrace) return single;
     if (after === t.Comma || after === t.Semicolon || after === t.Colon) return '';
-    if (before === t.OpenBracket || after === t.CloseBracket) {
-      // `f( g )` without its spaces would be a formula and its phase.
-      const inner = before === t.OpenBracket ? next : previous;
-      return asPhaseWord(inner.image) === undefined ? '' : single;
-    }
+    if (before === t.OpenBracket || after === t.CloseBracket) return '';
     if (spacedTypes.has(before) || spacedTypes.has(after)) return ' ';
     if (this.isOperator(previous) || this.isOperator(next)) return ' ';
     const { units, unitEnds } = this.marks;
