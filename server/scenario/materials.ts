@@ -64,7 +64,9 @@ export function materialNamed(word: Word, context: Context, wanted: Wanted = 'da
   }
   if (wanted === 'composition') {
     const formula = formulaOfWord(word, context);
-    return formula && materialOfFormula(formula);
+    const meant = formula && formulaWithLetterO(word);
+    if (meant) context.report(word.span, { code: 'name/unknown', what: 'substance', word: word.text, near: [meant] });
+    return meant ? null : formula && materialOfFormula(formula);
   }
   if (wanted === 'data') reportUnknownSubstance(word, context);
   return null;
@@ -76,6 +78,12 @@ export function formulaOfWord(word: Word, context: Context): Formula | null {
   if (formula.kind === 'formula') return formula;
   reportUnknownSubstance(word, context);
   return null;
+}
+
+/** `H20` written with a zero is a formula too, but hardly meant: the catalogue's formula with the letter, if there is one. */
+function formulaWithLetterO(word: Word): string | null {
+  const text = word.text.replace(/(?<![.\d])0|(?<=[A-Z]\d)0$/g, 'O');
+  return text !== word.text && findSubstance(text) ? text : null;
 }
 
 function reportUnknownSubstance(word: Word, context: Context): void {

@@ -5,6 +5,7 @@
 import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
+import { explainUnitWord } from '../core/quantity/suggest-units.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Formula } from '../core/substance/formula.ts';
 import { near, type Context } from './context.ts';
@@ -42,17 +43,17 @@ export function quantityReader(
       const [first, ...rest] = phrase?.items ?? [];
       if (!phrase || !first) return undefined;
       if (first.kind === 'connective') return refuse(entry, phrase, takes, context);
-      const quantity = readQuantityItem(first, needed, context);
-      let at: Quantity | null = null;
       const [connective, temperature, ...beyond] = rest;
       if (connective) {
         const isAt = options.at && connective.kind === 'connective' && connective.word === 'at';
-        if (!isAt || !temperature || temperature.kind === 'connective' || beyond.length > 0) {
-          return refuseItem(entry, isAt ? (beyond[0] ?? connective) : connective, takes, context);
-        }
-        at = readQuantityItem(temperature, temperatureNeeded, context);
-        if (!at) return undefined;
+        if (!isAt) return refuseItem(entry, connective, takes, context);
+        const extra = temperature?.kind === 'connective' ? temperature : beyond[0];
+        if (!temperature || extra) return refuseItem(entry, extra ?? connective, takes, context);
       }
+      const quantity = readQuantityItem(first, needed, context);
+      const hasAt = temperature !== undefined && temperature.kind !== 'connective';
+      const at = hasAt ? readQuantityItem(temperature, temperatureNeeded, context) : null;
+      if (hasAt && !at) return undefined;
       if (!quantity || !isInRange(quantity, options.range ?? 'any', entry, first, context)) return undefined;
       return { quantity, at };
     },
@@ -218,8 +219,21 @@ export function refuse(entry: Entry, phrase: Phrase, takes: string, context: Con
 /** Says that one item of a phrase, and what follows it, is too much. */
 export function refuseItem(entry: Entry, item: PhraseItem, takes: string, context: Context): undefined {
   const text = context.written(item.span);
-  context.report(item.span, { code: 'name/unknown-phrase', entry: entry.words, text, takes });
+  if (item.kind === 'word' && isBehindBareNumber(entry, item)) {
+    const { offers, why } = explainUnitWord(item.text);
+    context.report(item.span, { code: 'unit/unknown', word: item.text, near: offers, hint: why ?? null });
+  } else {
+    context.report(item.span, { code: 'name/unknown-phrase', entry: entry.words, text, takes });
+  }
   return undefined;
+}
+
+/** Whether a word stands where a number's unit is looked for: `20 C`, `12 knots`. */
+function isBehindBareNumber(entry: Entry, word: Word): boolean {
+  return entry.phrases.some(({ items }) => {
+    const before = items[items.indexOf(word) - 1];
+    return before?.kind === 'quantity' && !before.unit;
+  });
 }
 
 /** Whether the value lies in the range its entry asks for (said when it does not). */

@@ -364,6 +364,8 @@ describe('substance', () => {
         #        ^^^ unit/missing
         source: supplier
         #       ^^^^^^^^ name/unknown-phrase
+        flash point: 60 C
+        #               ^ unit/unknown
       }
     `);
   });
@@ -405,6 +407,16 @@ describe('reaction', () => {
       reaction odd {
         XeF2 -> Xe + F2
       # ^^^^^^^^^^^^^^^ balance/no-data
+      }
+    `);
+  });
+
+  test('a zero for the letter O', () => {
+    checkFacts(`
+      reaction burn {
+        CH4 + 2 O2 -> C02 + 2 H20
+      #               ^^^ name/unknown
+      #                       ^^^ name/unknown
       }
     `);
   });
