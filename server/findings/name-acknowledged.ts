@@ -13,8 +13,6 @@ export const nameAcknowledged: Rule<FactOf<'name/acknowledged'>> = {
         return `${quoted(acknowledged)} is not a hazard, and only hazards can be acknowledged. Mend what is found, or remove this line.`;
       case 'no-reason':
         return `The reason is missing. Say why ${quoted(acknowledged)} is in order here, in quotes: \`acknowledge ${acknowledged}: "…"\`.`;
-      case 'no-code':
-        return 'What is acknowledged is missing. Write the code of the hazard: `acknowledge hazard/…: "reason"`.';
     }
   },
 };

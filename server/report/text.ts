@@ -4,13 +4,13 @@
 // Invariant: no line of figures or tables is painted inside a column, so that they align with and without colour.
 
 import { readUnit } from '../core/quantity/read-unit.ts';
-import type { Finding } from '../findings/finding.ts';
+import type { Finding, Severity } from '../findings/finding.ts';
 import type { EvaluatedDefinition, EvaluatedFile, EvaluatedValue, Table } from '../scenario/scenario.ts';
 import { figureCells, toldText } from '../wording/quantities.ts';
 import { counted, countedFindings, listed } from '../wording/words.ts';
 import { alignedAtPoint, columns, cut, tableLines } from './columns.ts';
 import { findingLines, printable } from './finding-text.ts';
-import type { ReportedFile } from './gather.ts';
+import { hasFailed, type ReportedFile } from './gather.ts';
 import type { Extent } from './json.ts';
 import type { Paint } from './paint.ts';
 import { Lines } from './positions.ts';
@@ -102,7 +102,7 @@ function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: n
     ...(rows.length === 0 ? [] : [indented(columns(rows), 2)]),
     ...missing(definition, width).map((line) => paint.faint(line)),
     ...tables
-      .filter(saysSomething)
+      .filter((table) => saysSomething(table, kind))
       .map((table) => `\n  ${paint.faint(table.label)}\n${indented(tableLines(table), 4)}`),
   ].join('\n');
 }
@@ -132,10 +132,14 @@ function missing({ absent }: EvaluatedDefinition, width: number): string[] {
   );
 }
 
-/** A table of differences that are all zero says no more than that the equation balances. */
-function saysSomething({ columns: heads, rows }: Table): boolean {
-  const difference = heads.findIndex(({ id }) => id === 'difference');
-  return rows.length > 0 && (difference < 0 || rows.some((row) => row[difference] !== 0));
+/**
+ * A table of differences that are all zero says no more than that the equation balances; the elements of a substance say
+ * no more than its composition, which is written there.
+ */
+function saysSomething({ id, columns: heads, rows }: Table, kind: string): boolean {
+  const difference = heads.findIndex((head) => head.id === 'difference');
+  if (difference >= 0) return rows.some((row) => row[difference] !== 0);
+  return rows.length > 0 && !(kind === 'substance' && id === 'elements');
 }
 
 function expectationsBlock(file: EvaluatedFile, paint: Paint, width: number): string[] {
@@ -165,16 +169,31 @@ function notEvaluated(files: readonly ReportedFile[], width: number): string[] {
 }
 
 function summary(files: readonly ReportedFile[], paint: Paint): string {
-  const findings = files.flatMap((file) => file.findings);
-  const expectations = files.flatMap(({ file }) => file.expectations);
-  const counts: Record<string, number> = {};
-  for (const { severity } of findings) counts[severity] = (counts[severity] ?? 0) + 1;
-  const holding = expectations.filter(({ holds }) => holds === true).length;
-  const claims = expectations.length === 0 ? '' : `, ${holding} of ${counted(expectations.length, 'expectation')} met`;
-  const line = `${counted(files.length, 'file')}: ${countedFindings(counts)}${claims}`;
-  const failed =
-    findings.some(({ severity }) => severity === 'error') || expectations.some(({ holds }) => holds === false);
-  return failed ? paint.bad(line) : paint.good(line);
+  const used = files.filter((file) => file.used).length;
+  const counts: Partial<Record<Severity, number>> = {};
+  for (const { severity } of files.flatMap(({ findings }) => findings)) counts[severity] = (counts[severity] ?? 0) + 1;
+  const named = `${counted(files.length - used, 'file')}${used === 0 ? '' : ` (${used} more used)`}`;
+  const claims = claimsInWords(files);
+  const line = `${named}: ${countedFindings(counts)}${claims === '' ? '' : `; ${claims}`}`;
+  return hasFailed(files, false) ? paint.bad(line) : paint.good(line);
+}
+
+/** `2 expectations met, 1 failed`; empty where nothing is expected. */
+function claimsInWords(files: readonly ReportedFile[]): string {
+  const claims = files.flatMap(({ file }) => file.expectations);
+  const parts = (
+    [
+      [true, 'met'],
+      [false, 'failed'],
+      [null, 'not worked out'],
+    ] as const
+  ).flatMap(([holds, word]) => {
+    const count = claims.filter((claim) => claim.holds === holds).length;
+    return count === 0 ? [] : [{ count, word }];
+  });
+  return parts
+    .map(({ count, word }, index) => `${index === 0 ? counted(count, 'expectation') : count} ${word}`)
+    .join(', ');
 }
 
 function indented(lines: readonly string[], by: number): string {

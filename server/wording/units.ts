@@ -4,10 +4,11 @@
 
 import { superscript } from './numbers.ts';
 
-/** The unit as people read it; the dimensionless `1` is an empty text. */
+/** The unit as people read it (`per year` for `1/year`); the dimensionless `1` is an empty text. */
 export function unitForPeople(unit: string): string {
   if (unit === '1') return '';
   return unit
+    .replace(/^1\//, 'per ')
     .replace(/\bdeg([CF])\b/g, '°$1')
     .replace(/\bu(?=(?:mol|g|m|s|L|bar|atm|Pa|J|W|A|V)\b)/g, 'µ')
     .replace(/\^(-?\d+)/g, (_, power: string) => superscript(power))

@@ -93,9 +93,9 @@ describe('the document of evaluate', () => {
                 {
                   id: 'lower-heating-value',
                   label: 'lower heating value',
-                  value: expect.closeTo(35.5, 12),
+                  value: near(35.5, 12),
                   unit: 'MJ/kg',
-                  uncertainty: expect.closeTo(0.2, 12),
+                  uncertainty: near(0.2, 12),
                 },
                 { id: 'flash-point', label: 'flash point', value: 338.15, unit: 'K', uncertainty: null },
               ],
@@ -116,13 +116,13 @@ describe('the document of evaluate', () => {
             },
           ],
           values: [
-            { name: 'days_worked', line: 1, value: expect.closeTo(6.6545e-6, 10), unit: '1/s', uncertainty: null },
+            { name: 'days_worked', line: 1, value: near(6.6545e-6, 10), unit: '1/s', uncertainty: null },
           ],
           findings: [
             {
               code: 'name/unknown',
               severity: 'error',
-              message: expect.stringContaining('Did you mean `sodium`?'),
+              message: containing('Did you mean `sodium`?'),
               line: 4,
               column: 13,
               endLine: 4,
@@ -137,7 +137,7 @@ describe('the document of evaluate', () => {
               endLine: 7,
               endColumn: 48,
               holds: true,
-              found: expect.closeTo(35.5, 12),
+              found: near(35.5, 12),
               unit: 'MJ/kg',
             },
           ],
@@ -235,3 +235,12 @@ describe('whether a run has failed', () => {
     expect(hasFailed(gathered(scenario(noted)), true)).toBe(false);
   });
 });
+
+/** As `expect.closeTo`, whose type says nothing. */
+function near(value: number, digits: number): unknown {
+  return expect.closeTo(value, digits);
+}
+
+function containing(text: string): unknown {
+  return expect.stringContaining(text);
+}

@@ -96,7 +96,7 @@ function told(files: readonly EvaluatedFile[], options: Partial<TextOptions> = {
 test('a whole file, as a person reads it', () => {
   expect(told([trial()])).toBe(`trial.stoke  A trial
 
-  days_worked  =  210 1/year
+  days_worked  =  210 per year
 
 blend slurry
   What is burnt.
@@ -124,7 +124,7 @@ trial.stoke:5:13: error: Neither the catalogue nor this scenario has a substance
 
 Read but not worked out by this version: burn fire.
 
-1 file: 1 error, 1 note, 1 of 1 expectation met
+1 file: 1 error, 1 note; 1 expectation met
 `);
 });
 
@@ -135,7 +135,7 @@ test('check tells the findings and no figures', () => {
 });
 
 test('nothing wrong is one line', () => {
-  expect(told([trial({ facts: [] })], { extent: 'check' })).toBe('1 file: no findings, 1 of 1 expectation met\n');
+  expect(told([trial({ facts: [] })], { extent: 'check' })).toBe('1 file: no findings; 1 expectation met\n');
 });
 
 test('a used file shows its findings only', () => {
@@ -157,7 +157,7 @@ test('failed and unknown claims', () => {
   ]);
   expect(text).toContain('✗ lower heating value of slurry > 33 MJ/kg  found 32.1 MJ/kg');
   expect(text).toContain('– lower heating value of slurry > 33 MJ/kg  not worked out');
-  expect(text).toContain('0 of 2 expectations met');
+  expect(text).toContain('; 1 expectation failed, 1 not worked out');
 });
 
 test('a reaction that balances has no table of differences, one that does not has', () => {
@@ -180,7 +180,6 @@ describe('colour', () => {
   test('changes no letter and no column', () => {
     const painted = told([trial()], { paint: terminalPaint });
     expect(painted).toContain('\u001b[');
-    // eslint-disable-next-line no-control-regex -- the codes are what is looked for
     expect(painted.replace(/\u001b\[\d+m/g, '')).toBe(told([trial()]));
   });
 

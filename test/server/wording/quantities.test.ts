@@ -19,7 +19,7 @@ test('a quantity in the unit asked for, with its uncertainty', () => {
 
 describe('without a unit, one that gives a handy number', () => {
   test.each([
-    [quantity(210, '1/year'), '210 1/year'],
+    [quantity(210, '1/year'), '210 per year'],
     [quantity(44, 'MJ/kg'), '44 MJ/kg'],
     [quantity(6400, 'kW'), '6.4 MW'],
     [quantity(231, 'g/kWh'), '231 g/kWh'],

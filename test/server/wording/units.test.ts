@@ -11,6 +11,8 @@ const FORMS: readonly (readonly [string, string])[] = [
   ['m2/s', 'm²/s'],
   ['MJ/L', 'MJ/L'],
   ['t/year', 't/year'],
+  ['1/year', 'per year'],
+  ['1/(kg s)', 'per (kg s)'],
   ['g/kWh', 'g/kWh'],
 ];
 

@@ -1,0 +1,34 @@
+import { expect, test } from 'vitest';
+import { folderWith, runIn } from '../../support/command-run.ts';
+
+async function told(...words: string[]): Promise<string> {
+  return (await runIn(folderWith({}), ['catalogue', ...words])).out;
+}
+
+test('a list, one line a substance', async () => {
+  const lines = (await told()).trimEnd().split('\n');
+  expect(lines.find((line) => line.startsWith('methanol'))).toMatch(/^methanol +CH3OH\(l\)/);
+  expect(lines.at(-1)).toMatch(/^\d+ entries\./);
+});
+
+test.each([['sodium'], ['Na'], ['Na(cr)']])('%s is found, and every number has its source', async (word) => {
+  const lines = (await told(word)).split('\n').filter((line) => line.startsWith('  ') && !line.startsWith('  also'));
+  expect(lines.length).toBeGreaterThan(1);
+  for (const line of lines) expect(line).toMatch(/^ {2}\S.* {2,}\S.* {2,}\S/);
+});
+
+test('a phase asked for is the only one told', async () => {
+  expect((await told('water')).match(/^water/gm)?.length).toBeGreaterThan(1);
+  expect((await told('H2O(g)')).match(/^water/gm)).toHaveLength(1);
+});
+
+test('part of a name finds all that have it', async () => {
+  const text = await told('oil');
+  expect(text).toContain('gas_oil');
+});
+
+test('what is not there is answered with what is near', async () => {
+  const ran = await runIn(folderWith({}), ['catalogue', 'metanol']);
+  expect(ran).toMatchObject({ code: 1, out: '' });
+  expect(ran.problem).toContain('Did you mean `methanol`');
+});
