@@ -23,6 +23,18 @@ export function allSubstances(): readonly Substance[] {
  * Undefined when nothing is found, also when the substance is known but not in that phase.
  */
 export function findSubstance(word: string, phase?: Phase): Substance | undefined {
+  const { kept } = catalogue();
+  const key = `${word} ${phase ?? ''}`;
+  const known = kept.get(key);
+  if (known !== undefined || kept.has(key)) return known;
+  const found = lookUp(word, phase);
+  // Slates and heating values ask for the same few words over and over; a text full of unknown ones must not pile up.
+  if (kept.size >= mostKept) kept.clear();
+  kept.set(key, found);
+  return found;
+}
+
+function lookUp(word: string, phase: Phase | undefined): Substance | undefined {
   // Every formula but the electron's holds a capital, so most names need no second reading.
   const formula = /[A-Z]|^e-/.test(word) ? parseFormula(word, phase) : undefined;
   const written = formula?.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
@@ -42,12 +54,16 @@ export function findSubstanceOfFormula(formula: Formula): Substance | undefined 
  * the very same formula comes first (`CH3OCH3` is dimethyl ether, not ethanol), then stable phases before others.
  */
 export function substancesOfFormula(formula: Formula): readonly Substance[] {
+  const known = ofFormula.get(formula);
+  if (known) return known;
   const candidates = catalogue().byComposition.get(compositionKey(formula)) ?? [];
-  return candidates
+  const found = candidates
     .filter((substance) => formula.phase === undefined || substance.phase === formula.phase)
     .map((substance) => ({ substance, rank: substance.formula?.text === formula.text ? 0 : 1 }))
     .sort((a, b) => a.rank - b.rank || Number(b.substance.stableAtReference) - Number(a.substance.stableAtReference))
     .map(({ substance }) => substance);
+  ofFormula.set(formula, found);
+  return found;
 }
 
 /** The phases the catalogue has of the substance of that exact name, the stable one first. */
@@ -63,7 +79,12 @@ export function suggestSubstances(word: string, most = 3): readonly string[] {
   return nearestWords(word, catalogue().suggestible, most);
 }
 
+const mostKept = 2000;
+const ofFormula = new WeakMap<Formula, readonly Substance[]>();
+
 interface Catalogue {
+  /** Answers of `findSubstance` so far. */
+  readonly kept: Map<string, Substance | undefined>;
   readonly substances: readonly Substance[];
   readonly byName: ReadonlyMap<string, readonly Substance[]>;
   readonly byWord: ReadonlyMap<string, Substance>;
@@ -111,7 +132,7 @@ function buildCatalogue(): Catalogue {
   }
   const substances = substanceRecords.flatMap((record) => byName.get(record.name) ?? []);
   const formulaTexts = new Set(substances.flatMap((substance) => substance.formula?.text ?? []));
-  return { substances, byName, byWord, byComposition, suggestible: [...byWord.keys(), ...formulaTexts] };
+  return { kept: new Map(), substances, byName, byWord, byComposition, suggestible: [...byWord.keys(), ...formulaTexts] };
 }
 
 /** Names are compared in lower case with `_` between words, so that a quoted `sodium oleate` meets `sodium_oleate`. */
