@@ -2,7 +2,7 @@
 // Knows no energies and changes no coefficient. Invariant: an equation's sums are exact, `balanced` has no tolerance.
 // Charge is conserved like an element and is listed under `charge`.
 
-import Fraction from 'fraction.js';
+import type Fraction from 'fraction.js';
 import type { Formula } from '../substance/formula.ts';
 import { exactNumber, zero } from './exact-linear.ts';
 

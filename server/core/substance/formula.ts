@@ -94,7 +94,7 @@ class FormulaReader {
   private readonly plain: string;
 
   constructor(private readonly original: string) {
-    this.plain = [...original.matchAll(/[\s\S]/g)].map(([character]) => plainCharacter(character)).join('');
+    this.plain = /^[ -~]*$/.test(original) ? original : original.replace(/[^ -~]/g, plainCharacter);
   }
 
   readWhole(): Formula | FormulaFault {
@@ -153,7 +153,7 @@ class FormulaReader {
   private readUnit(depth: number): Part | undefined {
     const character = this.plain[this.position] ?? '';
     if ((character === '(' || character === '[') && this.phaseHere() === undefined) return this.readBracket(depth);
-    const word = /^[A-Z][a-z]*/.exec(this.plain.slice(this.position))?.[0];
+    const word = this.match(/[A-Z][a-z]*/y)?.[0];
     if (word === undefined) return undefined;
     // `CO` is carbon and oxygen, `Co` cobalt: a small letter belongs to the capital before it, and nothing else can.
     if (elementOfSymbol(word) === undefined) this.fail('unknown-element', this.position, word.length);
@@ -177,10 +177,10 @@ class FormulaReader {
 
   /** A count behind a unit, or the multiplier that opens a hydrate's part; 1 where none is written. */
   private readCount(opensPart: boolean): { readonly text: string; readonly value: number } {
-    const written = /^\d+/.exec(this.plain.slice(this.position))?.[0] ?? '';
+    const written = this.match(/\d+/y)?.[0] ?? '';
     // `MgCl2.6H2O` is a hydrate, `Fe0.947O` and `H2SO4.6.5H2O`'s 6.5 are decimals: see atHydrateDot.
     const afterWhole = this.position + written.length;
-    const decimals = /^\.\d+/.exec(this.plain.slice(afterWhole))?.[0] ?? '';
+    const decimals = this.match(/\.\d+/y, afterWhole)?.[0] ?? '';
     const isDecimal = decimals !== '' && written !== '' && (opensPart || !this.hydrateDotAt(afterWhole, written));
     const text = isDecimal ? written + decimals : written;
     if (text === '') return { text: '', value: 1 };
@@ -191,6 +191,9 @@ class FormulaReader {
   }
 
   private atHydrateDot(): boolean {
+    const character = this.plain[this.position];
+    if (character === '·') return true;
+    if (character !== '.') return false;
     const before = /\d*$/.exec(this.plain.slice(0, this.position))?.[0] ?? '';
     return this.hydrateDotAt(this.position, before);
   }
@@ -210,7 +213,7 @@ class FormulaReader {
   }
 
   private readCharge(): number {
-    const match = /^(?:\^(\d*)|([⁰¹²³⁴-⁹]+))([+-])|^(?:\++|-+)/.exec(this.plain.slice(this.position));
+    const match = this.match(/(?:\^(\d*)|([⁰¹²³⁴-⁹]+))([+-])|\++|-+/y);
     if (match === null) return 0;
     const [written, afterCaret, raised, raisedSign] = match;
     const start = this.position;
@@ -230,8 +233,14 @@ class FormulaReader {
 
   /** The phase whose bracket opens here, if one does: `(l)` cannot be a group, since groups hold elements. */
   private phaseHere(): Phase | undefined {
-    const rest = this.plain.slice(this.position);
-    return phases.find((phase) => rest.startsWith(`(${phase})`));
+    if (this.plain[this.position] !== '(') return undefined;
+    return phases.find((phase) => this.plain.startsWith(`(${phase})`, this.position));
+  }
+
+  /** A sticky expression tried at one place, the reader's own unless another is given. */
+  private match(expression: RegExp, position = this.position): RegExpExecArray | null {
+    expression.lastIndex = position;
+    return expression.exec(this.plain);
   }
 
   private fail(reason: FormulaFault['reason'], position: number, length: number): never {
