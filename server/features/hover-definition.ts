@@ -2,13 +2,14 @@
 // figures. Shows what the evaluation found and works nothing out. Invariant: a definition without figures still says its
 // kind and name.
 import type { EvaluatedDefinition, Place } from '../scenario/scenario.ts';
+import { formatNumber } from '../wording/numbers.ts';
 import { capitalised, listed } from '../wording/words.ts';
 import { figureText } from '../wording/quantities.ts';
 import { balanceText } from './hover-equation.ts';
 import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
 import { leadingFigures } from './leading-figures.ts';
 
-const MOST_FIGURES = 7;
+const MOST_FIGURES = 6;
 const MOST_ABSENT = 2;
 
 export function hoverDefinition(place: Place, definition: EvaluatedDefinition): HoverText {
@@ -20,6 +21,7 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
   const lines: HoverLine[] = [
     ...(balance === null ? [] : [{ sentence: balance }]),
     ...shown.map((figure) => ({ label: figure.label, text: figureText(figure) })),
+    ...slateLines(definition),
     ...absentLines(definition),
     ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),
   ];
@@ -32,6 +34,15 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
   };
 }
 
+/** What the heating values burn to: without it a heating value of an alkali fuel says nothing. */
+function slateLines({ tables }: EvaluatedDefinition): HoverLine[] {
+  const slate = tables.find(({ id }) => id === 'complete-combustion-products');
+  const products = slate?.rows.flatMap(([product, amount]) =>
+    typeof product === 'string' && typeof amount === 'number' ? [`${formatNumber(amount)} ${product}`] : [],
+  );
+  return products && products.length > 0 ? [{ label: 'Burnt to, in mol/kg', text: products.join(', ') }] : [];
+}
+
 /** The first figures that could not be had for want of data, with what is missing. */
 function absentLines({ absent }: EvaluatedDefinition): HoverLine[] {
   return [...absent]
@@ -39,6 +50,6 @@ function absentLines({ absent }: EvaluatedDefinition): HoverLine[] {
     .slice(0, MOST_ABSENT)
     .map(({ id, missing }) => ({
       label: capitalised(id.replaceAll('-', ' ')),
-      text: `not known: ${listed(missing)} missing`,
+      text: `not known; missing ${listed(missing)}`,
     }));
 }

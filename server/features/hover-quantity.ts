@@ -12,13 +12,12 @@ import type { HoverLine, HoverText } from './hover-text.ts';
 
 /** null for a plain number, of which nothing more is to be said than stands there. */
 export function hoverQuantity(place: Place, quantity: Quantity, unit: string): HoverText | null {
-  const lines = siblingLines(quantity, unit);
-  if (lines.length === 0 && unit === '1') return null;
+  if (unit === '1') return null;
   return {
     place,
     title: quantityText(quantity, unit),
     origin: capitalised(dimensionPhrase(quantity)),
-    lines,
+    lines: siblingLines(quantity, unit),
   };
 }
 
@@ -35,6 +34,7 @@ export function hoverValue(place: Place, { name, quantity }: EvaluatedValue): Ho
 
 /** The quantity in further units, one line each. */
 export function siblingLines(quantity: Quantity, unit: string): HoverLine[] {
+  if (unit === '1') return []; // 12 is not better known as 1200 %
   return siblingUnits(quantity, unit).map((sibling) => ({
     sentence: `= ${withUnit(formatNumber(sibling.value), unitForPeople(sibling.unit))}`,
   }));

@@ -35,7 +35,7 @@ export function hover(scenario: EvaluatedScenario, path: string, offset: number)
   const unit = unitAt(file, offset);
   if (unit) return hoverUnit(unit, meaning);
   if (meaning) return hoverMeaning(meaning, scenario, file);
-  if (line?.result?.kind === 'equation') return hoverEquation(line.place, line.definition, line.result);
+  if (line?.line.kind === 'equation') return hoverEquation(line.place, line.definition, line.result);
   const definition = file.definitions.find(({ header }) => holds(header, offset));
   return definition ? hoverHeader(file, definition, offset) : null;
 }

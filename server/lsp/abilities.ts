@@ -48,14 +48,18 @@ export function abilitiesOf(params: unknown): Abilities {
   };
 }
 
+/** The addresses in a list of workspace folders; what is no folder is left out. */
+export function folderAddresses(folders: unknown): readonly string[] {
+  if (!Array.isArray(folders)) return [];
+  return folders
+    .map((folder) => at(folder, 'uri'))
+    .filter((uri) => typeof uri === 'string')
+    .map(addressOf);
+}
+
 function foldersOf(params: unknown): readonly string[] {
   const folders = at(params, 'workspaceFolders');
-  if (Array.isArray(folders)) {
-    return folders
-      .map((folder) => at(folder, 'uri'))
-      .filter((uri) => typeof uri === 'string')
-      .map(addressOf);
-  }
+  if (Array.isArray(folders)) return folderAddresses(folders);
   const root = at(params, 'rootUri'); // how older clients say it
   return typeof root === 'string' ? [addressOf(root)] : [];
 }

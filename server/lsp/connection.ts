@@ -1,27 +1,197 @@
-// Joins a client's connection to the open documents: says what the server can do and publishes findings with the
-// version they belong to. Knows no transport, so that stdio, ipc, a worker and the tests use the same function.
-// Invariant: a list is replaced, never cleared first, and cleared for good when its document closes.
-// Source: Language Server Protocol 3.18.
-import { TextDocuments, TextDocumentSyncKind } from 'vscode-languageserver';
-import type { Connection, InitializeResult } from 'vscode-languageserver';
-import { TextDocument } from 'vscode-languageserver-textdocument';
+// Joins a client's connection to the open documents, their evaluations and what is shown of them. Knows no transport, so
+// that stdio, ipc, a worker and the tests use the same function, and reads no file: used files are asked of the client by
+// `stokehold/readFile`, or of a reader that the host hands in. Invariant: nothing a client sends ends the server but its
+// own `exit`. Source: Language Server Protocol 3.18.
+import {
+  DidChangeConfigurationNotification,
+  DidChangeWatchedFilesNotification,
+  FileChangeType,
+  PositionEncodingKind,
+  RequestType,
+  TextDocumentSyncKind,
+  type Connection,
+  type Diagnostic,
+  type InitializeResult,
+} from 'vscode-languageserver';
+import { diagnostics } from '../features/diagnostics.ts';
+import { abilitiesOf, folderAddresses } from './abilities.ts';
+import { addressOf } from './addresses.ts';
+import { toDiagnostic } from './convert.ts';
+import { OpenDocuments } from './documents.ts';
+import { Evaluations, type Evaluated } from './evaluations.ts';
+import { UsedFiles, type AskForFile, type FileAnswer } from './files.ts';
+import { Publications, type Said } from './publications.ts';
+import { answerRequests, REQUEST_CAPABILITIES } from './requests.ts';
+import { Schedule } from './schedule.ts';
+import { asSettings, DEFAULT_SETTINGS } from './settings.ts';
+
+/** The client's part: `{ uri }` to `{ text }`, or `{ fault: 'missing' | 'unreadable', detail? }`. */
+export const readFileRequest = new RequestType<{ uri: string }, FileAnswer, void>('stokehold/readFile');
+
+export interface Host {
+  /** Reads a file for clients that do not answer `stokehold/readFile`. Without it, their used files are unreadable. */
+  readonly readFile?: AskForFile;
+}
 
 /** Answers on the connection until it ends. Returns once listening has begun. */
-export function serve(connection: Connection): void {
-  const documents = new TextDocuments(TextDocument);
+export function startServer(connection: Connection, host: Host = {}): void {
+  let abilities = abilitiesOf(null);
+  let folders: readonly string[] = [];
+  let settings = DEFAULT_SETTINGS;
+  const log = (message: string): void => {
+    connection.console.error(message);
+  };
 
-  connection.onInitialize((): InitializeResult => ({
-    capabilities: { textDocumentSync: TextDocumentSyncKind.Incremental },
-    serverInfo: { name: 'stokehold' },
-  }));
-
-  documents.onDidChangeContent(({ document }) => {
-    void connection.sendDiagnostics({ uri: document.uri, version: document.version, diagnostics: [] });
+  const documents = new OpenDocuments();
+  const files = new UsedFiles((uri) => {
+    if (abilities.readFile) return connection.sendRequest(readFileRequest, { uri });
+    if (host.readFile) return host.readFile(uri);
+    return Promise.resolve({ fault: 'unreadable', detail: 'This editor does not hand files to the language server.' });
   });
-  documents.onDidClose(({ document }) => {
-    void connection.sendDiagnostics({ uri: document.uri, diagnostics: [] });
+  const evaluations = new Evaluations(documents, files, () => folders, log);
+  const publications = new Publications(
+    (address) => documents.at(address),
+    (uri, version, list) => {
+      void connection.sendDiagnostics({ uri, diagnostics: [...list], ...(version === null ? {} : { version }) });
+    },
+  );
+  const schedule = new Schedule(async (uri) => {
+    try {
+      const evaluated = await evaluations.current(uri);
+      if (evaluated) publications.replace(evaluated.address, said(evaluated));
+    } catch (error) {
+      log(`Publishing the findings of ${uri} failed: ${String(error)}`);
+    }
   });
 
-  documents.listen(connection);
+  function said({ uri, address, document, findings, scenario, textOf }: Evaluated): ReadonlyMap<string, Said> {
+    const lists = new Map<string, Diagnostic[]>([[address, []]]);
+    for (const file of scenario?.files ?? []) lists.set(file.path, []);
+    for (const plain of diagnostics(findings, settings.severities)) {
+      const diagnostic = toDiagnostic(plain, textOf, abilities.related);
+      if (diagnostic) lists.get(plain.place.path)?.push(diagnostic);
+    }
+    return new Map(
+      [...lists].map(([path, list]) => {
+        const text = textOf(path) ?? { uri, document };
+        return [path, { uri: text.uri, text: text.document.getText(), diagnostics: list }];
+      }),
+    );
+  }
+
+  /** The texts an evaluation read have changed: all that read this one are looked at again. */
+  function lookAgain(address: string, except?: string): void {
+    for (const uri of evaluations.readersOf(address)) if (uri !== except) schedule.after(settings.pauseMs, uri);
+  }
+
+  function lookAtAll(): void {
+    for (const uri of documents.uris()) schedule.after(settings.pauseMs, uri);
+  }
+
+  function fileMayHaveChanged(address: string): void {
+    files.forget(address);
+    lookAgain(address);
+  }
+
+  async function askForSettings(): Promise<void> {
+    try {
+      settings = asSettings(await connection.workspace.getConfiguration('stokehold'));
+    } catch (error) {
+      log(`The settings could not be read: ${String(error)}`);
+    }
+    lookAtAll();
+  }
+
+  connection.onInitialize((params): InitializeResult => {
+    abilities = abilitiesOf(params);
+    folders = abilities.folders;
+    return {
+      capabilities: {
+        positionEncoding: PositionEncodingKind.UTF16,
+        textDocumentSync: { openClose: true, change: TextDocumentSyncKind.Incremental, save: true },
+        workspace: { workspaceFolders: { supported: true, changeNotifications: true } },
+        ...REQUEST_CAPABILITIES,
+      },
+      serverInfo: { name: 'stokehold' },
+    };
+  });
+
+  connection.onInitialized(async () => {
+    try {
+      if (abilities.folderNews) {
+        connection.workspace.onDidChangeWorkspaceFolders(({ added, removed }) => {
+          const gone = new Set(folderAddresses(removed));
+          folders = [...folders.filter((folder) => !gone.has(folder)), ...folderAddresses(added)];
+          lookAtAll();
+        });
+      }
+      if (abilities.configuration) await askForSettings();
+      if (abilities.configurationNews) {
+        await connection.client.register(DidChangeConfigurationNotification.type, { section: 'stokehold' });
+      }
+      if (abilities.watching) {
+        await connection.client.register(DidChangeWatchedFilesNotification.type, {
+          watchers: [{ globPattern: '**/*.stoke' }],
+        });
+      }
+    } catch (error) {
+      log(`Asking the client for news failed: ${String(error)}`);
+    }
+  });
+
+  connection.onDidChangeConfiguration(async (params: { readonly settings?: unknown }) => {
+    if (abilities.configuration) return askForSettings();
+    const sent = params.settings;
+    settings = asSettings(
+      typeof sent === 'object' && sent !== null && 'stokehold' in sent ? sent.stokehold : undefined,
+    );
+    lookAtAll();
+  });
+
+  connection.onDidChangeWatchedFiles(({ changes }) => {
+    for (const { uri, type } of changes) {
+      const address = addressOf(uri);
+      fileMayHaveChanged(address);
+      // A deleted file that no open document uses any more must not keep its marks.
+      if (type === FileChangeType.Deleted && !documents.at(address)) publications.close(address);
+    }
+  });
+
+  answerRequests({
+    connection,
+    documents,
+    evaluations,
+    abilities: () => abilities,
+    settings: () => settings,
+    log,
+  });
+
+  documents.listen(connection, {
+    opened(uri) {
+      schedule.after(0, uri);
+      fileMayHaveChanged(addressOf(uri));
+    },
+    changed(uri) {
+      schedule.after(settings.pauseMs, uri);
+      lookAgain(addressOf(uri), uri);
+    },
+    saved(uri) {
+      // Without news of changed files, a save is the moment to look at the used ones again.
+      if (abilities.watching) return;
+      for (const address of files.addresses()) fileMayHaveChanged(address);
+      schedule.after(0, uri);
+    },
+    closed(uri) {
+      const address = addressOf(uri);
+      schedule.drop(uri);
+      evaluations.drop(uri);
+      publications.close(address);
+      fileMayHaveChanged(address);
+    },
+  });
+
+  connection.onShutdown(() => {
+    schedule.dropAll();
+  });
   connection.listen();
 }
