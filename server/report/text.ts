@@ -3,11 +3,11 @@
 // that sums up. Files reached by `use` show their findings only; name them to see their figures.
 // Invariant: no line of figures or tables is painted inside a column, so that they align with and without colour.
 
-import { readUnit } from '../core/quantity/read-unit.ts';
 import type { Finding, Severity } from '../findings/finding.ts';
-import type { EvaluatedDefinition, EvaluatedFile, EvaluatedValue, Table } from '../scenario/scenario.ts';
+import type { EvaluatedDefinition, EvaluatedFile, Table } from '../scenario/scenario.ts';
 import { figureCells, toldText } from '../wording/quantities.ts';
-import { counted, countedFindings, listed } from '../wording/words.ts';
+import { counted, countedFindings, listed, sharingHeads } from '../wording/words.ts';
+import { unitOfClaim, unitOfValue } from '../wording/written-unit.ts';
 import { alignedAtPoint, columns, cut, tableLines } from './columns.ts';
 import { findingLines, printable } from './finding-text.ts';
 import { hasFailed, type ReportedFile } from './gather.ts';
@@ -72,18 +72,11 @@ function fileBlocks(file: EvaluatedFile, paint: Paint, width: number): string[] 
 
 function valuesBlock(file: EvaluatedFile): string[] {
   const rows = file.values.flatMap((value) =>
-    value.quantity ? [[printable(value.name), '=', toldText(value.quantity, unitAsWritten(value, file))]] : [],
+    value.quantity
+      ? [[printable(value.name), '=', toldText(value.quantity, unitOfValue(value.place, value.quantity, file))]]
+      : [],
   );
   return rows.length === 0 ? [] : [indented(columns(rows), 2)];
-}
-
-/** A value given as one quantity is told in the unit it was given in; any other in a handy one (null). */
-function unitAsWritten({ place }: EvaluatedValue, file: EvaluatedFile): string | null {
-  const placed = file.tree.sections.find(({ start, end }) => start <= place.start && place.start < end);
-  const statement = placed?.section.statement;
-  if (statement?.kind !== 'let' || statement.value?.kind !== 'quantity') return null;
-  const reading = readUnit(statement.value.unit?.tokens ?? []);
-  return reading.ok ? reading.unit.text : null;
 }
 
 function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: number): string {
@@ -122,11 +115,11 @@ function missing({ absent }: EvaluatedDefinition, width: number): string[] {
   const figuresByReason = new Map<string, string[]>();
   for (const [id, reasons] of absent) {
     if (reasons === null || reasons.length === 0) continue;
-    const reason = listed(reasons);
+    const reason = listed(sharingHeads(reasons));
     figuresByReason.set(reason, [...(figuresByReason.get(reason) ?? []), id.replaceAll('-', ' ')]);
   }
   return [...figuresByReason].flatMap(([reason, names]) =>
-    wrapped(`Not known for lack of ${reason}: ${names.join(', ')}.`, width - 2)
+    wrapped(`Without ${reason} there is no ${listed(names, 'or')}.`, width - 2)
       .split('\n')
       .map((line) => `  ${line}`),
   );
@@ -150,7 +143,8 @@ function expectationsBlock(file: EvaluatedFile, paint: Paint, width: number): st
       .replace(/^expect\s+/, '')
       .replace(/\s+/g, ' ');
     const mark = holds === null ? paint.faint('–') : holds ? paint.good('✓') : paint.bad('✗');
-    const value = found === null ? 'not worked out' : `found ${toldText(found, unit)}`;
+    const value =
+      found === null ? 'not worked out' : `found ${toldText(found, unitOfClaim(place, found, file) ?? unit)}`;
     return `  ${mark} ${cut(printable(claim), width - 4)}  ${paint.faint(value)}`;
   });
   return [['Expected', ...lines].join('\n')];

@@ -98,7 +98,9 @@ export function distanceText(from: Quantity, to: Quantity, unit: string | null):
   const step = Math.abs(from.value - to.value);
   // A difference of two temperatures is in kelvins, whatever scale they are told in.
   if (shown.scale === 'temperature') return `${formatNumber(step)} K`;
-  return withUnit(formatNumber(stepFromSi(step, shown)), unitForPeople(shown.text));
+  const number = formatNumber(stepFromSi(step, shown));
+  // "10 % below 40 %" could be 36 %.
+  return shown.text === '%' ? `${number} percentage points` : withUnit(number, unitForPeople(shown.text));
 }
 
 /** A dimension for a sentence, with its SI unit: `a mass flow (kg/s)`, `a plain number`. */

@@ -13,6 +13,17 @@ export function listed(items: readonly string[], joint: 'and' | 'or' = 'and'): s
   return items.length === 1 ? last : `${items.slice(0, -1).join(', ')} ${joint} ${last}`;
 }
 
+/** `the density of a`, `the density of b` become `the density of a and b`: what they share is said once. */
+export function sharingHeads(items: readonly string[]): string[] {
+  const tailsByHead = new Map<string, string[]>();
+  for (const item of items) {
+    const at = item.lastIndexOf(' of ');
+    const [head, tail] = at < 0 ? [item, ''] : [item.slice(0, at + 4), item.slice(at + 4)];
+    tailsByHead.set(head, [...(tailsByHead.get(head) ?? []), tail]);
+  }
+  return [...tailsByHead].map(([head, tails]) => head + listed(tails));
+}
+
 /** The text as it was written, in the marks that say "this is from the file", shortened where long. */
 export function quoted(text: string): string {
   const line = text.replace(/\s+/g, ' ').trim();

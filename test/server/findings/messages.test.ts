@@ -246,7 +246,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'balance/no-data', what: 'the density of slurry', missing: ['the density of sodium', 'the density of x'] },
-    'The density of slurry cannot be worked out. Missing: the density of sodium and the density of x.',
+    'The density of slurry cannot be worked out. Missing: the density of sodium and x.',
   ],
   [
     { code: 'balance/contradiction', what: 'the heating value of x', first: '44 MJ/kg', second: '12 MJ/kg' },

@@ -115,9 +115,7 @@ describe('the document of evaluate', () => {
               ],
             },
           ],
-          values: [
-            { name: 'days_worked', line: 1, value: near(6.6545e-6, 10), unit: '1/s', uncertainty: null },
-          ],
+          values: [{ name: 'days_worked', line: 1, value: near(6.6545e-6, 10), unit: '1/s', uncertainty: null }],
           findings: [
             {
               code: 'name/unknown',

@@ -104,7 +104,7 @@ blend slurry
   Density                       850.3          kg/m³
   Biogenic share of the carbon   98            %
   Flash point                   338.1          K (65 °C)
-  Not known for lack of the molar mass of gas_oil: molar mass, formation enthalpy.
+  Without the molar mass of gas_oil there is no molar mass or formation enthalpy.
 
   Portions
     Substance  Mass, %

@@ -54,6 +54,7 @@ test('shares are read in percent, other plain numbers are not', () => {
 
 test('a distance is positive, and of temperatures it is in K', () => {
   expect(distanceText(quantity(32.1, 'MJ/kg'), quantity(33, 'MJ/kg'), 'MJ/kg')).toBe('0.9 MJ/kg');
+  expect(distanceText(quantity(0.3, '1'), quantity(0.4, '1'), '%')).toBe('10 percentage points');
   const [hot, cold] = [quantity(500, 'degC', 0, 'temperature'), quantity(300, 'degC', 0, 'temperature')];
   expect(distanceText(hot, cold, 'degC')).toBe('200 K');
   expect(distanceText(hot, cold, 'K')).toBe('200 K');

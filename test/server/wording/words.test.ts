@@ -7,6 +7,7 @@ import {
   nameAsWritten,
   quoted,
   sentences,
+  sharingHeads,
   withArticle,
 } from '../../../server/wording/words.ts';
 
@@ -16,6 +17,14 @@ test('lists', () => {
     'a',
     'a or b',
     'a, b and c',
+  ]);
+});
+
+test('what several things share is said once', () => {
+  expect(sharingHeads(['the density of a', 'the density of b', 'the heat of mixing of a', 'x'])).toEqual([
+    'the density of a and b',
+    'the heat of mixing of a',
+    'x',
   ]);
 });
 
