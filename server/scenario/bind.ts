@@ -8,7 +8,7 @@ import { isUnitWord } from '../core/quantity/read-unit.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import type { Fact } from './facts.ts';
 import type { LoadedFile } from './files.ts';
-import { placeOf } from './scenario.ts';
+import { placeOf } from './place.ts';
 
 /** A named statement and where it stands. */
 export interface Binding {

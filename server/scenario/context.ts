@@ -7,15 +7,8 @@ import type { Quantity } from '../core/quantity/quantity.ts';
 import { nearestWords } from '../core/substance/suggestion.ts';
 import type { Fact } from './facts.ts';
 import type { Material } from './material.ts';
-import {
-  placeOf,
-  type EvaluatedDefinition,
-  type EvaluatedValue,
-  type Meaning,
-  type Place,
-  type PlacedFact,
-  type PlacedMeaning,
-} from './scenario.ts';
+import { placeOf } from './place.ts';
+import type { EvaluatedDefinition, EvaluatedValue, Meaning, Place, PlacedFact, PlacedMeaning } from './scenario.ts';
 
 /** What a name stands for once it has been worked out. A null part could not be had, and that has been said. */
 export type Named =

@@ -11,15 +11,15 @@ import { evaluateClaim, evaluateExpression } from './expressions.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
 import { kindOf, kinds } from './kinds/registry.ts';
 import type { KindAnswer } from './kinds/kind.ts';
-import {
-  placeOf,
-  type EvaluatedDefinition,
-  type EvaluatedFile,
-  type EvaluatedScenario,
-  type EvaluatedValue,
-  type Expectation,
-  type PlacedFact,
-  type PlacedMeaning,
+import { placeOf } from './place.ts';
+import type {
+  EvaluatedDefinition,
+  EvaluatedFile,
+  EvaluatedScenario,
+  EvaluatedValue,
+  Expectation,
+  PlacedFact,
+  PlacedMeaning,
 } from './scenario.ts';
 
 export type { ReadAnswer } from './files.ts';

@@ -7,7 +7,7 @@ import type { GivenProductsFault } from '../core/balance/given-products.ts';
 import type { NoBalance } from '../core/balance/equation.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
-import type { Place } from './scenario.ts';
+import type { Place } from './place.ts';
 
 export type Fact =
   | SyntaxFact

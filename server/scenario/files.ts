@@ -7,7 +7,8 @@ import { parse } from '../../grammar/parse.ts';
 import type { PlacedSection, SyntaxTree, UseStatement } from '../../grammar/tree.ts';
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 import type { Fact } from './facts.ts';
-import { placeOf, type PlacedFact } from './scenario.ts';
+import { placeOf } from './place.ts';
+import type { PlacedFact } from './scenario.ts';
 
 /** What a reader says of an address. `detail` is a plain sentence for the person, without the address. */
 export type ReadAnswer =

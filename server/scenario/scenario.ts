@@ -1,20 +1,14 @@
 // The evaluated scenario: everything that was worked out from one file and the files it uses, as plain data.
 // Views (features, reports, findings) read it and work nothing out themselves. It is immutable and belongs to the
-// texts it was made from. Offsets inside a section are relative to that section; `placeOf` turns them into file offsets.
+// texts it was made from. Offsets inside a section are relative to that section; `placeOf` (place.ts) turns them into file offsets.
 // Invariant: a number that could not be had is absent (or null in a table), never NaN, and a fact says why unless the
 // cause has already been said elsewhere.
 
-import type { PlacedSection, Span, SyntaxTree } from '../../grammar/tree.ts';
+import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Fact } from './facts.ts';
+import type { Place } from './place.ts';
 import type { Working } from './working.ts';
-
-/** A range in one file, in UTF-16 offsets from the file's start. */
-export interface Place {
-  readonly path: string;
-  readonly start: number;
-  readonly end: number;
-}
 
 export interface EvaluatedScenario {
   /** The file asked about first, then the files it uses, in the order they were reached. */
@@ -158,7 +152,4 @@ export type Meaning =
   | { readonly kind: 'quantity'; readonly quantity: Quantity; readonly unit: string }
   | { readonly kind: 'entry'; readonly definitionKind: string; readonly entry: string };
 
-/** The range in the file of a span inside one of its sections. */
-export function placeOf(path: string, placed: PlacedSection, span: Span): Place {
-  return { path, start: placed.start + span.start, end: placed.start + span.end };
-}
+export type { Place } from './place.ts';

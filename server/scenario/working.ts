@@ -2,7 +2,7 @@
 // the constants, what was assumed and where the result is valid. It holds no sentences: wording/ turns the ids into text.
 
 import type { Quantity } from '../core/quantity/quantity.ts';
-import type { Place } from './scenario.ts';
+import type { Place } from './place.ts';
 
 export interface Working {
   readonly method: MethodId;
