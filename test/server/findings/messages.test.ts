@@ -249,8 +249,8 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     'The density of slurry cannot be worked out. Missing: the density of sodium and x.',
   ],
   [
-    { code: 'balance/contradiction', what: 'the heating value of x', first: '44 MJ/kg', second: '12 MJ/kg' },
-    'The heating value of x: 44 MJ/kg and 12 MJ/kg do not agree. Correct one of them.',
+    { code: 'balance/contradiction', what: 'its energy', first: 'formation enthalpy', second: 'lower heating value' },
+    '`formation enthalpy` and `lower heating value` both say its energy. `formation enthalpy` is taken; remove one of the two.',
   ],
   [{ code: 'balance/no-portions', name: 'x' }, '`x` has no portions. Add one a line, for example `30 % mass sodium`.'],
   [

@@ -1,0 +1,52 @@
+// One shipped example a finding code, named for it: each gives that finding and no other, so that every example also
+// guards against false alarms. The messages of all of them are kept in one file, to be read when it changes.
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
+import path from 'node:path';
+import { expect, test } from 'vitest';
+import { allCodes, findingsOf } from '../../../server/findings/registry.ts';
+import type { Finding } from '../../../server/findings/finding.ts';
+import { Lines } from '../../../server/report/positions.ts';
+import { evaluate } from '../../../server/scenario/evaluate.ts';
+
+const FOLDER = 'examples/errors';
+const EXAMPLES = readdirSync(FOLDER).filter((name) => name.endsWith('.stoke'));
+
+/**
+ * What no small file can show: a text beyond the limit, a fault of our own, and two slips that the grammar tells first, as
+ * `syntax/missing`.
+ */
+const WITHOUT_EXAMPLE = ['expect/not-a-claim', 'name/missing-phrase', 'program/failed', 'syntax/too-large'];
+
+function findingsIn(example: string): readonly Finding[] {
+  const scenario = evaluate(path.posix.join(FOLDER, example), (file) =>
+    existsSync(file) ? { text: readFileSync(file, 'utf8') } : { fault: 'missing' },
+  );
+  return findingsOf(scenario);
+}
+
+test('every code has its example', () => {
+  const shown = EXAMPLES.map((name) => name.replace('.stoke', '').replace('-', '/'));
+  expect([...shown, ...WITHOUT_EXAMPLE].sort()).toEqual(allCodes());
+});
+
+test.each(EXAMPLES)('%s gives its finding and no other', (example) => {
+  const codes = new Set(findingsIn(example).map(({ code }) => code));
+  expect([...codes]).toEqual([example.replace('.stoke', '').replace('-', '/')]);
+});
+
+test('what they say', async () => {
+  const told = EXAMPLES.map((example) => {
+    const text = readFileSync(path.join(FOLDER, example), 'utf8');
+    const lines = new Lines(text);
+    return findingsIn(example).map(({ severity, code, message, place, fixes }) => {
+      const { line, column } = lines.position(place.start);
+      const mends = fixes.map(({ title, preferred }) => `  mend${preferred ? ' (preferred)' : ''}: ${title}`);
+      return [
+        `${code} ${severity} ${line}:${column} at \`${text.slice(place.start, place.end)}\``,
+        `  ${message}`,
+        ...mends,
+      ].join('\n');
+    });
+  });
+  await expect(`${told.flat().join('\n\n')}\n`).toMatchFileSnapshot('snapshots/examples.txt');
+});
