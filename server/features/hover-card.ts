@@ -9,9 +9,10 @@ export function hoverCard(place: Place, card: MaterialCard): HoverText {
   return { place, title: cardTitle(card), origin: cardOrigin(card), lines: cardLines(card) };
 }
 
-/** `sodium: Na, crystal`. */
+/** `sodium: Na, solid`. */
 export function cardTitle({ name, formula, phase }: MaterialCard): string {
-  const nature = [formula === name ? null : formula, phase].filter((part) => part !== null && part !== '');
+  const state = phase === null ? null : (PHASES[phase] ?? phase);
+  const nature = [formula === name ? null : formula, state].filter((part) => part !== null && part !== '');
   return nature.length > 0 ? `${name}: ${nature.join(', ')}` : name;
 }
 
@@ -33,3 +34,6 @@ const ORIGINS: Readonly<Record<MaterialCard['origin'], string>> = {
   scenario: 'Defined in this scenario',
   formula: 'Known by its formula alone',
 };
+
+/** The phases of published tables in words. */
+const PHASES: Readonly<Record<string, string>> = { g: 'gas', l: 'liquid', cr: 'solid', aq: 'dissolved in water' };

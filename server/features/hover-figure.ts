@@ -13,13 +13,15 @@ const MOST_SOURCES = 2;
 export function hoverFigure(place: Place, of: string, figure: Figure, tell: TellPlace): HoverText {
   const { method, inputs, assumptions, sources } = explain(figure, tell);
   const lines: HoverLine[] = [
-    ...cut(inputs, MOST_INPUTS, 'input').map(asSentence),
+    ...inputs.slice(0, MOST_INPUTS).map(asSentence),
+    ...more(inputs.length - MOST_INPUTS, 'input'),
     ...assumptions.slice(0, MOST_ASSUMPTIONS).map(asSentence),
-    ...cut(sources, MOST_SOURCES, 'source').map((source) => ({ label: 'Source', text: shortened(source, 160) })),
+    ...sources.slice(0, MOST_SOURCES).map((source) => ({ label: 'Source', text: shortened(source, 160) })),
+    ...more(sources.length - MOST_SOURCES, 'source'),
   ];
   return {
     place,
-    title: `${figureText(figure)}: ${figure.label}${of === '' ? '' : `, ${of}`}`,
+    title: `${figureText(figure)}: ${figure.label}${of === '' ? '' : ` (${of})`}`,
     origin: method,
     lines,
   };
@@ -29,7 +31,6 @@ function asSentence(text: string): HoverLine {
   return { sentence: shortened(text) };
 }
 
-function cut(items: readonly string[], most: number, noun: string): readonly string[] {
-  if (items.length <= most) return items;
-  return [...items.slice(0, most), `and ${counted(items.length - most, `more ${noun}`)}`];
+function more(count: number, noun: string): HoverLine[] {
+  return count > 0 ? [{ sentence: `and ${counted(count, `more ${noun}`)}` }] : [];
 }

@@ -1,23 +1,36 @@
 // Tells a number: the same quantity in the units the trade uses beside the one written, and for a name given by `let` its
-// value too. Converts by core/quantity and rounds by wording/; works nothing out. Invariant: the value first shown is in
-// the unit that was written.
+// value too. Reads and converts by core/quantity and rounds by wording/; works nothing out. Invariant: the value first
+// shown is in the unit that was written.
+import type { Quantity as QuantityNode } from '../../grammar/tree.ts';
 import { siblingUnits } from '../core/quantity/convert.ts';
-import type { Quantity } from '../core/quantity/quantity.ts';
+import { isDimensionless } from '../core/quantity/dimension.ts';
+import { isFault, quantityFrom, type Quantity } from '../core/quantity/quantity.ts';
+import { readUnit, unitOne } from '../core/quantity/read-unit.ts';
 import type { EvaluatedValue, Place } from '../scenario/scenario.ts';
-import { formatNumber } from '../wording/numbers.ts';
-import { dimensionPhrase, quantityText, handyUnit } from '../wording/quantities.ts';
+import { formatNumber, SIGNIFICANT_DIGITS } from '../wording/numbers.ts';
+import { dimensionPhrase, handyUnit, quantityText } from '../wording/quantities.ts';
 import { unitForPeople, withUnit } from '../wording/units.ts';
 import { capitalised } from '../wording/words.ts';
 import type { HoverLine, HoverText } from './hover-text.ts';
 
+export interface ShownQuantity {
+  readonly quantity: Quantity;
+  /** The unit it is written in. */
+  readonly unit: string;
+}
+
+/** Shares above this are not better known in parts per million. */
+const SMALL_SHARE = 0.01;
+
 /** null for a plain number, of which nothing more is to be said than stands there. */
-export function hoverQuantity(place: Place, quantity: Quantity, unit: string): HoverText | null {
-  if (unit === '1') return null;
+export function hoverQuantity(place: Place, shown: ShownQuantity): HoverText | null {
+  const lines = siblingLines(shown);
+  if (isDimensionless(shown.quantity.dimension) && lines.length === 0) return null;
   return {
     place,
-    title: quantityText(quantity, unit),
-    origin: capitalised(dimensionPhrase(quantity)),
-    lines: siblingLines(quantity, unit),
+    title: quantityText(shown.quantity, shown.unit),
+    origin: capitalised(dimensionPhrase(shown.quantity)),
+    lines,
   };
 }
 
@@ -28,14 +41,30 @@ export function hoverValue(place: Place, { name, quantity }: EvaluatedValue): Ho
     place,
     title: `${quantityText(quantity, unit)}: ${name}`,
     origin: capitalised(dimensionPhrase(quantity)),
-    lines: siblingLines(quantity, unit),
+    lines: siblingLines({ quantity, unit }),
   };
 }
 
 /** The quantity in further units, one line each. */
-export function siblingLines(quantity: Quantity, unit: string): HoverLine[] {
-  if (unit === '1') return []; // 12 is not better known as 1200 %
+export function siblingLines({ quantity, unit }: ShownQuantity): HoverLine[] {
+  if (isDimensionless(quantity.dimension) && Math.abs(quantity.value) >= SMALL_SHARE) return [];
+  // One more digit for a temperature, so that 20 °C is 293.15 K.
+  const digits = quantity.kind === 'temperature' ? SIGNIFICANT_DIGITS + 1 : SIGNIFICANT_DIGITS;
   return siblingUnits(quantity, unit).map((sibling) => ({
-    sentence: `= ${withUnit(formatNumber(sibling.value), unitForPeople(sibling.unit))}`,
+    sentence: `= ${withUnit(formatNumber(sibling.value, 'people', digits), unitForPeople(sibling.unit))}`,
   }));
+}
+
+/** A number as it is written, where the evaluation has no meaning for it; null when its unit is at fault. */
+export function quantityOfLiteral({ number, unit, uncertainty }: QuantityNode): ShownQuantity | null {
+  const reading = unit ? readUnit(unit.tokens) : ({ ok: true, unit: unitOne } as const);
+  const step = uncertainty?.unit && readUnit(uncertainty.unit.tokens);
+  if (!reading.ok || step?.ok === false) return null;
+  const written = uncertainty && {
+    number: uncertainty.number.value,
+    ...(step ? { unit: step.unit } : {}),
+    input: 'the number pointed at',
+  };
+  const quantity = quantityFrom(number.value, reading.unit, written);
+  return isFault(quantity) ? null : { quantity, unit: reading.unit.text };
 }

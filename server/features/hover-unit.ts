@@ -1,24 +1,23 @@
 // Tells a unit word: its English name, its exact definition and who defined it, then the number it stands behind in other
 // units. The unit table in core/quantity knows all of it.
 import { unitCard } from '../core/quantity/read-unit.ts';
-import type { PlacedMeaning } from '../scenario/scenario.ts';
+import type { Place } from '../scenario/scenario.ts';
 import { quantityText } from '../wording/quantities.ts';
-import { siblingLines } from './hover-quantity.ts';
+import { siblingLines, type ShownQuantity } from './hover-quantity.ts';
 import type { HoverText } from './hover-text.ts';
-import type { UnitAt } from './unit-at.ts';
 
-export function hoverUnit({ place, word }: UnitAt, around: PlacedMeaning | null): HoverText | null {
+/** null for a word that is no unit. */
+export function hoverUnit(place: Place, word: string, behind: ShownQuantity | null): HoverText | null {
   const card = unitCard(word);
   if (!card) return null;
-  const written = around?.meaning.kind === 'quantity' ? around.meaning : null;
-  const siblings = written ? siblingLines(written.quantity, written.unit) : [];
+  const siblings = behind ? siblingLines(behind) : [];
   return {
     place,
     title: `${card.symbol}: ${card.name}`,
     origin: card.definition,
     lines: [
       { label: 'Source', text: card.source },
-      ...(written && siblings.length > 0 ? [{ sentence: quantityText(written.quantity, written.unit) }] : []),
+      ...(behind && siblings.length > 0 ? [{ sentence: quantityText(behind.quantity, behind.unit) }] : []),
       ...siblings,
     ],
   };

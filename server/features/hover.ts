@@ -3,6 +3,7 @@
 // wrong is never said here: the editor shows the findings above the hover. Works nothing out.
 // Invariant: the answer is a pure function of the scenario and the offset.
 import type { Line } from '../../grammar/tree.ts';
+import { placeOf } from '../scenario/place.ts';
 import type {
   EvaluatedDefinition,
   EvaluatedFile,
@@ -11,18 +12,18 @@ import type {
   Place,
   PlacedMeaning,
 } from '../scenario/scenario.ts';
-import { placeOf } from '../scenario/scenario.ts';
 import { hoverCard } from './hover-card.ts';
 import { hoverDefinition } from './hover-definition.ts';
 import { hoverEntry, hoverKind } from './hover-entry.ts';
 import { hoverEquation } from './hover-equation.ts';
+import { hoverExpectation } from './hover-expectation.ts';
 import { hoverFigure } from './hover-figure.ts';
 import { hoverPortion } from './hover-portion.ts';
-import { hoverQuantity, hoverValue } from './hover-quantity.ts';
+import { hoverQuantity, hoverValue, quantityOfLiteral } from './hover-quantity.ts';
 import type { HoverText } from './hover-text.ts';
 import { hoverUnit } from './hover-unit.ts';
+import { literalAt } from './literal-at.ts';
 import { tellPlace } from './tell-place.ts';
-import { unitAt } from './unit-at.ts';
 
 /** What to show at an offset of one file of the scenario; null where there is nothing to tell. */
 export function hover(scenario: EvaluatedScenario, path: string, offset: number): HoverText | null {
@@ -32,12 +33,20 @@ export function hover(scenario: EvaluatedScenario, path: string, offset: number)
   const line = lineAt(file, offset);
   // In a portion the share is the answer, whether a person points at the amount or at the substance.
   if (line?.result?.kind === 'portion') return hoverPortion(line.place, line.definition, line.result);
-  const unit = unitAt(file, offset);
-  if (unit) return hoverUnit(unit, meaning);
+  const literal = literalAt(file, offset);
+  // The evaluation knows more of a number than stands there (`K` as a temperature), but only where it reads it.
+  const written = literal?.quantity ? quantityOfLiteral(literal.quantity.node) : null;
+  if (literal?.unit) {
+    const known = meaning?.meaning.kind === 'quantity' ? meaning.meaning : written;
+    return hoverUnit(literal.unit.place, literal.unit.word, known);
+  }
   if (meaning) return hoverMeaning(meaning, scenario, file);
+  if (literal?.quantity && written) return hoverQuantity(literal.quantity.place, written);
   if (line?.line.kind === 'equation') return hoverEquation(line.place, line.definition, line.result);
   const definition = file.definitions.find(({ header }) => holds(header, offset));
-  return definition ? hoverHeader(file, definition, offset) : null;
+  if (definition) return hoverHeader(file, definition, offset);
+  const expectation = file.expectations.find(({ place }) => holds(place, offset));
+  return expectation ? hoverExpectation(expectation.place, expectation) : null;
 }
 
 function hoverMeaning(
@@ -55,7 +64,7 @@ function hoverMeaning(
     case 'figure':
       return hoverFigure(place, meaning.of, meaning.figure, tellPlace(scenario, file.path));
     case 'quantity':
-      return hoverQuantity(place, meaning.quantity, meaning.unit);
+      return hoverQuantity(place, meaning);
     case 'entry':
       return hoverEntry(place, meaning.definitionKind, meaning.entry);
   }

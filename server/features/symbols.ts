@@ -1,8 +1,8 @@
 // The outline of a file: its title, definitions, values and expectations in the order of the text, each with the one
 // number a person looks for first. Shows what the evaluation found and works nothing out. Invariants: a symbol's name is
 // never empty (an unnamed definition shows its kind), and its name's place lies inside its whole place.
+import { placeOf } from '../scenario/place.ts';
 import type { EvaluatedFile, EvaluatedScenario, Place } from '../scenario/scenario.ts';
-import { placeOf } from '../scenario/scenario.ts';
 import { figureText, quantityText } from '../wording/quantities.ts';
 import { shortened } from './hover-text.ts';
 import { leadingFigures } from './leading-figures.ts';

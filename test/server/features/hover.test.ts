@@ -8,7 +8,7 @@ describe('a number', () => {
   it.each<[string, readonly (string | RegExp)[]]>([
     ['let d = $038 nmi\n', ['38 nmi', /^A length/, /^= 70[.]38 km$/]],
     ['let v = 13$0 kn\n', ['13 kn', /^A speed/, /^= 6[.]688 m\/s$/]],
-    ['let t = $025 degC\n', ['25 °C', /^A temperature/, /^= 298[.]1 K$|^= 298[.]2 K$|^= 298[.]15 K$/, /^= 77 °F$/]],
+    ['let t = $025 degC\n', ['25 °C', /^A temperature/, '= 298.15 K', /^= 77 °F$/]],
     ['let p = $02 bar\n', ['2 bar', /^A pressure/, /^= 200 kPa$/]],
     ['let q = $044.0 ± 0.2 MJ/kg\n', [/^\(44[.]00 ± 0[.]20\) MJ\/kg$/, /^A /, /^= 12[.]22 kWh\/kg$/]],
     ['let m = -$020 degC\n', ['−20 °C', /^A temperature/]],
@@ -16,8 +16,17 @@ describe('a number', () => {
     checkHover(marked, lines);
   });
 
-  it('without a unit has nothing more to tell', () => {
-    checkHover('let n = $012\n', null);
+  it.each(['let n = $012\n', 'let n = $084.9 %\n'])('as in %j has nothing more to tell', (marked) => {
+    checkHover(marked, null);
+  });
+
+  it('that is a small share is told in parts per million', () => {
+    checkHover('let n = $00.05 %\n', ['0.05 %', /^A plain number/, '= 500 ppm']);
+  });
+
+  it('in a definition that is not worked out yet is told all the same', () => {
+    checkHover('engine main {\n  maximum continuous rating: $06.4 MW\n}\n', ['6.4 MW', /^A power/, '= 6400 kW']);
+    checkHover('engine main {\n  heat loss: 6.4 $0MW\n}\n', ['MW: megawatt', '6.4 MW', '= 6400 kW']);
   });
 
   it('is what the hover is about, with its unit', () => {
@@ -142,7 +151,7 @@ describe('a reference', () => {
   it('tells the value, how it came about, and from what', () => {
     const marked = 'blend fuel {\n  100 % methanol\n}\nlet a = lower heat$0ing value of fuel\n';
     checkHover(marked, [
-      /^19[.]9\d* MJ\/kg: Lower heating value, per kg, fuel$/,
+      /^19[.]9\d* MJ\/kg: Lower heating value, per kg \(fuel\)$/,
       /^Heat set free when 1 kg burns completely/,
       /^Source: /,
     ]);
@@ -150,6 +159,18 @@ describe('a reference', () => {
 
   it('to a substance of the catalogue tells it likewise', () => {
     checkHover('let a = molar $0mass of methanol\n', [/^32[.]04 g\/mol: Molar mass/]);
+  });
+});
+
+describe('an expectation', () => {
+  const claim = (value: string): string => `let far = 38 nmi\n$0expect far > ${value}\n`;
+
+  it('that holds tells the value found', () => {
+    checkHover(claim('20 km'), [/^70[.]38 km found$/, 'The claim holds']);
+  });
+
+  it('that fails tells nothing: the finding does', () => {
+    checkHover(claim('100 km'), null);
   });
 });
 

@@ -1,23 +1,43 @@
-// Finds the unit word at an offset in the syntax tree. Walks only the nodes that hold the offset, so that the cost is the
-// depth of the tree and not its size. Knows no meaning. Invariant: the place found holds the offset.
-import type { Expression, Line, PhraseItem, Span, Statement, UnitToken, UnitWords } from '../../grammar/tree.ts';
+// Finds the number or unit word at an offset in the syntax tree. Walks only the nodes that hold the offset, so that the
+// cost is the depth of the tree and not its size. Knows no meaning. Invariant: what is found holds the offset.
+import type {
+  Expression,
+  Line,
+  LoneUnit,
+  PhraseItem,
+  Quantity,
+  Span,
+  Statement,
+  UnitToken,
+  UnitWords,
+} from '../../grammar/tree.ts';
+import { placeOf } from '../scenario/place.ts';
 import type { EvaluatedFile, Place } from '../scenario/scenario.ts';
-import { placeOf } from '../scenario/scenario.ts';
 
-export interface UnitAt {
-  readonly place: Place;
-  /** As written, without its power. */
-  readonly word: string;
+export interface LiteralAt {
+  /** The number with its unit and uncertainty, where there is a number. */
+  readonly quantity: { readonly place: Place; readonly node: Quantity } | null;
+  /** The unit word under the offset, as written without its power. */
+  readonly unit: { readonly place: Place; readonly word: string } | null;
 }
 
-export function unitAt(file: EvaluatedFile, offset: number): UnitAt | null {
+export function literalAt(file: EvaluatedFile, offset: number): LiteralAt | null {
   const placed = file.tree.sections.find(({ start, end }) => start <= offset && offset < end);
   if (!placed) return null;
-  const token = inStatement(placed.section.statement, offset - placed.start);
-  return token && { place: placeOf(file.path, placed, token.span), word: token.text };
+  const at = offset - placed.start;
+  const found = inStatement(placed.section.statement, at);
+  if (!found) return null;
+  const units = found.kind === 'quantity' ? [found.unit, found.uncertainty?.unit] : [found.unit];
+  const token = units.flatMap((unit) => inUnit(unit, at) ?? [])[0];
+  return {
+    quantity: found.kind === 'quantity' ? { place: placeOf(file.path, placed, found.span), node: found } : null,
+    unit: token ? { place: placeOf(file.path, placed, token.span), word: token.text } : null,
+  };
 }
 
-function inStatement(statement: Statement, at: number): UnitToken | null {
+type Literal = Quantity | LoneUnit;
+
+function inStatement(statement: Statement, at: number): Literal | null {
   switch (statement.kind) {
     case 'let':
       return inExpression(statement.value, at);
@@ -32,7 +52,7 @@ function inStatement(statement: Statement, at: number): UnitToken | null {
   }
 }
 
-function inLine(line: Line, at: number): UnitToken | null {
+function inLine(line: Line, at: number): Literal | null {
   switch (line.kind) {
     case 'entry':
       return first(line.phrases, at, ({ items }) => first(items, at, inItem));
@@ -45,17 +65,16 @@ function inLine(line: Line, at: number): UnitToken | null {
   }
 }
 
-function inItem(item: PhraseItem, at: number): UnitToken | null {
+function inItem(item: PhraseItem, at: number): Literal | null {
   return item.kind === 'connective' ? null : inExpression(item, at);
 }
 
-function inExpression(expression: Expression | undefined, at: number): UnitToken | null {
+function inExpression(expression: Expression | undefined, at: number): Literal | null {
   if (!expression || !holds(expression.span, at)) return null;
   switch (expression.kind) {
     case 'quantity':
-      return inUnit(expression.unit, at) ?? inUnit(expression.uncertainty?.unit, at);
     case 'lone-unit':
-      return inUnit(expression.unit, at);
+      return expression;
     case 'reference':
       return inExpression(expression.at, at);
     case 'call':
@@ -68,11 +87,7 @@ function inExpression(expression: Expression | undefined, at: number): UnitToken
     case 'comparison':
       return inExpression(expression.left, at) ?? inExpression(expression.right, at);
     case 'within':
-      return (
-        inExpression(expression.left, at) ??
-        inExpression(expression.target, at) ??
-        inUnit(expression.tolerance?.unit, at)
-      );
+      return inExpression(expression.left, at) ?? inExpression(expression.target, at);
     case 'word':
     case 'text':
     case 'membership':
@@ -87,8 +102,8 @@ function inUnit(unit: UnitWords | undefined, at: number): UnitToken | null {
 function first<Node extends { readonly span: Span }>(
   nodes: readonly Node[],
   at: number,
-  find: (node: Node, at: number) => UnitToken | null,
-): UnitToken | null {
+  find: (node: Node, at: number) => Literal | null,
+): Literal | null {
   const node = nodes.find(({ span }) => holds(span, at));
   return node ? find(node, at) : null;
 }
