@@ -13,7 +13,9 @@ export interface Span {
 export interface SyntaxTree {
   readonly text: string;
   readonly sections: readonly PlacedSection[];
-  /** More syntax problems were found than are kept (see `MOST_PROBLEMS`). */
+  /** Problems of the file as a whole (too large); their spans are offsets in the file. */
+  readonly fileProblems: readonly Problem[];
+  /** More syntax problems were found than are shown (see `MOST_PROBLEMS` in parse.ts). */
   readonly truncated: boolean;
 }
 
@@ -95,6 +97,8 @@ export interface Definition {
 export interface BrokenStatement {
   readonly kind: 'broken';
   readonly span: Span;
+  /** The name it would have given, so that whoever uses that name can stay silent (`slurry {` without its kind). */
+  readonly name?: Word;
 }
 
 export type Line = Entry | Portion | Equation | Acknowledge | BrokenLine;
@@ -153,6 +157,9 @@ export interface Acknowledge {
 export interface BrokenLine {
   readonly kind: 'broken-line';
   readonly span: Span;
+  /** The words of an entry whose value cannot be read, so that it is not called missing as well. */
+  readonly words?: string;
+  readonly wordsSpan?: Span;
 }
 
 /** One comma-separated part of an entry's value: a flat run of operands and connectives. */
@@ -163,7 +170,10 @@ export interface Phrase {
 
 export type PhraseItem = Connective | Expression;
 
-/** `at`, `on`, `from`, `to`, `between`, `and`, `until`, `within`, `by`, `per`, and `mass mole volume` where they qualify. */
+/**
+ * `at`, `on`, `from`, `to`, `between`, `and`, `until`, `within`, `by`, `per`, `of` and `in` where they are no part of an
+ * operand (`14 % of fuel energy`), and `mass mole volume` behind an amount.
+ */
 export interface Connective {
   readonly kind: 'connective';
   readonly word: string;
@@ -188,7 +198,10 @@ export type Expression =
   | Within
   | LoneUnit;
 
-/** A number with its ± and unit, as written. */
+/**
+ * A number with its ± and unit. In `44.0 ± 0.2 MJ/kg` the unit is the quantity's and the uncertainty has none of its own;
+ * in `44 MJ/kg ± 2 %` each has its own.
+ */
 export interface Quantity {
   readonly kind: 'quantity';
   readonly span: Span;
