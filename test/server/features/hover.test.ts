@@ -1,8 +1,11 @@
 // What is shown where a person points: the answer first, where it comes from, then a few lines. One small scenario a case,
 // with the cursor in it; numbers are checked against hand calculation, the rest against the words a person needs.
+import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
-import { MOST_LINES } from '../../../server/features/hover-text.ts';
-import { checkHover, hoverAt } from '../../support/features.ts';
+import { hover } from '../../../server/features/hover.ts';
+import { asPlainText, MOST_LINES } from '../../../server/features/hover-text.ts';
+import { evaluate } from '../../../server/scenario/evaluate.ts';
+import { checkHover, evaluateFixture, hoverAt } from '../../support/features.ts';
 
 describe('a number', () => {
   it.each<[string, readonly (string | RegExp)[]]>([
@@ -198,6 +201,27 @@ describe('everywhere else', () => {
   );
 });
 
+describe('every example', () => {
+  it.each(['dunlin', 'constructs'])(
+    '%s has hovers that are about what they stand on, and short, at every offset',
+    (name) => {
+      const path = `examples/${name}.stoke`;
+      const scenario = evaluate(path, (used) => ({ text: readFileSync(used, 'utf8') }));
+      const text = scenario.files[0]?.tree.text ?? '';
+      let told = 0;
+      for (let offset = 0; offset < text.length; offset++) {
+        const found = hover(scenario, path, offset);
+        if (!found) continue;
+        told++;
+        expect(found.place.start, `offset ${offset}`).toBeLessThanOrEqual(offset);
+        expect(found.place.end, `offset ${offset}`).toBeGreaterThanOrEqual(offset);
+        expect(asPlainText(found).split('\n').length).toBeLessThanOrEqual(MOST_LINES);
+      }
+      expect(told).toBeGreaterThan(text.length / 10);
+    },
+  );
+});
+
 describe('a hostile or broken text', () => {
   it('has no hover longer than a person reads, and none that throws, at any offset', () => {
     const text = `
@@ -208,10 +232,12 @@ describe('a hostile or broken text', () => {
       substance { phase: ; composition: 84.9 % C, 15.1 % H
       expect lower heating value of '<script>' > 1 MJ/kg ± 
       burn x { fuel: r`;
+    const { scenario, file } = evaluateFixture(text);
     for (let offset = 0; offset <= text.length; offset++) {
-      const found = hoverAt(`${text.slice(0, offset)}$0${text.slice(offset)}`);
-      expect(found?.lines.length ?? 0).toBeLessThanOrEqual(MOST_LINES);
-      for (const line of found?.lines ?? []) expect(line).not.toBe('');
+      const found = hover(scenario, file, offset);
+      const lines = found ? asPlainText(found).split('\n') : [];
+      expect(lines.length).toBeLessThanOrEqual(MOST_LINES);
+      for (const line of lines) expect(line).not.toBe('');
     }
   });
 });

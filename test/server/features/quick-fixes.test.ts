@@ -1,6 +1,7 @@
 // The mends on offer, applied: the text they give, and that the finding they belong to is gone.
-import { describe, it } from 'vitest';
-import { checkFix } from '../../support/features.ts';
+import { readdirSync, readFileSync } from 'node:fs';
+import { describe, expect, it } from 'vitest';
+import { checkFix, evaluateFixture } from '../../support/features.ts';
 
 describe('a preferred fix', () => {
   it('balances an equation', () => {
@@ -21,5 +22,33 @@ describe('a preferred fix', () => {
 
   it('writes the name that was meant', () => {
     checkFix('let dist = 38 nmi\nlet b = 2 * $0dits\n', 'name/unknown', 'let dist = 38 nmi\nlet b = 2 * dist\n');
+  });
+});
+
+const ERRORS = 'examples/errors';
+const fixes = readdirSync(ERRORS)
+  .filter((name) => name.endsWith('.stoke'))
+  .flatMap((name) => {
+    const text = readFileSync(`${ERRORS}/${name}`, 'utf8');
+    const { findings } = evaluateFixture(text);
+    return findings.flatMap(({ code, fixes: offered }) =>
+      offered.map((fix) => [name, fix.title, { text, code, fix }] as const),
+    );
+  });
+
+describe('every fix of the examples of errors', () => {
+  it('is there to be tried', () => {
+    expect(fixes.length).toBeGreaterThan(5);
+  });
+
+  it.each(fixes)('%s: %s, and there is one finding of its kind less', (_, _title, { text, code, fix }) => {
+    const count = (of: string): number =>
+      evaluateFixture(of).findings.filter((finding) => finding.code === code).length;
+    const edits = [...fix.edits].sort((left, right) => right.place.start - left.place.start);
+    const mended = edits.reduce(
+      (all, { place, newText }) => all.slice(0, place.start) + newText + all.slice(place.end),
+      text,
+    );
+    expect(count(mended)).toBeLessThan(count(text));
   });
 });
