@@ -120,7 +120,7 @@ export const unitTable: readonly UnitRow[] = [
   unit({ symbol: 'week', spellings: ['weeks'], name: 'week', definition: '7 d', source: 'ISO 8601' }),
   unit({
     symbol: 'year',
-    spellings: ['years', 'a'],
+    spellings: ['years'],
     name: 'year (of 365.25 days)',
     plural: 'years',
     definition: '365.25 d',
