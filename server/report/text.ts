@@ -118,10 +118,14 @@ function missing({ absent }: EvaluatedDefinition, width: number): string[] {
     const reason = listed(sharingHeads(reasons));
     figuresByReason.set(reason, [...(figuresByReason.get(reason) ?? []), id.replaceAll('-', ' ')]);
   }
-  return [...figuresByReason].flatMap(([reason, names]) =>
-    wrapped(`Without ${reason} there is no ${listed(names, 'or')}.`, width - 2)
-      .split('\n')
-      .map((line) => `  ${line}`),
+  return (
+    [...figuresByReason]
+      // That a mixture without a molar mass has no molar mass goes without saying.
+      .filter(([reason, names]) => names.length > 1 || !reason.startsWith(`the ${names[0] ?? ''} of `))
+      .flatMap(([reason, names]) =>
+        wrapped(`Without ${reason} there is no ${listed(names, 'or')}.`, width - 2).split('\n'),
+      )
+      .map((line) => `  ${line}`)
   );
 }
 

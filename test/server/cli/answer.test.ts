@@ -74,6 +74,20 @@ describe('the examples', () => {
     expect(claim?.found).toBeCloseTo(35.5, 0);
   });
 
+  test('ids and units of schema 1 stay: what is in this list is never changed, only added to', async () => {
+    const ran = await runIn(EXAMPLES, ['evaluate', 'dunlin.stoke', 'constructs.stoke', '--format', 'json']);
+    const promised = new Set<string>();
+    for (const { definitions } of evaluateContract.parse(JSON.parse(ran.out)).files) {
+      for (const { kind, figures, tables } of definitions) {
+        for (const { id, unit } of figures) promised.add(`${kind} figure ${id}: ${unit}`);
+        for (const { id, columns } of tables) {
+          for (const column of columns) promised.add(`${kind} table ${id}, ${column.id}: ${column.unit ?? 'text'}`);
+        }
+      }
+    }
+    await expect(`${[...promised].sort().join('\n')}\n`).toMatchFileSnapshot('snapshots/contract.txt');
+  });
+
   test('dunlin: as a person reads it', async () => {
     const ran = await runIn(EXAMPLES, ['evaluate', 'dunlin.stoke']);
     await expect(ran.out).toMatchFileSnapshot('snapshots/dunlin.txt');

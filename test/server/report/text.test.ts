@@ -65,6 +65,7 @@ function trial(more: Parameters<typeof file>[1] = {}): EvaluatedFile {
         absent: new Map([
           ['molar-mass', ['the molar mass of gas_oil']],
           ['formation-enthalpy', ['the molar mass of gas_oil']],
+          ['density', ['the density of sodium']],
           ['water-made', null],
         ]),
       },
