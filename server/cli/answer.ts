@@ -12,7 +12,7 @@ import { textReport } from '../report/text.ts';
 import { evaluate } from '../scenario/evaluate.ts';
 import { ExitCode } from './exit-codes.ts';
 import type { Io } from './io.ts';
-import { readerFor, readNamedFile, STANDARD_INPUT } from './scenario-files.ts';
+import { eachOnce, readerFor, readNamedFile, STANDARD_INPUT } from './scenario-files.ts';
 import { sayProgramFault } from './program-fault.ts';
 
 export type Format = 'text' | 'json' | 'csv';
@@ -28,7 +28,7 @@ export function answerFiles(names: readonly string[], extent: Extent, options: A
   const answers: Answer[] = [];
   let unreadable = false;
   let faulty = false;
-  for (const name of new Set(names)) {
+  for (const name of eachOnce(names, io)) {
     const named = readNamedFile(name, io);
     if ('fault' in named) {
       unreadable = true;

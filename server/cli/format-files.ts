@@ -9,14 +9,14 @@ import { isUnitWord } from '../core/quantity/read-unit.ts';
 import { counted } from '../wording/words.ts';
 import { ExitCode } from './exit-codes.ts';
 import type { Io } from './io.ts';
-import { readNamedFile, STANDARD_INPUT } from './scenario-files.ts';
+import { eachOnce, readNamedFile, STANDARD_INPUT } from './scenario-files.ts';
 
 /** Formats the named files and says how to exit. */
 export function formatFiles(names: readonly string[], checkOnly: boolean, io: Io): ExitCode {
   let changed = 0;
   let inShape = 0;
   let failed = false;
-  for (const name of new Set(names)) {
+  for (const name of eachOnce(names, io)) {
     const named = readNamedFile(name, io);
     if ('fault' in named) {
       failed = true;

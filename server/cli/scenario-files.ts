@@ -23,6 +23,15 @@ export type NamedFile =
     }
   | { readonly path: string; readonly fault: string };
 
+/** The names without those that name a file again, in another spelling or the same. */
+export function eachOnce(names: readonly string[], io: Io): string[] {
+  const known = new Set<string>();
+  return names.filter((name) => {
+    const key = name === STANDARD_INPUT ? name : path.resolve(io.folder, name);
+    return !known.has(key) && known.add(key);
+  });
+}
+
 /** The text of a file named on the command line, or of standard input; a fault in words when it cannot be had. */
 export function readNamedFile(name: string, io: Io): NamedFile {
   const given = name.replaceAll(path.win32.sep, path.sep === path.win32.sep ? '/' : path.win32.sep);

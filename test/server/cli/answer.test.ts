@@ -151,7 +151,7 @@ describe('files', () => {
   });
 
   test('a file named twice is told once', async () => {
-    const ran = await runIn(folderWith({ 'a.stoke': FUEL }), ['check', 'a.stoke', 'a.stoke', '--format', 'json']);
+    const ran = await runIn(folderWith({ 'a.stoke': FUEL }), ['check', 'a.stoke', './a.stoke', '--format', 'json']);
     expect(checkContract.parse(JSON.parse(ran.out)).files).toHaveLength(1);
   });
 });
@@ -171,6 +171,12 @@ describe('used files', () => {
       'in/c.stoke': FUEL,
     });
     expect(await found(folder, ['in/a.stoke'])).toEqual([]);
+  });
+
+  test('are found the same however the using file is named', async () => {
+    const folder = folderWith({ 'in/a.stoke': 'use "../b.stoke"\n', 'b.stoke': FUEL, 'in/b.stoke': 'rubbish' });
+    expect(await found(folder, ['./in/a.stoke'])).toEqual([]);
+    expect(await found(folder, [path.join(folder, 'in/a.stoke')])).toEqual([]);
   });
 
   test('may lie anywhere in the current folder if it holds the named one', async () => {
