@@ -101,6 +101,13 @@ export function doesNotFit(actual: Token, previous: Token | undefined, place: Pl
   return { code: 'syntax/unexpected', span: spanOf(actual), message: doesNotFitMessage(actual, previous, place) };
 }
 
+/** A line of terms joined by `+` that has no arrow; read as a portion, its first misfit would be told misleadingly. */
+export const arrowMissing = (actual: Token): Problem => ({
+  code: 'syntax/missing',
+  span: spanOf(actual),
+  message: 'This looks like an equation without its arrow. Write `->` between its sides, as in `2 Na + H2 -> 2 NaH`.',
+});
+
 function endsEarlyMessage(last: Token, place: PlaceInWords): string {
   switch (last.tokenType) {
     case t.Comma:

@@ -62,12 +62,15 @@ export const textNode = (token: Token): TextLiteral => ({
 export const isClosed = (token: Token): boolean =>
   token.image.length > 1 && token.image.endsWith(token.tokenType === QuotedName ? "'" : '"');
 
-/** The unit a retagged unit token stands for. */
+/** The unit a retagged unit token stands for; without any unit word for a token that is none. */
 export function unitNode(token: Token): UnitWords {
-  // The payload of a token is untyped in the lexer's library; only retag.ts writes it, and always with a unit's run.
-  const run: UnitRun = token.payload;
-  return run.unit;
+  const payload: unknown = token.payload;
+  return isUnitRun(payload) ? payload.unit : { span: spanOf(token), tokens: [] };
 }
+
+/** A token's payload is untyped in the lexer's library; retag.ts alone writes it, and always with a unit's run. */
+const isUnitRun = (payload: unknown): payload is UnitRun =>
+  typeof payload === 'object' && payload !== null && 'unit' in payload;
 
 /**
  * A name is `lower_snake`. A formula shows two elements and at least one digit or small letter (`NaCl`, `H2O`); plain

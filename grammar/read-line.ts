@@ -2,14 +2,14 @@
 // the parser read them and turns a misfit into one problem. It does not know which entries exist or take what.
 // Invariant: a line gives exactly one node and at most one problem, and never reaches beyond its own tokens.
 import type { RawLine } from './lines.ts';
-import { checkToken, doesNotFit, endsEarly } from './messages.ts';
+import { arrowMissing, checkToken, doesNotFit, endsEarly } from './messages.ts';
 import { spanOf, textNode } from './nodes.ts';
 import { parseEquation, parseExpression, parsePhrases, parsePortion } from './parser.ts';
 import type { Mismatch, Outcome } from './parser.ts';
 import { retag } from './retag.ts';
 import type { Place } from './retag.ts';
 import { sectionProblems } from './section-messages.ts';
-import { Colon, endOf, Slash, Text, WordToken } from './tokens.ts';
+import { Colon, endOf, OpenBracket, Plus, Slash, Text, WordToken } from './tokens.ts';
 import type { Token } from './tokens.ts';
 import type { Acknowledge, BrokenLine, Entry, Expression, Line, Problem, Span } from './tree.ts';
 import type { IsUnit } from './unit-run.ts';
@@ -110,6 +110,8 @@ function read<Node>(
 }
 
 function mismatchProblem({ actual, previous }: Mismatch, place: Place, part: LinePart): Problem {
+  const plus = place === 'portion' ? part.tokens.find((token) => token.tokenType === Plus) : undefined;
+  if (plus !== undefined && part.tokens[0]?.tokenType !== OpenBracket) return arrowMissing(plus);
   if (actual !== undefined) return doesNotFit(actual, previous, place);
   return endsEarly(previous, place, part);
 }
