@@ -15,7 +15,6 @@ import { balanceShares } from './balance-shares.ts';
 import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
 import { expectFailed } from './expect-failed.ts';
-import { expectNotAClaim } from './expect-not-a-claim.ts';
 import type { Finding } from './finding.ts';
 import { kindNotEvaluated } from './kind-not-evaluated.ts';
 import { nameAcknowledged } from './name-acknowledged.ts';
@@ -25,7 +24,6 @@ import { nameDuplicate } from './name-duplicate.ts';
 import { nameLikeCatalogue } from './name-like-catalogue.ts';
 import { nameMissingEntry } from './name-missing-entry.ts';
 import { nameMissingFile } from './name-missing-file.ts';
-import { nameMissingPhrase } from './name-missing-phrase.ts';
 import { nameRepeatedEntry } from './name-repeated-entry.ts';
 import { nameReserved } from './name-reserved.ts';
 import { nameUnexpectedLine } from './name-unexpected-line.ts';
@@ -92,7 +90,6 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'name/repeated-entry': nameRepeatedEntry,
   'name/missing-entry': nameMissingEntry,
   'name/unknown-phrase': nameUnknownPhrase,
-  'name/missing-phrase': nameMissingPhrase,
   'name/arguments': nameArguments,
   'name/unexpected-line': nameUnexpectedLine,
   'name/wrong-kind': nameWrongKind,
@@ -121,7 +118,6 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/share': rangeShare,
   'range/positive': rangePositive,
   'expect/failed': expectFailed,
-  'expect/not-a-claim': expectNotAClaim,
   'kind/not-evaluated': kindNotEvaluated,
   'program/failed': programFailed,
 };

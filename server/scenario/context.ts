@@ -4,7 +4,7 @@
 
 import type { PlacedSection, Span } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
-import { nearestWords } from '../core/substance/suggestion.ts';
+import { nearestWords } from '../core/spelling/nearest-words.ts';
 import type { Fact } from './facts.ts';
 import type { Material } from './material.ts';
 import { placeOf } from './place.ts';

@@ -4,7 +4,7 @@
 
 import type { Binary, Call, Comparison, Expression, Membership, Reference, Within, Word } from '../../grammar/tree.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
-import { sameDimension } from '../core/quantity/dimension.ts';
+import { describeDimension, sameDimension } from '../core/quantity/dimension.ts';
 import {
   add,
   compare,
@@ -12,6 +12,7 @@ import {
   isFault,
   multiply,
   negate,
+  quantityFrom,
   quantityOf,
   raise,
   standardUncertainty,
@@ -19,12 +20,13 @@ import {
   type Quantity,
 } from '../core/quantity/quantity.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
+import { fromSi } from '../core/quantity/read-unit.ts';
 import { explainUnitWord } from '../core/quantity/suggest-units.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
 import { functions, reportCount, type Argument } from './functions.ts';
-import { readQuantity, reportFault } from './read-quantity.ts';
+import { readQuantity, readUnitWords, reportFault } from './read-quantity.ts';
 import type { Absent, EvaluatedDefinition, Figure, Table } from './scenario.ts';
 
 /** The value of an expression; null when it could not be had (said, or silent because its cause was said elsewhere). */
@@ -188,7 +190,8 @@ export function evaluateReference(reference: Reference, context: Context): Refer
     if (missing)
       context.report(reference.span, { code: 'balance/no-data', what: context.written(reference.span), missing });
     if (missing !== undefined) return null;
-    const known = owner.figures.map((candidate) => candidate.id.replaceAll('-', ' '));
+    const ids = [...owner.figures.map((candidate) => candidate.id), ...owner.absent.keys()];
+    const known = ids.map((candidate) => candidate.replaceAll('-', ' '));
     const suggestions = near(reference.words, known);
     context.report(reference.wordsSpan, {
       code: 'name/unknown',
@@ -336,7 +339,7 @@ export function evaluateClaim(claim: Comparison | Within, context: Context): Cla
   if (claim.kind === 'comparison') {
     return { holds: holds(claim.operator, found.value, limit.value), found, unit, limit, tolerance: null };
   }
-  const tolerance = readTolerance(claim, context);
+  const tolerance = readTolerance(claim, limit, context);
   if (!tolerance) return null;
   return {
     holds: Math.abs(found.value - limit.value) <= tolerance.value * (1 + nearEnough),
@@ -366,16 +369,24 @@ function holds(operator: Comparison['operator'], found: number, limit: number): 
   }
 }
 
-/** The tolerance of a `within`: read by the same rules as a written uncertainty (relative, points, a difference). */
-function readTolerance(claim: Within, context: Context): Unknowable {
-  const { target, tolerance } = claim;
+/**
+ * The tolerance of a `within`, by the rules of a written uncertainty (relative, percentage points, a difference). Behind a
+ * name or a sum it must bring its own unit; a percentage is then relative.
+ */
+function readTolerance(claim: Within, target: Quantity, context: Context): Unknowable {
+  const { tolerance } = claim;
   if (!tolerance) return null; // the grammar has said that it is missing
-  if (target.kind !== 'quantity') {
-    context.report(claim.span, { code: 'expect/not-a-claim', text: context.written(claim.span) });
-    return null;
-  }
-  const read = readQuantity({ ...target, uncertainty: tolerance }, context);
-  if (!read) return null;
+  const written = claim.target.kind === 'quantity' ? claim.target : null;
+  const unit = written ? readUnitWords(written.unit, context) : knownUnit(describeDimension(target.dimension).si);
+  const own = tolerance.unit && readUnitWords(tolerance.unit, context);
+  if (!unit || own === null) return null;
+  const value = fromSi(target.value, unit);
+  const read = quantityFrom(value, unit, {
+    number: tolerance.number.value,
+    ...(own && { unit: own }),
+    input: 'tolerance',
+  });
+  if (isFault(read)) return reportFault(read, claim.target.span, tolerance.span, context);
   const { dimension } = read;
   const isTemperature = sameDimension(dimension, knownUnit('K').dimension);
   return quantityOf(

@@ -51,7 +51,6 @@ export type Fact =
     }
   /** A phrase of an entry that its table does not take. */
   | { readonly code: 'name/unknown-phrase'; readonly entry: string; readonly text: string; readonly takes: string }
-  | { readonly code: 'name/missing-phrase'; readonly entry: string; readonly takes: string }
   /** A function called with too many or too few values. */
   | { readonly code: 'name/arguments'; readonly name: string; readonly takes: string; readonly given: number }
   /** A line that this kind does not take: a portion in a reaction, an equation in a blend. */
@@ -161,7 +160,6 @@ export type Fact =
       readonly limit: Quantity;
       readonly tolerance: Quantity | null;
     }
-  | { readonly code: 'expect/not-a-claim'; readonly text: string }
   | { readonly code: 'kind/not-evaluated'; readonly kind: string; readonly name: string }
   /** An `acknowledge` line that cannot count: only hazards can be acknowledged, by a known code, with a reason. */
   | { readonly code: 'name/acknowledged'; readonly why: 'not-a-hazard' | 'no-reason'; readonly acknowledged: string }

@@ -94,11 +94,14 @@ export function resolveUse(from: string, path: string): string | null {
   }
   const uri = /^([A-Za-z][\w+.-]*:\/\/[^/]*)(\/.*)$/s.exec(from);
   const [origin, base] = uri ? [uri[1] ?? '', uri[2] ?? ''] : ['', from];
-  const segments = base.split('/').slice(0, -1);
+  const segments = base
+    .replace(/^(\.\/)+/, '')
+    .split('/')
+    .slice(0, -1);
   for (const part of path.split('/')) {
     if (part === '' || part === '.') continue;
     const last = segments.at(-1);
-    if (part === '..' && last !== undefined && last !== '' && last !== '..') segments.pop();
+    if (part === '..' && last !== undefined && !['', '.', '..'].includes(last)) segments.pop();
     else if (part === '..' && last === '')
       return null; // above the root of a file system
     else segments.push(uri && part !== '..' ? encodeURIComponent(part) : part);

@@ -3,6 +3,7 @@
 // It offers at most three and explains those where every guess would be dangerous (a `ton` is three things).
 // Invariant: whatever is offered can be read by read-unit.ts, which a test checks for the whole table.
 
+import { editDistance } from '../spelling/edit-distance.ts';
 import { isUnitWord, listUnitWords } from './unit-words.ts';
 
 /** Near spellings, best first, and a sentence where the word needs one. */
@@ -152,8 +153,8 @@ function bySlip(word: string): string[] {
   const near: { spelling: string; rank: number }[] = [];
   for (const spelling of spellings()) {
     // One-letter units are near everything and help nobody.
-    if (spelling.length < 2 || Math.abs(spelling.length - word.length) > bound) continue;
-    const distance = editDistance(word, spelling);
+    if (spelling.length < 2) continue;
+    const distance = editDistance(word, spelling, bound);
     if (distance > bound) continue;
     near.push({
       spelling,
@@ -165,27 +166,4 @@ function bySlip(word: string): string[] {
 
 function spellings(): string[] {
   return [...listUnitWords().keys()].filter((spelling) => !/[\u00b5\u03bc\u2103\u2109]/.test(spelling));
-}
-
-/** Levenshtein distance, a swap of two neighbours counting as one (optimal string alignment). */
-function editDistance(from: string, to: string): number {
-  let beforeLast: number[] = [];
-  let last = Array.from({ length: to.length + 1 }, (_, column) => column);
-  for (let row = 1; row <= from.length; row += 1) {
-    const current = [row];
-    for (let column = 1; column <= to.length; column += 1) {
-      const same = from[row - 1] === to[column - 1];
-      let best = Math.min(
-        (last[column] ?? 0) + 1,
-        (current[column - 1] ?? 0) + 1,
-        (last[column - 1] ?? 0) + (same ? 0 : 1),
-      );
-      const swapped = from[row - 1] === to[column - 2] && from[row - 2] === to[column - 1];
-      if (swapped) best = Math.min(best, (beforeLast[column - 2] ?? 0) + 1);
-      current.push(best);
-    }
-    beforeLast = last;
-    last = current;
-  }
-  return last[to.length] ?? 0;
 }

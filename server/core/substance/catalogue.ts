@@ -1,19 +1,20 @@
 // Finds substances: by name, by alias, by formula and phase, and suggests the nearest when a word finds nothing.
-// Knows no user's definitions and no energies beyond what the records say.
-// The index is built at the first question, once. Invariant: a word finds at most one substance, the same every time.
+// Knows no user's definitions, no energies beyond what the records say, and no search by part of a name (search.ts).
+// Words are indexed at the first question, formulas at the first formula, and a record is turned into substances when it is
+// first asked for: a run that needs three substances reads three. Invariant: a word finds at most one substance, always the same.
 
 import { compositionKey, parseFormula } from './formula.ts';
 import type { Formula, Phase } from './formula.ts';
 import { substancesOfRecord } from './from-record.ts';
 import type { RecordContext } from './from-record.ts';
-import type { SourceRecord } from './record.ts';
+import type { SourceRecord, SubstanceRecord } from './record.ts';
 import { sourceRecords, substanceRecords } from './records.ts';
 import type { Substance } from './substance.ts';
-import { nearestWords } from './suggestion.ts';
+import { nearestWords } from '../spelling/nearest-words.ts';
 
 /** Every phase of every catalogue substance; within one substance the phase that is stable at 25 °C comes first. */
 export function allSubstances(): readonly Substance[] {
-  return catalogue().substances;
+  return substanceRecords.flatMap(substancesOf);
 }
 
 /**
@@ -23,7 +24,6 @@ export function allSubstances(): readonly Substance[] {
  * Undefined when nothing is found, also when the substance is known but not in that phase.
  */
 export function findSubstance(word: string, phase?: Phase): Substance | undefined {
-  const { kept } = catalogue();
   const key = `${word} ${phase ?? ''}`;
   const known = kept.get(key);
   if (known !== undefined || kept.has(key)) return known;
@@ -39,9 +39,13 @@ function lookUp(word: string, phase: Phase | undefined): Substance | undefined {
   const formula = /[A-Z]|^e-/.test(word) ? parseFormula(word, phase) : undefined;
   const written = formula?.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
   if (written !== undefined) return written;
-  const named = catalogue().byWord.get(wordKey(word));
-  if (named === undefined || phase === undefined) return named;
-  return phasesOfSubstance(named.name).find((substance) => substance.phase === phase);
+  const named = indexOfWords().get(wordKey(word));
+  if (named === undefined) return undefined;
+  const [stable, ...others] = substancesOf(named.record);
+  const wanted = phase ?? named.phase;
+  return wanted === undefined || stable?.phase === wanted
+    ? stable
+    : others.find((substance) => substance.phase === wanted);
 }
 
 /** The first of `substancesOfFormula`: a guess where isomers share a formula. */
@@ -56,8 +60,9 @@ export function findSubstanceOfFormula(formula: Formula): Substance | undefined 
 export function substancesOfFormula(formula: Formula): readonly Substance[] {
   const known = ofFormula.get(formula);
   if (known) return known;
-  const candidates = catalogue().byComposition.get(compositionKey(formula)) ?? [];
+  const candidates = indexOfFormulas().byComposition.get(compositionKey(formula)) ?? [];
   const found = candidates
+    .flatMap(substancesOf)
     .filter((substance) => formula.phase === undefined || substance.phase === formula.phase)
     .map((substance) => ({ substance, rank: substance.formula?.text === formula.text ? 0 : 1 }))
     .sort((a, b) => a.rank - b.rank || Number(b.substance.stableAtReference) - Number(a.substance.stableAtReference))
@@ -68,7 +73,8 @@ export function substancesOfFormula(formula: Formula): readonly Substance[] {
 
 /** The phases the catalogue has of the substance of that exact name, the stable one first. */
 export function phasesOfSubstance(name: string): readonly Substance[] {
-  return catalogue().byName.get(name) ?? [];
+  const named = indexOfWords().get(name);
+  return named?.record.name === name ? substancesOf(named.record) : [];
 }
 
 /**
@@ -76,64 +82,81 @@ export function phasesOfSubstance(name: string): readonly Substance[] {
  * near (`H20` gives `H2O`). Empty when nothing is near.
  */
 export function suggestSubstances(word: string, most = 3): readonly string[] {
-  return nearestWords(word, catalogue().suggestible, most);
+  suggestible ??= [...indexOfWords().keys(), ...indexOfFormulas().texts];
+  return nearestWords(word, suggestible, most);
 }
 
 const mostKept = 2000;
+/** Answers of `findSubstance` so far. */
+const kept = new Map<string, Substance | undefined>();
 const ofFormula = new WeakMap<Formula, readonly Substance[]>();
+const ofRecord = new Map<SubstanceRecord, readonly Substance[]>();
+let suggestible: readonly string[] | undefined;
+let words: ReadonlyMap<string, Named> | undefined;
+let formulas: FormulaIndex | undefined;
+let sources: ReadonlyMap<string, SourceRecord> | undefined;
 
-interface Catalogue {
-  /** Answers of `findSubstance` so far. */
-  readonly kept: Map<string, Substance | undefined>;
-  readonly substances: readonly Substance[];
-  readonly byName: ReadonlyMap<string, readonly Substance[]>;
-  readonly byWord: ReadonlyMap<string, Substance>;
-  readonly byComposition: ReadonlyMap<string, readonly Substance[]>;
-  readonly suggestible: readonly string[];
+/** What a word names: a record, and a phase of it where the word is that phase's own (`steam`). */
+interface Named {
+  readonly record: SubstanceRecord;
+  readonly phase?: Phase;
 }
 
-let built: Catalogue | undefined;
-
-function catalogue(): Catalogue {
-  built ??= buildCatalogue();
-  return built;
+interface FormulaIndex {
+  readonly byComposition: ReadonlyMap<string, readonly SubstanceRecord[]>;
+  /** Canonical texts, each once. */
+  readonly texts: ReadonlySet<string>;
 }
 
-function buildCatalogue(): Catalogue {
-  const sources = new Map(sourceRecords.map((source) => [source.id, source]));
-  const byName = new Map<string, readonly Substance[]>();
-  const byComposition = new Map<string, Substance[]>();
-  const byWord = new Map<string, Substance>();
-  const context: RecordContext = {
-    sourceOf: (id) => sources.get(id) ?? unknownSource(id),
-    gasOf: (formulaText) => {
-      const formula = parseFormula(formulaText, 'g');
-      const found = formula.kind === 'formula' ? byComposition.get(compositionKey(formula)) : undefined;
-      return found?.find((substance) => substance.phase === 'g');
-    },
-  };
-  // Mixtures are made of other records, so they are read last.
-  const ordered = [...substanceRecords].sort(
-    (a, b) => Number(a.mixtureByMole !== undefined) - Number(b.mixtureByMole !== undefined),
+function substancesOf(record: SubstanceRecord): readonly Substance[] {
+  const known = ofRecord.get(record);
+  if (known !== undefined) return known;
+  const substances = substancesOfRecord(record, context);
+  ofRecord.set(record, substances);
+  return substances;
+}
+
+function indexOfWords(): ReadonlyMap<string, Named> {
+  words ??= new Map(
+    substanceRecords.flatMap((record) => [
+      ...record.phases.flatMap(({ phase, aliases = [] }) =>
+        aliases.map((alias) => [wordKey(alias), { record, phase }] as const),
+      ),
+      ...[record.name, ...(record.aliases ?? [])].map((word) => [wordKey(word), { record }] as const),
+    ]),
   );
-  for (const record of ordered) {
-    const substances = substancesOfRecord(record, context);
-    byName.set(record.name, substances);
-    const [stable] = substances;
-    for (const word of [record.name, ...(record.aliases ?? [])]) if (stable) byWord.set(wordKey(word), stable);
-    for (const substance of substances) {
-      for (const alias of substance.aliases) if (!byWord.has(wordKey(alias))) byWord.set(wordKey(alias), substance);
-      if (substance.formula === undefined) continue;
-      const key = compositionKey(substance.formula);
-      const sameComposition = byComposition.get(key);
-      if (sameComposition === undefined) byComposition.set(key, [substance]);
-      else sameComposition.push(substance);
-    }
-  }
-  const substances = substanceRecords.flatMap((record) => byName.get(record.name) ?? []);
-  const formulaTexts = new Set(substances.flatMap((substance) => substance.formula?.text ?? []));
-  return { kept: new Map(), substances, byName, byWord, byComposition, suggestible: [...byWord.keys(), ...formulaTexts] };
+  return words;
 }
+
+function indexOfFormulas(): FormulaIndex {
+  if (formulas !== undefined) return formulas;
+  const byComposition = new Map<string, SubstanceRecord[]>();
+  const texts = new Set<string>();
+  for (const record of substanceRecords) {
+    if (record.formula === undefined) continue;
+    const formula = parseFormula(record.formula);
+    if (formula.kind === 'fault') continue;
+    texts.add(formula.text);
+    const key = compositionKey(formula);
+    const alike = byComposition.get(key);
+    if (alike === undefined) byComposition.set(key, [record]);
+    else alike.push(record);
+  }
+  formulas = { byComposition, texts };
+  return formulas;
+}
+
+/** Mixtures are made of other records, which are looked up by formula; a mixture has none, so this ends. */
+const context: RecordContext = {
+  sourceOf: (id) => {
+    sources ??= new Map(sourceRecords.map((source) => [source.id, source]));
+    return sources.get(id) ?? unknownSource(id);
+  },
+  gasOf: (formulaText) => {
+    const formula = parseFormula(formulaText, 'g');
+    return formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
+  },
+};
 
 /** Names are compared in lower case with `_` between words, so that a quoted `sodium oleate` meets `sodium_oleate`. */
 function wordKey(word: string): string {

@@ -129,10 +129,6 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     '`stored` cannot be read with `red`. It takes a temperature and a pressure.',
   ],
   [
-    { code: 'name/missing-phrase', entry: 'density', takes: 'a density' },
-    '`density` is not complete. It takes a density.',
-  ],
-  [
     { code: 'name/arguments', name: 'min', takes: 'two values or more', given: 1 },
     '`min` is given 1 value. It takes two values or more.',
   ],
@@ -277,10 +273,6 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   [
     { code: 'balance/products', fault: { kind: 'fault', reason: 'element-without-product', elements: ['Na', 'S'] } },
     'No product under `products` holds the Na and S of the fuel. Add one that does.',
-  ],
-  [
-    { code: 'expect/not-a-claim', text: 'density of x' },
-    '`density of x` is not a claim. Compare it with something: `… > 33 MJ/kg`, or `… within 33 MJ/kg ± 1 MJ/kg`.',
   ],
   [
     {

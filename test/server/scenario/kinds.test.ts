@@ -474,10 +474,21 @@ describe('expect', () => {
     checkFacts(`
       expect 3 kg
       #      ^^^^ syntax/missing
-      let limit = 3 kg
-      expect 3 kg within limit ± 1 kg
-      #      ^^^^^^^^^^^^^^^^^^^^^^^^ expect/not-a-claim
     `);
+  });
+
+  test('within a name, a sum, a temperature', () => {
+    const scenario = checkFacts(`
+      let limit = 3 kg
+      expect 3.5 kg within limit ± 1 kg
+      expect 3.5 kg within limit ± 10 %
+      #      ^^^^^^^^^^^^^^^^^^^^^^^^^^ expect/failed
+      expect 3.2 kg within 2 kg + 1 kg ± 0.3 kg
+      expect 25 degC within 20 degC ± 5 K
+      expect 3 kg within limit ± 2 m
+      #                  ^^^^^^^^^^^ unit/uncertainty
+    `);
+    expect(scenario.files[0]?.expectations.map(({ holds }) => holds)).toEqual([true, false, true, true, null]);
   });
 
   test('figures and rows by words', () => {

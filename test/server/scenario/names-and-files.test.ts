@@ -114,6 +114,8 @@ describe('use', () => {
     expect(resolveUse('a/b.stoke', 'c.stoke')).toBe('a/c.stoke');
     expect(resolveUse('a/b.stoke', '../c.stoke')).toBe('c.stoke');
     expect(resolveUse('b.stoke', '../c.stoke')).toBe('../c.stoke');
+    expect(resolveUse('./b.stoke', '../c.stoke')).toBe('../c.stoke');
+    expect(resolveUse('./a/b.stoke', '../c.stoke')).toBe('c.stoke');
     expect(resolveUse('file:///w/b.stoke', 'my house/c.stoke')).toBe('file:///w/my%20house/c.stoke');
     expect(resolveUse('file:///b.stoke', '../c.stoke')).toBeNull();
     expect(resolveUse('b.stoke', 'a\\c.stoke')).toBeNull();

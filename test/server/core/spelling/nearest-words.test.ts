@@ -1,7 +1,7 @@
 // Nearest words: order, bound and look-alikes.
 
 import { expect, test } from 'vitest';
-import { nearestWords } from '../../../../server/core/substance/suggestion.ts';
+import { nearestWords } from '../../../../server/core/spelling/nearest-words.ts';
 
 const words = ['main', 'mains', 'maine', 'auxiliary', 'slurry', 'H2O', 'CO2'];
 
