@@ -37,6 +37,12 @@ export const problems = {
     message: 'A minus between two values needs a space on both sides: `a - b`.',
     fix: { title: 'Put spaces around the minus', span: spanOf(minus), newText: ' - ' },
   }),
+  hyphenatedName: (word: Token): Problem => ({
+    code: 'syntax/unexpected',
+    span: spanOf(word),
+    message: `\`${shorten(word.image)}\` is no name. A minus needs a space on both sides; a name with a hyphen needs quotes.`,
+    fix: { title: 'Put spaces around the minus', span: spanOf(word), newText: word.image.replaceAll('-', ' - ') },
+  }),
 };
 
 /** What is wrong with a number, looking at the token before it; undefined when it can be read. */

@@ -4,6 +4,7 @@
 // It does not know entries or what a name means. Invariant: the result covers the same text in the same order.
 // Time is linear in the line: each look ahead is remembered or bounded.
 import { checkNumber, checkToken, problems } from './messages.ts';
+import { wordNode } from './nodes.ts';
 import {
   Basis,
   CallName,
@@ -162,8 +163,30 @@ class Retagger {
     if (slip !== undefined) return this.fail(slip);
     this.push(token, { operand: true, amount: true });
     if (this.place === 'equation') return;
-    const run = readUnit(this.tokens, this.index + 1, this.unitLimit, this.isUnit);
-    if (run !== undefined) this.pushUnit(run, Unit, this.index + 1);
+    const from = this.index + 1;
+    const run = readUnit(this.tokens, from, this.unitLimit, this.isUnit) ?? this.readUnknownUnit(from);
+    if (run !== undefined) this.pushUnit(run, Unit, from);
+  }
+
+  /**
+   * In an expression nothing but a unit can follow a number, so a plain word there is a misspelt unit (`5 knots`, `70 F`)
+   * for the reader of units to name. Not so a name with `_` or a formula: there an operator is missing.
+   */
+  private readUnknownUnit(from: number): UnitRun | undefined {
+    const word = this.tokens[from];
+    if ((this.place !== 'expression' && this.place !== 'claim') || word?.tokenType !== WordToken) return undefined;
+    const next = this.tokens[from + 1];
+    const isFollowed = next?.tokenType === WordToken || next?.tokenType === OpenBracket;
+    if (isFollowed || isReservedWord(word.image) || wordNode(word).form === 'formula') return undefined;
+    if (/[_-]/.test(word.image)) return undefined;
+    const { image } = word;
+    const base = image.replace(/(?:\d+|\u207b?[\u2070\u00b9\u00b2\u00b3\u2074-\u2079]+)$/, '');
+    return readUnit(
+      this.tokens,
+      from,
+      this.tokens.length,
+      (part) => part === image || part === base || this.isUnit(part),
+    );
   }
 
   private takeWord(token: Token): void {
@@ -173,12 +196,14 @@ class Retagger {
       return this.push(token, { operand: true });
     }
     if (isReservedWord(word)) return this.takeReserved(token);
+    const isListedWordAllowed = this.place === 'value' && this.openBrackets.length === 0;
     const next = this.tokens[this.index + 1];
     if (next?.tokenType === OpenBracket && next.startOffset === endOf(token)) {
       retype(token, CallName);
       return this.push(token, {});
     }
     if (this.state === 'none' && this.takeReferenceWords()) return;
+    if (word.includes('-') && !isListedWordAllowed) return this.fail(problems.hyphenatedName(token));
     const startsBasis = this.afterAmount || this.result.at(-1)?.tokenType === MembershipBy;
     if (startsBasis && asBasisWord(word) !== undefined) {
       retype(token, Basis);

@@ -25,7 +25,14 @@ const expressions: readonly (readonly [string, string])[] = [
   ['5 µm', '5[µm]'],
   ['5\u00a0kg', '5[kg]'],
   ['9 W/(m K)^2', '9[W/(m*K)^2]'],
-  ['12 cows', ''],
+  // A word that is no unit is kept as one where nothing else can be meant, for the reader of units to name.
+  ['12 knots', '12[knots]'],
+  ['12 knots/h', '12[knots/h]'],
+  ['70 F', '70[F]'],
+  ['2 soda_mass', ''],
+  ['2 NaCl', ''],
+  ['2 big cows', ''],
+  ['2 min(3, 4)', ''],
   // What is no unit is left to the expression.
   ['6 kW * 2 h', '{6[kW] * 2[h]}'],
   ['6 kW / (2 h)', '{6[kW] / (2[h])}'],

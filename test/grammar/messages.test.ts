@@ -71,6 +71,16 @@ let z = (a)-3
 //         ^ syntax/unexpected: A minus between two values`,
     ],
     [
+      'names with a hyphen',
+      `
+let x = a-b
+//      ^^^ syntax/unexpected: \`a-b\` is no name. A minus needs a space on both sides
+blend a {
+  limit: 3 * (a-b), ends as-product
+//            ^^^ syntax/unexpected: \`a-b\` is no name
+}`,
+    ],
+    [
       'a missing closing brace',
       `
 blend a {
