@@ -78,8 +78,7 @@ const isUnitRun = (payload: unknown): payload is UnitRun =>
  */
 function wordForm(word: string): 'name' | 'formula' | 'open' {
   if (/^[a-z][a-z0-9_]*$/.test(word)) return 'name';
-  const count = '(?:\\d+|[\\u2080-\\u2089]+)?';
-  const isFormula = new RegExp(`^(?:[A-Z][a-z]?${count}){2,}$`).test(word) && /[a-z\d\u2080-\u2089]/.test(word);
+  const isFormula = /^(?:[A-Z][a-z]?(?:\d+|[\u2080-\u2089]+)?){2,}$/.test(word) && /[a-z\d\u2080-\u2089]/.test(word);
   return isFormula ? 'formula' : 'open';
 }
 

@@ -349,8 +349,8 @@ class Retagger {
     const first = this.tokens[from];
     const last = this.tokens[run.next - 1];
     if (first === undefined || last === undefined) return;
-    const token: Token = { ...first, image: first.image, payload: run };
-    this.push(retype(token, type), { operand: true, amount: type === Unit });
+    first.payload = run;
+    this.push(retype(first, type), { operand: true, amount: type === Unit });
     this.index = run.next - 1;
   }
 
