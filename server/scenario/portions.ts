@@ -106,7 +106,7 @@ function mendsOf(sum: number, parts: readonly NamedAmount[], context: Context): 
   const hasRest = parts.some((part) => part.amount.kind === 'rest');
   const others = largest ? sum - largest.amount.quantity.value : 1;
   if (largest && !hasRest && others < 1 && isLine(largest.amount.span, context)) {
-    const place = context.place(largest.amount.span);
+    const place = context.place(withBasis(largest.amount.span, context));
     mends.push({ title: `Make ${largest.name} the rest`, place, newText: 'rest' });
   }
   const last = shares.at(-1);
@@ -124,6 +124,12 @@ function mendsOf(sum: number, parts: readonly NamedAmount[], context: Context): 
     }
   }
   return mends;
+}
+
+/** The amount with the `mass`, `mole` or `volume` behind it: `rest` takes none, and `rest mass methanol` does not parse. */
+function withBasis(span: Span, context: Context): Span {
+  const basis = /^[ \t]+(?:mass|mole|volume)(?=[ \t])/.exec(context.placed.section.text.slice(span.end));
+  return { start: span.start, end: span.end + (basis?.[0].length ?? 0) };
 }
 
 /** Whether an amount stands at the start of a portion's line, where `rest` may replace it together with its basis. */
