@@ -89,7 +89,12 @@ export function readEntries<Table extends EntryTable>(
     if (value === undefined) broken.add(key);
     else read[key] = { value, entry: line };
   }
-  const missing = Object.values(table).filter((row) => row.needed && !firsts.has(row.name));
+  const unread = new Set(definition.lines.flatMap((line) => (line.kind === 'broken-line' ? (line.words ?? []) : [])));
+  for (const words of unread) {
+    const key = keyOf.get(words);
+    if (key !== undefined) broken.add(key);
+  }
+  const missing = Object.values(table).filter(({ name, needed }) => needed && !firsts.has(name) && !unread.has(name));
   if (missing.length > 0) {
     context.report(definition.name?.span ?? definition.header, {
       code: 'name/missing-entry',

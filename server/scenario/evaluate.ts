@@ -4,6 +4,7 @@
 // and the rest is still answered.
 
 import type { Definition, ExpectStatement, LetStatement, PlacedSection, Span } from '../../grammar/tree.ts';
+import { problemsOf } from '../../grammar/parse.ts';
 import { bindNames, type Binding, type Bindings } from './bind.ts';
 import { Context, near, type Named, type Scope } from './context.ts';
 import { mentionsOf, orderByMentions } from './dependencies.ts';
@@ -159,7 +160,7 @@ function gather(
   scope: Scope,
   answers: ReadonlyMap<Binding, Answer>,
 ): EvaluatedFile {
-  const facts: PlacedFact[] = [...file.facts];
+  const computed: PlacedFact[] = [...file.facts];
   const meanings: PlacedMeaning[] = [];
   const definitions: EvaluatedDefinition[] = [];
   const values: EvaluatedValue[] = [];
@@ -169,9 +170,6 @@ function gather(
     bindings.all.filter((binding) => binding.file === file).map((binding) => [binding.placed, binding]),
   );
   for (const placed of file.tree.sections) {
-    for (const problem of placed.section.problems) {
-      facts.push({ fact: { code: problem.code, problem }, place: placeOf(file.path, placed, problem.span) });
-    }
     const { statement } = placed.section;
     if (statement.kind === 'title') title ??= statement.title?.value ?? null;
     if (statement.kind === 'expect') {
@@ -181,19 +179,28 @@ function gather(
           answerExpect(statement, context),
         ),
       );
-      facts.push(...context.facts);
+      computed.push(...context.facts);
       meanings.push(...context.meanings);
     }
     const answer = answerOf(placed, ofSection, answers, scope, file);
     if (!answer) continue;
-    facts.push(...answer.facts);
+    computed.push(...answer.facts);
     meanings.push(...answer.meanings);
     if (answer.named.kind === 'value') values.push(answer.named.value);
     else if (answer.named.kind !== 'unknown') definitions.push(answer.named.definition);
   }
   const { path, used, tree } = file;
+  const problems = problemsOf(tree).map((problem): PlacedFact => ({
+    fact: { code: problem.code, problem },
+    place: { path, start: problem.span.start, end: problem.span.end },
+  }));
+  // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
+  const facts = problems.length >= suspendingProblems ? problems : [...problems, ...computed];
   return { path, used, tree, title, definitions, values, expectations, facts, meanings };
 }
+
+/** From this many syntax problems on, a file's computed findings are not told. */
+const suspendingProblems = 16;
 
 /** The answer of a named section; one without a name is worked out here, since nothing can refer to it. */
 function answerOf(

@@ -148,12 +148,13 @@ function workOut(material: Material): MaterialAnswer {
   const figures: Figure[] = [];
   const absent = new Map<string, readonly string[] | null>();
   for (const [index, row] of materialFigures.entries()) {
+    if (!isExpected(row.id, material)) continue;
     const outcome = outcomes[index];
     if (outcome && Number.isFinite(outcome.value)) {
       const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
       const working = workingOf(row, material, slate, sources);
       figures.push({ id: row.id, label: row.label, quantity, unit: row.unit, working });
-    } else if (isExpected(row.id, material)) {
+    } else {
       const missing = missingFor(row.id, material, value);
       if (missing.length > 0) absent.set(row.id, missing);
     }

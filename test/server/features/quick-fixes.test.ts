@@ -16,7 +16,7 @@ describe('a preferred fix', () => {
     checkFix(
       'blend $0fuel {\n  30 % mass methanol\n  50 % mass ethanol\n}\n$0',
       'balance/shares',
-      'blend fuel {\n  30 % mass methanol\n  rest mass ethanol\n}\n',
+      'blend fuel {\n  30 % mass methanol\n  rest ethanol\n}\n',
     );
   });
 
