@@ -32,10 +32,10 @@ const extensions = installInto('extensions', standIn);
 process.env.STOKEHOLD_EXTENSIONS = extensions;
 const counts = { passed: 0, failed: 0 };
 if (values.picture) {
-  await windowTests('test/editor/picture.ts');
+  await takePicture();
 } else {
   await inHostTests();
-  await windowTests();
+  windowTests();
 }
 if (values.counts) writeFileSync(values.counts, JSON.stringify(counts));
 process.exit(counts.failed === 0 ? 0 : 1);
@@ -71,10 +71,15 @@ async function inHostTests() {
   else if (counts.failed === 0) counts.failed += 1;
 }
 
-async function windowTests(...files) {
+function windowTests() {
   const report = path.join(scratch, 'window.json');
-  const exitCode = runVitest(report, ['--config', 'test/editor/vitest.config.mts', ...files]);
-  add(readVitestCounts(report, exitCode));
+  add(readVitestCounts(report, runVitest(report, ['--config', 'test/editor/vitest.config.mts'])));
+}
+
+async function takePicture() {
+  await bundle('test/editor/picture.ts', 'picture.mjs', 'esm');
+  const result = spawnSync(process.execPath, [path.join(bundles, 'picture.mjs')], { cwd: root, stdio: 'inherit' });
+  if (result.status !== 0) counts.failed += 1;
 }
 
 function add({ passed, failed }) {

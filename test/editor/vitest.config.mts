@@ -4,9 +4,10 @@ import { defineConfig } from 'vitest/config';
 export default defineConfig({
   test: {
     include: ['test/editor/window/**/*.test.ts'],
+    setupFiles: ['test/editor/window/failures.ts'],
     fileParallelism: false,
-    testTimeout: 90_000,
-    hookTimeout: 90_000,
+    testTimeout: 60_000,
+    hookTimeout: 60_000,
     expect: { poll: { timeout: 20_000, interval: 200 } },
   },
 });

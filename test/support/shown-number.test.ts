@@ -4,7 +4,8 @@ import { isRounded, numbersShown } from './shown-number.ts';
 describe('numbersShown', () => {
   test.each([
     ['lower heating value 35.52 MJ/kg, on the carbonate slate', 'MJ/kg', [35.52]],
-    ['**44.00 ± 0.20 MJ/kg**', 'MJ/kg', [44]],
+    ['**(44.00 ± 0.20) MJ/kg**', 'MJ/kg', [44]],
+    ['(1.200 ± 0.010) × 10⁻⁷ mol/kg', 'mol/kg', [1.2e-7]],
     ['−1.205 × 10⁻⁷ 1/s', '1/s', [-1.205e-7]],
     ['2.1 kJ/(kg K) and 3 kJ', 'kJ/(kg K)', [2.1]],
     ['12 kg/kg, 13 kg', 'kg', [13]],

@@ -9,9 +9,9 @@ export interface ShownNumber {
 }
 
 const NUMBER =
-  /(?<sign>[−-]?)(?<digits>\d+(?:\.\d+)?)(?:\s*±\s*[\d.]+)?(?:\s*[×·]\s*10(?<power>⁻?[⁰¹²³⁴-⁹]+))?\s*(?<unit>[^\s,;:)*|]*(?: [^\s\d,;:)*|]+\))?)/gu;
+  /\(?(?<sign>[−-]?)(?<digits>\d+(?:\.\d+)?)(?:\s*±\s*[\d.]+)?\)?(?:\s*[×·]\s*10(?<power>⁻?[⁰¹²³⁴-⁹]+))?\s*(?<unit>[^\s,;:)*|]*(?: [^\s\d,;:)*|]+\))?)/gu;
 
-/** The numbers in the text that carry exactly this unit, in the order of the text. */
+/** The numbers in the text that carry exactly this unit, in the order of the text. An uncertainty belongs to its number. */
 export function numbersShown(text: string, unit: string): ShownNumber[] {
   return [...text.matchAll(NUMBER)].flatMap(({ groups }) => {
     if (groups?.['unit'] !== unit) return [];

@@ -20,8 +20,8 @@ export interface Workbench {
   readHover(): Promise<string[]>;
   /** Opens the Problems panel and returns each problem as the screen reader hears it, `Error: …` first. */
   readProblems(): Promise<string[]>;
-  /** Waits until the Problems panel shows `count` problems and returns them. */
-  waitForProblems(count: number): Promise<string[]>;
+  /** Waits until the Problems panel shows `count` problems of the file and returns them. */
+  waitForProblems(file: string, count: number): Promise<string[]>;
   /** Opens the quick fixes at the cursor and applies the one whose title holds the words. */
   applyQuickFix(title: string): Promise<void>;
   formatDocument(): Promise<void>;
@@ -46,7 +46,8 @@ export async function openWorkbench(
   const profile = mkdtempSync(path.join(os.tmpdir(), 'stokehold-profile-'));
   const userDataDir = path.join(profile, 'user-data');
   mkdirSync(path.join(userDataDir, 'User'), { recursive: true });
-  const settings = { ...QUIET_SETTINGS, ...options.settings };
+  const untrusted = options.trusted === false ? RESTRICTED_MODE : {};
+  const settings = { ...QUIET_SETTINGS, ...untrusted, ...options.settings };
   writeFileSync(path.join(userDataDir, 'User/settings.json'), JSON.stringify(settings));
   const trust = options.trusted === false ? [] : ['--disable-workspace-trust'];
   const server = await startServer({ userDataDir, extensionsDir: options.extensionsDir }, trust);
@@ -81,11 +82,31 @@ const QUIET_SETTINGS = {
   'telemetry.telemetryLevel': 'off',
 };
 
+/** The editor starts in its restricted mode, as if the person had answered that the folder is not to be trusted. */
+const RESTRICTED_MODE = {
+  'security.workspace.trust.enabled': true,
+  'security.workspace.trust.startupPrompt': 'never',
+};
+
 function driveWorkbench(page: Page, close: () => Promise<void>): Workbench {
   const quickInput = page.locator('.quick-input-widget input');
   const quickRows = page.locator('.quick-input-list .monaco-list-row');
   const hoverParts = page.locator('.monaco-hover:not(.hidden) .hover-row');
   const problemRows = page.locator('.markers-panel .monaco-list-row[aria-level="2"]');
+
+  /** The rows below the file's own row, up to the next file's. */
+  const problemsOf = async (file: string): Promise<string[]> => {
+    const rows = await page.locator('.markers-panel .monaco-list-row').evaluateAll((elements: PageElement[]) =>
+      elements.map((element) => ({
+        level: element.getAttribute('aria-level'),
+        label: element.getAttribute('aria-label') ?? '',
+      })),
+    );
+    const start = rows.findIndex(({ level, label }) => level === '1' && label.includes(file));
+    if (start < 0) return [];
+    const end = rows.findIndex(({ level }, index) => index > start && level === '1');
+    return rows.slice(start + 1, end < 0 ? rows.length : end).map(({ label }) => label);
+  };
 
   const runCommand = async (title: string): Promise<void> => {
     await page.keyboard.press('F1');
@@ -131,25 +152,43 @@ function driveWorkbench(page: Page, close: () => Promise<void>): Workbench {
       await page.locator('.markers-panel').waitFor();
       return labels(problemRows);
     },
-    async waitForProblems(count) {
+    async waitForProblems(file, count) {
       await runCommand('View: Focus Problems');
       const deadline = Date.now() + 30_000;
       for (;;) {
-        const shown = await labels(problemRows);
+        const shown = await problemsOf(file);
         if (shown.length === count) return shown;
-        if (Date.now() > deadline)
-          throw new Error(`waited for ${count} problems, but these are shown: ${shown.join(' | ')}`);
+        if (Date.now() > deadline) {
+          throw new Error(`waited for ${count} problems in ${file}, but these are shown: ${shown.join(' | ')}`);
+        }
         await page.waitForTimeout(200);
       }
     },
     async applyQuickFix(title) {
-      const rows = page.locator('.action-widget .monaco-list-row');
-      await askAgain(rows, () => page.keyboard.press('Control+.'));
-      await rows.filter({ hasText: title }).first().click();
-      await page.locator('.action-widget').waitFor({ state: 'hidden' });
+      const rows = page.locator('.action-widget .monaco-list-row.action');
+      const offered = await askAgain(rows, () => page.keyboard.press('Control+.'));
+      // By keys: the list lies under a transparent layer that takes the mouse's clicks.
+      for (let step = 0; step < offered.length; step++) {
+        if ((await rows.and(page.locator('.focused')).innerText()).includes(title)) {
+          await page.keyboard.press('Enter');
+          await page.locator('.action-widget').waitFor({ state: 'hidden' });
+          return;
+        }
+        await page.keyboard.press('ArrowDown');
+      }
+      throw new Error(`no quick fix "${title}"; offered are: ${offered.join(' | ')}`);
     },
     async formatDocument() {
-      await runCommand('Format Document');
+      // Asked before the extension is active, the editor says that there is no formatter.
+      const refusal = page.locator('.monaco-dialog-box', { hasText: 'There is no formatter' });
+      for (let attempt = 1; attempt <= 10; attempt++) {
+        await runCommand('Format Document');
+        await page.waitForTimeout(500);
+        if (!(await refusal.isVisible())) return;
+        await page.keyboard.press('Escape');
+        await refusal.waitFor({ state: 'hidden' });
+      }
+      throw new Error('the editor knows no formatter for this file');
     },
     async typeText(text) {
       await page.keyboard.type(text, { delay: 20 });

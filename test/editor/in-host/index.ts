@@ -2,6 +2,7 @@
 // interface. The same file serves a desktop editor and the stand-in. Knows no selector of the workbench's page.
 // Source of the entry point's form: VS Code's "Testing Extensions" (a module that exports `run`).
 import './activation.ts';
+import './answers.ts';
 import { runRegistered } from './harness.ts';
 
 /** Called by the editor once its window is up. Rejects when a test failed. */
