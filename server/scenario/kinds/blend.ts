@@ -2,23 +2,16 @@
 // material follows from its portions; its figures are those of any material (material-figures.ts), beside the table of
 // its portions' shares on every basis.
 
-import type { Definition, Portion } from '../../../grammar/tree.ts';
+import type { Definition } from '../../../grammar/tree.ts';
 import type { EnergyFault } from '../../core/balance/formation-enthalpy.ts';
 import type { GivenProductsFault } from '../../core/balance/given-products.ts';
-import { massSharesOf, sharesOn, type MixturePart } from '../../core/balance/mixture.ts';
-import { mixProperties, type PartProperties } from '../../core/balance/mixture-properties.ts';
-import { knownUnit } from '../../core/quantity/convert.ts';
-import { dimensionless } from '../../core/quantity/dimension.ts';
-import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
-import { noParts } from '../../core/quantity/parts.ts';
-import { propagate, type Propagated } from '../../core/quantity/uncertainty.ts';
 import { alkaliMetals } from '../../core/substance/elements.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import type { Material, MissingProperty, PortionShare } from '../material.ts';
 import { answerMaterial, materialFigures, type MaterialAnswer } from '../material-figures.ts';
-import { materialNamed } from '../materials.ts';
-import { readAmount, reportMixtureFault, type WrittenAmount } from '../portions.ts';
+import { mixParts, readParts, type Mixed, type Part } from '../mixing.ts';
+import { reportMixtureFault } from '../portions.ts';
 import { formulasReader, materialReader, stateReader } from '../readers.ts';
 import type { LineResult, Table } from '../scenario.ts';
 import type { AssumptionId } from '../working.ts';
@@ -52,13 +45,6 @@ export const blend: Kind = {
   evaluated,
 };
 
-/** A portion whose amount and substance could both be read. */
-interface Part {
-  readonly line: number;
-  readonly material: Material;
-  readonly amount: WrittenAmount;
-}
-
 function evaluate(definition: Definition, context: Context): KindAnswer {
   const { entries: read, broken } = readEntries(definition, entries, context);
   refuseLines(definition, ['portion'], context);
@@ -68,23 +54,16 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const isBroken = definition.lines.some((line) => line.kind === 'broken-line') || broken.has('products');
   if (!parts || (isBroken && parts.length === 0)) return unknownAnswer(evaluated);
 
-  const inputs = inputsOf(parts);
-  const centre = massSharesOf(
-    mixtureParts(
-      parts,
-      inputs.map((input) => input.value),
-    ),
-  );
-  if ('fault' in centre) {
+  const mixed = mixParts(parts);
+  if ('fault' in mixed) {
     // A line that could not be read may be the very portion that is missing: its own finding says enough.
     const named = parts.map((part) => ({ name: part.material.name, amount: part.amount }));
-    if (!isBroken) reportMixtureFault(centre, named, name, header, context);
+    if (!isBroken) reportMixtureFault(mixed, named, name, header, context);
     return unknownAnswer(evaluated);
   }
   if (isBroken) return unknownAnswer(evaluated);
 
-  const mixed = mix(parts, inputs, centre.massShares);
-  const material = materialOf(parts, mixed, centre.scaled, name, read.products?.value ?? null);
+  const material = materialOf(parts, mixed, name, read.products?.value ?? null);
   const answer = answerMaterial(material);
   if (answer.fault && read.products && isOfProducts(answer.fault)) {
     context.report(read.products.entry.span, { code: 'balance/products', fault: answer.fault });
@@ -100,135 +79,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   };
 }
 
-/** The portions in order; null when one could not be read (said). */
-function readParts(definition: Definition, context: Context): readonly Part[] | null {
-  const parts: Part[] = [];
-  let isComplete = true;
-  let ordinal = 0;
-  for (const [line, portion] of definition.lines.entries()) {
-    if (portion.kind !== 'portion') continue;
-    context.startLine(`portion ${ordinal++}`);
-    const part = readPart(portion, line, context);
-    if (part) parts.push(part);
-    else isComplete = false;
-  }
-  return isComplete ? parts : null;
-}
-
-function readPart(portion: Portion, line: number, context: Context): Part | null {
-  const amount: WrittenAmount | null =
-    portion.amount.kind === 'rest'
-      ? { kind: 'rest', span: portion.amount.span }
-      : readAmount(portion.amount, portion.basis?.basis, context);
-  const material = portion.substance ? materialNamed(portion.substance, context) : null;
-  return amount && material ? { line, material, amount } : null;
-}
-
-/** Everything a blend rests on as one list of uncertain numbers: amounts first, then five and the elements of each part. */
-function inputsOf(parts: readonly Part[]): readonly Quantity[] {
-  const unknown = quantityOf(NaN);
-  return [
-    ...parts.map(({ amount }) => (amount.kind === 'rest' ? quantityOf(0) : amount.quantity)),
-    ...parts.flatMap(({ material }) => [
-      material.formationEnthalpy ?? unknown,
-      material.molarMass ?? unknown,
-      material.density ?? unknown,
-      material.biogenicShare,
-      ...material.elements.values(),
-    ]),
-  ];
-}
-
-/** The parts with the numbers of one evaluation, in the order of `inputsOf`. */
-function numbersOf(parts: readonly Part[], values: readonly number[]): PartProperties[] {
-  let next = parts.length;
-  const take = (): number | null => {
-    const value = values[next++] ?? NaN;
-    return Number.isNaN(value) ? null : value;
-  };
-  return parts.map(({ material }) => ({
-    enthalpyJPerKg: take(),
-    molarMassKgPerMol: take(),
-    densityKgPerM3: take(),
-    biogenicShare: take() ?? 0,
-    molPerKg: new Map([...material.elements.keys()].map((symbol) => [symbol, take() ?? 0])),
-  }));
-}
-
-function mixtureParts(parts: readonly Part[], values: readonly number[]): MixturePart[] {
-  const numbers = numbersOf(parts, values);
-  return parts.map(({ amount }, index) => ({
-    amount:
-      amount.kind === 'rest' ? { kind: 'rest' } : { kind: amount.kind, basis: amount.basis, value: values[index] ?? 0 },
-    molarMassKgPerMol: numbers[index]?.molarMassKgPerMol ?? null,
-    densityKgPerM3: numbers[index]?.densityKgPerM3 ?? null,
-  }));
-}
-
-interface Mixed {
-  readonly shares: readonly PortionShare[];
-  readonly elements: ReadonlyMap<string, Quantity>;
-  readonly formationEnthalpy: Quantity | null;
-  readonly molarMass: Quantity | null;
-  readonly density: Quantity | null;
-  readonly biogenicShare: Quantity;
-}
-
-/** Shares and properties with their uncertainty. */
-function mix(parts: readonly Part[], inputs: readonly Quantity[], centre: readonly number[]): Mixed {
-  const symbols = [...new Set(parts.flatMap(({ material }) => [...material.elements.keys()]))];
-  const outcomes = propagate(inputs, (values) => {
-    const moved = massSharesOf(mixtureParts(parts, values));
-    // Moved by its uncertainty a share may leave its range; the slope from the other side then serves.
-    if ('fault' in moved && values.some((value, index) => value !== inputs[index]?.value)) return [];
-    const massShares = 'fault' in moved ? centre : moved.massShares;
-    const mixture = mixtureParts(parts, values);
-    const properties = mixProperties(massShares, numbersOf(parts, values));
-    const mole = sharesOn('mole', massShares, mixture);
-    const volume = sharesOn('volume', massShares, mixture);
-    return [
-      properties.enthalpyJPerKg ?? NaN,
-      properties.molarMassKgPerMol ?? NaN,
-      properties.densityKgPerM3 ?? NaN,
-      properties.biogenicShare,
-      ...symbols.map((symbol) => properties.molPerKg.get(symbol) ?? 0),
-      ...parts.flatMap((_, index) => [massShares[index] ?? 0, mole?.[index] ?? NaN, volume?.[index] ?? NaN]),
-    ];
-  });
-  const known = (outcome: Propagated | undefined, unit: string): Quantity | null =>
-    outcome && Number.isFinite(outcome.value)
-      ? quantityOf(outcome.value, knownUnit(unit).dimension, outcome.parts ?? noParts)
-      : null;
-  const [enthalpy, molarMass, density, biogenic, ...others] = outcomes;
-  const elementOutcomes = others.slice(0, symbols.length);
-  const shareOutcomes = others.slice(symbols.length);
-  return {
-    formationEnthalpy: known(enthalpy, 'J/kg'),
-    molarMass: known(molarMass, 'kg/mol'),
-    density: known(density, 'kg/m3'),
-    biogenicShare: known(biogenic, '1') ?? quantityOf(0),
-    elements: new Map(
-      symbols.map((symbol, index) => [
-        symbol,
-        known(elementOutcomes[index], 'mol/kg') ?? quantityOf(0, knownUnit('mol/kg').dimension),
-      ]),
-    ),
-    shares: parts.map(({ material }, index) => ({
-      name: material.name,
-      mass: known(shareOutcomes[3 * index], '1') ?? quantityOf(centre[index] ?? 0, dimensionless),
-      mole: known(shareOutcomes[3 * index + 1], '1'),
-      volume: known(shareOutcomes[3 * index + 2], '1'),
-    })),
-  };
-}
-
-function materialOf(
-  parts: readonly Part[],
-  mixed: Mixed,
-  scaled: boolean,
-  name: string,
-  products: Material['products'],
-): Material {
+function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products: Material['products']): Material {
   const missing = new Map<MissingProperty, readonly string[]>();
   for (const property of ['formationEnthalpy', 'density', 'molarMass'] as const) {
     if (mixed[property]) continue;
@@ -249,7 +100,7 @@ function materialOf(
     biogenicShare: mixed.biogenicShare,
     products,
     portions: mixed.shares,
-    assumptions: [...new Set([...inherited, ...own, ...(scaled ? (['shares-scaled'] as const) : [])])],
+    assumptions: [...new Set([...inherited, ...own, ...(mixed.scaled ? (['shares-scaled'] as const) : [])])],
     sources: [...new Set(parts.flatMap(({ material }) => material.sources))],
     card: { name, origin: 'scenario', formula: null, phase: null, aliases: [], properties: [] },
     missing,

@@ -1,0 +1,164 @@
+// Portions together: reads a definition's portion lines into parts, and mixes parts into shares on every basis and the
+// mixture's own properties, with uncertainty by the law of propagation so that correlations are kept. Used by every kind
+// that is made of portions. The arithmetic is core/balance's; this file only arranges the uncertain numbers for it.
+
+import type { Definition, Portion } from '../../grammar/tree.ts';
+import { massSharesOf, sharesOn, type MixtureFault, type MixturePart } from '../core/balance/mixture.ts';
+import { mixProperties, type PartProperties } from '../core/balance/mixture-properties.ts';
+import { knownUnit } from '../core/quantity/convert.ts';
+import { dimensionless } from '../core/quantity/dimension.ts';
+import { noParts } from '../core/quantity/parts.ts';
+import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
+import { propagate, type Propagated } from '../core/quantity/uncertainty.ts';
+import type { Context } from './context.ts';
+import type { Material, PortionShare } from './material.ts';
+import { materialNamed } from './materials.ts';
+import { readAmount, type WrittenAmount } from './portions.ts';
+
+/** A portion whose amount and substance could both be read. */
+export interface Part {
+  readonly line: number;
+  readonly material: Material;
+  readonly amount: WrittenAmount;
+}
+
+/** The portions in order; null when one could not be read (said). */
+export function readParts(definition: Definition, context: Context): readonly Part[] | null {
+  const parts: Part[] = [];
+  let isComplete = true;
+  let ordinal = 0;
+  for (const [line, portion] of definition.lines.entries()) {
+    if (portion.kind !== 'portion') continue;
+    context.startLine(`portion ${ordinal++}`);
+    const part = readPart(portion, line, context);
+    if (part) parts.push(part);
+    else isComplete = false;
+  }
+  return isComplete ? parts : null;
+}
+
+function readPart(portion: Portion, line: number, context: Context): Part | null {
+  const amount: WrittenAmount | null =
+    portion.amount.kind === 'rest'
+      ? { kind: 'rest', span: portion.amount.span }
+      : readAmount(portion.amount, portion.basis?.basis, context);
+  const material = portion.substance ? materialNamed(portion.substance, context) : null;
+  return amount && material ? { line, material, amount } : null;
+}
+
+export interface Mixed {
+  /** Shares missed 1 by rounding and were scaled. */
+  readonly scaled: boolean;
+  readonly shares: readonly PortionShare[];
+  readonly elements: ReadonlyMap<string, Quantity>;
+  readonly formationEnthalpy: Quantity | null;
+  readonly molarMass: Quantity | null;
+  readonly density: Quantity | null;
+  readonly biogenicShare: Quantity;
+}
+
+/** The shares and properties of the parts together, with their uncertainty; a fault says why there are none. */
+export function mixParts(parts: readonly Part[]): Mixed | MixtureFault {
+  const inputs = inputsOf(parts);
+  const centre = massSharesOf(
+    mixtureParts(
+      parts,
+      inputs.map((input) => input.value),
+    ),
+  );
+  return 'fault' in centre ? centre : mixedOf(parts, inputs, centre.massShares, centre.scaled);
+}
+
+/** Everything a blend rests on as one list of uncertain numbers: amounts first, then five and the elements of each part. */
+function inputsOf(parts: readonly Part[]): readonly Quantity[] {
+  const unknown = quantityOf(NaN);
+  return [
+    ...parts.map(({ amount }) => (amount.kind === 'rest' ? quantityOf(0) : amount.quantity)),
+    ...parts.flatMap(({ material }) => [
+      material.formationEnthalpy ?? unknown,
+      material.molarMass ?? unknown,
+      material.density ?? unknown,
+      material.biogenicShare,
+      ...material.elements.values(),
+    ]),
+  ];
+}
+
+/** The parts with the numbers of one evaluation, in the order of `inputsOf`. */
+function numbersOf(parts: readonly Part[], values: readonly number[]): PartProperties[] {
+  let next = parts.length;
+  const take = (): number | null => {
+    const value = values[next++] ?? NaN;
+    return Number.isNaN(value) ? null : value;
+  };
+  return parts.map(({ material }) => ({
+    enthalpyJPerKg: take(),
+    molarMassKgPerMol: take(),
+    densityKgPerM3: take(),
+    biogenicShare: take() ?? 0,
+    molPerKg: new Map([...material.elements.keys()].map((symbol) => [symbol, take() ?? 0])),
+  }));
+}
+
+function mixtureParts(parts: readonly Part[], values: readonly number[]): MixturePart[] {
+  const numbers = numbersOf(parts, values);
+  return parts.map(({ amount }, index) => ({
+    amount:
+      amount.kind === 'rest' ? { kind: 'rest' } : { kind: amount.kind, basis: amount.basis, value: values[index] ?? 0 },
+    molarMassKgPerMol: numbers[index]?.molarMassKgPerMol ?? null,
+    densityKgPerM3: numbers[index]?.densityKgPerM3 ?? null,
+  }));
+}
+
+function mixedOf(
+  parts: readonly Part[],
+  inputs: readonly Quantity[],
+  centre: readonly number[],
+  scaled: boolean,
+): Mixed {
+  const symbols = [...new Set(parts.flatMap(({ material }) => [...material.elements.keys()]))];
+  const outcomes = propagate(inputs, (values) => {
+    const moved = massSharesOf(mixtureParts(parts, values));
+    // Moved by its uncertainty a share may leave its range; the slope from the other side then serves.
+    if ('fault' in moved && values.some((value, index) => value !== inputs[index]?.value)) return [];
+    const massShares = 'fault' in moved ? centre : moved.massShares;
+    const mixture = mixtureParts(parts, values);
+    const properties = mixProperties(massShares, numbersOf(parts, values));
+    const mole = sharesOn('mole', massShares, mixture);
+    const volume = sharesOn('volume', massShares, mixture);
+    return [
+      properties.enthalpyJPerKg ?? NaN,
+      properties.molarMassKgPerMol ?? NaN,
+      properties.densityKgPerM3 ?? NaN,
+      properties.biogenicShare,
+      ...symbols.map((symbol) => properties.molPerKg.get(symbol) ?? 0),
+      ...parts.flatMap((_, index) => [massShares[index] ?? 0, mole?.[index] ?? NaN, volume?.[index] ?? NaN]),
+    ];
+  });
+  const known = (outcome: Propagated | undefined, unit: string): Quantity | null =>
+    outcome && Number.isFinite(outcome.value)
+      ? quantityOf(outcome.value, knownUnit(unit).dimension, outcome.parts ?? noParts)
+      : null;
+  const [enthalpy, molarMass, density, biogenic, ...others] = outcomes;
+  const elementOutcomes = others.slice(0, symbols.length);
+  const shareOutcomes = others.slice(symbols.length);
+  return {
+    scaled,
+    formationEnthalpy: known(enthalpy, 'J/kg'),
+    molarMass: known(molarMass, 'kg/mol'),
+    density: known(density, 'kg/m3'),
+    biogenicShare: known(biogenic, '1') ?? quantityOf(0),
+    elements: new Map(
+      symbols.map((symbol, index) => [
+        symbol,
+        known(elementOutcomes[index], 'mol/kg') ?? quantityOf(0, knownUnit('mol/kg').dimension),
+      ]),
+    ),
+    shares: parts.map(({ material }, index) => ({
+      name: material.name,
+      mass: known(shareOutcomes[3 * index], '1') ?? quantityOf(centre[index] ?? 0, dimensionless),
+      mole: known(shareOutcomes[3 * index + 1], '1'),
+      volume: known(shareOutcomes[3 * index + 2], '1'),
+    })),
+  };
+}
