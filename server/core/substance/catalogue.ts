@@ -1,7 +1,7 @@
 // Finds substances: by name, by alias, by formula and phase, and suggests the nearest when a word finds nothing.
 // Knows no user's definitions, no energies beyond what the records say, and no search by part of a name (search.ts).
-// Words are indexed at the first question, formulas at the first formula, and a record is turned into substances when it is
-// first asked for: a run that needs three substances reads three. Invariant: a word finds at most one substance, always the same.
+// Words are indexed at the first question, compositions at the first formula that no record writes alike, and a record is
+// turned into substances when it is first asked for: a run that needs three reads three. Invariant: a word finds at most one substance, always the same.
 
 import { compositionKey, parseFormula } from './formula.ts';
 import type { Formula, Phase } from './formula.ts';
@@ -50,7 +50,11 @@ function lookUp(word: string, phase: Phase | undefined): Substance | undefined {
 
 /** The first of `substancesOfFormula`: a guess where isomers share a formula. */
 export function findSubstanceOfFormula(formula: Formula): Substance | undefined {
-  return substancesOfFormula(formula)[0];
+  // Most formulas are written as a record has them, and then the others need not be read.
+  const alike = indexOfTexts().get(formula.text);
+  const found =
+    alike && substancesOf(alike).find(({ phase }) => formula.phase === undefined || phase === formula.phase);
+  return found ?? substancesOfFormula(formula)[0];
 }
 
 /**
@@ -60,7 +64,7 @@ export function findSubstanceOfFormula(formula: Formula): Substance | undefined 
 export function substancesOfFormula(formula: Formula): readonly Substance[] {
   const known = ofFormula.get(formula);
   if (known) return known;
-  const candidates = indexOfFormulas().byComposition.get(compositionKey(formula)) ?? [];
+  const candidates = indexOfCompositions().get(compositionKey(formula)) ?? [];
   const found = candidates
     .flatMap(substancesOf)
     .filter((substance) => formula.phase === undefined || substance.phase === formula.phase)
@@ -82,7 +86,7 @@ export function phasesOfSubstance(name: string): readonly Substance[] {
  * near (`H20` gives `H2O`). Empty when nothing is near.
  */
 export function suggestSubstances(word: string, most = 3): readonly string[] {
-  suggestible ??= [...indexOfWords().keys(), ...indexOfFormulas().texts];
+  suggestible ??= [...indexOfWords().keys(), ...indexOfTexts().keys()];
   return nearestWords(word, suggestible, most);
 }
 
@@ -93,19 +97,14 @@ const ofFormula = new WeakMap<Formula, readonly Substance[]>();
 const ofRecord = new Map<SubstanceRecord, readonly Substance[]>();
 let suggestible: readonly string[] | undefined;
 let words: ReadonlyMap<string, Named> | undefined;
-let formulas: FormulaIndex | undefined;
+let texts: ReadonlyMap<string, SubstanceRecord> | undefined;
+let compositions: ReadonlyMap<string, readonly SubstanceRecord[]> | undefined;
 let sources: ReadonlyMap<string, SourceRecord> | undefined;
 
 /** What a word names: a record, and a phase of it where the word is that phase's own (`steam`). */
 interface Named {
   readonly record: SubstanceRecord;
   readonly phase?: Phase;
-}
-
-interface FormulaIndex {
-  readonly byComposition: ReadonlyMap<string, readonly SubstanceRecord[]>;
-  /** Canonical texts, each once. */
-  readonly texts: ReadonlySet<string>;
 }
 
 function substancesOf(record: SubstanceRecord): readonly Substance[] {
@@ -116,34 +115,44 @@ function substancesOf(record: SubstanceRecord): readonly Substance[] {
   return substances;
 }
 
+/** Names and aliases are kept in the records as `wordKey` writes them; a phase's own alias names that phase. */
 function indexOfWords(): ReadonlyMap<string, Named> {
-  words ??= new Map(
-    substanceRecords.flatMap((record) => [
-      ...record.phases.flatMap(({ phase, aliases = [] }) =>
-        aliases.map((alias) => [wordKey(alias), { record, phase }] as const),
-      ),
-      ...[record.name, ...(record.aliases ?? [])].map((word) => [wordKey(word), { record }] as const),
-    ]),
-  );
-  return words;
+  if (words !== undefined) return words;
+  const index = new Map<string, Named>();
+  for (const record of substanceRecords) {
+    const named = { record };
+    index.set(record.name, named);
+    for (const alias of record.aliases ?? []) index.set(alias, named);
+    for (const { phase, aliases = [] } of record.phases) {
+      for (const alias of aliases) index.set(alias, { record, phase });
+    }
+  }
+  words = index;
+  return index;
 }
 
-function indexOfFormulas(): FormulaIndex {
-  if (formulas !== undefined) return formulas;
-  const byComposition = new Map<string, SubstanceRecord[]>();
-  const texts = new Set<string>();
-  for (const record of substanceRecords) {
-    if (record.formula === undefined) continue;
-    const formula = parseFormula(record.formula);
+/** By the formula as the record writes it, which is its canonical text. */
+function indexOfTexts(): ReadonlyMap<string, SubstanceRecord> {
+  if (texts !== undefined) return texts;
+  const index = new Map<string, SubstanceRecord>();
+  for (const record of substanceRecords) if (record.formula !== undefined) index.set(record.formula, record);
+  texts = index;
+  return index;
+}
+
+function indexOfCompositions(): ReadonlyMap<string, readonly SubstanceRecord[]> {
+  if (compositions !== undefined) return compositions;
+  const index = new Map<string, SubstanceRecord[]>();
+  for (const record of indexOfTexts().values()) {
+    const formula = parseFormula(record.formula ?? '');
     if (formula.kind === 'fault') continue;
-    texts.add(formula.text);
     const key = compositionKey(formula);
-    const alike = byComposition.get(key);
-    if (alike === undefined) byComposition.set(key, [record]);
+    const alike = index.get(key);
+    if (alike === undefined) index.set(key, [record]);
     else alike.push(record);
   }
-  formulas = { byComposition, texts };
-  return formulas;
+  compositions = index;
+  return index;
 }
 
 /** Mixtures are made of other records, which are looked up by formula; a mixture has none, so this ends. */

@@ -2,11 +2,20 @@
 // Knows no lookup: what a mixture's members are it asks of the caller. Invariant: a record that passes the schema and whose
 // sources exist gives one substance a phase; molar mass and composition always come from the formula.
 
+import { heatCapacityAt } from './at-temperature.ts';
 import { molPerKgOfFormula, molPerKgOfMassShares } from './composition.ts';
 import { molarMassKgPerMol, parseFormula } from './formula.ts';
 import type { Formula } from './formula.ts';
-import type { PhaseRecord, SourceRecord, SubstanceRecord } from './record.ts';
-import type { Datum, Energy, RuleValues, Substance } from './substance.ts';
+import type {
+  DensityRecord,
+  PhaseRecord,
+  RuleRecord,
+  SourceRecord,
+  SubstanceRecord,
+  TemperatureRecord,
+} from './record.ts';
+import { referenceTemperatureK } from './substance.ts';
+import type { Datum, Density, Energy, HeatCapacity, RuleValues, Substance } from './substance.ts';
 
 /** What the records refer to: sources by id, and a gas by its formula for mixtures. */
 export interface RecordContext {
@@ -26,6 +35,7 @@ export function substancesOfRecord(record: SubstanceRecord, context: RecordConte
 /** What a record is made of, whatever its phase. */
 interface Matter {
   readonly formula?: Formula;
+  readonly members?: readonly { readonly formula: Formula; readonly moleShare: number }[];
   readonly molPerKg: ReadonlyMap<string, number>;
   readonly molarMassKgPerMol?: number;
   /** Of a mixture, whose members' enthalpies are known. */
@@ -51,6 +61,7 @@ function matterOfMixture(moleShares: Readonly<Record<string, number>>, context: 
   let enthalpyJPerMol = 0;
   let source: SourceRecord | undefined;
   const molPerMol = new Map<string, number>();
+  const members: { formula: Formula; moleShare: number }[] = [];
   for (const [formulaText, share] of Object.entries(moleShares)) {
     const gas = context.gasOf(formulaText);
     if (gas?.formula === undefined || gas.molarMassKgPerMol === undefined) return undefined;
@@ -58,17 +69,21 @@ function matterOfMixture(moleShares: Readonly<Record<string, number>>, context: 
     molarMass += share * gas.molarMassKgPerMol;
     enthalpyJPerMol += share * gas.energy.jPerKg.value * gas.molarMassKgPerMol;
     source ??= gas.energy.jPerKg.source;
+    members.push({ formula: gas.formula, moleShare: share });
     for (const [symbol, count] of gas.formula.composition) {
       molPerMol.set(symbol, (molPerMol.get(symbol) ?? 0) + share * count);
     }
   }
   if (source === undefined) return undefined;
   return {
+    members,
     molPerKg: new Map([...molPerMol].map(([symbol, mol]) => [symbol, mol / molarMass])),
     molarMassKgPerMol: molarMass,
     mixtureEnthalpyJPerKg: { value: enthalpyJPerMol / molarMass, source },
   };
 }
+
+type ToDatum = (value: number, scale: number, sourced: { source: string; uncertainty?: number }) => Datum;
 
 function substanceOfPhase(
   record: SubstanceRecord,
@@ -76,58 +91,121 @@ function substanceOfPhase(
   matter: Matter,
   context: RecordContext,
 ): Substance {
-  const { phase, entropy, density, heatCapacity } = phaseRecord;
-  const datum = (value: number, scale: number, sourced: { source: string; uncertainty?: number }): Datum => ({
+  const { phase, entropy, density } = phaseRecord;
+  const datum: ToDatum = (value, scale, sourced) => ({
     value: value * scale,
     source: context.sourceOf(sourced.source),
     ...(sourced.uncertainty === undefined ? {} : { uncertainty: sourced.uncertainty * scale }),
   });
   const { formula, molarMassKgPerMol: molarMass } = matter;
+  const heatCapacity = heatCapacityOfPhase(phaseRecord, molarMass, context);
   return {
     name: record.name,
     label: record.name.replaceAll('_', ' '),
     aliases: [...(record.aliases ?? []), ...(phaseRecord.aliases ?? [])],
     phase,
     ...(formula === undefined ? {} : { formula: { ...formula, phase } }),
+    ...(matter.members === undefined ? {} : { members: matter.members }),
     molPerKg: matter.molPerKg,
     chargeMolPerKg: formula === undefined || molarMass === undefined ? 0 : formula.charge / molarMass,
     ...(molarMass === undefined ? {} : { molarMassKgPerMol: molarMass }),
     energy: energyOfPhase(phaseRecord, matter, datum),
     ...(entropy === undefined ? {} : { entropyJPerMolK: datum(entropy.jPerMolK, 1, entropy) }),
-    ...(density === undefined
-      ? {}
-      : { density: { ...datum(density.kgPerM3, 1, density), temperatureK: density.temperatureK } }),
-    ...(heatCapacity === undefined ? {} : { heatCapacityJPerKgK: datum(heatCapacity.kJPerKgK, 1000, heatCapacity) }),
-    ...(record.flashPoint === undefined
-      ? {}
-      : {
-          flashPointK: {
-            ...datum(record.flashPoint.celsius, 1, record.flashPoint),
-            value: record.flashPoint.celsius + celsiusZeroK,
-          },
-        }),
+    ...(density === undefined ? {} : { density: densityOf(density, datum) }),
+    ...(heatCapacity === undefined ? {} : { heatCapacity, heatCapacityJPerKgK: heatCapacityAtReference(heatCapacity) }),
+    ...ofTheSubstance(record, datum),
     carbonBiogenicShare: record.carbonBiogenicShare ?? 0,
     ...(record.compositionSource === undefined
       ? {}
       : { compositionSource: context.sourceOf(record.compositionSource) }),
-    rules: (record.rules ?? []).map((rule): RuleValues => ({
-      source: context.sourceOf(rule.source),
-      ...(rule.lowerHeatingValueMJPerKg === undefined
-        ? {}
-        : { lowerHeatingValueJPerKg: rule.lowerHeatingValueMJPerKg * 1e6 }),
-      ...(rule.carbonContent === undefined ? {} : { carbonContentKgPerKg: rule.carbonContent }),
-      ...(rule.carbonDioxideFactor === undefined ? {} : { carbonDioxideFactorKgPerKg: rule.carbonDioxideFactor }),
-    })),
+    rules: (record.rules ?? []).map((rule) => ruleValues(rule, context)),
     stableAtReference: phaseRecord.stable ?? false,
     ...(record.note === undefined ? {} : { note: record.note }),
   };
 }
 
-function energyOfPhase(
-  phaseRecord: PhaseRecord,
-  matter: Matter,
-  datum: (value: number, scale: number, sourced: { source: string; uncertainty?: number }) => Datum,
-): Energy {
+function densityOf(density: DensityRecord, datum: ToDatum): Density {
+  const { kgPerM3, temperatureK, points = [], expansionPerK, expansionSource } = density;
+  return {
+    ...datum(kgPerM3, 1, density),
+    temperatureK,
+    points: [[temperatureK, kgPerM3] as const, ...points]
+      .map(([pointK, pointKgPerM3]) => ({ temperatureK: pointK, kgPerM3: pointKgPerM3 }))
+      .sort((a, b) => a.temperatureK - b.temperatureK),
+    ...(expansionPerK === undefined
+      ? {}
+      : { expansionPerK: datum(expansionPerK, 1, { source: expansionSource ?? density.source }) }),
+  };
+}
+
+function heatCapacityOfPhase(
+  { heatCapacity }: PhaseRecord,
+  molarMass: number | undefined,
+  context: RecordContext,
+): HeatCapacity | undefined {
+  if (heatCapacity === undefined) return undefined;
+  const source = context.sourceOf(heatCapacity.source);
+  const near = { fromK: referenceTemperatureK, toK: referenceTemperatureK, source };
+  if ('kJPerKgK' in heatCapacity) return { terms: [{ power: 0, jPerKgK: heatCapacity.kJPerKgK * 1000 }], ...near };
+  if (molarMass === undefined) return undefined;
+  if ('jPerMolK' in heatCapacity) return { terms: [{ power: 0, jPerKgK: heatCapacity.jPerMolK / molarMass }], ...near };
+  const { jPerMolKTerms, fromK, toK } = heatCapacity;
+  return {
+    terms: Object.entries(jPerMolKTerms).map(([power, jPerMolK]) => ({
+      power: Number(power),
+      jPerKgK: jPerMolK / molarMass,
+    })),
+    fromK,
+    toK,
+    source,
+  };
+}
+
+function heatCapacityAtReference(heatCapacity: HeatCapacity): Datum {
+  return { value: heatCapacityAt(heatCapacity, referenceTemperatureK).jPerKgK, source: heatCapacity.source };
+}
+
+/** What belongs to the substance whatever its phase. */
+function ofTheSubstance(record: SubstanceRecord, datum: ToDatum): Partial<Substance> {
+  const { meltingPoint, boilingPoint, sublimationPoint, decompositionPoint, flashPoint, autoignition } = record;
+  const kelvin = (given: TemperatureRecord): Datum => ({
+    ...datum(given.celsius, 1, given),
+    value: given.celsius + celsiusZeroK,
+  });
+  const limits = record.flammableLimits;
+  return {
+    ...(meltingPoint === undefined ? {} : { meltingPointK: kelvin(meltingPoint) }),
+    ...(boilingPoint === undefined ? {} : { boilingPointK: kelvin(boilingPoint) }),
+    ...(sublimationPoint === undefined ? {} : { sublimationPointK: kelvin(sublimationPoint) }),
+    ...(decompositionPoint === undefined ? {} : { decompositionPointK: kelvin(decompositionPoint) }),
+    ...(flashPoint === undefined ? {} : { flashPointK: kelvin(flashPoint) }),
+    ...(flashPoint?.cup === undefined ? {} : { flashPointCup: flashPoint.cup }),
+    ...(autoignition === undefined ? {} : { autoignitionK: kelvin(autoignition) }),
+    ...(limits === undefined
+      ? {}
+      : {
+          flammableLimits: {
+            lower: datum(limits.lowerPercent, 0.01, limits),
+            ...(limits.upperPercent === undefined ? {} : { upper: datum(limits.upperPercent, 0.01, limits) }),
+            ...(limits.celsius === undefined ? {} : { temperatureK: limits.celsius + celsiusZeroK }),
+          },
+        }),
+    ...(record.carbonOrigin === undefined ? {} : { carbonOrigin: record.carbonOrigin }),
+  };
+}
+
+function ruleValues(rule: RuleRecord, context: RecordContext): RuleValues {
+  const { lowerHeatingValueMJPerKg, carbonContent, carbonDioxideFactor, ...words } = rule;
+  return {
+    ...words,
+    source: context.sourceOf(rule.source),
+    ...(lowerHeatingValueMJPerKg === undefined ? {} : { lowerHeatingValueJPerKg: lowerHeatingValueMJPerKg * 1e6 }),
+    ...(carbonContent === undefined ? {} : { carbonContentKgPerKg: carbonContent }),
+    ...(carbonDioxideFactor === undefined ? {} : { carbonDioxideFactorKgPerKg: carbonDioxideFactor }),
+  };
+}
+
+function energyOfPhase(phaseRecord: PhaseRecord, matter: Matter, datum: ToDatum): Energy {
   const { formationEnthalpy, heatingValue } = phaseRecord;
   if (formationEnthalpy !== undefined && matter.molarMassKgPerMol !== undefined) {
     const jPerKg = datum(formationEnthalpy.kJPerMol, 1000 / matter.molarMassKgPerMol, formationEnthalpy);

@@ -24,6 +24,33 @@ interface Sourced {
   readonly uncertainty?: number;
 }
 
+/** A temperature in °C at 1 atm. */
+export type TemperatureRecord = Sourced & { readonly celsius: number };
+
+/**
+ * Of a gas or liquid with temperature: further points of the same source, straight lines between them, or else the share
+ * the volume grows by per kelvin, which may have a source of its own.
+ */
+export type DensityRecord = Sourced & {
+  readonly kgPerM3: number;
+  readonly temperatureK: number;
+  /** Pairs of K and kg/m³. Above the boiling point they are those of the saturated liquid. */
+  readonly points?: readonly (readonly [temperatureK: number, kgPerM3: number])[];
+  readonly expansionPerK?: number;
+  readonly expansionSource?: string;
+};
+
+/**
+ * One number near 25 °C, per kilogram or per mole; or J/(mol K) as a sum of terms, `{ "0": a, "1": b, "-2": c }` for
+ * a + b t + c/t² with t = T/1000 K, within the range the source gives.
+ */
+export type HeatCapacityRecord = Sourced &
+  (
+    | { readonly kJPerKgK: number }
+    | { readonly jPerMolK: number }
+    | { readonly jPerMolKTerms: Readonly<Record<string, number>>; readonly fromK: number; readonly toK: number }
+  );
+
 export interface PhaseRecord {
   readonly phase: Phase;
   /** The stable phase at 25 °C and 1 bar; exactly one a record. */
@@ -31,22 +58,43 @@ export interface PhaseRecord {
   readonly aliases?: readonly string[];
   /** From the elements at 298.15 K and 1 bar. */
   readonly formationEnthalpy?: Sourced & { readonly kJPerMol: number };
-  /** At 298.15 K and 1 bar. */
+  /** At 298.15 K and 1 bar; of an ion on the scale where H+ has none. */
   readonly entropy?: Sourced & { readonly jPerMolK: number };
   readonly heatingValue?: Sourced & { readonly basis: 'lower' | 'higher'; readonly mJPerKg: number };
-  readonly density?: Sourced & { readonly kgPerM3: number; readonly temperatureK: number };
-  readonly heatCapacity?: Sourced & { readonly kJPerKgK: number };
+  readonly density?: DensityRecord;
+  readonly heatCapacity?: HeatCapacityRecord;
 }
 
 /** What a rule prescribes for a fuel; it stands beside the physical value and never replaces it. */
 export interface RuleRecord {
   readonly source: string;
+  /** Name of the rule: `MEPC.364(79)`. */
+  readonly rule: string;
+  /** Which text of it: a table or annex with its year. */
+  readonly version: string;
+  /** What the rule calls the fuel. */
+  readonly fuel: string;
+  /** `2025-01-01`: the day from which these numbers apply. */
+  readonly inForceFrom: string;
+  /** The day on which the text was read. */
+  readonly seenOn: string;
   readonly lowerHeatingValueMJPerKg?: number;
   /** kg carbon per kg fuel. */
   readonly carbonContent?: number;
   /** kg CO2 per kg fuel. */
   readonly carbonDioxideFactor?: number;
 }
+
+/** Where carbon was before somebody made the substance; `mineral` is limestone, trona and the like. */
+export type CarbonOrigin = 'fossil' | 'biogenic' | 'mineral' | 'air';
+
+/** Vapour in air at 1 atm, per cent by volume. */
+export type FlammableLimitsRecord = Sourced & {
+  readonly lowerPercent: number;
+  readonly upperPercent?: number;
+  /** Of the mixture; absent where the source does not say. */
+  readonly celsius?: number;
+};
 
 export interface SubstanceRecord {
   /** Lower-case words joined by `_`; unique over names and aliases. */
@@ -60,7 +108,18 @@ export interface SubstanceRecord {
   readonly mixtureByMole?: Readonly<Record<string, number>>;
   readonly compositionSource?: string;
   readonly phases: readonly PhaseRecord[];
-  readonly flashPoint?: Sourced & { readonly celsius: number };
+  readonly meltingPoint?: TemperatureRecord;
+  readonly boilingPoint?: TemperatureRecord;
+  /** Instead of melting and boiling. */
+  readonly sublimationPoint?: TemperatureRecord;
+  /** Where it falls apart before it melts or boils. */
+  readonly decompositionPoint?: TemperatureRecord;
+  /** `cup` where the source names it; a closed cup reads lower. */
+  readonly flashPoint?: TemperatureRecord & { readonly cup?: 'closed' | 'open' };
+  readonly autoignition?: TemperatureRecord;
+  readonly flammableLimits?: FlammableLimitsRecord;
+  /** The usual origin of its carbon, needed where it is burnt or released; a user's own substance can say another. */
+  readonly carbonOrigin?: CarbonOrigin;
   /** Share of the carbon that is of biogenic origin, 0 to 1; absent counts as 0. */
   readonly carbonBiogenicShare?: number;
   readonly rules?: readonly RuleRecord[];

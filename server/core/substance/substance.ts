@@ -3,7 +3,7 @@
 // Invariant: `molPerKg` describes one kilogram whole, so its masses add up to 1 kg within the rounding of the composition.
 
 import type { Formula, Phase } from './formula.ts';
-import type { SourceRecord } from './record.ts';
+import type { CarbonOrigin, SourceRecord } from './record.ts';
 
 /** A number with its origin; `uncertainty` is a standard uncertainty in the unit of `value`. */
 export interface Datum {
@@ -21,14 +21,42 @@ export type Energy =
   | { readonly kind: 'heating-value'; readonly basis: 'lower' | 'higher'; readonly jPerKg: Datum }
   | { readonly kind: 'unknown' };
 
-/** A density and the temperature it holds at. */
+/** A density and the temperature it holds at; ask at-temperature.ts for another temperature. */
 export interface Density extends Datum {
   readonly temperatureK: number;
+  /** All points of the source in rising temperature, this one among them; straight lines between them. */
+  readonly points: readonly { readonly temperatureK: number; readonly kgPerM3: number }[];
+  /** Relative growth of the volume per kelvin, where there is but one point. */
+  readonly expansionPerK?: Datum;
 }
 
-/** A rule's own numbers for a fuel, in SI. */
+/** A heat capacity as a sum of powers of t = T/1000 K; ask at-temperature.ts for a value or an integral. */
+export interface HeatCapacity {
+  readonly terms: readonly { readonly power: number; readonly jPerKgK: number }[];
+  /** Where the source vouches for it; a single number near 25 °C has both ends at 298.15 K. */
+  readonly fromK: number;
+  readonly toK: number;
+  readonly source: SourceRecord;
+}
+
+/** Vapour in air between these shares by volume burns at 1 atm. */
+export interface FlammableLimits {
+  readonly lower: Datum;
+  readonly upper?: Datum;
+  /** Of the mixture; absent where the source does not say. */
+  readonly temperatureK?: number;
+}
+
+/** A rule's own numbers for a fuel, in SI, with what they were read from. */
 export interface RuleValues {
   readonly source: SourceRecord;
+  readonly rule: string;
+  readonly version: string;
+  /** What the rule calls the fuel. */
+  readonly fuel: string;
+  /** ISO dates: from when the numbers apply, and when the text was read. */
+  readonly inForceFrom: string;
+  readonly seenOn: string;
   readonly lowerHeatingValueJPerKg?: number;
   readonly carbonContentKgPerKg?: number;
   readonly carbonDioxideFactorKgPerKg?: number;
@@ -43,6 +71,8 @@ export interface Substance {
   readonly phase: Phase;
   /** With its phase; absent for mixtures and technical fuels. */
   readonly formula?: Formula;
+  /** What a mixture is made of, in mole shares that add up to 1; absent for all else. */
+  readonly members?: readonly { readonly formula: Formula; readonly moleShare: number }[];
   /** mol of each element per kg. */
   readonly molPerKg: ReadonlyMap<string, number>;
   /** mol of elementary charge per kg; 0 for all but ions. */
@@ -54,9 +84,21 @@ export interface Substance {
   readonly entropyJPerMolK?: Datum;
   /** kg/m³ */
   readonly density?: Density;
-  /** J/(kg K) near 25 °C. */
+  readonly heatCapacity?: HeatCapacity;
+  /** J/(kg K) at 25 °C, or at the nearer end of the range where that does not reach it. */
   readonly heatCapacityJPerKgK?: Datum;
+  /** The four at 1 atm; of the substance, so each of its phases carries them. */
+  readonly meltingPointK?: Datum;
+  readonly boilingPointK?: Datum;
+  readonly sublimationPointK?: Datum;
+  readonly decompositionPointK?: Datum;
   readonly flashPointK?: Datum;
+  /** Which cup the flash point was read in, where known; a closed one reads lower. */
+  readonly flashPointCup?: 'closed' | 'open';
+  readonly autoignitionK?: Datum;
+  readonly flammableLimits?: FlammableLimits;
+  /** The usual one; absent where there is no carbon or nobody burns or releases it. */
+  readonly carbonOrigin?: CarbonOrigin;
   /** Share of the carbon of biogenic origin, 0 to 1. */
   readonly carbonBiogenicShare: number;
   /** Source of a composition that is not simply a formula. */
