@@ -2,6 +2,7 @@
 // its source. Knows no scenario. Invariant: a word that fits nothing is answered with near ones and exit code 1.
 
 import { allSubstances, findSubstance, phasesOfSubstance, suggestSubstances } from '../core/substance/catalogue.ts';
+import { searchSubstances } from '../core/substance/search.ts';
 import type { Substance } from '../core/substance/substance.ts';
 import { catalogueCards, catalogueList } from '../report/catalogue.ts';
 import { materialOfSubstance } from '../scenario/materials.ts';
@@ -26,13 +27,9 @@ export function listCatalogue(word: string | undefined, io: Io): ExitCode {
   return ExitCode.Good;
 }
 
-/** The substance the word names, in the phase it is written with or else in all; else all that have it in a name. */
+/** The substance the word names, in the phase it is written with or else in all; else all that a search finds. */
 function substancesFor(word: string): readonly Substance[] {
   const exact = findSubstance(word);
   if (exact) return word.trimEnd().endsWith(`(${exact.phase})`) ? [exact] : phasesOfSubstance(exact.name);
-  const part = word.trim().toLowerCase().replace(/\s+/g, '_');
-  if (part === '') return [];
-  return allSubstances().filter(({ name, aliases, formula }) =>
-    [name, ...aliases, formula?.text ?? ''].some((text) => text.toLowerCase().replace(/\s+/g, '_').includes(part)),
-  );
+  return searchSubstances(word);
 }
