@@ -34,6 +34,7 @@ import { nameUnknown } from './name-unknown.ts';
 import { nameUseCycle } from './name-use-cycle.ts';
 import { nameWrongKind } from './name-wrong-kind.ts';
 import { programFailed } from './program-failed.ts';
+import { rangeHumidity } from './range-humidity.ts';
 import { rangeNumber } from './range-number.ts';
 import { rangePositive } from './range-positive.ts';
 import { rangeShare } from './range-share.ts';
@@ -113,6 +114,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'balance/products': balanceProducts,
   'balance/water-missing': balanceWaterMissing,
   'balance/contradiction': balanceContradiction,
+  'range/humidity': rangeHumidity,
   'range/number': rangeNumber,
   'range/temperature': rangeTemperature,
   'range/share': rangeShare,

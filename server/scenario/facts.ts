@@ -149,6 +149,8 @@ export type Fact =
       readonly text: string;
       readonly why: 'below-absolute-zero' | 'only-reference';
     }
+  /** Vapour at that humidity would need more than the whole pressure, or the temperature has no saturation pressure. */
+  | { readonly code: 'range/humidity'; readonly temperature: Quantity; readonly pressure: Quantity }
   | { readonly code: 'range/share'; readonly text: string; readonly low: number; readonly high: number }
   | { readonly code: 'range/positive'; readonly text: string; readonly entry: string }
   | {

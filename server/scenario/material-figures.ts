@@ -3,9 +3,14 @@
 // through it by the law of propagation, so that correlations between shares and properties are kept.
 // Knows no syntax. Invariant: a figure that cannot be had is in `absent` with what is missing, never a number.
 
-import { completeCombustion, type Slate } from '../core/balance/combustion.ts';
+import type { Slate } from '../core/balance/combustion.ts';
 import type { EnergyFault } from '../core/balance/formation-enthalpy.ts';
-import { heatingValueOfFuel, type SlateChoice } from '../core/balance/heating-value.ts';
+import {
+  heatingValueOnSlate,
+  slateOfChoice,
+  type HeatingValue,
+  type SlateChoice,
+} from '../core/balance/heating-value.ts';
 import {
   alkaliCarbonRatio,
   stoichiometricAirKgPerKg,
@@ -128,23 +133,24 @@ function workOut(material: Material): MaterialAnswer {
   ];
   const choice: SlateChoice = material.products ? { products: material.products } : 'as-ruled';
   const outcomes = propagate(inputs, ([enthalpy = NaN, biogenic = NaN, density = NaN, molarMass = NaN, ...amounts]) => {
+    const molPerKg = new Map(symbols.map((symbol, index) => [symbol, amounts[index] ?? 0]));
     const values = figureValues(
       {
-        molPerKg: new Map(symbols.map((symbol, index) => [symbol, amounts[index] ?? 0])),
+        molPerKg,
         enthalpyJPerKg: enthalpy,
         biogenicShare: biogenic,
         densityKgPerM3: density,
         molarMassKgPerMol: molarMass,
       },
-      choice,
+      burnings(molPerKg, enthalpy, choice),
     );
     return materialFigures.map((row) => values[row.id] ?? NaN);
   });
 
   const molPerKg = new Map([...material.elements].map(([symbol, amount]) => [symbol, amount.value]));
-  const value = heatingValueOfFuel(molPerKg, material.formationEnthalpy?.value ?? 0, choice);
-  const slate = value.kind === 'heating-value' ? value.slate : null;
-  const sources = value.kind === 'heating-value' ? value.sources.map(sourceText) : [];
+  const heats = burnings(molPerKg, material.formationEnthalpy?.value ?? 0, choice);
+  const { heat } = heats.ruled;
+  const slate = heat.kind === 'heating-value' ? heat.slate : null;
   const figures: Figure[] = [];
   const absent = new Map<string, readonly string[] | null>();
   for (const [index, row] of materialFigures.entries()) {
@@ -152,20 +158,51 @@ function workOut(material: Material): MaterialAnswer {
     const outcome = outcomes[index];
     if (outcome && Number.isFinite(outcome.value)) {
       const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
-      const working = workingOf(row, material, slate, sources);
+      const working = workingOf(row, material, burningOf(row.id, heats));
       figures.push({ id: row.id, label: row.label, quantity, unit: row.unit, working });
     } else {
-      const missing = missingFor(row.id, material, value);
+      const missing = missingFor(row.id, material, burningOf(row.id, heats).heat);
       if (missing.length > 0) absent.set(row.id, missing);
     }
   }
   const tables = [elementsTable(molPerKg), ...(slate ? [productsTable(slate)] : [])];
-  return { figures, tables, absent, fault: value.kind === 'fault' ? value : null };
+  return { figures, tables, absent, fault: heat.kind === 'fault' ? heat : null };
+}
+
+/** One fuel burnt on each slate it has a figure for; on the last two only where it holds alkali. */
+interface Burnings {
+  /** By the rule, or to the products that are named. */
+  readonly ruled: Burning;
+  readonly hydroxide: Burning | null;
+  readonly oxide: Burning | null;
+}
+
+interface Burning {
+  readonly slate: Slate | null;
+  readonly heat: HeatingValue | EnergyFault;
+}
+
+function burnings(molPerKg: ReadonlyMap<string, number>, enthalpyJPerKg: number, choice: SlateChoice): Burnings {
+  const on = (chosen: SlateChoice): Burning => {
+    const slate = slateOfChoice(molPerKg, chosen);
+    return slate.kind === 'fault'
+      ? { slate: null, heat: slate }
+      : { slate, heat: heatingValueOnSlate(slate, enthalpyJPerKg) };
+  };
+  const hasAlkali = alkaliMetals.some((metal) => (molPerKg.get(metal) ?? 0) > 0);
+  return {
+    ruled: on(choice),
+    hydroxide: hasAlkali ? on('hydroxide') : null,
+    oxide: hasAlkali ? on('oxide') : null,
+  };
 }
 
 /** All figures from plain numbers, in SI; one that does not apply or cannot be had is left out. */
-function figureValues(numbers: MaterialNumbers, choice: SlateChoice): Partial<Record<FigureId, number>> {
-  const { molPerKg, enthalpyJPerKg, densityKgPerM3 } = numbers;
+function figureValues(
+  numbers: MaterialNumbers,
+  { ruled: { heat }, hydroxide, oxide }: Burnings,
+): Partial<Record<FigureId, number>> {
+  const { molPerKg, densityKgPerM3, enthalpyJPerKg } = numbers;
   const values: Partial<Record<FigureId, number>> = {
     'molar-mass': numbers.molarMassKgPerMol,
     density: densityKgPerM3,
@@ -176,7 +213,6 @@ function figureValues(numbers: MaterialNumbers, choice: SlateChoice): Partial<Re
   if (carbon > 0) values['biogenic-carbon-share'] = numbers.biogenicShare;
   const air = stoichiometricAirKgPerKg(molPerKg);
   if (air !== undefined && air > 0) values['stoichiometric-air'] = air;
-  const heat = heatingValueOfFuel(molPerKg, enthalpyJPerKg, choice);
   if (heat.kind === 'heating-value') {
     values['lower-heating-value'] = heat.lowerJPerKg;
     values['higher-heating-value'] = heat.higherJPerKg;
@@ -184,13 +220,10 @@ function figureValues(numbers: MaterialNumbers, choice: SlateChoice): Partial<Re
     values['volumetric-higher-heating-value'] = heat.higherJPerKg * densityKgPerM3;
     values['water-made'] = waterMadeKgPerKg(heat.slate);
   }
-  if (alkaliMetals.some((metal) => (molPerKg.get(metal) ?? 0) > 0)) {
-    const hydroxide = heatingValueOfFuel(molPerKg, enthalpyJPerKg, 'hydroxide');
-    const oxide = heatingValueOfFuel(molPerKg, enthalpyJPerKg, 'oxide');
-    if (hydroxide.kind === 'heating-value') values['hydroxide-lower-heating-value'] = hydroxide.lowerJPerKg;
-    if (oxide.kind === 'heating-value') values['oxide-lower-heating-value'] = oxide.lowerJPerKg;
-    const hydroxideSlate = completeCombustion(molPerKg, 'hydroxide');
-    if (hydroxideSlate.kind === 'slate') values['water-missing'] = waterMissingKgPerKg(hydroxideSlate);
+  if (hydroxide?.heat.kind === 'heating-value') values['hydroxide-lower-heating-value'] = hydroxide.heat.lowerJPerKg;
+  if (oxide?.heat.kind === 'heating-value') values['oxide-lower-heating-value'] = oxide.heat.lowerJPerKg;
+  if (hydroxide?.slate) {
+    values['water-missing'] = waterMissingKgPerKg(hydroxide.slate);
     const ratio = alkaliCarbonRatio(molPerKg);
     if (ratio !== undefined) values['alkali-carbon-ratio'] = ratio;
   }
@@ -215,7 +248,7 @@ const needsMolarMass: ReadonlySet<string> = new Set<FigureId>(['molar-mass', 'fo
 const needsSlate: ReadonlySet<string> = new Set([...needsEnthalpy, 'water-made']);
 
 /** Names, in words, of the data a figure lacks; empty when it simply does not apply. */
-function missingFor(id: FigureId, material: Material, heat: ReturnType<typeof heatingValueOfFuel>): readonly string[] {
+function missingFor(id: FigureId, material: Material, heat: Burning['heat']): readonly string[] {
   const missing: string[] = [];
   const say = (what: string, names: readonly string[] | undefined): void => {
     for (const name of names ?? []) missing.push(`${what} of ${name}`);
@@ -246,7 +279,13 @@ function isExpected(id: FigureId, material: Material): boolean {
   return id !== 'formation-enthalpy' || material.formula !== null;
 }
 
-function workingOf(row: FigureRow, material: Material, slate: Slate | null, sources: readonly string[]): Working {
+/** The burning a figure rests on. */
+function burningOf(id: FigureId, { ruled, hydroxide, oxide }: Burnings): Burning {
+  if (id === 'hydroxide-lower-heating-value' || id === 'water-missing') return hydroxide ?? ruled;
+  return id === 'oxide-lower-heating-value' ? (oxide ?? ruled) : ruled;
+}
+
+function workingOf(row: FigureRow, material: Material, { slate, heat }: Burning): Working {
   const assumptions: AssumptionId[] = [...material.assumptions];
   const inputs: WorkingInput[] = [];
   const add = (label: string, quantity: Quantity | null, unit: string): void => {
@@ -257,10 +296,12 @@ function workingOf(row: FigureRow, material: Material, slate: Slate | null, sour
     assumptions.push('reference-state');
   }
   if (needsSlate.has(row.id) && slate && row.id !== 'formation-enthalpy') {
-    for (const product of slateOf(row.id, material, slate).products) {
+    for (const product of slate.products) {
       add(product.species, quantityOf(product.molPerKg, knownUnit('mol/kg').dimension), 'mol/kg');
     }
-    assumptions.push(slateAssumption(row.id, slate));
+    assumptions.push(slateAssumptions[slate.rule]);
+    const alkali = alkaliMetals.filter((metal) => (material.elements.get(metal)?.value ?? 0) > 0);
+    if (slate.rule !== 'given' && alkali.length > 1) assumptions.push('several-alkalis-proportional');
   }
   if (needsDensity.has(row.id)) add('Density', material.density, 'kg/m3');
   if (row.id === 'stoichiometric-air') assumptions.push('dry-air');
@@ -268,31 +309,21 @@ function workingOf(row: FigureRow, material: Material, slate: Slate | null, sour
     for (const [symbol, amount] of material.elements) add(symbol, amount, 'mol/kg');
   }
   if (needsMolarMass.has(row.id)) add('Molar mass', material.molarMass, 'g/mol');
-  const used = needsSlate.has(row.id) ? [...material.sources, ...sources] : material.sources;
+  const ofProducts = needsSlate.has(row.id) && heat.kind === 'heating-value' ? heat.sources.map(sourceText) : [];
   return {
     method: methodOf(row, material),
     inputs,
-    sources: [...new Set(used)],
+    sources: [...new Set([...material.sources, ...ofProducts])],
     assumptions: [...new Set(assumptions)],
   };
 }
 
-function slateOf(id: string, material: Material, slate: Slate): Slate {
-  const rule =
-    id === 'hydroxide-lower-heating-value' ? 'hydroxide' : id === 'oxide-lower-heating-value' ? 'oxide' : null;
-  if (!rule) return slate;
-  const other = completeCombustion(
-    new Map([...material.elements].map(([symbol, amount]) => [symbol, amount.value])),
-    rule,
-  );
-  return other.kind === 'slate' ? other : slate;
-}
-
-function slateAssumption(id: string, slate: Slate): AssumptionId {
-  if (id === 'hydroxide-lower-heating-value') return 'hydroxide-slate';
-  if (id === 'oxide-lower-heating-value') return 'oxide-slate';
-  return slate.rule === 'given' ? 'given-slate' : 'carbonate-slate';
-}
+const slateAssumptions: Readonly<Record<Slate['rule'], AssumptionId>> = {
+  'as-ruled': 'carbonate-slate',
+  hydroxide: 'hydroxide-slate',
+  oxide: 'oxide-slate',
+  given: 'given-slate',
+};
 
 /** A substance's own density and molar mass are given, a blend's are mixed. */
 function methodOf(row: FigureRow, material: Material): MethodId {

@@ -14,6 +14,8 @@ export interface Material {
   /** null for a mixture without one. */
   readonly formula: Formula | null;
   readonly phase: string | null;
+  /** Mole share of each species by its formula with phase (`O2(g)`); null where the molecules are not known. */
+  readonly species: ReadonlyMap<string, number> | null;
   /** mol of each element per kg. */
   readonly elements: ReadonlyMap<string, Quantity>;
   /** kg/mol */

@@ -134,6 +134,7 @@ function materialOfFormula(formula: Formula): Material {
     origin: 'formula',
     formula,
     phase: formula.phase ?? null,
+    species: new Map([[text, 1]]),
     elements: elementsOf(molPerKg),
     molarMass: molarMass === undefined ? null : quantityOf(molarMass, units.molarMass),
     formationEnthalpy: null,
@@ -171,6 +172,7 @@ function buildMaterial(substance: Substance): Material {
     origin: 'catalogue',
     formula: substance.formula ?? null,
     phase: substance.phase,
+    species: speciesOf(substance),
     elements: elementsOf(substance.molPerKg),
     molarMass,
     formationEnthalpy: enthalpy,
@@ -257,6 +259,11 @@ export function sourceText(source: SourceRecord): string {
   const where = source.where ? `, ${source.where}` : '';
   const remembered = source.provenance === 'from memory' ? ' [from memory]' : '';
   return `${source.author}${year}, ${source.title}${where}${remembered}`;
+}
+
+function speciesOf({ formula, members }: Substance): ReadonlyMap<string, number> | null {
+  if (formula) return new Map([[formulaTextWithPhase(formula), 1]]);
+  return members ? new Map(members.map((member) => [formulaTextWithPhase(member.formula), member.moleShare])) : null;
 }
 
 function elementsOf(molPerKg: ReadonlyMap<string, number>): ReadonlyMap<string, Quantity> {

@@ -50,6 +50,7 @@ export interface Mixed {
   /** Shares missed 1 by rounding and were scaled. */
   readonly scaled: boolean;
   readonly shares: readonly PortionShare[];
+  readonly species: Material['species'];
   readonly elements: ReadonlyMap<string, Quantity>;
   readonly formationEnthalpy: Quantity | null;
   readonly molarMass: Quantity | null;
@@ -142,8 +143,15 @@ function mixedOf(
   const [enthalpy, molarMass, density, biogenic, ...others] = outcomes;
   const elementOutcomes = others.slice(0, symbols.length);
   const shareOutcomes = others.slice(symbols.length);
+  const shares: readonly PortionShare[] = parts.map(({ material }, index) => ({
+    name: material.name,
+    mass: known(shareOutcomes[3 * index], '1') ?? quantityOf(centre[index] ?? 0, dimensionless),
+    mole: known(shareOutcomes[3 * index + 1], '1'),
+    volume: known(shareOutcomes[3 * index + 2], '1'),
+  }));
   return {
     scaled,
+    species: speciesOf(parts, shares),
     formationEnthalpy: known(enthalpy, 'J/kg'),
     molarMass: known(molarMass, 'kg/mol'),
     density: known(density, 'kg/m3'),
@@ -154,11 +162,19 @@ function mixedOf(
         known(elementOutcomes[index], 'mol/kg') ?? quantityOf(0, knownUnit('mol/kg').dimension),
       ]),
     ),
-    shares: parts.map(({ material }, index) => ({
-      name: material.name,
-      mass: known(shareOutcomes[3 * index], '1') ?? quantityOf(centre[index] ?? 0, dimensionless),
-      mole: known(shareOutcomes[3 * index + 1], '1'),
-      volume: known(shareOutcomes[3 * index + 2], '1'),
-    })),
+    shares,
   };
+}
+
+/** Mole shares of the species of all parts together; null where the molecules of one are not known. */
+function speciesOf(parts: readonly Part[], shares: readonly PortionShare[]): Material['species'] {
+  const species = new Map<string, number>();
+  for (const [index, { material }] of parts.entries()) {
+    const mole = shares[index]?.mole;
+    if (!material.species || !mole) return null;
+    for (const [formula, share] of material.species) {
+      species.set(formula, (species.get(formula) ?? 0) + share * mole.value);
+    }
+  }
+  return species;
 }

@@ -41,7 +41,10 @@ export type MethodId =
   | 'reaction-enthalpy'
   | 'reaction-gibbs-energy'
   | 'equilibrium-constant'
-  | 'specific-reaction-enthalpy';
+  | 'specific-reaction-enthalpy'
+  | 'wet-gas'
+  | 'humidity-ratio'
+  | 'ideal-gas-density';
 
 export type AssumptionId =
   | 'reference-state'
@@ -56,5 +59,6 @@ export type AssumptionId =
   | 'stable-phase'
   | 'remainder-hydrogen'
   | 'ideal-gas'
+  | 'dry-gas'
   | 'fossil-by-default'
   | 'several-alkalis-proportional';

@@ -141,4 +141,23 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols: 'νᵣ, Mᵣ coefficient and molar mass of each substance on the left',
     validity: 'Oxygen on the left side counts in the mass; negative means that heat is set free.',
   },
+  'wet-gas': {
+    words: 'The species of the portions, with the water vapour that the humidity brings.',
+    equation: 'yᵥ = φ pₛ(T) / p; yᵢ = (1 − yᵥ) xᵢ; M = Σ yᵢ Mᵢ',
+    symbols:
+      'φ relative humidity, pₛ saturation pressure of water, xᵢ mole share of species i in the portions, yᵢ and yᵥ mole shares of species and vapour as it is',
+    validity: 'Holds up to about 10 bar: above it air itself raises the vapour pressure by more than a few percent.',
+  },
+  'humidity-ratio': {
+    words: 'The mass of vapour over the mass of all else.',
+    equation: 'W = yᵥ Mᵥ / ((1 − yᵥ) M₀)',
+    symbols: 'yᵥ mole share and Mᵥ molar mass of water vapour, M₀ molar mass of the dry gas',
+    validity: 'Holds where the mole share of the vapour does.',
+  },
+  'ideal-gas-density': {
+    words: 'The density of an ideal gas at the state given.',
+    equation: 'ρ = p M / (R T)',
+    symbols: 'p pressure, M molar mass, R gas constant, T temperature',
+    validity: 'Within 1 % for air below about 30 bar at room temperature; worse above.',
+  },
 };

@@ -92,6 +92,7 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     origin: 'scenario',
     formula: null,
     phase: null,
+    species: mixed.species,
     elements: mixed.elements,
     molarMass: mixed.molarMass,
     formationEnthalpy: mixed.formationEnthalpy,

@@ -3,13 +3,14 @@
 
 import { blend } from './blend.ts';
 import type { Kind } from './kind.ts';
+import { oxidant } from './oxidant.ts';
 import { reaction } from './reaction.ts';
 import { substance } from './substance.ts';
 
 export const kinds: readonly Kind[] = [
   substance,
   blend,
-  later('oxidant', 'What a blend is burnt in: dry or humid air, oxygen, steam, water or recycled exhaust.'),
+  oxidant,
   reaction,
   later('burn', 'A blend burnt in an oxidant to chemical equilibrium, and its products as they cool.'),
   later('engine', 'An engine, by the cycle it works or by its measured consumption against load.'),

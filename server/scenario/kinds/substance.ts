@@ -11,7 +11,7 @@ import { noParts } from '../../core/quantity/parts.ts';
 import { isFault, multiply, divide, quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
 import { molPerKgOfFormula } from '../../core/substance/composition.ts';
-import { molarMassKgPerMol, type Formula } from '../../core/substance/formula.ts';
+import { formulaTextWithPhase, molarMassKgPerMol, type Formula } from '../../core/substance/formula.ts';
 import { compositionReader } from '../composition.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead, type EntryRow, type Reader } from '../entries.ts';
@@ -209,6 +209,7 @@ function materialOf(
     origin: 'scenario',
     formula,
     phase,
+    species: formula && new Map([[formulaTextWithPhase({ ...formula, phase }), 1]]),
     elements,
     molarMass,
     formationEnthalpy,

@@ -259,6 +259,10 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     '`-300 degC` is below absolute zero (−273.15 °C). Is the sign or the unit wrong?',
   ],
   [
+    { code: 'range/humidity', temperature: quantity(120, 'degC', 0, 'temperature'), pressure: quantity(1, 'bar') },
+    'There is no air of that relative humidity at 120 °C and 1 bar: its vapour alone would reach the whole pressure, or water has no saturation pressure there. Give the state it was measured at, or a humidity ratio such as `10 g/kg`.',
+  ],
+  [
     { code: 'range/share', text: '120 %', low: 0, high: 1 },
     '`120 %` is not possible here; it can be from 0 % to 100 %.',
   ],

@@ -1,0 +1,31 @@
+// iapws (Debian python3-iapws): saturation pressure of water by IAPWS-IF97 and sublimation pressure of ice by IAPWS R14-08.
+
+export const packages = ['python3-iapws'];
+/** Debian's own interpreter: another python3 earlier in the path does not see Debian's modules. */
+const python = '/usr/bin/python3';
+export const program = [python, '-c', 'import iapws'];
+
+const temperaturesK = {
+  ice: [200, 230, 250, 263.15, 273],
+  liquid: [273.16, 283.15, 291.15, 298.15, 300, 313.15, 333.15, 373.15, 473.15, 573.15, 640],
+};
+
+const script = `
+import json, sys
+import iapws
+from iapws._iapws import _Sublimation_Pressure
+from iapws.iapws97 import _PSat_T
+temperatures = json.load(sys.stdin)
+rows = [{"over": "ice", "temperatureK": t, "pressurePa": _Sublimation_Pressure(t) * 1e6} for t in temperatures["ice"]]
+rows += [{"over": "liquid", "temperatureK": t, "pressurePa": _PSat_T(t) * 1e6} for t in temperatures["liquid"]]
+print(json.dumps({"version": iapws.__version__, "rows": rows}))
+`;
+
+export async function answer({ run }) {
+  const { version, rows } = JSON.parse(run(python, ['-c', script], JSON.stringify(temperaturesK)));
+  return {
+    source: `iapws ${version} (Debian): saturation pressure by IAPWS-IF97, sublimation pressure by IAPWS R14-08`,
+    command: '/usr/bin/python3 -c "from iapws.iapws97 import _PSat_T; …"',
+    rows: rows.map((row) => ({ ...row, provenance: 'seen' })),
+  };
+}
