@@ -8,7 +8,7 @@ import { chmodSync, existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, wr
 import os from 'node:os';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
-import { runTests } from '@vscode/test-electron';
+import { resolveCliPathFromVSCodeExecutablePath, runTests } from '@vscode/test-electron';
 import { build } from 'esbuild';
 import { readVitestCounts, runVitest } from './vitest.mjs';
 
@@ -93,7 +93,9 @@ function installInto(name, editor) {
   mkdirSync(folder);
   const userData = `--user-data-dir=${path.join(scratch, `${name}-user-data`)}`;
   const args = ['--install-extension', vsix, `--extensions-dir=${folder}`, userData];
-  const result = spawnSync(editor, args, { encoding: 'utf8' });
+  // A desktop editor installs through the command line program beside it.
+  const program = editor === standIn ? standIn : resolveCliPathFromVSCodeExecutablePath(editor);
+  const result = spawnSync(program, args, { encoding: 'utf8' });
   if (result.status !== 0) throw new Error(`The editor did not install ${vsix}:\n${result.stdout}${result.stderr}`);
   console.log(result.stdout.trim().split('\n').at(-1));
   return folder;

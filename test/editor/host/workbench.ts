@@ -73,6 +73,7 @@ export async function openWorkbench(
 const QUIET_SETTINGS = {
   'workbench.colorTheme': 'Default Dark Modern',
   'workbench.startupEditor': 'none',
+  'files.autoSave': 'off', // on the web it is on, and a test saves when it means to
   'workbench.tips.enabled': false,
   'workbench.reduceMotion': 'on',
   'workbench.enableExperiments': false,
