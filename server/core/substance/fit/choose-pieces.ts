@@ -5,6 +5,7 @@
 import { constraintEquations, countUnknowns, equationsPerRow, rowEquations } from './equations.ts';
 import type { Anchor, GibbsPoint, Piece } from './equations.ts';
 import { solveLeastSquares } from './least-squares.ts';
+import type { LinearRows } from './least-squares.ts';
 import { referenceTemperatureK } from './source-table.ts';
 import type { SourceRow, Stretch } from './source-table.ts';
 
@@ -127,10 +128,14 @@ function layOut(stretches: readonly Stretch[], joins: Joins, extraTerms: number)
   });
 }
 
-/** As many terms as rows say what the heat capacity is; extra ones only where every row does, or nothing would hold them. */
+/**
+ * As many terms as rows say what the heat capacity is; extra ones only where every row does, or nothing would hold them. In a
+ * narrow piece high powers are all alike: seven would be huge numbers that cancel.
+ */
 function mostTerms(rows: readonly SourceRow[], extraTerms: number): number {
+  const isNarrow = (rows.at(-1)?.temperatureK ?? 0) < 1.3 * (rows[0]?.temperatureK ?? 0);
   const telling = rows.filter((row) => row.setAside?.includes('heatCapacity') !== true).length;
-  return Math.min(termOrder.length, Math.max(1, telling + (telling === rows.length ? extraTerms : 0)));
+  return Math.min(isNarrow ? 5 : termOrder.length, Math.max(1, telling + (telling === rows.length ? extraTerms : 0)));
 }
 
 function usedTerms(count: number): readonly number[] {
@@ -141,14 +146,16 @@ function solvePieces(pieces: readonly Piece[], gibbsPoints: readonly GibbsPoint[
   const anchor = anchorOf(pieces);
   const equations = rowEquations(pieces, anchor);
   const unknowns = countUnknowns(pieces);
-  const solution = solveLeastSquares(equations, constraintEquations(pieces, anchor, gibbsPoints), unknowns);
+  const constraints = constraintEquations(pieces, anchor, gibbsPoints);
+  const solution = solveLeastSquares(equations, constraints, unknowns);
   let worst = 0;
-  equations.targets.forEach((target, equation) => {
+  equations.targets.forEach((_, equation) => {
     if (equation % equationsPerRow === equationsPerRow - 1) return; // entropy is a weight, not a limit
-    let residual = -target;
-    for (let j = 0; j < unknowns; j += 1)
-      residual += (equations.coefficients[equation * unknowns + j] ?? 0) * (solution[j] ?? 0);
-    worst = Math.max(worst, Math.abs(residual));
+    worst = Math.max(worst, residualOf(equations, equation, solution));
+  });
+  // With too few terms constraints contradict each other, and the solver leaves out the later ones.
+  constraints.targets.forEach((_, equation) => {
+    worst = Math.max(worst, residualOf(constraints, equation, solution) / mostOffConstraint);
   });
   let offset = 0;
   const terms = pieces.map((piece) => {
@@ -157,6 +164,16 @@ function solvePieces(pieces: readonly Piece[], gibbsPoints: readonly GibbsPoint[
     return all;
   });
   return { pieces, terms, anchor, worst: Number.isNaN(worst) ? Number.POSITIVE_INFINITY : worst };
+}
+
+/** What cp/R or G/RT may be off where they must hold exactly, before that counts as much as a residual at its limit. */
+const mostOffConstraint = 1e-5;
+
+function residualOf({ coefficients, targets }: LinearRows, equation: number, solution: Float64Array): number {
+  let residual = -(targets[equation] ?? 0);
+  for (let j = 0; j < solution.length; j += 1)
+    residual += (coefficients[equation * solution.length + j] ?? 0) * (solution[j] ?? 0);
+  return Math.abs(residual);
 }
 
 /** The row at 298.15 K, in the upper piece where two meet there; else the last row. */
