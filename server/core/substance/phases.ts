@@ -1,0 +1,185 @@
+// The phases the program has thermochemical data for, each with its curve, its valid range and its source; and which of the
+// condensed phases of a composition is the stable one at a temperature. Joins the fitted records with the limits kept by hand.
+// Knows no catalogue, no names of users and no equilibrium beyond one composition. Everything is read at the first question.
+// Invariant: whatever is asked beyond the valid range is answered and said to be extrapolated, never refused or silent.
+// Source: M. W. Chase Jr., NIST-JANAF Thermochemical Tables, 4th ed., J. Phys. Chem. Ref. Data Monograph 9 (1998), by fit.
+
+import { compositionKey, molarMassKgPerMol, parseFormula } from './formula.ts';
+import type { Formula } from './formula.ts';
+import { compileCurve, evaluateCurve } from './phase-curve.ts';
+import type { MolarProperties, PhaseCurve } from './phase-curve.ts';
+import type { PhaseChangeFit, PhaseFit, PhaseLimit } from './phase-fit.ts';
+import { phaseFits, phaseLimits } from './phase-records.ts';
+
+/** A range of temperatures in K, both ends included. */
+export type TemperatureRange = readonly [fromK: number, toK: number];
+
+/** One phase of one composition with its data. */
+export interface ThermoPhase {
+  /** Unique: `Na2CO3(cr)`, `Al2O3(cr,alpha)`, `HNO2(g,cis)`. */
+  readonly id: string;
+  readonly label: string;
+  /** With its phase, always one of gas, liquid and crystal. */
+  readonly formula: Formula;
+  readonly form?: string;
+  readonly molarMassKgPerMol: number;
+  /** J/mol and J/(mol K) at 298.15 K, 1 bar; absent where the phase has no values there. */
+  readonly formationEnthalpyJPerMol?: number;
+  readonly entropyJPerMolK?: number;
+  readonly curve: PhaseCurve;
+  /** Where the curve follows published values of a phase that exists: the fitted range, cut at `limit`. */
+  readonly validK: TemperatureRange;
+  /** Where the phase has the lowest Gibbs energy of the condensed phases of its composition, cut likewise; empty for gases. */
+  readonly stableK: readonly TemperatureRange[];
+  /** The real end of a crystal whose table runs on and that has no liquid to turn into. */
+  readonly limit?: PhaseLimit;
+  /** Changes into other phases, by temperature. */
+  readonly changes: readonly PhaseChangeFit[];
+  /** Why a search for the stable state must not use this phase. */
+  readonly leftOut?: string;
+  readonly note?: string;
+  /** Author and year, and the number of the table. */
+  readonly source: string;
+  /** How far the fit is from the published rows at most. */
+  readonly worst: PhaseFit['worst'];
+}
+
+/** Molar properties at a temperature, and whether it lies outside the valid range. */
+export interface PhaseProperties extends MolarProperties {
+  readonly temperatureK: number;
+  readonly extrapolated: 'no' | 'below' | 'above';
+  readonly validK: TemperatureRange;
+}
+
+/** The stable condensed phase, or why there is none: no such composition, no data there, or nothing known past a limit. */
+export type StablePhase =
+  | { readonly kind: 'phase'; readonly phase: ThermoPhase; readonly properties: PhaseProperties }
+  | { readonly kind: 'unknown-composition' }
+  | { readonly kind: 'outside-data'; readonly stableK: readonly TemperatureRange[] }
+  | { readonly kind: 'past-limit'; readonly phase: ThermoPhase; readonly limit: PhaseLimit };
+
+/** Every phase, in the order of the data. */
+export function allPhases(): readonly ThermoPhase[] {
+  return library().phases;
+}
+
+/** The phase of that exact id, or undefined. */
+export function phaseOfId(id: string): ThermoPhase | undefined {
+  return library().byId.get(id);
+}
+
+/**
+ * All phases with the formula's atoms and charge, in its phase where it carries one. Isomers and forms stand side by side:
+ * the one that is stable at 298.15 K first, then by id.
+ */
+export function phasesOfFormula(formula: Formula): readonly ThermoPhase[] {
+  const same = library().byComposition.get(compositionKey(formula)) ?? [];
+  return formula.phase === undefined ? same : same.filter((phase) => phase.formula.phase === formula.phase);
+}
+
+/**
+ * Heat capacity, enthalpy, entropy and Gibbs energy of a phase at a temperature in K and 1 bar, per mole; enthalpy is zero
+ * for the elements in their reference states at 298.15 K. Undefined for a temperature that is not positive and finite.
+ */
+export function propertiesOfPhase(phase: ThermoPhase, temperatureK: number): PhaseProperties | undefined {
+  if (!(temperatureK > 0) || !Number.isFinite(temperatureK)) return undefined;
+  const [fromK, toK] = phase.validK;
+  const extrapolated = temperatureK < fromK ? 'below' : temperatureK > toK ? 'above' : 'no';
+  return { ...evaluateCurve(phase.curve, temperatureK), temperatureK, extrapolated, validK: phase.validK };
+}
+
+/**
+ * The condensed phase with the lowest Gibbs energy among those of a composition, at a temperature in K; where two meet, the
+ * upper one. Only phases inside their valid ranges count, and none that is left out of searches. Whether a gas would be
+ * more stable still depends on pressure, and is not asked here.
+ */
+export function stableCondensedPhase(
+  formula: Pick<Formula, 'composition' | 'charge'>,
+  temperatureK: number,
+): StablePhase {
+  const condensed = (library().byComposition.get(compositionKey(formula)) ?? []).filter(
+    (phase) => phase.formula.phase !== 'g',
+  );
+  if (condensed.length === 0) return { kind: 'unknown-composition' };
+  let found: { phase: ThermoPhase; startK: number } | undefined;
+  for (const phase of condensed) {
+    for (const [startK, endK] of phase.stableK) {
+      const isIn = startK <= temperatureK && temperatureK <= endK;
+      if (isIn && (found === undefined || startK > found.startK)) found = { phase, startK };
+    }
+  }
+  const properties = found === undefined ? undefined : propertiesOfPhase(found.phase, temperatureK);
+  if (found !== undefined && properties !== undefined) return { kind: 'phase', phase: found.phase, properties };
+  const ended = condensed.find(
+    ({ limit, stableK }) => limit !== undefined && limit.atK < temperatureK && stableK.length > 0,
+  );
+  if (ended?.limit !== undefined) return { kind: 'past-limit', phase: ended, limit: ended.limit };
+  return { kind: 'outside-data', stableK: condensed.flatMap((phase) => phase.stableK).sort((a, b) => a[0] - b[0]) };
+}
+
+interface Library {
+  readonly phases: readonly ThermoPhase[];
+  readonly byId: ReadonlyMap<string, ThermoPhase>;
+  readonly byComposition: ReadonlyMap<string, readonly ThermoPhase[]>;
+}
+
+let built: Library | undefined;
+
+function library(): Library {
+  built ??= buildLibrary();
+  return built;
+}
+
+function buildLibrary(): Library {
+  const limits = new Map(phaseLimits.map((limit) => [limit.phase, limit]));
+  const phases = phaseFits.flatMap((record) => thermoPhase(record, limits.get(record.id)) ?? []);
+  const byComposition = new Map<string, ThermoPhase[]>();
+  const keys = new Map<string, string>();
+  for (const phase of phases) {
+    // Phases of one formula share the work of its key.
+    const key = keys.get(phase.formula.text) ?? compositionKey(phase.formula);
+    keys.set(phase.formula.text, key);
+    const same = byComposition.get(key);
+    if (same === undefined) byComposition.set(key, [phase]);
+    else same.push(phase);
+  }
+  for (const same of byComposition.values()) same.sort(byStability);
+  return { phases, byId: new Map(phases.map((phase) => [phase.id, phase])), byComposition };
+}
+
+/** A record whose formula cannot be read has no phase; the tests see to it that there is none. */
+function thermoPhase(record: PhaseFit, limit: PhaseLimit | undefined): ThermoPhase | undefined {
+  const formula = parseFormula(record.formula, record.phase);
+  if (formula.kind === 'fault') return undefined;
+  const molarMass = molarMassKgPerMol(formula);
+  if (molarMass === undefined) return undefined;
+  const endK = Math.min(record.toK, limit?.atK ?? record.toK);
+  const stableK = (record.stableK ?? [])
+    .map(([startK, toK]): TemperatureRange => [startK, Math.min(toK, endK)])
+    .filter(([startK, toK]) => startK < toK);
+  return {
+    id: record.id,
+    label: record.label,
+    formula,
+    molarMassKgPerMol: molarMass,
+    curve: compileCurve(record),
+    validK: [record.pieces[0]?.fromK ?? endK, endK],
+    stableK: record.leftOut === undefined ? stableK : [],
+    changes: record.changes ?? [],
+    source: `Chase 1998, table ${record.table}`,
+    worst: record.worst,
+    ...(record.form === undefined ? {} : { form: record.form }),
+    ...(record.formationKJPerMol === undefined ? {} : { formationEnthalpyJPerMol: record.formationKJPerMol * 1000 }),
+    ...(record.entropyJPerMolK === undefined ? {} : { entropyJPerMolK: record.entropyJPerMolK }),
+    ...(limit === undefined ? {} : { limit }),
+    ...(record.leftOut === undefined ? {} : { leftOut: record.leftOut }),
+    ...(record.note === undefined ? {} : { note: record.note }),
+  };
+}
+
+/** Stable at 298.15 K first, then condensed before gas, then by id. */
+function byStability(a: ThermoPhase, b: ThermoPhase): number {
+  const rank = ({ stableK, formula }: ThermoPhase): number =>
+    stableK.some(([startK, endK]) => startK <= 298.15 && 298.15 <= endK) ? 0 : formula.phase === 'g' ? 2 : 1;
+  return rank(a) - rank(b) || (a.id < b.id ? -1 : 1);
+}
