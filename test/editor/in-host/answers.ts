@@ -30,6 +30,13 @@ for (const share of ['70', '20']) {
   });
 }
 
+test('after a restart the server answers again', async () => {
+  const document = await openScenario(BLEND);
+  await vscode.commands.executeCommand('stokehold.restartServer');
+  const hover = await eventually('the hover', async () => hoverAt(document, 'winter_fuel'));
+  assert.ok(numbersShown(hover, 'MJ/kg').length > 0, `no heating value in: ${hover}`);
+});
+
 test("the findings are the command line's, with code, severity and place", async () => {
   const document = await openScenario(UNBALANCED);
   const computed = evaluateOnCommandLine(document.uri.fsPath).files[0]?.findings ?? [];
