@@ -37,6 +37,11 @@ export const problems = {
     message: 'A minus between two values needs a space on both sides: `a - b`.',
     fix: { title: 'Put spaces around the minus', span: spanOf(minus), newText: ' - ' },
   }),
+  toleranceMissing: (target: Span): Problem => ({
+    code: 'syntax/missing',
+    span: target,
+    message: '`within` needs to know how far from this is allowed. Write for example `within 34 MJ/kg ± 1 MJ/kg`.',
+  }),
   hyphenatedName: (word: Token): Problem => ({
     code: 'syntax/unexpected',
     span: spanOf(word),
@@ -175,7 +180,7 @@ function doesNotFitMessage(actual: Token, previous: Token | undefined, place: Pl
         : 'A value is missing before this comma.';
   }
   if (previous === undefined && place === 'portion') {
-    return 'This line is neither an entry nor a portion. An entry has a colon behind its words: `words: value`.';
+    return 'This line is neither an entry nor a portion. An entry has a colon behind its words: `words: value`; a portion starts with its amount: `30 % mass sodium`.';
   }
   if (place === 'portion') {
     return `\`${image}\` does not fit here. A portion is an amount and one substance, as in \`30 % mass sodium\`; a name that holds spaces needs quotes.`;
@@ -209,6 +214,11 @@ const joins = new Set([t.Plus, t.Minus, t.UnaryMinus, t.Star, t.Dot, t.Slash, t.
 function decimalComma(span: Span, image: string): Problem {
   const isPlain = /^\d+,\d+(?:[eE][+-]?\d+)?$/.test(image);
   const withPoint = image.replace(',', '.');
+  if (/^[1-9]\d{0,2},\d{3}$/.test(image)) {
+    const joined = image.replace(',', '');
+    const message = `\`${image}\` could be \`${joined}\` or \`${withPoint}\`. Write the one that is meant, without the comma.`;
+    return { code: 'syntax/unexpected', span, message };
+  }
   if (!isPlain) {
     const message = `\`${shorten(image)}\` is not a number: write the decimals behind a point, and no commas in between.`;
     return { code: 'syntax/unexpected', span, message };

@@ -2,13 +2,14 @@
 // the parser read them and turns a misfit into one problem. It does not know which entries exist or take what.
 // Invariant: a line gives exactly one node and at most one problem, and never reaches beyond its own tokens.
 import type { RawLine } from './lines.ts';
-import { arrowMissing, checkToken, doesNotFit, endsEarly } from './messages.ts';
+import { arrowMissing, checkToken, doesNotFit, endsEarly, problems } from './messages.ts';
 import { spanOf, textNode } from './nodes.ts';
 import { parseEquation, parseExpression, parsePhrases, parsePortion } from './parser.ts';
 import type { Mismatch, Outcome } from './parser.ts';
 import { retag } from './retag.ts';
 import type { Place } from './retag.ts';
 import { sectionProblems } from './section-messages.ts';
+import { knownSlip } from './slips.ts';
 import { Colon, endOf, OpenBracket, Plus, Slash, Text, WordToken } from './tokens.ts';
 import type { Token } from './tokens.ts';
 import type { Acknowledge, BrokenLine, Entry, Expression, Line, Problem, Span } from './tree.ts';
@@ -48,7 +49,9 @@ export function readExpression(
   place: 'expression' | 'claim',
   isUnit: IsUnit,
 ): { readonly node?: Expression; readonly problem?: Problem } {
-  return read(part, place, isUnit, parseExpression);
+  const { node, problem } = read(part, place, isUnit, parseExpression);
+  const lacking = problem ?? (node && withoutTolerance(node));
+  return { ...(node === undefined ? {} : { node }), ...(lacking === undefined ? {} : { problem: lacking }) };
 }
 
 function readEntry(raw: RawLine, isUnit: IsUnit): ReadLine {
@@ -61,7 +64,15 @@ function readEntry(raw: RawLine, isUnit: IsUnit): ReadLine {
   const place = words === 'until' ? 'claim' : 'value';
   const { node, problem } = read(raw, place, isUnit, parsePhrases);
   if (node === undefined) return broken(raw, problem, { words, wordsSpan });
-  return found<Entry>({ ...entry, phrases: node }, problem);
+  const first = node[0]?.items[0];
+  const lacking = problem ?? (first && first.kind !== 'connective' ? withoutTolerance(first) : undefined);
+  return found<Entry>({ ...entry, phrases: node }, lacking);
+}
+
+/** A `within` of which nothing says how far it reaches. */
+function withoutTolerance(claim: Expression): Problem | undefined {
+  if (claim.kind !== 'within' || claim.tolerance !== undefined) return undefined;
+  return problems.toleranceMissing(claim.target.span);
 }
 
 /** `acknowledge code: "reason"`; whatever of it is there is kept. */
@@ -110,6 +121,8 @@ function read<Node>(
 }
 
 function mismatchProblem({ actual, previous }: Mismatch, place: Place, part: LinePart): Problem {
+  const slip = knownSlip({ tokens: part.tokens, actual, previous, place });
+  if (slip !== undefined) return slip;
   const plus = place === 'portion' ? part.tokens.find((token) => token.tokenType === Plus) : undefined;
   if (plus !== undefined && part.tokens[0]?.tokenType !== OpenBracket) return arrowMissing(plus);
   if (actual !== undefined) return doesNotFit(actual, previous, place);
