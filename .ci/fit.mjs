@@ -18,7 +18,8 @@ if (argument === undefined) {
   console.error('Which folder holds index.json and tables/? Write: npm run fit -- DIR, or npm run fit -- --page.');
   process.exitCode = 1;
 } else if (argument === '--page') {
-  writePage(families.flatMap((family) => readJson(path.join(dataFolder, 'phases', `${family}.json`))));
+  const records = families.flatMap((family) => readJson(path.join(dataFolder, 'phases', `${family}.json`)));
+  writePage(records, readJson(path.join(dataFolder, 'phases', 'residuals.json')));
 } else {
   fitAll(path.resolve(argument));
 }
@@ -29,38 +30,41 @@ function fitAll(folder) {
     fit.readSourceTable(record, readFileSync(path.join(folder, 'tables', `${record.id}.csv`), 'utf8')),
   );
   const context = fit.fitContext(tables);
-  const records = tables.map((table, index) => {
+  const fitted = tables.map((table, index) => {
     if (process.stdout.isTTY) process.stdout.write(`\r${index + 1} of ${tables.length} `);
     return fit.fitTable(table, context);
   });
-  records.sort((a, b) => (a.id < b.id ? -1 : 1));
+  fitted.sort((a, b) => (a.fit.id < b.fit.id ? -1 : 1));
+  const records = fitted.map((each) => each.fit);
+  const residuals = fitted.map((each) => each.residuals);
   for (const family of families) {
     const own = records.filter((record) => fit.familyOf(record.formula) === family);
     writeFileSync(path.join(dataFolder, 'phases', `${family}.json`), lines(own));
   }
-  writePage(records);
+  writeFileSync(path.join(dataFolder, 'phases', 'residuals.json'), lines(residuals));
+  writePage(records, residuals);
   writeHeldOut(tables, context);
   const pieces = records.reduce((sum, record) => sum + record.pieces.length, 0);
   console.log(`\n${records.length} phases in ${pieces} pieces, ${Math.round((Date.now() - started) / 1000)} s.`);
-  reportOverLimits(records);
+  reportOverLimits(residuals);
 }
 
-function reportOverLimits(records) {
-  for (const record of records) {
-    const over = fit.overLimits(record);
-    const reason = fit.reasonsOverLimits[record.id];
+function reportOverLimits(residuals) {
+  for (const each of residuals) {
+    const over = fit.overLimits(each);
+    const reason = fit.reasonsOverLimits[each.phase];
     if (over.length > 0)
-      console.log(`${record.id} is over the limits: ${over.join(', ')}. ${reason ?? 'NO REASON GIVEN'}`);
-    else if (reason !== undefined) console.log(`${record.id} has a reason and is not over the limits.`);
+      console.log(`${each.phase} is over the limits: ${over.join(', ')}. ${reason ?? 'NO REASON GIVEN'}`);
+    else if (reason !== undefined) console.log(`${each.phase} has a reason and is not over the limits.`);
     if (over.length > 0 !== (reason !== undefined)) process.exitCode = 1;
   }
 }
 
-function writePage(records) {
+function writePage(records, residuals) {
   const limits = readJson(path.join(dataFolder, 'phase-limits.json'));
   const folder = path.join(root, 'examples/reference');
-  writeFileSync(path.join(folder, 'fit.md'), fit.fitPage(records, limits, 'fit-worst.svg'));
-  writeFileSync(path.join(folder, 'fit-worst.svg'), fit.fitPlot(records));
+  writeFileSync(path.join(folder, 'fit.md'), fit.fitPage(records, residuals, limits, 'fit-worst.svg'));
+  writeFileSync(path.join(folder, 'fit-worst.svg'), fit.fitPlot(residuals));
 }
 
 function writeHeldOut(tables, context) {

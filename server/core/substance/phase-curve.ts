@@ -27,11 +27,15 @@ export function compileCurve(record: PhaseFit): PhaseCurve {
   const inner = record.pieces.length;
   const boundsK = new Float64Array(inner + 3);
   boundsK[0] = Number.NEGATIVE_INFINITY;
-  record.pieces.forEach((piece, index) => (boundsK[index + 1] = piece.fromK));
   boundsK[inner + 1] = record.toK;
   boundsK[inner + 2] = Number.POSITIVE_INFINITY;
   const pieces = new Float64Array((inner + 2) * pieceLength);
-  record.pieces.forEach((piece, index) => pieces.set(piece.terms, (index + 1) * pieceLength));
+  for (let index = 0; index < inner; index += 1) {
+    const piece = record.pieces[index];
+    if (piece === undefined) continue;
+    boundsK[index + 1] = piece.fromK;
+    pieces.set(piece.terms, (index + 1) * pieceLength);
+  }
   setConstantHeatCapacity(pieces, 0, 1, boundsK[1] ?? 0);
   setConstantHeatCapacity(pieces, inner + 1, inner, record.toK);
 

@@ -15,9 +15,6 @@ export interface PieceFit {
 
 export type PhaseChange = 'melting' | 'boiling' | 'crystal-crystal' | 'lambda' | 'glass';
 
-/** The furthest the curve is from the published rows, and at which temperature. */
-export type WorstResidual = readonly [deviation: number, temperatureK: number];
-
 /** A change into another phase, with the heat taken up going up in temperature where the source states it. */
 export interface PhaseChangeFit {
   readonly atK: number;
@@ -48,12 +45,6 @@ export interface PhaseFit {
   readonly note?: string;
   /** Number of the published table. */
   readonly table: string;
-  /** Percent of cp, kJ/mol of H, and G/RT within the stable range (everywhere for a gas or a phase that is never stable). */
-  readonly worst: {
-    readonly heatCapacityPercent: WorstResidual;
-    readonly enthalpyKJPerMol: WorstResidual;
-    readonly gibbsOverRT: WorstResidual;
-  };
 }
 
 /**
@@ -69,4 +60,18 @@ export interface PhaseLimit {
   readonly products?: Readonly<Record<string, number>>;
   readonly source: string;
   readonly provenance: 'seen' | 'from memory';
+}
+
+/** The furthest a curve is from the published rows, and at which temperature. */
+export type WorstResidual = readonly [deviation: number, temperatureK: number];
+
+/**
+ * The worst residuals of one phase, kept in a file of their own that the program does not load: percent of cp, kJ/mol of H,
+ * and G/RT within the stable range (everywhere for a gas or a phase that is never stable).
+ */
+export interface FitResiduals {
+  readonly phase: string;
+  readonly heatCapacityPercent: WorstResidual;
+  readonly enthalpyKJPerMol: WorstResidual;
+  readonly gibbsOverRT: WorstResidual;
 }

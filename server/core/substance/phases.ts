@@ -5,7 +5,7 @@
 // Source: M. W. Chase Jr., NIST-JANAF Thermochemical Tables, 4th ed., J. Phys. Chem. Ref. Data Monograph 9 (1998), by fit.
 
 import { compositionKey, molarMassKgPerMol, parseFormula } from './formula.ts';
-import type { Formula } from './formula.ts';
+import type { Formula, FormulaFault } from './formula.ts';
 import { compileCurve, evaluateCurve } from './phase-curve.ts';
 import type { MolarProperties, PhaseCurve } from './phase-curve.ts';
 import type { PhaseChangeFit, PhaseFit, PhaseLimit } from './phase-fit.ts';
@@ -21,27 +21,26 @@ export interface ThermoPhase {
   readonly label: string;
   /** With its phase, always one of gas, liquid and crystal. */
   readonly formula: Formula;
-  readonly form?: string;
+  readonly form: string | undefined;
   readonly molarMassKgPerMol: number;
-  /** J/mol and J/(mol K) at 298.15 K, 1 bar; absent where the phase has no values there. */
-  readonly formationEnthalpyJPerMol?: number;
-  readonly entropyJPerMolK?: number;
+  /** J/mol and J/(mol K) at 298.15 K, 1 bar; undefined where the phase has no values there. */
+  readonly formationEnthalpyJPerMol: number | undefined;
+  readonly entropyJPerMolK: number | undefined;
+  /** Prepared when first asked for. */
   readonly curve: PhaseCurve;
   /** Where the curve follows published values of a phase that exists: the fitted range, cut at `limit`. */
   readonly validK: TemperatureRange;
   /** Where the phase has the lowest Gibbs energy of the condensed phases of its composition, cut likewise; empty for gases. */
   readonly stableK: readonly TemperatureRange[];
   /** The real end of a crystal whose table runs on and that has no liquid to turn into. */
-  readonly limit?: PhaseLimit;
+  readonly limit: PhaseLimit | undefined;
   /** Changes into other phases, by temperature. */
   readonly changes: readonly PhaseChangeFit[];
   /** Why a search for the stable state must not use this phase. */
-  readonly leftOut?: string;
-  readonly note?: string;
+  readonly leftOut: string | undefined;
+  readonly note: string | undefined;
   /** Author and year, and the number of the table. */
   readonly source: string;
-  /** How far the fit is from the published rows at most. */
-  readonly worst: PhaseFit['worst'];
 }
 
 /** Molar properties at a temperature, and whether it lies outside the valid range. */
@@ -132,13 +131,18 @@ function library(): Library {
 
 function buildLibrary(): Library {
   const limits = new Map(phaseLimits.map((limit) => [limit.phase, limit]));
-  const phases = phaseFits.flatMap((record) => thermoPhase(record, limits.get(record.id)) ?? []);
+  // Phases of one composition are written alike, so each formula is read once.
+  const formulas = new Map<string, Formula | FormulaFault>();
+  const phases: ThermoPhase[] = [];
+  for (const record of phaseFits) {
+    const formula = formulas.get(record.formula) ?? parseFormula(record.formula);
+    formulas.set(record.formula, formula);
+    const phase = thermoPhase(record, formula, limits.get(record.id));
+    if (phase !== undefined) phases.push(phase);
+  }
   const byComposition = new Map<string, ThermoPhase[]>();
-  const keys = new Map<string, string>();
   for (const phase of phases) {
-    // Phases of one formula share the work of its key.
-    const key = keys.get(phase.formula.text) ?? compositionKey(phase.formula);
-    keys.set(phase.formula.text, key);
+    const key = compositionKey(phase.formula);
     const same = byComposition.get(key);
     if (same === undefined) byComposition.set(key, [phase]);
     else same.push(phase);
@@ -148,33 +152,48 @@ function buildLibrary(): Library {
 }
 
 /** A record whose formula cannot be read has no phase; the tests see to it that there is none. */
-function thermoPhase(record: PhaseFit, limit: PhaseLimit | undefined): ThermoPhase | undefined {
-  const formula = parseFormula(record.formula, record.phase);
+function thermoPhase(
+  record: PhaseFit,
+  formula: Formula | FormulaFault,
+  limit: PhaseLimit | undefined,
+): ThermoPhase | undefined {
   if (formula.kind === 'fault') return undefined;
   const molarMass = molarMassKgPerMol(formula);
   if (molarMass === undefined) return undefined;
   const endK = Math.min(record.toK, limit?.atK ?? record.toK);
-  const stableK = (record.stableK ?? [])
-    .map(([startK, toK]): TemperatureRange => [startK, Math.min(toK, endK)])
-    .filter(([startK, toK]) => startK < toK);
+  let curve: PhaseCurve | undefined;
   return {
     id: record.id,
     label: record.label,
-    formula,
+    formula: {
+      kind: 'formula',
+      text: formula.text,
+      composition: formula.composition,
+      charge: formula.charge,
+      phase: record.phase,
+    },
+    form: record.form,
     molarMassKgPerMol: molarMass,
-    curve: compileCurve(record),
+    formationEnthalpyJPerMol: record.formationKJPerMol === undefined ? undefined : record.formationKJPerMol * 1000,
+    entropyJPerMolK: record.entropyJPerMolK,
+    get curve() {
+      return (curve ??= compileCurve(record));
+    },
     validK: [record.pieces[0]?.fromK ?? endK, endK],
-    stableK: record.leftOut === undefined ? stableK : [],
+    stableK: record.leftOut === undefined ? rangesBelow(record.stableK ?? [], endK) : [],
+    limit,
     changes: record.changes ?? [],
+    leftOut: record.leftOut,
+    note: record.note,
     source: `Chase 1998, table ${record.table}`,
-    worst: record.worst,
-    ...(record.form === undefined ? {} : { form: record.form }),
-    ...(record.formationKJPerMol === undefined ? {} : { formationEnthalpyJPerMol: record.formationKJPerMol * 1000 }),
-    ...(record.entropyJPerMolK === undefined ? {} : { entropyJPerMolK: record.entropyJPerMolK }),
-    ...(limit === undefined ? {} : { limit }),
-    ...(record.leftOut === undefined ? {} : { leftOut: record.leftOut }),
-    ...(record.note === undefined ? {} : { note: record.note }),
   };
+}
+
+function rangesBelow(ranges: readonly TemperatureRange[], endK: number): readonly TemperatureRange[] {
+  if (ranges.every((range) => range[1] <= endK)) return ranges;
+  return ranges
+    .map((range): TemperatureRange => [range[0], Math.min(range[1], endK)])
+    .filter((range) => range[0] < range[1]);
 }
 
 /** Stable at 298.15 K first, then condensed before gas, then by id. */

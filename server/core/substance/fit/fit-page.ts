@@ -1,16 +1,22 @@
 // The generated page of the fit: what was fitted and how, the species over the limits with their reasons, the worst of all in a
-// plot, the ends kept by hand, and every phase's residuals. Made from the records alone, so a test can tell when it is stale.
+// plot, the ends kept by hand, and every phase's residuals. Made from records and residuals alone, so a test can tell when it is stale.
 // Knows no files and no tables. Invariant: one line a phase, in the order of ids.
 
-import type { PhaseFit, PhaseLimit, WorstResidual } from '../phase-fit.ts';
+import type { FitResiduals, PhaseFit, PhaseLimit, WorstResidual } from '../phase-fit.ts';
 import { limits } from './equations.ts';
 import { overLimits } from './fit-tables.ts';
 import { reasonsOverLimits } from './remarks.ts';
 
 /** The page as Markdown; `plotFile` is the name of the plot beside it. */
-export function fitPage(records: readonly PhaseFit[], phaseLimits: readonly PhaseLimit[], plotFile: string): string {
+export function fitPage(
+  records: readonly PhaseFit[],
+  residuals: readonly FitResiduals[],
+  phaseLimits: readonly PhaseLimit[],
+  plotFile: string,
+): string {
   const sorted = [...records].sort((a, b) => (a.id < b.id ? -1 : 1));
-  const over = sorted.filter((record) => overLimits(record).length > 0);
+  const byPhase = new Map(residuals.map((each) => [each.phase, each]));
+  const over = residuals.filter((each) => overLimits(each).length > 0);
   const pieces = sorted.reduce((sum, record) => sum + record.pieces.length, 0);
   const terms = sorted.flatMap((record) => record.pieces).reduce((sum, piece) => sum + piece.terms.length, 0);
   const count = (phase: string): number => sorted.filter((record) => record.phase === phase).length;
@@ -28,9 +34,9 @@ ${sorted.length} phases (${count('g')} gas, ${count('l')} liquid, ${count('cr')}
 
 | against every row of the tables from 200 K | limit | worst | half of all phases below |
 | --- | --- | --- | --- |
-${summaryRow(sorted, 'heat capacity, %', limits.heatCapacityShare * 100, ({ worst }) => worst.heatCapacityPercent)}
-${summaryRow(sorted, 'enthalpy, kJ/mol', limits.enthalpyKJ, ({ worst }) => worst.enthalpyKJPerMol)}
-${summaryRow(sorted, 'G/RT, where stable', limits.gibbsOverRT, ({ worst }) => worst.gibbsOverRT)}
+${summaryRow(residuals, 'heat capacity, %', limits.heatCapacityShare * 100, (each) => each.heatCapacityPercent)}
+${summaryRow(residuals, 'enthalpy, kJ/mol', limits.enthalpyKJ, (each) => each.enthalpyKJPerMol)}
+${summaryRow(residuals, 'G/RT, where stable', limits.gibbsOverRT, (each) => each.gibbsOverRT)}
 
 ## Over the limits
 
@@ -67,22 +73,22 @@ Largest residual and its temperature in K.
 
 | phase | table | K | pieces | cp, % | H, kJ/mol | G/RT |
 | --- | --- | --- | --- | --- | --- | --- |
-${sorted.map(phaseRow).join('\n')}
+${sorted.map((record) => phaseRow(record, byPhase.get(record.id))).join('\n')}
 `;
 }
 
-type ResidualOf = (record: PhaseFit) => WorstResidual;
+type ResidualOf = (residuals: FitResiduals) => WorstResidual;
 
-function summaryRow(records: readonly PhaseFit[], label: string, limit: number, residualOf: ResidualOf): string {
-  const byResidual = [...records].sort((a, b) => residualOf(b)[0] - residualOf(a)[0]);
+function summaryRow(residuals: readonly FitResiduals[], label: string, limit: number, residualOf: ResidualOf): string {
+  const byResidual = [...residuals].sort((a, b) => residualOf(b)[0] - residualOf(a)[0]);
   const [worst] = byResidual;
   const median = byResidual[Math.floor(byResidual.length / 2)];
   if (worst === undefined || median === undefined) return '';
-  return `| ${label} | ${limit} | ${residualOf(worst)[0]} (${worst.id}, ${residualOf(worst)[1]} K) | ${residualOf(median)[0]} |`;
+  return `| ${label} | ${limit} | ${residualOf(worst)[0]} (${worst.phase}, ${residualOf(worst)[1]} K) | ${residualOf(median)[0]} |`;
 }
 
-function overLine(record: PhaseFit): string {
-  return `- **${record.id}**: ${overLimits(record).join(', ')}. Why: ${reasonsOverLimits[record.id] ?? 'no reason given'}.`;
+function overLine(residuals: FitResiduals): string {
+  return `- **${residuals.phase}**: ${overLimits(residuals).join(', ')}. Why: ${reasonsOverLimits[residuals.phase] ?? 'no reason given'}.`;
 }
 
 function limitRow({ phase, atK, event, products, source, provenance }: PhaseLimit): string {
@@ -94,9 +100,8 @@ function hasRemark({ leftOut, note }: PhaseFit): boolean {
   return leftOut !== undefined || note !== undefined;
 }
 
-function phaseRow(record: PhaseFit): string {
-  const { heatCapacityPercent, enthalpyKJPerMol, gibbsOverRT } = record.worst;
-  const cell = ([deviation, temperatureK]: WorstResidual): string => `${deviation} at ${temperatureK}`;
+function phaseRow(record: PhaseFit, residuals: FitResiduals | undefined): string {
+  const cell = (worst: WorstResidual | undefined): string => (worst === undefined ? '' : `${worst[0]} at ${worst[1]}`);
   const range = `${record.pieces[0]?.fromK ?? ''}–${record.toK}`;
-  return `| ${record.id} | ${record.table} | ${range} | ${record.pieces.length} | ${cell(heatCapacityPercent)} | ${cell(enthalpyKJPerMol)} | ${cell(gibbsOverRT)} |`;
+  return `| ${record.id} | ${record.table} | ${range} | ${record.pieces.length} | ${cell(residuals?.heatCapacityPercent)} | ${cell(residuals?.enthalpyKJPerMol)} | ${cell(residuals?.gibbsOverRT)} |`;
 }

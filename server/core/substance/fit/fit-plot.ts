@@ -1,8 +1,8 @@
 // The plot of the fit's page: the phases with the largest residuals, each residual as a share of its limit on a logarithmic axis.
-// Text of an SVG that reads on light and dark pages alike. Made from the records alone. Knows no files.
-// Invariant: the same records give the same text.
+// Text of an SVG that reads on light and dark pages alike. Made from the residuals alone. Knows no files.
+// Invariant: the same residuals give the same text.
 
-import type { PhaseFit } from '../phase-fit.ts';
+import type { FitResiduals } from '../phase-fit.ts';
 import { limits } from './equations.ts';
 
 const rowsShown = 30;
@@ -22,9 +22,9 @@ const series = [
 ] as const;
 
 /** The plot as SVG text. */
-export function fitPlot(records: readonly PhaseFit[]): string {
-  const worst = [...records]
-    .sort((a, b) => largestShare(b) - largestShare(a) || (a.id < b.id ? -1 : 1))
+export function fitPlot(residuals: readonly FitResiduals[]): string {
+  const worst = [...residuals]
+    .sort((a, b) => largestShare(b) - largestShare(a) || (a.phase < b.phase ? -1 : 1))
     .slice(0, rowsShown);
   const height = top + worst.length * rowHeight + 34;
   const ticks = [0.01, 0.1, 1, 10, 100];
@@ -42,11 +42,11 @@ export function fitPlot(records: readonly PhaseFit[]): string {
       const stroke = tick === 1 ? 'stroke="#a00" stroke-width="1.5"' : 'stroke="#ccc"';
       return `<line x1="${x}" y1="${top - 6}" x2="${x}" y2="${bottom}" ${stroke}/><text x="${x}" y="${bottom + 16}" text-anchor="middle" fill="#444">${tick === 1 ? 'limit' : tick}</text>`;
     }),
-    ...worst.flatMap((record, row) => {
-      const y = top + row * rowHeight + rowHeight / 2;
+    ...worst.flatMap((row, index) => {
+      const y = top + index * rowHeight + rowHeight / 2;
       return [
-        `<text x="${left - 10}" y="${y + 4}" text-anchor="end" fill="#222">${record.id}</text>`,
-        ...series.map(({ shape, colour, shareOf }) => marker(shape, place(shareOf(record)), y, colour)),
+        `<text x="${left - 10}" y="${y + 4}" text-anchor="end" fill="#222">${row.phase}</text>`,
+        ...series.map(({ shape, colour, shareOf }) => marker(shape, place(shareOf(row)), y, colour)),
       ];
     }),
     '</svg>',
@@ -54,20 +54,20 @@ export function fitPlot(records: readonly PhaseFit[]): string {
   return `${lines.join('\n')}\n`;
 }
 
-function heatCapacityShare({ worst }: PhaseFit): number {
-  return worst.heatCapacityPercent[0] / (limits.heatCapacityShare * 100);
+function heatCapacityShare({ heatCapacityPercent }: FitResiduals): number {
+  return heatCapacityPercent[0] / (limits.heatCapacityShare * 100);
 }
 
-function enthalpyShare({ worst }: PhaseFit): number {
-  return worst.enthalpyKJPerMol[0] / limits.enthalpyKJ;
+function enthalpyShare({ enthalpyKJPerMol }: FitResiduals): number {
+  return enthalpyKJPerMol[0] / limits.enthalpyKJ;
 }
 
-function gibbsShare({ worst }: PhaseFit): number {
-  return worst.gibbsOverRT[0] / limits.gibbsOverRT;
+function gibbsShare({ gibbsOverRT }: FitResiduals): number {
+  return gibbsOverRT[0] / limits.gibbsOverRT;
 }
 
-function largestShare(record: PhaseFit): number {
-  return Math.max(...series.map(({ shareOf }) => shareOf(record)));
+function largestShare(residuals: FitResiduals): number {
+  return Math.max(...series.map(({ shareOf }) => shareOf(residuals)));
 }
 
 function place(share: number): number {

@@ -5,7 +5,7 @@
 import { gasConstantJPerMolK } from '../heat-capacity-terms.ts';
 import { compileCurve, evaluateCurve } from '../phase-curve.ts';
 import type { PhaseCurve } from '../phase-curve.ts';
-import type { PhaseFit, PieceFit, WorstResidual } from '../phase-fit.ts';
+import type { FitResiduals, PhaseFit, PieceFit, WorstResidual } from '../phase-fit.ts';
 import { choosePieces } from './choose-pieces.ts';
 import type { FittedPieces } from './choose-pieces.ts';
 import { limits } from './equations.ts';
@@ -32,9 +32,8 @@ export function fitContext(tables: readonly SourceTable[]): FitContext {
   };
 }
 
-/** What of a record is over the limits, in words; empty when nothing is. */
-export function overLimits(record: PhaseFit): readonly string[] {
-  const { heatCapacityPercent, enthalpyKJPerMol, gibbsOverRT } = record.worst;
+/** What of a phase is over the limits, in words; empty when nothing is. */
+export function overLimits({ heatCapacityPercent, enthalpyKJPerMol, gibbsOverRT }: FitResiduals): readonly string[] {
   const over: string[] = [];
   if (heatCapacityPercent[0] > limits.heatCapacityShare * 100)
     over.push(`heat capacity ${heatCapacityPercent[0]} % at ${heatCapacityPercent[1]} K`);
@@ -44,8 +43,13 @@ export function overLimits(record: PhaseFit): readonly string[] {
   return over;
 }
 
-/** The record of one table. */
-export function fitTable(table: SourceTable, { points, ids }: FitContext): PhaseFit {
+export interface FittedTable {
+  readonly fit: PhaseFit;
+  readonly residuals: FitResiduals;
+}
+
+/** The record of one table, and how far it is from the rows. */
+export function fitTable(table: SourceTable, { points, ids }: FitContext): FittedTable {
   const { record } = table;
   const own = points.filter((point) => point.phases.includes(record.id));
   const gibbsPoints = own.map(({ temperatureK, gibbsKJ }) => ({
@@ -62,7 +66,7 @@ export function fitTable(table: SourceTable, { points, ids }: FitContext): Phase
   const reason = leftOut[record.id];
   const note = notes[record.id];
   const changes = changesOf(table, own, ids);
-  const draft: Omit<PhaseFit, 'worst'> = {
+  const fit: PhaseFit = {
     ...namePhase(record),
     ...(record.S298_J_per_mol_K === null
       ? {
@@ -81,7 +85,7 @@ export function fitTable(table: SourceTable, { points, ids }: FitContext): Phase
     ...(note === undefined ? {} : { note }),
     table: record.janafTable,
   };
-  return { ...draft, worst: worstResiduals(draft, fitted, record.dfH298_kJ_per_mol) };
+  return { fit, residuals: worstResiduals(fit, fitted, record.dfH298_kJ_per_mol) };
 }
 
 function pieceFit(piece: Piece, fitted: FittedPieces, index: number): PieceFit {
@@ -145,14 +149,10 @@ function changesOf(
 /** Gases that the tables name only in words. */
 const boilsInto: Readonly<Record<string, string>> = { H2O_l: 'H2O(g)', S_l: 'S2(g)', S2_g: 'S(l)' };
 
-function worstResiduals(
-  draft: Omit<PhaseFit, 'worst'>,
-  { pieces }: FittedPieces,
-  formationKJPerMol: number,
-): PhaseFit['worst'] {
+function worstResiduals(fit: PhaseFit, { pieces }: FittedPieces, formationKJPerMol: number): FitResiduals {
   const nothing: WorstResidual = [0, pieces[0]?.fromK ?? 0];
-  let worst = { heatCapacityPercent: nothing, enthalpyKJPerMol: nothing, gibbsOverRT: nothing };
-  const curve: PhaseCurve = compileCurve({ ...draft, worst });
+  let worst = { phase: fit.id, heatCapacityPercent: nothing, enthalpyKJPerMol: nothing, gibbsOverRT: nothing };
+  const curve: PhaseCurve = compileCurve(fit);
   const larger = (old: WorstResidual, deviation: number, temperatureK: number, digits: number): WorstResidual =>
     Math.abs(deviation) > old[0] ? [rounded(Math.abs(deviation), digits), temperatureK] : old;
   pieces.forEach((piece, index) => {
@@ -165,11 +165,10 @@ function worstResiduals(
       const enthalpy = values.enthalpyJPerMol / 1000 - enthalpyKJ;
       const gibbs = (values.gibbsJPerMol - gibbsKJ * 1000) / (gasConstantJPerMolK * temperatureK);
       worst = {
+        phase: fit.id,
         heatCapacityPercent: larger(worst.heatCapacityPercent, heatCapacity, temperatureK, 4),
         enthalpyKJPerMol: larger(worst.enthalpyKJPerMol, enthalpy, temperatureK, 4),
-        gibbsOverRT: counts(draft, temperatureK)
-          ? larger(worst.gibbsOverRT, gibbs, temperatureK, 6)
-          : worst.gibbsOverRT,
+        gibbsOverRT: counts(fit, temperatureK) ? larger(worst.gibbsOverRT, gibbs, temperatureK, 6) : worst.gibbsOverRT,
       };
     }
   });

@@ -32,7 +32,7 @@ export function fitHeldOut(
     const table = byId.get(id);
     if (table === undefined) throw new Error(`no table ${id}`);
     const temperaturesK = new Set(temperaturesToHoldOut(table));
-    const record = fitTable(withoutRowsAt(table, temperaturesK), context);
+    const { fit: record } = fitTable(withoutRowsAt(table, temperaturesK), context);
     records.push(record);
     for (const row of rowsOf(table)) {
       if (!temperaturesK.has(row.temperatureK)) continue;

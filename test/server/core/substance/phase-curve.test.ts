@@ -24,7 +24,6 @@ const record: PhaseFit = {
   ],
   toK: 1500,
   table: 'X-001',
-  worst: { heatCapacityPercent: [0, 250], enthalpyKJPerMol: [0, 250], gibbsOverRT: [0, 250] },
 };
 const curve = compileCurve(record);
 

@@ -2,15 +2,15 @@
 // fit itself (0.5 % of cp, 0.2 kJ/mol of H, 0.005 of G/RT), so the curves keep between the rows what they keep at them.
 
 import { describe, expect, test } from 'vitest';
-import { limits } from '../../../../server/core/substance/fit/equations.ts';
-import { heldOutTables, referenceStates, rowsHeldOut } from '../../../../server/core/substance/fit/held-out.ts';
-import { parseFormula } from '../../../../server/core/substance/formula.ts';
-import { gasConstantJPerMolK } from '../../../../server/core/substance/heat-capacity-terms.ts';
-import { compileCurve, evaluateCurve } from '../../../../server/core/substance/phase-curve.ts';
-import type { PhaseFit } from '../../../../server/core/substance/phase-fit.ts';
-import { phaseOfId } from '../../../../server/core/substance/phases.ts';
-import heldOut from '../../../reference/janaf-held-out.json' with { type: 'json' };
-import secondFit from '../../../support/held-out-phases.json' with { type: 'json' };
+import { limits } from '../../../../../server/core/substance/fit/equations.ts';
+import { heldOutTables, referenceStates, rowsHeldOut } from '../../../../../server/core/substance/fit/held-out.ts';
+import { parseFormula } from '../../../../../server/core/substance/formula.ts';
+import { gasConstantJPerMolK } from '../../../../../server/core/substance/heat-capacity-terms.ts';
+import { compileCurve, evaluateCurve } from '../../../../../server/core/substance/phase-curve.ts';
+import type { PhaseFit } from '../../../../../server/core/substance/phase-fit.ts';
+import { phaseOfId } from '../../../../../server/core/substance/phases.ts';
+import heldOut from '../../../../reference/janaf-held-out.json' with { type: 'json' };
+import secondFit from '../../../../support/held-out-phases.json' with { type: 'json' };
 
 // The compiler reads JSON strings as `string`; the records are written by the fit itself.
 const records = new Map((secondFit as readonly unknown[] as readonly PhaseFit[]).map((record) => [record.id, record]));
