@@ -134,6 +134,7 @@ class Account {
    * share in proportion to what is free of each. Metals whose salt the catalogue lacks take no part in mixed oxides.
    */
   bindAlkali(partner: string, alkaliPerPartner: number, speciesOf: (metal: string) => string): void {
+    if (this.amount(partner) <= 0) return;
     const metals = alkaliMetals.filter((metal) => this.amount(metal) > 0 && hasData(partner, speciesOf(metal)));
     const alkali = metals.reduce((sum, metal) => sum + this.amount(metal), 0);
     if (alkali <= 0) return;
@@ -150,6 +151,7 @@ class Account {
   /** Turns all that is left of an element into a species that holds `atoms` of it. */
   convert(symbol: string, atoms: number, species: string): void {
     const amount = this.amount(symbol);
+    if (amount <= 0) return;
     this.take(symbol, amount);
     this.add(species, amount / atoms);
   }

@@ -59,10 +59,10 @@ export function countOfElement(formula: Formula, element: string): Fraction {
 export const chargeElement = 'charge';
 
 function sumOfSide(side: readonly EquationTerm[], element: string): Fraction {
-  return side.reduce(
-    (sum, term) => sum.add(exactCoefficient(term.coefficient).mul(countOfElement(term.formula, element))),
-    zero,
-  );
+  return side.reduce((sum, term) => {
+    const count = countOfElement(term.formula, element);
+    return count === zero ? sum : sum.add(exactCoefficient(term.coefficient).mul(count));
+  }, zero);
 }
 
 function exactCoefficient(coefficient: Coefficient): Fraction {

@@ -7,8 +7,12 @@ import Fraction from 'fraction.js';
 /** Rows of equal length. */
 export type Matrix = readonly (readonly Fraction[])[];
 
-/** A decimal or whole number as the fraction its shortest decimal text means (0.947 is 947/1000). */
+/**
+ * A decimal or whole number as the fraction its decimal text means (0.947 is 947/1000), to twelve digits, so that a sum
+ * such as 0.1 + 0.2 is three tenths. Not a finite number counts as 0.
+ */
 export function exactNumber(value: number): Fraction {
+  if (Number.isSafeInteger(value)) return value === 0 ? zero : value === 1 ? one : new Fraction(value);
   return new Fraction(Number.isFinite(value) ? String(Number(value.toPrecision(12))) : 0);
 }
 

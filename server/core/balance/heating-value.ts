@@ -21,7 +21,7 @@ export interface HeatingValue {
   readonly slate: Slate;
   /** Formation enthalpy of the fuel, J/kg. */
   readonly fuelEnthalpyJPerKg: number;
-  /** Sources of the enthalpies used, fuel and products, each once. */
+  /** Sources of the enthalpies of the products, each once. */
   readonly sources: readonly SourceRecord[];
 }
 
@@ -38,7 +38,11 @@ export function heatingValueOfFuel(
   choice: SlateChoice = 'as-ruled',
 ): HeatingValue | EnergyFault {
   const slate = slateOfChoice(fuelMolPerKg, choice);
-  if (slate.kind === 'fault') return slate;
+  return slate.kind === 'fault' ? slate : heatingValueOnSlate(slate, fuelEnthalpyJPerKg);
+}
+
+/** The same on a slate that is at hand. Returns a fault when a product has no data. */
+export function heatingValueOnSlate(slate: Slate, fuelEnthalpyJPerKg: number): HeatingValue | EnergyFault {
   const products = enthalpyOfProducts(slate);
   if (products.kind === 'fault') return products;
   return {
@@ -67,7 +71,8 @@ export function formationEnthalpyBehind(
   return typeof jPerKg === 'number' ? { kind: 'formation-enthalpy', jPerKg, slate } : jPerKg;
 }
 
-function slateOfChoice(
+/** The slate of a fuel by its elements (mol per kg); a fault where the rule or the named products give none. */
+export function slateOfChoice(
   fuelMolPerKg: ReadonlyMap<string, number>,
   choice: SlateChoice,
 ): Slate | SlateFault | GivenProductsFault {
