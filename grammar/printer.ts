@@ -181,7 +181,7 @@ class Printer {
     const widths = new Map<number, number>();
     let run: { readonly index: number; readonly width: number }[] = [];
     const endRun = (): void => {
-      const widest = Math.max(...run.map(({ width }) => width));
+      const widest = run.reduce((most, { width }) => Math.max(most, width), 0);
       if (run.length > 1) for (const { index } of run) widths.set(index, widest + 2);
       run = [];
     };

@@ -48,7 +48,7 @@ export function readDefinition(
     const name = header.name?.text ?? header.keyword.text;
     problems.push(sectionProblems.closeBraceMissing(header.span, name, span.end));
   }
-  problems.push(...(closed ? body.problems : withoutCutOff(body.problems, span.end)));
+  for (const problem of closed ? body.problems : withoutCutOff(body.problems, span.end)) problems.push(problem);
   const behind = closed ? tokens.find((token, index) => index > closeIndex && !isLineBreak(token)) : undefined;
   if (behind !== undefined) problems.push(sectionProblems.behindClosingBrace(spanOf(behind)));
   const brace = tokens[braceIndex];

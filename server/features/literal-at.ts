@@ -11,7 +11,7 @@ import type {
   UnitToken,
   UnitWords,
 } from '../../grammar/tree.ts';
-import { placeOf } from '../scenario/place.ts';
+import { placeOf, sectionAt } from '../scenario/place.ts';
 import type { EvaluatedFile, Place } from '../scenario/scenario.ts';
 
 export interface LiteralAt {
@@ -22,7 +22,7 @@ export interface LiteralAt {
 }
 
 export function literalAt(file: EvaluatedFile, offset: number): LiteralAt | null {
-  const placed = file.tree.sections.find(({ start, end }) => start <= offset && offset < end);
+  const placed = sectionAt(file.tree, offset);
   if (!placed) return null;
   const at = offset - placed.start;
   const found = inStatement(placed.section.statement, at);

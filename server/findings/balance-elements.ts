@@ -6,6 +6,7 @@
 import { formulaTextWithPhase, type Formula } from '../core/substance/formula.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { listed, quoted, sentences } from '../wording/words.ts';
+import { placeOf, sectionAt } from '../scenario/place.ts';
 import type { Place } from '../scenario/scenario.ts';
 import type { FactOf, Rule, Site } from './rule.ts';
 
@@ -77,13 +78,10 @@ function species(places: readonly { readonly formula: Formula }[]): string {
 
 /** The whole equation, though the finding may stand at a part of it. */
 function equationAround({ place, file }: Site): Place {
-  for (const { start, section } of file.tree.sections) {
-    if (section.statement.kind !== 'definition') continue;
-    for (const line of section.statement.lines) {
-      if (line.kind !== 'equation') continue;
-      const equation = { path: place.path, start: start + line.span.start, end: start + line.span.end };
-      if (equation.start <= place.start && place.end <= equation.end) return equation;
-    }
-  }
-  return place;
+  const placed = sectionAt(file.tree, place.start);
+  if (placed?.section.statement.kind !== 'definition') return place;
+  const equations = placed.section.statement.lines
+    .filter((line) => line.kind === 'equation')
+    .map((line) => placeOf(place.path, placed, line.span));
+  return equations.find((equation) => equation.start <= place.start && place.end <= equation.end) ?? place;
 }

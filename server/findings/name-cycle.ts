@@ -7,10 +7,12 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const nameCycle: Rule<FactOf<'name/cycle'>> = {
   severity: 'error',
-  message: ({ path }) => {
+  message: ({ path, leftOut = 0 }) => {
     const [first = '', second] = path;
     if (path.length <= 2) return `${quoted(first)} is defined by itself. Give it a value that does not need it.`;
     const steps = path.slice(1, -1).map((name, index) => `${quoted(path[index] ?? '')} needs ${quoted(name)}`);
+    // The last step of a long ring leads over those that are left out.
+    if (leftOut > 0) steps.splice(-1, 1, `so on through ${leftOut} more`);
     const closing = `${quoted(path.at(-2) ?? second ?? '')} needs ${quoted(path.at(-1) ?? first)} again`;
     return `These definitions go round in a ring: ${listed([...steps, closing])}. Break it at one of them.`;
   },

@@ -12,6 +12,11 @@ export function widthOf(text: string): number {
   return Array.from(text).length;
 }
 
+/** The width of the widest text; 0 of none. */
+function widest(texts: readonly string[]): number {
+  return texts.reduce((most, text) => Math.max(most, widthOf(text)), 0);
+}
+
 /** The text filled with blanks at its end. */
 export function padded(text: string, width: number): string {
   return text + ' '.repeat(Math.max(0, width - widthOf(text)));
@@ -30,8 +35,8 @@ export function alignedAtPoint(numbers: readonly string[]): string[] {
     const point = number.search(/(?<=\d)[.](?=\d)|(?<=\d)(?=[^\d.−])|$/);
     return { before: number.slice(0, point), after: number.slice(point) };
   });
-  const before = Math.max(0, ...parts.map((part) => widthOf(part.before)));
-  const after = Math.max(0, ...parts.map((part) => widthOf(part.after)));
+  const before = widest(parts.map((part) => part.before));
+  const after = widest(parts.map((part) => part.after));
   return parts.map(
     (part) =>
       ' '.repeat(before - widthOf(part.before)) +
@@ -41,10 +46,8 @@ export function alignedAtPoint(numbers: readonly string[]): string[] {
 
 /** Rows of texts, each column as wide as its widest cell, two blanks between columns. */
 export function columns(rows: readonly (readonly string[])[]): string[] {
-  const count = Math.max(0, ...rows.map((row) => row.length));
-  const widths = Array.from({ length: count }, (_, column) =>
-    Math.max(0, ...rows.map((row) => widthOf(row[column] ?? ''))),
-  );
+  const count = rows.reduce((most, row) => Math.max(most, row.length), 0);
+  const widths = Array.from({ length: count }, (_, column) => widest(rows.map((row) => row[column] ?? '')));
   return rows.map((row) =>
     row
       .map((text, column) => padded(text, widths[column] ?? 0))
@@ -73,7 +76,7 @@ function columnTexts(column: Column, cells: readonly (string | number | null)[])
   );
   const unit = share ? '%' : unitForPeople(column.unit);
   const heading = unit === '' ? column.label : `${column.label}, ${unit}`;
-  const width = Math.max(widthOf(heading), ...texts.map(widthOf));
+  const width = widest([heading, ...texts]);
   // Numbers stand to the right under their heading, as they do in print.
   const toRight = (text: string): string => ' '.repeat(width - widthOf(text)) + text;
   return { heading: toRight(heading), cells: texts.map(toRight) };

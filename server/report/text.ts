@@ -157,9 +157,10 @@ function expectationsBlock(file: EvaluatedFile, paint: Paint, width: number): st
 /** One sentence instead of one note a definition. */
 function notEvaluated(files: readonly ReportedFile[], width: number): string[] {
   const names = files.flatMap(({ file, findings }) => {
-    const places = findings.filter(({ code }) => code === NOT_EVALUATED).map(({ place }) => place.start);
+    const starts = new Set(findings.filter(({ code }) => code === NOT_EVALUATED).map(({ place }) => place.start));
+    // The finding stands at the kind's word, with which the definition starts.
     return file.definitions
-      .filter(({ place }) => places.some((start) => place.start <= start && start < place.end))
+      .filter(({ place }) => starts.has(place.start))
       .map(({ kind, name }) => `${kind} ${printable(name)}`);
   });
   if (names.length === 0) return [];

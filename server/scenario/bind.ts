@@ -43,7 +43,8 @@ export function bindNames(files: readonly LoadedFile[]): Bindings {
     const [only, second] = bindings;
     if (only && !second) unique.set(name, only);
     else ambiguous.add(name);
-    for (const binding of bindings) reportName(binding, bindings);
+    const told = toldOf(bindings);
+    for (const binding of bindings) reportName(binding, told);
   }
   return { unique, ambiguous, all };
 }
@@ -52,6 +53,16 @@ function bindingOf(file: LoadedFile, placed: PlacedSection): Binding | undefined
   const { statement } = placed.section;
   if (statement.kind !== 'definition' && statement.kind !== 'let') return undefined;
   return statement.name && { name: statement.name.text, word: statement.name, file, placed, statement };
+}
+
+/** Others of its name that a binding's finding tells of: a few, or a line pasted 100,000 times would tell 10^10. */
+const mostTold = 5;
+
+/** The first bindings of one name, and the first in another file than theirs. */
+function toldOf(sameName: readonly Binding[]): readonly Binding[] {
+  const told = sameName.slice(0, mostTold);
+  const elsewhere = sameName.find(({ file }) => file !== sameName[0]?.file);
+  return elsewhere && !told.includes(elsewhere) ? [...told, elsewhere] : told;
 }
 
 function reportName(binding: Binding, sameName: readonly Binding[]): void {

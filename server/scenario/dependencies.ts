@@ -1,6 +1,7 @@
 // Which names a statement speaks of, and the order in which named things can be worked out. Looks at syntax alone, with
 // the entry tables to tell a name from a listed word. A cycle of names is found here, once, at the name that closes it.
-// Invariant: the walk is iterative; every named thing comes after all it speaks of, or is in `cyclic`.
+// Invariant: the walk is iterative and its time linear in the mentions; whatever is in the order follows all it speaks of,
+// but for names on a cycle.
 
 import type { Expression, Line, Span, Statement, Word } from '../../grammar/tree.ts';
 import { entryNamesThings } from './kinds/registry.ts';
@@ -64,7 +65,11 @@ export function mentionsInExpression(expression: Expression, mentions: Mention[]
         name(item.name);
         break;
       case 'call':
-        rest.push(...item.arguments);
+        // One by one: a call can be written with more arguments than a call of ours can have.
+        for (let index = item.arguments.length - 1; index >= 0; index--) {
+          const argument = item.arguments[index];
+          if (argument) rest.push(argument);
+        }
         break;
       case 'bracket':
         if (item.inner) rest.push(item.inner);
@@ -87,36 +92,59 @@ export function mentionsInExpression(expression: Expression, mentions: Mention[]
 export interface Ordered {
   /** Names in an order in which each follows all it mentions; those on a cycle are left out. */
   readonly order: readonly string[];
-  readonly cycles: readonly { readonly by: string; readonly mention: Mention; readonly path: readonly string[] }[];
-  /** Names on a cycle: nothing can be said of them. */
-  readonly cyclic: ReadonlySet<string>;
+  readonly cycles: readonly Cycle[];
+}
+
+/** A way from a name back to itself. */
+export interface Cycle {
+  readonly by: string;
+  /** In `by`: what closes the ring. */
+  readonly mention: Mention;
+  /** The names on the way, the first again at the end; of a long ring its start and its end. */
+  readonly path: readonly string[];
+  /** How many names of a long ring are left out before the last two. */
+  readonly leftOut: number;
 }
 
 /** Orders named things by their mentions (names that are not keys of the map are ignored). */
 export function orderByMentions(things: ReadonlyMap<string, readonly Mention[]>): Ordered {
   const order: string[] = [];
-  const cycles: { by: string; mention: Mention; path: string[] }[] = [];
-  const cyclic = new Set<string>();
-  const state = new Map<string, 'open' | 'done'>();
+  const cycles: Cycle[] = [];
+  const state = new Map<string, number | 'done'>();
   for (const root of things.keys()) {
     if (state.has(root)) continue;
-    const stack = [{ name: root, next: 0 }];
-    state.set(root, 'open');
+    // `reaches` is the lowest place on the stack that a mention found so far leads back to.
+    const stack = [{ name: root, next: 0, reaches: Infinity }];
+    state.set(root, 0);
     for (let top = stack.at(-1); top; top = stack.at(-1)) {
       const mention = things.get(top.name)?.[top.next++];
+      const known = mention && state.get(mention.name);
       if (!mention) {
         stack.pop();
         state.set(top.name, 'done');
-        if (!cyclic.has(top.name)) order.push(top.name);
-      } else if (state.get(mention.name) === 'open') {
-        const path = stack.slice(stack.findIndex((entry) => entry.name === mention.name)).map((entry) => entry.name);
-        for (const name of path) cyclic.add(name);
-        cycles.push({ by: top.name, mention, path: [...path, mention.name] });
-      } else if (things.has(mention.name) && !state.has(mention.name)) {
-        state.set(mention.name, 'open');
-        stack.push({ name: mention.name, next: 0 });
+        const below = stack.at(-1);
+        if (below) below.reaches = Math.min(below.reaches, top.reaches);
+        if (top.reaches > stack.length) order.push(top.name);
+      } else if (typeof known === 'number') {
+        top.reaches = Math.min(top.reaches, known);
+        cycles.push({ by: top.name, mention, ...wayRound(stack, known) });
+      } else if (known === undefined && things.has(mention.name)) {
+        state.set(mention.name, stack.length);
+        stack.push({ name: mention.name, next: 0, reaches: Infinity });
       }
     }
   }
-  return { order, cycles, cyclic };
+  return { order, cycles };
+}
+
+const mostOfStart = 4;
+
+/** The ring from a place on the stack to its top. In full it could be as long as the scenario, for each of its names. */
+function wayRound(stack: readonly { readonly name: string }[], from: number): Pick<Cycle, 'path' | 'leftOut'> {
+  const nameAt = (place: number): string[] => stack.slice(place, place + 1).map(({ name }) => name);
+  const start = stack.slice(from, from + mostOfStart).map(({ name }) => name);
+  const leftOut = stack.length - from - mostOfStart - 1;
+  return leftOut > 0
+    ? { path: [...start, ...nameAt(stack.length - 1), ...nameAt(from)], leftOut }
+    : { path: [...stack.slice(from), ...stack.slice(from, from + 1)].map(({ name }) => name), leftOut: 0 };
 }

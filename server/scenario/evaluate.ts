@@ -76,10 +76,10 @@ function answerBindings(bindings: Bindings, scope: Scope, answers: Map<Binding, 
     const binding = bindings.unique.get(name);
     if (binding) answers.set(binding, answerBinding(binding, scope));
   }
-  for (const { by, mention, path } of cycles) {
+  for (const { by, mention, path, leftOut } of cycles) {
     const binding = bindings.unique.get(by);
     const place = binding && placeOf(binding.file.path, binding.placed, mention.span);
-    if (binding && place) binding.file.facts.push({ fact: { code: 'name/cycle', path }, place });
+    if (binding && place) binding.file.facts.push({ fact: { code: 'name/cycle', path, leftOut }, place });
   }
   // Two definitions of one name are each worked out for their own findings, though the name stands for neither.
   for (const binding of bindings.all) {
@@ -179,13 +179,13 @@ function gather(
           answerExpect(statement, context),
         ),
       );
-      computed.push(...context.facts);
-      meanings.push(...context.meanings);
+      append(computed, context.facts);
+      append(meanings, context.meanings);
     }
     const answer = answerOf(placed, ofSection, answers, scope, file);
     if (!answer) continue;
-    computed.push(...answer.facts);
-    meanings.push(...answer.meanings);
+    append(computed, answer.facts);
+    append(meanings, answer.meanings);
     if (answer.named.kind === 'value') values.push(answer.named.value);
     else if (answer.named.kind !== 'unknown') definitions.push(answer.named.definition);
   }
@@ -197,6 +197,11 @@ function gather(
   // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
   const facts = problems.length >= suspendingProblems ? problems : [...problems, ...computed];
   return { path, used, tree, title, definitions, values, expectations, facts, meanings };
+}
+
+/** One by one: a definition of 100,000 lines has more facts than a call can have arguments. */
+function append<T>(list: T[], more: readonly T[]): void {
+  for (const one of more) list.push(one);
 }
 
 /** From this many syntax problems on, a file's computed findings are not told. */

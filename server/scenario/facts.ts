@@ -27,7 +27,8 @@ export type Fact =
   | { readonly code: 'name/duplicate'; readonly name: string; readonly others: readonly Place[] }
   | { readonly code: 'name/reserved'; readonly name: string; readonly why: 'reserved-word' | 'unit' | 'kind' }
   | { readonly code: 'name/like-catalogue'; readonly name: string; readonly substance: string }
-  | { readonly code: 'name/cycle'; readonly path: readonly string[] }
+  /** `path` holds the names of the ring and its first again; `leftOut` that many are not told before the last two. */
+  | { readonly code: 'name/cycle'; readonly path: readonly string[]; readonly leftOut?: number }
   | { readonly code: 'name/use-cycle'; readonly path: readonly string[] }
   | {
       readonly code: 'name/missing-file';
@@ -158,7 +159,7 @@ export type Fact =
       readonly claim: string;
       readonly found: Quantity;
       readonly unit: string | null;
-      /** How far the found value is from holding, in SI, and the limit it missed. */
+      /** The limit it missed. */
       readonly limit: Quantity;
       readonly tolerance: Quantity | null;
     }

@@ -6,6 +6,7 @@ import type { Expression, Quantity as WrittenQuantity, Statement } from '../../g
 import { canBeIn } from '../core/quantity/convert.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import { readUnit } from '../core/quantity/read-unit.ts';
+import { sectionAt } from '../scenario/place.ts';
 import type { EvaluatedFile, Place } from '../scenario/scenario.ts';
 
 /** The unit of the `let` at this place, if its value is one quantity and `quantity` fits that unit; otherwise null. */
@@ -24,7 +25,7 @@ export function unitOfClaim(place: Place, quantity: Quantity, file: EvaluatedFil
 }
 
 function statementAt(place: Place, file: EvaluatedFile): Statement | undefined {
-  return file.tree.sections.find(({ start, end }) => start <= place.start && place.start < end)?.section.statement;
+  return sectionAt(file.tree, place.start)?.section.statement;
 }
 
 function limitOf(claim: Expression | undefined): WrittenQuantity | null {

@@ -1,5 +1,6 @@
 // Names over one file and several, and `use`: what is reached, what is refused, what is said where.
 import { describe, expect, test } from 'vitest';
+import { findingsOf } from '../../../server/findings/registry.ts';
 import { evaluate } from '../../../server/scenario/evaluate.ts';
 import { resolveUse } from '../../../server/scenario/files.ts';
 import { checkFacts, figureOf, valueOf } from '../../support/facts.ts';
@@ -24,6 +25,16 @@ describe('names', () => {
       let p = 2
       #   ^ name/duplicate
     `);
+  });
+
+  test('a long ring is told by its start and its end', () => {
+    const text = Array.from({ length: 9 }, (_, index) => `let a${index} = a${(index + 1) % 9}\n`).join('');
+    const [finding, ...others] = findingsOf(evaluate('ring.stoke', () => ({ text })));
+    expect(others).toEqual([]);
+    expect(finding?.message).toBe(
+      'These definitions go round in a ring: `a0` needs `a1`, `a1` needs `a2`, `a2` needs `a3`, so on through 4 more and ' +
+        '`a8` needs `a0` again. Break it at one of them.',
+    );
   });
 
   test('spelt like a unit', () => {
