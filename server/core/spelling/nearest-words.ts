@@ -24,10 +24,14 @@ function largestDistance(length: number): number {
   return length <= 3 ? 1 : length <= 7 ? 2 : 3;
 }
 
-const lookAlikes: readonly string[] = ['0Oo', '1lIi', '5Ss', '8B', '2Zz'];
+const groupOfLookAlike: ReadonlyMap<string, number> = new Map(
+  ['0Oo', '1lIi', '5Ss', '8B', '2Zz'].flatMap((group, index) =>
+    Array.from(group, (letter) => [letter, index] as const),
+  ),
+);
 
 function substitutionCost(a: string, b: string): number {
-  if (a === b) return 0;
-  if (lookAlikes.some((group) => group.includes(a) && group.includes(b))) return 0.2;
+  const group = groupOfLookAlike.get(a);
+  if (group !== undefined && group === groupOfLookAlike.get(b)) return 0.2;
   return a.toLowerCase() === b.toLowerCase() ? 0.4 : 1;
 }
