@@ -135,7 +135,8 @@ describe('use', () => {
 
 describe('many syntax slips', () => {
   test('sixteen of them suspend what is computed, fifteen do not', () => {
-    const text = (slips: number): string => [...Array.from({ length: slips }, () => 'let 3 = 4'), 'let good = 3 kg + 2 m'].join('\n');
+    const text = (slips: number): string =>
+      [...Array.from({ length: slips }, () => 'let 3 = 4'), 'let good = 3 kg + 2 m'].join('\n');
     const codes = (slips: number): string[] =>
       evaluate('main.stoke', () => ({ text: text(slips) })).files[0]?.facts.map(({ fact }) => fact.code) ?? [];
     expect(codes(15)).toContain('unit/mismatch');
