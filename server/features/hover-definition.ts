@@ -45,13 +45,15 @@ function slateLines({ tables }: EvaluatedDefinition): HoverLine[] {
 
 /** The first figures that could not be had for want of data, with what is missing. */
 function absentLines({ absent }: EvaluatedDefinition): HoverLine[] {
-  return [...absent]
-    .flatMap(([id, missing]) => (missing && missing.length > 0 ? [{ id, missing }] : []))
-    // That a mixture without a molar mass has no molar mass goes without saying.
-    .filter(({ id, missing }) => !missing.every((reason) => reason.startsWith(`the ${id.replaceAll('-', ' ')} of `)))
-    .slice(0, MOST_ABSENT)
-    .map(({ id, missing }) => ({
-      label: capitalised(id.replaceAll('-', ' ')),
-      text: `not known; missing ${listed(missing)}`,
-    }));
+  return (
+    [...absent]
+      .flatMap(([id, missing]) => (missing && missing.length > 0 ? [{ id, missing }] : []))
+      // That a mixture without a molar mass has no molar mass goes without saying.
+      .filter(({ id, missing }) => !missing.every((reason) => reason.startsWith(`the ${id.replaceAll('-', ' ')} of `)))
+      .slice(0, MOST_ABSENT)
+      .map(({ id, missing }) => ({
+        label: capitalised(id.replaceAll('-', ' ')),
+        text: `not known; missing ${listed(missing)}`,
+      }))
+  );
 }

@@ -36,6 +36,7 @@ import { nameWrongKind } from './name-wrong-kind.ts';
 import { programFailed } from './program-failed.ts';
 import { rangeHumidity } from './range-humidity.ts';
 import { rangeNumber } from './range-number.ts';
+import { rangePhase } from './range-phase.ts';
 import { rangePositive } from './range-positive.ts';
 import { rangeShare } from './range-share.ts';
 import { rangeTemperature } from './range-temperature.ts';
@@ -118,6 +119,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/number': rangeNumber,
   'range/temperature': rangeTemperature,
   'range/share': rangeShare,
+  'range/phase': rangePhase,
   'range/positive': rangePositive,
   'expect/failed': expectFailed,
   'kind/not-evaluated': kindNotEvaluated,

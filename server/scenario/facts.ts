@@ -8,6 +8,7 @@ import type { NoBalance } from '../core/balance/equation.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Place } from './place.ts';
+import type { PortionState } from './portion-state.ts';
 
 export type Fact =
   | SyntaxFact
@@ -150,6 +151,8 @@ export type Fact =
       readonly text: string;
       readonly why: 'below-absolute-zero' | 'only-reference';
     }
+  /** A portion that is in another phase where it is stored than at 25 °C, which its data are of. */
+  | { readonly code: 'range/phase'; readonly substance: string; readonly state: PortionState }
   /** Vapour at that humidity would need more than the whole pressure, or the temperature has no saturation pressure. */
   | { readonly code: 'range/humidity'; readonly temperature: Quantity; readonly pressure: Quantity }
   | { readonly code: 'range/share'; readonly text: string; readonly low: number; readonly high: number }

@@ -25,7 +25,7 @@ import { propagate } from '../core/quantity/uncertainty.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../core/substance/elements.ts';
 import { molarMassKgPerMol } from '../core/substance/formula.ts';
 import type { Material } from './material.ts';
-import { sourceText } from './materials.ts';
+import { sourceText } from './material-card.ts';
 import type { Absent, Figure, Table } from './scenario.ts';
 import type { AssumptionId, MethodId, Working, WorkingInput } from './working.ts';
 

@@ -26,6 +26,9 @@ export interface Material {
   readonly entropy: Quantity | null;
   /** kg/m³ */
   readonly density: Quantity | null;
+  /** At 1 atm. */
+  readonly meltingPoint: Quantity | null;
+  readonly boilingPoint: Quantity | null;
   /** Biogenic share of the carbon, 0 to 1. */
   readonly biogenicShare: Quantity;
   /** Products of complete combustion where a definition names them; otherwise the rule's. */
@@ -45,6 +48,7 @@ export type MissingProperty = 'molarMass' | 'formationEnthalpy' | 'density';
 /** A blend's portion with its shares on each basis; null where a property that the basis takes is not known. */
 export interface PortionShare {
   readonly name: string;
+  readonly material: Material;
   readonly mass: Quantity;
   readonly mole: Quantity | null;
   readonly volume: Quantity | null;

@@ -4,18 +4,17 @@
 
 import type { Word } from '../../grammar/tree.ts';
 import { formationEnthalpyOf } from '../core/balance/formation-enthalpy.ts';
-import { celsiusZeroK } from '../core/quantity/constants.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { dimensionless } from '../core/quantity/dimension.ts';
 import { quantityOf, type Parts, type Quantity } from '../core/quantity/quantity.ts';
 import { findSubstance, phasesOfSubstance, suggestSubstances } from '../core/substance/catalogue.ts';
 import { molPerKgOfFormula } from '../core/substance/composition.ts';
 import { formulaTextWithPhase, molarMassKgPerMol, parseFormula, type Formula } from '../core/substance/formula.ts';
-import type { SourceRecord } from '../core/substance/record.ts';
 import type { Datum, Substance } from '../core/substance/substance.ts';
 import { near, type Context } from './context.ts';
 import type { Material, MissingProperty } from './material.ts';
-import type { CardProperty, MaterialCard } from './scenario.ts';
+import { cardOfSubstance, sourceText } from './material-card.ts';
+import type { MaterialCard } from './scenario.ts';
 
 /**
  * `data`: a material whose numbers are wanted. `composition`: any formula will do, in the catalogue or not.
@@ -140,6 +139,8 @@ function materialOfFormula(formula: Formula): Material {
     formationEnthalpy: null,
     entropy: null,
     density: null,
+    meltingPoint: null,
+    boilingPoint: null,
     biogenicShare: quantityOf(0, dimensionless),
     products: null,
     portions: null,
@@ -178,87 +179,16 @@ function buildMaterial(substance: Substance): Material {
     formationEnthalpy: enthalpy,
     entropy: datumQuantity(substance.entropyJPerMolK, units.molarEntropy, `${text}/entropy`),
     density,
+    meltingPoint: temperatureOf(substance.meltingPointK),
+    boilingPoint: temperatureOf(substance.boilingPointK),
     biogenicShare: quantityOf(substance.carbonBiogenicShare, dimensionless),
     products: null,
     portions: null,
     assumptions: [],
     sources: [...new Set(used.flatMap((source) => (source ? [sourceText(source)] : [])))],
-    card: cardOf(substance, molarMass, enthalpy, density, energyDatum?.source),
+    card: cardOfSubstance(substance),
     missing,
   };
-}
-
-function cardOf(
-  substance: Substance,
-  molarMass: Quantity | null,
-  enthalpy: Quantity | null,
-  density: Quantity | null,
-  energySource: SourceRecord | undefined,
-): MaterialCard {
-  const properties: CardProperty[] = [];
-  const add = (
-    id: string,
-    label: string,
-    quantity: Quantity | null,
-    unit: string,
-    source: SourceRecord | undefined,
-    condition = '',
-  ): void => {
-    if (quantity)
-      properties.push({
-        id,
-        label,
-        quantity,
-        unit,
-        source: source ? sourceText(source) : 'standard atomic weights, IUPAC 2021',
-        condition,
-      });
-  };
-  add('molar-mass', 'Molar mass', molarMass, 'g/mol', undefined);
-  if (enthalpy && molarMass) {
-    const molar = quantityOf(enthalpy.value * molarMass.value, units.molarEnergy);
-    add('formation-enthalpy', 'Enthalpy of formation', molar, 'kJ/mol', energySource, 'at 25 °C');
-  }
-  const condition = substance.density
-    ? `at ${Math.round((substance.density.temperatureK - celsiusZeroK) * 100) / 100} °C`
-    : '';
-  add('density', 'Density', density, 'kg/m3', substance.density?.source, condition);
-  if (substance.heatCapacityJPerKgK) {
-    const heatCapacity = quantityOf(substance.heatCapacityJPerKgK.value, knownUnit('kJ/(kg K)').dimension);
-    add(
-      'heat-capacity',
-      'Heat capacity',
-      heatCapacity,
-      'kJ/(kg K)',
-      substance.heatCapacityJPerKgK.source,
-      'near 25 °C',
-    );
-  }
-  if (substance.flashPointK) {
-    const flashPoint = quantityOf(substance.flashPointK.value, knownUnit('K').dimension, undefined, 'temperature');
-    add('flash-point', 'Flash point', flashPoint, 'K', substance.flashPointK.source);
-  }
-  for (const rule of substance.rules) {
-    if (rule.lowerHeatingValueJPerKg === undefined) continue;
-    const value = quantityOf(rule.lowerHeatingValueJPerKg, units.specificEnergy);
-    add('rule-lower-heating-value', 'Lower heating value by rule', value, 'MJ/kg', rule.source);
-  }
-  return {
-    name: substance.name,
-    origin: 'catalogue',
-    formula: substance.formula?.text ?? null,
-    phase: substance.phase,
-    aliases: substance.aliases,
-    properties,
-  };
-}
-
-/** A source in words: author, year, title, where. */
-export function sourceText(source: SourceRecord): string {
-  const year = source.year > 0 ? ` (${source.year})` : '';
-  const where = source.where ? `, ${source.where}` : '';
-  const remembered = source.provenance === 'from memory' ? ' [from memory]' : '';
-  return `${source.author}${year}, ${source.title}${where}${remembered}`;
 }
 
 function speciesOf({ formula, members }: Substance): ReadonlyMap<string, number> | null {
@@ -277,11 +207,15 @@ function datumQuantity(datum: Datum | undefined, dimension: Quantity['dimension'
   return quantityOf(datum.value, dimension, parts);
 }
 
+function temperatureOf(datum: Datum | undefined): Quantity | null {
+  return datum ? quantityOf(datum.value, units.temperature, undefined, 'temperature') : null;
+}
+
 const units = {
+  temperature: knownUnit('K').dimension,
   molarMass: knownUnit('kg/mol').dimension,
   molPerMass: knownUnit('mol/kg').dimension,
   specificEnergy: knownUnit('J/kg').dimension,
-  molarEnergy: knownUnit('J/mol').dimension,
   molarEntropy: knownUnit('J/(mol K)').dimension,
   density: knownUnit('kg/m3').dimension,
 };

@@ -145,6 +145,7 @@ function mixedOf(
   const shareOutcomes = others.slice(symbols.length);
   const shares: readonly PortionShare[] = parts.map(({ material }, index) => ({
     name: material.name,
+    material,
     mass: known(shareOutcomes[3 * index], '1') ?? quantityOf(centre[index] ?? 0, dimensionless),
     mole: known(shareOutcomes[3 * index + 1], '1'),
     volume: known(shareOutcomes[3 * index + 2], '1'),

@@ -8,6 +8,7 @@ import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Fact } from './facts.ts';
 import type { Place } from './place.ts';
+import type { PortionState } from './portion-state.ts';
 import type { Working } from './working.ts';
 
 export interface EvaluatedScenario {
@@ -88,7 +89,14 @@ export interface Column {
 
 /** What a portion, a term or an entry came to; shown when a person points at that line. */
 export type LineResult =
-  | { readonly kind: 'portion'; readonly line: number; readonly material: MaterialCard; readonly shares: Shares }
+  | {
+      readonly kind: 'portion';
+      readonly line: number;
+      readonly material: MaterialCard;
+      readonly shares: Shares;
+      /** How it lies in the tank; null where that is not known, or nothing is stored. */
+      readonly state: PortionState | null;
+    }
   | { readonly kind: 'equation'; readonly line: number; readonly figures: readonly string[] };
 
 export interface Shares {

@@ -42,6 +42,7 @@ export type MethodId =
   | 'reaction-gibbs-energy'
   | 'equilibrium-constant'
   | 'specific-reaction-enthalpy'
+  | 'solids-share'
   | 'wet-gas'
   | 'humidity-ratio'
   | 'ideal-gas-density';
@@ -60,5 +61,6 @@ export type AssumptionId =
   | 'remainder-hydrogen'
   | 'ideal-gas'
   | 'dry-gas'
+  | 'no-dissolving'
   | 'fossil-by-default'
   | 'several-alkalis-proportional';

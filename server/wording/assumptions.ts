@@ -23,6 +23,7 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'stable-phase': 'Where no phase is written, the phase stable at the state given is meant.',
   'remainder-hydrogen': 'What the composition leaves open is taken as hydrogen.',
   'ideal-gas': 'Gases are ideal.',
+  'no-dissolving': 'Nothing dissolves in anything else; melting points are those of the pure substances.',
   'dry-gas': 'No humidity is given: the gas is taken as dry.',
   'fossil-by-default': 'Carbon whose origin is not stated is taken as fossil.',
   'several-alkalis-proportional':

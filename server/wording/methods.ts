@@ -141,6 +141,12 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols: 'νᵣ, Mᵣ coefficient and molar mass of each substance on the left',
     validity: 'Oxygen on the left side counts in the mass; negative means that heat is set free.',
   },
+  'solids-share': {
+    words: 'The volume of the portions that are solid at the stored temperature, over the whole volume.',
+    equation: 'φ = Σ (wₛ / ρₛ) / Σ (wᵢ / ρᵢ)',
+    symbols: 'wᵢ mass share and ρᵢ density of portion i, the sum above over the solid ones',
+    validity: 'Holds for dispersions of substances that do not dissolve in each other; a pumping limit is not implied.',
+  },
   'wet-gas': {
     words: 'The species of the portions, with the water vapour that the humidity brings.',
     equation: 'yᵥ = φ pₛ(T) / p; yᵢ = (1 − yᵥ) xᵢ; M = Σ yᵢ Mᵢ',

@@ -5,16 +5,21 @@
 import type { Definition } from '../../../grammar/tree.ts';
 import type { EnergyFault } from '../../core/balance/formation-enthalpy.ts';
 import type { GivenProductsFault } from '../../core/balance/given-products.ts';
+import { knownUnit } from '../../core/quantity/convert.ts';
+import { quantityOf } from '../../core/quantity/quantity.ts';
 import { alkaliMetals } from '../../core/substance/elements.ts';
+import { referenceTemperatureK } from '../../core/substance/substance.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import type { Material, MissingProperty, PortionShare } from '../material.ts';
-import { answerMaterial, materialFigures, type MaterialAnswer } from '../material-figures.ts';
+import { answerMaterial, materialFigures, type FigureRow, type MaterialAnswer } from '../material-figures.ts';
 import { mixParts, readParts, type Mixed, type Part } from '../mixing.ts';
 import { reportMixtureFault } from '../portions.ts';
-import { formulasReader, materialReader, stateReader } from '../readers.ts';
-import type { LineResult, Table } from '../scenario.ts';
-import type { AssumptionId } from '../working.ts';
+import type { PortionState } from '../portion-state.ts';
+import { formulasReader, materialReader, stateReader, type State } from '../readers.ts';
+import type { Figure, LineResult, Table } from '../scenario.ts';
+import { portionStates, solidsVolumeShare, type StoredAt } from '../storage.ts';
+import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 const entries = {
@@ -37,7 +42,14 @@ const entries = {
   },
 };
 
-const evaluated: EvaluatedKind = { entries, lines: ['portion'], figures: materialFigures, evaluate };
+const solidsRow = {
+  id: 'solids-volume-share',
+  label: 'Solids, by volume, as stored',
+  unit: '1',
+  method: 'solids-share',
+} as const satisfies FigureRow;
+
+const evaluated: EvaluatedKind = { entries, lines: ['portion'], figures: [...materialFigures, solidsRow], evaluate };
 
 export const blend: Kind = {
   kind: 'blend',
@@ -70,11 +82,14 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   }
   reportMissingWater(answer, material, header, context);
   const energy = energyShares(parts, mixed);
+  const stored = storedAt(read.stored?.value);
+  const states = portionStates(mixed.shares, stored);
+  reportChangedPhases(definition, parts, states, context);
   return {
-    figures: answer.figures,
+    figures: [...answer.figures, ...solidsFigure(mixed, states, stored, material)],
     tables: [portionsTable(mixed.shares, energy), ...answer.tables],
     absent: answer.absent,
-    lines: lineResults(parts, mixed.shares, energy),
+    lines: lineResults(parts, mixed.shares, energy, states),
     material,
   };
 }
@@ -98,6 +113,8 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     formationEnthalpy: mixed.formationEnthalpy,
     entropy: null,
     density: mixed.density,
+    meltingPoint: null,
+    boilingPoint: null,
     biogenicShare: mixed.biogenicShare,
     products,
     portions: mixed.shares,
@@ -106,6 +123,48 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     card: { name, origin: 'scenario', formula: null, phase: null, aliases: [], properties: [] },
     missing,
   };
+}
+
+function storedAt(state: State | undefined): StoredAt {
+  const temperature = quantityOf(referenceTemperatureK, knownUnit('K').dimension, undefined, 'temperature');
+  return {
+    temperature: state?.temperature ?? temperature,
+    pressure: state?.pressure ?? quantityOf(1e5, knownUnit('Pa').dimension),
+  };
+}
+
+/** Only a mixture of solid and liquid has a share of solids worth telling. */
+function solidsFigure(
+  mixed: Mixed,
+  states: readonly (PortionState | null)[],
+  stored: StoredAt,
+  material: Material,
+): readonly Figure[] {
+  const phases = new Set(states.map((state) => state?.phase ?? 'mixture'));
+  const quantity = solidsVolumeShare(mixed.shares, stored.temperature);
+  if (!quantity || phases.size < 2 || quantity.value === 0) return [];
+  const inputs: WorkingInput[] = [
+    { label: 'Stored temperature', quantity: stored.temperature, unit: 'degC' },
+    ...mixed.shares.map(({ name, volume }) => ({ label: `${name}, by volume`, quantity: volume, unit: '%' })),
+  ];
+  const { sources } = material;
+  const working: Working = { method: solidsRow.method, inputs, sources, assumptions: ['volumes-add', 'no-dissolving'] };
+  return [{ id: solidsRow.id, label: solidsRow.label, quantity, unit: solidsRow.unit, working }];
+}
+
+/** A portion whose data are of another phase than the one it is stored in is told of, at its substance. */
+function reportChangedPhases(
+  definition: Definition,
+  parts: readonly Part[],
+  states: readonly (PortionState | null)[],
+  context: Context,
+): void {
+  for (const [index, { line, material }] of parts.entries()) {
+    const state = states[index];
+    const portion = definition.lines[line];
+    if (!state?.changed || portion?.kind !== 'portion' || !portion.substance) continue;
+    context.report(portion.substance.span, { code: 'range/phase', substance: material.name, state });
+  }
 }
 
 function isOfProducts(fault: EnergyFault): fault is GivenProductsFault {
@@ -163,6 +222,7 @@ function lineResults(
   parts: readonly Part[],
   shares: readonly PortionShare[],
   energy: readonly (number | null)[],
+  states: readonly (PortionState | null)[],
 ): LineResult[] {
   return parts.map(({ line, material }, index) => ({
     kind: 'portion',
@@ -174,5 +234,6 @@ function lineResults(
       volume: shares[index]?.volume?.value ?? null,
       energy: energy[index] ?? null,
     },
+    state: states[index] ?? null,
   }));
 }

@@ -158,7 +158,7 @@ function answerGas(
   const lines = parts.map(({ line, material }, index): LineResult => {
     const { mass, mole, volume } = shares[index] ?? { mass: quantityOf(0, dimensionless), mole: null, volume: null };
     const values = { mass: mass.value, mole: mole?.value ?? null, volume: volume?.value ?? null, energy: null };
-    return { kind: 'portion', line, material: material.card, shares: values };
+    return { kind: 'portion', line, material: material.card, shares: values, state: null };
   });
   const absent = new Map(gas.isGas ? [] : [['density', ['a density of what is no gas']]]);
   return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null };

@@ -105,6 +105,36 @@ const entries = {
     quantityReader('kJ/(kg K)', 'a specific heat capacity, such as `2.1 kJ/(kg K)`', { range: 'positive', at: true }),
     'The specific heat capacity at constant pressure.',
   ),
+  entropy: row(
+    'entropy',
+    quantityReader('J/(mol K)', 'a molar entropy, such as `126.8 J/(mol K)`', { range: 'positive' }),
+    'The absolute entropy at 25 °C and 1 bar; reactions need it for their Gibbs energy.',
+  ),
+  meltingPoint: row(
+    'melting point',
+    quantityReader('degC', 'a temperature, such as `97.8 degC`', { temperature: true }),
+    'The melting point at 1 atm.',
+  ),
+  boilingPoint: row(
+    'boiling point',
+    quantityReader('degC', 'a temperature, such as `64.7 degC`', { temperature: true }),
+    'The boiling point at 1 atm.',
+  ),
+  autoignitionTemperature: row(
+    'autoignition temperature',
+    quantityReader('degC', 'a temperature, such as `220 degC`', { temperature: true }),
+    'The lowest temperature at which it takes fire in air by itself.',
+  ),
+  lowerFlammableLimit: row(
+    'lower flammable limit',
+    quantityReader('%', 'a share by volume, such as `5 %`', { range: 'share' }),
+    'The least share of its vapour in air, by volume, that a flame passes through.',
+  ),
+  upperFlammableLimit: row(
+    'upper flammable limit',
+    quantityReader('%', 'a share by volume, such as `15 %`', { range: 'share' }),
+    'The largest share of its vapour in air, by volume, that a flame passes through.',
+  ),
   flashPoint: row(
     'flash point',
     quantityReader('degC', 'a temperature, such as `61 degC`', { temperature: true }),
@@ -213,8 +243,10 @@ function materialOf(
     elements,
     molarMass,
     formationEnthalpy,
-    entropy: null,
+    entropy: read.entropy?.value.quantity ?? null,
     density,
+    meltingPoint: read.meltingPoint?.value.quantity ?? null,
+    boilingPoint: read.boilingPoint?.value.quantity ?? null,
     biogenicShare: read.carbonOrigin?.value ?? quantityOf(0, dimensionless),
     products: read.products?.value ?? null,
     portions: null,
@@ -310,7 +342,25 @@ function cardProperties(read: Entries, molarMass: Quantity | null): readonly Car
     'kJ/(kg K)',
     atCelsius(read.heatCapacity?.value.at),
   );
+  add('entropy', 'Entropy', read.entropy?.value.quantity, 'J/(mol K)', 'at 25 °C');
+  add('melting-point', 'Melting point', read.meltingPoint?.value.quantity, 'K');
+  add('boiling-point', 'Boiling point', read.boilingPoint?.value.quantity, 'K', 'at 1 atm');
   add('flash-point', 'Flash point', read.flashPoint?.value.quantity, 'K');
+  add('autoignition-temperature', 'Autoignition temperature', read.autoignitionTemperature?.value.quantity, 'K');
+  add(
+    'lower-flammable-limit',
+    'Lower flammable limit',
+    read.lowerFlammableLimit?.value.quantity,
+    '1',
+    'by volume in air',
+  );
+  add(
+    'upper-flammable-limit',
+    'Upper flammable limit',
+    read.upperFlammableLimit?.value.quantity,
+    '1',
+    'by volume in air',
+  );
   return properties;
 }
 

@@ -263,6 +263,19 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     'There is no air of that relative humidity at 120 °C and 1 bar: its vapour alone would reach the whole pressure, or water has no saturation pressure there. Give the state it was measured at, or a humidity ratio such as `10 g/kg`.',
   ],
   [
+    {
+      code: 'range/phase',
+      substance: 'sodium',
+      state: {
+        phase: 'liquid',
+        temperature: quantity(120, 'degC', 0, 'temperature'),
+        changed: { from: 'solid', at: quantity(97.8, 'degC', 0, 'temperature') },
+        excessDensity: null,
+      },
+    },
+    '`sodium` is liquid at 120 °C: it melts at 97.8 °C. Its energy and density here are those of the solid at 25 °C.',
+  ],
+  [
     { code: 'range/share', text: '120 %', low: 0, high: 1 },
     '`120 %` is not possible here; it can be from 0 % to 100 %.',
   ],
@@ -347,6 +360,7 @@ describe('every code', () => {
       'information balance/water-missing',
       'information kind/not-evaluated',
       'information name/like-catalogue',
+      'information range/phase',
       'warning balance/contradiction',
       'warning balance/no-data',
       'warning range/temperature',

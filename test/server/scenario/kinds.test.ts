@@ -118,6 +118,68 @@ describe('blend', () => {
   });
 });
 
+describe('a blend in its tank', () => {
+  test('solids by volume: the sodium of a slurry, none in a mixture of liquids', () => {
+    const scenario = checkFacts(`
+      blend slurry {
+        30 % sodium
+        rest hexadecane
+        stored: 25 degC
+      }
+      let share = sodium in slurry by volume
+      blend flat {
+        30 % methanol
+        rest ethanol
+      }
+      blend watered {
+        10 % water
+        rest slurry
+      }
+    `);
+    const share = valueOf(scenario, 'share') ?? NaN;
+    expect(figureOf(scenario, 'slurry', 'solids-volume-share')).toBeCloseTo(share, 12);
+    expect(figureOf(scenario, 'flat', 'solids-volume-share')).toBeUndefined();
+    expect(figureOf(scenario, 'watered', 'solids-volume-share')).toBeLessThan(share);
+  });
+
+  test('a portion in another phase than its data are of', () => {
+    const scenario = checkFacts(`
+      blend hot {
+        30 % sodium
+      #      ^^^^^^ range/phase
+        rest hexadecane
+        stored: 120 degC, 1 bar
+      }
+      blend cold {
+        30 % methanol
+        rest hexadecane
+        #    ^^^^^^^^^^ range/phase
+        stored: 5 degC
+      }
+      blend warm_gas {
+        50 % ammonia
+        rest water
+        stored: 20 degC, 10 bar
+      }
+    `);
+    expect(figureOf(scenario, 'hot', 'solids-volume-share')).toBeUndefined();
+    const line = scenario.files[0]?.definitions[0]?.lines[0];
+    expect(line).toMatchObject({ state: { phase: 'liquid', changed: { from: 'solid' } } });
+  });
+
+  test('a solid heavier than its liquid', () => {
+    const scenario = checkFacts(`
+      blend slurry {
+        30 % sodium
+        rest hexadecane
+      }
+    `);
+    const line = scenario.files[0]?.definitions[0]?.lines[0];
+    const excess = line?.kind === 'portion' ? line.state?.excessDensity?.value : undefined;
+    expect(excess).toBeCloseTo(970 - 770, -1.5);
+  });
+});
+
 describe('slips in a blend', () => {
   test('shares that do not close', () => {
     checkFacts(`
