@@ -105,9 +105,10 @@ function close(
     return undefined;
   }
   const outcomes = propagate(inputs, (values) => {
-    const moved = massSharesOf(mixtureParts(values));
-    const shares = 'fault' in moved ? answer.massShares : moved.massShares;
-    return parts.map(({ symbol }, index) => (shares[index] ?? 0) / (atomicWeightKgPerMol(symbol) ?? NaN));
+    const moved = massSharesOf(mixtureParts(values), Infinity);
+    // Moved by its uncertainty a share may leave its range; the slope from the other side then serves.
+    if ('fault' in moved) return [];
+    return parts.map(({ symbol }, index) => (moved.massShares[index] ?? 0) / (atomicWeightKgPerMol(symbol) ?? NaN));
   });
   const { dimension } = knownUnit('mol/kg');
   const elements = new Map<string, Quantity>();

@@ -61,16 +61,12 @@ export interface Mixed {
 /** The shares and properties of the parts together, with their uncertainty; a fault says why there are none. */
 export function mixParts(parts: readonly Part[]): Mixed | MixtureFault {
   const inputs = inputsOf(parts);
-  const centre = massSharesOf(
-    mixtureParts(
-      parts,
-      inputs.map((input) => input.value),
-    ),
-  );
+  const values = inputs.map((input) => input.value);
+  const centre = massSharesOf(mixtureParts(parts, values, numbersOf(parts, values)));
   return 'fault' in centre ? centre : mixedOf(parts, inputs, centre.massShares, centre.scaled);
 }
 
-/** Everything a blend rests on as one list of uncertain numbers: amounts first, then five and the elements of each part. */
+/** Everything a blend rests on as one list of uncertain numbers: amounts first, then four and the elements of each part. */
 function inputsOf(parts: readonly Part[]): readonly Quantity[] {
   const unknown = quantityOf(NaN);
   return [
@@ -101,8 +97,11 @@ function numbersOf(parts: readonly Part[], values: readonly number[]): PartPrope
   }));
 }
 
-function mixtureParts(parts: readonly Part[], values: readonly number[]): MixturePart[] {
-  const numbers = numbersOf(parts, values);
+function mixtureParts(
+  parts: readonly Part[],
+  values: readonly number[],
+  numbers: readonly PartProperties[],
+): MixturePart[] {
   return parts.map(({ amount }, index) => ({
     amount:
       amount.kind === 'rest' ? { kind: 'rest' } : { kind: amount.kind, basis: amount.basis, value: values[index] ?? 0 },
@@ -119,12 +118,13 @@ function mixedOf(
 ): Mixed {
   const symbols = [...new Set(parts.flatMap(({ material }) => [...material.elements.keys()]))];
   const outcomes = propagate(inputs, (values) => {
-    const moved = massSharesOf(mixtureParts(parts, values));
+    const numbers = numbersOf(parts, values);
+    const mixture = mixtureParts(parts, values, numbers);
+    const moved = massSharesOf(mixture, Infinity);
     // Moved by its uncertainty a share may leave its range; the slope from the other side then serves.
-    if ('fault' in moved && values.some((value, index) => value !== inputs[index]?.value)) return [];
-    const massShares = 'fault' in moved ? centre : moved.massShares;
-    const mixture = mixtureParts(parts, values);
-    const properties = mixProperties(massShares, numbersOf(parts, values));
+    if ('fault' in moved) return [];
+    const { massShares } = moved;
+    const properties = mixProperties(massShares, numbers);
     const mole = sharesOn('mole', massShares, mixture);
     const volume = sharesOn('volume', massShares, mixture);
     return [

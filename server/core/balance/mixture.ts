@@ -37,9 +37,14 @@ export type MixtureFault =
 /** Shares that miss 1 by no more than this are taken as rounded and scaled to 1 (a tenth of a percentage point; the last digit lets 99.9 % itself through). */
 export const roundingOfShares = 1e-3 + 1e-9;
 
-/** Mass shares of the parts, in their order; `scaled` when rounding was taken up. */
+/**
+ * Mass shares of the parts, in their order; `scaled` when rounding was taken up. Without a rest, shares whose sum misses 1
+ * by more than `largestGap` are a fault; with Infinity they are scaled whatever they add up to, for one who moves the
+ * shares of a whole by their uncertainties.
+ */
 export function massSharesOf(
   parts: readonly MixturePart[],
+  largestGap = roundingOfShares,
 ): { readonly massShares: readonly number[]; readonly scaled: boolean } | MixtureFault {
   const fault = faultOfForm(parts);
   if (fault) return fault;
@@ -48,7 +53,7 @@ export function massSharesOf(
   if (parts.every((part) => part.amount.kind === 'rest')) return { massShares: parts.map(() => 1), scaled: false };
   if (parts.some((part) => part.amount.kind === 'amount')) return fromAmounts(parts);
   const [only] = bases;
-  return bases.size === 1 && only ? fromSharesOnOneBasis(parts, only) : fromMixedShares(parts);
+  return bases.size === 1 && only ? fromSharesOnOneBasis(parts, only, largestGap) : fromMixedShares(parts, largestGap);
 }
 
 /** Shares on another basis from mass shares; null when a part that is there lacks the property it takes. */
@@ -100,12 +105,13 @@ function fromAmounts(parts: readonly MixturePart[]): { massShares: readonly numb
 function fromSharesOnOneBasis(
   parts: readonly MixturePart[],
   basis: Basis,
+  largestGap: number,
 ): { massShares: readonly number[]; scaled: boolean } | MixtureFault {
   let sum = 0;
   for (const { amount } of parts) if (amount.kind === 'share') sum += amount.value;
   const hasRest = parts.some((part) => part.amount.kind === 'rest');
   if (hasRest && sum > 1 + roundingOfShares) return { fault: 'no-room', sum };
-  if (!hasRest && Math.abs(sum - 1) > roundingOfShares) return { fault: 'sum', sum };
+  if (!hasRest && Math.abs(sum - 1) > largestGap) return { fault: 'sum', sum };
   const masses: number[] = [];
   for (const [index, part] of parts.entries()) {
     const share = part.amount.kind === 'share' ? part.amount.value : Math.max(0, 1 - sum);
@@ -125,6 +131,7 @@ function fromSharesOnOneBasis(
  */
 function fromMixedShares(
   parts: readonly MixturePart[],
+  largestGap: number,
 ): { massShares: readonly number[]; scaled: boolean } | MixtureFault {
   for (const { amount } of parts) {
     if (amount.kind !== 'share') continue;
@@ -155,7 +162,7 @@ function fromMixedShares(
   const last = parts[freed]?.amount;
   if (last?.kind === 'share') {
     const found = sharesOn(last.basis, massShares, parts)?.[freed] ?? 0;
-    if (Math.abs(found - last.value) > roundingOfShares) return { fault: 'inconsistent', index: freed, found };
+    if (Math.abs(found - last.value) > largestGap) return { fault: 'inconsistent', index: freed, found };
   }
   return { massShares, scaled: false };
 }
