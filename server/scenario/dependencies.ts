@@ -62,6 +62,7 @@ export function mentionsInExpression(expression: Expression, mentions: Mention[]
         if (item.at) rest.push(item.at);
         break;
       case 'membership':
+        name(item.substance);
         name(item.name);
         break;
       case 'call':

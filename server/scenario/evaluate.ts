@@ -33,8 +33,9 @@ export function evaluate(path: string, read: (path: string) => ReadAnswer): Eval
   const { files, wanted } = loadFiles(path, read);
   const bindings = bindNames(files);
   const answers = new Map<Binding, Answer>();
-  const scope = new ScenarioScope(bindings, answers, wanted.length > 0);
-  answerBindings(bindings, scope, answers);
+  const unknowable = new Set(bindings.ambiguous);
+  const scope = new ScenarioScope(bindings, unknowable, answers, wanted.length > 0);
+  answerBindings(bindings, unknowable, scope, answers);
   return { files: files.map((file) => gather(file, bindings, scope, answers)), wanted };
 }
 
@@ -47,17 +48,25 @@ interface Answer {
 
 class ScenarioScope implements Scope {
   readonly #bindings: Bindings;
+  /** Names that stand for nothing: given twice, or on a ring. */
+  readonly #unknowable: ReadonlySet<string>;
   readonly #answers: ReadonlyMap<Binding, Answer>;
   readonly #isIncomplete: boolean;
 
-  constructor(bindings: Bindings, answers: ReadonlyMap<Binding, Answer>, isIncomplete: boolean) {
+  constructor(
+    bindings: Bindings,
+    unknowable: ReadonlySet<string>,
+    answers: ReadonlyMap<Binding, Answer>,
+    isIncomplete: boolean,
+  ) {
     this.#bindings = bindings;
+    this.#unknowable = unknowable;
     this.#answers = answers;
     this.#isIncomplete = isIncomplete;
   }
 
   lookup(name: string): Named | undefined {
-    if (this.#bindings.ambiguous.has(name)) return { kind: 'unknown' };
+    if (this.#unknowable.has(name)) return { kind: 'unknown' };
     const binding = this.#bindings.unique.get(name);
     // While a used file is still to be fetched, a name that is not there yet may be in it.
     if (!binding) return this.#isIncomplete ? { kind: 'unknown' } : undefined;
@@ -69,9 +78,17 @@ class ScenarioScope implements Scope {
   }
 }
 
-function answerBindings(bindings: Bindings, scope: Scope, answers: Map<Binding, Answer>): void {
+/** Answers all named statements; the names on a ring join the unknowable ones. */
+function answerBindings(
+  bindings: Bindings,
+  unknowable: Set<string>,
+  scope: Scope,
+  answers: Map<Binding, Answer>,
+): void {
   const mentions = new Map([...bindings.unique].map(([name, binding]) => [name, mentionsOf(binding.statement)]));
   const { order, cycles } = orderByMentions(mentions);
+  const ordered = new Set(order);
+  for (const name of bindings.unique.keys()) if (!ordered.has(name)) unknowable.add(name);
   for (const name of order) {
     const binding = bindings.unique.get(name);
     if (binding) answers.set(binding, answerBinding(binding, scope));
@@ -81,9 +98,10 @@ function answerBindings(bindings: Bindings, scope: Scope, answers: Map<Binding, 
     const place = binding && placeOf(binding.file.path, binding.placed, mention.span);
     if (binding && place) binding.file.facts.push({ fact: { code: 'name/cycle', path, leftOut }, place });
   }
-  // Two definitions of one name are each worked out for their own findings, though the name stands for neither.
+  // Two definitions of one name, and those on a ring, are each worked out for their own findings, though the name stands
+  // for nothing.
   for (const binding of bindings.all) {
-    if (bindings.ambiguous.has(binding.name)) answers.set(binding, answerBinding(binding, scope));
+    if (unknowable.has(binding.name)) answers.set(binding, answerBinding(binding, scope));
   }
 }
 

@@ -61,7 +61,9 @@ export function loadFiles(root: string, read: (path: string) => ReadAnswer): Loa
     const say = (fact: Fact): void => {
       file.facts.push({ fact, place: placeOf(file.path, placed, written.span) });
     };
-    const path = resolveUse(file.path, written.value);
+    const resolved = resolveUse(file.path, written.value);
+    // The root keeps the spelling it was named with (`./trial.stoke`), or it would be reached a second time.
+    const path = resolved === withoutDot(root) ? root : resolved;
     if (path === null) return say({ code: 'name/missing-file', path: written.value, why: 'not-relative' });
     const onPath = open.findIndex((entry) => entry.file.path === path);
     if (onPath >= 0) {
@@ -94,10 +96,7 @@ export function resolveUse(from: string, path: string): string | null {
   }
   const uri = /^([A-Za-z][\w+.-]*:\/\/[^/]*)(\/.*)$/s.exec(from);
   const [origin, base] = uri ? [uri[1] ?? '', uri[2] ?? ''] : ['', from];
-  const segments = base
-    .replace(/^(\.\/)+/, '')
-    .split('/')
-    .slice(0, -1);
+  const segments = withoutDot(base).split('/').slice(0, -1);
   for (const part of path.split('/')) {
     if (part === '' || part === '.') continue;
     const last = segments.at(-1);
@@ -107,4 +106,9 @@ export function resolveUse(from: string, path: string): string | null {
     else segments.push(uri && part !== '..' ? encodeURIComponent(part) : part);
   }
   return origin + segments.join('/');
+}
+
+/** A path from here without its `./`. */
+function withoutDot(path: string): string {
+  return path.replace(/^(\.\/+)+/, '');
 }

@@ -47,12 +47,13 @@ export interface EntryHelp {
   readonly default: { readonly text: string; readonly source: string } | null;
 }
 
-/** Whether bare words of an entry of this kind may name things; an entry nobody knows may. */
+/**
+ * Whether bare words of an entry of this kind may name things. Those of an entry that nobody reads, or of a kind that is
+ * not evaluated, do not: `cycle: diesel` in an engine called `diesel` is no ring.
+ */
 export function entryNamesThings(kind: string, entry: string): boolean {
-  const entries = byWord.get(kind)?.evaluated?.entries;
-  if (!entries) return true;
-  const row = Object.values(entries).find((candidate) => candidate.name === entry);
-  return row?.reader.names ?? row === undefined;
+  const rows = Object.values(byWord.get(kind)?.evaluated?.entries ?? {});
+  return rows.find((candidate) => candidate.name === entry)?.reader.names ?? false;
 }
 
 function later(kind: string, help: string): Kind {

@@ -37,6 +37,52 @@ describe('names', () => {
     );
   });
 
+  test('what stands on a ring is still looked at for slips of its own', () => {
+    const scenario = checkFacts(`
+      let a = b + 3 kgg
+      #             ^^^ unit/unknown
+      let b = a
+      #       ^ name/cycle
+      blend c {
+        100 % c
+      #       ^ name/cycle
+        stored: 20 kgg
+      #            ^^^ unit/unknown
+      }
+      let heat = lower heating value of c
+    `);
+    expect(scenario.files[0]?.definitions.map(({ name }) => name)).toEqual(['c']);
+    expect(scenario.files[0]?.values.map(({ quantity }) => quantity)).toEqual([null, null, null]);
+  });
+
+  test('a listed word, or one of an entry that nobody reads, names nothing', () => {
+    checkFacts(`
+        engine twin {
+      # ^^^^^^ kind/not-evaluated
+          cycle: twin
+        }
+      blend b {
+        100 % methanol
+        cycle: b
+      # ^^^^^ name/unknown-entry
+      }
+    `);
+  });
+
+  test('a share of a blend that is defined further down, and is no portion', () => {
+    checkFacts(`
+      blend slurry {
+        30 % sodium
+        rest methanol
+      }
+      let x = later in slurry
+      #       ^^^^^ name/unknown
+      blend later {
+        100 % ethanol
+      }
+    `);
+  });
+
   test('spelt like a unit', () => {
     checkFacts(`
       let bar = 3
@@ -119,6 +165,19 @@ describe('use', () => {
     );
     expect(scenario.wanted).toEqual(['a.stoke']);
     expect(scenario.files[0]?.facts).toEqual([]);
+  });
+
+  test.each(['main.stoke', './main.stoke', './/main.stoke'])('%s is reached once, by a file that uses it', (root) => {
+    const texts = new Map([
+      ['main.stoke', 'use "a.stoke"\nlet x = 1\n'],
+      ['a.stoke', 'use "main.stoke"\nlet y = x\n'],
+    ]);
+    const scenario = evaluate(root, (path) => {
+      const text = texts.get(path.replace(/^\.\/+/, ''));
+      return text === undefined ? { fault: 'missing' } : { text };
+    });
+    expect(scenario.files.map(({ path }) => path)).toEqual([root, 'a.stoke']);
+    expect(scenario.files.flatMap(({ facts }) => facts.map(({ fact }) => fact.code))).toEqual(['name/use-cycle']);
   });
 
   test('paths are resolved against the using file, plain or URI', () => {
