@@ -20,13 +20,13 @@ import {
   type Quantity,
 } from '../core/quantity/quantity.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
-import { fromSi } from '../core/quantity/read-unit.ts';
+import { fromSi, toSi } from '../core/quantity/read-unit.ts';
 import { explainUnitWord } from '../core/quantity/suggest-units.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
 import { functions, reportCount, type Argument } from './functions.ts';
-import { readQuantity, readUnitWords, reportFault } from './read-quantity.ts';
+import { aboveAbsoluteZero, readQuantity, readUnitWords, reportFault } from './read-quantity.ts';
 import type { Absent, EvaluatedDefinition, Figure, Table } from './scenario.ts';
 
 /** The value of an expression; null when it could not be had (said, or silent because its cause was said elsewhere). */
@@ -89,7 +89,9 @@ function chain(expression: Binary, context: Context): Unknowable {
       continue;
     }
     const answer = operators[operation.operator](left, right);
-    left = isFault(answer) ? reportFault(answer, operation.left.span, operation.right.span, context) : answer;
+    left = isFault(answer)
+      ? reportFault(answer, operation.left.span, operation.right.span, context)
+      : aboveAbsoluteZero(answer, operation.span, context);
   }
   return left;
 }
@@ -241,9 +243,11 @@ function evaluateCell(reference: Reference, row: Word, owner: Owner, context: Co
     const unit = table.columns[column]?.unit;
     if (!found || !unit) continue;
     if (typeof cell !== 'number') return null; // the table itself shows that it could not be had
-    const { dimension, up, down } = knownUnit(unit);
-    return { quantity: quantityOf((cell * up) / down, dimension), unit };
+    const known = knownUnit(unit);
+    return { quantity: quantityOf(toSi(cell, known), known.dimension), unit };
   }
+  // A definition that could not be worked out has no tables, and why has been said there.
+  if ([...owner.absent.values()].includes(null)) return null;
   const rows = owner.tables.flatMap((table) => table.rows.map((cells) => String(cells[0]))).slice(0, 12);
   context.report(row.span, {
     code: 'name/unknown',
@@ -342,7 +346,8 @@ export function evaluateClaim(claim: Comparison | Within, context: Context): Cla
   const tolerance = readTolerance(claim, limit, context);
   if (!tolerance) return null;
   return {
-    holds: Math.abs(found.value - limit.value) <= tolerance.value * (1 + nearEnough),
+    holds:
+      Math.abs(found.value - limit.value) <= tolerance.value * (1 + nearEnough) || areEqual(found.value, limit.value),
     found,
     unit,
     limit,
@@ -353,8 +358,12 @@ export function evaluateClaim(claim: Comparison | Within, context: Context): Cla
 /** Two numbers that differ by less than this, relative, count as equal: they differ by floating-point rounding only. */
 const nearEnough = 1e-9;
 
+function areEqual(found: number, limit: number): boolean {
+  return Math.abs(found - limit) <= nearEnough * Math.max(Math.abs(found), Math.abs(limit));
+}
+
 function holds(operator: Comparison['operator'], found: number, limit: number): boolean {
-  const isEqual = Math.abs(found - limit) <= nearEnough * Math.max(Math.abs(found), Math.abs(limit));
+  const isEqual = areEqual(found, limit);
   switch (operator) {
     case '<':
       return found < limit && !isEqual;

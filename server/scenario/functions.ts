@@ -3,8 +3,14 @@
 // Its arguments arrive worked out: this file knows no expressions.
 
 import type { Call, Expression } from '../../grammar/tree.ts';
-import { dimensionless, isDimensionless, raiseDimension, type Dimension } from '../core/quantity/dimension.ts';
-import { compare, quantityOf, type Quantity } from '../core/quantity/quantity.ts';
+import {
+  dimensionless,
+  isDimensionless,
+  raiseDimension,
+  sameDimension,
+  type Dimension,
+} from '../core/quantity/dimension.ts';
+import { compare, isFault, multiply, quantityOf, type Quantity } from '../core/quantity/quantity.ts';
 import { propagate } from '../core/quantity/uncertainty.ts';
 import type { Context, Unknowable } from './context.ts';
 import type { Material } from './material.ts';
@@ -107,12 +113,16 @@ function ofOne(
       });
       return null;
     }
+    // Times one is the quantity itself, but for what counts from a zero of its own: `abs(-20 degC)` has no meaning.
+    const scaled = multiply(quantity, quantityOf(1));
+    if (isFault(scaled)) return reportFault(scaled, expression.span, undefined, context);
     const [outcome] = propagate([quantity], ([value = NaN]) => [f(value)]);
     if (!outcome || !Number.isFinite(outcome.value)) {
       context.report(call.span, { code: 'range/number', text: context.written(call.span), why: 'outside-function' });
       return null;
     }
-    return quantityOf(outcome.value, dimension, outcome.parts);
+    const kind = sameDimension(dimension, quantity.dimension) ? scaled.kind : undefined;
+    return quantityOf(outcome.value, dimension, outcome.parts, kind);
   }
 }
 

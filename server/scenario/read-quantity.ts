@@ -23,16 +23,17 @@ export function readQuantity(node: QuantityNode, context: Context): Unknowable {
   if (uncertainty === null) return null;
   const answer = quantityFrom(node.number.value, unit, uncertainty);
   if (isFault(answer)) return reportFault(answer, node.span, undefined, context);
-  if (answer.kind === 'temperature' && answer.value < 0) {
-    context.report(node.span, {
-      code: 'range/temperature',
-      text: context.written(node.span),
-      why: 'below-absolute-zero',
-    });
-    return null;
-  }
-  context.mean(node.span, { kind: 'quantity', quantity: answer, unit: unit.text });
-  return answer;
+  const read = aboveAbsoluteZero(answer, node.span, context);
+  if (read) context.mean(node.span, { kind: 'quantity', quantity: read, unit: unit.text });
+  return read;
+}
+
+/** The quantity, unless it is a temperature below absolute zero (said). Numbers in K that may be differences pass. */
+export function aboveAbsoluteZero(quantity: Quantity, span: Span, context: Context): Unknowable {
+  if (quantity.kind !== 'temperature' || quantity.value >= 0) return quantity;
+  const text = context.written(span);
+  context.report(span, { code: 'range/temperature', text, why: 'below-absolute-zero' });
+  return null;
 }
 
 /** The unit of a literal (none: a plain number); null when it cannot be read (said). */
@@ -86,7 +87,7 @@ export function fit(quantity: Quantity, needed: Needed, span: Span, context: Con
     return null;
   }
   const answer = asKind(quantity, needed.kind);
-  return isFault(answer) ? reportFault(answer, span, undefined, context) : answer;
+  return isFault(answer) ? reportFault(answer, span, undefined, context) : aboveAbsoluteZero(answer, span, context);
 }
 
 export function sided(quantity: Quantity, span: Span, context: Context): Sided {

@@ -156,3 +156,51 @@ describe('cycles', () => {
     `);
   });
 });
+
+describe('temperatures and gauge pressures have a zero of their own', () => {
+  test('no function takes one, and a number of kelvins stays open', () => {
+    const scenario = checkFacts(`
+      let a = abs(-20 degC)
+      #           ^^^^^^^^ unit/temperature
+      let b = abs(-0.2 barg)
+      #           ^^^^^^^^^ unit/gauge
+      let c = abs(-20 K)
+      let limit = 25 degC + c
+    `);
+    expect(valueOf(scenario, 'limit')).toBeCloseTo(318.15, 9);
+  });
+
+  test('below absolute zero, worked out or written in K', () => {
+    checkFacts(`
+      let cold = 25 degC - 500 K
+      #          ^^^^^^^^^^^^^^^ range/temperature
+      let difference = -5 K
+      substance oil {
+        composition: 86 % C, 14 % H
+        flash point: -5 K
+      #              ^^^^ range/temperature
+        density: 800 kg/m3 at 0 K - 3 K
+      #                       ^^^^^^^^^ range/temperature
+      }
+    `);
+  });
+});
+
+test('a tolerance of nothing holds for numbers that differ by rounding only', () => {
+  checkFacts(`
+    expect 0.1 + 0.2 within 0.3 ± 0
+    expect 0.31 within 0.3 ± 0
+    #      ^^^^^^^^^^^^^^^^^^^ expect/failed
+  `);
+});
+
+test('a table of a definition that could not be worked out is not asked for rows', () => {
+  checkFacts(`
+    blend fuel {
+      30 % sodiumm
+    #      ^^^^^^^ name/unknown
+      rest methanol
+    }
+    expect mass share of sodium in fuel > 1 %
+  `);
+});
