@@ -1,14 +1,25 @@
 /**
- * A temperature below absolute zero (0 K, −273.15 °C, −459.67 °F), or one at which this version has no data: enthalpies and
- * entropies are known at 25 °C alone.
+ * A temperature below absolute zero (0 K, −273.15 °C, −459.67 °F), or one at which the data of some species are not good
+ * any more: their published tables end there, or the substance melts, boils or falls apart.
  */
-import { quoted } from '../wording/words.ts';
+import { celsiusText } from '../wording/quantities.ts';
+import { quoted, sentences } from '../wording/words.ts';
 import type { FactOf, Rule } from './rule.ts';
 
 export const rangeTemperature: Rule<FactOf<'range/temperature'>> = {
   severity: ({ why }) => (why === 'below-absolute-zero' ? 'error' : 'warning'),
-  message: ({ text, why }) =>
-    why === 'below-absolute-zero'
-      ? `${quoted(text)} is below absolute zero (−273.15 °C). Is the sign or the unit wrong?`
-      : `Nothing is known here at ${quoted(text)}: this version works reactions out at 25 °C only. Leave the temperature out, or write \`25 degC\`.`,
+  message: (fact) => {
+    if (fact.why === 'below-absolute-zero') {
+      return `${quoted(fact.text)} is below absolute zero (−273.15 °C). Is the sign or the unit wrong?`;
+    }
+    const ranges = fact.species.map(({ name, range: [from, to] }) =>
+      from.value === to.value
+        ? `${quoted(name)} has one heat capacity, at ${celsiusText(from)}, taken as constant`
+        : `${quoted(name)} has data from ${celsiusText(from)} to ${celsiusText(to)}`,
+    );
+    return sentences(
+      `At ${celsiusText(fact.temperature)} this reaction leans on values beyond their data: ${ranges.join('; ')}.`,
+      'Take the result as a guess, or give a state within the data.',
+    );
+  },
 };

@@ -145,11 +145,13 @@ export type Fact =
       readonly text: string;
       readonly why: 'not-finite' | 'division-by-zero' | 'outside-function';
     }
-  /** `only-reference`: values are known at 25 °C alone. */
+  | { readonly code: 'range/temperature'; readonly why: 'below-absolute-zero'; readonly text: string }
+  /** Data of these species are not good at the state asked for; `range` is where they are. */
   | {
       readonly code: 'range/temperature';
-      readonly text: string;
-      readonly why: 'below-absolute-zero' | 'only-reference';
+      readonly why: 'extrapolated';
+      readonly temperature: Quantity;
+      readonly species: readonly { readonly name: string; readonly range: readonly [from: Quantity, to: Quantity] }[];
     }
   /** A portion that is in another phase where it is stored than at 25 °C, which its data are of. */
   | { readonly code: 'range/phase'; readonly substance: string; readonly state: PortionState }

@@ -4,6 +4,7 @@
 
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Formula } from '../core/substance/formula.ts';
+import type { HeatCapacity } from '../core/substance/substance.ts';
 import type { MaterialCard } from './scenario.ts';
 import type { AssumptionId } from './working.ts';
 
@@ -24,6 +25,8 @@ export interface Material {
   readonly formationEnthalpy: Quantity | null;
   /** J/(mol K) at 298.15 K and 1 bar. */
   readonly entropy: Quantity | null;
+  /** Per kilogram, with the range it is good for. */
+  readonly heatCapacity: HeatCapacity | null;
   /** kg/m³ */
   readonly density: Quantity | null;
   /** At 1 atm. */

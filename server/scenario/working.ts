@@ -61,6 +61,7 @@ export type AssumptionId =
   | 'remainder-hydrogen'
   | 'ideal-gas'
   | 'dry-gas'
+  | 'element-scale'
   | 'no-dissolving'
   | 'fossil-by-default'
   | 'several-alkalis-proportional';

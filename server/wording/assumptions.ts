@@ -24,6 +24,8 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'remainder-hydrogen': 'What the composition leaves open is taken as hydrogen.',
   'ideal-gas': 'Gases are ideal.',
   'no-dissolving': 'Nothing dissolves in anything else; melting points are those of the pure substances.',
+  'element-scale':
+    'Enthalpies count the elements in their reference states at 25 °C as zero; standard states at 1 bar.',
   'dry-gas': 'No humidity is given: the gas is taken as dry.',
   'fossil-by-default': 'Carbon whose origin is not stated is taken as fossil.',
   'several-alkalis-proportional':

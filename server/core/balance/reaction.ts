@@ -1,4 +1,4 @@
-// Enthalpy, Gibbs energy and log10 K of a written equation at 298.15 K, from formation enthalpies and entropies.
+// Enthalpy, Gibbs energy and log10 K of a written equation at one temperature, from enthalpies and entropies.
 // Does not balance and does not check the balance (equation.ts and elements.ts do): an unbalanced equation gets the sum of what
 // is written. Invariant: reversing the sides changes every sign. Standard states: ideal gas and pure condensed phases at
 // 1 bar. Method: sums over products less reactants; log10 K = -ΔG / (R T ln 10), R of the SI (2019).
@@ -13,9 +13,9 @@ export interface ReactionTerm {
   readonly name: string;
   readonly coefficient: number;
   readonly molarMassKgPerMol: number | undefined;
-  /** J/mol from the elements at 298.15 K. */
+  /** J/mol at the temperature asked for, the elements in their reference states at 298.15 K being zero. */
   readonly enthalpyJPerMol: number | undefined;
-  /** J/(mol K) at 298.15 K and 1 bar. */
+  /** J/(mol K) at the temperature asked for and 1 bar. */
   readonly entropyJPerMolK: number | undefined;
 }
 
@@ -52,10 +52,11 @@ export function reactionTermOf(substance: Substance, coefficient: number): React
   };
 }
 
-/** Values of `left -> right` at 298.15 K; a fault says what is missing. */
+/** Values of `left -> right` at the temperature its terms are given for; a fault says what is missing. */
 export function reactionValues(
   left: readonly ReactionTerm[],
   right: readonly ReactionTerm[],
+  temperatureK: number = referenceTemperatureK,
 ): ReactionValues | ReactionFault {
   const signed = [...left.map((term) => ({ ...term, sign: -1 })), ...right.map((term) => ({ ...term, sign: 1 }))];
   let enthalpyJ = 0;
@@ -69,7 +70,7 @@ export function reactionValues(
     else entropyJPerK += sign * coefficient * entropyJPerMolK;
   }
   if (missing.size > 0) return { kind: 'fault', reason: 'no-data', substances: [...missing] };
-  const gibbsEnergyJ = withoutEntropy.size > 0 ? undefined : enthalpyJ - referenceTemperatureK * entropyJPerK;
+  const gibbsEnergyJ = withoutEntropy.size > 0 ? undefined : enthalpyJ - temperatureK * entropyJPerK;
   const leftKg = left.reduce((sum, term) => sum + term.coefficient * (term.molarMassKgPerMol ?? 0), 0);
   return {
     kind: 'reaction',
@@ -77,9 +78,7 @@ export function reactionValues(
     enthalpyJPerKgOfLeft: leftKg > 0 ? enthalpyJ / leftKg : undefined,
     gibbsEnergyJ,
     log10K:
-      gibbsEnergyJ === undefined
-        ? undefined
-        : -gibbsEnergyJ / (molarGasConstantJPerMolK * referenceTemperatureK * Math.LN10),
+      gibbsEnergyJ === undefined ? undefined : -gibbsEnergyJ / (molarGasConstantJPerMolK * temperatureK * Math.LN10),
     withoutEntropy: [...withoutEntropy],
   };
 }

@@ -112,6 +112,7 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     molarMass: mixed.molarMass,
     formationEnthalpy: mixed.formationEnthalpy,
     entropy: null,
+    heatCapacity: null,
     density: mixed.density,
     meltingPoint: null,
     boilingPoint: null,

@@ -1,12 +1,12 @@
 // `reaction`: one written equation. Its elements are counted on both sides; where they do not close, the balanced equation
-// is offered. A balanced equation is valued: enthalpy, Gibbs energy and log10 K at 25 °C, per equation as written and
+// is offered. A balanced equation is valued: enthalpy, Gibbs energy and log10 K at its state, per equation as written and
 // per kilogram of its left side.
 
-import type { Definition, Equation, Term } from '../../../grammar/tree.ts';
+import type { Definition, Equation, Span, Term } from '../../../grammar/tree.ts';
 import { equationElements } from '../../core/balance/elements.ts';
 import { balanceEquation, type Balance } from '../../core/balance/equation.ts';
 import { reactionValues, type ReactionTerm } from '../../core/balance/reaction.ts';
-import { knownUnit } from '../../core/quantity/convert.ts';
+import { inUnit, knownUnit } from '../../core/quantity/convert.ts';
 import { noParts } from '../../core/quantity/parts.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
@@ -17,9 +17,10 @@ import { readEntries, refuseLines } from '../entries.ts';
 import type { Material } from '../material.ts';
 import type { FigureRow } from '../material-figures.ts';
 import { materialNamed } from '../materials.ts';
-import { stateReader } from '../readers.ts';
+import { stateReader, type State } from '../readers.ts';
 import type { Figure, Table } from '../scenario.ts';
-import type { Working, WorkingInput } from '../working.ts';
+import { isReference, valueSpecies, type ValuedSpecies } from '../valued-species.ts';
+import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 const entries = {
@@ -90,17 +91,73 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     reportUnbalanced(first.line, count.sums, left, right, context);
     return { ...unknownAnswer(evaluated), tables };
   }
-  const temperature = read.state?.value.temperature;
-  if (temperature && Math.abs(temperature.value - referenceTemperatureK) > 0.01 && read.state) {
-    const text = context.written(read.state.entry.span);
-    context.report(read.state.entry.span, { code: 'range/temperature', text, why: 'only-reference' });
-  }
-  if (broken.has('state') || (temperature && Math.abs(temperature.value - referenceTemperatureK) > 0.01)) {
-    return { ...unknownAnswer(evaluated), tables };
-  }
-  const answer = value(left, right, first.line, context);
+  if (broken.has('state')) return { ...unknownAnswer(evaluated), tables };
+  const state = stateOf(read.state?.value);
+  const valued = (terms: readonly ReadTerm[]): ValuedTerm[] => terms.map((term) => valueTerm(term, state));
+  const sides = { left: valued(left), right: valued(right) };
+  reportData(sides, first.line, read.state?.entry.span, state, context);
+  const answer = value(sides, state, context);
   const line = { kind: 'equation', line: first.index, figures: answer.figures.map((figure) => figure.id) } as const;
-  return { ...answer, tables, lines: [line], material: null };
+  return { ...answer, tables: [...tables, speciesTable(sides, context)], lines: [line], material: null };
+}
+
+/** The state a reaction is valued at. */
+interface ReactionState {
+  readonly temperature: Quantity;
+  readonly pressure: Quantity;
+}
+
+function stateOf(state: State | undefined): ReactionState {
+  const temperature = quantityOf(referenceTemperatureK, knownUnit('K').dimension, noParts, 'temperature');
+  return {
+    temperature: state?.temperature ?? temperature,
+    pressure: state?.pressure ?? quantityOf(1e5, knownUnit('Pa').dimension),
+  };
+}
+
+interface ValuedTerm extends ReadTerm {
+  readonly species: ValuedSpecies;
+}
+
+interface Sides {
+  readonly left: readonly ValuedTerm[];
+  readonly right: readonly ValuedTerm[];
+}
+
+function valueTerm(read: ReadTerm, { temperature, pressure }: ReactionState): ValuedTerm {
+  const isWritten = read.term.species.phase !== undefined;
+  const species = valueSpecies(read.material, read.formula, isWritten, temperature.value, pressure.value);
+  return { ...read, species };
+}
+
+/** Says which species have no energy, and which are asked for beyond their data. */
+function reportData(
+  { left, right }: Sides,
+  equation: Equation,
+  stateSpan: Span | undefined,
+  { temperature }: ReactionState,
+  context: Context,
+): void {
+  const terms = [...left, ...right];
+  const missing = [...new Set(terms.filter(({ species }) => !species.enthalpy).map(({ material }) => material.name))];
+  if (missing.length > 0) {
+    const isAtReference = isReference(temperature.value);
+    const names = missing.map((name) =>
+      isAtReference ? `the enthalpy of formation of ${name}` : `the enthalpy of ${name} at that temperature`,
+    );
+    context.report(equation.span, { code: 'balance/no-data', what: 'enthalpy of reaction', missing: names });
+  }
+  const beyond = terms.flatMap(({ species }) =>
+    species.beyond && species.enthalpy ? [{ name: species.takenAs, range: species.beyond }] : [],
+  );
+  if (beyond.length > 0) {
+    context.report(stateSpan ?? equation.span, {
+      code: 'range/temperature',
+      why: 'extrapolated',
+      temperature,
+      species: beyond,
+    });
+  }
 }
 
 function readSide(terms: readonly Term[], context: Context): readonly ReadTerm[] | null {
@@ -170,43 +227,37 @@ function solutionOf(balance: Balance, equation: Equation, context: Context) {
 }
 
 function value(
-  left: readonly ReadTerm[],
-  right: readonly ReadTerm[],
-  equation: Equation,
+  { left, right }: Sides,
+  { temperature }: ReactionState,
   context: Context,
 ): Pick<KindAnswer, 'figures' | 'absent'> {
   const terms = [...left, ...right];
-  const missing = [
-    ...new Set(terms.filter(({ material }) => !material.formationEnthalpy).map(({ material }) => material.name)),
-  ];
-  if (missing.length > 0) {
-    const names = missing.map((name) => `the enthalpy of formation of ${name}`);
-    context.report(equation.span, { code: 'balance/no-data', what: 'enthalpy of reaction', missing: names });
-    return unknownAnswer(evaluated);
-  }
+  if (terms.some(({ species }) => !species.enthalpy)) return unknownAnswer(evaluated);
   const unknown = quantityOf(NaN);
-  const inputs = terms.flatMap(({ material }) => [material.formationEnthalpy ?? unknown, material.entropy ?? unknown]);
-  const outcomes = propagate(inputs, (values) => {
-    const termAt = (read: ReadTerm, index: number): ReactionTerm => {
-      const molarMass = read.material.molarMass?.value;
-      const enthalpy = values[2 * index] ?? NaN;
+  const inputs = [
+    temperature,
+    ...terms.flatMap(({ species }) => [species.enthalpy ?? unknown, species.entropy ?? unknown]),
+  ];
+  const outcomes = propagate(inputs, ([temperatureK = NaN, ...values]) => {
+    const termAt = ({ material, coefficient }: ValuedTerm, index: number): ReactionTerm => {
       const entropy = values[2 * index + 1] ?? NaN;
       return {
-        name: read.material.name,
-        coefficient: read.coefficient,
-        molarMassKgPerMol: molarMass,
-        enthalpyJPerMol: molarMass === undefined ? undefined : enthalpy * molarMass,
+        name: material.name,
+        coefficient,
+        molarMassKgPerMol: material.molarMass?.value,
+        enthalpyJPerMol: values[2 * index],
         entropyJPerMolK: Number.isNaN(entropy) ? undefined : entropy,
       };
     };
     const answer = reactionValues(
-      left.map((read, index) => termAt(read, index)),
-      right.map((read, index) => termAt(read, left.length + index)),
+      left.map((term, index) => termAt(term, index)),
+      right.map((term, index) => termAt(term, left.length + index)),
+      temperatureK,
     );
     if (answer.kind === 'fault') return [NaN, NaN, NaN, NaN];
     return [answer.enthalpyJ, answer.enthalpyJPerKgOfLeft ?? NaN, answer.gibbsEnergyJ ?? NaN, answer.log10K ?? NaN];
   });
-  const withoutEntropy = terms.filter(({ material }) => !material.entropy).map(({ material }) => material.name);
+  const withoutEntropy = new Set(terms.filter(({ species }) => !species.entropy).map(({ material }) => material.name));
   const found: Figure[] = [];
   const absent = new Map<string, readonly string[] | null>();
   for (const [index, row] of figures.entries()) {
@@ -214,46 +265,63 @@ function value(
     if (!outcome || !Number.isFinite(outcome.value)) {
       absent.set(
         row.id,
-        [...new Set(withoutEntropy)].map((name) => `the entropy of ${name}`),
+        [...withoutEntropy].map((name) => `the entropy of ${name}`),
       );
       continue;
     }
     const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
-    found.push({
-      id: row.id,
-      label: row.label,
-      quantity,
-      unit: row.unit,
-      working: workingOf(row, left, right, context),
-    });
+    const working = workingOf(row, { left, right }, temperature, context);
+    found.push({ id: row.id, label: row.label, quantity, unit: row.unit, working });
   }
   return { figures: found, absent };
 }
 
-function workingOf(row: FigureRow, left: readonly ReadTerm[], right: readonly ReadTerm[], context: Context): Working {
-  const inputs: WorkingInput[] = [];
+function workingOf(row: FigureRow, { left, right }: Sides, temperature: Quantity, context: Context): Working {
+  const isEnergyOnly = row.id === 'enthalpy' || row.id === 'specific-enthalpy';
+  const inputs: WorkingInput[] = [{ label: 'Temperature', quantity: temperature, unit: 'degC' }];
   for (const [terms, sign] of [
     [left, -1],
     [right, 1],
   ] as const) {
-    for (const { term, coefficient, material } of terms) {
+    for (const { term, coefficient, species } of terms) {
       const place = context.place(term.span);
-      const counted = `${sign * coefficient} × ${context.written(term.species.span)}`;
-      const enthalpy = perMole(material.formationEnthalpy, material.molarMass);
-      if (row.id !== 'log10-k' && enthalpy) {
-        inputs.push({ label: `${counted}, enthalpy of formation`, quantity: enthalpy, unit: 'kJ/mol', place });
-      }
-      if ((row.id === 'gibbs-energy' || row.id === 'log10-k') && material.entropy) {
-        inputs.push({ label: `${counted}, entropy`, quantity: material.entropy, unit: 'J/(mol K)', place });
+      const counted = `${sign * coefficient} × ${species.takenAs}`;
+      inputs.push({ label: `${counted}, enthalpy`, quantity: species.enthalpy, unit: 'kJ/mol', place });
+      if (!isEnergyOnly && species.entropy) {
+        inputs.push({ label: `${counted}, entropy`, quantity: species.entropy, unit: 'J/(mol K)', place });
       }
     }
   }
-  const sources = [...left, ...right].flatMap(({ material }) => material.sources);
-  return { method: row.method, inputs, sources: [...new Set(sources)], assumptions: ['reference-state', 'ideal-gas'] };
+  const terms = [...left, ...right];
+  const sources = [...new Set(terms.flatMap(({ species }) => species.sources))];
+  const assumptions: AssumptionId[] = ['element-scale', 'ideal-gas'];
+  if (terms.some(({ species }) => species.guessed)) assumptions.push('stable-phase');
+  return { method: row.method, inputs, sources, assumptions };
 }
 
-function perMole(perKg: Quantity | null, molarMass: Quantity | null): Quantity | null {
-  return perKg && molarMass && quantityOf(perKg.value * molarMass.value, knownUnit('J/mol').dimension);
+/** What each species was taken as, with its values at the state. */
+function speciesTable({ left, right }: Sides, context: Context): Table {
+  const inUnitOf = (quantity: Quantity | null, unit: string): number | null => quantity && inUnit(quantity, unit);
+  return {
+    id: 'species',
+    label: 'Species at the state given',
+    columns: [
+      { id: 'substance', label: 'Species', unit: null },
+      { id: 'taken-as', label: 'taken as', unit: null },
+      { id: 'coefficient', label: 'Amount', unit: '1' },
+      { id: 'enthalpy', label: 'Enthalpy', unit: 'kJ/mol' },
+      { id: 'entropy', label: 'Entropy', unit: 'J/(mol K)' },
+    ],
+    rows: [...left.map((term) => ({ ...term, coefficient: -term.coefficient })), ...right].map(
+      ({ term, coefficient, species }) => [
+        context.written(term.species.span),
+        species.takenAs,
+        coefficient,
+        inUnitOf(species.enthalpy, 'kJ/mol'),
+        inUnitOf(species.entropy, 'J/(mol K)'),
+      ],
+    ),
+  };
 }
 
 function elementsTable(

@@ -10,6 +10,7 @@ import { dimensionless, sameDimension } from '../../core/quantity/dimension.ts';
 import { noParts } from '../../core/quantity/parts.ts';
 import { isFault, multiply, divide, quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
+import { referenceTemperatureK, type HeatCapacity } from '../../core/substance/substance.ts';
 import { molPerKgOfFormula } from '../../core/substance/composition.ts';
 import { formulaTextWithPhase, molarMassKgPerMol, type Formula } from '../../core/substance/formula.ts';
 import { compositionReader } from '../composition.ts';
@@ -244,6 +245,7 @@ function materialOf(
     molarMass,
     formationEnthalpy,
     entropy: read.entropy?.value.quantity ?? null,
+    heatCapacity: heatCapacityOf(read),
     density,
     meltingPoint: read.meltingPoint?.value.quantity ?? null,
     boilingPoint: read.boilingPoint?.value.quantity ?? null,
@@ -262,6 +264,22 @@ function materialOf(
     },
     missing,
   };
+}
+
+/** One written number is good at its own temperature; elsewhere it is taken as constant, and said to be. */
+function heatCapacityOf(read: Entries): HeatCapacity | null {
+  if (!read.heatCapacity) return null;
+  const { quantity, at } = read.heatCapacity.value;
+  const atK = at?.value ?? referenceTemperatureK;
+  const source = {
+    id: '',
+    author: '',
+    year: 0,
+    title: read.source?.value ?? '',
+    where: '',
+    provenance: 'seen',
+  } as const;
+  return { terms: [{ power: 0, jPerKgK: quantity.value }], fromK: atK, toK: atK, source };
 }
 
 /** J/kg; null when nothing says it, undefined when it cannot be worked out (said). */

@@ -284,8 +284,16 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     '`density` must be more than zero, and `0 kg/m3` is not.',
   ],
   [
-    { code: 'range/temperature', text: '900 degC', why: 'only-reference' },
-    'Nothing is known here at `900 degC`: this version works reactions out at 25 °C only. Leave the temperature out, or write `25 degC`.',
+    {
+      code: 'range/temperature',
+      why: 'extrapolated',
+      temperature: quantity(900, 'degC', 0, 'temperature'),
+      species: [
+        { name: 'NaH(cr)', range: [quantity(-73, 'degC', 0, 'temperature'), quantity(425, 'degC', 0, 'temperature')] },
+        { name: 'soot_oil', range: [quantity(25, 'degC', 0, 'temperature'), quantity(25, 'degC', 0, 'temperature')] },
+      ],
+    },
+    'At 900 °C this reaction leans on values beyond their data: `NaH(cr)` has data from −73 °C to 425 °C; `soot_oil` has one heat capacity, at 25 °C, taken as constant. Take the result as a guess, or give a state within the data.',
   ],
   [
     { code: 'balance/products', fault: { kind: 'fault', reason: 'element-without-product', elements: ['Na', 'S'] } },

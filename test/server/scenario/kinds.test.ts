@@ -483,12 +483,63 @@ describe('reaction', () => {
     `);
   });
 
-  test('another temperature is not answered yet', () => {
-    checkFacts(`
-      reaction route {
-        2 H2 + O2 -> 2 H2O
+  test('at another temperature, a bare formula takes its stable phase there', () => {
+    const takenAs = (state: string): unknown => {
+      const scenario = checkFacts(`
+        reaction melt {
+          2 Na + H2O -> Na2O + H2
+          state: ${state}
+        }
+      `);
+      const table = scenario.files[0]?.definitions[0]?.tables.find(({ id }) => id === 'species');
+      return table?.rows.map((row) => row[1]);
+    };
+    expect(takenAs('25 degC, 1 bar')).toEqual(['Na(cr)', 'H2O(l)', 'Na2O(cr)', 'H2(g)']);
+    expect(takenAs('90 degC, 1 bar')).toEqual(['Na(cr)', 'H2O(l)', 'Na2O(cr)', 'H2(g)']);
+    expect(takenAs('110 degC, 1 bar')).toEqual(['Na(l)', 'H2O(g)', 'Na2O(cr)', 'H2(g)']);
+    expect(takenAs('110 degC, 5 bar')).toEqual(['Na(l)', 'H2O(l)', 'Na2O(cr)', 'H2(g)']);
+  });
+
+  test('a written phase stays, and an extrapolated one is told', () => {
+    const scenario = checkFacts(`
+      reaction hydride {
+        2 Na(l) + H2(g) -> 2 NaH(cr)
         state: 900 degC, 1 bar
       # ^^^^^^^^^^^^^^^^^^^^^^ range/temperature
+      }
+    `);
+    expect(figureOf(scenario, 'hydride', 'enthalpy')).toBeLessThan(0);
+  });
+
+  test('what the tables lack rises by its own heat capacity', () => {
+    const scenario = checkFacts(`
+      reaction cold {
+        C2H5OH(g) -> C2H4(g) + H2O(g)
+      }
+      reaction hot {
+        C2H5OH(g) -> C2H4(g) + H2O(g)
+        state: 300 degC
+      }
+    `);
+    const [cold, hot] = ['cold', 'hot'].map((name) => figureOf(scenario, name, 'enthalpy') ?? NaN);
+    // ΔCp of dehydration is about -7 J/(mol K) near 25 °C, so the heat changes by a few kilojoules at the most.
+    expect(Math.abs((hot ?? NaN) - (cold ?? NaN))).toBeLessThan(5);
+    expect(hot).not.toBe(cold);
+    // and at the higher temperature the entropy carries it
+    expect(figureOf(scenario, 'hot', 'log10-k')).toBeGreaterThan(0);
+  });
+
+  test('a substance without a heat capacity is known at 25 °C only', () => {
+    checkFacts(`
+      substance odd_gas {
+        formula: N2O5
+        phase: gas
+        formation enthalpy: 11 kJ/mol
+      }
+      reaction split {
+        2 odd_gas -> 4 NO2 + O2
+      # ^^^^^^^^^^^^^^^^^^^^^^^ balance/no-data
+        state: 200 degC
       }
     `);
   });
