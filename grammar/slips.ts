@@ -129,6 +129,15 @@ const basisWords: ReadonlyMap<string, string> = new Map([
   ...['mol', 'molar', 'moles', 'mole'].map((word) => [word, 'mole'] as const),
 ]);
 
+/** Units as words, in small letters. Those of `3 kg sodium`, where only a portion's last word may be unknown. */
+const unitNames: ReadonlyMap<string, string> = new Map([
+  ...['kg', 'kgs', 'kilo', 'kilos', 'kilogram', 'kilograms'].map((word) => [word, 'kg'] as const),
+  ...['gram', 'grams', 'gr', 'gm'].map((word) => [word, 'g'] as const),
+  ...['tonne', 'tonnes', 'mt'].map((word) => [word, 't'] as const),
+  ...['litre', 'litres', 'liter', 'liters', 'ltr'].map((word) => [word, 'L'] as const),
+  ...['mole', 'moles', 'mols'].map((word) => [word, 'mol'] as const),
+]);
+
 /** `30 percent`, `30 wt%`, `30 % vol`, `30 % w/w`, `30 % by mass`: how other papers write a share. */
 function tradeShare({ tokens, actual, place }: Misfit): Problem | undefined {
   if (place !== 'portion' || actual === undefined) return undefined;
@@ -142,6 +151,11 @@ function tradeShare({ tokens, actual, place }: Misfit): Problem | undefined {
   if (text === 'parts') {
     const message = 'A portion is a share in `%`, or a mass, an amount or a volume such as `3 kg`.';
     return unexpected(spanOf(word), message);
+  }
+  const unit = unitNames.get(text);
+  if (unit !== undefined && next !== undefined && tokens[index - 1]?.tokenType === t.NumberToken) {
+    const message = `\`${word.image}\` is written \`${unit}\` here.`;
+    return unexpected(spanOf(word), message, { title: `Write ${unit}`, newText: unit });
   }
   const isBy = text === 'by';
   const basis = basisWords.get(isBy ? (next?.image.toLowerCase() ?? '') : text);
@@ -212,6 +226,10 @@ function claimForm({ tokens, actual, previous, place }: Misfit): Problem | undef
   if (actual.image === '=' && previous?.image === '=' && touches(previous, actual)) {
     const span = { start: previous.startOffset, end: t.endOf(actual) };
     return unexpected(span, '`==` is written `=` here.', { title: 'Write =', newText: '=' });
+  }
+  if (actual.image === 'by') {
+    const message = 'A share in a blend is by mass, or `by mole` or `by volume` where that stands behind it.';
+    return unexpected(spanOf(actual), message);
   }
   if (!/^(?:and|or|to|of)$/.test(actual.image)) return undefined;
   if (tokens.some(({ image }) => image === 'within')) {
