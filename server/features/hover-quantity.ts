@@ -6,11 +6,12 @@ import { siblingUnits } from '../core/quantity/convert.ts';
 import { isDimensionless } from '../core/quantity/dimension.ts';
 import { isFault, quantityFrom, type Quantity } from '../core/quantity/quantity.ts';
 import { readUnit, unitOne } from '../core/quantity/read-unit.ts';
-import type { EvaluatedValue, Place } from '../scenario/scenario.ts';
+import type { EvaluatedFile, EvaluatedValue, Place } from '../scenario/scenario.ts';
 import { formatNumber, SIGNIFICANT_DIGITS } from '../wording/numbers.ts';
 import { dimensionPhrase, handyUnit, quantityText } from '../wording/quantities.ts';
 import { unitForPeople, withUnit } from '../wording/units.ts';
 import { capitalised } from '../wording/words.ts';
+import { unitOfValue } from '../wording/written-unit.ts';
 import type { HoverLine, HoverText } from './hover-text.ts';
 
 export interface ShownQuantity {
@@ -34,9 +35,12 @@ export function hoverQuantity(place: Place, shown: ShownQuantity): HoverText | n
   };
 }
 
-export function hoverValue(place: Place, { name, quantity }: EvaluatedValue): HoverText {
+export function hoverValue(place: Place, value: EvaluatedValue, file: EvaluatedFile | undefined): HoverText {
+  const { name, quantity } = value;
   if (!quantity) return { place, title: name, origin: 'A value that could not be worked out', lines: [] };
-  const unit = handyUnit(quantity);
+  // A share is told in the unit it is written in, `30 %` and not 0.3.
+  const isPlain = isDimensionless(quantity.dimension);
+  const unit = (isPlain && file && unitOfValue(value.place, quantity, file)) || handyUnit(quantity);
   return {
     place,
     title: `${quantityText(quantity, unit)}: ${name}`,

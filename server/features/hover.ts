@@ -58,7 +58,7 @@ function hoverMeaning(
     case 'definition':
       return hoverDefinition(place, meaning.definition);
     case 'value':
-      return hoverValue(place, meaning.value);
+      return hoverValue(place, meaning.value, fileOf(scenario, meaning.value.place));
     case 'catalogue':
       return hoverCard(place, meaning.card);
     case 'figure':
@@ -69,6 +69,9 @@ function hoverMeaning(
       return hoverEntry(place, meaning.definitionKind, meaning.entry);
   }
 }
+
+const fileOf = (scenario: EvaluatedScenario, { path }: Place): EvaluatedFile | undefined =>
+  scenario.files.find((file) => file.path === path);
 
 /** The kind's word tells about the kind, the rest of the header about the definition. */
 function hoverHeader(file: EvaluatedFile, definition: EvaluatedDefinition, offset: number): HoverText | null {

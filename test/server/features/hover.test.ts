@@ -56,6 +56,10 @@ describe('a value', () => {
     checkHover('let distance = 38 nmi\nlet twice = 2 * dis$0tance\n', lines);
   });
 
+  it('that is a share is told as it is written', () => {
+    checkHover('let dose = 30 %\nlet twice = 2 * do$0se\n', ['30 %: dose', 'A plain number']);
+  });
+
   it('that could not be worked out says that, and not why: the finding does', () => {
     checkHover('let $0alpha = nothing_known\n', ['alpha', 'A value that could not be worked out']);
   });
