@@ -7,8 +7,9 @@ import type { Definition, ExpectStatement, LetStatement, PlacedSection, Span } f
 import { problemsOf } from '../../grammar/parse.ts';
 import { bindNames, type Binding, type Bindings } from './bind.ts';
 import { Context, near, type Named, type Scope } from './context.ts';
+import { evaluateClaim } from './claims.ts';
 import { mentionsOf, orderByMentions } from './dependencies.ts';
-import { evaluateClaim, evaluateExpression } from './expressions.ts';
+import { evaluateExpression } from './expressions.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
 import { kindOf, kinds } from './kinds/registry.ts';
 import type { KindAnswer } from './kinds/kind.ts';

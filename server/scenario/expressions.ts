@@ -2,31 +2,27 @@
 // Where that fails, the cause is said once, at its place, and null is returned; whoever receives null stays silent.
 // Depth is bounded by the grammar (brackets nest 64 deep at most), chains of operators by the loop in `chain`.
 
-import type { Binary, Call, Comparison, Expression, Membership, Reference, Within, Word } from '../../grammar/tree.ts';
+import type { Binary, Call, Expression, Membership, Reference, Word } from '../../grammar/tree.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
-import { describeDimension, sameDimension } from '../core/quantity/dimension.ts';
 import {
   add,
-  compare,
   divide,
   isFault,
   multiply,
   negate,
-  quantityFrom,
   quantityOf,
   raise,
-  standardUncertainty,
   subtract,
   type Quantity,
 } from '../core/quantity/quantity.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
-import { fromSi, toSi } from '../core/quantity/read-unit.ts';
+import { toSi } from '../core/quantity/read-unit.ts';
 import { explainUnitWord } from '../core/quantity/suggest-units.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
 import { functions, reportCount, type Argument } from './functions.ts';
-import { aboveAbsoluteZero, readQuantity, readUnitWords, reportFault } from './read-quantity.ts';
+import { aboveAbsoluteZero, readQuantity, reportFault } from './read-quantity.ts';
 import type { Absent, EvaluatedDefinition, Figure, Table } from './scenario.ts';
 
 /** The value of an expression; null when it could not be had (said, or silent because its cause was said elsewhere). */
@@ -261,7 +257,7 @@ function evaluateCell(reference: Reference, row: Word, owner: Owner, context: Co
 }
 
 /** `SUBSTANCE in BLEND`: that portion's share, by mass unless `by mole` or `by volume` is written. */
-export function evaluateMembership(membership: Membership, context: Context): Unknowable {
+function evaluateMembership(membership: Membership, context: Context): Unknowable {
   const { name, substance } = membership;
   if (!name) return null;
   const named = context.scope.lookup(name.text);
@@ -318,90 +314,4 @@ export function evaluateMembership(membership: Membership, context: Context): Un
     total = sum;
   }
   return total;
-}
-
-/** Whether a claim holds, and what was found on its left side. */
-export interface ClaimAnswer {
-  readonly holds: boolean;
-  readonly found: Quantity;
-  readonly unit: string | null;
-  readonly limit: Quantity;
-  readonly tolerance: Quantity | null;
-}
-
-/** A comparison or `within`; null when it could not be worked out. */
-export function evaluateClaim(claim: Comparison | Within, context: Context): ClaimAnswer | null {
-  const referred = claim.left.kind === 'reference' ? evaluateReference(claim.left, context) : null;
-  const found =
-    claim.left.kind === 'reference' ? (referred?.quantity ?? null) : evaluateExpression(claim.left, context);
-  const unit = referred?.unit ?? null;
-  const right = claim.kind === 'within' ? claim.target : claim.right;
-  const limit = evaluateExpression(right, context);
-  if (!found || !limit) return null;
-  const order = compare(found, limit);
-  if (typeof order !== 'number') return reportFault(order, claim.left.span, right.span, context);
-  if (claim.kind === 'comparison') {
-    return { holds: holds(claim.operator, found.value, limit.value), found, unit, limit, tolerance: null };
-  }
-  const tolerance = readTolerance(claim, limit, context);
-  if (!tolerance) return null;
-  return {
-    holds:
-      Math.abs(found.value - limit.value) <= tolerance.value * (1 + nearEnough) || areEqual(found.value, limit.value),
-    found,
-    unit,
-    limit,
-    tolerance,
-  };
-}
-
-/** Two numbers that differ by less than this, relative, count as equal: they differ by floating-point rounding only. */
-const nearEnough = 1e-9;
-
-function areEqual(found: number, limit: number): boolean {
-  return Math.abs(found - limit) <= nearEnough * Math.max(Math.abs(found), Math.abs(limit));
-}
-
-function holds(operator: Comparison['operator'], found: number, limit: number): boolean {
-  const isEqual = areEqual(found, limit);
-  switch (operator) {
-    case '<':
-      return found < limit && !isEqual;
-    case '<=':
-      return found < limit || isEqual;
-    case '>':
-      return found > limit && !isEqual;
-    case '>=':
-      return found > limit || isEqual;
-    case '=':
-      return isEqual;
-  }
-}
-
-/**
- * The tolerance of a `within`, by the rules of a written uncertainty (relative, percentage points, a difference). Behind a
- * name or a sum it must bring its own unit; a percentage is then relative.
- */
-function readTolerance(claim: Within, target: Quantity, context: Context): Unknowable {
-  const { tolerance } = claim;
-  if (!tolerance) return null; // the grammar has said that it is missing
-  const written = claim.target.kind === 'quantity' ? claim.target : null;
-  const unit = written ? readUnitWords(written.unit, context) : knownUnit(describeDimension(target.dimension).si);
-  const own = tolerance.unit && readUnitWords(tolerance.unit, context);
-  if (!unit || own === null) return null;
-  const value = fromSi(target.value, unit);
-  const read = quantityFrom(value, unit, {
-    number: tolerance.number.value,
-    ...(own && { unit: own }),
-    input: 'tolerance',
-  });
-  if (isFault(read)) return reportFault(read, claim.target.span, tolerance.span, context);
-  const { dimension } = read;
-  const isTemperature = sameDimension(dimension, knownUnit('K').dimension);
-  return quantityOf(
-    standardUncertainty(read),
-    dimension,
-    undefined,
-    isTemperature ? 'temperature-difference' : 'plain',
-  );
 }
