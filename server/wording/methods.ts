@@ -88,7 +88,7 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     validity: 'As good as what is stated of each portion.',
   },
   'water-made': {
-    words: 'Water among the products of complete combustion, less the water that was already in the blend.',
+    words: 'Water among the products of complete combustion, what the fuel brings along as water included.',
     equation: null,
     symbols: '',
     validity: 'Holds for the product slate listed.',

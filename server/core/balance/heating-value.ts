@@ -47,13 +47,22 @@ export function heatingValueOnSlate(slate: Slate, fuelEnthalpyJPerKg: number): H
   if (products.kind === 'fault') return products;
   return {
     kind: 'heating-value',
-    lowerJPerKg: fuelEnthalpyJPerKg - products.jPerKg,
-    higherJPerKg: fuelEnthalpyJPerKg - products.jPerKg + products.condensationJPerKg,
+    lowerJPerKg: released(fuelEnthalpyJPerKg, products.jPerKg),
+    higherJPerKg: released(fuelEnthalpyJPerKg, products.jPerKg - products.condensationJPerKg),
     slate,
     fuelEnthalpyJPerKg,
     sources: products.sources,
   };
 }
+
+/** Fuel less products; nothing where they differ by floating-point rounding only, as water and its own vapour condensed. */
+function released(fuelJPerKg: number, productsJPerKg: number): number {
+  const difference = fuelJPerKg - productsJPerKg;
+  return Math.abs(difference) > roundingOfDoubles * Math.abs(fuelJPerKg) ? difference : 0;
+}
+
+/** A few times the spacing of doubles, relative. */
+const roundingOfDoubles = 1e-14;
 
 /**
  * The formation enthalpy (J/kg) that gives a fuel of these elements (mol per kg) this heating value (J/kg) on a slate.
