@@ -269,6 +269,7 @@ function chargeText(charge: number): string {
 function addAtoms(target: Map<string, number>, more: ReadonlyMap<string, number>, times: number): void {
   // Twelve digits keep 3 × 0.1 equal to 0.3, so that exact balancing sees the decimal that was meant.
   for (const [symbol, count] of more) {
-    target.set(symbol, Number(((target.get(symbol) ?? 0) + count * times).toPrecision(12)));
+    const sum = (target.get(symbol) ?? 0) + count * times;
+    target.set(symbol, Number.isInteger(sum) ? sum : Number(sum.toPrecision(12)));
   }
 }
