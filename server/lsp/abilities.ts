@@ -12,6 +12,8 @@ export interface Abilities {
   readonly related: boolean;
   /** Takes quick fixes as edits, not only as commands. */
   readonly codeActions: boolean;
+  /** Asks what would be renamed before it asks for the new name. */
+  readonly prepareRename: boolean;
   /** Takes edits that name the version they belong to. */
   readonly versionedEdits: boolean;
   /** Answers questions for settings. */
@@ -38,6 +40,7 @@ export function abilitiesOf(params: unknown): Abilities {
     outlineTree: has('textDocument', 'documentSymbol', 'hierarchicalDocumentSymbolSupport'),
     related: has('textDocument', 'publishDiagnostics', 'relatedInformation'),
     codeActions: at(params, 'capabilities', 'textDocument', 'codeAction', 'codeActionLiteralSupport') !== undefined,
+    prepareRename: has('textDocument', 'rename', 'prepareSupport'),
     versionedEdits: has('workspace', 'workspaceEdit', 'documentChanges'),
     configuration: has('workspace', 'configuration'),
     configurationNews: has('workspace', 'didChangeConfiguration', 'dynamicRegistration'),

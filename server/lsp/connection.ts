@@ -21,7 +21,7 @@ import { OpenDocuments } from './documents.ts';
 import { Evaluations, type Evaluated } from './evaluations.ts';
 import { UsedFiles, type AskForFile, type FileAnswer } from './files.ts';
 import { Publications, type Said } from './publications.ts';
-import { answerRequests, REQUEST_CAPABILITIES } from './requests.ts';
+import { answerRequests, requestCapabilities } from './requests.ts';
 import { Schedule } from './schedule.ts';
 import { asSettings, DEFAULT_SETTINGS } from './settings.ts';
 
@@ -110,7 +110,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
         positionEncoding: PositionEncodingKind.UTF16,
         textDocumentSync: { openClose: true, change: TextDocumentSyncKind.Incremental, save: true },
         workspace: { workspaceFolders: { supported: true, changeNotifications: true } },
-        ...REQUEST_CAPABILITIES,
+        ...requestCapabilities(abilities),
       },
       serverInfo: { name: 'stokehold' },
     };

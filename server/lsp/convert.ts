@@ -11,6 +11,7 @@ import {
   type Diagnostic,
   type DocumentSymbol,
   type Hover,
+  type Location,
   type Position,
   type Range,
   type SymbolInformation,
@@ -125,7 +126,8 @@ export function toCodeAction(
   };
 }
 
-function toWorkspaceEdit(edits: ReadonlyMap<PlacedText, TextEdit[]>, withVersions: boolean): WorkspaceEdit {
+/** Edits by text as the client takes them; with versions where it knows those. */
+export function toWorkspaceEdit(edits: ReadonlyMap<PlacedText, TextEdit[]>, withVersions: boolean): WorkspaceEdit {
   const entries = [...edits];
   if (!withVersions) return { changes: Object.fromEntries(entries.map(([text, list]) => [text.uri, list])) };
   return {
@@ -133,7 +135,8 @@ function toWorkspaceEdit(edits: ReadonlyMap<PlacedText, TextEdit[]>, withVersion
   };
 }
 
-function locationOf(place: Place, textOf: TextOf): { uri: string; range: Range } | null {
+/** The place as a client finds it; null when its text is not at hand. */
+export function locationOf(place: Place, textOf: TextOf): Location | null {
   const text = textOf(place.path);
   return text ? { uri: text.uri, range: rangeOf(text.document, place.start, place.end) } : null;
 }

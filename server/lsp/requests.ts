@@ -4,7 +4,6 @@
 import {
   CodeActionKind,
   type CodeAction,
-  type Connection,
   type Diagnostic,
   type DocumentSymbol,
   type Hover,
@@ -28,31 +27,25 @@ import {
   toSymbolInformation,
   toTextEdit,
 } from './convert.ts';
-import type { OpenDocuments } from './documents.ts';
-import type { Evaluations } from './evaluations.ts';
-import type { Settings } from './settings.ts';
-
-export interface Serving {
-  readonly connection: Connection;
-  readonly documents: OpenDocuments;
-  readonly evaluations: Evaluations;
-  readonly abilities: () => Abilities;
-  readonly settings: () => Settings;
-  readonly log: (message: string) => void;
-}
+import { answerNavigation, navigationCapabilities } from './navigation-requests.ts';
+import type { Serving } from './serving.ts';
 
 /** What the client is told can be asked. */
-export const REQUEST_CAPABILITIES: ServerCapabilities = {
-  hoverProvider: true,
-  documentSymbolProvider: true,
-  documentFormattingProvider: true,
-  documentRangeFormattingProvider: true,
-  codeActionProvider: { codeActionKinds: [CodeActionKind.QuickFix] },
-};
+export function requestCapabilities(abilities: Abilities): ServerCapabilities {
+  return {
+    hoverProvider: true,
+    documentSymbolProvider: true,
+    documentFormattingProvider: true,
+    documentRangeFormattingProvider: true,
+    codeActionProvider: { codeActionKinds: [CodeActionKind.QuickFix] },
+    ...navigationCapabilities(abilities),
+  };
+}
 
 /** Answers the requests from now on. */
 export function answerRequests(serving: Serving): void {
   const { connection, documents, evaluations, abilities, settings, log } = serving;
+  answerNavigation(serving);
 
   connection.onHover(
     answered('Hover', null, log, async ({ textDocument, position }): Promise<Hover | null> => {

@@ -33,6 +33,7 @@ export const FULL_CAPABILITIES: ClientCapabilities = {
     documentSymbol: { hierarchicalDocumentSymbolSupport: true },
     publishDiagnostics: { relatedInformation: true, versionSupport: true },
     codeAction: { codeActionLiteralSupport: { codeActionKind: { valueSet: ['quickfix'] } }, isPreferredSupport: true },
+    rename: { prepareSupport: true },
   },
   workspace: {
     configuration: true,

@@ -1,0 +1,34 @@
+// Looks into the kinds' tables for what stands at a place: an entry's row, and what the words and numbers of its value may
+// be. The tables are the only source; a kind without one has no rows. Knows no text and no cursor.
+import { compositionReader } from '../scenario/composition.ts';
+import type { EntryRow, Reader } from '../scenario/entries.ts';
+import { kindOf } from '../scenario/kinds/registry.ts';
+
+/** The rows of a kind's table, in the table's order; none for a kind that is unknown or not evaluated yet. */
+export function entryRows(kind: string): readonly EntryRow<unknown>[] {
+  return Object.values(kindOf(kind)?.evaluated?.entries ?? {});
+}
+
+export function entryRow(kind: string, entry: string): EntryRow<unknown> | undefined {
+  return entryRows(kind).find(({ name }) => name === entry);
+}
+
+/** What a bare word in an entry's value can be. Several may hold: `biogenic` is listed, and a share may be a name. */
+export interface WordsTaken {
+  readonly listed: readonly string[];
+  /** Substances and definitions. */
+  readonly materials: boolean;
+  readonly elements: boolean;
+  /** Names of values, figures and functions: anything that comes to a number. */
+  readonly numbers: boolean;
+}
+
+export function wordsTaken(reader: Reader<unknown>): WordsTaken {
+  const elements = reader === compositionReader;
+  return {
+    listed: reader.words ?? [],
+    materials: reader.names ?? false,
+    elements,
+    numbers: reader.unit !== undefined && !elements,
+  };
+}

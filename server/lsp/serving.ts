@@ -1,0 +1,16 @@
+// What every group of requests is handed: the connection to answer on, and where to find documents, evaluations, what the
+// client can do and what the person has set. Knows no request.
+import type { Connection } from 'vscode-languageserver';
+import type { Abilities } from './abilities.ts';
+import type { OpenDocuments } from './documents.ts';
+import type { Evaluations } from './evaluations.ts';
+import type { Settings } from './settings.ts';
+
+export interface Serving {
+  readonly connection: Connection;
+  readonly documents: OpenDocuments;
+  readonly evaluations: Evaluations;
+  readonly abilities: () => Abilities;
+  readonly settings: () => Settings;
+  readonly log: (message: string) => void;
+}
