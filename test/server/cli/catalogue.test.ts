@@ -12,9 +12,15 @@ test('a list, one line a substance', async () => {
 });
 
 test.each([['sodium'], ['Na'], ['Na(cr)']])('%s is found, and every number has its source', async (word) => {
-  const lines = (await told(word)).split('\n').filter((line) => line.startsWith('  ') && !line.startsWith('  also'));
-  expect(lines.length).toBeGreaterThan(1);
-  for (const line of lines) expect(line).toMatch(/^ {2}\S.* {2,}\S.* {2,}\S/);
+  const [cards = '', sources = ''] = (await told(word)).split('\nSources\n');
+  const numbers = cards.split('\n').filter((line) => line.startsWith('  ') && !line.startsWith('  also'));
+  const listed = sources.split('\n').flatMap((line) => /^ {2}\[(\d+)\] {2}\S/.exec(line)?.[1] ?? []);
+  expect(numbers.length).toBeGreaterThan(1);
+  for (const line of numbers) expect(listed).toContain(/^ {2}\S.* {2,}\S.* {2,}\[(\d+)\]$/.exec(line)?.[1]);
+});
+
+test('what all phases share is told once', async () => {
+  expect((await told('sodium')).match(/Melting point/g)).toHaveLength(1);
 });
 
 test('a phase asked for is the only one told', async () => {
