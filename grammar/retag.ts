@@ -61,9 +61,9 @@ export interface Retagged {
 }
 
 /** Brackets nested deeper than this are refused, so that nothing that walks a tree can run out of stack. */
-export const DEEPEST_BRACKETS = 64;
+const DEEPEST_BRACKETS = 64;
 /** Likewise operators in one line. */
-export const MOST_OPERATORS = 1000;
+const MOST_OPERATORS = 1000;
 
 export function retag(tokens: readonly Token[], place: Place, isUnit: IsUnit): Retagged {
   return new Retagger(tokens, place, isUnit).run();

@@ -1,6 +1,6 @@
 /**
- * A definition or value is named by a word that already means something: a word of the language (`rest`, `per`), a unit
- * (`bar`, `t`) or a definition kind (`blend`). Read as a name it would be misread elsewhere, so it cannot be one.
+ * A definition or value is named by a word that already means something: a word of the language (`rest`, `per`) or a
+ * unit (`bar`, `t`). Read as a name it would be misread elsewhere, so it cannot be one.
  */
 import { quoted } from '../wording/words.ts';
 import type { FactOf, Rule } from './rule.ts';
@@ -8,7 +8,6 @@ import type { FactOf, Rule } from './rule.ts';
 const meanings = {
   'reserved-word': 'a word of the language',
   unit: 'a unit',
-  kind: 'a kind of definition',
 } as const;
 
 export const nameReserved: Rule<FactOf<'name/reserved'>> = {

@@ -11,7 +11,7 @@ export type FileAnswer = Exclude<ReadAnswer, 'wanted'>;
 export type AskForFile = (uri: string) => Promise<unknown>;
 
 /** After this long without an answer a file counts as unreadable, so that the rest is still worked out. */
-export const LONGEST_WAIT_MS = 5000;
+const LONGEST_WAIT_MS = 5000;
 
 export class UsedFiles {
   readonly #ask: AskForFile;

@@ -18,7 +18,7 @@ function widest(texts: readonly string[]): number {
 }
 
 /** The text filled with blanks at its end. */
-export function padded(text: string, width: number): string {
+function padded(text: string, width: number): string {
   return text + ' '.repeat(Math.max(0, width - widthOf(text)));
 }
 

@@ -47,7 +47,7 @@ function mentionsInLine(line: Line, kind: string, mentions: Mention[]): void {
 }
 
 /** Adds the names an expression mentions. Iterative: an expression may be nested as deeply as the grammar allows. */
-export function mentionsInExpression(expression: Expression, mentions: Mention[]): void {
+function mentionsInExpression(expression: Expression, mentions: Mention[]): void {
   const rest: Expression[] = [expression];
   const name = (word: Word | undefined): void => {
     if (word) mentions.push({ name: word.text, span: word.span });

@@ -26,7 +26,7 @@ export type Fact =
     }
   | { readonly code: 'name/unknown-kind'; readonly word: string; readonly near: readonly string[] }
   | { readonly code: 'name/duplicate'; readonly name: string; readonly others: readonly Place[] }
-  | { readonly code: 'name/reserved'; readonly name: string; readonly why: 'reserved-word' | 'unit' | 'kind' }
+  | { readonly code: 'name/reserved'; readonly name: string; readonly why: 'reserved-word' | 'unit' }
   | { readonly code: 'name/like-catalogue'; readonly name: string; readonly substance: string }
   /** `path` holds the names of the ring and its first again; `leftOut` that many are not told before the last two. */
   | { readonly code: 'name/cycle'; readonly path: readonly string[]; readonly leftOut?: number }

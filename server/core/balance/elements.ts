@@ -56,7 +56,7 @@ export function countOfElement(formula: Formula, element: string): Fraction {
   return exactNumber(element === chargeElement ? formula.charge : (formula.composition.get(element) ?? 0));
 }
 
-export const chargeElement = 'charge';
+const chargeElement = 'charge';
 
 function sumOfSide(side: readonly EquationTerm[], element: string): Fraction {
   return side.reduce((sum, term) => {

@@ -19,8 +19,6 @@ export interface HeatingValue {
   /** J/kg, water condenses. */
   readonly higherJPerKg: number;
   readonly slate: Slate;
-  /** Formation enthalpy of the fuel, J/kg. */
-  readonly fuelEnthalpyJPerKg: number;
   /** Sources of the enthalpies of the products, each once. */
   readonly sources: readonly SourceRecord[];
 }
@@ -50,7 +48,6 @@ export function heatingValueOnSlate(slate: Slate, fuelEnthalpyJPerKg: number): H
     lowerJPerKg: released(fuelEnthalpyJPerKg, products.jPerKg),
     higherJPerKg: released(fuelEnthalpyJPerKg, products.jPerKg - products.condensationJPerKg),
     slate,
-    fuelEnthalpyJPerKg,
     sources: products.sources,
   };
 }
