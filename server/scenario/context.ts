@@ -8,6 +8,7 @@ import { nearestWords } from '../core/spelling/nearest-words.ts';
 import type { Fact } from './facts.ts';
 import type { Material } from './material.ts';
 import { placeOf } from './place.ts';
+import { significantText } from './significant-text.ts';
 import type { EvaluatedDefinition, EvaluatedValue, Meaning, Place, PlacedFact, PlacedMeaning } from './scenario.ts';
 
 /** What a name stands for once it has been worked out. A null part could not be had, and that has been said. */
@@ -27,6 +28,8 @@ export interface Scope {
 export class Context {
   readonly facts: PlacedFact[] = [];
   readonly meanings: PlacedMeaning[] = [];
+  /** The places handed out to stand inside a fact or a figure. */
+  readonly innerPlaces = new Set<Place>();
   #label = '';
   #ordinal = 0;
 
@@ -38,20 +41,29 @@ export class Context {
   ) {}
 
   report(span: Span, fact: Fact): void {
-    this.facts.push({ fact, place: this.place(span) });
+    this.facts.push({ fact, place: this.ownPlace(span) });
   }
 
   mean(span: Span, meaning: Meaning): void {
-    this.meanings.push({ place: this.place(span), meaning });
+    this.meanings.push({ place: this.ownPlace(span), meaning });
   }
 
+  /** A place to stand inside a fact or a figure. It is handed on as it is, never copied: see placing.ts. */
   place(span: Span): Place {
+    const place = this.ownPlace(span);
+    this.innerPlaces.add(place);
+    return place;
+  }
+
+  /** Where the statement itself or something in it stands. */
+  ownPlace(span: Span): Place {
     return placeOf(this.path, this.placed, span);
   }
 
-  /** The text a span covers, as written. */
+  /** The text a span covers, as written, on one line and without comments. */
   written(span: Span): string {
-    return this.placed.section.text.slice(span.start, span.end);
+    const text = this.placed.section.text.slice(span.start, span.end);
+    return /[\r\n]/.test(text) ? significantText(text).text.replaceAll('\n', ' ') : text;
   }
 
   /** Says which line is being read, so that its uncertain inputs are named by definition, line and ordinal. */

@@ -28,8 +28,15 @@ export interface LoadedFiles {
   readonly wanted: readonly string[];
 }
 
-/** The file at `root` and all it reaches, in the order reached. Empty when the root itself cannot be read. */
-export function loadFiles(root: string, read: (path: string) => ReadAnswer): LoadedFiles {
+/**
+ * The file at `root` and all it reaches, in the order reached. Empty when the root itself cannot be read. Sections that
+ * stand in an `earlier` tree of the same file are not parsed again.
+ */
+export function loadFiles(
+  root: string,
+  read: (path: string) => ReadAnswer,
+  earlier: ReadonlyMap<string, SyntaxTree> = new Map(),
+): LoadedFiles {
   const answer = read(root);
   if (answer === 'wanted') return { files: [], wanted: [root] };
   if (!('text' in answer)) return { files: [], wanted: [] };
@@ -38,7 +45,7 @@ export function loadFiles(root: string, read: (path: string) => ReadAnswer): Loa
   const wanted = new Set<string>();
   const open: { file: LoadedFile; next: number }[] = [];
   const enter = (path: string, used: boolean, text: string): void => {
-    const file = { path, used, tree: parse(text, isUnitWord), facts: [] };
+    const file = { path, used, tree: treeOf(text, earlier.get(path)), facts: [] };
     files.set(path, file);
     open.push({ file, next: 0 });
   };
@@ -78,6 +85,11 @@ export function loadFiles(root: string, read: (path: string) => ReadAnswer): Loa
       say(found.detail === undefined ? fact : { ...fact, detail: found.detail });
     }
   }
+}
+
+function treeOf(text: string, previous: SyntaxTree | undefined): SyntaxTree {
+  if (!previous) return parse(text, isUnitWord);
+  return previous.text === text ? previous : parse(text, isUnitWord, { previous });
 }
 
 /**

@@ -1,0 +1,117 @@
+// Puts an answer where its section stands in the file as it is now. The answer may have been made from an earlier text of
+// the section with other comments, and what it says of other definitions by name becomes those definitions as they are
+// placed now. Works nothing out. Invariant: a placed answer cannot be told from one that was worked out afresh.
+
+import type { PlacedSection } from '../../grammar/tree.ts';
+import type { Answer } from './answer.ts';
+import type { Place } from './place.ts';
+import type {
+  EvaluatedDefinition,
+  EvaluatedValue,
+  Expectation,
+  Meaning,
+  PlacedFact,
+  PlacedMeaning,
+} from './scenario.ts';
+import { carryOver, significantTextOf } from './significant-text.ts';
+
+/** Finds the placed answer that a name stands for. */
+export type PlacedByName = (name: string) => PlacedAnswer | undefined;
+
+export class PlacedAnswer {
+  readonly definition: EvaluatedDefinition | null;
+  readonly value: EvaluatedValue | null;
+  readonly expectation: Expectation | null;
+  readonly facts: readonly PlacedFact[];
+  readonly #innerPlaces: ReadonlyMap<unknown, Place>;
+
+  constructor(
+    private readonly answer: Answer,
+    private readonly path: string,
+    private readonly placed: PlacedSection,
+  ) {
+    const { named, expectation, facts, innerPlaces } = answer;
+    this.#innerPlaces = new Map([...innerPlaces].map((place) => [place, this.#placeOf(place)]));
+    this.definition =
+      named && named.kind !== 'value' && named.kind !== 'unknown' ? this.#place(named.definition) : null;
+    this.value = named?.kind === 'value' ? this.#placeValue(named.value) : null;
+    this.expectation = expectation && { ...expectation, place: this.#placeOf(expectation.place) };
+    this.facts = facts.map(({ fact, place }) => ({ fact: this.#withPlaces(fact), place: this.#placeOf(place) }));
+  }
+
+  /** What the words of the section mean, where `placedByName` gives the definitions and values of others. */
+  meanings(placedByName: PlacedByName): readonly PlacedMeaning[] {
+    return this.answer.meanings.map(({ place, meaning }) => ({
+      place: this.#placeOf(place),
+      meaning: this.#meaning(meaning, placedByName),
+    }));
+  }
+
+  #meaning(meaning: Meaning, placedByName: PlacedByName): Meaning {
+    const { named } = this.answer;
+    switch (meaning.kind) {
+      case 'definition': {
+        const isOwn = named && 'definition' in named && named.definition === meaning.definition;
+        const definition = isOwn ? this.definition : placedByName(meaning.name)?.definition;
+        return definition ? { ...meaning, definition } : meaning;
+      }
+      case 'value': {
+        const isOwn = named?.kind === 'value' && named.value === meaning.value;
+        const value = isOwn ? this.value : placedByName(meaning.name)?.value;
+        return value ? { ...meaning, value } : meaning;
+      }
+      case 'figure': {
+        const figures = placedByName(meaning.of)?.definition?.figures;
+        const figure = figures?.find(({ id }) => id === meaning.figure.id);
+        return figure ? { ...meaning, figure } : meaning;
+      }
+      default:
+        return meaning;
+    }
+  }
+
+  #place(definition: EvaluatedDefinition): EvaluatedDefinition {
+    return {
+      ...definition,
+      doc: this.placed.section.doc,
+      place: this.#placeOf(definition.place),
+      header: this.#placeOf(definition.header),
+      namePlace: this.#placeOf(definition.namePlace),
+      section: this.placed,
+      figures: this.#withPlaces(definition.figures),
+      tables: this.#withPlaces(definition.tables),
+      lines: this.#withPlaces(definition.lines),
+    };
+  }
+
+  #placeValue(value: EvaluatedValue): EvaluatedValue {
+    return { ...value, place: this.#placeOf(value.place), namePlace: this.#placeOf(value.namePlace) };
+  }
+
+  #placeOf({ start, end }: Place): Place {
+    return { path: this.path, start: this.#offset(start), end: this.#offset(end) };
+  }
+
+  #offset(offset: number): number {
+    const { section, start } = this.placed;
+    const isSameText = section === this.answer.section || section.text === this.answer.section.text;
+    if (isSameText) return start + offset;
+    return start + carryOver(offset, significantTextOf(this.answer.section), significantTextOf(section));
+  }
+
+  /** A copy in which the places that stand inside are put where they are now; the value itself where none do. */
+  #withPlaces<Value>(value: Value): Value {
+    if (this.#innerPlaces.size === 0) return value;
+    // Copied field for field, the copy is of the value's own type; the compiler cannot follow that.
+    return withPlaces(value, this.#innerPlaces) as Value;
+  }
+}
+
+/** Goes through lists and plain records; places do not stand in maps. */
+function withPlaces(value: unknown, places: ReadonlyMap<unknown, Place>): unknown {
+  const place = places.get(value);
+  if (place) return place;
+  if (Array.isArray(value)) return value.map((item) => withPlaces(item, places));
+  if (typeof value !== 'object' || value === null || Object.getPrototypeOf(value) !== Object.prototype) return value;
+  return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, withPlaces(item, places)]));
+}

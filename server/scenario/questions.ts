@@ -1,0 +1,165 @@
+// Asks, once each and in an order in which each follows all it mentions, what the statements of a scenario come to. What a
+// store already knows is taken from it: a statement is known by its significant text and by the answers to the names it
+// looked up, so a comment asks nothing again, and a number only what rests on it. Places nothing and reads no file.
+// Invariants: with or without a store, and whatever was asked before, the answers are the same; the names of statements on
+// a ring, or given twice, stand for nothing.
+
+import type { PlacedSection } from '../../grammar/tree.ts';
+import { answerStatement, type Answer, type Answerable } from './answer.ts';
+import type { Bindings } from './bind.ts';
+import type { Named, Scope } from './context.ts';
+import { mentionsOf, orderByMentions, type Mention } from './dependencies.ts';
+import type { LoadedFile } from './files.ts';
+import { placeOf } from './place.ts';
+import { significantTextOf } from './significant-text.ts';
+
+/** What the answers of earlier versions are kept in, by content. */
+export interface AnswerStore {
+  /** The answer kept for a question, if all it looked up has that key now. */
+  recall(question: string, keyNow: (lookedUp: string) => Key | null): KeptAnswer | undefined;
+  keep(question: string, lookedUp: ReadonlyMap<string, Key>, answer: Answer): KeptAnswer;
+}
+
+/** Equal for equal answers only. */
+type Key = number | string;
+
+interface KeptAnswer {
+  readonly key: Key;
+  readonly value: Answer;
+}
+
+/** A name that is not there, and one that stands for nothing. No number, so unlike the key of any answer. */
+const ABSENT = 'absent';
+const UNKNOWN = 'unknown';
+/** Looked up by a statement that went through all names for a suggestion. No name has a newline in it. */
+const ALL_NAMES = '\n';
+
+export class Questions implements Scope {
+  /** All there is to ask: each statement behind all it mentions, but for rings. */
+  readonly order: readonly Question[];
+  readonly #unknowable: ReadonlySet<string>;
+  readonly #answers = new Map<PlacedSection, KeptAnswer>();
+  readonly #store: AnswerStore;
+  /** What the statement in hand has looked up so far. */
+  #lookedUp = new Map<string, Key>();
+  #namesKey: string | null = null;
+
+  /** Orders what is to be asked; what is wrong with the order (rings) is said in the files. */
+  constructor(
+    files: readonly LoadedFile[],
+    private readonly bindings: Bindings,
+    /** A used file is still to be fetched: a name that is not there yet may be in it. */
+    private readonly isIncomplete: boolean,
+    store?: AnswerStore,
+  ) {
+    const mentions = new Map([...bindings.unique].map(([name, { statement }]) => [name, mentionsIn(statement)]));
+    const { order, cycles } = orderByMentions(mentions);
+    for (const { by, mention, path, leftOut } of cycles) {
+      const binding = bindings.unique.get(by);
+      const place = binding && placeOf(binding.file.path, binding.placed, mention.span);
+      if (binding && place) binding.file.facts.push({ fact: { code: 'name/cycle', path, leftOut }, place });
+    }
+    const named = order.flatMap((name) => bindings.unique.get(name)?.placed ?? []);
+    const ordered = new Set(order);
+    const onRings = [...bindings.unique.keys()].filter((name) => !ordered.has(name));
+    this.#unknowable = new Set([...bindings.ambiguous, ...onRings]);
+    // Whatever stands for nothing (given twice, on a ring, without a name, an `expect`) is worked out for its own findings.
+    const others = files.flatMap(({ tree }) => tree.sections);
+    this.order = [...new Set([...named, ...others])].flatMap((placed) => questionOf(placed) ?? []);
+    this.#store = store ?? nothingKept;
+  }
+
+  /** Answers one question, from the store where that knows. Those before it in the order must have been answered. */
+  answer({ placed, statement }: Question): void {
+    const question = significantTextOf(placed.section).text;
+    const known = this.#store.recall(question, (name) => this.#keyNow(name));
+    if (known) {
+      this.#answers.set(placed, known);
+      return;
+    }
+    this.#lookedUp = new Map();
+    const answer = answerStatement(placed.section, statement, this);
+    this.#answers.set(placed, this.#store.keep(question, this.#lookedUp, answer));
+  }
+
+  /** Adds what is known by heart of what is not answered yet, but for what rests on something unanswered. */
+  recallRest(): void {
+    const unanswered = new Set(this.order.filter(({ placed }) => !this.#answers.has(placed)));
+    const pending = new Set([...unanswered].flatMap(({ name }) => name ?? []));
+    for (const question of unanswered) {
+      const known = this.#store.recall(significantTextOf(question.placed.section).text, (name) =>
+        pending.has(name) ? null : this.#keyNow(name),
+      );
+      if (!known) continue;
+      this.#answers.set(question.placed, known);
+      if (question.name !== undefined) pending.delete(question.name);
+    }
+  }
+
+  /** What a section came to; undefined for one that asks nothing, or is not answered yet. */
+  answerTo(placed: PlacedSection): Answer | undefined {
+    return this.#answers.get(placed)?.value;
+  }
+
+  /** The section that a name stands for; undefined where it stands for nothing. */
+  sectionNamed(name: string): PlacedSection | undefined {
+    return this.#unknowable.has(name) ? undefined : this.bindings.unique.get(name)?.placed;
+  }
+
+  lookup(name: string): Named | undefined {
+    this.#lookedUp.set(name, this.#keyNow(name));
+    if (this.#unknowable.has(name)) return { kind: 'unknown' };
+    const binding = this.bindings.unique.get(name);
+    if (!binding) return this.isIncomplete ? { kind: 'unknown' } : undefined;
+    return this.answerTo(binding.placed)?.named ?? { kind: 'unknown' };
+  }
+
+  names(): Iterable<string> {
+    this.#lookedUp.set(ALL_NAMES, this.#keyNow(ALL_NAMES));
+    return this.#allNames();
+  }
+
+  #allNames(): readonly string[] {
+    return [...this.bindings.unique.keys(), ...this.bindings.ambiguous];
+  }
+
+  /** The key of what a name stands for now. */
+  #keyNow(name: string): Key {
+    if (name === ALL_NAMES) return (this.#namesKey ??= this.#allNames().join('\n'));
+    if (this.#unknowable.has(name)) return UNKNOWN;
+    const binding = this.bindings.unique.get(name);
+    if (!binding) return this.isIncomplete ? UNKNOWN : ABSENT;
+    return this.#answers.get(binding.placed)?.key ?? UNKNOWN;
+  }
+}
+
+/** A statement to be answered. */
+export interface Question {
+  readonly placed: PlacedSection;
+  readonly statement: Answerable;
+  readonly name: string | undefined;
+}
+
+function questionOf(placed: PlacedSection): Question | undefined {
+  const { statement } = placed.section;
+  if (statement.kind === 'expect') return { placed, statement, name: undefined };
+  if (statement.kind !== 'definition' && statement.kind !== 'let') return undefined;
+  return { placed, statement, name: statement.name?.text };
+}
+
+/** The store of an evaluation that stands alone. */
+const nothingKept: AnswerStore = {
+  recall: () => undefined,
+  keep: (_question, _lookedUp, value) => ({ key: 0, value }),
+};
+
+/** The names a statement mentions, found once for each section of a file that is edited. */
+function mentionsIn(statement: Answerable): readonly Mention[] {
+  const known = mentionsOfStatement.get(statement);
+  if (known) return known;
+  const mentions = mentionsOf(statement);
+  mentionsOfStatement.set(statement, mentions);
+  return mentions;
+}
+
+const mentionsOfStatement = new WeakMap<Answerable, readonly Mention[]>();
