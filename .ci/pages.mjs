@@ -15,6 +15,16 @@ const pages = [
     write: ({ cataloguePage, substanceRecords, sourceRecords }) =>
       cataloguePage(substanceRecords, sourceRecords, 'npm run pages'),
   },
+  {
+    file: 'language.md',
+    modules: ['server/report/language-page.ts'],
+    write: ({ languagePage }) => languagePage('npm run pages'),
+  },
+  {
+    file: 'codes.md',
+    modules: ['server/report/codes-page.ts', 'test/support/code-entries.ts'],
+    write: ({ codesPage, codeEntries }) => codesPage(codeEntries(root), 'npm run pages'),
+  },
 ];
 
 for (const { file, modules, write } of pages) {
