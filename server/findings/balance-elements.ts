@@ -47,13 +47,16 @@ function deficits({ differences }: Unbalanced): string {
 function way({ solution }: Unbalanced): string {
   switch (solution.kind) {
     case 'unique':
-      return `Balanced it reads ${quoted(solution.equation)}.`;
+      return `Balanced it reads ${whole(solution.equation)}.`;
     case 'several':
-      return `There are ${solution.freedom} independent ways to balance it; the simplest is ${quoted(solution.equation)}.`;
+      return `There are ${solution.freedom} independent ways to balance it; the simplest is ${whole(solution.equation)}.`;
     case 'none':
       return `No coefficients balance it: ${reason(solution.why)}.`;
   }
 }
+
+/** The equation in full: on the command line the message is the only offer there is. */
+const whole = (equation: string): string => `\`${equation.replace(/\s+/g, ' ')}\``;
 
 function reason(why: NoBalance): string {
   switch (why.reason) {

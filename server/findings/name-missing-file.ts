@@ -21,6 +21,11 @@ export const nameMissingFile: Rule<FactOf<'name/missing-file'>> = {
           'Move it inside, or work from a folder higher up.',
         );
       case 'not-relative':
+        if (path === '')
+          return 'There is no path between these quotes. Write one as seen from the folder of this file.';
+        if (/^(?![A-Za-z]:|\\)[^/]*\\/.test(path)) {
+          return `A path has \`/\` between its folders here. Write ${quoted(path.replace(/\\+/g, '/'))}.`;
+        }
         return `${file} is not a relative path. Write it as seen from the folder of this file, with \`/\` and without a drive or scheme.`;
     }
   },

@@ -4,6 +4,7 @@
  */
 import { dimensionPhrase } from '../wording/quantities.ts';
 import { quoted, sentences } from '../wording/words.ts';
+import type { Sided } from '../scenario/facts.ts';
 import type { FactOf, Rule } from './rule.ts';
 
 const doings = {
@@ -12,19 +13,28 @@ const doings = {
   compare: 'compared with each other',
 } as const;
 
+const energyPerVolume =
+  /\b(?:[kMGT]?J|[kMGT]?Wh|k?cal|(?:MM)?Btu) *(?:\/|per) *(?:m?L|l|m3|m\u00b3|m\^3|gal|bbl|ft3)\b/;
+
+/** A dimension in words. `MJ/L` has that of a pressure, but nobody who writes it thinks of one. */
+const phraseOf = (side: Sided): string =>
+  energyPerVolume.test(side.text) ? 'an energy per volume (J/m³)' : dimensionPhrase(side);
+
 export const unitMismatch: Rule<FactOf<'unit/mismatch'>> = {
   severity: 'error',
   message: (fact) => {
     if (fact.form === 'sides') {
       const { left, right, operation } = fact;
-      return (
-        `${quoted(left.text)} is ${dimensionPhrase(left)} and ${quoted(right.text)} is ${dimensionPhrase(right)}; ` +
-        `they cannot be ${doings[operation]}.`
+      const bare = [left, right].find(({ text }) => /^[-\u2212]?[\d.]+$/.test(text));
+      return sentences(
+        `${quoted(left.text)} is ${phraseOf(left)} and ${quoted(right.text)} is ${phraseOf(right)};`,
+        `they cannot be ${doings[operation]}.`,
+        bare && `Does ${quoted(bare.text)} lack its unit?`,
       );
     }
     const { found, needed, example } = fact;
     return sentences(
-      `${quoted(found.text)} is ${dimensionPhrase(found)}, but ${dimensionPhrase(needed)} is needed here.`,
+      `${quoted(found.text)} is ${phraseOf(found)}, but ${dimensionPhrase(needed)} is needed here.`,
       example !== '' && example !== '1' && `Give it for example in ${quoted(example)}.`,
     );
   },

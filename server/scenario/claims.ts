@@ -2,7 +2,7 @@
 // the cause has been said and null is returned. Knows no statements. Invariant: numbers that differ by floating-point
 // rounding only count as equal, in every claim.
 
-import type { Comparison, Within } from '../../grammar/tree.ts';
+import type { Comparison, Expression, Within } from '../../grammar/tree.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { describeDimension, sameDimension } from '../core/quantity/dimension.ts';
 import {
@@ -33,7 +33,7 @@ export function evaluateClaim(claim: Comparison | Within, context: Context): Cla
   const found =
     claim.left.kind === 'reference' ? (referred?.quantity ?? null) : evaluateExpression(claim.left, context);
   const unit = referred?.unit ?? null;
-  const right = claim.kind === 'within' ? claim.target : claim.right;
+  const right = claim.kind === 'within' ? targetOf(claim) : claim.right;
   const limit = evaluateExpression(right, context);
   if (!found || !limit) return null;
   const order = compare(found, limit);
@@ -51,6 +51,13 @@ export function evaluateClaim(claim: Comparison | Within, context: Context): Cla
     limit,
     tolerance,
   };
+}
+
+/** In `within 34 ± 1 MJ/kg` the unit behind the tolerance belongs to both numbers, as in any literal with `±`. */
+function targetOf({ target, tolerance }: Within): Expression {
+  const unit = tolerance?.unit;
+  if (target.kind !== 'quantity' || target.unit || !unit || unit.tokens.some(({ text }) => text === '%')) return target;
+  return { ...target, unit };
 }
 
 /** Two numbers that differ by less than this, relative, count as equal: they differ by floating-point rounding only. */
@@ -83,7 +90,8 @@ function holds(operator: Comparison['operator'], found: number, limit: number): 
 function readTolerance(claim: Within, target: Quantity, context: Context): Unknowable {
   const { tolerance } = claim;
   if (!tolerance) return null; // the grammar has said that it is missing
-  const written = claim.target.kind === 'quantity' ? claim.target : null;
+  const right = targetOf(claim);
+  const written = right.kind === 'quantity' ? right : null;
   const unit = written ? readUnitWords(written.unit, context) : knownUnit(describeDimension(target.dimension).si);
   const own = tolerance.unit && readUnitWords(tolerance.unit, context);
   if (!unit || own === null) return null;

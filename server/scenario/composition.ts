@@ -59,8 +59,9 @@ function readPart(entry: Entry, phrase: Phrase, context: Context): (NamedAmount 
     ({ amountNode, symbol, symbolSpan } = given);
   }
   if (!elementOfSymbol(symbol)) {
+    const named = allElements().find(({ name }) => name.toLowerCase() === symbol.toLowerCase());
     const symbols = allElements().map((element) => element.symbol);
-    const suggestions = near(symbol, symbols);
+    const suggestions = named ? [named.symbol] : near(symbol, symbols);
     context.report(symbolSpan, { code: 'name/unknown', what: 'element', word: symbol, near: suggestions });
     return undefined;
   }

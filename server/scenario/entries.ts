@@ -4,7 +4,8 @@
 // Invariant: whatever is written inside a definition is either read by a row or reported; nothing stays silent.
 
 import type { Definition, Entry } from '../../grammar/tree.ts';
-import { near, type Context } from './context.ts';
+import type { Context } from './context.ts';
+import { nearByTrade } from './trade-names.ts';
 
 /** Reads the value of an entry. `undefined` means it could not be read, and that has been said. */
 export interface Reader<T> {
@@ -66,7 +67,7 @@ export function readEntries<Table extends EntryTable>(
         code: 'name/unknown-entry',
         entry: line.words,
         kind: definition.keyword.text,
-        near: near(line.words, known),
+        near: nearByTrade(line.words, known),
         known,
       });
       continue;

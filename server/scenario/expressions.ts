@@ -17,13 +17,14 @@ import {
 } from '../core/quantity/quantity.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { toSi } from '../core/quantity/read-unit.ts';
-import { explainUnitWord } from '../core/quantity/suggest-units.ts';
+import { explainUnitWord, listOtherSpellings } from '../core/quantity/suggest-units.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
 import { functions, reportCount, type Argument } from './functions.ts';
 import { aboveAbsoluteZero, readQuantity, reportFault } from './read-quantity.ts';
 import type { Absent, EvaluatedDefinition, Figure, Table } from './scenario.ts';
+import { nearByTrade } from './trade-names.ts';
 
 /** The value of an expression; null when it could not be had (said, or silent because its cause was said elsewhere). */
 export function evaluateExpression(expression: Expression, context: Context): Unknowable {
@@ -97,7 +98,8 @@ const operators = { '+': add, '-': subtract, '*': multiply, '/': divide, '^': ra
 /** A word that stands for nothing: a misspelt name, or a misspelt unit (`3 kJ/kgg` divides by a word of that name). */
 function reportUnknownName(word: Word, context: Context): void {
   const suggestions = near(word.text, context.scope.names());
-  const units = suggestions.length > 0 ? null : explainUnitWord(word.text);
+  const isUnitElsewhere = listOtherSpellings().has(word.text);
+  const units = suggestions.length > 0 && !isUnitElsewhere ? null : explainUnitWord(word.text);
   if (units && units.offers.length > 0) {
     const { offers, why } = units;
     context.report(word.span, { code: 'unit/unknown', word: word.text, near: offers, hint: why ?? null });
@@ -190,7 +192,7 @@ export function evaluateReference(reference: Reference, context: Context): Refer
     if (missing !== undefined) return null;
     const ids = [...owner.figures.map((candidate) => candidate.id), ...owner.absent.keys()];
     const known = ids.map((candidate) => candidate.replaceAll('-', ' '));
-    const suggestions = near(reference.words, known);
+    const suggestions = nearByTrade(reference.words, known);
     context.report(reference.wordsSpan, {
       code: 'name/unknown',
       what: 'figure',
@@ -301,10 +303,11 @@ function evaluateMembership(membership: Membership, context: Context): Unknowabl
   for (const share of shares) {
     const next = share[basis];
     if (!next) {
-      const code = 'balance/no-density';
+      // The share wants this property of every portion, and another portion than the one asked for may lack it.
+      const lacking = material.missing.get(basis === 'mole' ? 'molarMass' : 'density')?.[0] ?? share.name;
       context.report(membership.span, {
-        code,
-        substance: share.name,
+        code: 'balance/no-density',
+        substance: lacking,
         why: basis === 'mole' ? 'molar-mass' : 'density',
       });
       return null;

@@ -81,9 +81,9 @@ function extreme(sign: 1 | -1): (call: Call, values: readonly Argument[], contex
     let [best] = values;
     if (!best) return reportCount(call, 'at least one value', context);
     for (const argument of values.slice(1)) {
-      const order = compare(argument.quantity, best.quantity);
+      const order = compare(best.quantity, argument.quantity);
       if (typeof order !== 'number') return reportFault(order, best.expression.span, argument.expression.span, context);
-      if (order === sign) best = argument;
+      if (order === -sign) best = argument;
     }
     return best.quantity;
   };

@@ -219,19 +219,27 @@ export function refuse(entry: Entry, phrase: Phrase, takes: string, context: Con
 /** Says that one item of a phrase, and what follows it, is too much. */
 export function refuseItem(entry: Entry, item: PhraseItem, takes: string, context: Context): undefined {
   const text = context.written(item.span);
-  if (item.kind === 'word' && isBehindBareNumber(entry, item)) {
-    const { offers, why } = explainUnitWord(item.text);
-    context.report(item.span, { code: 'unit/unknown', word: item.text, near: offers, hint: why ?? null });
+  const word = firstOperand(item);
+  if (word.kind === 'word' && isBehindBareNumber(entry, item)) {
+    const { offers, why } = explainUnitWord(word.text);
+    context.report(word.span, { code: 'unit/unknown', word: word.text, near: offers, hint: why ?? null });
   } else {
     context.report(item.span, { code: 'name/unknown-phrase', entry: entry.words, text, takes });
   }
   return undefined;
 }
 
-/** Whether a word stands where a number's unit is looked for: `20 C`, `12 knots`. */
-function isBehindBareNumber(entry: Entry, word: Word): boolean {
+/** `Mj/kg` is read as a quotient: its first word is where the unit was to be. */
+function firstOperand(item: PhraseItem): PhraseItem {
+  let first = item;
+  while (first.kind === 'binary') first = first.left;
+  return first;
+}
+
+/** Whether an item stands where a number's unit is looked for: `20 C`, `12 knots`, `40 Mj/kg`. */
+function isBehindBareNumber(entry: Entry, item: PhraseItem): boolean {
   return entry.phrases.some(({ items }) => {
-    const before = items[items.indexOf(word) - 1];
+    const before = items[items.indexOf(item) - 1];
     return before?.kind === 'quantity' && !before.unit;
   });
 }

@@ -26,12 +26,13 @@ export function suggestUnits(word: string): readonly string[] {
 export function explainUnitWord(word: string, power = 1): UnitSuggestions {
   const known = findOtherSpelling(power === 1 ? word : `${word}${power}`);
   if (known) return known;
-  const bare = findOtherSpelling(word) ?? { offers: [...byName(word), ...byCase(word), ...bySlip(word)] };
+  const sure = [...byName(word), ...byCase(word)];
+  const bare = findOtherSpelling(word) ?? { offers: sure.length > 0 ? sure : bySlip(word) };
   const offers = power === 1 ? bare.offers : bare.offers.filter(isUnitWord).map((offer) => raised(offer, power));
   return { ...bare, offers: [...new Set(offers)].slice(0, mostOffers) };
 }
 
-/** The words that `explainUnitWord` answers from its table, for the tests. */
+/** The words that `explainUnitWord` answers from its table: units of other papers, and no slips of the finger. */
 export function listOtherSpellings(): ReadonlyMap<string, UnitSuggestions> {
   return otherSpellings;
 }
@@ -51,6 +52,7 @@ const otherSpellings: ReadonlyMap<string, UnitSuggestions> = new Map(
       ['in', ['inch'], '`in` is a word of the language.'],
       ['ton', ['t', 'short_ton', 'long_ton'], threeTons],
       ['tons', ['t', 'short_ton', 'long_ton'], threeTons],
+      ['mt', ['t', 'Mt'], 'It is used for the tonne of 1000 kg.'],
       ['Mg', ['t', 'mg'], 'Mg is magnesium here.'],
       ['Nm', ['N m']],
       ['Nm3', ['m3'], referenceState],

@@ -165,6 +165,12 @@ function readSide(terms: readonly Term[], context: Context): readonly ReadTerm[]
   let isComplete = true;
   for (const term of terms) {
     const material = materialNamed(term.species, context, 'composition');
+    if (term.coefficient?.value === 0) {
+      const text = context.written(term.coefficient.span);
+      context.report(term.coefficient.span, { code: 'range/positive', text, entry: 'coefficient' });
+      isComplete = false;
+      continue;
+    }
     if (material?.formula) {
       read.push({ term, coefficient: term.coefficient?.value ?? 1, material, formula: material.formula });
       continue;
