@@ -132,8 +132,13 @@ function workOut(material: Material): MaterialAnswer {
     ...material.elements.values(),
   ];
   const choice: SlateChoice = material.products ? { products: material.products } : 'as-ruled';
+  const ownAmounts = [...material.elements.values()].map(({ value }) => value);
+  const ownMolPerKg = new Map(symbols.map((symbol, index) => [symbol, ownAmounts[index] ?? 0]));
+  const ownSlates = slatesOf(ownMolPerKg, choice);
   const outcomes = propagate(inputs, ([enthalpy = NaN, biogenic = NaN, density = NaN, molarMass = NaN, ...amounts]) => {
-    const molPerKg = new Map(symbols.map((symbol, index) => [symbol, amounts[index] ?? 0]));
+    // Most uncertain inputs are energies and densities, which leave the slates as they are.
+    const isMoved = amounts.some((amount, index) => amount !== ownAmounts[index]);
+    const molPerKg = isMoved ? new Map(symbols.map((symbol, index) => [symbol, amounts[index] ?? 0])) : ownMolPerKg;
     const values = figureValues(
       {
         molPerKg,
@@ -142,13 +147,12 @@ function workOut(material: Material): MaterialAnswer {
         densityKgPerM3: density,
         molarMassKgPerMol: molarMass,
       },
-      burnings(molPerKg, enthalpy, choice),
+      burnings(isMoved ? slatesOf(molPerKg, choice) : ownSlates, enthalpy),
     );
     return materialFigures.map((row) => values[row.id] ?? NaN);
   });
 
-  const molPerKg = new Map([...material.elements].map(([symbol, amount]) => [symbol, amount.value]));
-  const heats = burnings(molPerKg, material.formationEnthalpy?.value ?? 0, choice);
+  const heats = burnings(ownSlates, material.formationEnthalpy?.value ?? 0);
   const { heat } = heats.ruled;
   const slate = heat.kind === 'heating-value' ? heat.slate : null;
   const figures: Figure[] = [];
@@ -165,7 +169,7 @@ function workOut(material: Material): MaterialAnswer {
       if (missing.length > 0) absent.set(row.id, missing);
     }
   }
-  const tables = [elementsTable(molPerKg), ...(slate ? [productsTable(slate)] : [])];
+  const tables = [elementsTable(ownMolPerKg), ...(slate ? [productsTable(slate)] : [])];
   return { figures, tables, absent, fault: heat.kind === 'fault' ? heat : null };
 }
 
@@ -182,19 +186,22 @@ interface Burning {
   readonly heat: HeatingValue | EnergyFault;
 }
 
-function burnings(molPerKg: ReadonlyMap<string, number>, enthalpyJPerKg: number, choice: SlateChoice): Burnings {
-  const on = (chosen: SlateChoice): Burning => {
-    const slate = slateOfChoice(molPerKg, chosen);
-    return slate.kind === 'fault'
-      ? { slate: null, heat: slate }
-      : { slate, heat: heatingValueOnSlate(slate, enthalpyJPerKg) };
-  };
+type ChosenSlate = ReturnType<typeof slateOfChoice>;
+type Slates = { readonly [Key in keyof Burnings]: ChosenSlate | Extract<Burnings[Key], null> };
+
+function slatesOf(molPerKg: ReadonlyMap<string, number>, choice: SlateChoice): Slates {
   const hasAlkali = alkaliMetals.some((metal) => (molPerKg.get(metal) ?? 0) > 0);
   return {
-    ruled: on(choice),
-    hydroxide: hasAlkali ? on('hydroxide') : null,
-    oxide: hasAlkali ? on('oxide') : null,
+    ruled: slateOfChoice(molPerKg, choice),
+    hydroxide: hasAlkali ? slateOfChoice(molPerKg, 'hydroxide') : null,
+    oxide: hasAlkali ? slateOfChoice(molPerKg, 'oxide') : null,
   };
+}
+
+function burnings({ ruled, hydroxide, oxide }: Slates, enthalpyJPerKg: number): Burnings {
+  const on = (slate: ChosenSlate): Burning =>
+    slate.kind === 'fault' ? { slate: null, heat: slate } : { slate, heat: heatingValueOnSlate(slate, enthalpyJPerKg) };
+  return { ruled: on(ruled), hydroxide: hydroxide && on(hydroxide), oxide: oxide && on(oxide) };
 }
 
 /** All figures from plain numbers, in SI; one that does not apply or cannot be had is left out. */

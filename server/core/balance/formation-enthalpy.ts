@@ -67,8 +67,18 @@ export interface ProductsEnthalpy {
   readonly sources: readonly SourceRecord[];
 }
 
-/** Enthalpy of what 1 kg of fuel burns to; a fault names the products without data. */
+/** Enthalpy of what 1 kg of fuel burns to, worked out once a slate; a fault names the products without data. */
 export function enthalpyOfProducts(slate: Slate): ProductsEnthalpy | EnergyFault {
+  const known = ofSlate.get(slate);
+  if (known) return known;
+  const answer = addUpProducts(slate);
+  ofSlate.set(slate, answer);
+  return answer;
+}
+
+const ofSlate = new WeakMap<Slate, ProductsEnthalpy | EnergyFault>();
+
+function addUpProducts(slate: Slate): ProductsEnthalpy | EnergyFault {
   let jPerKg = 0;
   let condensationJPerKg = 0;
   const sources = new Set<SourceRecord>();
