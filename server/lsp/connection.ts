@@ -57,8 +57,9 @@ export function startServer(connection: Connection, host: Host = {}): void {
   );
   const schedule = new Schedule(async (uri) => {
     try {
-      const evaluated = await evaluations.current(uri);
-      if (evaluated) publications.replace(evaluated.address, said(evaluated));
+      const publish = (evaluated: Evaluated): void => publications.replace(evaluated.address, said(evaluated));
+      const evaluated = await evaluations.current(uri, publish);
+      if (evaluated) publish(evaluated);
     } catch (error) {
       log(`Publishing the findings of ${uri} failed: ${String(error)}`);
     }

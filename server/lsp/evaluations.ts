@@ -1,10 +1,13 @@
 // Gives each open document its evaluation, always of the text as it is now: at once where nothing changed, otherwise by
 // evaluating again, fetching used files first. An evaluation is kept with every text it read, and counts as current while
-// all of them still read the same: nothing is invalidated by hand. Knows no protocol messages.
+// all of them still read the same: nothing is invalidated by hand. One that takes long lets other messages through, is
+// given up when its text moves on, and tells early what it knows already. Knows no protocol messages.
 // Invariant: an answer is never older than the request, and an exception of the evaluation is caught here, once.
 import type { Finding } from '../findings/finding.ts';
 import { findingsOf } from '../findings/registry.ts';
-import { evaluate } from '../scenario/evaluate.ts';
+import { MemoStore, type MemoRun } from '../jobs/memo.ts';
+import type { Answer } from '../scenario/answer.ts';
+import { evaluateInSteps, type Underway } from '../scenario/evaluate.ts';
 import type { ReadAnswer } from '../scenario/files.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
@@ -26,31 +29,66 @@ export interface Evaluated {
   readonly read: ReadonlyMap<string, ReadAnswer>;
 }
 
+/** Takes what can be said of a document before all of it is worked out. */
+export type Quick = (evaluated: Evaluated) => void;
+
+/** When an evaluation pauses and when it tells early; tests have their own. */
+export interface Tempo {
+  /** After this long other messages are let through. */
+  readonly sliceMs: number;
+  /** An evaluation that is not done by then tells what it knows. */
+  readonly quickAfterMs: number;
+  readonly now: () => number;
+  /** Resolves once the messages that wait have been taken in. */
+  readonly turn: () => Promise<void>;
+}
+
+const TEMPO: Tempo = {
+  sliceMs: 10,
+  quickAfterMs: 150,
+  now: () => performance.now(),
+  turn: () => new Promise((resolve) => setTimeout(resolve, 0)),
+};
+
 /** A chain of files is followed one link a round; one this long has lost its reader. */
 const MOST_ROUNDS = 100;
 
+interface Running {
+  /** Those who would hear early. */
+  readonly quick: Set<Quick>;
+  /** Never rejects. */
+  readonly done: Promise<void>;
+}
+
 export class Evaluations {
   readonly #kept = new Map<string, Evaluated>();
+  readonly #running = new Map<string, Running>();
+  readonly #answers = new MemoStore<Answer>();
 
   constructor(
-    private readonly documents: OpenDocuments,
+    private readonly documents: Pick<OpenDocuments, 'get' | 'at' | 'copy'>,
     private readonly files: UsedFiles,
     /** Addresses of the workspace's folders. */
     private readonly folders: () => readonly string[],
     private readonly log: (message: string) => void,
+    private readonly tempo: Tempo = TEMPO,
   ) {}
 
-  /** The evaluation of the document as it is when this resolves; null when it is not open. Never rejects. */
-  async current(uri: string): Promise<Evaluated | null> {
-    for (let round = 1; ; round++) {
+  /**
+   * The evaluation of the document as it is when this resolves; null when it is not open. Never rejects. `quick` hears,
+   * once at most for each text, of an evaluation that takes long.
+   */
+  async current(uri: string, quick?: Quick): Promise<Evaluated | null> {
+    for (let round = 1; ;) {
       const copy = this.documents.copy(uri);
       if (!copy) return null;
-      const evaluated = this.#keptFor(copy) ?? this.#evaluate(copy);
-      const wanted = evaluated.scenario?.wanted ?? [];
-      if (wanted.length === 0 || round === MOST_ROUNDS) {
-        this.#kept.set(uri, evaluated);
-        return evaluated;
+      const evaluated = this.#keptFor(copy);
+      if (!evaluated) {
+        await this.#run(copy, quick);
+        continue;
       }
+      const wanted = evaluated.scenario?.wanted ?? [];
+      if (wanted.length === 0 || round++ === MOST_ROUNDS) return evaluated;
       await Promise.all(wanted.map((address) => this.files.fetch(address, uriOf(address) ?? address)));
     }
   }
@@ -58,6 +96,7 @@ export class Evaluations {
   /** The document is closed: its evaluation goes, and with it the used files that no other evaluation read. */
   drop(uri: string): void {
     this.#kept.delete(uri);
+    this.#answers.drop(uri);
     const needed = new Set<string>();
     for (const { read } of this.#kept.values()) for (const address of read.keys()) needed.add(address);
     this.files.keepOnly(needed);
@@ -76,29 +115,93 @@ export class Evaluations {
     return kept;
   }
 
-  #evaluate(copy: TextDocument): Evaluated {
+  /** Evaluates the document; one evaluation of a document at a time. Kept in the end, unless its text moved on. */
+  #run(copy: TextDocument, quick: Quick | undefined): Promise<void> {
+    const { uri } = copy;
+    const running = this.#running.get(uri);
+    if (running) {
+      if (quick) running.quick.add(quick);
+      return running.done;
+    }
+    const listeners = new Set(quick ? [quick] : []);
+    const done = this.#evaluate(copy, listeners).then((evaluated) => {
+      this.#running.delete(uri);
+      if (evaluated) this.#kept.set(uri, evaluated);
+    });
+    this.#running.set(uri, { quick: listeners, done });
+    return done;
+  }
+
+  /** null when the document moved on, or was closed, meanwhile. */
+  async #evaluate(copy: TextDocument, listeners: ReadonlySet<Quick>): Promise<Evaluated | null> {
     const address = addressOf(copy.uri);
     const read = new Map<string, ReadAnswer>();
     const reader = this.#reader(copy);
+    const readOnce = (path: string): ReadAnswer => {
+      const answer = reader(path);
+      read.set(path, answer);
+      return answer;
+    };
     const texts = new Map<string, PlacedText>();
-    const textOf = (path: string): PlacedText | undefined => texts.get(path);
-    const own = { uri: copy.uri, address, document: copy, textOf, read };
     texts.set(address, { uri: copy.uri, version: copy.version, document: copy });
-    try {
-      const scenario = evaluate(address, (path) => {
-        const answer = reader(path);
-        read.set(path, answer);
-        return answer;
-      });
-      for (const file of scenario.files)
-        if (file.path !== address) texts.set(file.path, this.#placed(file.path, file.tree.text));
+    const own = { uri: copy.uri, address, document: copy, textOf: (path: string) => texts.get(path), read };
+    const evaluatedOf = (scenario: EvaluatedScenario): Evaluated => {
+      for (const { path, tree } of scenario.files) {
+        if (!texts.has(path)) texts.set(path, this.#placed(path, tree.text));
+      }
       return { ...own, scenario, findings: findingsOf(scenario) };
+    };
+    const answers = this.#answers.run(copy.uri);
+    try {
+      const trees = new Map(this.#kept.get(copy.uri)?.scenario?.files.map(({ path, tree }) => [path, tree]));
+      const steps = evaluateInSteps(address, readOnce, { trees, answers });
+      const scenario = await this.#inSlices(copy, steps, (soFar) => {
+        const early = evaluatedOf(soFar);
+        for (const listener of listeners) listener(early);
+      });
+      if (!scenario) {
+        this.#abandon(copy.uri, answers);
+        return null;
+      }
+      const evaluated = evaluatedOf(scenario);
+      answers.finish();
+      return evaluated;
     } catch (error) {
+      this.#abandon(copy.uri, answers);
       // A fault of ours. It is said in the document too, because otherwise old answers would pass for current ones.
       const detail = error instanceof Error ? (error.stack ?? error.message) : String(error);
       this.log(`The evaluation of ${copy.uri} failed: ${detail}`);
       return { ...own, scenario: null, findings: [failed(address, error)] };
     }
+  }
+
+  /** Takes the steps, with turns for other messages between; null as soon as the document is no longer that of `copy`. */
+  async #inSlices(
+    copy: TextDocument,
+    steps: Generator<Underway, EvaluatedScenario>,
+    early: (soFar: EvaluatedScenario) => void,
+  ): Promise<EvaluatedScenario | null> {
+    const { now, turn, sliceMs, quickAfterMs } = this.tempo;
+    const start = now();
+    let sliceStart = start;
+    let isEarlyTold = false;
+    for (;;) {
+      const step = steps.next();
+      if (step.done) return step.value;
+      if (now() - sliceStart < sliceMs) continue;
+      if (!isEarlyTold && now() - start >= quickAfterMs) {
+        isEarlyTold = true;
+        early(step.value.soFar());
+      }
+      await turn();
+      if (this.documents.get(copy.uri)?.version !== copy.version) return null;
+      sliceStart = now();
+    }
+  }
+
+  #abandon(uri: string, answers: MemoRun<Answer>): void {
+    answers.abandon();
+    if (!this.documents.get(uri)) this.#answers.drop(uri);
   }
 
   /** Reads for one document: itself, then open documents, then fetched files, inside its limit. */
