@@ -15,6 +15,10 @@ export interface Reader<T> {
   readonly words?: readonly string[];
   /** A unit that fits, for completion and examples. */
   readonly unit?: string;
+  /** Units for what else it may hold: a state is a temperature and a pressure. */
+  readonly otherUnits?: readonly string[];
+  /** Connectives it takes, each with a unit that fits what stands behind it. */
+  readonly connectives?: Readonly<Record<string, string>>;
   /** Bare words here name substances or definitions. */
   readonly names?: boolean;
   read(entry: Entry, context: Context): T | undefined;

@@ -18,6 +18,7 @@ import {
 import { knownUnit } from '../core/quantity/convert.ts';
 import { toSi } from '../core/quantity/read-unit.ts';
 import { explainUnitWord, listOtherSpellings } from '../core/quantity/suggest-units.ts';
+import { givenFigures } from './given-figures.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
 import { near, type Context, type Unknowable } from './context.ts';
@@ -226,7 +227,13 @@ interface Owner {
 
 function catalogueOwner(name: Word, context: Context): Owner | null {
   const material = materialNamed(name, context);
-  return material && { figures: figuresOfMaterial(material), tables: [], absent: new Map() };
+  return (
+    material && {
+      figures: [...figuresOfMaterial(material), ...givenFigures(material.card)],
+      tables: [],
+      absent: new Map(),
+    }
+  );
 }
 
 function evaluateCell(reference: Reference, row: Word, owner: Owner, context: Context): ReferredFigure | null {

@@ -38,6 +38,7 @@ export function quantityReader(
   return {
     takes,
     unit,
+    ...(options.at ? { connectives: { at: 'degC' } } : {}),
     read(entry, context) {
       const phrase = onlyPhrase(entry, takes, context);
       const [first, ...rest] = phrase?.items ?? [];
@@ -152,6 +153,7 @@ export interface State {
 export const stateReader: Reader<State> = {
   takes: 'a temperature and a pressure, such as `25 degC, 1 bar`',
   unit: 'degC',
+  otherUnits: ['bar'],
   read(entry, context) {
     let state: State = {};
     for (const phrase of entry.phrases) {

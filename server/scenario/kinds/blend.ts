@@ -42,6 +42,9 @@ const entries = {
   },
 };
 
+/** An enthalpy of formation per mole is asked of pure substances only. */
+const blendFigures = materialFigures.filter(({ id }) => id !== 'formation-enthalpy');
+
 const solidsRow = {
   id: 'solids-volume-share',
   label: 'Solids, by volume, as stored',
@@ -49,7 +52,7 @@ const solidsRow = {
   method: 'solids-share',
 } as const satisfies FigureRow;
 
-const evaluated: EvaluatedKind = { entries, lines: ['portion'], figures: [...materialFigures, solidsRow], evaluate };
+const evaluated: EvaluatedKind = { entries, lines: ['portion'], figures: [...blendFigures, solidsRow], evaluate };
 
 export const blend: Kind = {
   kind: 'blend',

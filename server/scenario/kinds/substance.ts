@@ -17,6 +17,7 @@ import { compositionReader } from '../composition.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead, type EntryRow, type Reader } from '../entries.ts';
 import { evaluateExpression } from '../expressions.ts';
+import { givenFigureRows, givenFigures } from '../given-figures.ts';
 import type { Material, MissingProperty } from '../material.ts';
 import { answerMaterial, materialFigures, slateGaps } from '../material-figures.ts';
 import {
@@ -43,6 +44,7 @@ const row = <T>(name: string, reader: Reader<T>, help: string, more: Partial<Ent
 const formationEnthalpyReader: Reader<Quantity> = {
   takes: 'a molar or specific energy, such as `-285.8 kJ/mol`',
   unit: 'kJ/mol',
+  otherUnits: ['MJ/kg'],
   read(entry, context) {
     const [phrase, second] = entry.phrases;
     const [item, ...rest] = phrase?.items ?? [];
@@ -152,7 +154,7 @@ const entries = {
 
 type Entries = EntriesRead<typeof entries>;
 
-const evaluated: EvaluatedKind = { entries, lines: [], figures: materialFigures, evaluate };
+const evaluated: EvaluatedKind = { entries, lines: [], figures: [...materialFigures, ...givenFigureRows], evaluate };
 
 export const substance: Kind = {
   kind: 'substance',
@@ -187,7 +189,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const material = materialOf(read, definition.name?.text ?? '', header, context);
   if (!material) return unknownAnswer(evaluated);
   const answer = answerMaterial(material);
-  return { ...answer, lines: [], material };
+  const figures = [...answer.figures, ...givenFigures(material.card)];
+  return { ...answer, figures, lines: [], material };
 }
 
 const phaseSymbols = { gas: 'g', liquid: 'l', solid: 'cr' } as const;

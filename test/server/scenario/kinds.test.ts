@@ -372,6 +372,23 @@ describe('substance', () => {
     expect(figureOf(scenario, 'two', 'lower-heating-value')).toBeCloseTo(30, 9);
   });
 
+  test('what is given can be asked for, of a definition and of the catalogue', () => {
+    const scenario = checkFacts(`
+      substance oil {
+        composition: 86 % C, 14 % H
+        heat capacity: 2.1 kJ/(kg K)
+        flash point: 65 degC
+      }
+      let own = flash point of oil
+      let known = boiling point of methanol
+      expect heat capacity of oil within 2.1 kJ/(kg K) ± 1 %
+      expect lower flammable limit of methanol > 5 %
+    `);
+    expect(figureOf(scenario, 'oil', 'flash-point')).toBeCloseTo(338.15, 9);
+    expect(valueOf(scenario, 'own')).toBeCloseTo(338.15, 9);
+    expect(valueOf(scenario, 'known')).toBeCloseTo(337.8, 0);
+  });
+
   test('carbon origin', () => {
     const scenario = checkFacts(`
       substance part {
