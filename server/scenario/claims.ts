@@ -15,7 +15,8 @@ import {
 } from '../core/quantity/quantity.ts';
 import { fromSi } from '../core/quantity/read-unit.ts';
 import type { Context, Unknowable } from './context.ts';
-import { evaluateExpression, evaluateReference } from './expressions.ts';
+import { evaluateExpression } from './expressions.ts';
+import { evaluateReference } from './references.ts';
 import { readUnitWords, reportFault } from './read-quantity.ts';
 
 /** Whether a claim holds, and what was found on its left side. */

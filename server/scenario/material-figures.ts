@@ -335,6 +335,9 @@ const slateAssumptions: Readonly<Record<Slate['rule'], AssumptionId>> = {
 /** A substance's own density and molar mass are given, a blend's are mixed. */
 function methodOf(row: FigureRow, material: Material): MethodId {
   if (row.id === 'density' && !material.portions) return 'as-given';
+  if (row.id === 'formation-enthalpy' && material.energyFrom === 'heating-value') {
+    return 'formation-enthalpy-from-heating-value';
+  }
   if (row.id === 'molar-mass' && material.portions) return 'mean-molar-mass';
   return row.method;
 }

@@ -23,6 +23,8 @@ export interface Material {
   readonly molarMass: Quantity | null;
   /** J/kg at 298.15 K from the elements. */
   readonly formationEnthalpy: Quantity | null;
+  /** Whether its enthalpy of formation is given or worked back from a heating value. */
+  readonly energyFrom: 'formation-enthalpy' | 'heating-value';
   /** J/(mol K) at 298.15 K and 1 bar. */
   readonly entropy: Quantity | null;
   /** Per kilogram, with the range it is good for. */

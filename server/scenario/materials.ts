@@ -138,6 +138,7 @@ function materialOfFormula(formula: Formula): Material {
     molarMass: molarMass === undefined ? null : quantityOf(molarMass, units.molarMass),
     formationEnthalpy: null,
     entropy: null,
+    energyFrom: 'formation-enthalpy',
     heatCapacity: null,
     density: null,
     meltingPoint: null,
@@ -156,8 +157,9 @@ function materialOfFormula(formula: Formula): Material {
 }
 
 function buildMaterial(substance: Substance): Material {
-  const label = substance.name;
-  const text = substance.formula ? formulaTextWithPhase(substance.formula) : label;
+  const text = substance.formula ? formulaTextWithPhase(substance.formula) : substance.name;
+  // A phase that is not the usual one goes by its formula, so that `Na(l)` and sodium are two portions of a blend.
+  const label = substance.stableAtReference ? substance.name : text;
   const energy = formationEnthalpyOf(substance);
   const energyDatum = energy.kind === 'fault' ? undefined : energy.jPerKg;
   const enthalpy = datumQuantity(energyDatum, units.specificEnergy, `${text}/energy`);
@@ -179,6 +181,7 @@ function buildMaterial(substance: Substance): Material {
     molarMass,
     formationEnthalpy: enthalpy,
     entropy: datumQuantity(substance.entropyJPerMolK, units.molarEntropy, `${text}/entropy`),
+    energyFrom: substance.energy.kind === 'heating-value' ? 'heating-value' : 'formation-enthalpy',
     heatCapacity: substance.heatCapacity ?? null,
     density,
     meltingPoint: temperatureOf(substance.meltingPointK),

@@ -58,7 +58,6 @@ export type AssumptionId =
   | 'dry-air'
   | 'shares-scaled'
   | 'stable-phase'
-  | 'remainder-hydrogen'
   | 'ideal-gas'
   | 'dry-gas'
   | 'element-scale'

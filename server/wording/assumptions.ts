@@ -21,7 +21,6 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'dry-air': 'Dry air by mole: N2 78.084 %, O2 20.946 %, Ar 0.934 %, CO2 0.036 %.',
   'shares-scaled': 'The composition given does not add up to 100 % exactly and was scaled to it.',
   'stable-phase': 'Where no phase is written, the phase stable at the state given is meant.',
-  'remainder-hydrogen': 'What the composition leaves open is taken as hydrogen.',
   'ideal-gas': 'Gases are ideal.',
   'no-dissolving': 'Nothing dissolves in anything else; melting points are those of the pure substances.',
   'element-scale':

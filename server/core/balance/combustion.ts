@@ -189,13 +189,12 @@ function productOf(species: string, molPerKg: number): Product {
   return { formula: formulaOfSpecies(species), species, molPerKg };
 }
 
-/** The species here are written above, so they always parse; the element falls back to nothing if one should not. */
+/** The species here are written above, so they always parse; one that does not is a mistake in the rule, and throws. */
 function formulaOfSpecies(species: string): Formula {
   const known = formulas.get(species);
   if (known !== undefined) return known;
-  const parsed = parseFormula(species);
-  const formula: Formula =
-    parsed.kind === 'formula' ? parsed : { kind: 'formula', text: species, composition: new Map(), charge: 0 };
+  const formula = parseFormula(species);
+  if (formula.kind !== 'formula') throw new Error(`The slate names ${species}, which is no formula.`);
   formulas.set(species, formula);
   return formula;
 }

@@ -106,8 +106,9 @@ function molarEnthalpy(
   return { jPerMol: value * substance.molarMassKgPerMol, source };
 }
 
-/** About 44 kJ/mol; 0 only if the catalogue lost its water. */
+/** About 44 kJ/mol. A catalogue without its water is a mistake in the program, and throws. */
 function condensationJPerMol(): number {
   const [vapour, liquid] = [findSubstance('water', 'g'), findSubstance('water', 'l')].map(molarEnthalpy);
-  return (vapour?.jPerMol ?? 0) - (liquid?.jPerMol ?? 0);
+  if (!vapour || !liquid) throw new Error('The catalogue has no enthalpy of water as liquid and vapour.');
+  return vapour.jPerMol - liquid.jPerMol;
 }

@@ -115,6 +115,7 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     molarMass: mixed.molarMass,
     formationEnthalpy: mixed.formationEnthalpy,
     entropy: null,
+    energyFrom: 'formation-enthalpy',
     heatCapacity: null,
     density: mixed.density,
     meltingPoint: null,

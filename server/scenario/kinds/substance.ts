@@ -248,6 +248,7 @@ function materialOf(
     molarMass,
     formationEnthalpy,
     entropy: read.entropy?.value.quantity ?? null,
+    energyFrom: read.formationEnthalpy ? 'formation-enthalpy' : 'heating-value',
     heatCapacity: heatCapacityOf(read),
     density,
     meltingPoint: read.meltingPoint?.value.quantity ?? null,

@@ -1,5 +1,6 @@
 // Definitions of the evaluated kinds: what their figures come to, and what is said of slips in them.
 import { describe, expect, test } from 'vitest';
+import { standardUncertainty } from '../../../server/core/quantity/quantity.ts';
 import { kinds } from '../../../server/scenario/kinds/registry.ts';
 import { KIND_WORDS } from '../../../grammar/words.ts';
 import { checkFacts, figureOf, uncertaintyOf, valueOf } from '../../support/facts.ts';
@@ -81,6 +82,35 @@ describe('blend', () => {
     `);
     const id = 'lower-heating-value';
     expect(figureOf(scenario, 'fuel', id)).toBeCloseTo(figureOf(scenario, 'flat', id) ?? NaN, 9);
+  });
+
+  test('two phases of one substance are two portions', () => {
+    const scenario = checkFacts(`
+      blend alloyed {
+        10 % Na(l)
+        #    ^^^^^ range/phase
+        20 % Na(cr)
+        rest hexadecane
+      }
+      let molten = Na(l) in alloyed
+      let solid = sodium in alloyed
+    `);
+    expect(valueOf(scenario, 'molten')).toBeCloseTo(0.1, 12);
+    expect(valueOf(scenario, 'solid')).toBeCloseTo(0.2, 12);
+  });
+
+  test('a share out of the table of portions keeps its uncertainty', () => {
+    const scenario = checkFacts(`
+      blend fuel {
+        30 ± 1 % sodium
+        rest gas_oil
+      }
+      let cell = mass share of sodium in fuel
+      let share = sodium in fuel
+      let none = cell - share
+    `);
+    const quantities = scenario.files[0]?.values.map(({ quantity }) => quantity && standardUncertainty(quantity));
+    expect(quantities).toEqual([0.01, 0.01, 0].map((value): unknown => expect.closeTo(value, 9)));
   });
 
   test('the uncertainty of a share is taken up by the rest', () => {
