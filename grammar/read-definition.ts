@@ -42,6 +42,13 @@ export function readDefinition(
   const isSpoilt = header.problem !== undefined && header.isSpoilt;
   const firstLine = isSpoilt ? endOfSegment(tokens, bodyStart) : bodyStart;
   const body = readBody(tokens, Math.min(firstLine, bodyEnd), bodyEnd, isUnit);
+  // What a spoilt header swallowed may have been a portion: without this the rest would pass for the whole.
+  const swallowed = tokens.slice(bodyStart, Math.min(firstLine, bodyEnd)).filter((token) => !isLineBreak(token));
+  const [firstLost, lastLost] = [swallowed[0], swallowed.at(-1)];
+  const lost: Line[] =
+    firstLost === undefined || lastLost === undefined
+      ? []
+      : [{ kind: 'broken-line', span: { start: firstLost.startOffset, end: endOf(lastLost) } }];
   const problems: Problem[] = header.problem === undefined ? [] : [header.problem];
   const closed = closeIndex >= 0;
   if (!closed && !isSpoilt) {
@@ -58,7 +65,7 @@ export function readDefinition(
     keyword: header.keyword,
     ...(header.name === undefined ? {} : { name: header.name }),
     header: { start: header.span.start, end: brace?.startOffset ?? header.span.end },
-    lines: body.lines,
+    lines: [...lost, ...body.lines],
     closed,
   };
   return { statement: definition, problems };

@@ -9,6 +9,6 @@ export const balanceNoDensity: Rule<FactOf<'balance/no-density'>> = {
   severity: 'error',
   message: ({ substance, why }) =>
     why === 'density'
-      ? `No density of ${quoted(substance)} is known, so a share by volume cannot be turned into mass. Give the share by mass, or a \`density:\` in its definition.`
-      : `No molar mass of ${quoted(substance)} is known, so a share by mole cannot be turned into mass. Give the share by mass, or a \`formula:\` in its definition.`,
+      ? `No density of ${quoted(substance)} is known, so a volume of it cannot be turned into mass. Give the amount by mass, or a \`density:\` in its definition.`
+      : `No molar mass of ${quoted(substance)} is known, so moles of it cannot be turned into mass. Give the number by mass, or a \`formula:\` or \`molar mass:\` in its definition.`,
 };

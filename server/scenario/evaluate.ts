@@ -6,6 +6,7 @@
 import { problemsOf } from '../../grammar/parse.ts';
 import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import { bindNames } from './bind.ts';
+import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
 import { PlacedAnswer, type PlacedByName } from './placing.ts';
 import { Questions, type AnswerStore } from './questions.ts';
@@ -82,7 +83,16 @@ function gatherFiles(files: readonly LoadedFile[], questions: Questions): readon
     const section = questions.sectionNamed(name);
     return section && placed.get(section);
   };
-  return files.map((file) => gather(file, placed, placedByName));
+  const lacksFile = files.some(({ facts }) => facts.some(({ fact }) => fact.code === 'name/missing-file'));
+  return files.map((file) => {
+    const gathered = gather(file, placed, placedByName);
+    return lacksFile ? { ...gathered, facts: gathered.facts.filter(({ fact }) => !mayBeElsewhere(fact)) } : gathered;
+  });
+}
+
+/** While a used file is missing, a name that is not there may be in it; the missing file is the one cause. */
+function mayBeElsewhere(fact: Fact): boolean {
+  return fact.code === 'name/unknown' && ['substance', 'definition', 'value'].includes(fact.what);
 }
 
 /** Everything about one file, in the order of its text. */

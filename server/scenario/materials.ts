@@ -88,12 +88,26 @@ function formulaWithLetterO(word: Word): string | null {
 function reportUnknownSubstance(word: Word, context: Context): void {
   const text = word.phase === undefined ? word.text : `${word.text}(${word.phase})`;
   const otherPhases = word.phase === undefined ? [] : phasesOfWord(word.text);
-  const suggestions =
-    otherPhases.length > 0
-      ? otherPhases
-      : [...new Set([...near(word.text, context.scope.names()), ...suggestSubstances(word.text)])];
+  const suggestions = otherPhases.length > 0 ? otherPhases : nearMaterials(word.text, context);
   context.report(word.span, { code: 'name/unknown', what: 'substance', word: text, near: suggestions.slice(0, 3) });
 }
+
+/** Names of materials near a word. One that differs in capitals alone is meant, and a formula is no slip for another. */
+function nearMaterials(text: string, context: Context): readonly string[] {
+  const named = near(text, context.scope.names()).filter((name) => {
+    const found = context.scope.lookup(name);
+    return found?.kind !== 'value' && (found?.kind !== 'definition' || isMaterial(found.definition.kind));
+  });
+  const all = [...new Set([...named, ...suggestSubstances(text)])];
+  const sameLetters = all.filter((name) => alike(name) === alike(text));
+  const isFormula = parseFormula(text).kind === 'formula';
+  return sameLetters.length > 0 ? sameLetters : isFormula ? [] : all;
+}
+
+const isMaterial = (kind: string): boolean => kind === 'blend' || kind === 'substance';
+
+/** In small letters, with the zero for the letter O. */
+const alike = (text: string): string => text.toLowerCase().replaceAll('0', 'o');
 
 /** The phases a known substance does have, spelt out, for one that was asked for in a phase the catalogue lacks. */
 function phasesOfWord(text: string): readonly string[] {

@@ -238,7 +238,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   [{ code: 'balance/negative', text: '-3 %' }, '`-3 %` is less than nothing. An amount is zero or more.'],
   [
     { code: 'balance/no-density', substance: 'x', why: 'density' },
-    'No density of `x` is known, so a share by volume cannot be turned into mass. Give the share by mass, or a `density:` in its definition.',
+    'No density of `x` is known, so a volume of it cannot be turned into mass. Give the amount by mass, or a `density:` in its definition.',
   ],
   [
     { code: 'balance/no-data', what: 'the density of slurry', missing: ['the density of sodium', 'the density of x'] },

@@ -58,6 +58,22 @@ describe('what is told', () => {
       '`carbon` is not the symbol of a chemical element. Did you mean `C`?',
     ],
     ['a coefficient of zero', 'reaction a { 0 Na(cr) + Cl2(g) -> Cl2(g) }', '`coefficient` must be more than zero'],
+    ['a name in other capitals alone', 'reaction r2 { 2 h2 + O2(g) -> 2 H2O(l) }', 'called `h2`. Did you mean `H2`?'],
+    [
+      'a formula without data as one, and not as a slip for another',
+      'blend a { 30 % mass C14H29Na; rest gas_oil }',
+      "Define it with `substance 'C14H29Na' { … }`",
+    ],
+    [
+      'a molar enthalpy without a molar mass',
+      'substance oil { composition: 84 % C, 16 % H; formation enthalpy: -250 kJ/mol }',
+      'moles of it cannot be turned into mass. Give the number by mass',
+    ],
+    [
+      'a missing file, and not the names that may be in it',
+      'use "gone.stoke"\nblend a { 30 % mass sodium; rest house_oil }',
+      'No file `gone.stoke`',
+    ],
     ['a path of another system', 'use "sub\\lib.stoke"', 'Write `sub/lib.stoke`.'],
     ['an empty path', 'use ""', 'There is no path between these quotes.'],
   ])('%s', (_, text, expected) => {
@@ -71,5 +87,11 @@ describe('what is told', () => {
     expect(messagesOf(`${slurry}expect lower heating value of slurry within 38 ± 1 MJ/kg`)[0]).toContain(
       'below 38 MJ/kg, where 1 MJ/kg is allowed',
     );
+  });
+
+  test('of a definition with a spoilt header, no figures of what is left of it', () => {
+    const scenario = evaluateText('blend my blend { 50 % mass sodium; rest water }');
+    expect(findingsOf(scenario)).toHaveLength(1);
+    expect(scenario.files[0]?.definitions[0]?.figures).toEqual([]);
   });
 });
