@@ -29,7 +29,7 @@ beforeAll(async () => {
 const shortNames: Record<string, string> = {
   'storage.type.kind': 'kind',
   'entity.name.type': 'name',
-  'support.type.property-name': 'entry',
+  'variable.parameter.entry': 'entry',
   'constant.numeric': 'number',
   'keyword.other.unit': 'unit',
   'variable.other': 'word',
