@@ -26,7 +26,7 @@ export function activate(context: ExtensionContext): StokeholdApi {
   const clientOptions: LanguageClientOptions = {
     // No scheme is named: scenarios in unsaved buffers, remote folders and virtual workspaces are served alike.
     documentSelector: [{ language: 'stokehold' }],
-    initializationOptions: { readFile: true },
+    initializationOptions: { readFile: true, suggestCommand: 'editor.action.triggerSuggest' },
   };
   const started = new LanguageClient('stokehold', 'Stokehold', serverOptions, clientOptions);
   client = started;

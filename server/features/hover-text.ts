@@ -20,7 +20,7 @@ export type HoverLine = { readonly label: string; readonly text: string } | { re
 
 export const MOST_LINES = 12;
 
-export function asMarkdown(hover: HoverText): string {
+export function asMarkdown(hover: Omit<HoverText, 'place'>): string {
   const blocks = [`**${escaped(hover.title)}**`, ...(hover.origin === null ? [] : [lineStart(escaped(hover.origin))])];
   const list = kept(hover).map((line) =>
     'label' in line
@@ -30,7 +30,7 @@ export function asMarkdown(hover: HoverText): string {
   return [...blocks, ...(list.length > 0 ? [list.join('\n')] : [])].join('\n\n');
 }
 
-export function asPlainText(hover: HoverText): string {
+export function asPlainText(hover: Omit<HoverText, 'place'>): string {
   const lines = kept(hover).map((line) => ('label' in line ? `${line.label}: ${line.text}` : line.sentence));
   return [hover.title, ...(hover.origin === null ? [] : [hover.origin]), ...lines].map(oneLine).join('\n');
 }
@@ -41,7 +41,7 @@ export function shortened(text: string, longest = 200): string {
   return characters.length > longest ? `${characters.slice(0, longest - 1).join('')}…` : characters.join('');
 }
 
-function kept({ origin, lines }: HoverText): readonly HoverLine[] {
+function kept({ origin, lines }: Omit<HoverText, 'place'>): readonly HoverLine[] {
   return lines.slice(0, MOST_LINES - (origin === null ? 1 : 2));
 }
 

@@ -6,6 +6,8 @@ import { addressOf } from './addresses.ts';
 export interface Abilities {
   /** Shows hovers written in Markdown. */
   readonly markdown: boolean;
+  /** What it takes of a completion. */
+  readonly completion: CompletionAbilities;
   /** Takes an outline as a tree with details, not only as a flat list. */
   readonly outlineTree: boolean;
   /** Shows places related to a finding. */
@@ -28,6 +30,16 @@ export interface Abilities {
   readonly folders: readonly string[];
 }
 
+export interface CompletionAbilities {
+  readonly snippets: boolean;
+  /** Takes two ranges: to insert, and to replace the rest of the word too. */
+  readonly insertReplace: boolean;
+  readonly labelDetails: boolean;
+  readonly markdown: boolean;
+  /** The command of the client that opens the list again, as it said in the initialization options. */
+  readonly suggestCommand: string | null;
+}
+
 /** @param params what came with `initialize`, whatever its shape. */
 export function abilitiesOf(params: unknown): Abilities {
   const has = (...keys: string[]): boolean => at(params, 'capabilities', ...keys) === true;
@@ -35,8 +47,16 @@ export function abilitiesOf(params: unknown): Abilities {
     const found = at(params, 'capabilities', ...keys);
     return Array.isArray(found) ? found : [];
   };
+  const command = at(params, 'initializationOptions', 'suggestCommand');
   return {
     markdown: list('textDocument', 'hover', 'contentFormat').includes('markdown'),
+    completion: {
+      snippets: has('textDocument', 'completion', 'completionItem', 'snippetSupport'),
+      insertReplace: has('textDocument', 'completion', 'completionItem', 'insertReplaceSupport'),
+      labelDetails: has('textDocument', 'completion', 'completionItem', 'labelDetailsSupport'),
+      markdown: list('textDocument', 'completion', 'completionItem', 'documentationFormat').includes('markdown'),
+      suggestCommand: typeof command === 'string' ? command : null,
+    },
     outlineTree: has('textDocument', 'documentSymbol', 'hierarchicalDocumentSymbolSupport'),
     related: has('textDocument', 'publishDiagnostics', 'relatedInformation'),
     codeActions: at(params, 'capabilities', 'textDocument', 'codeAction', 'codeActionLiteralSupport') !== undefined,

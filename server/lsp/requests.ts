@@ -27,6 +27,7 @@ import {
   toSymbolInformation,
   toTextEdit,
 } from './convert.ts';
+import { answerCompletion, COMPLETION_CAPABILITIES } from './completion-requests.ts';
 import { answerNavigation, navigationCapabilities } from './navigation-requests.ts';
 import type { Serving } from './serving.ts';
 
@@ -38,6 +39,7 @@ export function requestCapabilities(abilities: Abilities): ServerCapabilities {
     documentFormattingProvider: true,
     documentRangeFormattingProvider: true,
     codeActionProvider: { codeActionKinds: [CodeActionKind.QuickFix] },
+    ...COMPLETION_CAPABILITIES,
     ...navigationCapabilities(abilities),
   };
 }
@@ -45,6 +47,7 @@ export function requestCapabilities(abilities: Abilities): ServerCapabilities {
 /** Answers the requests from now on. */
 export function answerRequests(serving: Serving): void {
   const { connection, documents, evaluations, abilities, settings, log } = serving;
+  answerCompletion(serving);
   answerNavigation(serving);
 
   connection.onHover(

@@ -34,6 +34,14 @@ export const FULL_CAPABILITIES: ClientCapabilities = {
     publishDiagnostics: { relatedInformation: true, versionSupport: true },
     codeAction: { codeActionLiteralSupport: { codeActionKind: { valueSet: ['quickfix'] } }, isPreferredSupport: true },
     rename: { prepareSupport: true },
+    completion: {
+      completionItem: {
+        snippetSupport: true,
+        insertReplaceSupport: true,
+        labelDetailsSupport: true,
+        documentationFormat: ['markdown', 'plaintext'],
+      },
+    },
   },
   workspace: {
     configuration: true,

@@ -69,9 +69,10 @@ describe('references', () => {
   });
 
   it('of a catalogue substance are found under each of its words', () => {
-    checkReferences('blend f {\n  50 % sod$0ium\n  rest Na(cr)\n}\nblend g {\n  rest natrium\n}\n', [
+    checkReferences('blend f {\n  50 % meth$0anol\n  rest CH3OH(l)\n}\nblend g {\n  rest methyl_alcohol\n}\n', [
       'main.stoke 2:8',
       'main.stoke 3:8',
+      'main.stoke 6:8',
     ]);
   });
 

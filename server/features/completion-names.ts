@@ -1,0 +1,179 @@
+// Offers what the scenario has names for: definitions, values, figures of definitions, and shares of portions, each with
+// what it comes to where that has been worked out. Works nothing out. Invariant: a number shown is one the evaluation
+// found for this very text; what could not be had is offered without one.
+import { sameDimension } from '../core/quantity/dimension.ts';
+import { findSubstance } from '../core/substance/catalogue.ts';
+import { parseFormula } from '../core/substance/formula.ts';
+import { kinds } from '../scenario/kinds/registry.ts';
+import { materialFigures, type FigureRow } from '../scenario/material-figures.ts';
+import type { EvaluatedDefinition, EvaluatedScenario } from '../scenario/scenario.ts';
+import { formatPercent } from '../wording/numbers.ts';
+import { figureText, quantityText } from '../wording/quantities.ts';
+import { unitOfValue } from '../wording/written-unit.ts';
+import { fits, type CompletionItem } from './completion-item.ts';
+import type { Wanted } from './completion-units.ts';
+import { leadingFigures } from './leading-figures.ts';
+import { writtenName } from './written-name.ts';
+
+/** Definitions that pass, by kind; the one at the cursor is left out, because it cannot speak of itself. */
+export function definitionItems(
+  scenario: EvaluatedScenario,
+  passes: (definition: EvaluatedDefinition) => boolean,
+  own: string,
+  start: number,
+  detailOf: (definition: EvaluatedDefinition) => string | null = leadingDetail,
+): CompletionItem[] {
+  return definitionsOf(scenario)
+    .filter((definition) => definition.name !== own && passes(definition))
+    .map((definition, rank) => ({
+      ...named(definition.name, start),
+      role: 'definition',
+      detail: detailOf(definition) ?? definition.kind,
+      rank,
+    }));
+}
+
+/** Values given by `let`, those of a wanted dimension first. */
+export function valueItems(
+  scenario: EvaluatedScenario,
+  wanted: readonly Wanted[],
+  own: string,
+  start: number,
+): CompletionItem[] {
+  const seen = new Set([own, '']);
+  return scenario.files
+    .flatMap((file) => file.values.map((value) => ({ ...value, file })))
+    .filter(({ name }) => !seen.has(name) && seen.add(name))
+    .map(({ name, quantity, place, file }, index) => {
+      const isFitting =
+        quantity !== null && wanted.some(({ dimension }) => sameDimension(dimension, quantity.dimension));
+      return {
+        ...named(name, start),
+        role: 'value',
+        detail: quantity ? quantityText(quantity, unitOfValue(place, quantity, file)) : 'value',
+        rank: (isFitting ? 0 : 20) + Math.min(index, 19),
+      };
+    });
+}
+
+/** Figures with whose they are: `lower heating value of slurry`. At most `most`, those that fit what is typed. */
+export function figureItems(scenario: EvaluatedScenario, typed: string, start: number, most: number): CompletionItem[] {
+  const items: CompletionItem[] = [];
+  for (const definition of definitionsOf(scenario)) {
+    for (const [rank, figure] of leadingFigures(definition).entries()) {
+      const label = `${wordsOf(figure.id)} of ${writtenName(definition.name)}`;
+      if (items.length === most) return items;
+      if (!fits(label, typed)) continue;
+      const subject = { kind: 'figure', of: definition.name, id: figure.id } as const;
+      items.push({ label, role: 'figure', detail: figureText(figure), insert: label, start, rank: 40 + rank, subject });
+    }
+  }
+  return items;
+}
+
+/** The words of every figure a definition or substance may have, to be followed by `of` and a name. */
+export function figureWordItems(start: number): CompletionItem[] {
+  return figureRows().map(({ id, label }, index) => ({
+    label: wordsOf(id),
+    role: 'figure',
+    detail: 'of …',
+    insert: `${wordsOf(id)} of `,
+    continues: true,
+    start,
+    rank: 30 + Math.min(index, 9),
+    documentation: { title: label, origin: 'A figure of a definition or substance.', lines: [] },
+  }));
+}
+
+/** The contract unit of the figure of these words, or null when there is no such figure. */
+export function unitOfFigure(words: string): string | null {
+  return figureRows().find(({ id }) => wordsOf(id) === words)?.unit ?? null;
+}
+
+/** Whether every substance of the catalogue may have the figure of these words. */
+export function isMaterialFigure(words: string): boolean {
+  return materialFigures.some(({ id }) => wordsOf(id) === words);
+}
+
+/** Shares of portions: `sodium in slurry`. */
+export function shareItems(scenario: EvaluatedScenario, typed: string, start: number, most: number): CompletionItem[] {
+  return definitionsOf(scenario)
+    .flatMap((definition) =>
+      portionsOf(definition).map(({ name, mass }) => ({
+        label: `${writtenName(name)} in ${writtenName(definition.name)}`,
+        detail: mass === null ? 'share by mass' : `${formatPercent(mass)} by mass`,
+      })),
+    )
+    .filter(({ label }) => fits(label, typed))
+    .slice(0, most)
+    .map(({ label, detail }) => ({ label, role: 'share', detail, insert: label, start, rank: 60 }));
+}
+
+/** Rows of a definition's tables that have a column of these words: `sodium in slurry`, behind `mass share of`. */
+export function rowItems(scenario: EvaluatedScenario, words: string, start: number): CompletionItem[] {
+  return definitionsOf(scenario).flatMap((definition) =>
+    definition.tables
+      .filter(({ columns }) => columns.some(({ id, unit }) => unit !== null && wordsOf(id) === words))
+      .flatMap(({ rows: cells }) => cells.flatMap(([first]) => (typeof first === 'string' ? [first] : [])))
+      .map((row) => `${isFormula(row) ? row : writtenName(row)} in ${writtenName(definition.name)}`)
+      .map((label) => ({ label, role: 'share', detail: definition.kind, insert: label, start, rank: 10 })),
+  );
+}
+
+/** What the figure of these words comes to for a definition, in words; null where it has none. */
+export function figureDetail(definition: EvaluatedDefinition, words: string): string | null {
+  const figure = definition.figures.find(({ id }) => wordsOf(id) === words);
+  return figure ? figureText(figure) : null;
+}
+
+/** The share by mass of a substance in a definition, in words; null when it is no portion of it. */
+export function shareDetail(definition: EvaluatedDefinition, substance: string): string | null {
+  const name = findSubstance(substance)?.name ?? substance;
+  const portion = portionsOf(definition).find((one) => one.name === substance || one.name === name);
+  return portion ? (portion.mass === null ? definition.kind : `${formatPercent(portion.mass)} by mass`) : null;
+}
+
+/** Whether a definition may be a portion of something. One that is not worked out yet may be anything. */
+export function isMaterial({ kind }: EvaluatedDefinition): boolean {
+  return kind === 'substance' || kind === 'blend';
+}
+
+function portionsOf({ kind, lines }: EvaluatedDefinition): { name: string; mass: number | null }[] {
+  if (kind !== 'blend') return [];
+  return lines.flatMap((line) =>
+    line.kind === 'portion' ? [{ name: line.material.name, mass: line.shares.mass }] : [],
+  );
+}
+
+function leadingDetail(definition: EvaluatedDefinition): string {
+  const [first] = leadingFigures(definition);
+  return first ? `${definition.kind}, ${figureText(first)}` : definition.kind;
+}
+
+/** Those that have a name, each name once. */
+function definitionsOf({ files }: EvaluatedScenario): EvaluatedDefinition[] {
+  const seen = new Set(['']);
+  return files.flatMap(({ definitions }) => definitions).filter(({ name }) => !seen.has(name) && seen.add(name));
+}
+
+function named(name: string, start: number): Pick<CompletionItem, 'label' | 'insert' | 'start' | 'subject'> {
+  return { label: name, insert: writtenName(name), start, subject: { kind: 'name', name } };
+}
+
+/** Tables name products by their formulas, and those are written without quotes. */
+function isFormula(row: string): boolean {
+  return parseFormula(row.replace(/\((?:g|l|cr|aq)\)$/, '')).kind === 'formula';
+}
+
+function wordsOf(id: string): string {
+  return id.replaceAll('-', ' ');
+}
+
+function figureRows(): readonly FigureRow[] {
+  rows ??= [
+    ...new Map(kinds.flatMap(({ evaluated }) => evaluated?.figures ?? []).map((row) => [row.id, row])).values(),
+  ];
+  return rows;
+}
+
+let rows: readonly FigureRow[] | undefined;
