@@ -34,6 +34,7 @@ import { nameUnknown } from './name-unknown.ts';
 import { nameUseCycle } from './name-use-cycle.ts';
 import { nameWrongKind } from './name-wrong-kind.ts';
 import { programFailed } from './program-failed.ts';
+import { rangeHeatingValue } from './range-heating-value.ts';
 import { rangeHumidity } from './range-humidity.ts';
 import { rangeNumber } from './range-number.ts';
 import { rangePhase } from './range-phase.ts';
@@ -115,6 +116,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'balance/products': balanceProducts,
   'balance/water-missing': balanceWaterMissing,
   'balance/contradiction': balanceContradiction,
+  'range/heating-value': rangeHeatingValue,
   'range/humidity': rangeHumidity,
   'range/number': rangeNumber,
   'range/temperature': rangeTemperature,

@@ -156,6 +156,14 @@ export type Fact =
   /** A portion that is in another phase where it is stored than at 25 °C, which its data are of. */
   | { readonly code: 'range/phase'; readonly substance: string; readonly state: PortionState }
   /** Vapour at that humidity would need more than the whole pressure, or the temperature has no saturation pressure. */
+  /** A heating value beyond what anything that burns has. `most` is that of hydrogen, J/kg. */
+  | {
+      readonly code: 'range/heating-value';
+      readonly text: string;
+      readonly why: 'negative' | 'too-large';
+      readonly basis: 'lower' | 'higher';
+      readonly most: Quantity;
+    }
   | { readonly code: 'range/humidity'; readonly temperature: Quantity; readonly pressure: Quantity }
   | { readonly code: 'range/share'; readonly text: string; readonly low: number; readonly high: number }
   | { readonly code: 'range/positive'; readonly text: string; readonly entry: string }

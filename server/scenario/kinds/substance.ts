@@ -15,6 +15,7 @@ import { molPerKgOfFormula } from '../../core/substance/composition.ts';
 import { formulaTextWithPhase, molarMassKgPerMol, type Formula } from '../../core/substance/formula.ts';
 import { compositionReader } from '../composition.ts';
 import type { Context } from '../context.ts';
+import { checkHeatingValue } from '../heating-value-check.ts';
 import { readEntries, refuseLines, type EntriesRead, type EntryRow, type Reader } from '../entries.ts';
 import { evaluateExpression } from '../expressions.ts';
 import { givenFigureRows, givenFigures } from '../given-figures.ts';
@@ -305,6 +306,7 @@ function enthalpyOf(
   const heat = read.lowerHeatingValue ?? read.higherHeatingValue;
   if (!heat) return null;
   const basis = read.lowerHeatingValue ? 'lower' : 'higher';
+  checkHeatingValue(heat.entry, heat.value.quantity, basis, context);
   const choice = read.products ? { products: read.products.value } : 'as-ruled';
   const symbols = [...elements.keys()];
   const behind = (value: number, amounts: readonly number[]) =>

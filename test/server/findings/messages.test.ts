@@ -263,6 +263,10 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     'There is no air of that relative humidity at 120 °C and 1 bar: its vapour alone would reach the whole pressure, or water has no saturation pressure there. Give the state it was measured at, or a humidity ratio such as `10 g/kg`.',
   ],
   [
+    { code: 'range/heating-value', text: '400 MJ/kg', why: 'too-large', basis: 'lower', most: quantity(120, 'MJ/kg') },
+    '`400 MJ/kg` is more than anything that burns sets free: hydrogen has 120 MJ/kg (lower). Is the unit wrong, such as MJ for kJ?',
+  ],
+  [
     {
       code: 'range/phase',
       substance: 'sodium',

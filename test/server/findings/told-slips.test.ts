@@ -74,6 +74,16 @@ describe('what is told', () => {
       'use "gone.stoke"\nblend a { 30 % mass sodium; rest house_oil }',
       'No file `gone.stoke`',
     ],
+    [
+      'a heating value that nothing has',
+      'substance oil { formula: C8H18; higher heating value: 47900 MJ/kg }',
+      '`47900 MJ/kg` is more than anything that burns sets free: hydrogen has 141.8 MJ/kg (higher).',
+    ],
+    [
+      'a heating value with the sign of a reaction',
+      'substance oil { formula: C8H18; lower heating value: -44 MJ/kg }',
+      '`-44 MJ/kg` would mean that burning takes up heat.',
+    ],
     ['a path of another system', 'use "sub\\lib.stoke"', 'Write `sub/lib.stoke`.'],
     ['an empty path', 'use ""', 'There is no path between these quotes.'],
   ])('%s', (_, text, expected) => {
