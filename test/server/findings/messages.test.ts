@@ -375,6 +375,7 @@ describe('every code', () => {
       'information range/phase',
       'warning balance/contradiction',
       'warning balance/no-data',
+      'warning range/heating-value',
       'warning range/temperature',
     ]);
   });
