@@ -31,7 +31,9 @@ function evaluated(root: string, text = texts.get(root) ?? ''): EvaluatedScenari
 /** The scenario with another text in its first file, for what asks the text and not the numbers. */
 function retyped(scenario: EvaluatedScenario, text: string): EvaluatedScenario {
   const [first, ...others] = scenario.files;
-  return first ? { ...scenario, files: [{ ...first, tree: parse(text, isUnitWord, { previous: first.tree }) }, ...others] } : scenario;
+  return first
+    ? { ...scenario, files: [{ ...first, tree: parse(text, isUnitWord, { previous: first.tree }) }, ...others] }
+    : scenario;
 }
 
 function complete(scenario: EvaluatedScenario, root: string, text: string, offset: number): number {
