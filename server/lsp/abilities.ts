@@ -16,6 +16,8 @@ export interface Abilities {
   readonly codeActions: boolean;
   /** Asks what would be renamed before it asks for the new name. */
   readonly prepareRename: boolean;
+  /** Colours by meaning. */
+  readonly semanticTokens: boolean;
   /** Takes edits that name the version they belong to. */
   readonly versionedEdits: boolean;
   /** Answers questions for settings. */
@@ -61,6 +63,7 @@ export function abilitiesOf(params: unknown): Abilities {
     related: has('textDocument', 'publishDiagnostics', 'relatedInformation'),
     codeActions: at(params, 'capabilities', 'textDocument', 'codeAction', 'codeActionLiteralSupport') !== undefined,
     prepareRename: has('textDocument', 'rename', 'prepareSupport'),
+    semanticTokens: at(params, 'capabilities', 'textDocument', 'semanticTokens') !== undefined,
     versionedEdits: has('workspace', 'workspaceEdit', 'documentChanges'),
     configuration: has('workspace', 'configuration'),
     configurationNews: has('workspace', 'didChangeConfiguration', 'dynamicRegistration'),

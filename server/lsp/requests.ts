@@ -29,6 +29,7 @@ import {
 } from './convert.ts';
 import { answerCompletion, COMPLETION_CAPABILITIES } from './completion-requests.ts';
 import { answerNavigation, navigationCapabilities } from './navigation-requests.ts';
+import { answerSemanticTokens, semanticTokensCapabilities } from './semantic-tokens-requests.ts';
 import type { Serving } from './serving.ts';
 
 /** What the client is told can be asked. */
@@ -41,6 +42,7 @@ export function requestCapabilities(abilities: Abilities): ServerCapabilities {
     codeActionProvider: { codeActionKinds: [CodeActionKind.QuickFix] },
     ...COMPLETION_CAPABILITIES,
     ...navigationCapabilities(abilities),
+    ...semanticTokensCapabilities(abilities),
   };
 }
 
@@ -49,6 +51,7 @@ export function answerRequests(serving: Serving): void {
   const { connection, documents, evaluations, abilities, settings, log } = serving;
   answerCompletion(serving);
   answerNavigation(serving);
+  answerSemanticTokens(serving);
 
   connection.onHover(
     answered('Hover', null, log, async ({ textDocument, position }): Promise<Hover | null> => {

@@ -7,6 +7,8 @@ import {
   PrepareRenameRequest,
   ReferencesRequest,
   RenameRequest,
+  SemanticTokensRangeRequest,
+  SemanticTokensRequest,
   type ClientCapabilities,
   type Range,
   type TextDocumentPositionParams,
@@ -109,5 +111,24 @@ describe('folds', () => {
       { startLine: 0, endLine: 1, kind: 'comment' },
       { startLine: 2, endLine: 3 },
     ]);
+  });
+});
+
+describe('colours by meaning', () => {
+  const document = { textDocument: { uri: MAIN } };
+
+  it('are five numbers a token, told from the one before', async () => {
+    await open('let a = 2 kg\nlet b = a\n');
+    const tokens = await client.connection.sendRequest(SemanticTokensRequest.type, document);
+    expect(tokens?.data).toEqual([0, 4, 1, 2, 3, 0, 6, 2, 7, 0, 1, 4, 1, 2, 3, 0, 4, 1, 2, 2]);
+  });
+
+  it('can be asked for a part', async () => {
+    await open('let a = 2 kg\nlet b = a\n');
+    const tokens = await client.connection.sendRequest(SemanticTokensRangeRequest.type, {
+      ...document,
+      range: range(1, 0, 9),
+    });
+    expect(tokens?.data).toEqual([1, 4, 1, 2, 3, 0, 4, 1, 2, 2]);
   });
 });

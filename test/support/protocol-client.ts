@@ -34,6 +34,12 @@ export const FULL_CAPABILITIES: ClientCapabilities = {
     publishDiagnostics: { relatedInformation: true, versionSupport: true },
     codeAction: { codeActionLiteralSupport: { codeActionKind: { valueSet: ['quickfix'] } }, isPreferredSupport: true },
     rename: { prepareSupport: true },
+    semanticTokens: {
+      requests: { full: true, range: true },
+      tokenTypes: [],
+      tokenModifiers: [],
+      formats: ['relative'],
+    },
     completion: {
       completionItem: {
         snippetSupport: true,
