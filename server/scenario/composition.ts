@@ -24,6 +24,7 @@ export interface Composition {
 export const compositionReader: Reader<Composition> = {
   takes: 'shares of elements, such as `86 % C, 14 % H`',
   unit: '%',
+  elements: true,
   read(entry, context) {
     const parts: (NamedAmount & { readonly symbol: string })[] = [];
     for (const phrase of entry.phrases) {

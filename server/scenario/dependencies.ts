@@ -4,7 +4,7 @@
 // but for names on a cycle.
 
 import type { Expression, Line, Span, Statement, Word } from '../../grammar/tree.ts';
-import { entryNamesThings } from './kinds/registry.ts';
+import { entryWordNamesThing } from './kinds/registry.ts';
 
 export interface Mention {
   readonly name: string;
@@ -36,10 +36,10 @@ function mentionsInLine(line: Line, kind: string, mentions: Mention[]): void {
   } else if (line.kind === 'equation') {
     for (const term of [...line.left, ...line.right]) mentionsInExpression(term.species, mentions);
   } else if (line.kind === 'entry') {
-    const bareWords = entryNamesThings(kind, line.words);
     for (const phrase of line.phrases) {
       for (const item of phrase.items) {
-        if (item.kind === 'connective' || (item.kind === 'word' && !bareWords)) continue;
+        if (item.kind === 'connective') continue;
+        if (item.kind === 'word' && !entryWordNamesThing(kind, line.words, item.text)) continue;
         mentionsInExpression(item, mentions);
       }
     }
@@ -58,6 +58,7 @@ function mentionsInExpression(expression: Expression, mentions: Mention[]): void
         name(item);
         break;
       case 'reference':
+        name(item.row);
         name(item.name);
         if (item.at) rest.push(item.at);
         break;

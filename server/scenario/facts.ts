@@ -139,7 +139,14 @@ export type Fact =
   /** The named products cannot be what the fuel burns to. */
   | { readonly code: 'balance/products'; readonly fault: GivenProductsFault }
   | { readonly code: 'balance/water-missing'; readonly name: string; readonly waterKgPerKg: number }
-  | { readonly code: 'balance/contradiction'; readonly what: string; readonly first: string; readonly second: string }
+  /** `worked` is what `first` makes of the number that `second` gives, where the two can be held against each other. */
+  | {
+      readonly code: 'balance/contradiction';
+      readonly what: string;
+      readonly first: string;
+      readonly second: string;
+      readonly compared: { readonly written: Quantity; readonly worked: Quantity; readonly unit: string } | null;
+    }
   | {
       readonly code: 'range/number';
       readonly text: string;

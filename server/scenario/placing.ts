@@ -23,7 +23,7 @@ export class PlacedAnswer {
   readonly value: EvaluatedValue | null;
   readonly expectation: Expectation | null;
   readonly facts: readonly PlacedFact[];
-  readonly #innerPlaces: ReadonlyMap<unknown, Place>;
+  readonly #innerPlaces: ReadonlyMap<object, Place>;
 
   constructor(
     private readonly answer: Answer,
@@ -103,15 +103,48 @@ export class PlacedAnswer {
   #withPlaces<Value>(value: Value): Value {
     if (this.#innerPlaces.size === 0) return value;
     // Copied field for field, the copy is of the value's own type; the compiler cannot follow that.
-    return withPlaces(value, this.#innerPlaces) as Value;
+    return withPlaces(value, this.#innerPlaces, knownHoldersOf(this.answer)) as Value;
   }
 }
 
-/** Goes through lists and plain records; places do not stand in maps. */
-function withPlaces(value: unknown, places: ReadonlyMap<unknown, Place>): unknown {
+/** The lists and records of an answer that hold a place, at whatever depth: found once, since most hold none. */
+function holdersOf({ facts, named, innerPlaces }: Answer): ReadonlySet<unknown> {
+  const holders = new Set<unknown>();
+  const seen = new Set<unknown>();
+  const holds = (value: unknown): boolean => {
+    if (typeof value !== 'object' || value === null) return false;
+    if (innerPlaces.has(value)) return true;
+    if (seen.has(value)) return holders.has(value);
+    seen.add(value);
+    // Every part is looked into, so that all holders are found.
+    const holding = (Array.isArray(value) ? value : Object.values(value)).filter(holds).length > 0;
+    if (holding) holders.add(value);
+    return holding;
+  };
+  holds(facts.map(({ fact }) => fact));
+  if (named && 'definition' in named) {
+    const { figures, tables, lines } = named.definition;
+    [figures, tables, lines].forEach(holds);
+  }
+  return holders;
+}
+
+const known = new WeakMap<Answer, ReadonlySet<unknown>>();
+
+function knownHoldersOf(answer: Answer): ReadonlySet<unknown> {
+  const found = known.get(answer) ?? holdersOf(answer);
+  known.set(answer, found);
+  return found;
+}
+
+/** A copy as deep as places stand in it; lists and records that hold none are shared. Places do not stand in maps. */
+function withPlaces(value: unknown, places: ReadonlyMap<object, Place>, holders: ReadonlySet<unknown>): unknown {
+  if (typeof value !== 'object' || value === null) return value;
   const place = places.get(value);
   if (place) return place;
-  if (Array.isArray(value)) return value.map((item) => withPlaces(item, places));
-  if (typeof value !== 'object' || value === null || Object.getPrototypeOf(value) !== Object.prototype) return value;
-  return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, withPlaces(item, places)]));
+  if (!holders.has(value)) return value;
+  if (Array.isArray(value)) return value.map((item) => withPlaces(item, places, holders));
+  const copy: Record<string, unknown> = { ...value };
+  for (const key of Object.keys(copy)) copy[key] = withPlaces(copy[key], places, holders);
+  return copy;
 }

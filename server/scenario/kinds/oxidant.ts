@@ -79,7 +79,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   if (read.relativeHumidity && read.humidityRatio) {
     const { wordsSpan } = read.humidityRatio.entry;
     const [first, second] = [read.relativeHumidity.entry.words, read.humidityRatio.entry.words];
-    context.report(wordsSpan, { code: 'balance/contradiction', what: 'its humidity', first, second });
+    context.report(wordsSpan, { code: 'balance/contradiction', what: 'its humidity', first, second, compared: null });
   }
   const gas = dryGasOf(mixed.species);
   if (!gas) {

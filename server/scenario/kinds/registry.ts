@@ -48,12 +48,15 @@ export interface EntryHelp {
 }
 
 /**
- * Whether bare words of an entry of this kind may name things. Those of an entry that nobody reads, or of a kind that is
- * not evaluated, do not: `cycle: diesel` in an engine called `diesel` is no ring.
+ * Whether a bare word in an entry of this kind may name a thing: a substance, a definition, or a value where a number is
+ * read. Not so a listed word, an element, or a word of an entry that nobody reads: `cycle: diesel` in an engine called
+ * `diesel` is no ring.
  */
-export function entryNamesThings(kind: string, entry: string): boolean {
+export function entryWordNamesThing(kind: string, entry: string, word: string): boolean {
   const rows = Object.values(byWord.get(kind)?.evaluated?.entries ?? {});
-  return rows.find((candidate) => candidate.name === entry)?.reader.names ?? false;
+  const reader = rows.find((candidate) => candidate.name === entry)?.reader;
+  if (!reader || reader.elements || reader.words?.includes(word)) return false;
+  return (reader.names ?? false) || reader.unit !== undefined;
 }
 
 function later(kind: string, help: string): Kind {

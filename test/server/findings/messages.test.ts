@@ -245,8 +245,24 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     'The density of slurry cannot be worked out. Missing: the density of sodium and x.',
   ],
   [
-    { code: 'balance/contradiction', what: 'its energy', first: 'formation enthalpy', second: 'lower heating value' },
+    {
+      code: 'balance/contradiction',
+      what: 'its energy',
+      first: 'formation enthalpy',
+      second: 'lower heating value',
+      compared: null,
+    },
     '`formation enthalpy` and `lower heating value` both say its energy. `formation enthalpy` is taken; remove one of the two.',
+  ],
+  [
+    {
+      code: 'balance/contradiction',
+      what: 'its energy',
+      first: 'lower heating value',
+      second: 'higher heating value',
+      compared: { written: quantity(48.5, 'MJ/kg'), worked: quantity(45.8, 'MJ/kg'), unit: 'MJ/kg' },
+    },
+    '`lower heating value` and the composition make `higher heating value` 45.8 MJ/kg, and 48.5 MJ/kg is written. `lower heating value` is taken; is one of the three mistyped?',
   ],
   [{ code: 'balance/no-portions', name: 'x' }, '`x` has no portions. Add one a line, for example `30 % mass sodium`.'],
   [
@@ -373,6 +389,7 @@ describe('every code', () => {
       'information kind/not-evaluated',
       'information name/like-catalogue',
       'information range/phase',
+      'warning balance/contradiction',
       'warning balance/contradiction',
       'warning balance/no-data',
       'warning range/heating-value',

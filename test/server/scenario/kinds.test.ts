@@ -461,6 +461,22 @@ describe('substance', () => {
     `);
   });
 
+  test('a certificate with both heating values is fine while they agree', () => {
+    checkFacts(`
+      substance agreed {
+        composition: 86 % C, 14 % H
+        lower heating value: 42.7 MJ/kg
+        higher heating value: 45.8 MJ/kg
+      }
+      substance mistyped {
+        composition: 86 % C, 14 % H
+        lower heating value: 42.7 MJ/kg
+        higher heating value: 48.5 MJ/kg
+      # ^^^^^^^^^^^^^^^^^^^^ balance/contradiction
+      }
+    `);
+  });
+
   test('slips: a wrong dimension, a word that is not listed, a number without a unit', () => {
     checkFacts(`
       substance one {
