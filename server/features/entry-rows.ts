@@ -1,6 +1,5 @@
 // Looks into the kinds' tables for what stands at a place: an entry's row, and what the words and numbers of its value may
 // be. The tables are the only source; a kind without one has no rows. Knows no text and no cursor.
-import { compositionReader } from '../scenario/composition.ts';
 import type { EntryRow, Reader } from '../scenario/entries.ts';
 import { kindOf } from '../scenario/kinds/registry.ts';
 
@@ -24,7 +23,7 @@ export interface WordsTaken {
 }
 
 export function wordsTaken(reader: Reader<unknown>): WordsTaken {
-  const elements = reader === compositionReader;
+  const elements = reader.elements ?? false;
   return {
     listed: reader.words ?? [],
     materials: reader.names ?? false,

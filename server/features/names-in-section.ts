@@ -2,7 +2,8 @@
 // in definitions too that are not evaluated yet. Knows no bindings: whether such a word stands for anything is asked of
 // the scenario. Invariant: a section is looked through once, and again only when its text has changed.
 import type { Entry, Expression, Line, Section, Span, Word } from '../../grammar/tree.ts';
-import { entryRow, wordsTaken } from './entry-rows.ts';
+import { entryWordNamesThing } from '../scenario/kinds/registry.ts';
+import { entryRow } from './entry-rows.ts';
 
 export interface NameUse {
   readonly name: string;
@@ -73,11 +74,8 @@ function inEntry(entry: Entry, kind: string, owner: string, uses: NameUse[]): vo
 
 /** A bare word of an entry may as well be a listed word, an element or a formula: its kind's table decides. */
 function mayBeName({ text }: Word, { words }: Entry, kind: string, owner: string): boolean {
-  const row = entryRow(kind, words);
   // Without a table: in an engine called `diesel`, `cycle: diesel` does not speak of the engine.
-  if (!row) return text !== owner;
-  const taken = wordsTaken(row.reader);
-  return (taken.materials || taken.numbers) && !taken.listed.includes(text);
+  return entryRow(kind, words) ? entryWordNamesThing(kind, words, text) : text !== owner;
 }
 
 /** Iterative: chains of operators are as long as the grammar allows. */

@@ -55,6 +55,32 @@ describe('names', () => {
     expect(scenario.files[0]?.values.map(({ quantity }) => quantity)).toEqual([null, null, null]);
   });
 
+  test('a value may be given below the definition whose entry it stands in', () => {
+    const scenario = checkFacts(`
+      substance x {
+        composition: 86 % C, 14 % H
+        lower heating value: 43 MJ/kg
+        density: rho
+      }
+      let rho = 780 kg/m3
+    `);
+    expect(figureOf(scenario, 'x', 'density')).toBe(780);
+  });
+
+  test('a row of a table may be given below what speaks of it', () => {
+    const scenario = checkFacts(`
+      let share = mass share of 'fuel x' in f
+      blend f {
+        40 % 'fuel x'
+        rest methanol
+      }
+      substance 'fuel x' {
+        composition: 86 % C, 14 % H
+      }
+    `);
+    expect(valueOf(scenario, 'share')).toBeCloseTo(0.4, 12);
+  });
+
   test('a listed word, or one of an entry that nobody reads, names nothing', () => {
     checkFacts(`
         engine twin {
