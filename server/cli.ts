@@ -29,7 +29,10 @@ const io: Io = {
 for (const stream of [process.stdout, process.stderr]) {
   stream.on('error', (error: NodeJS.ErrnoException) => {
     // Whoever read our output has seen enough; the verdict stands.
-    if (error.code !== 'EPIPE') throw error;
+    if (error.code === 'EPIPE') return;
+    // A full disk or a stream that has gone is no fault of ours, but the answer has not arrived: say so, and end.
+    if (stream === process.stdout) process.stderr.write(`stokehold: the output cannot be written: ${error.message}.\n`);
+    process.exit(ExitCode.Usage);
   });
 }
 

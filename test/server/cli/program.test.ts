@@ -1,5 +1,6 @@
 // The program as a shell runs it: bundled, with real streams.
 import { spawn, spawnSync } from 'node:child_process';
+import { closeSync, existsSync, openSync } from 'node:fs';
 import path from 'node:path';
 import { build } from 'esbuild';
 import { beforeAll, expect, test } from 'vitest';
@@ -41,6 +42,15 @@ test('a closed pipe is not an error', async () => {
   child.stdout.once('data', () => child.stdout.destroy());
   const code = await new Promise((resolve) => child.on('close', resolve));
   expect([code, problem]).toEqual([1, '']);
+});
+
+test.runIf(existsSync('/dev/full'))('output that cannot be written is told in plain words', () => {
+  const full = openSync('/dev/full', 'w');
+  const options = { encoding: 'utf8', stdio: ['ignore', full, 'pipe'], cwd: path.resolve('examples') } as const;
+  const ran = spawnSync(process.execPath, [bundle, 'evaluate', 'dunlin.stoke'], options);
+  closeSync(full);
+  expect(ran.status).toBe(2);
+  expect(ran.stderr).toMatch(/^stokehold: the output cannot be written: .*\n$/);
 });
 
 test('serve speaks the protocol on the standard streams', async () => {
