@@ -34,6 +34,7 @@ try {
   await workbench.placeCursor(line + 12, 1); // brings what stands above the blend into view, for the hover to lie on
   await workbench.placeCursor(line, column + 1);
   await workbench.readHover();
+  await workbench.page.waitForTimeout(800); // the hover fades in
   await workbench.page.screenshot({ path: picture });
 } finally {
   await workbench.close();
