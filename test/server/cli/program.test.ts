@@ -46,8 +46,11 @@ test('a closed pipe is not an error', async () => {
 
 test.runIf(existsSync('/dev/full'))('output that cannot be written is told in plain words', () => {
   const full = openSync('/dev/full', 'w');
-  const options = { encoding: 'utf8', stdio: ['ignore', full, 'pipe'], cwd: path.resolve('examples') } as const;
-  const ran = spawnSync(process.execPath, [bundle, 'evaluate', 'dunlin.stoke'], options);
+  const ran = spawnSync(process.execPath, [bundle, 'evaluate', 'dunlin.stoke'], {
+    encoding: 'utf8',
+    stdio: ['ignore', full, 'pipe'],
+    cwd: path.resolve('examples'),
+  });
   closeSync(full);
   expect(ran.status).toBe(2);
   expect(ran.stderr).toMatch(/^stokehold: the output cannot be written: .*\n$/);
