@@ -8,7 +8,7 @@ import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import { bindNames } from './bind.ts';
 import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
-import { PlacedAnswer, type PlacedByName } from './placing.ts';
+import { lazily, placeAnswer, type PlacedAnswer, type PlacedByName } from './placing.ts';
 import { Questions, type AnswerStore } from './questions.ts';
 import type {
   EvaluatedDefinition,
@@ -76,7 +76,7 @@ function gatherFiles(files: readonly LoadedFile[], questions: Questions): readon
   for (const { path, tree } of files) {
     for (const section of tree.sections) {
       const answer = questions.answerTo(section);
-      if (answer) placed.set(section, new PlacedAnswer(answer, path, section));
+      if (answer) placed.set(section, placeAnswer(answer, path, section));
     }
   }
   const placedByName: PlacedByName = (name) => {
@@ -102,7 +102,6 @@ function gather(
   placedByName: PlacedByName,
 ): EvaluatedFile {
   const computed: PlacedFact[] = [...ofNames];
-  const meanings: PlacedMeaning[] = [];
   const definitions: EvaluatedDefinition[] = [];
   const values: EvaluatedValue[] = [];
   const expectations: Expectation[] = [];
@@ -113,7 +112,6 @@ function gather(
     const answer = answers.get(placed);
     if (!answer) continue;
     append(computed, answer.facts);
-    append(meanings, answer.meanings(placedByName));
     if (answer.definition) definitions.push(answer.definition);
     // A `let` without a name can be asked for by nobody.
     if (answer.value && statement.kind === 'let' && statement.name) values.push(answer.value);
@@ -125,7 +123,18 @@ function gather(
   }));
   // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
   const facts = problems.length >= suspendingProblems ? problems : [...problems, ...computed];
-  return { path, used, tree, title, definitions, values, expectations, facts, meanings };
+  const file = { path, used, tree, title, definitions, values, expectations, facts, meanings: [] };
+  return lazily<EvaluatedFile>(file, { meanings: () => meaningsOf(tree, answers, placedByName) });
+}
+
+function meaningsOf(
+  { sections }: SyntaxTree,
+  answers: ReadonlyMap<PlacedSection, PlacedAnswer>,
+  placedByName: PlacedByName,
+): readonly PlacedMeaning[] {
+  const meanings: PlacedMeaning[] = [];
+  for (const placed of sections) append(meanings, answers.get(placed)?.meanings(placedByName) ?? []);
+  return meanings;
 }
 
 /** One by one: a definition of 100,000 lines has more facts than a call can have arguments. */

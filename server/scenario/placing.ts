@@ -18,6 +18,17 @@ import { carryOver, significantTextOf } from './significant-text.ts';
 /** Finds the placed answer that a name stands for. */
 export type PlacedByName = (name: string) => PlacedAnswer | undefined;
 
+/** The answer where its section stands; the one made before where nothing of that has changed. */
+export function placeAnswer(answer: Answer, path: string, placed: PlacedSection): PlacedAnswer {
+  const before = lastPlaced.get(answer);
+  if (before?.standsAt(path, placed)) return before;
+  const now = new PlacedAnswer(answer, path, placed);
+  lastPlaced.set(answer, now);
+  return now;
+}
+
+const lastPlaced = new WeakMap<Answer, PlacedAnswer>();
+
 export class PlacedAnswer {
   readonly definition: EvaluatedDefinition | null;
   readonly value: EvaluatedValue | null;
@@ -37,6 +48,10 @@ export class PlacedAnswer {
     this.value = named?.kind === 'value' ? this.#placeValue(named.value) : null;
     this.expectation = expectation && { ...expectation, place: this.#placeOf(expectation.place) };
     this.facts = facts.map(({ fact, place }) => ({ fact: this.#withPlaces(fact), place: this.#placeOf(place) }));
+  }
+
+  standsAt(path: string, { start, section }: PlacedSection): boolean {
+    return path === this.path && start === this.placed.start && section === this.placed.section;
   }
 
   /** What the words of the section mean, where `placedByName` gives the definitions and values of others. */
@@ -71,17 +86,21 @@ export class PlacedAnswer {
   }
 
   #place(definition: EvaluatedDefinition): EvaluatedDefinition {
-    return {
+    const placed = {
       ...definition,
       doc: this.placed.section.doc,
       place: this.#placeOf(definition.place),
       header: this.#placeOf(definition.header),
       namePlace: this.#placeOf(definition.namePlace),
       section: this.placed,
-      figures: this.#withPlaces(definition.figures),
-      tables: this.#withPlaces(definition.tables),
-      lines: this.#withPlaces(definition.lines),
     };
+    if (this.#innerPlaces.size === 0) return placed;
+    // Copied when somebody looks: at most keys nobody does.
+    return lazily(placed, {
+      figures: () => this.#withPlaces(definition.figures),
+      tables: () => this.#withPlaces(definition.tables),
+      lines: () => this.#withPlaces(definition.lines),
+    });
   }
 
   #placeValue(value: EvaluatedValue): EvaluatedValue {
@@ -107,13 +126,30 @@ export class PlacedAnswer {
   }
 }
 
+/** The record with some of its fields worked out when they are first read. */
+export function lazily<Of extends object>(value: Of, fields: { readonly [Key in keyof Of]?: () => Of[Key] }): Of {
+  for (const [key, workOut] of Object.entries<(() => unknown) | undefined>(fields)) {
+    Object.defineProperty(value, key, {
+      enumerable: true,
+      configurable: true,
+      get() {
+        const found = workOut?.();
+        Object.defineProperty(value, key, { value: found, enumerable: true });
+        return found;
+      },
+    });
+  }
+  return value;
+}
+
 /** The lists and records of an answer that hold a place, at whatever depth: found once, since most hold none. */
 function holdersOf({ facts, named, innerPlaces }: Answer): ReadonlySet<unknown> {
+  const places: ReadonlySet<object> = innerPlaces;
   const holders = new Set<unknown>();
   const seen = new Set<unknown>();
   const holds = (value: unknown): boolean => {
     if (typeof value !== 'object' || value === null) return false;
-    if (innerPlaces.has(value)) return true;
+    if (places.has(value)) return true;
     if (seen.has(value)) return holders.has(value);
     seen.add(value);
     // Every part is looked into, so that all holders are found.
