@@ -20,12 +20,12 @@ import { asBasisWord, CONNECTIVE_WORDS, isReservedWord } from '../../grammar/wor
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 
 export type Behind =
-  /** An operand may begin here. */
-  | { readonly kind: 'start' }
+  /** An operand may begin here; `call` is the function whose brackets it stands in. */
+  | { readonly kind: 'start'; readonly call?: string }
   /** A number whose unit is being written, from `start` (in the file). */
   | { readonly kind: 'number'; readonly start: number; readonly tolerance: boolean }
-  /** A number with its unit, or a closing bracket. */
-  | { readonly kind: 'amount' }
+  /** A number with its unit, a closing bracket, or a whole reference; `share` behind `SUBSTANCE in NAME`. */
+  | { readonly kind: 'amount'; readonly share?: boolean }
   /** Plain words; `start` is where they begin. */
   | { readonly kind: 'word'; readonly words?: string; readonly start?: number }
   | { readonly kind: 'of'; readonly words: string }
@@ -61,12 +61,32 @@ export function behindOf(tokens: readonly Token[], at: number, from: number, rea
       return { kind: 'closed' };
     case QuotedName:
     case Formula:
-      return { kind: 'word' };
+      return ownedBy(tokens.at(-2)) ?? { kind: 'word' };
     case WordToken:
       return behindWord(tokens, last, from, reading);
     default:
-      return { kind: 'start' };
+      return { kind: 'start', ...callAround(tokens) };
   }
+}
+
+/** Behind `of NAME` and `in NAME` a reference is whole. */
+function ownedBy(before: Token | undefined): Behind | null {
+  if (before?.tokenType !== WordToken || (before.image !== 'of' && before.image !== 'in')) return null;
+  return { kind: 'amount', share: before.image === 'in' };
+}
+
+/** The function in whose open bracket the last token stands. */
+function callAround(tokens: readonly Token[]): { call?: string } {
+  const open: (string | null)[] = [];
+  for (const [index, token] of tokens.entries()) {
+    const before = tokens[index - 1];
+    if (token.tokenType === CloseBracket) open.pop();
+    if (token.tokenType !== OpenBracket) continue;
+    const isCall = before?.tokenType === WordToken && endOf(before) === token.startOffset;
+    open.push(isCall ? before.image : null);
+  }
+  const call = open.at(-1);
+  return typeof call === 'string' ? { call } : {};
 }
 
 function behindWord(tokens: readonly Token[], last: Token, from: number, reading: Reading): Behind {
@@ -74,7 +94,7 @@ function behindWord(tokens: readonly Token[], last: Token, from: number, reading
   const before = tokens.at(-2);
   if (word === 'rest' && reading.portion && tokens.length === 1) return { kind: 'rest' };
   if (asBasisWord(word) !== undefined && reading.portion) return { kind: 'basis' };
-  if (!isReservedWord(word)) return { kind: 'word', ...wordsBefore(tokens, tokens.length, from) };
+  if (!isReservedWord(word)) return ownedBy(before) ?? { kind: 'word', ...wordsBefore(tokens, tokens.length, from) };
   if (word === 'of' && before) {
     const { words } = wordsBefore(tokens, tokens.length - 1, from);
     return words === '' ? { kind: 'connective', word } : { kind: 'of', words };

@@ -84,7 +84,7 @@ export function entryItems(
     .map((row, index) => ({
       label: row.name,
       role: 'entry',
-      detail: row.needed ? 'needed' : (row.default?.text ?? ''),
+      detail: row.needed ? 'needed' : row.default ? `otherwise ${row.default.text}` : '',
       insert: hasColon ? row.name : `${row.name}: `,
       ...(hasColon ? {} : { snippet: `${row.name}: ${valueSnippet(row)}` }),
       start,

@@ -4,6 +4,7 @@
 import { sameDimension } from '../core/quantity/dimension.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { parseFormula } from '../core/substance/formula.ts';
+import { givenFigureRows } from '../scenario/given-figures.ts';
 import { kinds } from '../scenario/kinds/registry.ts';
 import { materialFigures, type FigureRow } from '../scenario/material-figures.ts';
 import type { EvaluatedDefinition, EvaluatedScenario } from '../scenario/scenario.ts';
@@ -12,7 +13,7 @@ import { figureText, quantityText } from '../wording/quantities.ts';
 import { unitOfValue } from '../wording/written-unit.ts';
 import { fits, type CompletionItem } from './completion-item.ts';
 import type { Wanted } from './completion-units.ts';
-import { leadingFigures } from './leading-figures.ts';
+import { leadingFigures, leadingRank } from './leading-figures.ts';
 import { writtenName } from './written-name.ts';
 
 /** Definitions that pass, by kind; the one at the cursor is left out, because it cannot speak of itself. */
@@ -65,14 +66,26 @@ export function figureItems(scenario: EvaluatedScenario, typed: string, start: n
       if (items.length === most) return items;
       if (!fits(label, typed)) continue;
       const subject = { kind: 'figure', of: definition.name, id: figure.id } as const;
-      items.push({ label, role: 'figure', detail: figureText(figure), insert: label, start, rank: 40 + rank, subject });
+      items.push({
+        label,
+        role: 'figure',
+        detail: figureText(figure),
+        insert: label,
+        start,
+        rank: 30.5 + leadingRank(figure.id) + rank / 1000,
+        subject,
+      });
     }
   }
   return items;
 }
 
-/** The words of every figure a definition or substance may have, to be followed by `of` and a name. */
-export function figureWordItems(start: number): CompletionItem[] {
+/**
+ * The words of every figure a definition or substance may have, to be followed by `of` and a name; those that something in
+ * the scenario has come first.
+ */
+export function figureWordItems(scenario: EvaluatedScenario, start: number): CompletionItem[] {
+  const had = new Set(definitionsOf(scenario).flatMap(({ figures }) => figures.map(({ id }) => id)));
   return figureRows().map(({ id, label }, index) => ({
     label: wordsOf(id),
     role: 'figure',
@@ -80,7 +93,7 @@ export function figureWordItems(start: number): CompletionItem[] {
     insert: `${wordsOf(id)} of `,
     continues: true,
     start,
-    rank: 30 + Math.min(index, 9),
+    rank: (had.has(id) ? 30 : 50) + leadingRank(id) + index / 1000,
     documentation: { title: label, origin: 'A figure of a definition or substance.', lines: [] },
   }));
 }
@@ -93,6 +106,11 @@ export function unitOfFigure(words: string): string | null {
 /** Whether every substance of the catalogue may have the figure of these words. */
 export function isMaterialFigure(words: string): boolean {
   return materialFigures.some(({ id }) => wordsOf(id) === words);
+}
+
+/** Whether a substance's card may give the figure of these words. */
+export function isGivenFigure(words: string): boolean {
+  return givenFigureRows.some(({ id }) => wordsOf(id) === words);
 }
 
 /** Shares of portions: `sodium in slurry`. */

@@ -6,16 +6,28 @@ import { allElements } from '../core/substance/elements.ts';
 import { allSubstances, findSubstance } from '../core/substance/catalogue.ts';
 import { formulaTextWithPhase } from '../core/substance/formula.ts';
 import type { Substance } from '../core/substance/substance.ts';
+import { cardOfSubstance } from '../scenario/material-card.ts';
+import { figureText } from '../wording/quantities.ts';
 import { fitRank, fits, type CompletionItem } from './completion-item.ts';
 import { writtenName } from './written-name.ts';
 
-/** @param typed the word so far, with an opening quote. */
-export function substanceItems(form: 'names' | 'formulas', typed: string, start: number): CompletionItem[] {
+/**
+ * @param typed the word so far, with an opening quote.
+ * @param details where given, only the substances in it are offered, each with what stands there.
+ */
+export function substanceItems(
+  form: 'names' | 'formulas',
+  typed: string,
+  start: number,
+  details?: ReadonlyMap<string, string>,
+): CompletionItem[] {
   const isQuoted = typed.startsWith("'");
   // In quotes a name may be written with blanks: `'sodium oleate'`.
   const bare = isQuoted ? typed.slice(1).replaceAll(' ', '_') : typed;
   return wordsOfCatalogue().flatMap(({ text, role, substance }) => {
     const order = ORDERS[form].indexOf(role);
+    const told = details ? details.get(substance.name) : detailOf(substance, role);
+    if (told === undefined) return [];
     if ((bare === '' && order !== 0) || (isQuoted && role === 'formula') || !fits(text, bare)) return [];
     const written = role === 'formula' ? text : writtenName(text);
     // Of names that begin alike the plain one comes first: `sodium` before `sodium_oleate`.
@@ -25,7 +37,7 @@ export function substanceItems(form: 'names' | 'formulas', typed: string, start:
       {
         label: text,
         role: 'substance' as const,
-        detail: detailOf(substance, role),
+        detail: told,
         insert: written,
         ...(isQuoted ? { filter: `'${typed.includes('_') ? text : text.replaceAll('_', ' ')}` } : {}),
         start,
@@ -35,6 +47,21 @@ export function substanceItems(form: 'names' | 'formulas', typed: string, start:
     ];
   });
 }
+
+/** The substances whose card has the property of this id, by name, each with its value. Made once an id. */
+export function substancesWith(id: string): ReadonlyMap<string, string> {
+  const known = propertyTexts.get(id);
+  if (known) return known;
+  const texts = new Map<string, string>();
+  for (const substance of allSubstances()) {
+    const property = cardOfSubstance(substance).properties.find((one) => one.id === id);
+    if (property && !texts.has(substance.name)) texts.set(substance.name, figureText(property));
+  }
+  propertyTexts.set(id, texts);
+  return texts;
+}
+
+const propertyTexts = new Map<string, ReadonlyMap<string, string>>();
 
 /** The chemical elements, by symbol. */
 export function elementItems(typed: string, start: number): CompletionItem[] {

@@ -31,7 +31,7 @@ export function toleranceOf({ dimension, kind }: Wanted): readonly Wanted[] {
 
 /** The units of the wanted dimensions, in their order. With none wanted, all that fit `typed`. */
 export function unitItems(wanted: readonly Wanted[], typed: string, start: number): CompletionItem[] {
-  const texts = wanted.length > 0 ? wanted.flatMap(unitsOf) : [...commonUnits(), ...allWords(typed === '')];
+  const texts = wanted.length > 0 ? wanted.flatMap(unitsOf) : [...FIRST, ...commonUnits(), ...allWords(typed === '')];
   const list = [...new Set(texts)].filter((text) => fits(text, typed));
   // Where anything may stand, what is typed says most: `kW` before `kWh/kg`.
   if (wanted.length === 0 && typed !== '') {
@@ -73,6 +73,9 @@ function allWords(withoutPrefixes: boolean): readonly string[] {
   words ??= [...new Set(listUnitWords().values())];
   return words.filter(({ prefix }) => prefix === '' || !withoutPrefixes).map(({ symbol }) => symbol);
 }
+
+/** Of those without a wanted dimension, what an engineer writes most stands first. */
+const FIRST = ['%', 'kg', 't', 'm3', 'kW', 'MW', 'MJ/kg', 'degC', 'bar', 'h', 'nmi', 'kn'];
 
 let common: readonly string[] | undefined;
 let words: readonly UnitWord[] | undefined;

@@ -4,6 +4,7 @@
 // asks for, where it asks for something.
 import { Comma, Compare, WordToken, type Token } from '../../grammar/tokens.ts';
 import { BASIS_WORDS, CONNECTIVE_WORDS } from '../../grammar/words.ts';
+import { functions } from '../scenario/functions.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { Behind } from './completion-behind.ts';
 import { functionItems } from './completion-functions.ts';
@@ -13,6 +14,7 @@ import {
   figureDetail,
   figureItems,
   figureWordItems,
+  isGivenFigure,
   isMaterial,
   isMaterialFigure,
   rowItems,
@@ -22,7 +24,7 @@ import {
   valueItems,
 } from './completion-names.ts';
 import type { CompletionPlace, Where } from './completion-place.ts';
-import { elementItems, substanceItems } from './completion-substances.ts';
+import { elementItems, substanceItems, substancesWith } from './completion-substances.ts';
 import { toleranceOf, unitItems, wantedOf, type Wanted } from './completion-units.ts';
 import { entryRow, wordsTaken, type WordsTaken } from './entry-rows.ts';
 
@@ -45,7 +47,7 @@ export function valueOffers(
   const numbers = (from: number, words: string): CompletionItem[] => [
     ...(from === start ? valueItems(scenario, wanted, own, start) : []),
     ...figureItems(scenario, words, from, MOST_WRITTEN_OUT),
-    ...figureWordItems(from),
+    ...figureWordItems(scenario, from),
     ...(from === start ? [...shareItems(scenario, words, from, MOST_WRITTEN_OUT), ...functionItems(start)] : []),
   ];
   const materials = (form: 'names' | 'formulas'): CompletionItem[] => [
@@ -56,10 +58,13 @@ export function valueOffers(
   switch (behind.kind) {
     case 'start':
       if (where.kind === 'equation') return materials('formulas');
+      if (functions.get(behind.call ?? '')?.takes === 'substance') return materials('names');
       return [
         ...listedItems(taken.listed, start),
         ...(taken.materials ? materials('names') : []),
+        ...(taken.formulas ? substanceItems('formulas', typed, start) : []),
         ...(taken.anything ? definitionItems(scenario, () => true, own, start) : []),
+        ...(taken.anything && typed !== '' ? substanceItems('names', typed, start) : []),
         ...(taken.numbers ? numbers(start, typed) : []),
       ];
     case 'number': {
@@ -69,7 +74,7 @@ export function valueOffers(
     case 'amount':
       if (where.kind === 'portion') return [...basisItems(start, true), ...materials('names')];
       if (taken.elements) return [...elementItems(typed, start), ...basisItems(start, true)];
-      return connectiveItems(connectivesAt(where), start);
+      return connectiveItems(where.kind === 'expression' ? behindOperand(where, behind) : connectivesAt(where), start);
     case 'basis':
       return taken.elements ? elementItems(typed, start) : materials('names');
     case 'rest':
@@ -77,7 +82,8 @@ export function valueOffers(
     case 'per':
       return unitItems([], typed, start);
     case 'word': {
-      const figures = taken.numbers && behind.start !== undefined ? numbers(behind.start, place.run) : [];
+      const isFigure = taken.numbers && taken.listed.length === 0 && behind.start !== undefined;
+      const figures = isFigure ? numbers(behind.start, place.run) : [];
       return [...figures, ...connectiveItems(connectivesAt(where), start)];
     }
     case 'of':
@@ -97,6 +103,9 @@ export function valueOffers(
           (definition) => figureDetail(definition, behind.words),
         ),
         ...(isMaterialFigure(behind.words) ? substanceItems('names', typed, start) : []),
+        ...(isGivenFigure(behind.words)
+          ? substanceItems('names', typed, start, substancesWith(behind.words.replaceAll(' ', '-')))
+          : []),
       ];
     case 'in':
       return ownersOf(scenario, behind, own, start);
@@ -111,7 +120,7 @@ export function valueOffers(
 
 /** What the words of a place may be. `anything`: nobody reads it yet, so it may name any definition. */
 export function takenAt(where: ValueWhere): WordsTaken & { readonly anything: boolean } {
-  const nothing = { listed: [], materials: false, elements: false, numbers: true, anything: false };
+  const nothing = { listed: [], materials: false, elements: false, formulas: false, numbers: true, anything: false };
   if (where.kind !== 'entry') return { ...nothing, materials: where.kind === 'equation' };
   const row = entryRow(where.body.kind, where.entry);
   return row ? { ...wordsTaken(row.reader), anything: false } : { ...nothing, anything: true };
@@ -205,6 +214,14 @@ function connectiveItems(words: readonly string[], start: number): CompletionIte
     start,
     rank: 90 + index,
   }));
+}
+
+/** Behind a whole operand of an expression. */
+function behindOperand(
+  { claim }: Extract<Where, { kind: 'expression' }>,
+  { share }: Extract<Behind, { kind: 'amount' }>,
+): readonly string[] {
+  return [...(share ? ['by'] : []), ...(claim ? ['within'] : [])];
 }
 
 function connectivesAt(where: ValueWhere): readonly string[] {

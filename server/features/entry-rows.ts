@@ -2,6 +2,7 @@
 // be. The tables are the only source; a kind without one has no rows. Knows no text and no cursor.
 import type { EntryRow, Reader } from '../scenario/entries.ts';
 import { kindOf } from '../scenario/kinds/registry.ts';
+import { formulaReader } from '../scenario/readers.ts';
 
 /** The rows of a kind's table, in the table's order; none for a kind that is unknown or not evaluated yet. */
 export function entryRows(kind: string): readonly EntryRow<unknown>[] {
@@ -18,6 +19,7 @@ export interface WordsTaken {
   /** Substances and definitions. */
   readonly materials: boolean;
   readonly elements: boolean;
+  readonly formulas: boolean;
   /** Names of values, figures and functions: anything that comes to a number. */
   readonly numbers: boolean;
 }
@@ -28,6 +30,7 @@ export function wordsTaken(reader: Reader<unknown>): WordsTaken {
     listed: reader.words ?? [],
     materials: reader.names ?? false,
     elements,
+    formulas: reader === formulaReader,
     numbers: reader.unit !== undefined && !elements,
   };
 }

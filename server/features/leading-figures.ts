@@ -5,9 +5,14 @@ import type { EvaluatedDefinition, Figure } from '../scenario/scenario.ts';
 /** The figures of a definition, the most asked-for first. */
 export function leadingFigures(definition: EvaluatedDefinition): readonly Figure[] {
   return definition.figures
-    .map((figure, index) => ({ figure, rank: RANKS.get(figure.id) ?? RANKS.size + index }))
+    .map((figure, index) => ({ figure, rank: leadingRank(figure.id) + index / 1000 }))
     .sort((left, right) => left.rank - right.rank)
     .map(({ figure }) => figure);
+}
+
+/** How soon a figure is looked for: small is soon; one number for all that are not named here. */
+export function leadingRank(id: string): number {
+  return RANKS.get(id) ?? RANKS.size;
 }
 
 const RANKS: ReadonlyMap<string, number> = new Map(

@@ -53,7 +53,7 @@ describe('at the start of a line in a definition', () => {
     ['no portions in a reaction', 'reaction r {\n  $0\n}\n', { has: ['state'], lacks: ['rest'] }],
     ['a kind that is not worked out', 'engine e {\n  $0\n}\n', { first: ['acknowledge'] }],
     ['an entry that is broken further on', 'blend f {\n  stored: (\n  $0\n}\n', { lacks: ['stored'] }],
-    ['what holds otherwise', 'blend f {\n  st$0\n}\n', { has: ['stored: 25 °C, 1 bar'] }],
+    ['what holds otherwise', 'blend f {\n  st$0\n}\n', { has: ['stored: otherwise 25 °C, 1 bar'] }],
   ]);
 });
 
@@ -102,6 +102,8 @@ describe('in the value of an entry', () => {
     ],
     ['an element by its name', 'substance x {\n  composition: 84 % C, 3 % Sul$0\n}\n', {}],
     ['products as formulas or names', 'blend f {\n  products: CO2(g), H2O$0\n}\n', { has: ['H2O(g)', 'H2O(l)'] }],
+    ['formulas', 'substance x {\n  formula: Na2CO$0\n}\n', { first: ['Na2CO3(cr)'] }],
+    ['a catalogue substance where nobody reads yet', 'burn b {\n  fuel: gas_o$0\n}\n', { first: ['gas_oil'] }],
     ['any name where nobody reads yet', `${SLURRY}burn b {\n  fuel: $0\n}\n`, { first: ['slurry'] }],
     ['connectives where nobody reads yet', 'duty d {\n  sail: 38 nmi $0\n}\n', { has: ['at', 'on'] }],
     [
@@ -195,6 +197,15 @@ describe('in an expression', () => {
     ['behind a division', `${SHIP}let a = 2 kg / d$0\n`, { first: ['days'] }],
     ['on a line of its own', `${SHIP}let a = 2 *\n  d$0\n`, { first: ['days'] }],
     ['a quoted name', "let 'my value' = 1\nlet b = 'my$0\n", { first: ['my value'] }],
+    ['substances inside a call that takes one', 'let a = molar_mass(Na2C$0\n', { first: ['Na2CO3(cr)'] }],
+    ['substances with the figure asked for', 'expect flash point of $0\n', { has: ['methanol'], lacks: ['argon'] }],
+    ['a claim behind a whole figure', `${SLURRY}expect density of slurry $0\n`, { first: ['within'], lacks: ['of'] }],
+    ['a basis behind a whole share', `${SLURRY}expect sodium in slurry $0\n`, { first: ['by', 'within'] }],
+    [
+      'a figure, then whose',
+      `${SLURRY}expect lo$0\n`,
+      { first: ['lower heating value', 'lower heating value of slurry'] },
+    ],
     ['before an unfinished rest', `${SHIP}let a = da$0 +\nlet b = (\n`, { first: ['days'] }],
   ]);
   checkNone([
