@@ -3,6 +3,7 @@
 // Source of the entry point's form: VS Code's "Testing Extensions" (a module that exports `run`).
 import './activation.ts';
 import './answers.ts';
+import './typing.ts';
 import { runRegistered } from './harness.ts';
 
 /** Called by the editor once its window is up. Rejects when a test failed. */
