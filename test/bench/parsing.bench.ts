@@ -1,5 +1,6 @@
 // Times the way from text to tree, and from tree to findings, without a protocol: a large file parsed as a whole and after
 // each key, and evaluated with nothing known by heart, once in a fresh program and then warm.
+import { spawnSync } from 'node:child_process';
 import { parse } from '../../grammar/parse.ts';
 import { isUnitWord } from '../../server/core/quantity/read-unit.ts';
 import { findingsOf } from '../../server/findings/registry.ts';
@@ -12,11 +13,16 @@ const text = largeScenario();
 const lines = text.split('\n').length;
 const work = (): unknown => findingsOf(evaluate('large.stoke', () => ({ text })));
 
-const first = await timed(work);
+// Started by itself below, to do the one thing that can be done only once in a program.
+if (process.argv.includes('--cold')) {
+  console.log(JSON.stringify(await timed(work)));
+  process.exit(0);
+}
+const colds = Array.from({ length: 7 }, coldRound);
 print({
-  name: `whole evaluation cold (${lines} lines, first of the program)`,
-  value: first.ms,
-  cpu: first.cpuMs,
+  name: `whole evaluation cold, first of the program (${lines} lines), least of seven programs`,
+  value: Math.min(...colds.map(({ ms }) => ms)),
+  cpu: Math.min(...colds.map(({ cpuMs }) => cpuMs)),
   unit: 'ms',
   budget: 250,
 });
@@ -38,6 +44,13 @@ for (const key of keystrokes(text, 600)) {
   );
 }
 printRounds('re-parse after a key', reparses, { of: 'p95', budget: 3 });
+
+/** Other work on the machine only ever adds to it, so the least of several is the nearest to the truth. */
+function coldRound(): Round {
+  const { stdout } = spawnSync(process.execPath, [process.argv[1] ?? '', '--cold'], { encoding: 'utf8' });
+  const number = (key: string): number => Number(new RegExp(`"${key}":([\\d.e+-]+)`).exec(stdout)?.[1]);
+  return { ms: number('ms'), cpuMs: number('cpuMs') };
+}
 
 async function many(count: number, body: () => unknown): Promise<Round[]> {
   const rounds: Round[] = [];
