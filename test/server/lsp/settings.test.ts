@@ -40,9 +40,12 @@ describe('abilities', () => {
     { capabilities: null },
     { capabilities: { textDocument: 7 }, workspaceFolders: [null, 3] },
   ])('of %j are none', (params) => {
-    const { folders, ...abilities } = abilitiesOf(params);
+    const { folders, completion, ...abilities } = abilitiesOf(params);
     expect(folders).toEqual([]);
     expect(Object.values(abilities).every((ability) => ability === false)).toBe(true);
+    const { suggestCommand, ...others } = completion;
+    expect(suggestCommand).toBeNull();
+    expect(Object.values(others).every((ability) => ability === false)).toBe(true);
   });
 
   it('are read where they are said', () => {
@@ -52,15 +55,19 @@ describe('abilities', () => {
           textDocument: {
             hover: { contentFormat: ['plaintext', 'markdown'] },
             codeAction: { codeActionLiteralSupport: {} },
+            completion: { completionItem: { snippetSupport: true, documentationFormat: ['markdown'] } },
+            semanticTokens: {},
           },
           workspace: { configuration: true },
         },
-        initializationOptions: { readFile: true },
+        initializationOptions: { readFile: true, suggestCommand: 'suggest' },
         workspaceFolders: [{ uri: 'file:///C%3A/ships', name: 'ships' }],
       }),
     ).toMatchObject({
       markdown: true,
       codeActions: true,
+      semanticTokens: true,
+      completion: { snippets: true, markdown: true, insertReplace: false, suggestCommand: 'suggest' },
       configuration: true,
       readFile: true,
       folders: ['file:///c%3A/ships'],
