@@ -16,6 +16,7 @@ import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
+import { kindSuspended } from './kind-suspended.ts';
 import { kindNotEvaluated } from './kind-not-evaluated.ts';
 import { nameAcknowledged } from './name-acknowledged.ts';
 import { nameArguments } from './name-arguments.ts';
@@ -124,6 +125,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/phase': rangePhase,
   'range/positive': rangePositive,
   'expect/failed': expectFailed,
+  'kind/suspended': kindSuspended,
   'kind/not-evaluated': kindNotEvaluated,
   'program/failed': programFailed,
 };

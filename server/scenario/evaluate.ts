@@ -122,7 +122,8 @@ function gather(
     place: { path, start: problem.span.start, end: problem.span.end },
   }));
   // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
-  const facts = problems.length >= suspendingProblems ? problems : [...problems, ...computed];
+  const facts =
+    problems.length >= suspendingProblems ? suspended(problems, computed.length) : [...problems, ...computed];
   const file = { path, used, tree, title, definitions, values, expectations, facts, meanings: [] };
   return lazily<EvaluatedFile>(file, { meanings: () => meaningsOf(tree, answers, placedByName) });
 }
@@ -135,6 +136,13 @@ function meaningsOf(
   const meanings: PlacedMeaning[] = [];
   for (const placed of sections) append(meanings, answers.get(placed)?.meanings(placedByName) ?? []);
   return meanings;
+}
+
+/** The syntax problems, and that more is kept back, where more is: nothing stays silent without a word. */
+function suspended(problems: readonly PlacedFact[], hidden: number): readonly PlacedFact[] {
+  const [first] = problems;
+  if (!first || hidden === 0) return problems;
+  return [{ fact: { code: 'kind/suspended', problems: problems.length, hidden }, place: first.place }, ...problems];
 }
 
 /** One by one: a definition of 100,000 lines has more facts than a call can have arguments. */

@@ -183,6 +183,8 @@ export type Fact =
       readonly limit: Quantity;
       readonly tolerance: Quantity | null;
     }
+  /** So many syntax problems that what is computed of the file is not told; `hidden` findings are kept back. */
+  | { readonly code: 'kind/suspended'; readonly problems: number; readonly hidden: number }
   | { readonly code: 'kind/not-evaluated'; readonly kind: string; readonly name: string }
   /** An `acknowledge` line that cannot count: only hazards can be acknowledged, by a known code, with a reason. */
   | { readonly code: 'name/acknowledged'; readonly why: 'not-a-hazard' | 'no-reason'; readonly acknowledged: string }

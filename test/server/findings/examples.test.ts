@@ -11,10 +11,7 @@ import { evaluate } from '../../../server/scenario/evaluate.ts';
 const FOLDER = 'examples/errors';
 const EXAMPLES = readdirSync(FOLDER).filter((name) => name.endsWith('.stoke'));
 
-/**
- * What no small file can show: a text beyond the limit, a fault of our own, and two slips that the grammar tells first, as
- * `syntax/missing`.
- */
+/** What no small file can show: a text beyond the limit, and a fault of our own. */
 const WITHOUT_EXAMPLE = ['program/failed', 'syntax/too-large'];
 
 function findingsIn(example: string): readonly Finding[] {
@@ -31,6 +28,8 @@ test('every code has its example', () => {
 
 test.each(EXAMPLES)('%s gives its finding and no other', (example) => {
   const codes = new Set(findingsIn(example).map(({ code }) => code));
+  // What is suspended is suspended by sixteen lines that cannot be read.
+  if (example === 'kind-suspended.stoke') codes.delete('syntax/missing');
   expect([...codes]).toEqual([example.replace('.stoke', '').replace('-', '/')]);
 });
 

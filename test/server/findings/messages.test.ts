@@ -353,6 +353,10 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     '`a < 2` does not hold: found 2, exactly the limit.',
   ],
   [
+    { code: 'kind/suspended', problems: 17, hidden: 2 },
+    '2 further findings about this file are told once fewer than 16 of its lines are unreadable (now 17).',
+  ],
+  [
     { code: 'kind/not-evaluated', kind: 'engine', name: 'main' },
     '`main` is an engine, which this version reads but does not work out yet. What refers to it has no value.',
   ],
@@ -387,6 +391,7 @@ describe('every code', () => {
     expect(mild.sort()).toEqual([
       'information balance/water-missing',
       'information kind/not-evaluated',
+      'information kind/suspended',
       'information name/like-catalogue',
       'information range/phase',
       'warning balance/contradiction',

@@ -226,5 +226,7 @@ describe('many syntax slips', () => {
       evaluate('main.stoke', () => ({ text: text(slips) })).files[0]?.facts.map(({ fact }) => fact.code) ?? [];
     expect(codes(15)).toContain('unit/mismatch');
     expect(codes(16)).not.toContain('unit/mismatch');
+    expect(codes(16)).toContain('kind/suspended');
+    expect(codes(15)).not.toContain('kind/suspended');
   });
 });
