@@ -1,6 +1,7 @@
 // Every word of one statement that gives or may use a name of the scenario, from the syntax tree, so that names are found
 // in definitions too that are not evaluated yet. Knows no bindings: whether such a word stands for anything is asked of
 // the scenario. Invariant: a section is looked through once, and again only when its text has changed.
+import { expressionsIn } from '../../grammar/walk.ts';
 import type { Entry, Expression, Line, Section, Span, Word } from '../../grammar/tree.ts';
 import { entryWordNamesThing } from '../scenario/kinds/registry.ts';
 import { entryRow } from './entry-rows.ts';
@@ -78,42 +79,15 @@ function mayBeName({ text }: Word, { words }: Entry, kind: string, owner: string
   return entryRow(kind, words) ? entryWordNamesThing(kind, words, text) : text !== owner;
 }
 
-/** Iterative: chains of operators are as long as the grammar allows. */
 function inExpression(expression: Expression | undefined, uses: NameUse[]): void {
-  const rest = expression ? [expression] : [];
-  for (let item = rest.pop(); item; item = rest.pop()) {
-    switch (item.kind) {
-      case 'word':
-        add(item, 'use', uses);
-        break;
-      case 'reference':
-        add(item.row, 'use', uses);
-        add(item.name, 'use', uses);
-        if (item.at) rest.push(item.at);
-        break;
-      case 'membership':
-        add(item.substance, 'use', uses);
-        add(item.name, 'use', uses);
-        break;
-      case 'call':
-        for (const argument of item.arguments) rest.push(argument);
-        break;
-      case 'bracket':
-        if (item.inner) rest.push(item.inner);
-        break;
-      case 'unary':
-        rest.push(item.operand);
-        break;
-      case 'binary':
-      case 'comparison':
-        rest.push(item.left, item.right);
-        break;
-      case 'within':
-        rest.push(item.left, item.target);
-        break;
-      case 'quantity':
-      case 'text':
-      case 'lone-unit':
+  for (const item of expressionsIn(expression)) {
+    if (item.kind === 'word') add(item, 'use', uses);
+    else if (item.kind === 'reference') {
+      add(item.row, 'use', uses);
+      add(item.name, 'use', uses);
+    } else if (item.kind === 'membership') {
+      add(item.substance, 'use', uses);
+      add(item.name, 'use', uses);
     }
   }
 }

@@ -2,6 +2,7 @@
 // words, codes. Reads the syntax tree and the kinds' tables; what a name stands for is left open, because that changes
 // without the statement. Invariant: a section is walked once, and again only when its text has changed; the words come in
 // the order of the text and do not overlap.
+import { expressionsIn } from '../../grammar/walk.ts';
 import type { Entry, Expression, Line, Section, Span, UnitWords, Word } from '../../grammar/tree.ts';
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 import { functions } from '../scenario/functions.ts';
@@ -85,10 +86,8 @@ function inEntry(entry: Entry, kind: string, words: WalkedWord[]): void {
   }
 }
 
-/** Iterative: chains of operators are as long as the grammar allows. */
 function inExpression(expression: Expression | undefined, words: WalkedWord[]): void {
-  const rest = expression ? [expression] : [];
-  for (let item = rest.pop(); item; item = rest.pop()) {
+  for (const item of expressionsIn(expression)) {
     switch (item.kind) {
       case 'quantity':
         addUnit(item.unit, words);
@@ -104,7 +103,6 @@ function inExpression(expression: Expression | undefined, words: WalkedWord[]): 
         words.push({ span: item.wordsSpan, role: 'figure' });
         addName(item.row, words);
         addName(item.name, words);
-        if (item.at) rest.push(item.at);
         break;
       case 'membership':
         addName(item.substance, words);
@@ -112,23 +110,11 @@ function inExpression(expression: Expression | undefined, words: WalkedWord[]): 
         break;
       case 'call':
         if (functions.has(item.name.text)) words.push({ span: item.name.span, role: 'function' });
-        for (const argument of item.arguments) rest.push(argument);
-        break;
-      case 'bracket':
-        if (item.inner) rest.push(item.inner);
-        break;
-      case 'unary':
-        rest.push(item.operand);
-        break;
-      case 'binary':
-      case 'comparison':
-        rest.push(item.left, item.right);
         break;
       case 'within':
-        rest.push(item.left, item.target);
         addUnit(item.tolerance?.unit, words);
         break;
-      case 'text':
+      default:
     }
   }
 }

@@ -4,6 +4,7 @@
 // but for names on a cycle.
 
 import type { Expression, Line, Span, Statement, Word } from '../../grammar/tree.ts';
+import { expressionsIn } from '../../grammar/walk.ts';
 import { entryWordNamesThing } from './kinds/registry.ts';
 
 export interface Mention {
@@ -46,47 +47,18 @@ function mentionsInLine(line: Line, kind: string, mentions: Mention[]): void {
   }
 }
 
-/** Adds the names an expression mentions. Iterative: an expression may be nested as deeply as the grammar allows. */
 function mentionsInExpression(expression: Expression, mentions: Mention[]): void {
-  const rest: Expression[] = [expression];
   const name = (word: Word | undefined): void => {
     if (word) mentions.push({ name: word.text, span: word.span });
   };
-  for (let item = rest.pop(); item; item = rest.pop()) {
-    switch (item.kind) {
-      case 'word':
-        name(item);
-        break;
-      case 'reference':
-        name(item.row);
-        name(item.name);
-        if (item.at) rest.push(item.at);
-        break;
-      case 'membership':
-        name(item.substance);
-        name(item.name);
-        break;
-      case 'call':
-        // One by one: a call can be written with more arguments than a call of ours can have.
-        for (let index = item.arguments.length - 1; index >= 0; index--) {
-          const argument = item.arguments[index];
-          if (argument) rest.push(argument);
-        }
-        break;
-      case 'bracket':
-        if (item.inner) rest.push(item.inner);
-        break;
-      case 'unary':
-        rest.push(item.operand);
-        break;
-      case 'binary':
-      case 'comparison':
-        rest.push(item.right, item.left);
-        break;
-      case 'within':
-        rest.push(item.target, item.left);
-        break;
-      default:
+  for (const item of expressionsIn(expression)) {
+    if (item.kind === 'word') name(item);
+    else if (item.kind === 'reference') {
+      name(item.row);
+      name(item.name);
+    } else if (item.kind === 'membership') {
+      name(item.substance);
+      name(item.name);
     }
   }
 }
