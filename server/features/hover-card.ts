@@ -20,8 +20,13 @@ export function cardLines({ properties }: MaterialCard): HoverLine[] {
   return properties.map((property) => {
     const { label, condition, source } = property;
     const value = condition === '' ? figureText(property) : `${figureText(property)} ${condition}`;
-    return { label, text: source === '' ? value : `${value} (${shortened(source, 90)})` };
+    return { label, text: source === '' ? value : `${value} (${authorAndYear(source)})` };
   });
+}
+
+/** A hover has room for who and when; the whole source is in the catalogue and in a figure's working. */
+function authorAndYear(source: string): string {
+  return /^.{1,60}? \(\d{4}\)/.exec(source)?.[0] ?? shortened(source, 60);
 }
 
 function cardOrigin({ origin, aliases }: MaterialCard): string {
