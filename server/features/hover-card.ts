@@ -26,7 +26,8 @@ export function cardLines({ properties }: MaterialCard): HoverLine[] {
 
 /** A hover has room for who and when; the whole source is in the catalogue and in a figure's working. */
 function authorAndYear(source: string): string {
-  return /^.{1,60}? \(\d{4}\)/.exec(source)?.[0] ?? shortened(source, 60);
+  const [, author, year] = /^(.{1,60}?) \((\d{4})\)/.exec(source) ?? [];
+  return author && year ? `${author}, ${year}` : shortened(source, 60);
 }
 
 function cardOrigin({ origin, aliases }: MaterialCard): string {
