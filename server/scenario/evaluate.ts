@@ -8,7 +8,8 @@ import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import { bindNames } from './bind.ts';
 import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
-import { lazily, placeAnswer, type PlacedAnswer, type PlacedByName } from './placing.ts';
+import { lazily } from './lazily.ts';
+import { placeAnswer, type PlacedAnswer, type PlacedByName } from './placing.ts';
 import { Questions, type AnswerStore } from './questions.ts';
 import type {
   EvaluatedDefinition,

@@ -24,6 +24,7 @@ import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
 import { propagate } from '../core/quantity/uncertainty.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../core/substance/elements.ts';
 import { molarMassKgPerMol } from '../core/substance/formula.ts';
+import { lazily } from './lazily.ts';
 import type { Material } from './material.ts';
 import { sourceText } from './material-card.ts';
 import type { Absent, Figure, Table } from './scenario.ts';
@@ -162,8 +163,9 @@ function workOut(material: Material): MaterialAnswer {
     const outcome = outcomes[index];
     if (outcome && Number.isFinite(outcome.value)) {
       const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
-      const working = workingOf(row, material, burningOf(row.id, heats));
-      figures.push({ id: row.id, label: row.label, quantity, unit: row.unit, working });
+      const { id, label, unit, method } = row;
+      const figure: Figure = { id, label, quantity, unit, working: unreadWorking(method) };
+      figures.push(lazily(figure, { working: () => workingOf(row, material, burningOf(id, heats)) }));
     } else {
       const missing = missingFor(row.id, material, burningOf(row.id, heats).heat);
       if (missing.length > 0) absent.set(row.id, missing);
@@ -290,6 +292,11 @@ function isExpected(id: FigureId, material: Material): boolean {
 function burningOf(id: FigureId, { ruled, hydroxide, oxide }: Burnings): Burning {
   if (id === 'hydroxide-lower-heating-value' || id === 'water-missing') return hydroxide ?? ruled;
   return id === 'oxide-lower-heating-value' ? (oxide ?? ruled) : ruled;
+}
+
+/** Stands in for a working until it is read; `lazily` puts the real one in its place. */
+function unreadWorking(method: MethodId): Working {
+  return { method, inputs: [], sources: [], assumptions: [] };
 }
 
 function workingOf(row: FigureRow, material: Material, { slate, heat }: Burning): Working {

@@ -4,6 +4,7 @@
 
 import type { PlacedSection } from '../../grammar/tree.ts';
 import type { Answer } from './answer.ts';
+import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
 import type {
   EvaluatedDefinition,
@@ -124,22 +125,6 @@ export class PlacedAnswer {
     // Copied field for field, the copy is of the value's own type; the compiler cannot follow that.
     return withPlaces(value, this.#innerPlaces, knownHoldersOf(this.answer)) as Value;
   }
-}
-
-/** The record with some of its fields worked out when they are first read. */
-export function lazily<Of extends object>(value: Of, fields: { readonly [Key in keyof Of]?: () => Of[Key] }): Of {
-  for (const [key, workOut] of Object.entries<(() => unknown) | undefined>(fields)) {
-    Object.defineProperty(value, key, {
-      enumerable: true,
-      configurable: true,
-      get() {
-        const found = workOut?.();
-        Object.defineProperty(value, key, { value: found, enumerable: true });
-        return found;
-      },
-    });
-  }
-  return value;
 }
 
 /** The lists and records of an answer that hold a place, at whatever depth: found once, since most hold none. */
