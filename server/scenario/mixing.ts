@@ -13,7 +13,7 @@ import { propagate, type Propagated } from '../core/quantity/uncertainty.ts';
 import type { Context } from './context.ts';
 import type { Material, PortionShare } from './material.ts';
 import { materialNamed } from './materials.ts';
-import { readAmount, type WrittenAmount } from './portions.ts';
+import { readAmount, reportMixtureFault, type WrittenAmount } from './portions.ts';
 
 /** A portion whose amount and substance could both be read. */
 export interface Part {
@@ -58,8 +58,18 @@ export interface Mixed {
   readonly biogenicShare: Quantity;
 }
 
+/** The parts of a definition mixed; null when they do not make a whole, which is said at the part to blame. */
+export function mixOrReport(definition: Definition, parts: readonly Part[], context: Context): Mixed | null {
+  const mixed = mixParts(parts);
+  if (!('fault' in mixed)) return mixed;
+  const named = parts.map(({ material, amount }) => ({ name: material.name, amount }));
+  const header = definition.name?.span ?? definition.header;
+  reportMixtureFault(mixed, named, definition.name?.text ?? '', header, context);
+  return null;
+}
+
 /** The shares and properties of the parts together, with their uncertainty; a fault says why there are none. */
-export function mixParts(parts: readonly Part[]): Mixed | MixtureFault {
+function mixParts(parts: readonly Part[]): Mixed | MixtureFault {
   const inputs = inputsOf(parts);
   const values = inputs.map((input) => input.value);
   const centre = massSharesOf(mixtureParts(parts, values, numbersOf(parts, values)));

@@ -13,8 +13,7 @@ import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import type { Material, MissingProperty, PortionShare } from '../material.ts';
 import { answerMaterial, materialFigures, type FigureRow, type MaterialAnswer } from '../material-figures.ts';
-import { mixParts, readParts, type Mixed, type Part } from '../mixing.ts';
-import { reportMixtureFault } from '../portions.ts';
+import { mixOrReport, readParts, type Mixed, type Part } from '../mixing.ts';
 import type { PortionState } from '../portion-state.ts';
 import { formulasReader, materialReader, stateReader, type State } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
@@ -67,16 +66,9 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const header = definition.name?.span ?? definition.header;
   const parts = readParts(definition, context);
   const isBroken = definition.lines.some((line) => line.kind === 'broken-line') || broken.has('products');
-  if (!parts || (isBroken && parts.length === 0)) return unknownAnswer(evaluated);
-
-  const mixed = mixParts(parts);
-  if ('fault' in mixed) {
-    // A line that could not be read may be the very portion that is missing: its own finding says enough.
-    const named = parts.map((part) => ({ name: part.material.name, amount: part.amount }));
-    if (!isBroken) reportMixtureFault(mixed, named, name, header, context);
-    return unknownAnswer(evaluated);
-  }
-  if (isBroken) return unknownAnswer(evaluated);
+  // A line that could not be read may be the very portion that is missing: its own finding says enough.
+  const mixed = parts && !isBroken ? mixOrReport(definition, parts, context) : null;
+  if (!parts || !mixed) return unknownAnswer(evaluated);
 
   const material = materialOf(parts, mixed, name, read.products?.value ?? null);
   const answer = answerMaterial(material);

@@ -18,8 +18,7 @@ import { molarMassKgPerMol, parseFormula } from '../../core/substance/formula.ts
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
 import type { FigureRow } from '../material-figures.ts';
-import { mixParts, readParts, type Part } from '../mixing.ts';
-import { reportMixtureFault } from '../portions.ts';
+import { mixOrReport, readParts, type Part } from '../mixing.ts';
 import { quantityReader, stateReader } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
 import type { Working, WorkingInput } from '../working.ts';
@@ -69,13 +68,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const header = definition.name?.span ?? definition.header;
   const isBroken = broken.size > 0 || definition.lines.some((line) => line.kind === 'broken-line');
   const parts = readParts(definition, context);
-  if (!parts || isBroken) return unknownAnswer(evaluated);
-  const mixed = mixParts(parts);
-  if ('fault' in mixed) {
-    const named = parts.map((part) => ({ name: part.material.name, amount: part.amount }));
-    reportMixtureFault(mixed, named, name, header, context);
-    return unknownAnswer(evaluated);
-  }
+  const mixed = parts && !isBroken ? mixOrReport(definition, parts, context) : null;
+  if (!parts || !mixed) return unknownAnswer(evaluated);
   if (read.relativeHumidity && read.humidityRatio) {
     const { wordsSpan } = read.humidityRatio.entry;
     const [first, second] = [read.relativeHumidity.entry.words, read.humidityRatio.entry.words];

@@ -1,6 +1,6 @@
-// Equilibrium constants of written reactions at temperature against the tables' own log Kf columns.
+// Equilibrium constants of written reactions at temperature against those worked from the tables' own rows.
 // The fit keeps G/RT of every phase within 0.005, so log10 K of a reaction of up to four species may be off by
-// 4 × 0.005 / ln 10 = 0.009; the printed digits add 0.0005 each.
+// 4 × 0.005 / ln 10 = 0.009; the rows' digits add less than 0.001.
 import { readFileSync } from 'node:fs';
 import { expect, test } from 'vitest';
 import { checkFacts, figureOf } from '../../support/facts.ts';
