@@ -73,9 +73,11 @@ async function bundle(source, name, options) {
     platform: 'node',
     target: 'node20',
     logLevel: 'error',
-    // Packages in CommonJS look for `require`, which a module does not have by itself.
+    // Packages in CommonJS look for `require`, which a module does not have by itself. Where a package has modules too,
+    // they are taken: not every other form of one can be bundled.
     ...(options.format === 'esm'
       ? {
+          mainFields: ['module', 'main'],
           banner: {
             js: "import { createRequire } from 'node:module'; const require = createRequire(import.meta.url);",
           },
