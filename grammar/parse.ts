@@ -67,6 +67,11 @@ export function parseSection(text: string, isUnit: IsUnit): Section {
   return { text, doc: docText(comments, first.startOffset), statement, problems: problems.slice(0, MOST_PROBLEMS) };
 }
 
+/** Whether some sections of the file were left unread, because it is too large. */
+export function isPartial(tree: SyntaxTree): boolean {
+  return tree.fileProblems.some(({ code }) => code === 'syntax/too-large');
+}
+
 /** The syntax problems of a file with offsets in the file, in order; no more than `MOST_PROBLEMS`. */
 export function problemsOf(tree: SyntaxTree): Problem[] {
   const problems = [...tree.fileProblems];

@@ -12,7 +12,7 @@ import { textReport } from '../report/text.ts';
 import { evaluate } from '../scenario/evaluate.ts';
 import { ExitCode } from './exit-codes.ts';
 import type { Io } from './io.ts';
-import { eachOnce, readerFor, readNamedFile, STANDARD_INPUT } from './scenario-files.ts';
+import { eachOnce, readerFor, readNamedFile, Spellings, STANDARD_INPUT } from './scenario-files.ts';
 import { sayProgramFault } from './program-fault.ts';
 
 export type Format = 'text' | 'json' | 'csv';
@@ -28,7 +28,9 @@ export function answerFiles(names: readonly string[], extent: Extent, options: A
   const answers: Answer[] = [];
   let unreadable = false;
   let faulty = false;
-  for (const name of eachOnce(names, io)) {
+  const asked = eachOnce(names, io);
+  const spellings = new Spellings(asked, io);
+  for (const name of asked) {
     const named = readNamedFile(name, io);
     if ('fault' in named) {
       unreadable = true;
@@ -37,7 +39,7 @@ export function answerFiles(names: readonly string[], extent: Extent, options: A
       continue;
     }
     try {
-      const scenario = evaluate(named.path, readerFor(named, io));
+      const scenario = evaluate(named.path, readerFor(named, spellings, io));
       answers.push({ scenario, findings: findingsOf(scenario) });
     } catch (error) {
       faulty = true;

@@ -34,7 +34,7 @@ export function eachOnce(names: readonly string[], io: Io): string[] {
 
 /** The text of a file named on the command line, or of standard input; a fault in words when it cannot be had. */
 export function readNamedFile(name: string, io: Io): NamedFile {
-  const given = name.replaceAll(path.win32.sep, path.sep === path.win32.sep ? '/' : path.win32.sep);
+  const given = asGiven(name);
   try {
     const bytes = name === STANDARD_INPUT ? io.input() : readBytes(path.resolve(io.folder, name));
     const text = decoded(bytes);
@@ -45,25 +45,54 @@ export function readNamedFile(name: string, io: Io): NamedFile {
   }
 }
 
+/** The one spelling that each file of a run goes by: as named on the command line, else as first reached. */
+export class Spellings {
+  readonly #known = new Map<string, string>();
+
+  constructor(
+    named: readonly string[],
+    private readonly io: Io,
+  ) {
+    for (const name of named) if (name !== STANDARD_INPUT) this.of(asGiven(name));
+  }
+
+  of(file: string): string {
+    const absolute = path.resolve(this.io.folder, file);
+    const known = this.#known.get(absolute) ?? file;
+    this.#known.set(absolute, known);
+    return known;
+  }
+}
+
 /** A reader for one named file, already read, and all that it uses. */
-export function readerFor(named: Extract<NamedFile, { text: string }>, io: Io): (path: string) => ReadAnswer {
+export function readerFor(
+  named: Extract<NamedFile, { text: string }>,
+  spellings: Spellings,
+  io: Io,
+): (path: string) => ReadAnswer {
   const limit = limitOf(named.path, io);
   return (used) => {
     if (used === named.path) return { text: named.text };
+    const address = spellings.of(used);
     const absolute = path.resolve(io.folder, used);
-    if (!isInside(absolute, limit)) return { fault: 'outside', detail: `Only files in ${limit} may be used.` };
+    if (!isInside(absolute, limit)) return { fault: 'outside', address, detail: `Only files in ${limit} may be used.` };
     try {
       // Looked at before it is opened: opening a named pipe that nobody writes to would wait for ever.
-      if (!statSync(absolute).isFile()) return { fault: 'unreadable', detail: 'It is not a file.' };
+      if (!statSync(absolute).isFile()) return { fault: 'unreadable', address, detail: 'It is not a file.' };
       if (!isInside(realpathSync(absolute), limit)) {
-        return { fault: 'outside', detail: `It is a link to a file outside ${limit}.` };
+        return { fault: 'outside', address, detail: `It is a link to a file outside ${limit}.` };
       }
-      return { text: decoded(readBytes(absolute)).replace(/^\ufeff/, '') };
+      return { text: decoded(readBytes(absolute)).replace(/^\ufeff/, ''), address };
     } catch (error) {
       const { kind, words } = faultOf(error);
-      return kind === 'missing' ? { fault: kind } : { fault: kind, detail: words };
+      return kind === 'missing' ? { fault: kind, address } : { fault: kind, address, detail: words };
     }
   };
+}
+
+/** With `/` on every machine. */
+function asGiven(name: string): string {
+  return name.replaceAll(path.win32.sep, path.sep === path.win32.sep ? '/' : path.win32.sep);
 }
 
 /** The folder whose files may be used, with its links followed. */

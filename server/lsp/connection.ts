@@ -43,9 +43,9 @@ export function startServer(connection: Connection, host: Host = {}): void {
   };
 
   const documents = new OpenDocuments();
-  const files = new UsedFiles((uri) => {
+  const files = new UsedFiles((uri, limits) => {
     if (abilities.readFile) return connection.sendRequest(readFileRequest, { uri });
-    if (host.readFile) return host.readFile(uri);
+    if (host.readFile) return host.readFile(uri, limits);
     return Promise.resolve({ fault: 'unreadable', detail: 'This editor does not hand files to the language server.' });
   });
   const evaluations = new Evaluations(documents, files, () => folders, log);

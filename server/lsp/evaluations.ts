@@ -89,7 +89,8 @@ export class Evaluations {
       }
       const wanted = evaluated.scenario?.wanted ?? [];
       if (wanted.length === 0 || round++ === MOST_ROUNDS) return evaluated;
-      await Promise.all(wanted.map((address) => this.files.fetch(address, uriOf(address) ?? address)));
+      const limits = this.#limits(evaluated.address);
+      await Promise.all(wanted.map((address) => this.files.fetch(address, uriOf(address) ?? address, limits)));
     }
   }
 
@@ -215,7 +216,7 @@ export class Evaluations {
       }
       if (!isInside(path, limits)) return { fault: 'outside' };
       const open = this.documents.at(path);
-      return open ? { text: open.getText() } : this.files.get(path);
+      return open ? { text: open.getText() } : this.files.get(path, limits);
     };
   }
 

@@ -7,19 +7,25 @@ import type { ReadAnswer } from '../scenario/files.ts';
 /** What a used file turned out to be: never `wanted`. */
 export type FileAnswer = Exclude<ReadAnswer, 'wanted'>;
 
-/** Asks for a file by its URI. May fail or never answer; the caller copes. */
-export type AskForFile = (uri: string) => Promise<unknown>;
+/**
+ * Asks for a file by its URI. May fail or never answer; the caller copes. `limits` are the addresses of the folders that
+ * the file must lie in, for those who can see where a link leads.
+ */
+export type AskForFile = (uri: string, limits: readonly string[]) => Promise<unknown>;
 
 /** After this long without an answer a file counts as unreadable, so that the rest is still worked out. */
 const LONGEST_WAIT_MS = 5000;
 
+/** What is known of one file. Documents with other limits may be told otherwise, so answers are kept by limits. */
+interface Known {
+  readonly answers: Map<string, FileAnswer>;
+  readonly asked: Map<string, Promise<void>>;
+}
+
 export class UsedFiles {
   readonly #ask: AskForFile;
   readonly #waitMs: number;
-  readonly #kept = new Map<string, FileAnswer>();
-  readonly #asked = new Map<string, Promise<void>>();
-  /** Raised at each change of a file, so that an answer on its way when the file changed is not kept. */
-  readonly #changes = new Map<string, number>();
+  readonly #known = new Map<string, Known>();
 
   constructor(ask: AskForFile, waitMs: number = LONGEST_WAIT_MS) {
     this.#ask = ask;
@@ -27,43 +33,45 @@ export class UsedFiles {
   }
 
   /** What is known of the file now. */
-  get(address: string): ReadAnswer {
-    return this.#kept.get(address) ?? 'wanted';
+  get(address: string, limits: readonly string[] = []): ReadAnswer {
+    return this.#known.get(address)?.answers.get(keyOf(limits)) ?? 'wanted';
   }
 
   /** Asks for a file that is not known. Resolves, and never rejects, when it is known or was changed meanwhile. */
-  fetch(address: string, uri: string): Promise<void> {
-    if (this.#kept.has(address)) return Promise.resolve();
-    const running = this.#asked.get(address);
+  fetch(address: string, uri: string, limits: readonly string[] = []): Promise<void> {
+    const known: Known = this.#known.get(address) ?? { answers: new Map(), asked: new Map() };
+    this.#known.set(address, known);
+    const key = keyOf(limits);
+    if (known.answers.has(key)) return Promise.resolve();
+    const running = known.asked.get(key);
     if (running) return running;
-    const change = this.#changes.get(address) ?? 0;
-    const question = this.#answer(uri).then((answer) => {
-      this.#asked.delete(address);
-      if ((this.#changes.get(address) ?? 0) === change) this.#kept.set(address, answer);
+    // An answer on its way when the file changes goes with what was known before, where nobody looks any more.
+    const question = this.#answer(uri, limits).then((answer) => {
+      known.asked.delete(key);
+      known.answers.set(key, answer);
     });
-    this.#asked.set(address, question);
+    known.asked.set(key, question);
     return question;
   }
 
   /** The file may have changed: what was known of it no longer counts. */
   forget(address: string): void {
-    this.#kept.delete(address);
-    // Counted only while a question is on its way: otherwise the map would grow with every file ever saved.
-    if (this.#asked.has(address)) this.#changes.set(address, (this.#changes.get(address) ?? 0) + 1);
-    else this.#changes.delete(address);
+    this.#known.delete(address);
   }
 
   /** Everything but these may go. */
   keepOnly(addresses: ReadonlySet<string>): void {
-    for (const address of [...this.#kept.keys()]) if (!addresses.has(address)) this.#kept.delete(address);
+    for (const [address, { asked }] of this.#known) {
+      if (!addresses.has(address) && asked.size === 0) this.#known.delete(address);
+    }
   }
 
   /** All that is known by heart, so that it can be asked for again. */
   addresses(): readonly string[] {
-    return [...this.#kept.keys()];
+    return [...this.#known.keys()];
   }
 
-  async #answer(uri: string): Promise<FileAnswer> {
+  async #answer(uri: string, limits: readonly string[]): Promise<FileAnswer> {
     let timer: ReturnType<typeof setTimeout> | undefined;
     const patience = new Promise<FileAnswer>((resolve) => {
       timer = setTimeout(() => {
@@ -71,13 +79,18 @@ export class UsedFiles {
       }, this.#waitMs);
     });
     try {
-      return await Promise.race([this.#ask(uri).then(asFileAnswer), patience]);
+      return await Promise.race([this.#ask(uri, limits).then(asFileAnswer), patience]);
     } catch (error) {
       return { fault: 'unreadable', detail: error instanceof Error ? error.message : 'It could not be read.' };
     } finally {
       clearTimeout(timer);
     }
   }
+}
+
+/** An address holds no newline. */
+function keyOf(limits: readonly string[]): string {
+  return limits.join('\n');
 }
 
 /** Checks an answer that came from outside. */

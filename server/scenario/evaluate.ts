@@ -3,8 +3,10 @@
 // never throws for a text. Invariant: what an earlier evaluation left (trees, kept answers) makes it faster, never
 // different.
 
-import { problemsOf } from '../../grammar/parse.ts';
+import { isPartial, problemsOf } from '../../grammar/parse.ts';
 import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
+import { findSubstance } from '../core/substance/catalogue.ts';
+import { parseFormula } from '../core/substance/formula.ts';
 import { bindNames } from './bind.ts';
 import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
@@ -56,7 +58,10 @@ export function* evaluateInSteps(
 ): Generator<Underway, EvaluatedScenario> {
   const { files, wanted } = loadFiles(path, read, earlier.trees);
   const bindings = bindNames(files);
-  const questions = new Questions(files, bindings, wanted.length > 0, earlier.answers);
+  const isReadInPart = files.some(({ tree }) => isPartial(tree));
+  // What is not there may stand in a file still to be fetched, or in the unread part of one that is too large.
+  const mayStandElsewhere = (name: string): boolean => wanted.length > 0 || (isReadInPart && !isWellKnown(name));
+  const questions = new Questions(files, bindings, mayStandElsewhere, earlier.answers);
   const gathered = (): EvaluatedScenario => ({ files: gatherFiles(files, questions), wanted });
   const underway: Underway = {
     soFar() {
@@ -69,6 +74,11 @@ export function* evaluateInSteps(
     yield underway;
   }
   return gathered();
+}
+
+/** A substance of the catalogue, or a formula: it is what it is, whatever the unread part of a large file says. */
+function isWellKnown(name: string): boolean {
+  return findSubstance(name) !== undefined || parseFormula(name).kind === 'formula';
 }
 
 /** The answers at their places, file by file. */

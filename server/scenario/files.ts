@@ -3,18 +3,24 @@
 // fetched. Each file is reached once. A cycle of files is one fact, at the `use` that closes it.
 // Invariant: the walk is iterative, so that a long chain of files cannot exhaust the stack.
 
-import { parse } from '../../grammar/parse.ts';
+import { isPartial, parse, type ParseOptions } from '../../grammar/parse.ts';
 import type { PlacedSection, SyntaxTree, UseStatement } from '../../grammar/tree.ts';
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 import type { Fact } from './facts.ts';
 import { placeOf } from './place.ts';
 import type { PlacedFact } from './scenario.ts';
 
-/** What a reader says of an address. `detail` is a plain sentence for the person, without the address. */
+/**
+ * What a reader says of an address. `address` is the one the file goes by, where it was asked for by another spelling;
+ * `detail` is a plain sentence for the person, without the address.
+ */
 export type ReadAnswer =
-  | { readonly text: string }
-  | { readonly fault: 'missing' | 'unreadable' | 'outside'; readonly detail?: string }
+  | { readonly text: string; readonly address?: string; readonly reading?: Reading }
+  | { readonly fault: 'missing' | 'unreadable' | 'outside'; readonly address?: string; readonly detail?: string }
   | 'wanted';
+
+/** From which size on a text is read in part only, and which part is seen. */
+export type Reading = Pick<ParseOptions, 'largestText' | 'visible'>;
 
 export interface LoadedFile {
   readonly path: string;
@@ -43,14 +49,15 @@ export function loadFiles(
 
   const files = new Map<string, LoadedFile>();
   const wanted = new Set<string>();
+  const faulty = new Set<string>();
   const open: { file: LoadedFile; next: number }[] = [];
-  const enter = (path: string, used: boolean, text: string): void => {
-    const file = { path, used, tree: treeOf(text, earlier.get(path)), facts: [] };
+  const enter = (path: string, used: boolean, { text, reading }: ReadText): void => {
+    const file = { path, used, tree: treeOf(text, earlier.get(path), reading), facts: [] };
     files.set(path, file);
     open.push({ file, next: 0 });
   };
 
-  enter(root, false, answer.text);
+  enter(root, false, answer);
   for (let top = open.at(-1); top; top = open.at(-1)) {
     const placed = top.file.tree.sections[top.next++];
     if (!placed) {
@@ -70,26 +77,41 @@ export function loadFiles(
     };
     const resolved = resolveUse(file.path, written.value);
     // The root keeps the spelling it was named with (`./trial.stoke`), or it would be reached a second time.
-    const path = resolved === withoutDot(root) ? root : resolved;
-    if (path === null) return say({ code: 'name/missing-file', path: written.value, why: 'not-relative' });
+    const asked = resolved === withoutDot(root) ? root : resolved;
+    if (asked === null) return say({ code: 'name/missing-file', path: written.value, why: 'not-relative' });
+    if (isReached(asked, say)) return;
+    const found = read(asked);
+    if (found === 'wanted') {
+      wanted.add(asked);
+      return;
+    }
+    const path = found.address ?? asked;
+    if (path !== asked && isReached(path, say)) return;
+    if ('text' in found) return enter(path, true, found);
+    // One missing file is one finding, however often and in whatever spelling it is used.
+    if (faulty.has(path)) return;
+    faulty.add(path);
+    const fact = { code: 'name/missing-file', path: written.value, why: found.fault } as const;
+    say(found.detail === undefined ? fact : { ...fact, detail: found.detail });
+  }
+
+  /** Whether the file has been reached already; says so where that closes a cycle. */
+  function isReached(path: string, say: (fact: Fact) => void): boolean {
     const onPath = open.findIndex((entry) => entry.file.path === path);
     if (onPath >= 0) {
-      return say({ code: 'name/use-cycle', path: [...open.slice(onPath).map((entry) => entry.file.path), path] });
+      say({ code: 'name/use-cycle', path: [...open.slice(onPath).map((entry) => entry.file.path), path] });
     }
-    if (files.has(path)) return;
-    const found = read(path);
-    if (found === 'wanted') wanted.add(path);
-    else if ('text' in found) enter(path, true, found.text);
-    else {
-      const fact = { code: 'name/missing-file', path: written.value, why: found.fault } as const;
-      say(found.detail === undefined ? fact : { ...fact, detail: found.detail });
-    }
+    return files.has(path);
   }
 }
 
-function treeOf(text: string, previous: SyntaxTree | undefined): SyntaxTree {
-  if (!previous) return parse(text, isUnitWord);
-  return previous.text === text ? previous : parse(text, isUnitWord, { previous });
+type ReadText = Extract<ReadAnswer, { text: string }>;
+
+function treeOf(text: string, previous: SyntaxTree | undefined, reading: Reading = {}): SyntaxTree {
+  // Of a text that is too large, other parts may be seen than before.
+  const isWhole = previous && !isPartial(previous) && text.length <= (reading.largestText ?? text.length);
+  if (isWhole && previous.text === text) return previous;
+  return parse(text, isUnitWord, previous ? { ...reading, previous } : reading);
 }
 
 /**

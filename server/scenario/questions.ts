@@ -48,8 +48,8 @@ export class Questions implements Scope {
   constructor(
     files: readonly LoadedFile[],
     private readonly bindings: Bindings,
-    /** A used file is still to be fetched: a name that is not there yet may be in it. */
-    private readonly isIncomplete: boolean,
+    /** Whether a name that is not here may stand in a text that is not at hand. */
+    private readonly mayBeElsewhere: (name: string) => boolean,
     store?: AnswerStore,
   ) {
     const mentions = new Map([...bindings.unique].map(([name, { statement }]) => [name, mentionsIn(statement)]));
@@ -110,7 +110,7 @@ export class Questions implements Scope {
     this.#lookedUp.set(name, this.#keyNow(name));
     if (this.#unknowable.has(name)) return { kind: 'unknown' };
     const binding = this.bindings.unique.get(name);
-    if (!binding) return this.isIncomplete ? { kind: 'unknown' } : undefined;
+    if (!binding) return this.mayBeElsewhere(name) ? { kind: 'unknown' } : undefined;
     return this.answerTo(binding.placed)?.named ?? { kind: 'unknown' };
   }
 
@@ -128,7 +128,7 @@ export class Questions implements Scope {
     if (name === ALL_NAMES) return (this.#namesKey ??= this.#allNames().join('\n'));
     if (this.#unknowable.has(name)) return UNKNOWN;
     const binding = this.bindings.unique.get(name);
-    if (!binding) return this.isIncomplete ? UNKNOWN : ABSENT;
+    if (!binding) return this.mayBeElsewhere(name) ? UNKNOWN : ABSENT;
     return this.#answers.get(binding.placed)?.key ?? UNKNOWN;
   }
 }

@@ -1,7 +1,7 @@
 // The server as the program that ships, spoken to over real pipes: it answers, survives bytes that are no messages, reads
 // used files from the disk for an editor that does not hand them over, and ends when it should and how it should.
 import { spawn, type ChildProcessWithoutNullStreams } from 'node:child_process';
-import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
@@ -52,6 +52,21 @@ describe('the built server', () => {
     const end = ended(client.program ?? expect.fail('no program'));
     await client.stop();
     expect(await end).toBe(0);
+  });
+
+  it.runIf(process.platform !== 'win32')('follows no link out of the workspace folder', async () => {
+    mkdirSync(path.join(folder, 'ship'));
+    symlinkSync(path.join(folder, 'house'), path.join(folder, 'ship/house'));
+    const client = ProtocolClient.ofProgram(process.execPath, [server, '--stdio'], {
+      folders: [pathToFileURL(path.join(folder, 'ship')).href],
+    });
+    await client.initialize();
+    const ship = pathToFileURL(path.join(folder, 'ship/main.stoke')).href;
+    await client.open(ship, 'use "house/suppliers.stoke"\n');
+    const { diagnostics } = await client.diagnosticsOf(ship, 1);
+    expect(diagnostics.map(({ code }) => code)).toEqual(['name/missing-file']);
+    expect(diagnostics[0]?.message).toContain('outside');
+    await client.stop();
   });
 
   it('ends with 1 when it is told to exit before it was shut down', async () => {

@@ -213,6 +213,26 @@ describe('used files', () => {
     expect(ran.code).toBe(1);
   });
 
+  test.each([
+    ['in two spellings by one file', ['a.stoke'], 'use "b.stoke"\nuse "./b.stoke"\n'],
+    ['by way of the folder above', ['a.stoke'], 'use "b.stoke"\nuse "../in/b.stoke"\n'],
+    ['and named in another spelling', ['a.stoke', './b.stoke'], 'use "b.stoke"\n'],
+    ['and named before, from the folder above', ['../in/b.stoke', './a.stoke'], 'use "b.stoke"\n'],
+  ])('one used %s is reported once', async (_, names, text) => {
+    const folder = folderWith({ 'in/a.stoke': text, 'in/b.stoke': 'let b = nothing_known\n' });
+    expect(await found(folder, names, 'in')).toEqual([expect.stringMatching(/^name\/unknown/)]);
+  });
+
+  test('one that uses itself in another spelling is a ring', async () => {
+    const folder = folderWith({ 'in/a.stoke': 'use "../in/a.stoke"\nlet b = 1\n' });
+    expect(await found(folder, ['a.stoke'], 'in')).toEqual([expect.stringMatching(/^name\/use-cycle/)]);
+  });
+
+  test('one missing in three spellings is one finding', async () => {
+    const folder = folderWith({ 'in/a.stoke': 'use "b.stoke"\nuse "./b.stoke"\nuse "../in/b.stoke"\n' });
+    expect(await found(folder, ['a.stoke'], 'in')).toEqual([expect.stringMatching(/^name\/missing-file/)]);
+  });
+
   test('a ring of files ends', async () => {
     const folder = folderWith({ 'a.stoke': 'use "b.stoke"\n', 'b.stoke': 'use "a.stoke"\n' });
     expect(await found(folder, ['a.stoke'])).toEqual([expect.stringMatching(/^name\/use-cycle/)]);

@@ -65,6 +65,19 @@ describe('used files', () => {
     expect(files.get('a')).toEqual({ fault: 'unreadable', detail: 'The client is gone.' });
   });
 
+  it('may be told otherwise to documents with other limits', async () => {
+    const files = new UsedFiles((_, limits) =>
+      Promise.resolve(limits.length > 1 ? { text: '' } : { fault: 'outside' }),
+    );
+    await files.fetch('a', 'file:///a', ['file:///narrow']);
+    expect(files.get('a', ['file:///narrow'])).toEqual({ fault: 'outside' });
+    expect(files.get('a', ['file:///narrow', 'file:///wide'])).toBe('wanted');
+    await files.fetch('a', 'file:///a', ['file:///narrow', 'file:///wide']);
+    expect(files.get('a', ['file:///narrow', 'file:///wide'])).toEqual({ text: '' });
+    files.forget('a');
+    expect(files.get('a', ['file:///narrow'])).toBe('wanted');
+  });
+
   it('that nobody needs any more are let go', async () => {
     const files = new UsedFiles((uri) => Promise.resolve({ text: uri }));
     await files.fetch('a', 'file:///a');
