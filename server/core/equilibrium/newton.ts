@@ -1,0 +1,290 @@
+// One Newton step towards the state of lowest energy, for a set of phases taken to be present.
+// The unknowns are the potentials of the basis phases, the amount of gas (pressure held), the amounts of the condensed
+// phases present and, where it is not held, the logarithm of temperature: at most a score, however many gases there are.
+// Knows no choice of phases. Invariant: gases always obey x_j = exp(potential of its atoms - g_j/RT - ln p); what is solved
+// for are the balances. Method: element potentials (White, Johnson and Dantzig 1958; Smith and Missen, Chemical Reaction
+// Equilibrium Analysis, 1982) in an optimised basis, with the sum of fractions taken logarithmically, so that a step from far
+// away does not creep; temperature in the same symmetric system.
+
+import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
+import { solveDense } from './dense.ts';
+import type { Work } from './work.ts';
+
+/** What is held, scaled to the work's amounts. */
+export interface Aim {
+  /** Volume held instead of pressure. */
+  readonly isVolume: boolean;
+  /** ln of the pressure in bar (pressure held). */
+  readonly logPressure: number;
+  /** Scaled mol of gas per bar times K: V (1 bar) / R (volume held). */
+  readonly gasKPerBar: number;
+  /** Temperature held, or energy (enthalpy with pressure held), or entropy. */
+  readonly seeks: 'temperature' | 'energy' | 'entropy';
+  /** H/R or U/R in K, or S/R, of the scaled amount. */
+  readonly aimed: number;
+}
+
+/** Below this share of the least basis amount a gas changes no balance in double precision. */
+const negligible = 1e-19;
+
+/** Properties and fractions at the present temperature and potentials. */
+export function takeTemperature(work: Work, aim: Aim, temperatureK: number): void {
+  work.temperatureK = temperatureK;
+  fillGibbs(work.set.properties, temperatureK, work.gibbs);
+  if (aim.seeks !== 'temperature') {
+    fillEnthalpies(work.set.properties, temperatureK, work.enthalpy, work.heatCapacity);
+  }
+  takePressure(work, aim.isVolume ? 0 : aim.logPressure);
+}
+
+export function takePressure(work: Work, logPressure: number): void {
+  const { set, cost, gibbs } = work;
+  cost.set(gibbs);
+  for (let phase = 0; phase < set.gasCount; phase += 1) cost[phase] = at(gibbs, phase) + logPressure;
+}
+
+/** Fractions of all gases from the present potentials (partial pressures in bar when the volume is held). */
+export function takeFractions(work: Work, aim: Aim): void {
+  const { gases, gasCount, nu, width, rank, potential, cost, logFraction, fraction } = work;
+  let sum = 0;
+  for (let index = 0; index < gasCount; index += 1) {
+    const gas = at32(gases, index);
+    const column = gas * width;
+    let logarithm = -at(cost, gas);
+    for (let k = 0; k < rank; k += 1) logarithm += at(nu, column + k) * at(potential, k);
+    const value = logarithm > 300 ? Math.exp(300) : Math.exp(logarithm);
+    logFraction[gas] = logarithm;
+    fraction[gas] = value;
+    sum += value;
+  }
+  work.fractionSum = sum;
+  if (aim.isVolume) work.gasAmount = (sum * aim.gasKPerBar) / work.temperatureK;
+}
+
+/** Affinity of a condensed phase: the potentials of its atoms less its own g/RT; above zero it should form. */
+export function affinityOf(work: Work, phase: number): number {
+  const { nu, width, rank, potential, cost } = work;
+  let sum = -at(cost, phase);
+  for (let k = 0; k < rank; k += 1) sum += at(nu, phase * width + k) * at(potential, k);
+  return sum;
+}
+
+/**
+ * Assembles the system of the next step: potentials first, then gas, condensed phases, temperature. Returns its size. The
+ * right side holds what is missing; amounts of gas and condensed phases come out as new values, not as differences.
+ */
+export function assemble(work: Work, aim: Aim): number {
+  const { rank, width, stride, matrix, right, nu, gases, gasCount, fraction, enthalpy, heatCapacity } = work;
+  const hasGasRow = !aim.isVolume && work.gasAmount > 0;
+  const gasRow = rank;
+  const firstPresent = rank + (hasGasRow ? 1 : 0);
+  const heatRow = firstPresent + work.presentCount;
+  const seeksHeat = aim.seeks !== 'temperature';
+  const size = heatRow + (seeksHeat ? 1 : 0);
+  matrix.fill(0, 0, size * stride);
+  const { gasAmount, fractionSum } = work;
+  // mol of a gas per unit of its fraction.
+  const perFraction = gasAmount > 0 ? gasAmount / fractionSum : 0;
+  const lost = aim.isVolume ? 1 : 0;
+  const heatStart = heatRow * stride;
+  let heatSum = 0;
+  let capacity = 0;
+  let squares = 0;
+  if (perFraction > 0) {
+    const least = negligible * leastBasisAmount(work);
+    for (let index = 0; index < gasCount; index += 1) {
+      const gas = at32(gases, index);
+      const amount = at(fraction, gas) * perFraction;
+      if (amount < least) continue;
+      const column = gas * width;
+      for (let k = 0; k < rank; k += 1) {
+        const own = at(nu, column + k);
+        if (own === 0) continue;
+        const part = amount * own;
+        const start = k * stride;
+        for (let l = 0; l <= k; l += 1) matrix[start + l] = at(matrix, start + l) + part * at(nu, column + l);
+        // Row sums, kept in the last column of the room while gases are gone through.
+        matrix[start + stride - 1] = at(matrix, start + stride - 1) + part;
+        if (seeksHeat) matrix[heatStart + k] = at(matrix, heatStart + k) + part * (at(enthalpy, gas) - lost);
+      }
+      if (seeksHeat) {
+        const energy = at(enthalpy, gas) - lost;
+        heatSum += amount * energy;
+        squares += amount * energy * energy;
+        capacity += amount * (at(heatCapacity, gas) - lost);
+      }
+    }
+  }
+  for (let k = 0; k < rank; k += 1) {
+    const start = k * stride;
+    const sum = at(matrix, start + stride - 1);
+    matrix[start + stride - 1] = 0;
+    for (let l = 0; l < k; l += 1) matrix[l * stride + k] = at(matrix, start + l);
+    if (seeksHeat) matrix[start + heatRow] = at(matrix, heatStart + k);
+    if (hasGasRow) {
+      const mean = sum / gasAmount;
+      matrix[start + gasRow] = mean;
+      matrix[gasRow * stride + k] = mean;
+      right[k] = at(work.amounts, k);
+    } else right[k] = at(work.amounts, k) - sum;
+  }
+  if (hasGasRow) {
+    right[gasRow] = -Math.log(fractionSum);
+    if (seeksHeat) {
+      matrix[gasRow * stride + heatRow] = heatSum / gasAmount;
+      matrix[heatStart + gasRow] = heatSum / gasAmount;
+    }
+  }
+  let presentHeat = 0;
+  for (let index = 0; index < work.presentCount; index += 1) {
+    const phase = at32(work.present, index);
+    const row = firstPresent + index;
+    for (let k = 0; k < rank; k += 1) {
+      const own = at(nu, phase * width + k);
+      matrix[k * stride + row] = own;
+      matrix[row * stride + k] = own;
+    }
+    right[row] = -affinityOf(work, phase);
+    if (seeksHeat) {
+      const energy = at(enthalpy, phase);
+      matrix[row * stride + heatRow] = energy;
+      matrix[heatStart + row] = energy;
+      const amount = Math.max(0, at(work.presentAmount, index));
+      presentHeat += amount * energy;
+      capacity += amount * at(heatCapacity, phase);
+    }
+  }
+  if (seeksHeat) {
+    matrix[heatStart + heatRow] = squares + capacity;
+    // Gas (pressure held) and condensed amounts come out new, so that what they hold now stays on the left side.
+    const keptLeft = hasGasRow ? 0 : heatSum;
+    right[heatRow] =
+      aim.seeks === 'energy'
+        ? aim.aimed / work.temperatureK - keptLeft
+        : entropyMissing(work, aim) + (hasGasRow ? heatSum : 0) + presentHeat;
+  }
+  return size;
+}
+
+/** S/R that is missing, with the first-order part that the balances still miss: dS = (dU + p dV - sum of potentials dn)/T. */
+function entropyMissing(work: Work, aim: Aim): number {
+  const { rank, width, nu, gases, gasCount, fraction, logFraction, enthalpy, gibbs, gasAmount, fractionSum } = work;
+  const perFraction = gasAmount > 0 ? gasAmount / fractionSum : 0;
+  const shift = aim.isVolume ? 0 : Math.log(fractionSum) - aim.logPressure;
+  let entropy = 0;
+  let potentials = 0;
+  for (let k = 0; k < rank; k += 1) potentials += at(work.potential, k) * at(work.amounts, k);
+  for (let index = 0; index < gasCount; index += 1) {
+    const gas = at32(gases, index);
+    const amount = at(fraction, gas) * perFraction;
+    if (amount === 0) continue;
+    entropy += amount * (at(enthalpy, gas) - at(gibbs, gas) - at(logFraction, gas) + shift);
+    let held = 0;
+    for (let k = 0; k < rank; k += 1) held += at(nu, gas * width + k) * at(work.potential, k);
+    potentials -= amount * held;
+  }
+  for (let index = 0; index < work.presentCount; index += 1) {
+    const phase = at32(work.present, index);
+    const amount = Math.max(0, at(work.presentAmount, index));
+    entropy += amount * (at(enthalpy, phase) - at(gibbs, phase));
+    potentials -= amount * (affinityOf(work, phase) + at(work.cost, phase));
+  }
+  return aim.aimed - entropy + potentials;
+}
+
+/** What a step did. */
+export interface Step {
+  /** Largest change of a potential or of ln T before damping; Infinity when the system was singular. */
+  change: number;
+  /** The share of the step that was taken. */
+  taken: number;
+  /** Largest relative change of the amount of gas. */
+  gasChange: number;
+}
+
+const largestChange = 2;
+const largestTemperatureChange = 0.35;
+const logOfTrace = -18.42;
+const logOfLargestNewcomer = -9.21;
+
+/**
+ * Takes one damped step. Damping: no gas above a trace changes by more than e², no trace is thrown above 1e-4, temperature by
+ * no more than a third, the gas by no more than e². Temperature stays in `lowestK`…`highestK`.
+ */
+export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, highestK: number): void {
+  const { rank, width, nu, right, gases, gasCount, logFraction, potential, enthalpy } = work;
+  const size = assemble(work, aim);
+  const quality = solveDense(work.matrix, work.stride, size, right, work.dense);
+  step.change = Infinity;
+  if (!(quality > 1e-15)) return;
+  const hasGasRow = !aim.isVolume && work.gasAmount > 0;
+  const heatRow = size - 1;
+  const seeksHeat = aim.seeks !== 'temperature';
+  const warmer = seeksHeat ? at(right, heatRow) : 0;
+  let change = Math.abs(warmer);
+  for (let k = 0; k < rank; k += 1) change = Math.max(change, Math.abs(at(right, k)));
+  if (!Number.isFinite(change)) return;
+  let taken = 1;
+  if (Math.abs(warmer) > largestTemperatureChange) taken = largestTemperatureChange / Math.abs(warmer);
+  if (work.gasAmount > 0 && change > 1e-3) {
+    const shift = aim.isVolume ? 0 : Math.log(work.fractionSum);
+    const lost = aim.isVolume ? 1 : 0;
+    for (let index = 0; index < gasCount; index += 1) {
+      const gas = at32(gases, index);
+      let difference = seeksHeat ? (at(enthalpy, gas) - lost) * warmer : 0;
+      const column = gas * width;
+      for (let k = 0; k < rank; k += 1) difference += at(nu, column + k) * at(right, k);
+      const logarithm = at(logFraction, gas) - shift;
+      if (logarithm > logOfTrace) {
+        if (Math.abs(difference) * taken > largestChange) taken = largestChange / Math.abs(difference);
+      } else if (difference > 0 && logarithm + difference * taken > logOfLargestNewcomer) {
+        taken = Math.max(0, (logOfLargestNewcomer - logarithm) / difference);
+      }
+    }
+  }
+  step.gasChange = 0;
+  let gasNext = work.gasAmount;
+  if (hasGasRow) {
+    gasNext = at(right, rank) - work.gasAmount * Math.log(work.fractionSum);
+    const ratio = gasNext / work.gasAmount;
+    step.gasChange = Math.abs(ratio - 1);
+    if (ratio > 7.4) taken = Math.min(taken, 6.4 / (ratio - 1));
+    // The gas may vanish in the end, but not at one stroke.
+    else if (ratio < 0.1) taken = Math.min(taken, 0.9 / (1 - ratio));
+  }
+  step.change = change;
+  step.taken = taken;
+  for (let k = 0; k < rank; k += 1) potential[k] = at(potential, k) + taken * at(right, k);
+  if (hasGasRow) work.gasAmount += taken * (gasNext - work.gasAmount);
+  const firstPresent = rank + (hasGasRow ? 1 : 0);
+  for (let index = 0; index < work.presentCount; index += 1) {
+    const before = at(work.presentAmount, index);
+    work.presentAmount[index] = before + taken * (at(right, firstPresent + index) - before);
+  }
+  if (seeksHeat && warmer !== 0) {
+    const next = Math.min(highestK, Math.max(lowestK, work.temperatureK * Math.exp(taken * warmer)));
+    takeTemperature(work, aim, next);
+  }
+  takeFractions(work, aim);
+}
+
+/** The least amount among the basis phases, in the present state. */
+function leastBasisAmount(work: Work): number {
+  const { rank, basis, set, fraction, gasAmount, fractionSum } = work;
+  let least = Infinity;
+  for (let k = 0; k < rank; k += 1) {
+    const phase = at32(basis, k);
+    if (phase >= set.gasCount) continue;
+    const amount = (at(fraction, phase) * gasAmount) / fractionSum;
+    if (amount < least) least = amount;
+  }
+  return least === Infinity ? 0 : least;
+}
+
+function at(values: Float64Array, index: number): number {
+  return values[index] as number;
+}
+
+function at32(values: Int32Array, index: number): number {
+  return values[index] as number;
+}

@@ -1,0 +1,197 @@
+// Where the search starts when nobody gives a neighbour: at the vertex of least energy, its gases mixed as the vertex has them,
+// and balances that the vertex leaves empty brought near their solution one by one.
+// Knows no answer. Invariant: the start is a function of the problem alone.
+
+import { fillEnthalpies } from '../substance/property-set.ts';
+import { addPresent } from './descent.ts';
+import { takeFractions, takeTemperature } from './newton.ts';
+import type { Aim } from './newton.ts';
+import type { Equilibrium } from './equilibrium.ts';
+import { findVertex, takeBasis } from './vertex.ts';
+import type { Work } from './work.ts';
+
+const firstTemperatureK = 1500;
+const mostSweeps = 12;
+
+/**
+ * Finds a vertex and starts from it, at the temperature given or, where none is held, near the one at which the vertex has the
+ * energy asked for. Returns the blamed element rows when the phases admitted cannot hold the elements.
+ */
+export function startCold(
+  work: Work,
+  aim: Aim,
+  temperatureK: number | undefined,
+  lowestK: number,
+  highestK: number,
+): readonly number[] | undefined {
+  let startK = temperatureK ?? firstTemperatureK;
+  const blamed = vertexAt(work, aim, startK);
+  if (blamed !== undefined) return blamed;
+  if (temperatureK === undefined) {
+    const warmerK = Math.min(Math.max(temperatureOfVertex(work, aim, startK), Math.max(lowestK, 300)), highestK, 3500);
+    if (Math.abs(warmerK - startK) > 150) {
+      startK = warmerK;
+      vertexAt(work, aim, startK);
+    }
+  }
+  mixVertex(work, aim);
+  return undefined;
+}
+
+/**
+ * Starts from a state of the same candidates: its phases, its potentials, its temperature where none is held. False when it
+ * has not the elements of the problem.
+ */
+export function startNear(work: Work, aim: Aim, temperatureK: number | undefined, near: Equilibrium): boolean {
+  const { set, width, potential, condensed, condensedCount, scaleMol } = work;
+  const chargeRow = set.hasCharge ? width - 1 : -1;
+  for (let row = 0; row < width; row += 1) {
+    if (row !== chargeRow && (at(work.given, row) === 0) !== Number.isNaN(at(near.potentials, row))) return false;
+  }
+  takeTemperature(work, aim, temperatureK ?? near.temperatureK);
+  if (!takeBasis(work, near.amountsMol)) return false;
+  for (let k = 0; k < work.rank; k += 1) {
+    let sum = 0;
+    for (let row = 0; row < width; row += 1) {
+      const atoms = at(set.atoms, at32(work.basis, k) * width + row);
+      if (atoms !== 0) sum += atoms * at(near.potentials, row);
+    }
+    // At another temperature a phase keeps its activity rather than its potential.
+    const phase = at32(work.basis, k);
+    const isGas = phase < set.gasCount;
+    potential[k] =
+      temperatureK === undefined || temperatureK === near.temperatureK
+        ? sum
+        : at(work.cost, phase) +
+          (isGas ? at(near.logFractions, phase) : 0) +
+          (isGas && aim.isVolume ? Math.log(near.pressurePa / 1e5) : 0);
+    if (!Number.isFinite(at(potential, k))) return false;
+  }
+  work.presentCount = 0;
+  work.isTied = false;
+  for (let index = 0; index < condensedCount; index += 1) {
+    const phase = at32(condensed, index);
+    const amount = at(near.amountsMol, phase);
+    if (amount > 0 && work.presentCount < width) addPresent(work, phase, amount / scaleMol);
+  }
+  work.gasAmount = near.gasMol / scaleMol;
+  takeFractions(work, aim);
+  return true;
+}
+
+function vertexAt(work: Work, aim: Aim, temperatureK: number): readonly number[] | undefined {
+  takeTemperature(work, aim, temperatureK);
+  const { set, cost } = work;
+  // A gas is not taken pure at the pressure it never has alone; a crystal past its end is not taken at all.
+  for (let index = 0; index < work.condensedCount; index += 1) {
+    const phase = at32(work.condensed, index);
+    if (temperatureK > at(set.endK, phase)) cost[phase] = at(cost, phase) + 1e3;
+  }
+  const blamed = findVertex(work);
+  for (let index = 0; index < work.condensedCount; index += 1) {
+    const phase = at32(work.condensed, index);
+    cost[phase] = at(work.gibbs, phase);
+  }
+  return blamed;
+}
+
+/** Temperature at which the vertex's phases hold the energy asked for, by a few Newton steps; the present one for entropy. */
+function temperatureOfVertex(work: Work, aim: Aim, fromK: number): number {
+  if (aim.seeks !== 'energy') return fromK;
+  const { rank, basis, amounts, enthalpy, heatCapacity, set } = work;
+  let temperatureK = fromK;
+  for (let count = 0; count < 3; count += 1) {
+    fillEnthalpies(set.properties, temperatureK, enthalpy, heatCapacity);
+    let energy = 0;
+    let capacity = 0;
+    for (let k = 0; k < rank; k += 1) {
+      const phase = at32(basis, k);
+      const lost = aim.isVolume && phase < set.gasCount ? 1 : 0;
+      energy += at(amounts, k) * (at(enthalpy, phase) - lost);
+      capacity += at(amounts, k) * (at(heatCapacity, phase) - lost);
+    }
+    const next = temperatureK + (aim.aimed - energy * temperatureK) / capacity;
+    temperatureK = Math.min(Math.max(next, 0.4 * temperatureK), 2.5 * temperatureK);
+    if (Math.abs(next - temperatureK) < 20) break;
+  }
+  return Number.isFinite(temperatureK) ? temperatureK : fromK;
+}
+
+/** Potentials and amounts from the vertex. */
+function mixVertex(work: Work, aim: Aim): void {
+  const { rank, basis, amounts, set, cost, potential } = work;
+  let gasAmount = 0;
+  for (let k = 0; k < rank; k += 1) if (at32(basis, k) < set.gasCount) gasAmount += Math.max(0, at(amounts, k));
+  work.presentCount = 0;
+  work.isTied = false;
+  work.gasAmount = gasAmount;
+  const inGas = aim.isVolume ? aim.gasKPerBar / work.temperatureK : gasAmount;
+  for (let k = 0; k < rank; k += 1) {
+    const phase = at32(basis, k);
+    const amount = at(amounts, k);
+    potential[k] = at(cost, phase);
+    if (phase >= set.gasCount) {
+      if (amount > 0) addPresent(work, phase, amount);
+    } else if (inGas > 0) {
+      const fraction = Math.max(amount, traceOfVertex * Math.max(gasAmount, 1e-30)) / inGas;
+      potential[k] = at(potential, k) + Math.log(fraction);
+    }
+  }
+  takeFractions(work, aim);
+  if (work.gasAmount > 0) balanceTraces(work, aim);
+}
+
+/** Basis phases with less than this share of the gas are brought near their balance before the first step. */
+const traceOfVertex = 1e-9;
+
+/**
+ * A balance whose basis phase the vertex leaves (nearly) empty decides itself between traces, over many powers of ten: what its
+ * gases make of it is set equal to what they take, logarithmically, one balance at a time.
+ */
+function balanceTraces(work: Work, aim: Aim): void {
+  const { rank, amounts, gases, gasCount, nu, width, fraction, potential } = work;
+  const limit = 1e-4 * work.gasAmount;
+  let hasTraces = false;
+  for (let k = 0; k < rank; k += 1) hasTraces ||= at(amounts, k) < limit;
+  if (!hasTraces) return;
+  const perFraction = aim.isVolume ? aim.gasKPerBar / work.temperatureK : work.gasAmount;
+  for (let sweep = 0; sweep < mostSweeps; sweep += 1) {
+    let largest = 0;
+    for (let k = 0; k < rank; k += 1) {
+      if (at(amounts, k) >= limit) continue;
+      let made = Math.max(0, -at(amounts, k));
+      let taken = Math.max(0, at(amounts, k));
+      let madeSlope = 0;
+      let takenSlope = 0;
+      for (let index = 0; index < gasCount; index += 1) {
+        const gas = at32(gases, index);
+        const own = at(nu, gas * width + k);
+        if (own === 0) continue;
+        const amount = at(fraction, gas) * perFraction;
+        if (own > 0) {
+          made += own * amount;
+          madeSlope += own * own * amount;
+        } else {
+          taken -= own * amount;
+          takenSlope += own * own * amount;
+        }
+      }
+      if (!(made > 0) || !(taken > 0)) continue;
+      const slope = madeSlope / made + takenSlope / taken;
+      if (!(slope > 0)) continue;
+      const change = Math.min(25, Math.max(-25, Math.log(taken / made) / slope));
+      potential[k] = at(potential, k) + change;
+      largest = Math.max(largest, Math.abs(change));
+      if (Math.abs(change) > 1e-3) takeFractions(work, aim);
+    }
+    if (largest < 0.5) return;
+  }
+}
+
+function at(values: Float64Array, index: number): number {
+  return values[index] as number;
+}
+
+function at32(values: Int32Array, index: number): number {
+  return values[index] as number;
+}

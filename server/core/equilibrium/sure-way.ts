@@ -1,0 +1,266 @@
+// The sure way to each state problem, taken when the quick one does not rest at a certified minimum: temperature and pressure
+// by the interior path; whatever else is held by narrowing temperature or pressure between bounds, since at equilibrium
+// enthalpy, entropy and energy only rise with temperature, and volume only falls with pressure.
+// Where the held property jumps, two states share it: phases that change into one another at that temperature, or a crystal at
+// the end of its data.
+// Knows no speed. Invariant: every state it passes through is certified.
+
+import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { answerOf, isCertified, responseOf, stateOf } from './answer.ts';
+import type { Check } from './answer.ts';
+import { narrow } from './bracket.ts';
+import { followCentre } from './centre.ts';
+import { descend } from './descent.ts';
+import type { Descent } from './descent.ts';
+import type { Equilibrium, NoEquilibrium, Pinned } from './equilibrium.ts';
+import { takeFractions, takePressure, takeTemperature } from './newton.ts';
+import type { Aim } from './newton.ts';
+import { startCold } from './start.ts';
+import { admitPhases } from './work.ts';
+import type { Work } from './work.ts';
+
+export interface Range {
+  readonly lowestK: number;
+  readonly highestK: number;
+}
+
+/** Pressures in Pa between which a held volume is sought; far outside anything real. */
+const lowestPressurePa = 1e-250;
+const highestPressurePa = 1e15;
+
+/** Temperature and pressure held: quick from cold, then by the interior path. Undefined when neither is certified. */
+export function atTemperatureAndPressure(
+  work: Work,
+  elementMol: Float64Array,
+  temperatureK: number,
+  pressurePa: number,
+  descent: Descent,
+): Equilibrium | undefined {
+  const aim = pressureAim(pressurePa);
+  admitPhases(work, temperatureK);
+  const bounds = { lowestK: temperatureK, highestK: temperatureK };
+  if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
+  if (descend(work, aim, bounds, descent) === 'rest') {
+    const answer = certified(work, elementMol, aim, pressurePa, descent);
+    if (answer !== undefined) return answer;
+  }
+  startCold(work, aim, temperatureK, temperatureK, temperatureK);
+  if (!followCentre(work, aim)) return undefined;
+  const before = keep(work);
+  const asItIs = certified(work, elementMol, aim, pressurePa, descent);
+  restore(work, before, aim);
+  if (descend(work, aim, bounds, descent) === 'rest') {
+    const polished = certified(work, elementMol, aim, pressurePa, descent);
+    if (polished !== undefined) return polished;
+  }
+  return asItIs;
+}
+
+/** Temperature and volume held, by narrowing the pressure. */
+export function atTemperatureAndVolume(
+  work: Work,
+  elementMol: Float64Array,
+  temperatureK: number,
+  volumeM3: number,
+  descent: Descent,
+): Equilibrium | undefined {
+  const stateAt = (logPressure: number): Equilibrium | undefined =>
+    atTemperatureAndPressure(work, elementMol, temperatureK, Math.exp(logPressure), descent);
+  // Rising with pressure: what is missing of the volume, as a share of either.
+  const valueOf = (state: Equilibrium): number => (volumeM3 - state.volumeM3) / (volumeM3 + state.volumeM3);
+  return between(stateAt, valueOf, [Math.log(lowestPressurePa), Math.log(highestPressurePa)], (state) => state);
+}
+
+/** Enthalpy, entropy or energy held with pressure or volume, by narrowing the temperature. */
+export function byTemperature(
+  work: Work,
+  elementMol: Float64Array,
+  check: Check & { readonly value: number },
+  held: { readonly pressurePa: number } | { readonly volumeM3: number },
+  range: Range,
+  descent: Descent,
+): Equilibrium | NoEquilibrium | undefined {
+  const stateAt = (temperatureK: number): Equilibrium | undefined =>
+    'pressurePa' in held
+      ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent)
+      : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent);
+  let atoms = 0;
+  for (const amount of elementMol) atoms += amount;
+  const valueOf = (state: Equilibrium): number => {
+    const scale = molarGasConstantJPerMolK * atoms * (check.kind === 'entropy' ? 1 : state.temperatureK);
+    return (reached(state, check) - check.value) / scale;
+  };
+  const lowest = stateAt(range.lowestK);
+  if (lowest !== undefined && valueOf(lowest) > 0) {
+    return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
+  }
+  const highest = stateAt(range.highestK);
+  if (highest !== undefined && valueOf(highest) < 0) {
+    return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
+  }
+  return between(stateAt, valueOf, [range.lowestK, range.highestK], (state) => ({
+    ...state,
+    certificate: { ...state.certificate, heldResidual: Math.abs(valueOf(state)) },
+  }));
+}
+
+function reached(state: Equilibrium, check: Check): number {
+  if (check.kind === 'entropy') return state.entropyJPerK;
+  return check.kind === 'energy' ? state.enthalpyJ - state.pressurePa * state.volumeM3 : state.enthalpyJ;
+}
+
+function between(
+  stateAt: (place: number) => Equilibrium | undefined,
+  valueOf: (state: Equilibrium) => number,
+  bounds: readonly [number, number],
+  finish: (state: Equilibrium) => Equilibrium,
+): Equilibrium | undefined {
+  const low = stateAt(bounds[0]);
+  const high = stateAt(bounds[1]);
+  if (low === undefined || high === undefined) return undefined;
+  const lowValue = valueOf(low);
+  const highValue = valueOf(high);
+  if (!(lowValue < 0) || !(highValue > 0)) return undefined;
+  const end = narrow({ low, high, lowValue, highValue }, bounds, stateAt, valueOf, nearEnough);
+  if (end.kind === 'failed') return undefined;
+  if (end.kind === 'root') return finish(end.state);
+  // The last step of a continuous function between two neighbouring numbers is no jump.
+  if (Math.max(-end.lowValue, end.highValue) < certifiedValue) {
+    return finish(-end.lowValue < end.highValue ? end.low : end.high);
+  }
+  return blended(end.low, end.high, -end.lowValue / (end.highValue - end.lowValue));
+}
+
+/** A held property this near (over R times the atoms, and T) is met. */
+const nearEnough = 1e-12;
+const certifiedValue = 1e-9;
+
+/** Two certified states at one temperature and pressure that share what is held. */
+function blended(low: Equilibrium, high: Equilibrium, share: number): Equilibrium {
+  const mix = (a: number, b: number): number => a + share * (b - a);
+  const set = low.candidates;
+  const amountsMol = low.amountsMol.map((amount, phase) => mix(amount, high.amountsMol[phase] ?? 0));
+  let gasMol = 0;
+  let gasMass = 0;
+  for (let phase = 0; phase < set.gasCount; phase += 1) {
+    gasMol += amountsMol[phase] ?? 0;
+    gasMass += (amountsMol[phase] ?? 0) * (set.molarMassKgPerMol[phase] ?? 0);
+  }
+  const hasBoth = low.gasMol > 0 && high.gasMol > 0;
+  const logFractions = (low.gasMol > 0 ? low : high).logFractions.map((logarithm, phase) => {
+    const amount = amountsMol[phase] ?? 0;
+    return hasBoth && amount > 0 ? Math.log(amount / gasMol) : logarithm;
+  });
+  const enthalpyJ = mix(low.enthalpyJ, high.enthalpyJ);
+  const entropyJPerK = mix(low.entropyJPerK, high.entropyJPerK);
+  const { certificate: one } = low;
+  const { certificate: other } = high;
+  return {
+    ...(share < 0.5 ? low : high),
+    pressurePa: mix(low.pressurePa, high.pressurePa),
+    amountsMol,
+    logFractions,
+    gasMol,
+    gasMolarMassKgPerMol: gasMol > 0 ? gasMass / gasMol : 0,
+    volumeM3: mix(low.volumeM3, high.volumeM3),
+    condensedMassShare: mix(low.condensedMassShare, high.condensedMassShare),
+    enthalpyJ,
+    entropyJPerK,
+    gibbsEnergyJ: enthalpyJ - low.temperatureK * entropyJPerK,
+    frozenHeatCapacityJPerK: mix(low.frozenHeatCapacityJPerK, high.frozenHeatCapacityJPerK),
+    heatCapacityJPerK: null,
+    frozenGamma: null,
+    gamma: null,
+    speedOfSoundMPerS: null,
+    pinned: pinnedBetween(low, high),
+    extrapolated: [...new Set([...low.extrapolated, ...high.extrapolated])],
+    certificate: {
+      elementBalance: Math.max(one.elementBalance, other.elementBalance),
+      largestAffinity: Math.max(one.largestAffinity, other.largestAffinity),
+      potentialResidual: Math.max(one.potentialResidual, other.potentialResidual),
+      heldResidual: 0,
+    },
+  };
+}
+
+function pinnedBetween(low: Equilibrium, high: Equilibrium): Pinned {
+  const set = low.candidates;
+  const leaving: number[] = [];
+  const appearing: number[] = [];
+  let atoms = 0;
+  for (let phase = 0; phase < set.phases.length; phase += 1)
+    atoms += (low.amountsMol[phase] ?? 0) * (set.atomCount[phase] ?? 1);
+  for (let phase = set.gasCount; phase < set.phases.length; phase += 1) {
+    const change = (high.amountsMol[phase] ?? 0) - (low.amountsMol[phase] ?? 0);
+    if (change < -1e-9 * atoms) leaving.push(phase);
+    else if (change > 1e-9 * atoms) appearing.push(phase);
+  }
+  const gasGrows = high.gasMol - low.gasMol > 1e-9 * atoms;
+  const endsHere = leaving.some((phase) => (set.endK[phase] ?? Infinity) <= high.temperatureK);
+  const isStill = leaving.length === 0 && appearing.length === 0 && !gasGrows;
+  return { by: endsHere ? 'end-of-phase' : isStill ? 'transition' : 'phase-change', leaving, appearing, gasGrows };
+}
+
+export function pressureAim(pressurePa: number): Aim {
+  return {
+    isVolume: false,
+    logPressure: Math.log(pressurePa / standardPressurePa),
+    gasKPerBar: 0,
+    seeks: 'temperature',
+    aimed: 0,
+  };
+}
+
+/** The answer of the state at rest, when its certificate holds. */
+export function certified(
+  work: Work,
+  elementMol: Float64Array,
+  aim: Aim,
+  pressurePa: number,
+  descent: Descent,
+  check: Check = { kind: 'none' },
+): Equilibrium | undefined {
+  let atPressure = aim;
+  let pressure = pressurePa;
+  if (aim.isVolume) {
+    // Partial pressures become fractions of their sum.
+    pressure = ((work.gasAmount * work.temperatureK) / aim.gasKPerBar) * standardPressurePa;
+    if (!(pressure > 0)) return undefined;
+    atPressure = { ...aim, isVolume: false, logPressure: Math.log(pressure / standardPressurePa) };
+    takePressure(work, atPressure.logPressure);
+    takeFractions(work, atPressure);
+  }
+  const response = responseOf(work, atPressure);
+  const answer = answerOf(work.set, stateOf(work, pressure), response, elementMol, check, descent.steps);
+  return isCertified(answer.certificate) ? answer : undefined;
+}
+
+interface Kept {
+  readonly potential: Float64Array;
+  readonly present: Int32Array;
+  readonly presentAmount: Float64Array;
+  readonly presentCount: number;
+  readonly gasAmount: number;
+}
+
+function keep(work: Work): Kept {
+  return {
+    potential: work.potential.slice(),
+    present: work.present.slice(),
+    presentAmount: work.presentAmount.slice(),
+    presentCount: work.presentCount,
+    gasAmount: work.gasAmount,
+  };
+}
+
+function restore(work: Work, kept: Kept, aim: Aim): void {
+  work.potential.set(kept.potential);
+  work.present.set(kept.present);
+  work.presentAmount.set(kept.presentAmount);
+  work.presentCount = kept.presentCount;
+  work.gasAmount = kept.gasAmount;
+  takeTemperature(work, aim, work.temperatureK);
+  takeFractions(work, aim);
+}
+
+const standardPressurePa = 1e5;
