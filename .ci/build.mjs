@@ -1,5 +1,5 @@
-// Bundles the programs into dist/: the editor's side, the language server and the command line, each one CommonJS file
-// that needs no node_modules. Writes beside them which packages went in (dist/meta.json), for the third-party notices.
+// Bundles the programs into dist/: the editor's side, the language server, its worker and the command line, each one
+// CommonJS file that needs no node_modules. Writes beside them which packages went in (dist/meta.json), for the third-party notices.
 // Knows no tests and no packaging. Invariant: the same sources give the same bytes; `vscode` alone stays outside.
 import { existsSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
@@ -11,13 +11,14 @@ const minify = process.argv.includes('--minify');
 const programs = [
   { source: 'client/extension.ts', bundle: 'extension.cjs' },
   { source: 'server/main.ts', bundle: 'server.cjs' },
+  { source: 'server/jobs/worker.ts', bundle: 'worker.cjs' },
   // A bundle that throws prints its own line: the command line's stays readable, also in the package.
   { source: 'server/cli.ts', bundle: 'cli.cjs', readable: true, banner: '#!/usr/bin/env node' },
 ].filter(({ source }) => existsSync(path.join(root, source)));
 
 const dist = path.join(root, 'dist');
 mkdirSync(dist, { recursive: true });
-for (const stale of ['extension.cjs', 'server.cjs', 'cli.cjs', 'meta.json']) {
+for (const stale of ['extension.cjs', 'server.cjs', 'worker.cjs', 'cli.cjs', 'meta.json']) {
   rmSync(path.join(dist, stale), { force: true });
 }
 

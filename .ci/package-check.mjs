@@ -1,10 +1,13 @@
 // Checks the package that was built: it holds what a user needs and nothing else, stays small, and comes out the same,
-// byte for byte, when it is built again with the same SOURCE_DATE_EPOCH. Knows nothing of what the programs do.
-// Source of the archive's layout: the .ZIP file format specification, section 4.3.12 (central directory).
+// byte for byte, when it is built again with the same SOURCE_DATE_EPOCH; and its worker, which nothing starts before there
+// is long work, starts and answers. Knows nothing else of what the programs do.
+// Source of the archive's layout: the .ZIP file format specification, sections 4.3.7 (local header) and
+// 4.3.12 (central directory).
 import { spawnSync } from 'node:child_process';
-import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
+import { inflateRawSync } from 'node:zlib';
 
 const root = path.resolve(import.meta.dirname, '..');
 const LARGEST_BYTES = 2_000_000;
@@ -20,6 +23,7 @@ const CONTENTS = [
   ...(existsSync(path.join(root, 'server/cli.ts')) ? ['extension/dist/cli.cjs'] : []),
   'extension/dist/extension.cjs',
   'extension/dist/server.cjs',
+  'extension/dist/worker.cjs',
   'extension/grammar/language-configuration.json',
   'extension/grammar/stokehold.tmLanguage.json',
   'extension/package.json',
@@ -41,12 +45,36 @@ export const packageChecks = {
     const { length } = readFileSync(packagePath(path.join(root, 'dist')));
     if (length >= LARGEST_BYTES) throw new Error(`it has ${length} bytes`);
   },
+  'the packaged worker starts by itself and answers'() {
+    const folder = mkdtempSync(path.join(os.tmpdir(), 'stokehold-package-'));
+    try {
+      const worker = path.join(folder, 'worker.cjs');
+      writeFileSync(worker, entryOf(readFileSync(packagePath(path.join(root, 'dist'))), 'extension/dist/worker.cjs'));
+      const args = ['--eval', ASK_WORKER, worker];
+      const { stdout, stderr } = spawnSync(process.execPath, args, { cwd: folder, encoding: 'utf8', timeout: 20_000 });
+      const expected = "ready\nfailed: there is no job 'nothing of that name'\n";
+      if (stdout !== expected) throw new Error(`it said ${JSON.stringify(stdout)}\n${stderr}`);
+    } finally {
+      rmSync(folder, { recursive: true });
+    }
+  },
   'the package is the same when built again'() {
     const first = buildAside();
     const second = buildAside();
     if (!first.equals(second)) throw new Error('two builds with one SOURCE_DATE_EPOCH differ');
   },
 };
+
+/** Starts a worker, hands it a job that no table has, and prints what it says until it has answered. */
+const ASK_WORKER = `
+const { Worker } = require('node:worker_threads');
+const worker = new Worker(process.argv[1]);
+worker.on('message', ({ kind, message }) => {
+  console.log(message === undefined ? kind : kind + ': ' + message);
+  if (kind === 'ready') worker.postMessage({ name: 'nothing of that name', input: null, flag: null });
+  else void worker.terminate();
+});
+`;
 
 function buildAside() {
   const folder = mkdtempSync(path.join(os.tmpdir(), 'stokehold-package-'));
@@ -67,15 +95,34 @@ function packagePath(folder) {
   return path.join(folder, `stokehold-${version}.vsix`);
 }
 
-/** The names in an archive's central directory. */
+/** The names in an archive. */
 function entriesOf(archive) {
+  return [...directoryOf(archive)].map(({ name }) => name);
+}
+
+/** The content of one of them. */
+function entryOf(archive, wanted) {
+  for (const { name, method, size, header } of directoryOf(archive)) {
+    if (name !== wanted) continue;
+    const start = header + 30 + archive.readUInt16LE(header + 26) + archive.readUInt16LE(header + 28);
+    const content = archive.subarray(start, start + size);
+    return method === 8 ? inflateRawSync(content) : content;
+  }
+  throw new Error(`the package has no ${wanted}`);
+}
+
+/** An archive's central directory. */
+function* directoryOf(archive) {
   const end = archive.lastIndexOf(Buffer.from('PK\x05\x06', 'latin1'));
-  const names = [];
   let offset = archive.readUInt32LE(end + 16);
   for (let left = archive.readUInt16LE(end + 10); left > 0; left -= 1) {
     const nameLength = archive.readUInt16LE(offset + 28);
-    names.push(archive.toString('utf8', offset + 46, offset + 46 + nameLength));
+    yield {
+      name: archive.toString('utf8', offset + 46, offset + 46 + nameLength),
+      method: archive.readUInt16LE(offset + 10),
+      size: archive.readUInt32LE(offset + 20),
+      header: archive.readUInt32LE(offset + 42),
+    };
     offset += 46 + nameLength + archive.readUInt16LE(offset + 30) + archive.readUInt16LE(offset + 32);
   }
-  return names;
 }

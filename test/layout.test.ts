@@ -89,6 +89,19 @@ const RULES: readonly HouseRule[] = [
     to: { path: '^server/(cli/|[^/]+\\.ts$)' },
   },
   {
+    name: 'jobs-run-core',
+    reason:
+      'what a worker does is a function of core from plain data to plain data; a worker knows no text and no client',
+    from: { path: '^server/jobs/' },
+    to: { path: OURS, pathNot: '^server/(jobs|core)/' },
+  },
+  {
+    name: 'nothing-imports-the-worker',
+    reason: 'the worker is a program of its own; what it does is in serve-jobs.ts',
+    from: { path: '^(grammar|server|client)/' },
+    to: { path: '^server/jobs/worker\\.ts$' },
+  },
+  {
     name: 'lsp-reports-nothing',
     reason: "the server converts and schedules; documents for printing are the command line's",
     from: { path: '^server/lsp/' },
