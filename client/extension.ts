@@ -10,6 +10,7 @@ import {
   type ServerOptions,
 } from 'vscode-languageclient/node';
 import { readFile, type FileAnswer } from './read-file.ts';
+import { tellingWhenOpened, tellWhatIsVisible } from './visible-ranges.ts';
 
 /** What other extensions and the editor tests may ask of the activated extension. */
 export interface StokeholdApi {
@@ -27,10 +28,12 @@ export function activate(context: ExtensionContext): StokeholdApi {
     // No scheme is named: scenarios in unsaved buffers, remote folders and virtual workspaces are served alike.
     documentSelector: [{ language: 'stokehold' }],
     initializationOptions: { readFile: true, suggestCommand: 'editor.action.triggerSuggest' },
+    middleware: tellingWhenOpened(() => client),
   };
   const started = new LanguageClient('stokehold', 'Stokehold', serverOptions, clientOptions);
   client = started;
   context.subscriptions.push(
+    ...tellWhatIsVisible(() => client),
     started.onRequest<FileAnswer, void>('stokehold/readFile', ({ uri }: { uri: string }) => readFile(uri)),
     // A server that failed too often is not started again by the client itself, so there is a way to ask for it.
     commands.registerCommand('stokehold.restartServer', () => started.restart()),

@@ -3,7 +3,7 @@
 // exactly as typed. It breaks and joins no lines, and knows no units (the caller says what is one).
 // Invariant: lexing the result gives the tokens and comments of the text line by line, and formatting the result
 // again changes nothing.
-import { parse } from './parse.ts';
+import { parse, type ParseOptions } from './parse.ts';
 import { printMarks } from './print-marks.ts';
 import type { Item, PrintMarks } from './print-marks.ts';
 import * as t from './tokens.ts';
@@ -29,8 +29,14 @@ export function format(text: string, isUnit: IsUnit): string {
 }
 
 /** One edit for each line that touches the range and is not yet as it should be, in order. */
-export function formatRange(text: string, isUnit: IsUnit, start: number, end: number): TextEdit[] {
-  const lines = formatLines(text, isUnit);
+export function formatRange(
+  text: string,
+  isUnit: IsUnit,
+  start: number,
+  end: number,
+  size: Pick<ParseOptions, 'largestText'> = {},
+): TextEdit[] {
+  const lines = formatLines(text, isUnit, size);
   // A selection that ends in column 0 does not mean the line it ends in.
   const touches = (line: SourceLine): boolean => line.end >= start && (line.start < end || line.start === start);
   return lines
@@ -50,9 +56,13 @@ interface SourceLine {
   comment: Token | undefined;
 }
 
-function formatLines(text: string, isUnit: IsUnit): { readonly line: SourceLine; readonly formatted: string }[] {
+function formatLines(
+  text: string,
+  isUnit: IsUnit,
+  { largestText }: Pick<ParseOptions, 'largestText'>,
+): { readonly line: SourceLine; readonly formatted: string }[] {
   const lines = sourceLines(text);
-  const tree = parse(text, isUnit);
+  const tree = parse(text, isUnit, largestText === undefined ? {} : { largestText });
   // With more problems than are kept, or with parts left unread, nobody can say which lines are whole.
   const isUnreadable = tree.truncated || tree.fileProblems.length > 0;
   if (isUnreadable) return lines.map((line) => ({ line, formatted: text.slice(line.start, line.end) }));

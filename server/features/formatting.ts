@@ -11,14 +11,15 @@ export interface TextChange {
   readonly newText: string;
 }
 
-/** The edits for a whole text, in order and not touching each other. */
-export function formatting(text: string): TextChange[] {
-  return rangeFormatting(text, 0, text.length);
+/** The edits for a whole text, in order and not touching each other; none for one that is longer than `largestText`. */
+export function formatting(text: string, largestText?: number): TextChange[] {
+  return rangeFormatting(text, 0, text.length, largestText);
 }
 
 /** The edits for the lines that the range touches. */
-export function rangeFormatting(text: string, start: number, end: number): TextChange[] {
-  return formatRange(text, isUnitWord, start, end).map((change) => narrowed(text, change));
+export function rangeFormatting(text: string, start: number, end: number, largestText?: number): TextChange[] {
+  const size = largestText === undefined ? {} : { largestText };
+  return formatRange(text, isUnitWord, start, end, size).map((change) => narrowed(text, change));
 }
 
 /** The same change without the equal ends of old and new text. */

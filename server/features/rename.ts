@@ -1,6 +1,7 @@
 // Gives a definition or value another name, everywhere it is given and spoken of in the files at hand. Quotes come and go
 // as the new name needs them. Refuses, with a plain sentence, what would change the meaning of the text: names that are
 // taken, words of the language, units, and substances of the catalogue. Invariant: what it edits are whole words.
+import { isPartial } from '../../grammar/parse.ts';
 import { isReservedWord } from '../../grammar/words.ts';
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
@@ -57,6 +58,10 @@ function renamed(files: readonly EvaluatedFile[], path: string, offset: number):
   }
   if (subject?.kind !== 'name') return { refusal: 'There is no name of a definition or value here.' };
   const { place, name, role } = subject;
+  // Places nobody has read would keep the old name.
+  if (files.some(({ tree }) => isPartial(tree))) {
+    return { refusal: 'A file is so large that only a part of it is read. Nothing can be renamed safely in it.' };
+  }
   const places = placesOfName(files, name);
   if (places.filter((one) => one.role === 'definition').length === 1) return { place, name, places };
   // A name given twice stands for nothing; renaming one of the two is the way out, and touches no other place.

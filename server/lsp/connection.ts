@@ -6,31 +6,41 @@ import {
   DidChangeConfigurationNotification,
   DidChangeWatchedFilesNotification,
   FileChangeType,
+  NotificationType,
   PositionEncodingKind,
   RequestType,
   TextDocumentSyncKind,
   type Connection,
   type Diagnostic,
   type InitializeResult,
+  type Range,
 } from 'vscode-languageserver';
 import { diagnostics } from '../features/diagnostics.ts';
 import { abilitiesOf, folderAddresses } from './abilities.ts';
 import { addressOf } from './addresses.ts';
 import { toDiagnostic } from './convert.ts';
 import { OpenDocuments } from './documents.ts';
-import { Evaluations, type Evaluated } from './evaluations.ts';
+import { Evaluations, type Evaluated, type Tempo } from './evaluations.ts';
 import { UsedFiles, type AskForFile, type FileAnswer } from './files.ts';
 import { Publications, type Said } from './publications.ts';
 import { answerRequests, requestCapabilities } from './requests.ts';
 import { Schedule } from './schedule.ts';
 import { asSettings, DEFAULT_SETTINGS } from './settings.ts';
+import { VisibleRanges } from './visible-ranges.ts';
 
 /** The client's part: `{ uri }` to `{ text }`, or `{ fault: 'missing' | 'unreadable', detail? }`. */
 export const readFileRequest = new RequestType<{ uri: string }, FileAnswer, void>('stokehold/readFile');
 
+/** What the client shows of a document: `{ uri, ranges }`, sent again whenever it changes. */
+export const visibleRangesNotification = new NotificationType<{ uri: string; ranges: readonly Range[] }>(
+  'stokehold/visibleRanges',
+);
+
 export interface Host {
   /** Reads a file for clients that do not answer `stokehold/readFile`. Without it, their used files are unreadable. */
   readonly readFile?: AskForFile;
+  /** Instead of the tempo of a person who types; for tests. */
+  readonly tempo?: Tempo;
 }
 
 /** Answers on the connection until it ends. Returns once listening has begun. */
@@ -48,7 +58,15 @@ export function startServer(connection: Connection, host: Host = {}): void {
     if (host.readFile) return host.readFile(uri, limits);
     return Promise.resolve({ fault: 'unreadable', detail: 'This editor does not hand files to the language server.' });
   });
-  const evaluations = new Evaluations(documents, files, () => folders, log);
+  const visible = new VisibleRanges((uri) => documents.get(uri) !== undefined);
+  const evaluations = new Evaluations(
+    documents,
+    files,
+    () => folders,
+    log,
+    host.tempo,
+    (text, document) => visible.readingOf(text, document, settings.largestText),
+  );
   const publications = new Publications(
     (address) => documents.at(address),
     (uri, version, list) => {
@@ -158,12 +176,21 @@ export function startServer(connection: Connection, host: Host = {}): void {
     }
   });
 
+  connection.onNotification(visibleRangesNotification, (message) => {
+    const uri = visible.take(message);
+    const length = uri === null ? 0 : (documents.get(uri)?.getText().length ?? 0);
+    if (uri === null || length <= settings.largestText) return;
+    schedule.after(settings.pauseMs, uri);
+    lookAgain(addressOf(uri), uri);
+  });
+
   answerRequests({
     connection,
     documents,
     evaluations,
     abilities: () => abilities,
     settings: () => settings,
+    readingOf: (document) => visible.readingOf(document.getText(), document, settings.largestText),
     log,
   });
 
@@ -186,6 +213,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
       const address = addressOf(uri);
       schedule.drop(uri);
       evaluations.drop(uri);
+      visible.drop(uri);
       publications.close(address);
       fileMayHaveChanged(address);
     },

@@ -8,7 +8,7 @@ import { findingsOf } from '../findings/registry.ts';
 import { MemoStore, type MemoRun } from '../jobs/memo.ts';
 import type { Answer } from '../scenario/answer.ts';
 import { evaluateInSteps, type Underway } from '../scenario/evaluate.ts';
-import type { ReadAnswer } from '../scenario/files.ts';
+import type { ReadAnswer, Reading } from '../scenario/files.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
 import { addressOf, folderOf, isInside, uriOf } from './addresses.ts';
@@ -72,6 +72,8 @@ export class Evaluations {
     private readonly folders: () => readonly string[],
     private readonly log: (message: string) => void,
     private readonly tempo: Tempo = TEMPO,
+    /** How a text is to be read, and that of an open document in particular. */
+    private readonly readingOf: (text: string, document: TextDocument | null) => Reading = () => ({}),
   ) {}
 
   /**
@@ -210,14 +212,20 @@ export class Evaluations {
     const own = addressOf(copy.uri);
     const limits = this.#limits(own);
     return (path) => {
-      if (path === own) return { text: copy.getText() };
+      if (path === own) return this.#asRead(copy.getText(), copy);
       if (uriOf(path) === null) {
         return { fault: 'unreadable', detail: 'This document has no folder yet. Save it first.' };
       }
       if (!isInside(path, limits)) return { fault: 'outside' };
       const open = this.documents.at(path);
-      return open ? { text: open.getText() } : this.files.get(path, limits);
+      if (open) return this.#asRead(open.getText(), open);
+      const answer = this.files.get(path, limits);
+      return answer !== 'wanted' && 'text' in answer ? this.#asRead(answer.text, null) : answer;
     };
+  }
+
+  #asRead(text: string, document: TextDocument | null): ReadAnswer {
+    return { text, reading: this.readingOf(text, document) };
   }
 
   /** The workspace's folders; for a document in none of them, its own folder. */
@@ -237,7 +245,10 @@ export class Evaluations {
 
 function isSame(first: ReadAnswer, second: ReadAnswer): boolean {
   if (first === 'wanted' || second === 'wanted') return first === second;
-  if ('text' in first) return 'text' in second && first.text === second.text;
+  if ('text' in first) {
+    if (!('text' in second) || first.text !== second.text) return false;
+    return JSON.stringify(first.reading) === JSON.stringify(second.reading);
+  }
   return !('text' in second) && first.fault === second.fault && first.detail === second.detail;
 }
 

@@ -29,7 +29,7 @@ export function navigationCapabilities({ prepareRename: canPrepare }: Abilities)
 }
 
 /** Answers the requests from now on. */
-export function answerNavigation({ connection, documents, evaluations, abilities, log }: Serving): void {
+export function answerNavigation({ connection, documents, evaluations, abilities, readingOf, log }: Serving): void {
   connection.onDefinition(
     answered('Definition', [], log, async ({ textDocument, position }) => {
       const own = await evaluations.current(textDocument.uri);
@@ -82,8 +82,10 @@ export function answerNavigation({ connection, documents, evaluations, abilities
 
   connection.onFoldingRanges(
     answered('Folding', [], log, ({ textDocument }) => {
-      const text = documents.get(textDocument.uri)?.getText();
-      return Promise.resolve(text === undefined ? [] : folding(parse(text, isUnitWord)).map(toFoldingRange));
+      const document = documents.get(textDocument.uri);
+      if (!document) return Promise.resolve([]);
+      const tree = parse(document.getText(), isUnitWord, readingOf(document));
+      return Promise.resolve(folding(tree).map(toFoldingRange));
     }),
   );
 

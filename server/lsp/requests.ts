@@ -76,7 +76,7 @@ export function answerRequests(serving: Serving): void {
   connection.onDocumentFormatting(
     answered('Formatting', [], log, ({ textDocument }): Promise<TextEdit[]> => {
       const document = documents.copy(textDocument.uri);
-      const changes = document ? formatting(document.getText()) : [];
+      const changes = document ? formatting(document.getText(), settings().largestText) : [];
       return Promise.resolve(document ? changes.map((change) => toTextEdit(change, document)) : []);
     }),
   );
@@ -86,7 +86,7 @@ export function answerRequests(serving: Serving): void {
       const document = documents.copy(textDocument.uri);
       if (!document) return Promise.resolve([]);
       const [start, end] = [offsetAt(document, range.start), offsetAt(document, range.end)];
-      const changes = rangeFormatting(document.getText(), start, end);
+      const changes = rangeFormatting(document.getText(), start, end, settings().largestText);
       return Promise.resolve(changes.map((change) => toTextEdit(change, document)));
     }),
   );

@@ -3,6 +3,8 @@
 import type { Connection } from 'vscode-languageserver';
 import type { Abilities } from './abilities.ts';
 import type { OpenDocuments } from './documents.ts';
+import type { TextDocument } from 'vscode-languageserver-textdocument';
+import type { Reading } from '../scenario/files.ts';
 import type { Evaluations } from './evaluations.ts';
 import type { Settings } from './settings.ts';
 
@@ -12,5 +14,7 @@ export interface Serving {
   readonly evaluations: Evaluations;
   readonly abilities: () => Abilities;
   readonly settings: () => Settings;
+  /** How an open document is to be read: whole, or what is seen of it. */
+  readonly readingOf: (document: TextDocument) => Reading;
   readonly log: (message: string) => void;
 }

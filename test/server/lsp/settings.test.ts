@@ -20,6 +20,15 @@ describe('settings', () => {
     expect(asSettings({ pause }).pauseMs).toBe(read);
   });
 
+  it.each([
+    [1, 1_000_000],
+    [2.5, 2_500_000],
+    [0, 10_000],
+    [1e9, 16_000_000],
+  ])('a largest file of %d MB is %d characters', (largestFile, read) => {
+    expect(asSettings({ largestFile }).largestText).toBe(read);
+  });
+
   it('take single severities and leave out what is none', () => {
     const { severities } = asSettings({
       severity: { 'name/unknown': 'hint', 'unit/missing': 'off', 'x/y': 'loud', 'x/z': 3 },
