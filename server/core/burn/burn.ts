@@ -94,6 +94,7 @@ export type BurnFault =
 
 /** A kilogram of fuel with its oxidant, before it burns. */
 export interface Charge {
+  readonly kind: 'charge';
   readonly oxidantKgPerKg: number;
   /** Null where λ has no meaning for this fuel or oxidant. */
   readonly lambda: number | null;
@@ -153,7 +154,7 @@ export interface Burn {
   readonly zoneCharge: Charge | null;
   /** The whole charge at its overall λ, loss taken out. */
   flame(): Equilibrium | NoEquilibrium;
-  /** Null without a zone, or with one whose enthalpy is unknown. */
+  /** Null without a zone, or where its enthalpy is unknown. */
   zone(): Equilibrium | NoEquilibrium | null;
   /** In the order of `cooledToK`. */
   readonly cooled: readonly CooledState[];
@@ -190,9 +191,11 @@ export interface PathEvent {
 
 export const eventPrecisionK = 0.01;
 
-/** A state on a path, at a temperature that was asked for. */
+/** States at the temperatures that were asked for, and what happens between them. */
 export interface CoolingPath {
   readonly candidates: CandidateSet;
+  /** Falling, as the states are. */
+  readonly temperaturesK: readonly number[];
   readonly states: readonly BurnStateOrNone[];
   /** Condensed phases of the first state. */
   readonly presentAtStart: readonly number[];
