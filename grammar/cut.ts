@@ -3,17 +3,88 @@
 // parse of the section it falls in. A header at any depth ends whatever is open, and so does a line that starts with
 // `scenario`, `use`, `let` or `expect` and is no entry: this is what keeps one broken definition from its neighbours.
 // Invariant: sections are in order and disjoint, start and end with something other than space, newline or a trailing
-// comment, and hold every such character of the file except stand-alone comments. Time is linear in the text.
+// comment, and hold every such character of the file except stand-alone comments. Time is linear in the text. Cutting
+// again from an earlier version gives what cutting afresh would.
 import { startsEntry, wordAt } from './tokens.ts';
 import type { Span } from './tree.ts';
 import { asStatementWord, isKindWord } from './words.ts';
 
+/** Where a section stands. */
+export interface Cut extends Span {
+  /** A header at the start of its line: it would begin a section there whatever stood above. */
+  readonly isFresh: boolean;
+}
+
 /** Where each section of a file stands, in order. */
-export function cut(text: string): Span[] {
+export function cut(text: string): Cut[] {
   const cutter = new Cutter(text);
-  const reader = new SegmentReader(text);
+  const reader = new SegmentReader(text, 0);
   for (let segment = reader.next(); segment !== undefined; segment = reader.next()) cutter.take(segment);
   return cutter.finish();
+}
+
+/** The sections of a text that differ from those of an earlier version. */
+export interface Recut {
+  /** So many at the start are where they were. */
+  readonly kept: number;
+  readonly cuts: readonly Cut[];
+  /** So many at the end are what they were, `shift` characters on. */
+  readonly moved: number;
+  readonly shift: number;
+}
+
+/** The same as `cut`, reading no more than the surroundings of what has changed since an earlier version. */
+export function cutAgain(text: string, before: string, cutsBefore: readonly Cut[]): Recut {
+  const sameStart = commonStart(text, before);
+  const sameEnd = commonEnd(text, before, sameStart);
+  const shift = text.length - before.length;
+  // The last header that stands, as a whole, above the change: the section behind it starts there too.
+  let kept = Math.max(0, cutsBefore.length - 2);
+  while (kept > 0 && !(cutsBefore[kept]?.isFresh === true && (cutsBefore[kept + 1]?.start ?? Infinity) <= sameStart)) {
+    kept--;
+  }
+  // The first header below the change, once it is met again.
+  let next = kept;
+  const isMetAgain = (start: number): boolean => {
+    while ((cutsBefore[next]?.start ?? Infinity) < start - shift) next++;
+    return cutsBefore[next]?.start === start - shift && cutsBefore[next]?.isFresh === true;
+  };
+  const cutter = new Cutter(text);
+  const reader = new SegmentReader(text, kept === 0 ? 0 : lineStartOf(text, cutsBefore[kept]?.start ?? 0));
+  for (let segment = reader.next(); segment !== undefined; segment = reader.next()) {
+    cutter.take(segment);
+    const start = cutter.freshStart;
+    if (start !== undefined && start >= text.length - sameEnd && isMetAgain(start)) {
+      return { kept, cuts: cutter.closed, moved: cutsBefore.length - next, shift };
+    }
+  }
+  return { kept, cuts: cutter.finish(), moved: 0, shift };
+}
+
+function commonStart(first: string, second: string): number {
+  const most = Math.min(first.length, second.length);
+  let length = 0;
+  while (length < most && first.charCodeAt(length) === second.charCodeAt(length)) length++;
+  return length;
+}
+
+/** How many characters at the end are the same, none of them in the common start. */
+function commonEnd(first: string, second: string, start: number): number {
+  const most = Math.min(first.length, second.length) - start;
+  let length = 0;
+  while (
+    length < most &&
+    first.charCodeAt(first.length - 1 - length) === second.charCodeAt(second.length - 1 - length)
+  ) {
+    length++;
+  }
+  return length;
+}
+
+function lineStartOf(text: string, offset: number): number {
+  let start = offset;
+  while (start > 0 && text.charCodeAt(start - 1) !== 10 && text.charCodeAt(start - 1) !== 13) start--;
+  return start;
 }
 
 /** A stretch of one line: up to a newline, a semicolon, or a brace. */
@@ -23,6 +94,8 @@ interface Segment {
   readonly end: number;
   /** Where the `##` lines right above start, or `start`. */
   readonly docStart: number;
+  /** No other segment stands before it in its line. */
+  readonly startsLine: boolean;
   readonly startsInColumn0: boolean;
   readonly ending: 'brace-open' | 'brace-close' | 'line';
   /** The offset of the brace that ends it. */
@@ -33,12 +106,15 @@ interface Segment {
 
 class SegmentReader {
   private readonly text: string;
-  private offset = 0;
-  private lineStart = 0;
+  private offset: number;
+  private lineStart: number;
   private docStart: number | undefined;
 
-  constructor(text: string) {
+  /** Reads from the start of a line on. */
+  constructor(text: string, lineStart: number) {
     this.text = text;
+    this.offset = lineStart;
+    this.lineStart = lineStart;
   }
 
   next(): Segment | undefined {
@@ -107,6 +183,7 @@ class SegmentReader {
       start: segmentStart,
       end: isEmpty ? segmentStart : end,
       docStart,
+      startsLine,
       startsInColumn0,
       ending,
       endingOffset,
@@ -116,18 +193,28 @@ class SegmentReader {
 }
 
 type OpenSection =
-  | { readonly kind: 'definition'; readonly start: number; end: number }
+  | { readonly kind: 'definition'; readonly start: number; end: number; readonly isFresh: boolean }
   /** `takesAll`: it broke into an open definition, whose stray rest it takes along so that one slip stays one finding. */
   | { readonly kind: 'statement'; readonly start: number; end: number; readonly takesAll: boolean; depth: number }
   | { readonly kind: 'stray'; readonly start: number; end: number };
 
 class Cutter {
   private readonly text: string;
-  private readonly places: Span[] = [];
+  private readonly places: Cut[] = [];
   private open: OpenSection | undefined;
 
   constructor(text: string) {
     this.text = text;
+  }
+
+  /** Where the definition that is open now starts, if that does not depend on what stands above. */
+  get freshStart(): number | undefined {
+    return this.open?.kind === 'definition' && this.open.isFresh ? this.open.start : undefined;
+  }
+
+  /** The sections so far, without the one that is open. */
+  get closed(): readonly Cut[] {
+    return this.places;
   }
 
   take(segment: Segment): void {
@@ -142,7 +229,7 @@ class Cutter {
     else if (segment.ending === 'brace-close') this.takeCloseBrace(segment);
   }
 
-  finish(): Span[] {
+  finish(): Cut[] {
     this.close();
     return this.places;
   }
@@ -154,7 +241,7 @@ class Cutter {
 
   private startDefinition(segment: Segment): void {
     this.close();
-    this.open = { kind: 'definition', start: segment.docStart, end: segment.end };
+    this.open = { kind: 'definition', start: segment.docStart, end: segment.end, isFresh: segment.startsLine };
   }
 
   private startStatement(segment: Segment): void {
@@ -197,7 +284,9 @@ class Cutter {
   }
 
   private close(): void {
-    if (this.open !== undefined) this.places.push({ start: this.open.start, end: this.open.end });
+    const { open } = this;
+    if (open === undefined) return;
+    this.places.push({ start: open.start, end: open.end, isFresh: open.kind === 'definition' && open.isFresh });
     this.open = undefined;
   }
 }

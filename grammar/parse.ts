@@ -1,7 +1,8 @@
 // A whole file, or one section of it, into the syntax tree. The text is cut into sections and each is parsed alone, so
-// that a section whose text is unchanged is taken over from the tree before. It does not know what names mean.
+// that a section whose text is unchanged is taken over from the tree before; above a change it keeps its very place. It
+// does not know what names mean.
 // Invariants: any text gives a tree, nothing is thrown; a section is a pure function of its text and the unit words.
-import { cut } from './cut.ts';
+import { cut, cutAgain, type Cut } from './cut.ts';
 import { entryColon, isLineBreak } from './lines.ts';
 import { spanOf } from './nodes.ts';
 import { readDefinition, startsDefinition } from './read-definition.ts';
@@ -36,21 +37,70 @@ export interface ParseOptions {
 export function parse(text: string, isUnit: IsUnit, options: ParseOptions = {}): SyntaxTree {
   const largestText = options.largestText ?? LARGEST_TEXT;
   const isTooLarge = text.length > largestText;
-  const seen = isTooLarge ? (options.visible ?? [{ start: 0, end: largestText }]) : undefined;
-  const known = new Map(options.previous?.sections.map(({ section }) => [section.text, section]));
-  const sections: PlacedSection[] = [];
-  let problemCount = 0;
-  for (const place of cut(text)) {
-    if (seen !== undefined && !seen.some((window) => place.start < window.end && window.start < place.end)) continue;
-    const sectionText = text.slice(place.start, place.end);
-    const section = known.get(sectionText) ?? parseSection(sectionText, isUnit);
-    known.set(sectionText, section);
-    problemCount += section.problems.length;
-    sections.push({ ...place, section });
-  }
+  const sections = isTooLarge
+    ? parseCuts(text, seenCuts(text, options.visible ?? [{ start: 0, end: largestText }]), options.previous, isUnit)
+    : parseWhole(text, options.previous, isUnit);
+  const problemCount = sections.reduce((count, { section }) => count + section.problems.length, 0);
   const megabytes = String(largestText / 1_000_000);
   const fileProblems = isTooLarge ? [sectionProblems.tooLarge(firstLine(text), megabytes)] : [];
   return { text, sections, fileProblems, truncated: problemCount + fileProblems.length > MOST_PROBLEMS };
+}
+
+/** How the sections of whole texts were cut, to cut the next version from. */
+const cutsOf = new WeakMap<readonly PlacedSection[], readonly Cut[]>();
+
+function parseWhole(text: string, previous: SyntaxTree | undefined, isUnit: IsUnit): readonly PlacedSection[] {
+  const before = previous && cutsOf.get(previous.sections);
+  if (!previous || !before) {
+    const cuts = cut(text);
+    const sections = parseCuts(text, cuts, previous, isUnit);
+    cutsOf.set(sections, cuts);
+    return sections;
+  }
+  const { kept, cuts, moved, shift } = cutAgain(text, previous.text, before);
+  const behind = before.length - moved;
+  const changed = { sections: previous.sections.slice(kept, behind) };
+  const sections = previous.sections.slice(0, kept);
+  const allCuts = before.slice(0, kept);
+  for (const placed of parseCuts(text, cuts, changed, isUnit)) sections.push(placed);
+  for (const one of cuts) allCuts.push(one);
+  for (let index = behind; index < before.length; index++) {
+    const [placed, where] = [previous.sections[index], before[index]];
+    if (!placed || !where) continue;
+    sections.push(shift === 0 ? placed : { ...movedBy(where, shift), section: placed.section });
+    allCuts.push(shift === 0 ? where : { ...movedBy(where, shift), isFresh: where.isFresh });
+  }
+  cutsOf.set(sections, allCuts);
+  return sections;
+}
+
+function seenCuts(text: string, seen: readonly Span[]): readonly Cut[] {
+  return cut(text).filter(({ start, end }) => seen.some((window) => start < window.end && window.start < end));
+}
+
+/** The sections at some cuts, each taken from the previous ones where that has its text. */
+function parseCuts(
+  text: string,
+  cuts: readonly Cut[],
+  previous: Pick<SyntaxTree, 'sections'> | undefined,
+  isUnit: IsUnit,
+): readonly PlacedSection[] {
+  const known = new Map(previous?.sections.map(({ section }) => [section.text, section]));
+  return cuts.map(({ start, end }) => {
+    const sectionText = text.slice(start, end);
+    const section = known.get(sectionText) ?? parseSection(previous ? detached(sectionText) : sectionText, isUnit);
+    known.set(sectionText, section);
+    return { start, end, section };
+  });
+}
+
+/**
+ * The text in memory of its own. A slice keeps the whole text alive that it was taken from: in a file that is typed at,
+ * one text for each section ever changed.
+ */
+function detached(text: string): string {
+  const copy: unknown = JSON.parse(JSON.stringify(text));
+  return typeof copy === 'string' ? copy : text;
 }
 
 /**
@@ -118,13 +168,11 @@ function docText(comments: readonly Token[], before: number): string {
   return lines.join('\n');
 }
 
-const moveSpan = ({ start, end }: Span, by: number): Span => ({ start: start + by, end: end + by });
+const movedBy = ({ start, end }: Span, by: number): Span => ({ start: start + by, end: end + by });
 
 function moveProblem(problem: Problem, by: number): Problem {
-  const moved = { ...problem, span: moveSpan(problem.span, by) };
-  return problem.fix === undefined
-    ? moved
-    : { ...moved, fix: { ...problem.fix, span: moveSpan(problem.fix.span, by) } };
+  const moved = { ...problem, span: movedBy(problem.span, by) };
+  return problem.fix === undefined ? moved : { ...moved, fix: { ...problem.fix, span: movedBy(problem.fix.span, by) } };
 }
 
 const firstLine = (text: string): Span => ({ start: 0, end: /^[^\r\n]*/.exec(text)?.[0].length ?? 0 });

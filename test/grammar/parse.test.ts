@@ -116,6 +116,47 @@ describe('sections', () => {
     expect(after).toEqual(parse(after.text, isTestUnit));
   });
 
+  test('above a change they keep their very place, and below it all that moves is where they start', () => {
+    const text = readExample('dunlin.stoke');
+    const before = parse(text, isTestUnit);
+    const middle = before.sections[Math.floor(before.sections.length / 2)];
+    const [start, end] = [middle?.start ?? 0, middle?.end ?? 0];
+    const after = parse(`${text.slice(0, end)} # x${text.slice(end)}`, isTestUnit, { previous: before });
+    expect(after).toEqual(parse(after.text, isTestUnit));
+    const above = after.sections.filter((placed) => before.sections.includes(placed));
+    expect(above.length).toBeGreaterThan(before.sections.length / 4);
+    for (const placed of above) expect(placed.start).toBeLessThan(start);
+    for (const [index, { section }] of after.sections.entries()) expect(section).toBe(before.sections[index]?.section);
+  });
+
+  test('are after any edits what they are of the text alone', () => {
+    const snippets = [
+      '#', '##', '## so\n', '\n', '\r\n', '\r', ' ', '{', '}', '(', ')', ';', '"', "'", ':', '+', '->', ',', '\ufeff',
+      'blend a {\n', 'blend a {', '}\n', 'duty b\n', 'let c = 3\n', 'let ', 'expect ', 'use: ', '3 kg d\n', '\u00a0',
+    ]; // prettier-ignore
+    const edit = fc.record({
+      at: fc.double({ min: 0, max: 1, noNaN: true }),
+      removed: fc.oneof(fc.constant(0), fc.nat(3), fc.nat(80), fc.nat(1000)),
+      snippet: fc.oneof(fc.constant(''), fc.constantFrom(...snippets)),
+      moved: fc.boolean(),
+    });
+    const start = fc.oneof(
+      fc.constantFrom(...names.map(readExample)),
+      fc.array(fc.constantFrom(...snippets), { maxLength: 30 }).map((pieces) => pieces.join('')),
+    );
+    const holds = fc.property(start, fc.array(edit, { minLength: 1, maxLength: 12 }), (text, edits) => {
+      let tree = parse(text, isTestUnit);
+      for (const { at, removed, snippet, moved } of edits) {
+        const from = Math.floor(at * tree.text.length);
+        const taken = tree.text.slice(from, from + removed);
+        const rest = tree.text.slice(0, from) + snippet + tree.text.slice(from + removed);
+        tree = parse(moved ? rest + taken : rest, isTestUnit, { previous: tree });
+        expect(tree).toEqual(parse(tree.text, isTestUnit));
+      }
+    });
+    fc.assert(holds, { numRuns: 150 });
+  });
+
   test('carry the doc lines above them', () => {
     expect(readSections('## One.\n##two  \nlet a = 3\n')).toEqual(['[One.\ntwo] let a = 3']);
     expect(readSections('## apart\n\nlet a = 3\n')).toEqual(['let a = 3']);
