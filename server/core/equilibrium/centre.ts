@@ -15,8 +15,8 @@ import type { Work } from './work.ts';
 
 const mostSteps = 200;
 const lastGap = 1e-24;
-/** Below this the gas's distance from equilibrium is known better by its change than by its value. */
-const finestSlack = 1e-8;
+/** How far the gas's distance from equilibrium may be off its value; the next step takes it back. */
+const rounding = 1e-13;
 
 /** Follows the path for the present `cost`, basis and amounts; true when it arrived. Leaves potentials and amounts in `work`. */
 export function followCentre(work: Work, aim: Aim): boolean {
@@ -32,6 +32,8 @@ export function followCentre(work: Work, aim: Aim): boolean {
   for (let index = 0; index < condensedCount; index += 1) {
     slack[index] = -affinityOf(work, at32(condensed, index));
   }
+  // The gas's curved limit plus its slack: zero when its slack is its true distance.
+  let gasMissing = 0;
   const count = condensedCount + (hasGas ? 1 : 0);
   let barrier = 1;
   let gasAmount = hasGas ? barrier / gasSlack : 0;
@@ -59,8 +61,9 @@ export function followCentre(work: Work, aim: Aim): boolean {
         }
       }
       const weight = gasAmount / gasSlack - gasAmount;
+      const pull = (barrier + gasAmount * gasMissing) / gasSlack;
       for (let k = 0; k < rank; k += 1) {
-        right[k] = at(right, k) - (barrier / gasSlack) * at(mean, k);
+        right[k] = at(right, k) - pull * at(mean, k);
         for (let l = 0; l <= k; l += 1) {
           matrix[k * stride + l] = at(matrix, k * stride + l) + weight * at(mean, k) * at(mean, l);
         }
@@ -88,12 +91,14 @@ export function followCentre(work: Work, aim: Aim): boolean {
     // New multipliers for the whole step, then the largest part of it that stays inside.
     let share = 1;
     let gasNext = 0;
+    let gasSlackChange = 0;
     if (hasGas) {
       let along = 0;
       for (let k = 0; k < rank; k += 1) along += at(mean, k) * at(right, k);
-      gasNext = (barrier + gasAmount * along) / gasSlack;
-      if (gasSlack < finestSlack && along > 0.99 * gasSlack) share = (0.99 * gasSlack) / along;
+      gasNext = (barrier + gasAmount * (gasMissing + along)) / gasSlack;
+      gasSlackChange = -gasMissing - along;
       if (gasNext < 0.01 * gasAmount) share = Math.min(share, (0.99 * gasAmount) / (gasAmount - gasNext));
+      if (gasSlackChange < -0.99 * gasSlack) share = Math.min(share, (0.99 * gasSlack) / -gasSlackChange);
     }
     for (let index = 0; index < condensedCount; index += 1) {
       const column = at32(condensed, index) * width;
@@ -105,15 +110,14 @@ export function followCentre(work: Work, aim: Aim): boolean {
       if (along > 0.99 * at(slack, index)) share = Math.min(share, (0.99 * at(slack, index)) / along);
     }
     for (let k = 0; k < rank; k += 1) trial[k] = at(potential, k);
-    let gasSlackNext = 1;
-    let gasAlong = 0;
-    if (hasGas) for (let k = 0; k < rank; k += 1) gasAlong += at(mean, k) * at(right, k);
+    let missingNext = 0;
     for (let tries = 0; ; tries += 1) {
       for (let k = 0; k < rank; k += 1) potential[k] = at(trial, k) + share * at(right, k);
       takeFractions(work, aim);
       if (!hasGas) break;
-      gasSlackNext = gasSlack < finestSlack ? gasSlack - share * gasAlong : -Math.log(work.fractionSum);
-      if (gasSlackNext >= 0.01 * gasSlack) break;
+      const slackNext = gasSlack + share * gasSlackChange;
+      missingNext = Math.log(work.fractionSum) + slackNext;
+      if (missingNext <= Math.abs(gasMissing) + 0.5 * slackNext + rounding) break;
       if (tries > 60) return false;
       share *= 0.6;
     }
@@ -129,12 +133,13 @@ export function followCentre(work: Work, aim: Aim): boolean {
     }
     if (hasGas) {
       gasAmount += share * (gasNext - gasAmount);
-      gasSlack = gasSlackNext;
+      gasSlack += share * gasSlackChange;
+      gasMissing = missingNext;
     }
     let gap = hasGas ? gasAmount * gasSlack : 0;
     for (let index = 0; index < condensedCount; index += 1) gap += at(amount, index) * at(slack, index);
     gap /= count;
-    if (share > 0.9 && gap < lastGap * 10) break;
+    if (share > 0.9 && gap < lastGap * 10 && largestMiss(work, amount, gasAmount) < 1e-13) break;
     barrier = Math.max(lastGap, (share > 0.9 ? 0.1 : share > 0.5 ? 0.3 : 0.8) * gap);
   }
   // A phase is present where its amount outweighs its distance from equilibrium.
@@ -147,6 +152,28 @@ export function followCentre(work: Work, aim: Aim): boolean {
     }
   }
   return true;
+}
+
+/** How far the multipliers are from holding the elements, over what they hold, the worst balance. */
+function largestMiss(work: Work, amount: Float64Array, gasAmount: number): number {
+  const { rank, width, nu, condensed, condensedCount, gases, gasCount, fraction, fractionSum } = work;
+  let worst = 0;
+  for (let k = 0; k < rank; k += 1) {
+    let sum = -at(work.amounts, k);
+    let size = Math.abs(sum);
+    const add = (phase: number, amountOfPhase: number): void => {
+      const part = at(nu, phase * width + k) * amountOfPhase;
+      sum += part;
+      size += Math.abs(part);
+    };
+    for (let index = 0; index < gasCount; index += 1) {
+      const gas = at32(gases, index);
+      add(gas, (at(fraction, gas) * gasAmount) / fractionSum);
+    }
+    for (let index = 0; index < condensedCount; index += 1) add(at32(condensed, index), at(amount, index));
+    if (size > 0) worst = Math.max(worst, Math.abs(sum) / size);
+  }
+  return worst;
 }
 
 /** A direction in which every phase loses: one unit less for each atom, half a unit for a charge. */

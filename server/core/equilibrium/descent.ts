@@ -32,6 +32,7 @@ export interface Descent {
 export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent): Rest {
   const { step } = descent;
   let arrivals = 0;
+  let negative = 0;
   const mostArrivals = 12 + 3 * work.width;
   for (let count = 0; count < mostSteps; count += 1) {
     takeStep(work, aim, step, bounds.lowestK, bounds.highestK);
@@ -40,6 +41,12 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
     if (step.taken < 1) {
       // A gas that wants to vanish, and would be gone with the whole step.
       if (!aim.isVolume && work.gasAmount > 0 && work.gasAmount < 1e-22) work.gasAmount = 0;
+      // A phase that has less than nothing for several steps is what holds them up.
+      negative = hasNegative(work) ? negative + 1 : 0;
+      if (negative >= 3) {
+        dismiss(work);
+        negative = 0;
+      }
       continue;
     }
     const rests = step.change < 1e-7 && step.gasChange < 1e-7;
@@ -53,6 +60,11 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
     if (rests) return arrivals < mostArrivals ? 'rest' : 'lost';
   }
   return 'lost';
+}
+
+function hasNegative(work: Work): boolean {
+  for (let index = 0; index < work.presentCount; index += 1) if (at(work.presentAmount, index) < 0) return true;
+  return false;
 }
 
 /** Takes the phase out that has most clearly less than nothing. */

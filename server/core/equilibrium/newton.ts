@@ -204,6 +204,7 @@ export interface Step {
 
 const largestChange = 2;
 const largestTemperatureChange = 0.35;
+const mostGas = 2;
 const logOfTrace = -18.42;
 const logOfLargestNewcomer = -9.21;
 
@@ -255,7 +256,8 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   step.change = change;
   step.taken = taken;
   for (let k = 0; k < rank; k += 1) potential[k] = at(potential, k) + taken * at(right, k);
-  if (hasGasRow) work.gasAmount += taken * (gasNext - work.gasAmount);
+  // A mole of gas holds an atom at least, so the scaled amount stays near 1 or below (electrons aside).
+  if (hasGasRow) work.gasAmount = Math.min(mostGas, work.gasAmount + taken * (gasNext - work.gasAmount));
   const firstPresent = rank + (hasGasRow ? 1 : 0);
   for (let index = 0; index < work.presentCount; index += 1) {
     const before = at(work.presentAmount, index);

@@ -6,12 +6,11 @@
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import type { Check } from './answer.ts';
 import type { CandidateSet } from './candidates.ts';
-import { descend } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, Held, NoEquilibrium } from './equilibrium.ts';
 import type { Aim } from './newton.ts';
 import { startCold, startNear } from './start.ts';
-import { atTemperatureAndPressure, atTemperatureAndVolume, byTemperature, certified } from './sure-way.ts';
+import { atTemperatureAndPressure, atTemperatureAndVolume, byTemperature, descendAndCertify } from './sure-way.ts';
 import { admitPhases, takeAmounts, workOf } from './work.ts';
 import type { Work } from './work.ts';
 
@@ -57,10 +56,8 @@ function solve(
     const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
     if (blamed !== undefined) return cannotForm(work, blamed);
   }
-  if (descend(work, aim, tablesK, descent) === 'rest') {
-    const answer = certified(work, elementMol, aim, pressurePa, descent, check);
-    if (answer !== undefined) return answer;
-  }
+  const answer = descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check);
+  if (answer !== undefined) return answer;
   return sureWay(work, elementMol, held, check, descent) ?? failed(elementMol, held);
 }
 

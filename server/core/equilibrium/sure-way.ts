@@ -13,7 +13,7 @@ import { followCentre } from './centre.ts';
 import { descend } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, NoEquilibrium, Pinned } from './equilibrium.ts';
-import { takeFractions, takePressure, takeTemperature } from './newton.ts';
+import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
 import { startCold } from './start.ts';
 import { admitPhases } from './work.ts';
@@ -40,20 +40,14 @@ export function atTemperatureAndPressure(
   admitPhases(work, temperatureK);
   const bounds = { lowestK: temperatureK, highestK: temperatureK };
   if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
-  if (descend(work, aim, bounds, descent) === 'rest') {
-    const answer = certified(work, elementMol, aim, pressurePa, descent);
-    if (answer !== undefined) return answer;
-  }
+  const quick = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+  if (quick !== undefined) return quick;
   startCold(work, aim, temperatureK, temperatureK, temperatureK);
   if (!followCentre(work, aim)) return undefined;
   const before = keep(work);
   const asItIs = certified(work, elementMol, aim, pressurePa, descent);
   restore(work, before, aim);
-  if (descend(work, aim, bounds, descent) === 'rest') {
-    const polished = certified(work, elementMol, aim, pressurePa, descent);
-    if (polished !== undefined) return polished;
-  }
-  return asItIs;
+  return descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent) ?? asItIs;
 }
 
 /** Temperature and volume held, by narrowing the pressure. */
@@ -211,8 +205,34 @@ export function pressureAim(pressurePa: number): Aim {
   };
 }
 
+/**
+ * Goes down to rest and answers when the certificate holds. A balance of traces may want a step or two more than the potentials
+ * show: they are taken with the phases as they stand.
+ */
+export function descendAndCertify(
+  work: Work,
+  elementMol: Float64Array,
+  aim: Aim,
+  range: Range,
+  pressurePa: number,
+  descent: Descent,
+  check: Check = { kind: 'none' },
+): Equilibrium | undefined {
+  if (descend(work, aim, range, descent) !== 'rest') return undefined;
+  for (let extra = 0; extra < 4; extra += 1) {
+    const before = aim.isVolume ? keep(work) : undefined;
+    const answer = certified(work, elementMol, aim, pressurePa, descent, check);
+    if (answer !== undefined) return answer;
+    if (before !== undefined) restore(work, before, aim);
+    takeStep(work, aim, descent.step, range.lowestK, range.highestK);
+    descent.steps += 1;
+    if (!(descent.step.change < 1e-4)) return undefined;
+  }
+  return undefined;
+}
+
 /** The answer of the state at rest, when its certificate holds. */
-export function certified(
+function certified(
   work: Work,
   elementMol: Float64Array,
   aim: Aim,
