@@ -23,7 +23,9 @@ export interface MolarProperties {
 }
 
 /** The curve of a fitted record. */
-export function compileCurve(record: PhaseFit): PhaseCurve {
+export function compileCurve(
+  record: Pick<PhaseFit, 'pieces' | 'toK' | 'anchor' | 'formationKJPerMol' | 'entropyJPerMolK'>,
+): PhaseCurve {
   const inner = record.pieces.length;
   const boundsK = new Float64Array(inner + 3);
   boundsK[0] = Number.NEGATIVE_INFINITY;

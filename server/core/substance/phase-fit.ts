@@ -48,7 +48,7 @@ export interface PhaseFit {
 }
 
 /**
- * The real end of a phase whose published table runs on past it. A melting point is final, since there are no data for the
+ * The real end of a phase whose published table runs on past it. A melting point is final where there are no data for the
  * liquid; a decomposition is that at 1 bar and comes later under pressure.
  */
 export interface PhaseLimit {
@@ -58,6 +58,20 @@ export interface PhaseLimit {
   readonly event: 'melts' | 'melts incongruently' | 'decomposes' | 'sublimes' | 'changes form';
   /** For an end that the data themselves give: moles of each phase that one mole turns into, gases together at 1 bar. */
   readonly products?: Readonly<Record<string, number>>;
+  /**
+   * The data hold what it turns into (`products`, or `into` where they come to lie lower before `atK`), so a search for the
+   * lowest Gibbs energy ends the phase by itself, at the right temperature for its pressure, and nothing has to be cut.
+   */
+  readonly byEquilibrium?: true;
+  readonly into?: Readonly<Record<string, number>>;
+  readonly source: string;
+  readonly provenance: 'seen' | 'from memory';
+}
+
+/** A phase that is only tabulated: a written equation may use it, equilibria must not. Kept by hand. */
+export interface HypotheticalPhase {
+  readonly phase: string;
+  readonly why: string;
   readonly source: string;
   readonly provenance: 'seen' | 'from memory';
 }

@@ -1,15 +1,20 @@
 // The phases the program has thermochemical data for, each with its curve, its valid range and its source; and which of the
-// condensed phases of a composition is the stable one at a temperature. Joins the fitted records with the limits kept by hand.
+// condensed phases of a composition is the stable one at a temperature. Joins the fitted records with the phases and the
+// limits kept by hand.
 // Knows no catalogue, no names of users and no equilibrium beyond one composition. Everything is read at the first question.
 // Invariant: whatever is asked beyond the valid range is answered and said to be extrapolated, never refused or silent.
-// Source: M. W. Chase Jr., NIST-JANAF Thermochemical Tables, 4th ed., J. Phys. Chem. Ref. Data Monograph 9 (1998), by fit.
+// Sources: M. W. Chase Jr., NIST-JANAF Thermochemical Tables, 4th ed., J. Phys. Chem. Ref. Data Monograph 9 (1998), by fit;
+// for the phases kept by hand, those named in data/phases-by-hand/.
 
 import { compositionKey, molarMassKgPerMol, parseFormula } from './formula.ts';
 import type { Formula, FormulaFault } from './formula.ts';
+import { handPhase } from './hand-phase.ts';
+import type { HandPhase } from './hand-phase.ts';
 import { compileCurve, evaluateCurve } from './phase-curve.ts';
 import type { MolarProperties, PhaseCurve } from './phase-curve.ts';
 import type { PhaseChangeFit, PhaseFit, PhaseLimit } from './phase-fit.ts';
-import { phaseFits, phaseLimits } from './phase-records.ts';
+import { handPhaseRecords, handPhaseSources, hypotheticalPhases, phaseFits, phaseLimits } from './phase-records.ts';
+import { sourceRecords } from './records.ts';
 
 /** A range of temperatures in K, both ends included. */
 export type TemperatureRange = readonly [fromK: number, toK: number];
@@ -28,18 +33,30 @@ export interface ThermoPhase {
   readonly entropyJPerMolK: number | undefined;
   /** Prepared when first asked for. */
   readonly curve: PhaseCurve;
-  /** Where the curve follows published values of a phase that exists: the fitted range, cut at `limit`. */
+  /**
+   * Where the curve follows published values of a phase that exists: the table's range, cut at `limit`. What gives off gas
+   * exists above it under pressure, and counts up to where its gas reaches some 100 bar.
+   */
   readonly validK: TemperatureRange;
+  /**
+   * Above it an equilibrium must not hold the phase: the real end of a crystal that turns into nothing the data hold.
+   * Infinite where there is none, or where the lowest Gibbs energy ends the phase by itself (`limit.byEquilibrium`).
+   */
+  readonly endK: number;
   /** Where the phase has the lowest Gibbs energy of the condensed phases of its composition, cut likewise; empty for gases. */
   readonly stableK: readonly TemperatureRange[];
-  /** The real end of a crystal whose table runs on and that has no liquid to turn into. */
+  /** The real end of a crystal whose table runs on, at 1 bar. */
   readonly limit: PhaseLimit | undefined;
   /** Changes into other phases, by temperature. */
   readonly changes: readonly PhaseChangeFit[];
   /** Why a search for the stable state must not use this phase. */
   readonly leftOut: string | undefined;
+  /** Why an equilibrium must not hold this phase, though an equation may be written with it: it does not exist as such. */
+  readonly hypothetical: string | undefined;
+  /** Forms or falls apart in hours and with moisture: what an equilibrium gives of it is a limit, not a forecast. */
+  readonly isSlow: boolean;
   readonly note: string | undefined;
-  /** Author and year, and the number of the table. */
+  /** Author and year, and of the fitted ones the number of the table. */
   readonly source: string;
 }
 
@@ -60,6 +77,11 @@ export type StablePhase =
 /** Every phase, in the order of the data. */
 export function allPhases(): readonly ThermoPhase[] {
   return library().phases;
+}
+
+/** The phases that an equilibrium may hold: all that exist, but for those that no search must use. */
+export function candidatePhases(): readonly ThermoPhase[] {
+  return library().phases.filter(({ leftOut, hypothetical }) => leftOut === undefined && hypothetical === undefined);
 }
 
 /** The phase of that exact id, or undefined. */
@@ -131,15 +153,32 @@ function library(): Library {
 
 function buildLibrary(): Library {
   const limits = new Map(phaseLimits.map((limit) => [limit.phase, limit]));
+  const hypothetical = new Map(hypotheticalPhases.map(({ phase, why }) => [phase, why]));
   // Phases of one composition are written alike, so each formula is read once.
   const formulas = new Map<string, Formula | FormulaFault>();
   const phases: ThermoPhase[] = [];
-  for (const record of phaseFits) {
+  const add = (record: Omit<PhaseFit, 'table'>, kept: KeptByHand): void => {
     const formula = formulas.get(record.formula) ?? parseFormula(record.formula);
     formulas.set(record.formula, formula);
-    const phase = thermoPhase(record, formula, limits.get(record.id));
+    const phase = thermoPhase(record, formula, kept);
     if (phase !== undefined) phases.push(phase);
+  };
+  const byHand = phasesByHand();
+  // A fitted crystal changes into a liquid kept by hand as that liquid does into it.
+  const changesInto = new Map<string, readonly PhaseChangeFit[]>();
+  for (const { fit } of byHand) {
+    for (const change of fit.changes ?? []) changesInto.set(change.with, [{ ...change, with: fit.id }]);
   }
+  for (const record of phaseFits) {
+    const more = changesInto.get(record.id);
+    add(more === undefined ? record : { ...record, changes: [...(record.changes ?? []), ...more] }, {
+      limit: limits.get(record.id),
+      hypothetical: hypothetical.get(record.id),
+      isSlow: false,
+      source: `Chase 1998, table ${record.table}`,
+    });
+  }
+  for (const { fit, limit, isSlow, source } of byHand) add(fit, { limit, hypothetical: undefined, isSlow, source });
   const byComposition = new Map<string, ThermoPhase[]>();
   for (const phase of phases) {
     const key = compositionKey(phase.formula);
@@ -151,16 +190,30 @@ function buildLibrary(): Library {
   return { phases, byId: new Map(phases.map((phase) => [phase.id, phase])), byComposition };
 }
 
+/** What is kept by hand about a phase. */
+interface KeptByHand {
+  readonly limit: PhaseLimit | undefined;
+  readonly hypothetical: string | undefined;
+  readonly isSlow: boolean;
+  readonly source: string;
+}
+
+function phasesByHand(): readonly HandPhase[] {
+  const sources = new Map([...sourceRecords, ...handPhaseSources].map((source) => [source.id, source]));
+  const fitted = new Map(phaseFits.map((fit) => [fit.id, fit]));
+  return handPhaseRecords.map((record) => handPhase(record, sources, fitted));
+}
+
 /** A record whose formula cannot be read has no phase; the tests see to it that there is none. */
 function thermoPhase(
-  record: PhaseFit,
+  record: Omit<PhaseFit, 'table'>,
   formula: Formula | FormulaFault,
-  limit: PhaseLimit | undefined,
+  { limit, hypothetical, isSlow, source }: KeptByHand,
 ): ThermoPhase | undefined {
   if (formula.kind === 'fault') return undefined;
   const molarMass = molarMassKgPerMol(formula);
   if (molarMass === undefined) return undefined;
-  const endK = Math.min(record.toK, limit?.atK ?? record.toK);
+  const endK = limit === undefined || limit.byEquilibrium ? Infinity : limit.atK;
   let curve: PhaseCurve | undefined;
   return {
     id: record.id,
@@ -179,14 +232,27 @@ function thermoPhase(
     get curve() {
       return (curve ??= compileCurve(record));
     },
-    validK: [record.pieces[0]?.fromK ?? endK, endK],
-    stableK: record.leftOut === undefined ? rangesBelow(record.stableK ?? [], endK) : [],
+    validK: [record.pieces[0]?.fromK ?? endK, Math.min(record.toK, limit === undefined ? Infinity : existsToK(limit))],
+    endK,
+    // At 1 bar the composition has no condensed phase above the limit, whichever way it ends.
+    stableK: record.leftOut === undefined ? rangesBelow(record.stableK ?? [], limit?.atK ?? Infinity) : [],
     limit,
     changes: record.changes ?? [],
     leftOut: record.leftOut,
+    hypothetical,
+    isSlow,
     note: record.note,
-    source: `Chase 1998, table ${record.table}`,
+    source,
   };
+}
+
+/**
+ * Gases that reach 1 bar at a temperature reach 100 bar at 1.34 times it: with ΔG = 0 at 1 bar and the usual entropy of
+ * 150 J/K a mole of gas given off, the ratio is 1 / (1 - R ln 100 / 150).
+ */
+function existsToK({ atK, byEquilibrium, into, products }: PhaseLimit): number {
+  const givesOffGas = Object.keys(into ?? products ?? {}).some((id) => id.includes('(g'));
+  return byEquilibrium && givesOffGas ? atK * 1.34 : atK;
 }
 
 function rangesBelow(ranges: readonly TemperatureRange[], endK: number): readonly TemperatureRange[] {

@@ -8,18 +8,24 @@ import { molarMassKgPerMol, parseFormula } from '../../../../server/core/substan
 import { gasConstantJPerMolK } from '../../../../server/core/substance/heat-capacity-terms.ts';
 import { compileCurve, evaluateCurve } from '../../../../server/core/substance/phase-curve.ts';
 import type { FitResiduals, PhaseFit } from '../../../../server/core/substance/phase-fit.ts';
-import { phaseFits, phaseLimits } from '../../../../server/core/substance/phase-records.ts';
-import { allPhases, phaseOfId, propertiesOfPhase } from '../../../../server/core/substance/phases.ts';
+import {
+  handPhaseRecords,
+  hypotheticalPhases,
+  phaseFits,
+  phaseLimits,
+} from '../../../../server/core/substance/phase-records.ts';
+import { allPhases, candidatePhases, phaseOfId, propertiesOfPhase } from '../../../../server/core/substance/phases.ts';
 import writtenResiduals from '../../../../server/core/substance/data/phases/residuals.json' with { type: 'json' };
 import janafGibbs from '../../../reference/janaf-gibbs-energies.json' with { type: 'json' };
 
 const reference = 298.15;
+const handLimits = handPhaseRecords.flatMap(({ id }) => phaseOf(id).limit ?? []);
 // The compiler reads a pair in JSON as an array of any length.
 const residuals = writtenResiduals as readonly unknown[] as readonly FitResiduals[];
 
-test('there are 603 phases, and every record became one', () => {
+test('there are 603 fitted phases, and every record became a phase, those kept by hand last', () => {
   expect(phaseFits).toHaveLength(603);
-  expect(allPhases().map(({ id }) => id)).toEqual(phaseFits.map(({ id }) => id));
+  expect(allPhases().map(({ id }) => id)).toEqual([...phaseFits, ...handPhaseRecords].map(({ id }) => id));
 });
 
 test('ids are unique and made of formula, phase and form; molar mass comes from the formula alone', () => {
@@ -170,31 +176,56 @@ describe('limits kept by hand', () => {
     expect(open.sort()).toEqual(['B3H3O3(cr)', 'K3Al2Cl9(cr)', 'K3AlCl6(cr)', 'MgB4(cr)', 'Na3AlCl6(cr)']);
   });
 
-  const decompositions = phaseLimits.filter(({ products }) => products !== undefined);
+  const decompositions = [...phaseLimits, ...handLimits].filter(({ products }) => products !== undefined);
 
   test('some are computed', () => expect(decompositions.length).toBeGreaterThan(15));
 
   test.each(decompositions)('$phase and its products balance at $atK K', ({ phase, atK, products = {} }) => {
-    const atoms = new Map<string, number>();
-    let gibbs = 0;
-    const add = (id: string, count: number): void => {
-      const one = phaseOf(id);
-      gibbs += count * (propertiesOfPhase(one, atK)?.gibbsJPerMol ?? Number.NaN);
-      for (const [symbol, number] of one.formula.composition)
-        atoms.set(symbol, (atoms.get(symbol) ?? 0) + count * number);
-    };
-    add(phase, -1);
-    const gases = Object.entries(products).filter(([id]) => phaseOf(id).formula.phase === 'g');
-    const total = gases.reduce((sum, [, count]) => sum + count, 0);
-    for (const [id, count] of Object.entries(products)) add(id, count);
-    for (const [, count] of gases) gibbs += count * gasConstantJPerMolK * atK * Math.log(count / total);
-    for (const [symbol, rest] of atoms) expect(Math.abs(rest), symbol).toBeLessThan(1e-5);
+    const { atoms, gibbs, entropy } = change(phase, products, atK);
+    for (const rest of atoms) expect(Math.abs(rest)).toBeLessThan(1e-5);
     // Half a kelvin of rounding, times the entropy of the reaction.
-    const entropy = Object.entries(products).reduce(
-      (sum, [id, count]) => sum + count * (propertiesOfPhase(phaseOf(id), atK)?.entropyJPerMolK ?? 0),
-      0,
-    );
     expect(Math.abs(gibbs)).toBeLessThan(0.6 * entropy);
+  });
+
+  const byEquilibrium = [...phaseLimits, ...handLimits].filter((limit) => limit.byEquilibrium);
+
+  test.each(byEquilibrium)('$phase is not cut, since the data hold what lies lower at $atK K', (limit) => {
+    const { phase, atK, products, into } = limit;
+    const { atoms, gibbs, entropy } = change(phase, into ?? products ?? {}, atK);
+    for (const rest of atoms) expect(Math.abs(rest)).toBeLessThan(1e-5);
+    expect(gibbs).toBeLessThan(0.6 * Math.max(entropy, 0));
+    const { endK, validK } = phaseOf(phase);
+    expect(endK).toBe(Infinity);
+    const givesOffGas = Object.keys(into ?? products ?? {}).some((id) => phaseOf(id).formula.phase === 'g');
+    expect(validK[1]).toBeGreaterThanOrEqual(atK);
+    expect(validK[1] > atK).toBe(givesOffGas);
+  });
+
+  test('that are final cut the phase', () => {
+    const final = [...phaseLimits, ...handLimits].filter((limit) => !limit.byEquilibrium);
+    expect(final.length).toBeGreaterThan(30);
+    for (const { phase, atK } of final)
+      expect(phaseOf(phase)).toMatchObject({ endK: atK, validK: [expect.anything(), atK] });
+    // A decomposition into phases of the data needs no cut, so only what melts or changes into the unknown is left.
+    expect(final.filter(({ event }) => event === 'decomposes').map(({ phase }) => phase)).toEqual([]);
+  });
+});
+
+describe('phases that are only tabulated', () => {
+  test('exist among the data and may be written, but are no candidates', () => {
+    for (const { phase, why } of hypotheticalPhases) expect(phaseOf(phase)).toMatchObject({ hypothetical: why });
+    const candidates = new Set(candidatePhases().map(({ id }) => id));
+    expect(
+      allPhases()
+        .filter(({ id }) => !candidates.has(id))
+        .map(({ id }) => id),
+    ).toEqual(['Na2SO4(cr,delta)', 'FeO(cr)']);
+  });
+
+  test('stoichiometric wustite would otherwise displace the real one beside iron', () => {
+    const atK = 1200;
+    const { gibbs } = change('FeO(cr)', { 'Fe0.947O(cr,wustite)': 1, 'Fe(cr,gamma)': 0.053 }, atK);
+    expect(gibbs).toBeGreaterThan(0);
   });
 });
 
@@ -214,6 +245,25 @@ function phaseOf(id: string): NonNullable<ReturnType<typeof phaseOfId>> {
   const phase = phaseOfId(id);
   if (phase === undefined) throw new Error(`no ${id}`);
   return phase;
+}
+
+/** Change of one mole of a phase into others: atoms that do not close, J/mol with the gases together at 1 bar, J/(mol K). */
+function change(phase: string, products: Readonly<Record<string, number>>, atK: number) {
+  const atoms = new Map<string, number>();
+  let gibbs = 0;
+  let entropy = 0;
+  const gases = Object.entries(products).filter(([id]) => phaseOf(id).formula.phase === 'g');
+  const total = gases.reduce((sum, [, count]) => sum + count, 0);
+  for (const [id, count] of [...Object.entries(products), [phase, -1] as const]) {
+    const one = phaseOf(id);
+    const values = propertiesOfPhase(one, atK);
+    gibbs += count * (values?.gibbsJPerMol ?? Number.NaN);
+    if (id !== phase) entropy += count * (values?.entropyJPerMolK ?? Number.NaN);
+    for (const [symbol, number] of one.formula.composition)
+      atoms.set(symbol, (atoms.get(symbol) ?? 0) + count * number);
+  }
+  for (const [, count] of gases) gibbs += count * gasConstantJPerMolK * atK * Math.log(count / total);
+  return { atoms: [...atoms.values()], gibbs, entropy };
 }
 
 function fitOf(id: string): PhaseFit {

@@ -57,10 +57,18 @@ describe('properties', () => {
   });
 
   test('a crystal ends at its real end, not at the end of its table', () => {
-    const potassiumOxide = phase('K2O(cr)');
-    expect(potassiumOxide.validK).toEqual([298.15, 1013.15]);
-    expect(potassiumOxide.limit?.event).toBe('melts');
-    expect(propertiesOfPhase(potassiumOxide, 1100)?.extrapolated).toBe('above');
+    const peroxide = phase('K2O2(cr)');
+    expect(peroxide.validK).toEqual([298.15, 818.15]);
+    expect(peroxide.limit?.event).toBe('melts');
+    expect(propertiesOfPhase(peroxide, 900)?.extrapolated).toBe('above');
+  });
+
+  test('a crystal that falls apart into phases of the data is not cut: pressure decides where it ends', () => {
+    const carbonate = phase('MgCO3(cr)');
+    expect(carbonate).toMatchObject({ limit: { atK: 675, byEquilibrium: true }, endK: Infinity });
+    expect(propertiesOfPhase(carbonate, 800)?.extrapolated).toBe('no');
+    expect(propertiesOfPhase(carbonate, 950)?.extrapolated).toBe('above');
+    expect(stableCondensedPhase(formulaOf('MgCO3'), 800)).toMatchObject({ kind: 'past-limit' });
   });
 
   test.each([0, -5, Number.NaN, Number.POSITIVE_INFINITY])('there are none at %d K', (temperatureK) => {
@@ -80,6 +88,9 @@ describe('the stable condensed phase', () => {
     ['SiO2', 1500, 'SiO2(cr,cristobalite-high)'],
     ['S', 375, 'S(cr,monoclinic)'],
     ['H2O', 298.15, 'H2O(l)'],
+    ['K2O', 1000, 'K2O(cr)'],
+    ['K2O', 1100, 'K2O(l)'],
+    ['CaCO3', 1000, 'CaCO3(cr,calcite)'],
   ])('%s at %d K is %s', (formula, temperatureK, id) => {
     const found = stableCondensedPhase(formulaOf(formula), temperatureK);
     expect(found.kind === 'phase' ? found.phase.id : found.kind).toBe(id);
