@@ -9,6 +9,7 @@ import type { Io } from './cli/io.ts';
 import { sayProgramFault } from './cli/program-fault.ts';
 import { run } from './cli/run.ts';
 import { startServer } from './lsp/connection.ts';
+import { wholeMessages } from './lsp/framing.ts';
 import { readLocalFile } from './lsp/local-files.ts';
 
 const io: Io = {
@@ -20,7 +21,9 @@ const io: Io = {
   problem: (text) => void process.stderr.write(text),
   input: () => readFileSync(process.stdin.fd),
   serve: () => {
-    startServer(createConnection(ProposedFeatures.all, process.stdin, process.stdout), { readFile: readLocalFile });
+    startServer(createConnection(ProposedFeatures.all, wholeMessages(process.stdin), process.stdout), {
+      readFile: readLocalFile,
+    });
     // The open connection keeps the process alive until the client asks it to exit or hangs up.
     return Promise.resolve();
   },
