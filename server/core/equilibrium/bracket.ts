@@ -1,62 +1,96 @@
-// A root of a function that only rises, or the jump that stands in its place, between two bounds.
-// Knows nothing of what rises. Invariant: the root stays between `low` and `high`, which only come closer; at the end either
-// the value is as near as asked or no number lies between the bounds, and then the function jumps there.
-// Method: false position with the Illinois change, halving whenever that does not shrink the bounds well.
+// Where a function that only rises reaches zero, or the jump that stands in that place, between two bounds.
+// Knows nothing of what rises. Invariant: zero stays between the states on either side, which only come closer; at the end
+// either a value is as near as asked, or no number lies between the two places and the function jumps there.
+// Method: Newton's step where the state knows its slope, false position where it does not, halving whenever neither shrinks the
+// bounds well.
 
-export interface Bracket<State> {
-  readonly low: State;
-  readonly high: State;
-  readonly lowValue: number;
-  readonly highValue: number;
+export interface Rising<State> {
+  /** The state at a place, found from a neighbouring one where that helps; undefined ends the search as failed. */
+  readonly stateAt: (place: number, near: State | undefined) => State | undefined;
+  /** Its value: below zero left of the place that is sought. */
+  readonly valueOf: (state: State) => number;
+  /** Its slope by place, where it is known and finite. */
+  readonly slopeOf: (state: State) => number | null;
+  readonly nearEnough: number;
 }
 
-/** The state at the root (`kind: 'root'`), or the two states on either side of a jump. */
-export type BracketEnd<State> =
+/** A state at zero, the two states on either side of a jump, or the bound beyond which zero lies. */
+export type RisingEnd<State> =
   | { readonly kind: 'root'; readonly state: State }
-  | ({ readonly kind: 'jump' } & Bracket<State>)
-  | { readonly kind: 'failed' };
-
-/**
- * Narrows a bracket with lowValue < 0 < highValue at `lowAt` < `highAt`. `stateAt` gives the state at a place, `valueOf` its
- * value less the one sought; undefined ends the search as failed.
- */
-export function narrow<State>(
-  bracket: Bracket<State>,
-  bounds: readonly [lowAt: number, highAt: number],
-  stateAt: (place: number) => State | undefined,
-  valueOf: (state: State) => number,
-  nearEnough: number,
-): BracketEnd<State> {
-  let { low, high, lowValue, highValue } = bracket;
-  let [lowAt, highAt] = bounds;
-  let lowWeight = 1;
-  let highWeight = 1;
-  for (let count = 0; count < mostCalls; count += 1) {
-    const middle = lowAt + (highAt - lowAt) / 2;
-    if (!(middle > lowAt && middle < highAt)) break;
-    const from = lowValue * lowWeight;
-    const to = highValue * highWeight;
-    const chord = lowAt - (from * (highAt - lowAt)) / (to - from);
-    const place = count % 3 === 2 || !(chord > lowAt && chord < highAt) ? middle : chord;
-    const state = stateAt(place);
-    if (state === undefined) return { kind: 'failed' };
-    const value = valueOf(state);
-    if (Math.abs(value) <= nearEnough) return { kind: 'root', state };
-    if (value < 0) {
-      low = state;
-      lowValue = value;
-      lowAt = place;
-      lowWeight = 1;
-      highWeight *= 0.5;
-    } else {
-      high = state;
-      highValue = value;
-      highAt = place;
-      highWeight = 1;
-      lowWeight *= 0.5;
+  | {
+      readonly kind: 'jump';
+      readonly low: State;
+      readonly high: State;
+      readonly lowValue: number;
+      readonly highValue: number;
     }
+  | { readonly kind: 'below' | 'above' | 'failed' };
+
+interface Side<State> {
+  place: number;
+  state: State | undefined;
+  value: number;
+}
+
+/** Searches from `start` between the bounds. */
+export function findZero<State>(
+  rising: Rising<State>,
+  bounds: readonly [lowAt: number, highAt: number],
+  start: number,
+): RisingEnd<State> {
+  const low: Side<State> = { place: bounds[0], state: undefined, value: -Infinity };
+  const high: Side<State> = { place: bounds[1], state: undefined, value: Infinity };
+  let place = Math.min(Math.max(start, bounds[0]), bounds[1]);
+  let near: State | undefined;
+  let width = bounds[1] - bounds[0];
+  for (let count = 0; count < mostCalls; count += 1) {
+    const state = rising.stateAt(place, near);
+    if (state === undefined) return { kind: 'failed' };
+    const value = rising.valueOf(state);
+    if (Math.abs(value) <= rising.nearEnough) return { kind: 'root', state };
+    if (place === bounds[0] && value > 0) return { kind: 'below' };
+    if (place === bounds[1] && value < 0) return { kind: 'above' };
+    const side = value < 0 ? low : high;
+    side.place = place;
+    side.state = state;
+    side.value = value;
+    near = state;
+    const next = nextPlace(rising, low, high, side, count);
+    const nowWide = high.place - low.place;
+    const middle = low.place + nowWide / 2;
+    const isClosed = !(middle > low.place && middle < high.place);
+    if (isClosed && low.state !== undefined && high.state !== undefined) {
+      return { kind: 'jump', low: low.state, high: high.state, lowValue: low.value, highValue: high.value };
+    }
+    // Both sides known and still wide after two steps: halve.
+    const isSlow = count % 3 === 2 && nowWide > 0.5 * width && low.state !== undefined && high.state !== undefined;
+    if (count % 3 === 2) width = nowWide;
+    place = isSlow ? middle : next;
   }
-  return { kind: 'jump', low, high, lowValue, highValue };
+  return { kind: 'failed' };
+}
+
+function nextPlace<State>(
+  rising: Rising<State>,
+  low: Side<State>,
+  high: Side<State>,
+  last: Side<State>,
+  count: number,
+): number {
+  const middle = low.place + (high.place - low.place) / 2;
+  const slope = last.state === undefined ? null : rising.slopeOf(last.state);
+  if (slope !== null && slope > 0) {
+    const step = last.place - last.value / slope;
+    if (step > low.place && step < high.place) return step;
+    // Out of the bounds: look at a bound that has not been looked at, else halve.
+    if (step >= high.place && high.state === undefined) return count < 4 ? middle : high.place;
+    if (step <= low.place && low.state === undefined) return count < 4 ? middle : low.place;
+    return middle;
+  }
+  if (low.state === undefined) return count < 8 ? middle : low.place;
+  if (high.state === undefined) return count < 8 ? middle : high.place;
+  const chord = low.place - (low.value * (high.place - low.place)) / (high.value - low.value);
+  return count % 2 === 0 && chord > low.place && chord < high.place ? chord : middle;
 }
 
 const mostCalls = 400;

@@ -33,11 +33,15 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
   const { step } = descent;
   let arrivals = 0;
   let negative = 0;
+  let atBound = 0;
   const mostArrivals = 12 + 3 * work.width;
   for (let count = 0; count < mostSteps; count += 1) {
     takeStep(work, aim, step, bounds.lowestK, bounds.highestK);
     descent.steps += 1;
     if (step.change === Infinity) return 'lost';
+    const isAtBound = work.temperatureK === bounds.lowestK || work.temperatureK === bounds.highestK;
+    if (aim.seeks !== 'temperature') atBound = isAtBound ? atBound + 1 : 0;
+    if (atBound > 3) return 'lost';
     if (step.taken < 1) {
       // A gas that wants to vanish, and would be gone with the whole step.
       if (!aim.isVolume && work.gasAmount > 0 && work.gasAmount < 1e-22) work.gasAmount = 0;

@@ -2,7 +2,7 @@
 // and balances that the vertex leaves empty brought near their solution one by one.
 // Knows no answer. Invariant: the start is a function of the problem alone.
 
-import { fillEnthalpies } from '../substance/property-set.ts';
+import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import { addPresent } from './descent.ts';
 import { takeFractions, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
@@ -95,22 +95,37 @@ function vertexAt(work: Work, aim: Aim, temperatureK: number): readonly number[]
   return blamed;
 }
 
-/** Temperature at which the vertex's phases hold the energy asked for, by a few Newton steps; the present one for entropy. */
+/** Temperature at which the vertex's phases hold the energy or the entropy asked for, by a few Newton steps. */
 function temperatureOfVertex(work: Work, aim: Aim, fromK: number): number {
-  if (aim.seeks !== 'energy') return fromK;
-  const { rank, basis, amounts, enthalpy, heatCapacity, set } = work;
+  const { rank, basis, amounts, enthalpy, heatCapacity, gibbs, set } = work;
+  let gasAmount = 0;
+  for (let k = 0; k < rank; k += 1) if (at32(basis, k) < set.gasCount) gasAmount += at(amounts, k);
   let temperatureK = fromK;
   for (let count = 0; count < 3; count += 1) {
     fillEnthalpies(set.properties, temperatureK, enthalpy, heatCapacity);
+    if (aim.seeks === 'entropy') fillGibbs(set.properties, temperatureK, gibbs);
     let energy = 0;
+    let entropy = 0;
     let capacity = 0;
     for (let k = 0; k < rank; k += 1) {
       const phase = at32(basis, k);
-      const lost = aim.isVolume && phase < set.gasCount ? 1 : 0;
-      energy += at(amounts, k) * (at(enthalpy, phase) - lost);
-      capacity += at(amounts, k) * (at(heatCapacity, phase) - lost);
+      const amount = at(amounts, k);
+      if (amount <= 0) continue;
+      const isGas = phase < set.gasCount;
+      const lost = aim.isVolume && isGas ? 1 : 0;
+      energy += amount * (at(enthalpy, phase) - lost);
+      capacity += amount * (at(heatCapacity, phase) - lost);
+      const logPressure = !isGas
+        ? 0
+        : aim.isVolume
+          ? Math.log((amount * temperatureK) / aim.gasKPerBar)
+          : Math.log(amount / gasAmount) + aim.logPressure;
+      entropy += amount * (at(enthalpy, phase) - at(gibbs, phase) - logPressure);
     }
-    const next = temperatureK + (aim.aimed - energy * temperatureK) / capacity;
+    const next =
+      aim.seeks === 'entropy'
+        ? temperatureK * Math.exp(Math.min(1, Math.max(-1, (aim.aimed - entropy) / capacity)))
+        : temperatureK + (aim.aimed - energy * temperatureK) / capacity;
     temperatureK = Math.min(Math.max(next, 0.4 * temperatureK), 2.5 * temperatureK);
     if (Math.abs(next - temperatureK) < 20) break;
   }

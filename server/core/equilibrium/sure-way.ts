@@ -8,14 +8,15 @@
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { answerOf, isCertified, responseOf, stateOf } from './answer.ts';
 import type { Check } from './answer.ts';
-import { narrow } from './bracket.ts';
+import { findZero } from './bracket.ts';
+import type { Rising } from './bracket.ts';
 import { followCentre } from './centre.ts';
 import { descend } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, NoEquilibrium, Pinned } from './equilibrium.ts';
 import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
-import { startCold } from './start.ts';
+import { startCold, startNear } from './start.ts';
 import { admitPhases } from './work.ts';
 import type { Work } from './work.ts';
 
@@ -35,10 +36,15 @@ export function atTemperatureAndPressure(
   temperatureK: number,
   pressurePa: number,
   descent: Descent,
+  near?: Equilibrium,
 ): Equilibrium | undefined {
   const aim = pressureAim(pressurePa);
   admitPhases(work, temperatureK);
   const bounds = { lowestK: temperatureK, highestK: temperatureK };
+  if (near !== undefined && startNear(work, aim, temperatureK, near)) {
+    const warm = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+    if (warm !== undefined) return warm;
+  }
   if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
   const quick = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
   if (quick !== undefined) return quick;
@@ -58,11 +64,25 @@ export function atTemperatureAndVolume(
   volumeM3: number,
   descent: Descent,
 ): Equilibrium | undefined {
-  const stateAt = (logPressure: number): Equilibrium | undefined =>
-    atTemperatureAndPressure(work, elementMol, temperatureK, Math.exp(logPressure), descent);
-  // Rising with pressure: what is missing of the volume, as a share of either.
-  const valueOf = (state: Equilibrium): number => (volumeM3 - state.volumeM3) / (volumeM3 + state.volumeM3);
-  return between(stateAt, valueOf, [Math.log(lowestPressurePa), Math.log(highestPressurePa)], (state) => state);
+  const aim = volumeAim(work, volumeM3);
+  admitPhases(work, temperatureK);
+  const bounds = { lowestK: temperatureK, highestK: temperatureK };
+  if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
+  const quick = descendAndCertify(work, elementMol, aim, bounds, 0, descent);
+  if (quick !== undefined) return quick;
+  const end = reach(
+    {
+      stateAt: (logPressure, near) =>
+        atTemperatureAndPressure(work, elementMol, temperatureK, Math.exp(logPressure), descent, near),
+      // Rising with pressure: what is missing of the volume, as a share of both.
+      valueOf: (state) => (volumeM3 - state.volumeM3) / (volumeM3 + state.volumeM3),
+      slopeOf: () => null,
+      nearEnough,
+    },
+    [Math.log(lowestPressurePa), Math.log(highestPressurePa)],
+    Math.log(standardPressurePa),
+  );
+  return typeof end === 'string' ? undefined : end;
 }
 
 /** Enthalpy, entropy or energy held with pressure or volume, by narrowing the temperature. */
@@ -74,53 +94,51 @@ export function byTemperature(
   range: Range,
   descent: Descent,
 ): Equilibrium | NoEquilibrium | undefined {
-  const stateAt = (temperatureK: number): Equilibrium | undefined =>
-    'pressurePa' in held
-      ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent)
-      : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent);
   let atoms = 0;
   for (const amount of elementMol) atoms += amount;
-  const valueOf = (state: Equilibrium): number => {
-    const scale = molarGasConstantJPerMolK * atoms * (check.kind === 'entropy' ? 1 : state.temperatureK);
-    return (reached(state, check) - check.value) / scale;
-  };
-  const lowest = stateAt(range.lowestK);
-  if (lowest !== undefined && valueOf(lowest) > 0) {
-    return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
-  }
-  const highest = stateAt(range.highestK);
-  if (highest !== undefined && valueOf(highest) < 0) {
-    return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
-  }
-  return between(stateAt, valueOf, [range.lowestK, range.highestK], (state) => ({
-    ...state,
-    certificate: { ...state.certificate, heldResidual: Math.abs(valueOf(state)) },
-  }));
+  const perAtoms = 1 / (molarGasConstantJPerMolK * atoms);
+  const valueOf = (state: Equilibrium): number =>
+    ((reached(state, check) - check.value) * perAtoms) / (check.kind === 'entropy' ? 1 : state.temperatureK);
+  const end = reach(
+    {
+      stateAt: (temperatureK, near) =>
+        'pressurePa' in held
+          ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent, near)
+          : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent),
+      valueOf,
+      slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
+        heatCapacityJPerK === null ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
+      nearEnough,
+    },
+    [range.lowestK, range.highestK],
+    firstTemperatureK,
+  );
+  if (end === 'failed') return undefined;
+  if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
+  if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
+  return end.pinned !== null && end.certificate.heldResidual === 0
+    ? end
+    : { ...end, certificate: { ...end.certificate, heldResidual: Math.abs(valueOf(end)) } };
 }
+
+const firstTemperatureK = 1500;
 
 function reached(state: Equilibrium, check: Check): number {
   if (check.kind === 'entropy') return state.entropyJPerK;
   return check.kind === 'energy' ? state.enthalpyJ - state.pressurePa * state.volumeM3 : state.enthalpyJ;
 }
 
-function between(
-  stateAt: (place: number) => Equilibrium | undefined,
-  valueOf: (state: Equilibrium) => number,
+function reach(
+  rising: Rising<Equilibrium>,
   bounds: readonly [number, number],
-  finish: (state: Equilibrium) => Equilibrium,
-): Equilibrium | undefined {
-  const low = stateAt(bounds[0]);
-  const high = stateAt(bounds[1]);
-  if (low === undefined || high === undefined) return undefined;
-  const lowValue = valueOf(low);
-  const highValue = valueOf(high);
-  if (!(lowValue < 0) || !(highValue > 0)) return undefined;
-  const end = narrow({ low, high, lowValue, highValue }, bounds, stateAt, valueOf, nearEnough);
-  if (end.kind === 'failed') return undefined;
-  if (end.kind === 'root') return finish(end.state);
+  start: number,
+): Equilibrium | 'below' | 'above' | 'failed' {
+  const end = findZero(rising, bounds, start);
+  if (end.kind === 'root') return end.state;
+  if (end.kind !== 'jump') return end.kind;
   // The last step of a continuous function between two neighbouring numbers is no jump.
   if (Math.max(-end.lowValue, end.highValue) < certifiedValue) {
-    return finish(-end.lowValue < end.highValue ? end.low : end.high);
+    return -end.lowValue < end.highValue ? end.low : end.high;
   }
   return blended(end.low, end.high, -end.lowValue / (end.highValue - end.lowValue));
 }
@@ -203,6 +221,11 @@ export function pressureAim(pressurePa: number): Aim {
     seeks: 'temperature',
     aimed: 0,
   };
+}
+
+export function volumeAim(work: Work, volumeM3: number): Aim {
+  const gasKPerBar = (volumeM3 * standardPressurePa) / (molarGasConstantJPerMolK * work.scaleMol);
+  return { isVolume: true, logPressure: 0, gasKPerBar, seeks: 'temperature', aimed: 0 };
 }
 
 /**
