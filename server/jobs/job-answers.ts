@@ -2,9 +2,9 @@
 // what is not there yet, waits, and asks again; its jobs outlive it, so that typing elsewhere does not start them anew.
 // Knows no scenario. Invariants: an answer is kept for as long as what a document last used rests on it; a job that the
 // evaluation behind the one that wanted it does not ask for is cancelled; a failure is told and never kept.
-import type { InputOf, Job, JobName, JobTable } from './job.ts';
+import type { Job } from './job.ts';
 import { MemoStore, type Key, type MemoRun } from './memo.ts';
-import type { JobRunner } from './runner.ts';
+import type { AnyJobRunner } from './runner.ts';
 
 /** What is there of an answer. */
 export interface Asked<Output> {
@@ -30,11 +30,11 @@ interface User {
   wake: () => void;
 }
 
-export class JobAnswers<Table extends JobTable> {
+export class JobAnswers {
   readonly #store = new MemoStore<unknown>();
   readonly #users = new Map<string, User>();
 
-  constructor(private readonly runner: JobRunner<Table>) {}
+  constructor(private readonly runner: AnyJobRunner) {}
 
   /** How many answers are kept. */
   get size(): number {
@@ -42,7 +42,7 @@ export class JobAnswers<Table extends JobTable> {
   }
 
   /** Begins a run for a user (an open document), which ends with `finish` or `abandon`; one at a time for each. */
-  run(name: string): JobAnswersRun<Table> {
+  run(name: string): JobAnswersRun {
     const user = this.#users.get(name) ?? { wanted: new Map<string, Wanted>(), hasNews: false, wake: () => undefined };
     this.#users.set(name, user);
     return new JobAnswersRun(this.runner, this.#store.run(name), user);
@@ -56,11 +56,11 @@ export class JobAnswers<Table extends JobTable> {
   }
 }
 
-export class JobAnswersRun<Table extends JobTable> {
+export class JobAnswersRun {
   readonly #asked = new Set<string>();
 
   constructor(
-    private readonly runner: JobRunner<Table>,
+    private readonly runner: AnyJobRunner,
     private readonly memo: MemoRun<unknown>,
     private readonly user: User,
   ) {}
@@ -80,8 +80,7 @@ export class JobAnswersRun<Table extends JobTable> {
       return { id, kept: this.memo.keep(id, new Map(), outcome.value) as Asked<Output>['kept'] };
     }
     if (!wanted.has(id)) {
-      const start = (signal: AbortSignal): Promise<unknown> =>
-        this.runner.runJob(name, key, input as InputOf<Table, JobName<Table>>, signal);
+      const start = (signal: AbortSignal): Promise<unknown> => this.runner.runNamed(name, key, input, signal);
       wanted.set(id, { start, cancel: null, outcome: null });
     }
     return { id, kept: undefined };

@@ -34,7 +34,14 @@ interface Run {
   handed: Handed | null;
 }
 
-export class JobRunner<Table extends JobTable> {
+/** A runner as one sees it who does not know its table. */
+export interface AnyJobRunner {
+  /** The name a job has in the table; throws for one that is not there. */
+  nameOf(job: unknown): string;
+  runNamed(name: string, key: string, input: unknown, signal?: AbortSignal): Promise<unknown>;
+}
+
+export class JobRunner<Table extends JobTable> implements AnyJobRunner {
   readonly #runs = new Map<string, Run>();
   #queue: Run[] = [];
   #crew: Crew | null;
@@ -64,6 +71,11 @@ export class JobRunner<Table extends JobTable> {
     input: InputOf<Table, Name>,
     signal?: AbortSignal,
   ): Promise<OutputOf<Table, Name>> {
+    return this.runNamed(name, key, input, signal) as Promise<OutputOf<Table, Name>>;
+  }
+
+  /** The same, for a name that is known to be there. */
+  runNamed(name: string, key: string, input: unknown, signal?: AbortSignal): Promise<unknown> {
     return new Promise((resolve, reject) => {
       if (this.#isClosed) throw new Error('the program is ending');
       signal?.throwIfAborted();
@@ -76,7 +88,7 @@ export class JobRunner<Table extends JobTable> {
       const asker: Asker = {
         resolve: (output) => {
           signal?.removeEventListener('abort', leave);
-          resolve(output as OutputOf<Table, Name>);
+          resolve(output);
         },
         reject: (error) => {
           signal?.removeEventListener('abort', leave);
@@ -89,8 +101,7 @@ export class JobRunner<Table extends JobTable> {
     });
   }
 
-  /** The name a job has in the table; throws for one that is not there. */
-  nameOf(job: unknown): JobName<Table> {
+  nameOf(job: unknown): string {
     for (const name of Object.keys(this.table)) if (this.table[name] === job) return name;
     throw new Error('this computation is not in the table of jobs');
   }

@@ -11,6 +11,7 @@ import { bindNames } from './bind.ts';
 import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
 import { lazily } from './lazily.ts';
+import type { WorkElsewhere } from './long-work.ts';
 import { placeAnswer, type PlacedAnswer, type PlacedByName } from './placing.ts';
 import { Questions, type AnswerStore } from './questions.ts';
 import type {
@@ -36,6 +37,8 @@ export interface Earlier {
 export interface Underway {
   /** What can be said already: all about form and names, and what is answered or known by heart. */
   soFar(): EvaluatedScenario;
+  /** Nothing more can be done until some of the work done elsewhere has ended. */
+  readonly waits: boolean;
 }
 
 /**
@@ -50,28 +53,43 @@ export function evaluate(path: string, read: (path: string) => ReadAnswer, earli
   }
 }
 
-/** The same, with a pause after each statement, at which the caller may stop or do something else. */
+/**
+ * The same, with a pause after each statement, at which the caller may stop or do something else. Long work is done by
+ * `elsewhere`, if given; where the evaluation waits for it, the caller is to go on once some of it has ended.
+ */
 export function* evaluateInSteps(
   path: string,
   read: (path: string) => ReadAnswer,
   earlier: Earlier = {},
+  elsewhere?: WorkElsewhere,
 ): Generator<Underway, EvaluatedScenario> {
   const { files, wanted } = loadFiles(path, read, earlier.trees);
   const bindings = bindNames(files);
   const isReadInPart = files.some(({ tree }) => isPartial(tree));
   // What is not there may stand in a file still to be fetched, or in the unread part of one that is too large.
   const mayStandElsewhere = (name: string): boolean => wanted.length > 0 || (isReadInPart && !isWellKnown(name));
-  const questions = new Questions(files, bindings, mayStandElsewhere, earlier.answers);
+  const questions = new Questions(files, bindings, mayStandElsewhere, earlier.answers, elsewhere);
   const gathered = (): EvaluatedScenario => ({ files: gatherFiles(files, questions), wanted });
   const underway: Underway = {
     soFar() {
       questions.recallRest();
       return gathered();
     },
+    waits: false,
   };
   for (const question of questions.order) {
     questions.answer(question);
     yield underway;
+  }
+  // While a file is still to be fetched nothing is waited for: once it is there, all is asked anew.
+  while (questions.isWaiting && wanted.length === 0) {
+    let isStuck = true;
+    for (const question of questions.ready()) {
+      questions.answer(question);
+      isStuck = false;
+      yield underway;
+    }
+    if (isStuck) yield { ...underway, waits: true };
   }
   return gathered();
 }

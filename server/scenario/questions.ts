@@ -1,8 +1,9 @@
 // Asks, once each and in an order in which each follows all it mentions, what the statements of a scenario come to. What a
 // store already knows is taken from it: a statement is known by its significant text and by the answers to the names it
-// looked up, so a comment asks nothing again, and a number only what rests on it. Places nothing and reads no file.
-// Invariants: with or without a store, and whatever was asked before, the answers are the same; the names of statements on
-// a ring, or given twice, stand for nothing.
+// looked up, so a comment asks nothing again, and a number only what rests on it. A statement whose long work is not there
+// yet is answered for now, as is what rests on it, and again later. Places nothing and reads no file.
+// Invariants: with or without a store, whoever does the long work, and whatever was asked before, the answers in the end
+// are the same; an answer for now is never kept; the names of statements on a ring, or given twice, stand for nothing.
 
 import type { PlacedSection } from '../../grammar/tree.ts';
 import { answerStatement, type Answer, type Answerable } from './answer.ts';
@@ -10,6 +11,7 @@ import type { Bindings } from './bind.ts';
 import type { Named, Scope } from './context.ts';
 import { mentionsOf, orderByMentions, type Mention } from './dependencies.ts';
 import type { LoadedFile } from './files.ts';
+import { onTheSpot, type LongWork, type WorkElsewhere } from './long-work.ts';
 import { placeOf } from './place.ts';
 import { significantTextOf } from './significant-text.ts';
 
@@ -31,10 +33,12 @@ interface KeptAnswer {
 /** A name that is not there, and one that stands for nothing. No number, so unlike the key of any answer. */
 const ABSENT = 'absent';
 const UNKNOWN = 'unknown';
+/** Long work that has failed. Nothing has this key now, so what rests on it is worked out again. */
+const FAILED = 'failed';
 /** Looked up by a statement that went through all names for a suggestion. No name has a newline in it. */
 const ALL_NAMES = '\n';
 
-export class Questions implements Scope {
+export class Questions {
   /** All there is to ask: each statement behind all it mentions, but for rings. */
   readonly order: readonly Question[];
   readonly #unknowable: ReadonlySet<string>;
@@ -42,6 +46,10 @@ export class Questions implements Scope {
   readonly #store: AnswerStore;
   /** What the statement in hand has looked up so far. */
   #lookedUp = new Map<string, Key>();
+  /** What it still awaits. */
+  #awaited: Awaited[] = [];
+  /** The statements answered for now, with what they await. */
+  readonly #waiting = new Map<PlacedSection, readonly Awaited[]>();
   #namesKey: string | null = null;
 
   /** Orders what is to be asked; what is wrong with the order (rings) is said in the files. */
@@ -51,6 +59,7 @@ export class Questions implements Scope {
     /** Whether a name that is not here may stand in a text that is not at hand. */
     private readonly mayBeElsewhere: (name: string) => boolean,
     store?: AnswerStore,
+    private readonly elsewhere?: WorkElsewhere,
   ) {
     const mentions = new Map([...bindings.unique].map(([name, { statement }]) => [name, mentionsIn(statement)]));
     const { order, cycles } = orderByMentions(mentions);
@@ -72,14 +81,31 @@ export class Questions implements Scope {
   /** Answers one question, from the store where that knows. Those before it in the order must have been answered. */
   answer({ placed, statement }: Question): void {
     const question = significantTextOf(placed.section).text;
+    this.#waiting.delete(placed);
     const known = this.#store.recall(question, (name) => this.#keyNow(name));
     if (known) {
       this.#answers.set(placed, known);
       return;
     }
     this.#lookedUp = new Map();
-    const answer = answerStatement(placed.section, statement, this);
-    this.#answers.set(placed, this.#store.keep(question, this.#lookedUp, answer));
+    const awaited: Awaited[] = (this.#awaited = []);
+    const answer = answerStatement(placed.section, statement, this.#scopeOf(awaited));
+    if (awaited.length > 0) {
+      this.#waiting.set(placed, awaited);
+      this.#answers.set(placed, { key: UNKNOWN, value: answer });
+    } else this.#answers.set(placed, this.#store.keep(question, this.#lookedUp, answer));
+  }
+
+  /** Whether some answers are for now only. */
+  get isWaiting(): boolean {
+    return this.#waiting.size > 0;
+  }
+
+  /** Those answered for now whose time has come, each as soon as those before it have been answered again. */
+  *ready(): Iterable<Question> {
+    for (const question of this.order) {
+      if (this.#waiting.get(question.placed)?.every((isThere) => isThere())) yield question;
+    }
   }
 
   /** Adds what is known by heart of what is not answered yet, but for what rests on something unanswered. */
@@ -106,32 +132,75 @@ export class Questions implements Scope {
     return this.#unknowable.has(name) ? undefined : this.bindings.unique.get(name)?.placed;
   }
 
-  lookup(name: string): Named | undefined {
-    this.#lookedUp.set(name, this.#keyNow(name));
+  /** The names and the long work of one statement. */
+  #scopeOf(awaited: Awaited[]): Scope {
+    return {
+      lookup: (name) => this.#lookup(name),
+      names: () => {
+        this.#lookedUp.set(ALL_NAMES, this.#allNamesKey());
+        return this.#allNames();
+      },
+      longWork: (work, key, input) => {
+        // Where its figures are read later, by another statement or a view, nobody would ask again.
+        if (awaited !== this.#awaited) throw new Error('long work was asked for after its statement was answered');
+        return this.#longWork(work, key, input);
+      },
+    };
+  }
+
+  #lookup(name: string): Named | undefined {
+    this.#lookedUp.set(name, this.#keyNow(name) ?? UNKNOWN);
     if (this.#unknowable.has(name)) return { kind: 'unknown' };
     const binding = this.bindings.unique.get(name);
     if (!binding) return this.mayBeElsewhere(name) ? { kind: 'unknown' } : undefined;
+    if (this.#waiting.has(binding.placed)) {
+      this.#awaited.push(() => !this.#waiting.has(binding.placed));
+      return { kind: 'unknown' };
+    }
     return this.answerTo(binding.placed)?.named ?? { kind: 'unknown' };
   }
 
-  names(): Iterable<string> {
-    this.#lookedUp.set(ALL_NAMES, this.#keyNow(ALL_NAMES));
-    return this.#allNames();
+  #longWork<Input, Output>(work: LongWork<Input, Output>, key: string, input: Input): Output | null {
+    const { elsewhere } = this;
+    if (!elsewhere) return onTheSpot(work, input);
+    let asked;
+    try {
+      asked = elsewhere.ask(work, key, input);
+    } catch (error) {
+      this.#lookedUp.set(`\n${FAILED}`, FAILED);
+      throw error;
+    }
+    const { id, kept } = asked;
+    if (!kept) {
+      this.#awaited.push(() => elsewhere.isDone(id));
+      return null;
+    }
+    this.#lookedUp.set(id, kept.key);
+    return kept.value;
   }
 
   #allNames(): readonly string[] {
     return [...this.bindings.unique.keys(), ...this.bindings.ambiguous];
   }
 
-  /** The key of what a name stands for now. */
-  #keyNow(name: string): Key {
-    if (name === ALL_NAMES) return (this.#namesKey ??= this.#allNames().join('\n'));
+  #allNamesKey(): Key {
+    return (this.#namesKey ??= this.#allNames().join('\n'));
+  }
+
+  /** The key of what a name, or a question of long work, stands for now; null for what is awaited or not kept. */
+  #keyNow(name: string): Key | null {
+    if (name === ALL_NAMES) return this.#allNamesKey();
+    if (name.startsWith('\n')) return this.elsewhere?.keyNow(name) ?? null;
     if (this.#unknowable.has(name)) return UNKNOWN;
     const binding = this.bindings.unique.get(name);
     if (!binding) return this.mayBeElsewhere(name) ? UNKNOWN : ABSENT;
+    if (this.#waiting.has(binding.placed)) return null;
     return this.#answers.get(binding.placed)?.key ?? UNKNOWN;
   }
 }
+
+/** Something not there yet; tells whether it is by now. */
+type Awaited = () => boolean;
 
 /** A statement to be answered. */
 export interface Question {

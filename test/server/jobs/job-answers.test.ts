@@ -15,9 +15,9 @@ const table = {
     throw new Error(input);
   },
 };
-let answers: JobAnswers<typeof table>;
-type Run = JobAnswersRun<typeof table>;
-const ask = (run: Run, input: number): number | undefined => run.ask(table.doubled, String(input), input).kept?.value;
+let answers: JobAnswers;
+const ask = (run: JobAnswersRun, input: number): number | undefined =>
+  run.ask(table.doubled, String(input), input).kept?.value;
 
 beforeEach(() => {
   ran = [];
