@@ -142,8 +142,11 @@ export interface FrozenState extends MatterState {
   readonly from: Equilibrium;
 }
 
+/** Why there is no state: the minimiser's reason, or the question was given up before its turn came. */
+export type NoState = NoEquilibrium | { readonly kind: 'none'; readonly reason: 'stopped' };
+
 export type BurnState = Equilibrium | FrozenState;
-export type BurnStateOrNone = BurnState | NoEquilibrium;
+export type BurnStateOrNone = BurnState | NoState;
 
 /** A burn whose states are solved when first asked for, and once. */
 export interface Burn {
@@ -153,13 +156,13 @@ export interface Burn {
   /** Null without a zone. */
   readonly zoneCharge: Charge | null;
   /** The whole charge at its overall λ, loss taken out. */
-  flame(): Equilibrium | NoEquilibrium;
+  flame(): Equilibrium | NoState;
   /** Null without a zone, or where its enthalpy is unknown. */
-  zone(): Equilibrium | NoEquilibrium | null;
+  zone(): Equilibrium | NoState | null;
   /** In the order of `cooledToK`. */
   readonly cooled: readonly CooledState[];
   /** The composition at `frozenBelowK`; null where nothing freezes. */
-  frozenAt(): Equilibrium | NoEquilibrium | null;
+  frozenAt(): Equilibrium | NoState | null;
   /** The state of the cooling gas at a temperature: equilibrium, or frozen where that has been passed. */
   at(temperatureK: number): BurnStateOrNone;
   /**
@@ -168,9 +171,9 @@ export interface Burn {
    */
   path(temperaturesK?: readonly number[]): CoolingPath;
   /** What is released between the charge and 25 °C. */
-  heat(): BurnHeatReleased | NoEquilibrium | null;
+  heat(): BurnHeatReleased | NoState | null;
   /** J released above a temperature of the exhaust: the charge's enthalpy less that of the cooled gas; null as for `heat`. */
-  heatAbove(temperatureK: number): number | NoEquilibrium | null;
+  heatAbove(temperatureK: number): number | NoState | null;
 }
 
 export interface CooledState {

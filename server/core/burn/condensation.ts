@@ -6,12 +6,12 @@
 // on these, kept inside the bracket, and bisection where they do not help.
 
 import { fillGibbs } from '../substance/property-set.ts';
-import type { Equilibrium, NoEquilibrium } from '../equilibrium/equilibrium.ts';
+import type { Equilibrium } from '../equilibrium/equilibrium.ts';
 import { eventPrecisionK } from './burn.ts';
-import type { PathEvent } from './burn.ts';
+import type { NoState, PathEvent } from './burn.ts';
 
 /** A state at a temperature in K, `near` being one to start from. */
-export type StateAt = (temperatureK: number, near: Equilibrium) => Equilibrium | NoEquilibrium;
+export type StateAt = (temperatureK: number, near: Equilibrium) => Equilibrium | NoState;
 
 /** A solved state with what the search reads of it again and again. */
 export interface CooledPoint {

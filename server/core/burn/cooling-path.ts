@@ -4,8 +4,8 @@
 // of temperatures alone: its first state starts cold, so no earlier question reaches into it.
 
 import type { CandidateSet } from '../equilibrium/candidates.ts';
-import type { Equilibrium, NoEquilibrium } from '../equilibrium/equilibrium.ts';
-import type { BurnStateOrNone, CoolingPath, FrozenState, PathEvent } from './burn.ts';
+import type { Equilibrium } from '../equilibrium/equilibrium.ts';
+import type { BurnStateOrNone, CoolingPath, FrozenState, NoState, PathEvent } from './burn.ts';
 import { cooledPoint, eventsBetween, hiddenVisit } from './condensation.ts';
 import type { CooledPoint } from './condensation.ts';
 
@@ -13,11 +13,11 @@ import type { CooledPoint } from './condensation.ts';
 export interface PathGas {
   readonly candidates: CandidateSet;
   /** At a temperature in K; cold without `near`. */
-  readonly solve: (temperatureK: number, near?: Equilibrium) => Equilibrium | NoEquilibrium;
+  readonly solve: (temperatureK: number, near?: Equilibrium) => Equilibrium | NoState;
   /** Where the composition freezes, and the states below it. */
   readonly frozen?: {
     readonly atK: number;
-    readonly from: Equilibrium | NoEquilibrium;
+    readonly from: Equilibrium | NoState;
     readonly state: (from: Equilibrium, temperatureK: number) => FrozenState;
   };
 }

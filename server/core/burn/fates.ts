@@ -9,12 +9,15 @@ import type { Formula } from '../substance/formula.ts';
 import type { MatterState } from './burn.ts';
 import { sharesAddingToOne } from './exact-shares.ts';
 
-/** `soot` is condensed carbon, counted as graphite; `carbonate` in any phase. */
+/** `soot` is condensed carbon, counted as graphite; `carbonate` in any phase, with hydrogen carbonates and hydrates. */
 export type CarbonForm = 'carbon-dioxide' | 'carbonate' | 'carbon-monoxide' | 'hydrocarbon' | 'soot' | 'other';
-/** `oxide` with peroxide and superoxide; `metal` as a gas is metal vapour, its pairs included; ions are `other`. */
+/**
+ * `oxide` with peroxide and superoxide; salts with their acid salts and hydrates; `metal` as a gas is metal vapour, its pairs
+ * included; ions are `other`.
+ */
 export type AlkaliForm = 'hydroxide' | 'carbonate' | 'chloride' | 'sulphate' | 'oxide' | 'metal' | 'other';
-/** `hydroxide` is that of metals. */
-export type HydrogenForm = 'water' | 'hydroxide' | 'hydrogen' | 'hydrocarbon' | 'other';
+/** `water` is free water; that of crystals is `crystal-water`; `hydroxide` is that of metals, hydrated ones apart. */
+export type HydrogenForm = 'water' | 'crystal-water' | 'hydroxide' | 'hydrogen' | 'hydrocarbon' | 'other';
 
 export const carbonForms: readonly CarbonForm[] = [
   'carbon-dioxide',
@@ -33,7 +36,14 @@ export const alkaliForms: readonly AlkaliForm[] = [
   'metal',
   'other',
 ];
-export const hydrogenForms: readonly HydrogenForm[] = ['water', 'hydroxide', 'hydrogen', 'hydrocarbon', 'other'];
+export const hydrogenForms: readonly HydrogenForm[] = [
+  'water',
+  'crystal-water',
+  'hydroxide',
+  'hydrogen',
+  'hydrocarbon',
+  'other',
+];
 
 /** Atoms of one element in one form: mol, and shares of all of the element's atoms. */
 export interface FateRow<Form extends string> {
@@ -79,7 +89,7 @@ export function carbonFormOf({ composition, charge, phase }: Formula): CarbonFor
   const oxygen = composition.get('O') ?? 0;
   const hydrogen = composition.get('H') ?? 0;
   const others = composition.size - [carbon, oxygen, hydrogen].filter((atoms) => atoms > 0).length;
-  if (others > 0) return oxygen === 3 * carbon ? 'carbonate' : 'other';
+  if (others > 0) return isOxySalt(oxygen, 3 * carbon, hydrogen) ? 'carbonate' : 'other';
   if (oxygen === 0 && hydrogen === 0) return phase === 'g' ? 'other' : 'soot';
   if (oxygen === 0) return 'hydrocarbon';
   if (hydrogen > 0 || carbon !== 1) return 'other';
@@ -95,33 +105,39 @@ export function alkaliFormOf({ composition, charge }: Formula): AlkaliForm {
     if (alkaliMetals.includes(symbol)) alkali += atoms;
     else rest.push(symbol);
   }
-  const oxygen = composition.get('O') ?? 0;
-  switch (rest.sort().join(' ')) {
+  const atoms = (symbol: string): number => composition.get(symbol) ?? 0;
+  const oxygen = atoms('O');
+  const hydrogen = atoms('H');
+  switch (rest.filter((symbol) => symbol !== 'H' && symbol !== 'O').join(' ')) {
     case '':
-      return 'metal';
-    case 'O':
-      return 'oxide';
-    case 'H O':
-      return oxygen === alkali && composition.get('H') === alkali ? 'hydroxide' : 'other';
-    case 'C O':
-      return oxygen === 3 * (composition.get('C') ?? 0) ? 'carbonate' : 'other';
+      if (hydrogen === 0) return oxygen === 0 ? 'metal' : 'oxide';
+      return oxygen >= alkali && hydrogen === alkali + 2 * (oxygen - alkali) ? 'hydroxide' : 'other';
+    case 'C':
+      return isOxySalt(oxygen, 3 * atoms('C'), hydrogen) ? 'carbonate' : 'other';
     case 'Cl':
-      return 'chloride';
-    case 'O S':
-      return oxygen === 4 * (composition.get('S') ?? 0) ? 'sulphate' : 'other';
+      return isOxySalt(oxygen, 0, hydrogen) ? 'chloride' : 'other';
+    case 'S':
+      return isOxySalt(oxygen, 4 * atoms('S'), hydrogen) ? 'sulphate' : 'other';
     default:
       return 'other';
   }
 }
 
+/** The oxygen of the acid's group and, beyond it, no more than hydrogen can hold as water of crystallisation. */
+function isOxySalt(oxygen: number, oxygenOfGroup: number, hydrogen: number): boolean {
+  return oxygen >= oxygenOfGroup && 2 * (oxygen - oxygenOfGroup) <= hydrogen;
+}
+
 /** The form in which a substance holds hydrogen. */
-export function hydrogenFormOf({ composition, charge }: Formula): HydrogenForm {
+export function hydrogenFormOf({ composition, charge, text }: Formula): HydrogenForm {
   if (charge !== 0) return 'other';
   const hydrogen = composition.get('H') ?? 0;
   const oxygen = composition.get('O') ?? 0;
   if (composition.size === 1) return 'hydrogen';
   if (composition.size === 2 && composition.has('C')) return 'hydrocarbon';
   if (composition.size === 2 && oxygen === 1 && hydrogen === 2) return 'water';
+  // Each atom in one form: a hydrate's few atoms of hydroxide or acid go with its water.
+  if (text.includes('·')) return 'crystal-water';
   const metals = [...composition.keys()].filter((symbol) => symbol !== 'H' && symbol !== 'O');
   const isHydroxide = oxygen > 0 && oxygen === hydrogen && metals.length === 1 && hydroxideMetals.has(metals[0] ?? '');
   return isHydroxide ? 'hydroxide' : 'other';

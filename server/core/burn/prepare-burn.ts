@@ -5,7 +5,7 @@
 
 import { referenceTemperatureK } from '../substance/substance.ts';
 import { candidateSet } from '../equilibrium/candidates.ts';
-import type { Equilibrium, Held, NoEquilibrium } from '../equilibrium/equilibrium.ts';
+import type { Equilibrium, Held } from '../equilibrium/equilibrium.ts';
 import { equilibriumSolver } from '../equilibrium/solver.ts';
 import type { EquilibriumSolver } from '../equilibrium/solver.ts';
 import { ionsAboveK } from './burn.ts';
@@ -18,6 +18,7 @@ import type {
   Charge,
   CoolingPath,
   FrozenState,
+  NoState,
 } from './burn.ts';
 import { chargeOf } from './charge.ts';
 import { coolingPath } from './cooling-path.ts';
@@ -39,21 +40,21 @@ export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn 
   const zone = zoneCharge && new Matter(zoneCharge, input, shouldStop);
   const lossJ = input.heat.heat === 'adiabatic' ? input.heat.lossShare * (input.lowerHeatingValueJPerKg ?? 0) : 0;
 
-  const flame = once((): Equilibrium | NoEquilibrium => {
+  const flame = once((): Equilibrium | NoState => {
     const held =
       input.heat.heat === 'temperature'
         ? heldAt(input, charge, input.heat.temperatureK)
         : heldAdiabatic(input, charge, lossJ);
     return whole.solveHot(held);
   });
-  const zoneState = once((): Equilibrium | NoEquilibrium | null =>
+  const zoneState = once((): Equilibrium | NoState | null =>
     zone === undefined || zoneCharge === undefined || zoneCharge.enthalpyJ === null
       ? null
       : zone.solveHot(heldAdiabatic(input, zoneCharge, 0)),
   );
-  const solveCooling = (temperatureK: number, near?: Equilibrium): Equilibrium | NoEquilibrium =>
+  const solveCooling = (temperatureK: number, near?: Equilibrium): Equilibrium | NoState =>
     whole.solve(heldCooling(input, charge, temperatureK), near);
-  const frozenAt = once((): Equilibrium | NoEquilibrium | null => {
+  const frozenAt = once((): Equilibrium | NoState | null => {
     if (input.frozenBelowK === undefined) return null;
     const burnt = flame();
     // A flame cooler than that has nowhere to freeze but where it is.
@@ -131,13 +132,13 @@ class Matter {
     return this.plain().candidates;
   }
 
-  solve(held: Held, near?: Equilibrium): Equilibrium | NoEquilibrium {
+  solve(held: Held, near?: Equilibrium): Equilibrium | NoState {
     if (this.shouldStop?.() === true) return { kind: 'none', reason: 'stopped' };
     return this.plain().solve(this.charge.elementMol, held, near);
   }
 
   /** With ions where they are asked for and the state without them is hot enough to have any. */
-  solveHot(held: Held): Equilibrium | NoEquilibrium {
+  solveHot(held: Held): Equilibrium | NoState {
     const state = this.solve(held);
     if (this.input.ions !== true || state.kind === 'none' || state.temperatureK <= ionsAboveK) return state;
     const neutral = new Float64Array(this.charge.elementMol.length + 1);
@@ -194,7 +195,7 @@ function heatReleased(
   input: BurnInput,
   charge: Charge,
   at: (temperatureK: number) => BurnStateOrNone,
-): BurnHeatReleased | NoEquilibrium | null {
+): BurnHeatReleased | NoState | null {
   if (charge.enthalpyJ === null) return null;
   const slate = at(referenceTemperatureK);
   if (slate.kind === 'none') return slate;

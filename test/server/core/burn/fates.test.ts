@@ -50,6 +50,9 @@ test.each<[string, string]>([
   ['Fe(CO)5(l)', 'other'],
   ['COCl(g)', 'other'],
   ['NaCN(cr)', 'other'],
+  ['NaHCO3(cr)', 'carbonate'],
+  ['Na2CO3·NaHCO3·2H2O(cr)', 'carbonate'],
+  ['CaCO3(cr,calcite)', 'carbonate'],
 ])('carbon in %s is %s', (id, form) => {
   expect(carbonFormOf(formula(id))).toBe(form);
 });
@@ -73,6 +76,10 @@ test.each<[string, string]>([
   ['NaCN(g)', 'other'],
   ['LiOCl(g)', 'other'],
   ['NaAlO2(cr)', 'other'],
+  ['KHCO3(cr)', 'carbonate'],
+  ['Na2CO3·10H2O(cr)', 'carbonate'],
+  ['NaOH·H2O(cr)', 'hydroxide'],
+  ['NaBH4(cr)', 'other'],
 ])('alkali in %s is %s', (id, form) => {
   expect(alkaliFormOf(formula(id))).toBe(form);
 });
@@ -90,7 +97,9 @@ test.each<[string, string]>([
   ['MgOH(g)', 'hydroxide'],
   ['HNO(g)', 'other'],
   ['C2H4(g)', 'hydrocarbon'],
-  ['H2SO4·H2O(cr)', 'other'],
+  ['H2SO4·H2O(cr)', 'crystal-water'],
+  ['LiOH·H2O(cr)', 'crystal-water'],
+  ['NaHCO3(cr)', 'other'],
 ])('hydrogen in %s is %s', (id, form) => {
   expect(hydrogenFormOf(formula(id))).toBe(form);
 });
