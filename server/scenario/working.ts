@@ -41,6 +41,7 @@ export type MethodId =
   | 'reaction-enthalpy'
   | 'reaction-gibbs-energy'
   | 'equilibrium-constant'
+  | 'equilibrium-temperature'
   | 'specific-reaction-enthalpy'
   | 'solids-share'
   | 'wet-gas'

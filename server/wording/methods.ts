@@ -135,6 +135,12 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols: 'ΔG reaction Gibbs energy, R gas constant, T temperature',
     validity: 'For the equation as written, gases against 1 bar.',
   },
+  'equilibrium-temperature': {
+    words: 'Where the Gibbs energy of the equation changes sign, so that it turns from one direction to the other.',
+    equation: 'ΔH(T) − T ΔS(T) = 0',
+    symbols: 'ΔH(T), ΔS(T) enthalpy and entropy of the reaction at that temperature',
+    validity: 'All in their standard states, gases at 1 bar each: at another partial pressure it turns elsewhere.',
+  },
   'specific-reaction-enthalpy': {
     words: 'The enthalpy of the reaction per kg of everything on its left side.',
     equation: 'Δh = ΔH / Σ νᵣ Mᵣ',

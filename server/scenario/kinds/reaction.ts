@@ -1,6 +1,6 @@
 // `reaction`: one written equation. Its elements are counted on both sides; where they do not close, the balanced equation
 // is offered. A balanced equation is valued: enthalpy, Gibbs energy and log10 K at its state, per equation as written and
-// per kilogram of its left side.
+// per kilogram of its left side, and over temperature (reaction-temperatures.ts).
 
 import type { Definition, Equation, Span, Term } from '../../../grammar/tree.ts';
 import { equationElements } from '../../core/balance/elements.ts';
@@ -18,10 +18,12 @@ import type { Material } from '../material.ts';
 import type { FigureRow } from '../material-figures.ts';
 import { materialNamed } from '../materials.ts';
 import { stateReader, type State } from '../readers.ts';
-import type { Figure, Table } from '../scenario.ts';
+import { lazily } from '../lazily.ts';
+import type { Figure, LineResult, Table } from '../scenario.ts';
 import { isReference, valueSpecies, type ValuedSpecies } from '../valued-species.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+import { equilibriumTemperature, overTemperature } from './reaction-temperatures.ts';
 
 const entries = {
   state: {
@@ -32,7 +34,7 @@ const entries = {
   },
 };
 
-const figures = [
+const stateFigures = [
   { id: 'enthalpy', label: 'Enthalpy of reaction, per equation as written', unit: 'kJ', method: 'reaction-enthalpy' },
   {
     id: 'specific-enthalpy',
@@ -48,6 +50,8 @@ const figures = [
   },
   { id: 'log10-k', label: 'Decimal logarithm of the equilibrium constant', unit: '1', method: 'equilibrium-constant' },
 ] as const satisfies readonly FigureRow[];
+
+const figures: readonly FigureRow[] = [...stateFigures, equilibriumTemperature];
 
 const evaluated: EvaluatedKind = { entries, lines: ['equation'], figures, evaluate };
 
@@ -97,8 +101,28 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const sides = { left: valued(left), right: valued(right) };
   reportData(sides, first.line, read.state?.entry.span, state, context);
   const answer = value(sides, state, context);
-  const line = { kind: 'equation', line: first.index, figures: answer.figures.map((figure) => figure.id) } as const;
-  return { ...answer, tables: [...tables, speciesTable(sides, context)], lines: [line], material: null };
+  const atState = { ...answer, tables: [...tables, speciesTable(sides, context)] };
+  if (answer.figures.length === 0) return { ...atState, lines: [equationLine(first.index, [])], material: null };
+  const lacking = answer.absent.get('gibbs-energy') ?? ['a Gibbs energy at 25 °C'];
+  const over = overTemperature({ left, right }, state.pressure.value, lacking, (temperatureK) => {
+    const there = { ...state, temperature: temperatureOf(temperatureK) };
+    const termsThere = (terms: readonly ReadTerm[]): ValuedTerm[] => terms.map((term) => valueTerm(term, there));
+    const sidesThere = { left: termsThere(left), right: termsThere(right) };
+    return workingOf(equilibriumTemperature, sidesThere, there.temperature, context);
+  });
+  const all = (): readonly Figure[] => [...answer.figures, ...over.figures()];
+  return lazily<KindAnswer>(
+    { ...atState, tables: [...atState.tables, ...over.tables], lines: [], material: null },
+    {
+      figures: all,
+      absent: () => new Map([...answer.absent, ...over.absent()]),
+      lines: () => [equationLine(first.index, all())],
+    },
+  );
+}
+
+function equationLine(line: number, told: readonly Figure[]): LineResult {
+  return { kind: 'equation', line, figures: told.map((figure) => figure.id) };
 }
 
 /** The state a reaction is valued at. */
@@ -107,10 +131,13 @@ interface ReactionState {
   readonly pressure: Quantity;
 }
 
+function temperatureOf(temperatureK: number): Quantity {
+  return quantityOf(temperatureK, knownUnit('K').dimension, noParts, 'temperature');
+}
+
 function stateOf(state: State | undefined): ReactionState {
-  const temperature = quantityOf(referenceTemperatureK, knownUnit('K').dimension, noParts, 'temperature');
   return {
-    temperature: state?.temperature ?? temperature,
+    temperature: state?.temperature ?? temperatureOf(referenceTemperatureK),
     pressure: state?.pressure ?? quantityOf(1e5, knownUnit('Pa').dimension),
   };
 }
@@ -266,7 +293,7 @@ function value(
   const withoutEntropy = new Set(terms.filter(({ species }) => !species.entropy).map(({ material }) => material.name));
   const found: Figure[] = [];
   const absent = new Map<string, readonly string[] | null>();
-  for (const [index, row] of figures.entries()) {
+  for (const [index, row] of stateFigures.entries()) {
     const outcome = outcomes[index];
     if (!outcome || !Number.isFinite(outcome.value)) {
       absent.set(
