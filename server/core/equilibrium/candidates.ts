@@ -3,7 +3,7 @@
 // Knows no amounts and no state. Invariant: every phase consists of the set's elements only, and none is there twice.
 // Data: every phase of the library but those left out of searches.
 
-import { allPhases } from '../substance/phases.ts';
+import { candidatePhases } from '../substance/phases.ts';
 import type { ThermoPhase } from '../substance/phases.ts';
 import { preparePropertySet } from '../substance/property-set.ts';
 import type { PropertySet } from '../substance/property-set.ts';
@@ -40,9 +40,8 @@ export const charge = 'charge';
 export function candidateSet(elements: readonly string[], options: CandidateOptions = {}): CandidateSet {
   const { ions = false, admits = () => true } = options;
   const known = new Set(elements);
-  const found = allPhases().filter(
+  const found = candidatePhases().filter(
     (phase) =>
-      phase.leftOut === undefined &&
       (ions || phase.formula.charge === 0) &&
       [...phase.formula.composition.keys()].every((symbol) => known.has(symbol)) &&
       admits(phase),
@@ -67,7 +66,7 @@ export function candidateSet(elements: readonly string[], options: CandidateOpti
       return count || 1;
     }),
     molarMassKgPerMol: Float64Array.from(phases, (phase) => phase.molarMassKgPerMol),
-    endK: Float64Array.from(phases, (phase) => phase.limit?.atK ?? Infinity),
+    endK: Float64Array.from(phases, (phase) => phase.endK),
     hasCharge: ions,
     properties: preparePropertySet(phases.map((phase) => phase.curve)),
   };

@@ -14,15 +14,21 @@ import { addPresent } from './descent.ts';
 import type { Work } from './work.ts';
 
 const mostSteps = 200;
+/** Gaps (amount times distance from equilibrium, the mean over the phases) at which the state is shown; then the path ends. */
+const stations = [1e-9, 1e-11, 1e-13, 1e-16, 1e-20, 1e-24] as const;
 const lastGap = 1e-24;
 /** How far the gas's distance from equilibrium may be off its value; the next step takes it back. */
 const rounding = 1e-13;
 
-/** Follows the path for the present `cost`, basis and amounts; true when it arrived. Leaves potentials and amounts in `work`. */
-export function followCentre(work: Work, aim: Aim): boolean {
+/**
+ * Follows the path for the present `cost`, basis and amounts. At each station the state is left in `work` and `accept` is
+ * asked; true ends the path. Where the optimum is unique the last stations are the best; where it is not, rounding grows with
+ * the distance and an earlier one is.
+ */
+export function followCentre<Answer>(work: Work, aim: Aim, accept: () => Answer | undefined): Answer | undefined {
   const { rank, width, nu, stride, matrix, right, potential, condensed, condensedCount, gases, gasCount } = work;
   const direction = downhill(work);
-  if (!enterInterior(work, aim, direction)) return false;
+  if (!enterInterior(work, aim, direction)) return undefined;
   const hasGas = gasCount > 0;
   const amount = new Float64Array(condensedCount);
   const slack = new Float64Array(condensedCount);
@@ -38,6 +44,19 @@ export function followCentre(work: Work, aim: Aim): boolean {
   let barrier = 1;
   let gasAmount = hasGas ? barrier / gasSlack : 0;
   for (let index = 0; index < condensedCount; index += 1) amount[index] = barrier / at(slack, index);
+  const { temperatureK } = work;
+  // A phase is present where its amount outweighs its distance from equilibrium.
+  const takeOut = (): void => {
+    work.presentCount = 0;
+    work.isTied = false;
+    work.gasAmount = hasGas && gasAmount > gasSlack ? gasAmount : 0;
+    for (let index = 0; index < condensedCount; index += 1) {
+      if (at(amount, index) > at(slack, index) && work.presentCount < work.width + 1) {
+        addPresent(work, at32(condensed, index), at(amount, index));
+      }
+    }
+  };
+  let station = 0;
   for (let step = 0; step < mostSteps; step += 1) {
     // Matrix and right side of the potentials' system.
     matrix.fill(0, 0, rank * stride);
@@ -87,7 +106,7 @@ export function followCentre(work: Work, aim: Aim): boolean {
       matrix[k * stride + k] = at(matrix, k * stride + k) * (1 + 1e-14) + 1e-280;
       for (let l = 0; l < k; l += 1) matrix[l * stride + k] = at(matrix, k * stride + l);
     }
-    if (solveDense(matrix, stride, rank, right, work.dense) === 0) return false;
+    if (solveDense(matrix, stride, rank, right, work.dense) === 0) return undefined;
     // New multipliers for the whole step, then the largest part of it that stays inside.
     let share = 1;
     let gasNext = 0;
@@ -118,7 +137,7 @@ export function followCentre(work: Work, aim: Aim): boolean {
       const slackNext = gasSlack + share * gasSlackChange;
       missingNext = Math.log(work.fractionSum) + slackNext;
       if (missingNext <= Math.abs(gasMissing) + 0.5 * slackNext + rounding) break;
-      if (tries > 60) return false;
+      if (tries > 60) return undefined;
       share *= 0.6;
     }
     for (let index = 0; index < condensedCount; index += 1) {
@@ -139,41 +158,20 @@ export function followCentre(work: Work, aim: Aim): boolean {
     let gap = hasGas ? gasAmount * gasSlack : 0;
     for (let index = 0; index < condensedCount; index += 1) gap += at(amount, index) * at(slack, index);
     gap /= count;
-    if (share > 0.9 && gap < lastGap * 10 && largestMiss(work, amount, gasAmount) < 1e-13) break;
+    while (station < stations.length && gap <= (stations[station] ?? 0)) {
+      station += 1;
+      trial.set(potential.subarray(0, rank));
+      takeOut();
+      const answer = accept();
+      if (answer !== undefined) return answer;
+      potential.set(trial);
+      work.temperatureK = temperatureK;
+      takeFractions(work, aim);
+    }
+    if (station >= stations.length) return undefined;
     barrier = Math.max(lastGap, (share > 0.9 ? 0.1 : share > 0.5 ? 0.3 : 0.8) * gap);
   }
-  // A phase is present where its amount outweighs its distance from equilibrium.
-  work.presentCount = 0;
-  work.isTied = false;
-  work.gasAmount = hasGas && gasAmount > gasSlack ? gasAmount : 0;
-  for (let index = 0; index < condensedCount; index += 1) {
-    if (at(amount, index) > at(slack, index) && work.presentCount < work.width + 1) {
-      addPresent(work, at32(condensed, index), at(amount, index));
-    }
-  }
-  return true;
-}
-
-/** How far the multipliers are from holding the elements, over what they hold, the worst balance. */
-function largestMiss(work: Work, amount: Float64Array, gasAmount: number): number {
-  const { rank, width, nu, condensed, condensedCount, gases, gasCount, fraction, fractionSum } = work;
-  let worst = 0;
-  for (let k = 0; k < rank; k += 1) {
-    let sum = -at(work.amounts, k);
-    let size = Math.abs(sum);
-    const add = (phase: number, amountOfPhase: number): void => {
-      const part = at(nu, phase * width + k) * amountOfPhase;
-      sum += part;
-      size += Math.abs(part);
-    };
-    for (let index = 0; index < gasCount; index += 1) {
-      const gas = at32(gases, index);
-      add(gas, (at(fraction, gas) * gasAmount) / fractionSum);
-    }
-    for (let index = 0; index < condensedCount; index += 1) add(at32(condensed, index), at(amount, index));
-    if (size > 0) worst = Math.max(worst, Math.abs(sum) / size);
-  }
-  return worst;
+  return undefined;
 }
 
 /** A direction in which every phase loses: one unit less for each atom, half a unit for a charge. */

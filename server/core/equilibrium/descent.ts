@@ -3,11 +3,13 @@
 // Knows no start of its own and gives no certificate: it says only whether it came to rest. Invariant: at rest no phase present
 // has less than nothing and no absent one has an affinity above the limit.
 
-import { affinityOf, takeStep } from './newton.ts';
+import { affinityOf, takeFractions, takeStep } from './newton.ts';
 import type { Aim, Step } from './newton.ts';
+import { balanceTraces } from './traces.ts';
+import { takeBasis } from './vertex.ts';
 import type { Work } from './work.ts';
 
-export type Rest = 'rest' | 'lost' | 'stopped';
+export type Rest = 'rest' | 'lost';
 
 export interface Bounds {
   readonly lowestK: number;
@@ -34,11 +36,19 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
   let arrivals = 0;
   let negative = 0;
   let atBound = 0;
+  let creeping = 0;
   const mostArrivals = 12 + 3 * work.width;
   for (let count = 0; count < mostSteps; count += 1) {
+    if (count === 10 || count === 25 || count === 50) takePresentBasis(work, aim);
     takeStep(work, aim, step, bounds.lowestK, bounds.highestK);
     descent.steps += 1;
     if (step.change === Infinity) return 'lost';
+    // A step of one e-fold after another: some trace is far too plentiful.
+    creeping = step.taken === 1 && Math.abs(step.change - 1) < 0.02 ? creeping + 1 : 0;
+    if (creeping >= 3 && work.gasAmount > 0) {
+      balanceTraces(work, aim);
+      creeping = 0;
+    }
     const isAtBound = work.temperatureK === bounds.lowestK || work.temperatureK === bounds.highestK;
     if (aim.seeks !== 'temperature') atBound = isAtBound ? atBound + 1 : 0;
     if (atBound > 3) return 'lost';
@@ -64,6 +74,32 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
     if (rests) return arrivals < mostArrivals ? 'rest' : 'lost';
   }
   return 'lost';
+}
+
+/**
+ * Writes the balances in the most abundant independent phases of the present state, which stays what it is. The vertex's phases
+ * serve nearly always; where they turn out rare, rounding in what is plentiful would drown them.
+ */
+export function takePresentBasis(work: Work, aim: Aim): void {
+  const { set, gases, gasCount, condensed, condensedCount, fraction, logFraction, cost, potential } = work;
+  const potentials = new Float64Array(set.phases.length);
+  const amounts = new Float64Array(set.phases.length);
+  const perFraction = work.gasAmount / work.fractionSum;
+  for (let index = 0; index < gasCount; index += 1) {
+    const phase = at32(gases, index);
+    potentials[phase] = at(cost, phase) + at(logFraction, phase);
+    amounts[phase] = at(fraction, phase) * perFraction;
+  }
+  for (let index = 0; index < condensedCount; index += 1) {
+    const phase = at32(condensed, index);
+    potentials[phase] = at(cost, phase) + affinityOf(work, phase);
+  }
+  for (let index = 0; index < work.presentCount; index += 1) {
+    amounts[at32(work.present, index)] = Math.max(0, at(work.presentAmount, index));
+  }
+  takeBasis(work, amounts);
+  for (let k = 0; k < work.rank; k += 1) potential[k] = at(potentials, at32(work.basis, k));
+  takeFractions(work, aim);
 }
 
 function hasNegative(work: Work): boolean {

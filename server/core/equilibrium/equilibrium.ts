@@ -50,7 +50,7 @@ export interface Equilibrium {
   readonly gamma: number | null;
   /** m/s from `gamma`, the condensed phases moving with the gas; null without gas. */
   readonly speedOfSoundMPerS: number | null;
-  /** What keeps the temperature where it is while heat is added, if anything does. */
+  /** What keeps the temperature where it is while heat is added at this pressure, if anything does. */
   readonly pinned: Pinned | null;
   /** Phases present beyond the range of their data, by index. */
   readonly extrapolated: readonly number[];
@@ -84,8 +84,8 @@ export interface Certificate {
 
 /**
  * Why there is no answer. `cannot-form`: no combination of the candidates has these elements (`elements` are those to
- * blame) · `outside-tables`: the state that is asked for lies below or above every temperature the data reach ·
- * `nothing`: no amount of any element · `not-finite`: a given number is not a positive finite one · `stopped` ·
+ * blame) · `no-gas`: a volume is held and there is no gas among the candidates to fill it · `outside-tables`: the state that is asked for lies below or above every temperature the data reach ·
+ * `nothing`: no amount of any element · `not-finite`: a given number is not a positive finite one ·
  * `not-converged`: a fault of this program; the numbers to reproduce it are in `detail`.
  */
 export type NoEquilibrium =
@@ -96,5 +96,5 @@ export type NoEquilibrium =
       readonly side: 'below' | 'above';
       readonly limitK: number;
     }
-  | { readonly kind: 'none'; readonly reason: 'nothing' | 'not-finite' | 'stopped' }
+  | { readonly kind: 'none'; readonly reason: 'nothing' | 'no-gas' | 'not-finite' | 'stopped' }
   | { readonly kind: 'none'; readonly reason: 'not-converged'; readonly detail: string };

@@ -154,6 +154,13 @@ export function assemble(work: Work, aim: Aim): number {
       capacity += amount * at(heatCapacity, phase);
     }
   }
+  for (let k = 0; k < rank; k += 1) {
+    if (at(work.amounts, k) === 0 && isEmptyRow(matrix, k * stride, size)) {
+      // Nothing that is there has any of this basis phase: its potential has no say and stays.
+      matrix[k * stride + k] = 1;
+      right[k] = 0;
+    }
+  }
   if (seeksHeat) {
     matrix[heatStart + heatRow] = squares + capacity;
     // Gas (pressure held) and condensed amounts come out new, so that what they hold now stays on the left side.
@@ -164,6 +171,11 @@ export function assemble(work: Work, aim: Aim): number {
         : entropyMissing(work, aim) + (hasGasRow ? heatSum : 0) + presentHeat;
   }
   return size;
+}
+
+function isEmptyRow(matrix: Float64Array, start: number, size: number): boolean {
+  for (let column = 0; column < size; column += 1) if (at(matrix, start + column) !== 0) return false;
+  return true;
 }
 
 /** S/R that is missing, with the first-order part that the balances still miss: dS = (dU + p dV - sum of potentials dn)/T. */
@@ -270,15 +282,15 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   takeFractions(work, aim);
 }
 
-/** The least amount among the basis phases, in the present state. */
+/** The least amount among the basis phases: of gases in the present state, of condensed ones what their balance holds. */
 function leastBasisAmount(work: Work): number {
-  const { rank, basis, set, fraction, gasAmount, fractionSum } = work;
+  const { rank, basis, set, fraction, gasAmount, fractionSum, amounts } = work;
   let least = Infinity;
   for (let k = 0; k < rank; k += 1) {
     const phase = at32(basis, k);
-    if (phase >= set.gasCount) continue;
-    const amount = (at(fraction, phase) * gasAmount) / fractionSum;
-    if (amount < least) least = amount;
+    const isGas = phase < set.gasCount;
+    const amount = isGas ? (at(fraction, phase) * gasAmount) / fractionSum : Math.abs(at(amounts, k));
+    if (amount < least && (isGas || amount > 0)) least = amount;
   }
   return least === Infinity ? 0 : least;
 }

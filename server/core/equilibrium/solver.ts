@@ -40,6 +40,7 @@ function solve(
 ): Equilibrium | NoEquilibrium {
   if (!isFinite(elementMol, held)) return { kind: 'none', reason: 'not-finite' };
   if (!takeAmounts(work, elementMol)) return { kind: 'none', reason: 'nothing' };
+  if ('volumeM3' in held && work.set.gasCount === 0) return { kind: 'none', reason: 'no-gas' };
   const temperatureK = 'temperatureK' in held ? held.temperatureK : undefined;
   if (temperatureK !== undefined) {
     const { lowestK, highestK } = tablesK;

@@ -4,14 +4,15 @@
 
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import { addPresent } from './descent.ts';
-import { takeFractions, takeTemperature } from './newton.ts';
+import { takeFractions, takePressure, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
 import type { Equilibrium } from './equilibrium.ts';
+import { balanceTraces } from './traces.ts';
 import { findVertex, takeBasis } from './vertex.ts';
 import type { Work } from './work.ts';
 
 const firstTemperatureK = 1500;
-const mostSweeps = 12;
+const rarenessOfIons = 20;
 
 /**
  * Finds a vertex and starts from it, at the temperature given or, where none is held, near the one at which the vertex has the
@@ -82,16 +83,20 @@ export function startNear(work: Work, aim: Aim, temperatureK: number | undefined
 function vertexAt(work: Work, aim: Aim, temperatureK: number): readonly number[] | undefined {
   takeTemperature(work, aim, temperatureK);
   const { set, cost } = work;
-  // A gas is not taken pure at the pressure it never has alone; a crystal past its end is not taken at all.
+  // A crystal past its end is not taken; ions only where nothing neutral can hold a balance, since a vertex that leaves both
+  // empty must choose, and ions are the rarer traces.
+  if (set.hasCharge) {
+    for (let index = 0; index < work.gasCount; index += 1) {
+      const gas = at32(work.gases, index);
+      if (set.phases[gas]?.formula.charge !== 0) cost[gas] = at(cost, gas) + rarenessOfIons;
+    }
+  }
   for (let index = 0; index < work.condensedCount; index += 1) {
     const phase = at32(work.condensed, index);
     if (temperatureK > at(set.endK, phase)) cost[phase] = at(cost, phase) + 1e3;
   }
   const blamed = findVertex(work);
-  for (let index = 0; index < work.condensedCount; index += 1) {
-    const phase = at32(work.condensed, index);
-    cost[phase] = at(work.gibbs, phase);
-  }
+  takePressure(work, aim.isVolume ? 0 : aim.logPressure);
   return blamed;
 }
 
@@ -150,58 +155,14 @@ function mixVertex(work: Work, aim: Aim): void {
     } else if (inGas > 0) {
       const fraction = Math.max(amount, traceOfVertex * Math.max(gasAmount, 1e-30)) / inGas;
       potential[k] = at(potential, k) + Math.log(fraction);
-    }
+    } else potential[k] = at(potential, k) + Math.log(traceOfVertex);
   }
   takeFractions(work, aim);
   if (work.gasAmount > 0) balanceTraces(work, aim);
 }
 
-/** Basis phases with less than this share of the gas are brought near their balance before the first step. */
+/** What an empty balance's basis phase starts with, as a share of the gas. */
 const traceOfVertex = 1e-9;
-
-/**
- * A balance whose basis phase the vertex leaves (nearly) empty decides itself between traces, over many powers of ten: what its
- * gases make of it is set equal to what they take, logarithmically, one balance at a time.
- */
-function balanceTraces(work: Work, aim: Aim): void {
-  const { rank, amounts, gases, gasCount, nu, width, fraction, potential } = work;
-  const limit = 1e-4 * work.gasAmount;
-  let hasTraces = false;
-  for (let k = 0; k < rank; k += 1) hasTraces ||= at(amounts, k) < limit;
-  if (!hasTraces) return;
-  const perFraction = aim.isVolume ? aim.gasKPerBar / work.temperatureK : work.gasAmount;
-  for (let sweep = 0; sweep < mostSweeps; sweep += 1) {
-    let largest = 0;
-    for (let k = 0; k < rank; k += 1) {
-      if (at(amounts, k) >= limit) continue;
-      let made = Math.max(0, -at(amounts, k));
-      let taken = Math.max(0, at(amounts, k));
-      let madeSlope = 0;
-      let takenSlope = 0;
-      for (let index = 0; index < gasCount; index += 1) {
-        const gas = at32(gases, index);
-        const own = at(nu, gas * width + k);
-        if (own === 0) continue;
-        const amount = at(fraction, gas) * perFraction;
-        if (own > 0) {
-          made += own * amount;
-          madeSlope += own * own * amount;
-        } else {
-          taken -= own * amount;
-          takenSlope += own * own * amount;
-        }
-      }
-      if (!(made > 0) || !(taken > 0)) continue;
-      const slope = madeSlope / made + takenSlope / taken;
-      if (!(slope > 0)) continue;
-      const change = Math.min(25, Math.max(-25, Math.log(taken / made) / slope));
-      potential[k] = at(potential, k) + change;
-      largest = Math.max(largest, Math.abs(change));
-      if (Math.abs(change) > 1e-3) takeFractions(work, aim);
-    }
-    if (largest < 0.5) return;
-  }
-}
 
 function at(values: Float64Array, index: number): number {
   return values[index] as number;

@@ -11,7 +11,7 @@ import type { Check } from './answer.ts';
 import { findZero } from './bracket.ts';
 import type { Rising } from './bracket.ts';
 import { followCentre } from './centre.ts';
-import { descend } from './descent.ts';
+import { descend, takePresentBasis } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, NoEquilibrium, Pinned } from './equilibrium.ts';
 import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
@@ -49,11 +49,15 @@ export function atTemperatureAndPressure(
   const quick = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
   if (quick !== undefined) return quick;
   startCold(work, aim, temperatureK, temperatureK, temperatureK);
-  if (!followCentre(work, aim)) return undefined;
-  const before = keep(work);
-  const asItIs = certified(work, elementMol, aim, pressurePa, descent);
-  restore(work, before, aim);
-  return descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent) ?? asItIs;
+  const basis = keepBasis(work);
+  return followCentre(work, aim, () => {
+    const before = keep(work);
+    const asItIs = certified(work, elementMol, aim, pressurePa, descent);
+    restore(work, before, aim);
+    const polished = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+    restoreBasis(work, basis);
+    return polished ?? asItIs;
+  });
 }
 
 /** Temperature and volume held, by narrowing the pressure. */
@@ -116,9 +120,7 @@ export function byTemperature(
   if (end === 'failed') return undefined;
   if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
   if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
-  return end.pinned !== null && end.certificate.heldResidual === 0
-    ? end
-    : { ...end, certificate: { ...end.certificate, heldResidual: Math.abs(valueOf(end)) } };
+  return { ...end, certificate: { ...end.certificate, heldResidual: Math.abs(valueOf(end)) } };
 }
 
 const firstTemperatureK = 1500;
@@ -161,7 +163,7 @@ function blended(low: Equilibrium, high: Equilibrium, share: number): Equilibriu
   const hasBoth = low.gasMol > 0 && high.gasMol > 0;
   const logFractions = (low.gasMol > 0 ? low : high).logFractions.map((logarithm, phase) => {
     const amount = amountsMol[phase] ?? 0;
-    return hasBoth && amount > 0 ? Math.log(amount / gasMol) : logarithm;
+    return hasBoth && phase < set.gasCount && amount > 0 ? Math.log(amount / gasMol) : logarithm;
   });
   const enthalpyJ = mix(low.enthalpyJ, high.enthalpyJ);
   const entropyJPerK = mix(low.entropyJPerK, high.entropyJPerK);
@@ -230,7 +232,7 @@ export function volumeAim(work: Work, volumeM3: number): Aim {
 
 /**
  * Goes down to rest and answers when the certificate holds. A balance of traces may want a step or two more than the potentials
- * show: they are taken with the phases as they stand.
+ * show, and be lost in rounding until it is written in the phases that have turned out the most abundant.
  */
 export function descendAndCertify(
   work: Work,
@@ -247,6 +249,7 @@ export function descendAndCertify(
     const answer = certified(work, elementMol, aim, pressurePa, descent, check);
     if (answer !== undefined) return answer;
     if (before !== undefined) restore(work, before, aim);
+    if (extra === 1) takePresentBasis(work, aim);
     takeStep(work, aim, descent.step, range.lowestK, range.highestK);
     descent.steps += 1;
     if (!(descent.step.change < 1e-4)) return undefined;
@@ -276,6 +279,24 @@ function certified(
   const response = responseOf(work, atPressure);
   const answer = answerOf(work.set, stateOf(work, pressure), response, elementMol, check, descent.steps);
   return isCertified(answer.certificate) ? answer : undefined;
+}
+
+interface KeptBasis {
+  readonly rank: number;
+  readonly basis: Int32Array;
+  readonly nu: Float64Array;
+  readonly amounts: Float64Array;
+}
+
+function keepBasis({ rank, basis, nu, amounts }: Work): KeptBasis {
+  return { rank, basis: basis.slice(), nu: nu.slice(), amounts: amounts.slice() };
+}
+
+function restoreBasis(work: Work, { rank, basis, nu, amounts }: KeptBasis): void {
+  work.rank = rank;
+  work.basis.set(basis);
+  work.nu.set(nu);
+  work.amounts.set(amounts);
 }
 
 interface Kept {

@@ -207,11 +207,15 @@ function replaceArtificials(work: Work): void {
       const entry = Math.abs(at(nu, phase * width + row));
       if (entry <= tolerance) return;
       let reduced = at(cost, phase);
+      let isShared = false;
       for (let k = 0; k < work.rank; k += 1) {
         const other = at32(basis, k);
-        if (other >= 0) reduced -= at(nu, phase * width + k) * at(cost, other);
+        const own = at(nu, phase * width + k);
+        if (other >= 0) reduced -= own * at(cost, other);
+        else isShared ||= k !== row && Math.abs(own) > tolerance;
       }
-      const ratio = Math.abs(reduced) / entry;
+      // One that stands in a single idle row first: an ion is left to the balance of charge.
+      const ratio = Math.abs(reduced) / entry + (isShared ? 1e6 : 0);
       if (ratio < least) {
         best = phase;
         least = ratio;

@@ -1,0 +1,62 @@
+// Balances that the plentiful phases leave empty decide themselves between traces, over many powers of ten, where a Newton step
+// creeps by a factor of e at a time.
+// Knows no condensed phases. Invariant: potentials of plentiful basis phases are not touched.
+// Method: one balance at a time, what its gases make set equal to what they take, logarithmically.
+
+import { takeFractions } from './newton.ts';
+import type { Aim } from './newton.ts';
+import type { Work } from './work.ts';
+
+const mostSweeps = 12;
+
+/**
+ * A balance whose basis phase the vertex leaves (nearly) empty decides itself between traces, over many powers of ten: what its
+ * gases make of it is set equal to what they take, logarithmically, one balance at a time.
+ */
+export function balanceTraces(work: Work, aim: Aim): void {
+  const { rank, amounts, gases, gasCount, nu, width, fraction, potential } = work;
+  const limit = 1e-4 * work.gasAmount;
+  let hasTraces = false;
+  for (let k = 0; k < rank; k += 1) hasTraces ||= at(amounts, k) < limit;
+  if (!hasTraces) return;
+  const perFraction = aim.isVolume ? aim.gasKPerBar / work.temperatureK : work.gasAmount;
+  for (let sweep = 0; sweep < mostSweeps; sweep += 1) {
+    let largest = 0;
+    for (let k = 0; k < rank; k += 1) {
+      if (at(amounts, k) >= limit) continue;
+      let made = Math.max(0, -at(amounts, k));
+      let taken = Math.max(0, at(amounts, k));
+      let madeSlope = 0;
+      let takenSlope = 0;
+      for (let index = 0; index < gasCount; index += 1) {
+        const gas = at32(gases, index);
+        const own = at(nu, gas * width + k);
+        if (own === 0) continue;
+        const amount = at(fraction, gas) * perFraction;
+        if (own > 0) {
+          made += own * amount;
+          madeSlope += own * own * amount;
+        } else {
+          taken -= own * amount;
+          takenSlope += own * own * amount;
+        }
+      }
+      if (!(made > 0) || !(taken > 0)) continue;
+      const slope = madeSlope / made + takenSlope / taken;
+      if (!(slope > 0)) continue;
+      const change = Math.min(60, Math.max(-60, Math.log(taken / made) / slope));
+      potential[k] = at(potential, k) + change;
+      largest = Math.max(largest, Math.abs(change));
+      if (Math.abs(change) > 1e-3) takeFractions(work, aim);
+    }
+    if (largest < 0.5) return;
+  }
+}
+
+function at(values: Float64Array, index: number): number {
+  return values[index] as number;
+}
+
+function at32(values: Int32Array, index: number): number {
+  return values[index] as number;
+}
