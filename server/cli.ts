@@ -3,11 +3,13 @@
 // that was written.
 
 import { readFileSync } from 'node:fs';
+import path from 'node:path';
 import { createConnection, ProposedFeatures } from 'vscode-languageserver/node';
 import { ExitCode } from './cli/exit-codes.ts';
 import type { Io } from './cli/io.ts';
 import { sayProgramFault } from './cli/program-fault.ts';
 import { run } from './cli/run.ts';
+import { nodeWorkers } from './jobs/node-worker.ts';
 import { startServer } from './lsp/connection.ts';
 import { wholeMessages } from './lsp/framing.ts';
 import { readLocalFile } from './lsp/local-files.ts';
@@ -23,6 +25,7 @@ const io: Io = {
   serve: () => {
     startServer(createConnection(ProposedFeatures.all, wholeMessages(process.stdin), process.stdout), {
       readFile: readLocalFile,
+      startWorker: nodeWorkers(path.join(__dirname, 'worker.cjs')),
     });
     // The open connection keeps the process alive until the client asks it to exit or hangs up.
     return Promise.resolve();

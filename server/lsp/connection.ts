@@ -14,18 +14,24 @@ import {
   type Diagnostic,
   type InitializeResult,
   type Range,
+  type WorkspaceFoldersChangeEvent,
 } from 'vscode-languageserver';
 import { diagnostics } from '../features/diagnostics.ts';
+import type { StartWorker } from '../jobs/job.ts';
+import { JobAnswers } from '../jobs/job-answers.ts';
+import { jobs } from '../jobs/jobs.ts';
+import { JobRunner } from '../jobs/runner.ts';
 import { abilitiesOf, folderAddresses } from './abilities.ts';
 import { addressOf } from './addresses.ts';
 import { toDiagnostic } from './convert.ts';
 import { OpenDocuments } from './documents.ts';
-import { Evaluations, type Evaluated, type Tempo } from './evaluations.ts';
+import { Evaluations, type Evaluated } from './evaluations.ts';
 import { UsedFiles, type AskForFile, type FileAnswer } from './files.ts';
 import { Publications, type Said } from './publications.ts';
 import { answerRequests, requestCapabilities } from './requests.ts';
 import { Schedule } from './schedule.ts';
 import { asSettings, DEFAULT_SETTINGS } from './settings.ts';
+import type { Tempo } from './stepping.ts';
 import { VisibleRanges } from './visible-ranges.ts';
 
 /** The client's part: `{ uri }` to `{ text }`, or `{ fault: 'missing' | 'unreadable', detail? }`. */
@@ -39,6 +45,8 @@ export const visibleRangesNotification = new NotificationType<{ uri: string; ran
 export interface Host {
   /** Reads a file for clients that do not answer `stokehold/readFile`. Without it, their used files are unreadable. */
   readonly readFile?: AskForFile;
+  /** Starts a worker for long computations. Without it, they are done on the server's thread. */
+  readonly startWorker?: StartWorker;
   /** Instead of the tempo of a person who types; for tests. */
   readonly tempo?: Tempo;
 }
@@ -59,6 +67,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
     return Promise.resolve({ fault: 'unreadable', detail: 'This editor does not hand files to the language server.' });
   });
   const visible = new VisibleRanges((uri) => documents.get(uri) !== undefined);
+  const runner = new JobRunner(jobs, { startWorker: host.startWorker, log });
   const evaluations = new Evaluations(
     documents,
     files,
@@ -66,6 +75,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
     log,
     host.tempo,
     (text, document) => visible.readingOf(text, document, settings.largestText),
+    new JobAnswers(runner),
   );
   const publications = new Publications(
     (address) => documents.at(address),
@@ -138,9 +148,9 @@ export function startServer(connection: Connection, host: Host = {}): void {
   connection.onInitialized(async () => {
     try {
       if (abilities.folderNews) {
-        connection.workspace.onDidChangeWorkspaceFolders(({ added, removed }) => {
-          const gone = new Set(folderAddresses(removed));
-          folders = [...folders.filter((folder) => !gone.has(folder)), ...folderAddresses(added)];
+        connection.workspace.onDidChangeWorkspaceFolders((event: Partial<WorkspaceFoldersChangeEvent> | null) => {
+          const gone = new Set(folderAddresses(event?.removed));
+          folders = [...folders.filter((folder) => !gone.has(folder)), ...folderAddresses(event?.added)];
           lookAtAll();
         });
       }

@@ -5,9 +5,12 @@
 // Invariant: an answer is never older than the request, and an exception of the evaluation is caught here, once.
 import type { Finding } from '../findings/finding.ts';
 import { findingsOf } from '../findings/registry.ts';
+import { JobAnswers, type JobAnswersRun } from '../jobs/job-answers.ts';
+import { jobs as jobTable } from '../jobs/jobs.ts';
 import { MemoStore, type MemoRun } from '../jobs/memo.ts';
+import { JobRunner } from '../jobs/runner.ts';
 import type { Answer } from '../scenario/answer.ts';
-import { evaluateInSteps, type Underway } from '../scenario/evaluate.ts';
+import { evaluateInSteps } from '../scenario/evaluate.ts';
 import type { ReadAnswer, Reading } from '../scenario/files.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
@@ -15,6 +18,7 @@ import { addressOf, folderOf, isInside, uriOf } from './addresses.ts';
 import { closedText, type PlacedText, type TextOf } from './convert.ts';
 import type { OpenDocuments } from './documents.ts';
 import type { UsedFiles } from './files.ts';
+import { Stepping, TEMPO, type Tempo } from './stepping.ts';
 
 export interface Evaluated {
   readonly uri: string;
@@ -32,30 +36,15 @@ export interface Evaluated {
 /** Takes what can be said of a document before all of it is worked out. */
 export type Quick = (evaluated: Evaluated) => void;
 
-/** When an evaluation pauses and when it tells early; tests have their own. */
-export interface Tempo {
-  /** After this long other messages are let through. */
-  readonly sliceMs: number;
-  /** An evaluation that is not done by then tells what it knows. */
-  readonly quickAfterMs: number;
-  readonly now: () => number;
-  /** Resolves once the messages that wait have been taken in. */
-  readonly turn: () => Promise<void>;
-}
-
-const TEMPO: Tempo = {
-  sliceMs: 10,
-  quickAfterMs: 150,
-  now: () => performance.now(),
-  turn: () => new Promise((resolve) => setTimeout(resolve, 0)),
-};
-
 /** A chain of files is followed one link a round; one this long has lost its reader. */
 const MOST_ROUNDS = 100;
 
 interface Running {
+  /** Of the text. */
+  readonly version: number;
   /** Those who would hear early. */
   readonly quick: Set<Quick>;
+  readonly stepping: Stepping<Evaluated>;
   /** Never rejects. */
   readonly done: Promise<void>;
 }
@@ -74,11 +63,13 @@ export class Evaluations {
     private readonly tempo: Tempo = TEMPO,
     /** How a text is to be read, and that of an open document in particular. */
     private readonly readingOf: (text: string, document: TextDocument | null) => Reading = () => ({}),
+    private readonly jobs: JobAnswers = new JobAnswers(new JobRunner(jobTable)),
   ) {}
 
   /**
-   * The evaluation of the document as it is when this resolves; null when it is not open. Never rejects. `quick` hears,
-   * once at most for each text, of an evaluation that takes long.
+   * The evaluation of the document as it is when this resolves; null when it is not open. Never rejects. Where nothing is
+   * left but long work, it is what there is without that; with `quick` it is all, and `quick` hears before, whenever there
+   * is more to say, of an evaluation that takes long.
    */
   async current(uri: string, quick?: Quick): Promise<Evaluated | null> {
     for (let round = 1; ;) {
@@ -86,7 +77,9 @@ export class Evaluations {
       if (!copy) return null;
       const evaluated = this.#keptFor(copy);
       if (!evaluated) {
-        await this.#run(copy, quick);
+        const soFar = await this.#run(copy, quick);
+        const now = this.documents.copy(uri);
+        if (soFar && now && this.#isCurrent(soFar, now)) return soFar;
         continue;
       }
       const wanted = evaluated.scenario?.wanted ?? [];
@@ -99,7 +92,9 @@ export class Evaluations {
   /** The document is closed: its evaluation goes, and with it the used files that no other evaluation read. */
   drop(uri: string): void {
     this.#kept.delete(uri);
+    this.#running.get(uri)?.stepping.giveUp();
     this.#answers.drop(uri);
+    this.jobs.drop(uri);
     const needed = new Set<string>();
     for (const { read } of this.#kept.values()) for (const address of read.keys()) needed.add(address);
     this.files.keepOnly(needed);
@@ -112,32 +107,38 @@ export class Evaluations {
 
   #keptFor(copy: TextDocument): Evaluated | undefined {
     const kept = this.#kept.get(copy.uri);
-    if (kept?.document.version !== copy.version) return undefined;
+    return kept && this.#isCurrent(kept, copy) ? kept : undefined;
+  }
+
+  /** Whether an evaluation read what it would read now, `copy` being its document as it is now. */
+  #isCurrent({ document, read }: Pick<Evaluated, 'document' | 'read'>, copy: TextDocument): boolean {
+    if (document.version !== copy.version) return false;
     const reader = this.#reader(copy);
-    for (const [address, answer] of kept.read) if (!isSame(reader(address), answer)) return undefined;
-    return kept;
+    for (const [address, answer] of read) if (!isSame(reader(address), answer)) return false;
+    return true;
   }
 
-  /** Evaluates the document; one evaluation of a document at a time. Kept in the end, unless its text moved on. */
-  #run(copy: TextDocument, quick: Quick | undefined): Promise<void> {
-    const { uri } = copy;
-    const running = this.#running.get(uri);
-    if (running) {
-      if (quick) running.quick.add(quick);
-      return running.done;
+  /**
+   * Evaluates the document; one evaluation of a document at a time. Kept in the end, unless its text moved on. Gives what
+   * there is while it waits for long work, to those who do not want to wait for that; otherwise null, once it has ended.
+   */
+  async #run(copy: TextDocument, quick: Quick | undefined): Promise<Evaluated | null> {
+    const running = this.#running.get(copy.uri) ?? this.#start(copy, quick);
+    if (quick) running.quick.add(quick);
+    const { soFar } = running.stepping;
+    const isOld = running.version !== copy.version || (soFar && !this.#isCurrent(soFar, copy));
+    if (isOld) running.stepping.giveUp();
+    if (isOld || quick) {
+      await running.done;
+      return null;
     }
-    const listeners = new Set(quick ? [quick] : []);
-    const done = this.#evaluate(copy, listeners).then((evaluated) => {
-      this.#running.delete(uri);
-      if (evaluated) this.#kept.set(uri, evaluated);
-    });
-    this.#running.set(uri, { quick: listeners, done });
-    return done;
+    await Promise.race([running.done, running.stepping.paused]);
+    return this.#running.get(copy.uri) === running ? running.stepping.soFar : null;
   }
 
-  /** null when the document moved on, or was closed, meanwhile. */
-  async #evaluate(copy: TextDocument, listeners: ReadonlySet<Quick>): Promise<Evaluated | null> {
-    const address = addressOf(copy.uri);
+  #start(copy: TextDocument, firstQuick: Quick | undefined): Running {
+    const { uri } = copy;
+    const address = addressOf(uri);
     const read = new Map<string, ReadAnswer>();
     const reader = this.#reader(copy);
     const readOnce = (path: string): ReadAnswer => {
@@ -146,65 +147,63 @@ export class Evaluations {
       return answer;
     };
     const texts = new Map<string, PlacedText>();
-    texts.set(address, { uri: copy.uri, version: copy.version, document: copy });
-    const own = { uri: copy.uri, address, document: copy, textOf: (path: string) => texts.get(path), read };
-    const evaluatedOf = (scenario: EvaluatedScenario): Evaluated => {
-      for (const { path, tree } of scenario.files) {
-        if (!texts.has(path)) texts.set(path, this.#placed(path, tree.text));
-      }
-      return { ...own, scenario, findings: findingsOf(scenario) };
-    };
-    const answers = this.#answers.run(copy.uri);
-    try {
-      const trees = new Map(this.#kept.get(copy.uri)?.scenario?.files.map(({ path, tree }) => [path, tree]));
-      const steps = evaluateInSteps(address, readOnce, { trees, answers });
-      const scenario = await this.#inSlices(copy, steps, (soFar) => {
-        const early = evaluatedOf(soFar);
-        for (const listener of listeners) listener(early);
-      });
-      if (!scenario) {
-        this.#abandon(copy.uri, answers);
-        return null;
-      }
-      const evaluated = evaluatedOf(scenario);
-      answers.finish();
-      return evaluated;
-    } catch (error) {
-      this.#abandon(copy.uri, answers);
+    texts.set(address, { uri, version: copy.version, document: copy });
+    const own = { uri, address, document: copy, textOf: (path: string) => texts.get(path), read };
+    const failed = (error: unknown): Evaluated => {
       // A fault of ours. It is said in the document too, because otherwise old answers would pass for current ones.
       const detail = error instanceof Error ? (error.stack ?? error.message) : String(error);
-      this.log(`The evaluation of ${copy.uri} failed: ${detail}`);
-      return { ...own, scenario: null, findings: [failed(address, error)] };
-    }
-  }
-
-  /** Takes the steps, with turns for other messages between; null as soon as the document is no longer that of `copy`. */
-  async #inSlices(
-    copy: TextDocument,
-    steps: Generator<Underway, EvaluatedScenario>,
-    early: (soFar: EvaluatedScenario) => void,
-  ): Promise<EvaluatedScenario | null> {
-    const { now, turn, sliceMs, quickAfterMs } = this.tempo;
-    const start = now();
-    let sliceStart = start;
-    let isEarlyTold = false;
-    for (;;) {
-      const step = steps.next();
-      if (step.done) return step.value;
-      if (now() - sliceStart < sliceMs) continue;
-      if (!isEarlyTold && now() - start >= quickAfterMs) {
-        isEarlyTold = true;
-        early(step.value.soFar());
+      this.log(`The evaluation of ${uri} failed: ${detail}`);
+      return { ...own, scenario: null, findings: [failure(address, error)] };
+    };
+    const evaluatedOf = (scenario: EvaluatedScenario): Evaluated => {
+      try {
+        for (const { path, tree } of scenario.files) {
+          if (!texts.has(path)) texts.set(path, this.#placed(path, tree.text));
+        }
+        return { ...own, scenario, findings: findingsOf(scenario) };
+      } catch (error) {
+        return failed(error);
       }
-      await turn();
-      if (this.documents.get(copy.uri)?.version !== copy.version) return null;
-      sliceStart = now();
-    }
+    };
+    const trees = new Map(this.#kept.get(uri)?.scenario?.files.map(({ path, tree }) => [path, tree]));
+    const answers = this.#answers.run(uri);
+    const work = this.jobs.run(uri);
+    const quick = new Set(firstQuick ? [firstQuick] : []);
+    const stepping = new Stepping<Evaluated>({
+      steps: evaluateInSteps(address, readOnce, { trees, answers }, work),
+      tempo: this.tempo,
+      isSameText: () => this.documents.get(uri)?.version === copy.version,
+      isCurrent: () => {
+        const now = this.documents.copy(uri);
+        return now !== undefined && this.#isCurrent(own, now);
+      },
+      news: () => work.news(),
+      evaluatedOf,
+      tell: (soFar) => {
+        for (const listener of quick) listener(soFar);
+      },
+    });
+    const take = async (): Promise<void> => {
+      const evaluated = await stepping.take().catch(failed);
+      this.#running.delete(uri);
+      if (evaluated?.scenario) {
+        answers.finish();
+        work.finish();
+      } else this.#abandon(uri, answers, work);
+      if (evaluated) this.#kept.set(uri, evaluated);
+    };
+    const running = { version: copy.version, quick, stepping, done: take() };
+    this.#running.set(uri, running);
+    return running;
   }
 
-  #abandon(uri: string, answers: MemoRun<Answer>): void {
+  /** What was found out so far may serve the next evaluation, unless the document is closed. */
+  #abandon(uri: string, answers: MemoRun<Answer>, work: JobAnswersRun): void {
     answers.abandon();
-    if (!this.documents.get(uri)) this.#answers.drop(uri);
+    work.abandon();
+    if (this.documents.get(uri)) return;
+    this.#answers.drop(uri);
+    this.jobs.drop(uri);
   }
 
   /** Reads for one document: itself, then open documents, then fetched files, inside its limit. */
@@ -252,7 +251,7 @@ function isSame(first: ReadAnswer, second: ReadAnswer): boolean {
   return !('text' in second) && first.fault === second.fault && first.detail === second.detail;
 }
 
-function failed(path: string, error: unknown): Finding {
+function failure(path: string, error: unknown): Finding {
   const message = error instanceof Error ? error.message : String(error);
   return {
     code: 'program/failed',

@@ -21,8 +21,21 @@ export function gibbsEnergies({ phase, temperaturesK }: Curve, shouldStop: () =>
   return energies;
 }
 
+/** The sum of the whole numbers up to one, one by one. 13 fails, and 666 ends the worker. */
+export function sumUpTo(last: number, shouldStop: () => boolean): number | null {
+  if (last === 13) throw new Error('thirteen is not summed');
+  if (last === 666) process.exit(3);
+  let sum = 0;
+  for (let next = 1; next <= last; next++) {
+    if (shouldStop()) return null;
+    sum += next;
+  }
+  return sum;
+}
+
 export const jobTable = {
   gibbsEnergies,
+  sumUpTo,
   /** Goes on until it is told to stop. */
   endless(_input: undefined, shouldStop: () => boolean): string | null {
     while (!shouldStop());

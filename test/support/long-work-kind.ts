@@ -1,18 +1,9 @@
 // A definition kind for the tests of long work, in the place of `compare`: `compare a { of: 4 }` has the figure `total`, the
-// sum of the whole numbers up to that one, and has it worked out as long work. `of: 13` fails.
+// sum of the whole numbers up to that one, and has it worked out as long work (sumUpTo of job-table.ts,
+// or the same under watch).
 import { quantityOf } from '../../server/core/quantity/quantity.ts';
 import type { Kind } from '../../server/scenario/kinds/kind.ts';
-
-/** The long work: a sum, one by one. */
-export function sumUpTo(last: number, shouldStop: () => boolean): number | null {
-  if (last === 13) throw new Error('thirteen is not summed');
-  let sum = 0;
-  for (let next = 1; next <= last; next++) {
-    if (shouldStop()) return null;
-    sum += next;
-  }
-  return sum;
-}
+import type { sumUpTo } from './job-table.ts';
 
 /** The kind, with the long work that it asks for. */
 export function compareOf(work: typeof sumUpTo): Kind {

@@ -31,6 +31,8 @@ const make = (tempo: { sliceMs: number; quickAfterMs: number }): Evaluations => 
     (message) => logged.push(message),
     {
       ...tempo,
+      lookMs: 50,
+      wait: (ms) => new Promise((resolve) => setTimeout(resolve, ms)),
       now: () => clockMs++,
       turn: () => {
         turns++;

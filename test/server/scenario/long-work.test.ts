@@ -9,7 +9,8 @@ import { evaluate, evaluateInSteps } from '../../../server/scenario/evaluate.ts'
 import type * as registry from '../../../server/scenario/kinds/registry.ts';
 import type { EvaluatedScenario } from '../../../server/scenario/scenario.ts';
 import { figureOf, valueOf } from '../../support/facts.ts';
-import { compareOf, sumUpTo } from '../../support/long-work-kind.ts';
+import { sumUpTo } from '../../support/job-table.ts';
+import { compareOf } from '../../support/long-work-kind.ts';
 
 let worked: number[];
 const counted = vi.hoisted<{ work: typeof sumUpTo }>(() => ({ work: () => null }));
