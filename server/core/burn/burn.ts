@@ -156,29 +156,29 @@ export interface Burn {
   /** Null without a zone. */
   readonly zoneCharge: Charge | null;
   /** The whole charge at its overall λ, loss taken out. */
-  flame(): Equilibrium | NoState;
+  readonly flame: () => Equilibrium | NoState;
   /** Null without a zone, or where its enthalpy is unknown. */
-  zone(): Equilibrium | NoState | null;
+  readonly zone: () => Equilibrium | NoState | null;
   /** In the order of `cooledToK`. */
   readonly cooled: readonly CooledState[];
   /** The composition at `frozenBelowK`; null where nothing freezes. */
-  frozenAt(): Equilibrium | NoState | null;
+  readonly frozenAt: () => Equilibrium | NoState | null;
   /** The state of the cooling gas at a temperature: equilibrium, or frozen where that has been passed. */
-  at(temperatureK: number): BurnStateOrNone;
+  readonly at: (temperatureK: number) => BurnStateOrNone;
   /**
    * The states at falling temperatures and what condenses between them; without a list `defaultPathK` from the flame.
    * One list's answer does not depend on what was asked before.
    */
-  path(temperaturesK?: readonly number[]): CoolingPath;
+  readonly path: (temperaturesK?: readonly number[]) => CoolingPath;
   /** What is released between the charge and 25 °C. */
-  heat(): BurnHeatReleased | NoState | null;
+  readonly heat: () => BurnHeatReleased | NoState | null;
   /** J released above a temperature of the exhaust: the charge's enthalpy less that of the cooled gas; null as for `heat`. */
-  heatAbove(temperatureK: number): number | NoState | null;
+  readonly heatAbove: (temperatureK: number) => number | NoState | null;
 }
 
 export interface CooledState {
   readonly temperatureK: number;
-  state(): BurnStateOrNone;
+  readonly state: () => BurnStateOrNone;
 }
 
 /** A condensed phase that comes or goes as the gas cools. */
