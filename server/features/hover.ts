@@ -3,6 +3,7 @@
 // wrong is never said here: the editor shows the findings above the hover. Works nothing out.
 // Invariant: the answer is a pure function of the scenario and the offset.
 import type { Line } from '../../grammar/tree.ts';
+import { meaningsAt } from '../scenario/meanings.ts';
 import { placeOf } from '../scenario/place.ts';
 import type {
   EvaluatedDefinition,
@@ -84,9 +85,9 @@ function hoverHeader(file: EvaluatedFile, definition: EvaluatedDefinition, offse
 
 /** The shortest meaning that holds the offset; one that ends there counts only where none begins or goes on. */
 function meaningAt(file: EvaluatedFile, offset: number): PlacedMeaning | null {
-  const inside = file.meanings.filter(({ place }) => holds(place, offset));
-  const touching = inside.length > 0 ? inside : file.meanings.filter(({ place }) => place.end === offset);
-  return touching.reduce<PlacedMeaning | null>(
+  const touching = meaningsAt(file, offset);
+  const inside = touching.filter(({ place }) => holds(place, offset));
+  return (inside.length > 0 ? inside : touching).reduce<PlacedMeaning | null>(
     (best, one) => (best === null || lengthOf(one.place) < lengthOf(best.place) ? one : best),
     null,
   );

@@ -1,6 +1,7 @@
 // What the name at a place stands for, and everywhere it is given or spoken of in the files at hand. A name of the scenario
 // is found by the syntax tree, in definitions too that are not evaluated yet; catalogue substances and figures by what
 // the evaluation found. Invariant: places are those of whole words, quotes included, each once, in the order of the files.
+import { meaningsAt } from '../scenario/meanings.ts';
 import { placeOf, sectionAt } from '../scenario/place.ts';
 import type { EvaluatedFile, EvaluatedScenario, Meaning, Place } from '../scenario/scenario.ts';
 import { namesInSection, type NameUse } from './names-in-section.ts';
@@ -32,8 +33,7 @@ export function subjectAt(files: readonly EvaluatedFile[], path: string, offset:
   const name = nameAt(file, offset);
   if (name && placesOfName(files, name.name).some(({ role }) => role === 'definition'))
     return { kind: 'name', ...name };
-  for (const { place, meaning } of file.meanings) {
-    if (offset < place.start || offset > place.end) continue;
+  for (const { place, meaning } of meaningsAt(file, offset)) {
     if (meaning.kind === 'catalogue') return { kind: 'catalogue', place, substance: substanceOf(meaning) };
     if (meaning.kind === 'figure') return { kind: 'figure', place, of: meaning.of, id: meaning.figure.id };
   }

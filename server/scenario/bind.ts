@@ -30,7 +30,13 @@ export interface Bindings {
 
 /** Binds the names of all files; facts about names go to the file they stand in. */
 export function bindNames(files: readonly LoadedFile[]): Bindings {
-  const all = files.flatMap((file) => file.tree.sections.flatMap((placed) => bindingOf(file, placed) ?? []));
+  const all: Binding[] = [];
+  for (const file of files) {
+    for (const placed of file.tree.sections) {
+      const binding = bindingOf(file, placed);
+      if (binding) all.push(binding);
+    }
+  }
   const byName = new Map<string, Binding[]>();
   for (const binding of all) {
     const others = byName.get(binding.name);
@@ -79,10 +85,24 @@ function reportName(binding: Binding, sameName: readonly Binding[]): void {
     });
     return;
   }
-  if (word.form !== 'quoted' && isReservedWord(name)) return say({ code: 'name/reserved', name, why: 'reserved-word' });
-  if (word.form !== 'quoted' && isUnitWord(name)) return say({ code: 'name/reserved', name, why: 'unit' });
-  const substance = findSubstance(name);
-  if (substance && binding.statement.kind === 'definition') {
-    say({ code: 'name/like-catalogue', name, substance: substance.name });
-  }
+  const fact = factOfName(binding.statement, word);
+  if (fact) say(fact);
+}
+
+/** What is wrong with a name by itself; found once for each statement of a file that is edited. */
+function factOfName(statement: Definition | LetStatement, word: Word): Fact | null {
+  const known = factOfNames.get(statement);
+  if (known !== undefined) return known;
+  const fact = findFactOfName(statement, word);
+  factOfNames.set(statement, fact);
+  return fact;
+}
+
+const factOfNames = new WeakMap<Definition | LetStatement, Fact | null>();
+
+function findFactOfName(statement: Definition | LetStatement, { text: name, form }: Word): Fact | null {
+  if (form !== 'quoted' && isReservedWord(name)) return { code: 'name/reserved', name, why: 'reserved-word' };
+  if (form !== 'quoted' && isUnitWord(name)) return { code: 'name/reserved', name, why: 'unit' };
+  const substance = statement.kind === 'definition' ? findSubstance(name) : undefined;
+  return substance ? { code: 'name/like-catalogue', name, substance: substance.name } : null;
 }

@@ -7,22 +7,16 @@ import { isPartial, problemsOf } from '../../grammar/parse.ts';
 import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { parseFormula } from '../core/substance/formula.ts';
+import type { Answer } from './answer.ts';
 import { bindNames } from './bind.ts';
 import type { Fact } from './facts.ts';
 import { loadFiles, type LoadedFile, type ReadAnswer } from './files.ts';
 import { lazily } from './lazily.ts';
 import type { WorkElsewhere } from './long-work.ts';
+import { withMeanings, type MeaningsOf } from './meanings.ts';
 import { placeAnswer, type PlacedAnswer, type PlacedByName } from './placing.ts';
 import { Questions, type AnswerStore } from './questions.ts';
-import type {
-  EvaluatedDefinition,
-  EvaluatedFile,
-  EvaluatedScenario,
-  EvaluatedValue,
-  Expectation,
-  PlacedFact,
-  PlacedMeaning,
-} from './scenario.ts';
+import type { EvaluatedFile, EvaluatedScenario, PlacedFact } from './scenario.ts';
 
 export type { ReadAnswer } from './files.ts';
 
@@ -99,25 +93,29 @@ function isWellKnown(name: string): boolean {
   return findSubstance(name) !== undefined || parseFormula(name).kind === 'formula';
 }
 
-/** The answers at their places, file by file. */
+/** The answers at their places, file by file. What stands in no finding is placed when somebody reads it. */
 function gatherFiles(files: readonly LoadedFile[], questions: Questions): readonly EvaluatedFile[] {
+  const answers = questions.answersNow();
+  const pathOf = new Map<PlacedSection, string>();
+  for (const { path, tree } of files) for (const section of tree.sections) pathOf.set(section, path);
   const placed = new Map<PlacedSection, PlacedAnswer>();
-  for (const { path, tree } of files) {
-    for (const section of tree.sections) {
-      const answer = questions.answerTo(section);
-      if (answer) placed.set(section, placeAnswer(answer, path, section));
-    }
-  }
+  const placedOf: PlacedOf = (section) => {
+    const known = placed.get(section);
+    const answer = answers.get(section);
+    if (known || !answer) return known;
+    const made = placeAnswer(answer, pathOf.get(section) ?? '', section);
+    placed.set(section, made);
+    return made;
+  };
   const placedByName: PlacedByName = (name) => {
     const section = questions.sectionNamed(name);
-    return section && placed.get(section);
+    return section && placedOf(section);
   };
   const lacksFile = files.some(({ facts }) => facts.some(({ fact }) => fact.code === 'name/missing-file'));
-  return files.map((file) => {
-    const gathered = gather(file, placed, placedByName);
-    return lacksFile ? { ...gathered, facts: gathered.facts.filter(({ fact }) => !mayBeElsewhere(fact)) } : gathered;
-  });
+  return files.map((file) => gather(file, answers, placedOf, placedByName, lacksFile));
 }
+
+type PlacedOf = (section: PlacedSection) => PlacedAnswer | undefined;
 
 /** While a used file is missing, a name that is not there may be in it; the missing file is the one cause. */
 function mayBeElsewhere(fact: Fact): boolean {
@@ -127,24 +125,17 @@ function mayBeElsewhere(fact: Fact): boolean {
 /** Everything about one file, in the order of its text. */
 function gather(
   { path, used, tree, facts: ofNames }: LoadedFile,
-  answers: ReadonlyMap<PlacedSection, PlacedAnswer>,
+  answers: ReadonlyMap<PlacedSection, Answer>,
+  placedOf: PlacedOf,
   placedByName: PlacedByName,
+  lacksFile: boolean,
 ): EvaluatedFile {
   const computed: PlacedFact[] = [...ofNames];
-  const definitions: EvaluatedDefinition[] = [];
-  const values: EvaluatedValue[] = [];
-  const expectations: Expectation[] = [];
   let title: string | null = null;
   for (const placed of tree.sections) {
     const { statement } = placed.section;
     if (statement.kind === 'title') title ??= statement.title?.value ?? null;
-    const answer = answers.get(placed);
-    if (!answer) continue;
-    append(computed, answer.facts);
-    if (answer.definition) definitions.push(answer.definition);
-    // A `let` without a name can be asked for by nobody.
-    if (answer.value && statement.kind === 'let' && statement.name) values.push(answer.value);
-    if (answer.expectation) expectations.push(answer.expectation);
+    if (answers.get(placed)?.facts.length) append(computed, placedOf(placed)?.facts ?? []);
   }
   const problems = problemsOf(tree).map((problem): PlacedFact => ({
     fact: { code: problem.code, problem },
@@ -153,18 +144,24 @@ function gather(
   // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
   const facts =
     problems.length >= suspendingProblems ? suspended(problems, computed.length) : [...problems, ...computed];
-  const file = { path, used, tree, title, definitions, values, expectations, facts, meanings: [] };
-  return lazily<EvaluatedFile>(file, { meanings: () => meaningsOf(tree, answers, placedByName) });
+  const told = lacksFile ? facts.filter(({ fact }) => !mayBeElsewhere(fact)) : facts;
+  const meaningsOf: MeaningsOf = (section) => placedOf(section)?.meanings(placedByName) ?? [];
+  const unread = { definitions: [], values: [], expectations: [], meanings: [] };
+  const file = lazily<EvaluatedFile>(
+    { path, used, tree, title, facts: told, ...unread },
+    {
+      definitions: () => tree.sections.flatMap((section) => placedOf(section)?.definition ?? []),
+      values: () => tree.sections.flatMap((section) => (hasName(section) ? (placedOf(section)?.value ?? []) : [])),
+      expectations: () => tree.sections.flatMap((section) => placedOf(section)?.expectation ?? []),
+      meanings: () => tree.sections.flatMap(meaningsOf),
+    },
+  );
+  return withMeanings(file, meaningsOf);
 }
 
-function meaningsOf(
-  { sections }: SyntaxTree,
-  answers: ReadonlyMap<PlacedSection, PlacedAnswer>,
-  placedByName: PlacedByName,
-): readonly PlacedMeaning[] {
-  const meanings: PlacedMeaning[] = [];
-  for (const placed of sections) append(meanings, answers.get(placed)?.meanings(placedByName) ?? []);
-  return meanings;
+/** A `let` without a name can be asked for by nobody. */
+function hasName({ section: { statement } }: PlacedSection): boolean {
+  return statement.kind === 'let' && statement.name !== undefined;
 }
 
 /** The syntax problems, and that more is kept back, where more is: nothing stays silent without a word. */

@@ -61,20 +61,33 @@ export class Questions {
     store?: AnswerStore,
     private readonly elsewhere?: WorkElsewhere,
   ) {
-    const mentions = new Map([...bindings.unique].map(([name, { statement }]) => [name, mentionsIn(statement)]));
+    const mentions = new Map<string, readonly Mention[]>();
+    for (const [name, { statement }] of bindings.unique) mentions.set(name, mentionsIn(statement));
     const { order, cycles } = orderByMentions(mentions);
     for (const { by, mention, path, leftOut } of cycles) {
       const binding = bindings.unique.get(by);
       const place = binding && placeOf(binding.file.path, binding.placed, mention.span);
       if (binding && place) binding.file.facts.push({ fact: { code: 'name/cycle', path, leftOut }, place });
     }
-    const named = order.flatMap((name) => bindings.unique.get(name)?.placed ?? []);
-    const ordered = new Set(order);
-    const onRings = [...bindings.unique.keys()].filter((name) => !ordered.has(name));
-    this.#unknowable = new Set([...bindings.ambiguous, ...onRings]);
+    const unknowable = new Set(bindings.ambiguous);
+    if (order.length < bindings.unique.size) {
+      const ordered = new Set(order);
+      for (const name of bindings.unique.keys()) if (!ordered.has(name)) unknowable.add(name);
+    }
+    this.#unknowable = unknowable;
+    const toAsk = new Set<PlacedSection>();
+    for (const name of order) {
+      const placed = bindings.unique.get(name)?.placed;
+      if (placed) toAsk.add(placed);
+    }
     // Whatever stands for nothing (given twice, on a ring, without a name, an `expect`) is worked out for its own findings.
-    const others = files.flatMap(({ tree }) => tree.sections);
-    this.order = [...new Set([...named, ...others])].flatMap((placed) => questionOf(placed) ?? []);
+    for (const { tree } of files) for (const placed of tree.sections) toAsk.add(placed);
+    const questions: Question[] = [];
+    for (const placed of toAsk) {
+      const question = questionOf(placed);
+      if (question) questions.push(question);
+    }
+    this.order = questions;
     this.#store = store ?? nothingKept;
   }
 
@@ -122,9 +135,11 @@ export class Questions {
     }
   }
 
-  /** What a section came to; undefined for one that asks nothing, or is not answered yet. */
-  answerTo(placed: PlacedSection): Answer | undefined {
-    return this.#answers.get(placed)?.value;
+  /** What each section came to that is answered by now. */
+  answersNow(): ReadonlyMap<PlacedSection, Answer> {
+    const answers = new Map<PlacedSection, Answer>();
+    for (const [placed, { value }] of this.#answers) answers.set(placed, value);
+    return answers;
   }
 
   /** The section that a name stands for; undefined where it stands for nothing. */
@@ -157,7 +172,7 @@ export class Questions {
       this.#awaited.push(() => !this.#waiting.has(binding.placed));
       return { kind: 'unknown' };
     }
-    return this.answerTo(binding.placed)?.named ?? { kind: 'unknown' };
+    return this.#answers.get(binding.placed)?.value.named ?? { kind: 'unknown' };
   }
 
   #longWork<Input, Output>(work: LongWork<Input, Output>, key: string, input: Input): Output | null {
