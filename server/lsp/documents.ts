@@ -4,6 +4,7 @@
 import { TextDocuments, type Connection } from 'vscode-languageserver';
 import { TextDocument } from 'vscode-languageserver-textdocument';
 import { addressOf } from './addresses.ts';
+import { wellFormed } from './well-formed.ts';
 
 export interface DocumentEvents {
   opened(uri: string): void;
@@ -36,7 +37,7 @@ export class OpenDocuments {
       if (this.#uriOfAddress.get(address) === document.uri) this.#uriOfAddress.delete(address);
       events.closed(document.uri);
     });
-    this.#documents.listen(connection);
+    this.#documents.listen(wellFormed(connection));
   }
 
   get(uri: string): TextDocument | undefined {

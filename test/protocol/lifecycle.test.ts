@@ -210,6 +210,24 @@ describe('what makes no sense', () => {
   it.each([
     ['textDocument/didOpen', {}],
     ['textDocument/didOpen', { textDocument: { uri: 'file:///x.stoke' } }],
+    // A text that has no length would be read for ever.
+    [
+      'textDocument/didOpen',
+      { textDocument: { uri: 'file:///x.stoke', languageId: 'stokehold', version: 1, text: {} } },
+    ],
+    ['textDocument/didOpen', { textDocument: { uri: 7, languageId: 'stokehold', version: 1, text: '' } }],
+    ['textDocument/didChange', { textDocument: { uri: MAIN, version: 2 }, contentChanges: [{ text: { length: 9 } }] }],
+    ['textDocument/didChange', { textDocument: { uri: MAIN, version: '2' }, contentChanges: [{ text: '' }] }],
+    [
+      'textDocument/didChange',
+      {
+        textDocument: { uri: MAIN, version: 2 },
+        contentChanges: [
+          { text: '', range: { start: { line: -1, character: 0 }, end: { line: 1e20, character: 0.5 } } },
+        ],
+      },
+    ],
+    ['textDocument/didClose', { textDocument: { uri: {} } }],
     ['textDocument/didChange', { textDocument: { uri: MAIN } }],
     ['textDocument/didChange', { textDocument: { uri: MAIN }, contentChanges: [{ text: 'let' }] }],
     [
@@ -222,6 +240,8 @@ describe('what makes no sense', () => {
     ['workspace/didChangeWatchedFiles', {}],
     ['workspace/didChangeConfiguration', null],
     ['workspace/didChangeWorkspaceFolders', { event: {} }],
+    ['workspace/didChangeWorkspaceFolders', {}],
+    ['workspace/didChangeWorkspaceFolders', { event: null }],
     ['$/cancelRequest', { id: 'never asked' }],
   ])('the notification %s with %j is passed over', async (method, sent) => {
     await client.connection.sendNotification(method, sent);
