@@ -100,12 +100,15 @@ function firstChange(
   let lower2: CooledPoint | undefined;
   let cameFromAbove = true;
   let width = Infinity;
+  let slowSteps = 0;
   for (let step = 0; step < mostSteps; step += 1) {
     const gap = high.state.temperatureK - low.state.temperatureK;
     if (gap <= eventPrecisionK) return { upper: high, lower: low };
-    // A secant that gains little is put aside for one bisection, so that the bracket at least halves every other step.
-    const isSlow = gap > 0.5 * width && step % 2 === 1;
+    // Secants shrink the bracket from one end at first and then all at once; where they go on gaining little, one bisection.
+    slowSteps = gap > 0.5 * width ? slowSteps + 1 : 0;
     width = Math.min(width, gap);
+    const isSlow = slowSteps > mostSlowSteps;
+    if (isSlow) slowSteps = 0;
     const middle = low.state.temperatureK + gap / 2;
     const predicted = isSlow ? undefined : predictedK(high, higher, low, lower2);
     const target = predicted === undefined ? middle : predicted + (cameFromAbove ? -nudgeK : nudgeK);
@@ -129,6 +132,7 @@ function firstChange(
 }
 
 const mostSteps = 80;
+const mostSlowSteps = 2;
 /** Aimed so far to one side of the predicted change that two tries enclose it. */
 const nudgeK = 0.4 * eventPrecisionK;
 

@@ -168,7 +168,7 @@ describe('the search for events', () => {
     expect(events.map(({ kind }) => kind)).toEqual(['appears']);
     expect(Math.abs((events[0]?.temperatureK ?? 0) - (335 + Math.sqrt(50)))).toBeLessThan(0.005);
     // Bisection alone would take 12 from a bracket of 35 K, besides the three to start with.
-    expect(asked).toBeLessThanOrEqual(3 + 13);
+    expect(asked).toBeLessThanOrEqual(3 + 12);
   });
 
   test('notices a phase that comes and goes between two temperatures', () => {
