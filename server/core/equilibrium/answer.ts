@@ -76,7 +76,10 @@ export function stateOf(work: Work, pressurePa: number): State {
   };
 }
 
-/** Potentials of the elements over RT from those of the basis; NaN for an absent element, 0 for one locked to others. */
+/**
+ * Potentials of the elements over RT from those of the basis; NaN for an absent element (and for the charge where no ion takes
+ * part), 0 for one locked to others.
+ */
 function elementPotentials(work: Work): Float64Array {
   const { set, width, rank, basis, potential, given, matrix, stride } = work;
   const chargeRow = set.hasCharge ? width - 1 : -1;
@@ -124,7 +127,8 @@ function elementPotentials(work: Work): Float64Array {
     potentials[row] = at(matrix, k * stride + width) / at(matrix, k * stride + row);
   });
   for (let row = 0; row < width; row += 1) {
-    if (row !== chargeRow && at(given, row) === 0) potentials[row] = Number.NaN;
+    const isAbsent = row === chargeRow ? !columns.includes(row) : at(given, row) === 0;
+    if (isAbsent) potentials[row] = Number.NaN;
   }
   return potentials;
 }

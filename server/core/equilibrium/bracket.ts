@@ -42,7 +42,8 @@ export function findZero<State>(
   const high: Side<State> = { place: bounds[1], state: undefined, value: Infinity };
   let place = Math.min(Math.max(start, bounds[0]), bounds[1]);
   let near: State | undefined;
-  let width = bounds[1] - bounds[0];
+  let slow = 0;
+  let lastSize = Infinity;
   for (let count = 0; count < mostCalls; count += 1) {
     const state = rising.stateAt(place, near);
     if (state === undefined) return { kind: 'failed' };
@@ -55,6 +56,8 @@ export function findZero<State>(
     side.state = state;
     side.value = value;
     near = state;
+    slow = Math.abs(value) > 0.5 * lastSize ? slow + 1 : 0;
+    lastSize = Math.abs(value);
     const next = nextPlace(rising, low, high, side, count);
     const nowWide = high.place - low.place;
     const middle = low.place + nowWide / 2;
@@ -62,10 +65,12 @@ export function findZero<State>(
     if (isClosed && low.state !== undefined && high.state !== undefined) {
       return { kind: 'jump', low: low.state, high: high.state, lowValue: low.value, highValue: high.value };
     }
-    // Both sides known and still wide after two steps: halve.
-    const isSlow = count % 3 === 2 && nowWide > 0.5 * width && low.state !== undefined && high.state !== undefined;
-    if (count % 3 === 2) width = nowWide;
-    place = isSlow ? middle : next;
+    // A slope that leads nowhere: halve, or look at the bound that has not been looked at.
+    const isSlow = slow >= 2;
+    if (isSlow) slow = 0;
+    const wide = side === low ? high : low;
+    const away = count > 12 && wide.state === undefined ? wide.place : middle;
+    place = isSlow ? away : next;
   }
   return { kind: 'failed' };
 }

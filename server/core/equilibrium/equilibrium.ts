@@ -27,7 +27,10 @@ export interface Equilibrium {
   readonly amountsMol: Float64Array;
   /** Natural logarithm of the mole fraction of each gas among the gas, also where the amount underflows; NaN for condensed. */
   readonly logFractions: Float64Array;
-  /** Element potentials over RT, in the order of `candidates.elements`: a phase present has the sum over its atoms as g/RT. */
+  /**
+   * Element potentials over RT, in the order of `candidates.elements`: a phase present has the sum over its atoms as g/RT. NaN
+   * for an absent element, and for the charge where it is too cold for ions.
+   */
   readonly potentials: Float64Array;
   readonly gasMol: number;
   /** kg/mol of the gas; 0 when there is none. */

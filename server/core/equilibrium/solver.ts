@@ -11,7 +11,7 @@ import type { Equilibrium, Held, NoEquilibrium } from './equilibrium.ts';
 import type { Aim } from './newton.ts';
 import { startCold, startNear } from './start.ts';
 import { atTemperatureAndPressure, atTemperatureAndVolume, byTemperature, descendAndCertify } from './sure-way.ts';
-import { admitPhases, takeAmounts, workOf } from './work.ts';
+import { admitPhases, ionsFromK, takeAmounts, workOf } from './work.ts';
 import type { Work } from './work.ts';
 
 /** Solves states of one candidate set; keeps its working arrays, so it belongs to one thread. */
@@ -51,15 +51,26 @@ function solve(
   const check = checkOf(held);
   const pressurePa = 'pressurePa' in held ? held.pressurePa : 0;
   const descent: Descent = { steps: 0, step: { change: 0, taken: 0, gasChange: 0 } };
-  // With temperature unknown a crystal may still be there below its end.
-  admitPhases(work, temperatureK ?? 0);
-  if (near === undefined || near.candidates !== work.set || !startNear(work, aim, temperatureK, near)) {
-    const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
-    if (blamed !== undefined) return cannotForm(work, blamed);
+  const attempt = (hasIons: boolean): Equilibrium | NoEquilibrium => {
+    // With temperature unknown a crystal may still be there below its end.
+    admitPhases(work, temperatureK ?? 0, hasIons);
+    if (near === undefined || near.candidates !== work.set || !startNear(work, aim, temperatureK, near)) {
+      const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
+      if (blamed !== undefined) return cannotForm(work, blamed);
+    }
+    return (
+      descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check) ??
+      sureWay(work, elementMol, held, check, descent) ??
+      failed(elementMol, held)
+    );
+  };
+  if (!work.set.hasCharge || temperatureK !== undefined) {
+    return attempt(work.set.hasCharge && (temperatureK ?? 0) >= ionsFromK);
   }
-  const answer = descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check);
-  if (answer !== undefined) return answer;
-  return sureWay(work, elementMol, held, check, descent) ?? failed(elementMol, held);
+  const withIons = attempt(true);
+  if (withIons.kind === 'equilibrium' && withIons.temperatureK >= ionsFromK) return withIons;
+  const without = attempt(false);
+  return without.kind === 'equilibrium' ? without : withIons;
 }
 
 function sureWay(

@@ -110,8 +110,9 @@ export function byTemperature(
           ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent, near)
           : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent),
       valueOf,
+      // The heat capacity is that at constant pressure.
       slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
-        heatCapacityJPerK === null ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
+        heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
       nearEnough,
     },
     [range.lowestK, range.highestK],

@@ -109,8 +109,17 @@ export function takeAmounts(work: Work, elementMol: Float64Array): boolean {
   return true;
 }
 
-/** Lists the phases that may take part: no absent element, and condensed ones inside their ends at the temperature. */
-export function admitPhases(work: Work, temperatureK: number): void {
+/**
+ * Below this temperature ions are left out also where they are asked for: the most easily ionised vapour, of potassium, has some
+ * 1e-9 of itself ionised there.
+ */
+export const ionsFromK = 1000;
+
+/**
+ * Lists the phases that may take part: no absent element, condensed ones inside their ends at the temperature, ions from the
+ * temperature at which any could matter.
+ */
+export function admitPhases(work: Work, temperatureK: number, hasIons = temperatureK >= ionsFromK): void {
   const { set, width, given } = work;
   work.gasCount = 0;
   work.condensedCount = 0;
@@ -120,7 +129,7 @@ export function admitPhases(work: Work, temperatureK: number): void {
     for (let row = 0; row < width && isIn; row += 1) {
       if (row !== chargeRow && at(given, row) === 0 && at(set.atoms, phase * width + row) !== 0) isIn = false;
     }
-    if (!isIn) continue;
+    if (!isIn || (!hasIons && chargeRow >= 0 && at(set.atoms, phase * width + chargeRow) !== 0)) continue;
     if (phase < set.gasCount) work.gases[work.gasCount++] = phase;
     else if (temperatureK <= at(set.endK, phase)) work.condensed[work.condensedCount++] = phase;
   }
