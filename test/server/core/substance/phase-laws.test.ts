@@ -16,6 +16,7 @@ import {
 } from '../../../../server/core/substance/phase-records.ts';
 import { allPhases, candidatePhases, phaseOfId, propertiesOfPhase } from '../../../../server/core/substance/phases.ts';
 import writtenResiduals from '../../../../server/core/substance/data/phases/residuals.json' with { type: 'json' };
+import ironWustite from '../../../reference/iron-wustite.json' with { type: 'json' };
 import janafGibbs from '../../../reference/janaf-gibbs-energies.json' with { type: 'json' };
 
 const reference = 298.15;
@@ -219,13 +220,24 @@ describe('phases that are only tabulated', () => {
       allPhases()
         .filter(({ id }) => !candidates.has(id))
         .map(({ id }) => id),
-    ).toEqual(['Na2SO4(cr,delta)', 'FeO(cr)']);
+    ).toEqual(['Na2SO4(cr,delta)', 'FeO(cr)', 'FeO(l)']);
   });
 
-  test('stoichiometric wustite would otherwise displace the real one beside iron', () => {
-    const atK = 1200;
-    const { gibbs } = change('FeO(cr)', { 'Fe0.947O(cr,wustite)': 1, 'Fe(cr,gamma)': 0.053 }, atK);
-    expect(gibbs).toBeGreaterThan(0);
+  test.each(ironWustite.rows)('wustite beside iron has at $temperatureK K the oxygen that was measured', (row) => {
+    const { temperatureK, log10OxygenBar } = row;
+    const iron = temperatureK < 1184 ? 'Fe(cr,alpha-delta)' : 'Fe(cr,gamma)';
+    const { gibbs } = change('Fe0.947O(cr,wustite)', { [iron]: 0.947, 'O2(g)': 0.5 }, temperatureK);
+    const measured = -0.5 * gasConstantJPerMolK * temperatureK * Math.LN10 * log10OxygenBar;
+    expect(Math.abs(gibbs - measured)).toBeLessThan(ironWustite.toleranceJPerMol);
+    // The hypothetical ones are not: that is why they are kept out.
+    const { gibbs: stoichiometric } = change('FeO(cr)', { [iron]: 1, 'O2(g)': 0.5 }, temperatureK);
+    expect(stoichiometric - measured).toBeGreaterThan(7000);
+  });
+
+  test.each(ironWustite.melt.rows)('its melt over liquid iron likewise at $temperatureK K', (row) => {
+    const { temperatureK, oxygenJPerMol } = row;
+    const { gibbs } = change('Fe0.947O(l)', { 'Fe(l)': 0.947, 'O2(g)': 0.5 }, temperatureK);
+    expect(Math.abs(-gibbs - oxygenJPerMol)).toBeLessThan(ironWustite.melt.toleranceJPerMol);
   });
 });
 
