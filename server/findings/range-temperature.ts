@@ -18,8 +18,10 @@ export const rangeTemperature: Rule<FactOf<'range/temperature'>> = {
         : `${quoted(name)} has data from ${celsiusText(from)} to ${celsiusText(to)}`,
     );
     return sentences(
-      `At ${celsiusText(fact.temperature)} this reaction leans on values beyond their data: ${ranges.join('; ')}.`,
-      'Take the result as a guess, or give a state within the data.',
+      `At ${celsiusText(fact.temperature)} this ${fact.of ?? 'reaction'} leans on values beyond their data: ${ranges.join('; ')}.`,
+      fact.of === 'burn'
+        ? 'Take the result as a guess.'
+        : 'Take the result as a guess, or give a state within the data.',
     );
   },
 };

@@ -4,11 +4,13 @@
 
 import type { Fact } from '../scenario/facts.ts';
 import type { EvaluatedFile, EvaluatedScenario, PlacedFact } from '../scenario/scenario.ts';
+import { balanceCharge } from './balance-charge.ts';
 import { balanceContradiction } from './balance-contradiction.ts';
 import { balanceElements } from './balance-elements.ts';
 import { balanceNegative } from './balance-negative.ts';
 import { balanceNoData } from './balance-no-data.ts';
 import { balanceNoDensity } from './balance-no-density.ts';
+import { balanceNoEquilibrium } from './balance-no-equilibrium.ts';
 import { balanceNoPortions } from './balance-no-portions.ts';
 import { balanceProducts } from './balance-products.ts';
 import { balanceShares } from './balance-shares.ts';
@@ -31,15 +33,19 @@ import { nameUnexpectedLine } from './name-unexpected-line.ts';
 import { nameUnknownEntry } from './name-unknown-entry.ts';
 import { nameUnknownKind } from './name-unknown-kind.ts';
 import { nameUnknownPhrase } from './name-unknown-phrase.ts';
+import { nameUnknownState } from './name-unknown-state.ts';
 import { nameUnknown } from './name-unknown.ts';
 import { nameUseCycle } from './name-use-cycle.ts';
 import { nameWrongKind } from './name-wrong-kind.ts';
 import { programFailed } from './program-failed.ts';
+import { rangeColdCharge } from './range-cold-charge.ts';
 import { rangeHeatingValue } from './range-heating-value.ts';
 import { rangeHumidity } from './range-humidity.ts';
 import { rangeNumber } from './range-number.ts';
 import { rangePhase } from './range-phase.ts';
 import { rangePositive } from './range-positive.ts';
+import { rangeRealGas } from './range-real-gas.ts';
+import { rangeRich } from './range-rich.ts';
 import { rangeShare } from './range-share.ts';
 import { rangeTemperature } from './range-temperature.ts';
 import type { FactOf, Rule } from './rule.ts';
@@ -94,6 +100,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'name/repeated-entry': nameRepeatedEntry,
   'name/missing-entry': nameMissingEntry,
   'name/unknown-phrase': nameUnknownPhrase,
+  'name/unknown-state': nameUnknownState,
   'name/arguments': nameArguments,
   'name/unexpected-line': nameUnexpectedLine,
   'name/wrong-kind': nameWrongKind,
@@ -117,6 +124,8 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'balance/products': balanceProducts,
   'balance/water-missing': balanceWaterMissing,
   'balance/contradiction': balanceContradiction,
+  'balance/charge': balanceCharge,
+  'balance/no-equilibrium': balanceNoEquilibrium,
   'range/heating-value': rangeHeatingValue,
   'range/humidity': rangeHumidity,
   'range/number': rangeNumber,
@@ -124,6 +133,9 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/share': rangeShare,
   'range/phase': rangePhase,
   'range/positive': rangePositive,
+  'range/rich': rangeRich,
+  'range/cold-charge': rangeColdCharge,
+  'range/real-gas': rangeRealGas,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,
   'kind/not-evaluated': kindNotEvaluated,

@@ -10,6 +10,7 @@ import { Context, near, type Named, type Scope } from './context.ts';
 import { evaluateExpression } from './expressions.ts';
 import type { KindAnswer } from './kinds/kind.ts';
 import { kindOf, kinds } from './kinds/registry.ts';
+import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
 import type { EvaluatedDefinition, EvaluatedValue, Expectation, PlacedFact, PlacedMeaning } from './scenario.ts';
 
@@ -83,13 +84,21 @@ function answerDefinition(statement: Definition, placed: PlacedSection, context:
     header: context.ownPlace(statement.header),
     namePlace: context.ownPlace(statement.name?.span ?? statement.keyword.span),
     section: placed,
-    figures: answer?.figures ?? [],
-    tables: answer?.tables ?? [],
-    absent: answer?.absent ?? new Map(),
+    figures: [],
+    tables: [],
+    absent: new Map(),
     lines: answer?.lines ?? [],
   };
   if (statement.name) context.mean(statement.name.span, { kind: 'definition', name, definition });
-  return answer ? { kind: 'definition', definition, material: answer.material } : { kind: 'unevaluated', definition };
+  if (!answer) return { kind: 'unevaluated', definition };
+  const { material, stream = null } = answer;
+  // A kind may leave its figures and tables until somebody reads them.
+  lazily(definition, {
+    figures: () => answer.figures,
+    tables: () => answer.tables,
+    absent: () => answer.absent,
+  });
+  return { kind: 'definition', definition, material, stream };
 }
 
 /** `acknowledge` lines: only hazards can be acknowledged, and only with a reason. */

@@ -15,8 +15,7 @@ import {
 } from '../core/quantity/quantity.ts';
 import { fromSi } from '../core/quantity/read-unit.ts';
 import type { Context, Unknowable } from './context.ts';
-import { evaluateExpression } from './expressions.ts';
-import { evaluateReference } from './references.ts';
+import { evaluateExpression, referredFigure } from './expressions.ts';
 import { readUnitWords, reportFault } from './read-quantity.ts';
 
 /** Whether a claim holds, and what was found on its left side. */
@@ -30,7 +29,7 @@ export interface ClaimAnswer {
 
 /** A comparison or `within`; null when it could not be worked out. */
 export function evaluateClaim(claim: Comparison | Within, context: Context): ClaimAnswer | null {
-  const referred = claim.left.kind === 'reference' ? evaluateReference(claim.left, context) : null;
+  const referred = claim.left.kind === 'reference' ? referredFigure(claim.left, context) : null;
   const found =
     claim.left.kind === 'reference' ? (referred?.quantity ?? null) : evaluateExpression(claim.left, context);
   const unit = referred?.unit ?? null;

@@ -8,6 +8,7 @@ import { nearestWords } from '../core/spelling/nearest-words.ts';
 import type { Fact } from './facts.ts';
 import type { LongWork } from './long-work.ts';
 import type { Material } from './material.ts';
+import type { OxidantStream } from './oxidant-stream.ts';
 import { placeOf } from './place.ts';
 import { significantText } from './significant-text.ts';
 import type { EvaluatedDefinition, EvaluatedValue, Meaning, Place, PlacedFact, PlacedMeaning } from './scenario.ts';
@@ -15,7 +16,12 @@ import type { EvaluatedDefinition, EvaluatedValue, Meaning, Place, PlacedFact, P
 /** What a name stands for once it has been worked out. A null part could not be had, and that has been said. */
 export type Named =
   | { readonly kind: 'value'; readonly value: EvaluatedValue }
-  | { readonly kind: 'definition'; readonly definition: EvaluatedDefinition; readonly material: Material | null }
+  | {
+      readonly kind: 'definition';
+      readonly definition: EvaluatedDefinition;
+      readonly material: Material | null;
+      readonly stream: OxidantStream | null;
+    }
   /** Of a kind that is not evaluated: it can be gone to, but whatever uses it stays silent. */
   | { readonly kind: 'unevaluated'; readonly definition: EvaluatedDefinition }
   /** Named twice, or on a cycle: whatever uses it stays silent. */

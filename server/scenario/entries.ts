@@ -21,6 +21,8 @@ export interface Reader<T> {
   readonly connectives?: Readonly<Record<string, string>>;
   /** Bare words here name substances or definitions. */
   readonly names?: boolean;
+  /** Kinds of the definitions they name; blends and substances where this is not said. */
+  readonly kinds?: readonly string[];
   /** Bare words here are chemical elements. */
   readonly elements?: boolean;
   read(entry: Entry, context: Context): T | undefined;

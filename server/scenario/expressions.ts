@@ -2,7 +2,7 @@
 // Where that fails, the cause is said once, at its place, and null is returned; whoever receives null stays silent.
 // Depth is bounded by the grammar (brackets nest 64 deep at most), chains of operators by the loop in `chain`.
 
-import type { Binary, Call, Expression, Word } from '../../grammar/tree.ts';
+import type { Binary, Call, Expression, Reference, Word } from '../../grammar/tree.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { add, divide, isFault, multiply, negate, raise, subtract } from '../core/quantity/quantity.ts';
 import { explainUnitWord, listOtherSpellings } from '../core/quantity/suggest-units.ts';
@@ -11,6 +11,7 @@ import { near, type Context, type Unknowable } from './context.ts';
 import { functions, reportCount, type Argument } from './functions.ts';
 import { aboveAbsoluteZero, readQuantity, reportFault } from './read-quantity.ts';
 import { evaluateMembership, evaluateReference, silent } from './references.ts';
+import type { ReferredFigure } from './table-cells.ts';
 
 /** The value of an expression; null when it could not be had (said, or silent because its cause was said elsewhere). */
 export function evaluateExpression(expression: Expression, context: Context): Unknowable {
@@ -30,7 +31,7 @@ export function evaluateExpression(expression: Expression, context: Context): Un
     case 'word':
       return evaluateName(expression, context);
     case 'reference':
-      return evaluateReference(expression, context)?.quantity ?? null;
+      return referredFigure(expression, context)?.quantity ?? null;
     case 'membership':
       return evaluateMembership(expression, context);
     case 'call':
@@ -54,6 +55,11 @@ export function evaluateExpression(expression: Expression, context: Context): Un
       return null;
     }
   }
+}
+
+/** A figure or a cell of a table, with the unit it is told in. */
+export function referredFigure(reference: Reference, context: Context): ReferredFigure | null {
+  return evaluateReference(reference, context, (at) => evaluateExpression(at, context));
 }
 
 /** Left-leaning chains of operators are walked in a loop: a sum of ten thousand terms must not exhaust the stack. */

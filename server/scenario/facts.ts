@@ -3,8 +3,10 @@
 // for each variant; the registry there is a map over `Fact['code']`, so the compiler asks for the missing one.
 
 import type { Problem } from '../../grammar/tree.ts';
-import type { GivenProductsFault } from '../core/balance/given-products.ts';
 import type { NoBalance } from '../core/balance/equation.ts';
+import type { GivenProductsFault } from '../core/balance/given-products.ts';
+import type { BurnFault } from '../core/burn/burn.ts';
+import type { NoEquilibrium } from '../core/equilibrium/equilibrium.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Place } from './place.ts';
@@ -53,6 +55,14 @@ export type Fact =
     }
   /** A phrase of an entry that its table does not take. */
   | { readonly code: 'name/unknown-phrase'; readonly entry: string; readonly text: string; readonly takes: string }
+  /** Something told at some temperatures only is asked for at another. */
+  | {
+      readonly code: 'name/unknown-state';
+      readonly text: string;
+      readonly owner: string;
+      readonly kind: string;
+      readonly states: readonly Quantity[];
+    }
   /** A function called with too many or too few values. */
   | { readonly code: 'name/arguments'; readonly name: string; readonly takes: string; readonly given: number }
   /** A line that this kind does not take: a portion in a reaction, an equation in a blend. */
@@ -138,7 +148,50 @@ export type Fact =
   | { readonly code: 'balance/no-data'; readonly what: string; readonly missing: readonly string[] }
   /** The named products cannot be what the fuel burns to. */
   | { readonly code: 'balance/products'; readonly fault: GivenProductsFault }
-  | { readonly code: 'balance/water-missing'; readonly name: string; readonly waterKgPerKg: number }
+  /** `of`: the blend by itself, or the whole charge of a burn, oxidant included. */
+  | {
+      readonly code: 'balance/water-missing';
+      readonly of: 'blend' | 'burn';
+      readonly name: string;
+      readonly waterKgPerKg: number;
+    }
+  /** Nothing can be burnt with this much of these. */
+  | { readonly code: 'balance/charge'; readonly fault: ChargeFault; readonly fuel: string; readonly oxidant: string }
+  /** No state of lowest energy: the elements have no product, or it lies beyond the data. */
+  | {
+      readonly code: 'balance/no-equilibrium';
+      readonly name: string;
+      readonly of: 'flame' | 'zone';
+      readonly fault:
+        Extract<NoEquilibrium, { readonly reason: 'cannot-form' | 'outside-tables' }> | { readonly reason: 'no-gas' };
+    }
+  /** Less oxygen than the fuel needs: what is left unburnt at equilibrium, and whether soot is to be expected. */
+  | {
+      readonly code: 'range/rich';
+      readonly of: 'flame' | 'zone';
+      readonly lambda: number;
+      /** Of the dry gas. */
+      readonly carbonMonoxideShare: number;
+      readonly hydrogenShare: number;
+      /** Share of the carbon that is soot at equilibrium. */
+      readonly sootShare: number;
+      /** Atoms of carbon per atom of oxygen in the charge; null without oxygen. */
+      readonly carbonPerOxygen: number | null;
+    }
+  /** A gas at a pressure that it would not have so cold: its compression was forgotten. `compressed` is what it would be. */
+  | {
+      readonly code: 'range/cold-charge';
+      readonly temperature: Quantity;
+      readonly pressure: Quantity;
+      readonly compressed: Quantity;
+    }
+  /** Water vapour near its saturation at a high pressure is no ideal gas. */
+  | {
+      readonly code: 'range/real-gas';
+      readonly temperature: Quantity;
+      readonly vapourPressure: Quantity;
+      readonly saturation: Quantity;
+    }
   /** `worked` is what `first` makes of the number that `second` gives, where the two can be held against each other. */
   | {
       readonly code: 'balance/contradiction';
@@ -157,6 +210,8 @@ export type Fact =
   | {
       readonly code: 'range/temperature';
       readonly why: 'extrapolated';
+      /** The state of a burn, which nobody chose; otherwise one that was asked for. */
+      readonly of?: 'burn';
       readonly temperature: Quantity;
       readonly species: readonly { readonly name: string; readonly range: readonly [from: Quantity, to: Quantity] }[];
     }
@@ -189,6 +244,11 @@ export type Fact =
   /** An `acknowledge` line that cannot count: only hazards can be acknowledged, by a known code, with a reason. */
   | { readonly code: 'name/acknowledged'; readonly why: 'not-a-hazard' | 'no-reason'; readonly acknowledged: string }
   | { readonly code: 'program/failed'; readonly message: string };
+
+/** Why a charge cannot be burnt as it is written. */
+export type ChargeFault = BurnFault & {
+  readonly reason: Exclude<BurnFault['reason'], 'no-energy' | 'no-heating-value' | 'nothing'>;
+};
 
 /** A problem of form, already in words by the grammar. */
 export interface SyntaxFact {

@@ -3,6 +3,7 @@
 // placed now. Works nothing out. Invariant: a placed answer cannot be told from one that was worked out afresh.
 
 import type { PlacedSection } from '../../grammar/tree.ts';
+import { quantityOf } from '../core/quantity/quantity.ts';
 import type { Answer } from './answer.ts';
 import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
@@ -10,11 +11,13 @@ import type {
   EvaluatedDefinition,
   EvaluatedValue,
   Expectation,
+  Figure,
   Meaning,
   PlacedFact,
   PlacedMeaning,
 } from './scenario.ts';
 import { carryOver, significantTextOf } from './significant-text.ts';
+import type { Working } from './working.ts';
 
 /** Finds the placed answer that a name stands for. */
 export type PlacedByName = (name: string) => PlacedAnswer | undefined;
@@ -87,20 +90,39 @@ export class PlacedAnswer {
   }
 
   #place(definition: EvaluatedDefinition): EvaluatedDefinition {
-    const placed = {
-      ...definition,
+    const { kind, name } = definition;
+    const placed: EvaluatedDefinition = {
+      kind,
+      name,
       doc: this.placed.section.doc,
       place: this.#placeOf(definition.place),
       header: this.#placeOf(definition.header),
       namePlace: this.#placeOf(definition.namePlace),
       section: this.placed,
+      figures: [],
+      tables: [],
+      absent: new Map(),
+      lines: [],
     };
-    if (this.#innerPlaces.size === 0) return placed;
-    // Copied when somebody looks: at most keys nobody does.
+    // Read when somebody looks: at most keys nobody does, and a burn solves its states then only.
     return lazily(placed, {
-      figures: () => this.#withPlaces(definition.figures),
-      tables: () => this.#withPlaces(definition.tables),
+      figures: () => this.#placeFigures(definition.figures),
+      tables: () => definition.tables,
+      absent: () => definition.absent,
       lines: () => this.#withPlaces(definition.lines),
+    });
+  }
+
+  /** Only workings hold places, and each is put where it belongs when it is read. */
+  #placeFigures(figures: readonly Figure[]): readonly Figure[] {
+    if (this.#innerPlaces.size === 0) return figures;
+    return figures.map((figure) => {
+      const { id, label, unit } = figure;
+      const placed: Figure = { id, label, unit, quantity: quantityOf(0), working: unreadWorking };
+      return lazily(placed, {
+        quantity: () => figure.quantity,
+        working: () => this.#withPlaces(figure.working),
+      });
     });
   }
 
@@ -122,41 +144,46 @@ export class PlacedAnswer {
   /** A copy in which the places that stand inside are put where they are now; the value itself where none do. */
   #withPlaces<Value>(value: Value): Value {
     if (this.#innerPlaces.size === 0) return value;
+    const holders = holdersOf(this.answer);
+    holders.look(value);
     // Copied field for field, the copy is of the value's own type; the compiler cannot follow that.
-    return withPlaces(value, this.#innerPlaces, knownHoldersOf(this.answer)) as Value;
+    return withPlaces(value, this.#innerPlaces, holders.found) as Value;
   }
 }
 
-/** The lists and records of an answer that hold a place, at whatever depth: found once, since most hold none. */
-function holdersOf({ facts, named, innerPlaces }: Answer): ReadonlySet<unknown> {
-  const places: ReadonlySet<object> = innerPlaces;
-  const holders = new Set<unknown>();
-  const seen = new Set<unknown>();
-  const holds = (value: unknown): boolean => {
+/** Stands in a placed figure until its own working is read. */
+const unreadWorking: Working = { method: 'as-given', inputs: [], sources: [], assumptions: [] };
+
+/** The lists and records of an answer that hold a place, at whatever depth: looked for once, since most hold none. */
+class Holders {
+  readonly found = new Set<unknown>();
+  readonly #seen = new Set<unknown>();
+
+  constructor(private readonly places: ReadonlySet<object>) {}
+
+  /** Looks through a value; only what is looked through is worked out, where that is done on reading. */
+  look(value: unknown): boolean {
     if (typeof value !== 'object' || value === null) return false;
-    if (places.has(value)) return true;
-    if (seen.has(value)) return holders.has(value);
-    seen.add(value);
+    if (this.places.has(value)) return true;
+    if (this.#seen.has(value)) return this.found.has(value);
+    this.#seen.add(value);
     // Every part is looked into, so that all holders are found.
-    const holding = (Array.isArray(value) ? value : Object.values(value)).filter(holds).length > 0;
-    if (holding) holders.add(value);
+    const parts: readonly unknown[] = Array.isArray(value) ? value : Object.values(value);
+    const holding = parts.filter((part) => this.look(part)).length > 0;
+    if (holding) this.found.add(value);
     return holding;
-  };
-  holds(facts.map(({ fact }) => fact));
-  if (named && 'definition' in named) {
-    const { figures, tables, lines } = named.definition;
-    [figures, tables, lines].forEach(holds);
   }
+}
+
+function holdersOf(answer: Answer): Holders {
+  const known = knownHolders.get(answer);
+  if (known) return known;
+  const holders = new Holders(answer.innerPlaces);
+  knownHolders.set(answer, holders);
   return holders;
 }
 
-const known = new WeakMap<Answer, ReadonlySet<unknown>>();
-
-function knownHoldersOf(answer: Answer): ReadonlySet<unknown> {
-  const found = known.get(answer) ?? holdersOf(answer);
-  known.set(answer, found);
-  return found;
-}
+const knownHolders = new WeakMap<Answer, Holders>();
 
 /** A copy as deep as places stand in it; lists and records that hold none are shared. Places do not stand in maps. */
 function withPlaces(value: unknown, places: ReadonlyMap<object, Place>, holders: ReadonlySet<unknown>): unknown {

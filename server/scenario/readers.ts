@@ -205,7 +205,7 @@ export const carbonOriginReader: Reader<Quantity> = {
 
 export const shareNeeded: Needed = { dimension: knownUnit('%').dimension, kind: 'plain', example: '%' };
 export const temperatureNeeded: Needed = { dimension: knownUnit('K').dimension, kind: 'temperature', example: 'degC' };
-const pressureNeeded: Needed = { dimension: knownUnit('bar').dimension, kind: 'plain', example: 'bar' };
+export const pressureNeeded: Needed = { dimension: knownUnit('bar').dimension, kind: 'plain', example: 'bar' };
 
 /** Says that a phrase is not what the entry takes. */
 export function refuse(entry: Entry, phrase: Phrase, takes: string, context: Context): undefined {
@@ -266,18 +266,21 @@ export function isInRange(
   return true;
 }
 
-function readQuantityItem(item: Expression, needed: Needed, context: Context): Quantity | null {
+/** A quantity that fits its place; null when it does not (said). */
+export function readQuantityItem(item: Expression, needed: Needed, context: Context): Quantity | null {
   const quantity = evaluateExpression(item, context);
   return quantity && fit(quantity, needed, item.span, context);
 }
 
-function onlyPhrase(entry: Entry, takes: string, context: Context): Phrase | undefined {
+/** The phrase of an entry that takes one; undefined when there are more (said). */
+export function onlyPhrase(entry: Entry, takes: string, context: Context): Phrase | undefined {
   const [phrase, second] = entry.phrases;
   if (second) return refuse(entry, second, takes, context);
   return phrase;
 }
 
-function reportListedWord(word: Word, owner: string, allowed: readonly string[], context: Context): void {
+/** Says that a word is none of those that may stand there. */
+export function reportListedWord(word: Word, owner: string, allowed: readonly string[], context: Context): void {
   context.report(word.span, {
     code: 'name/unknown',
     what: 'word',

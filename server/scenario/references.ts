@@ -2,32 +2,32 @@
 // (`sodium in slurry`), each found by the words that name it. Where nothing is found, the cause is said once, at its place,
 // and null is returned. Knows no arithmetic but that of adding a portion's shares.
 
-import type { Membership, Reference, Word } from '../../grammar/tree.ts';
+import type { Expression, Membership, Reference, Word } from '../../grammar/tree.ts';
 import type { Basis } from '../core/balance/mixture.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { add, isFault, quantityOf, type Quantity, type QuantityFault } from '../core/quantity/quantity.ts';
-import { toSi } from '../core/quantity/read-unit.ts';
 import { near, type Context, type Unknowable } from './context.ts';
 import { givenFigures } from './given-figures.ts';
 import type { PortionShare } from './material.ts';
 import { figuresOfMaterial } from './material-figures.ts';
 import { materialNamed } from './materials.ts';
+import { fit } from './read-quantity.ts';
 import type { Absent, EvaluatedDefinition, Figure, Table } from './scenario.ts';
+import { findCell, findFigureAt, isToldOverTemperature, type ReferredFigure } from './table-cells.ts';
 import { nearByTrade } from './trade-names.ts';
+
 /** A name of a kind that is not evaluated yet: it can be gone to, and that is all; its own finding says so. */
 export function silent(word: Word, definition: EvaluatedDefinition, context: Context): null {
   context.mean(word.span, { kind: 'definition', name: word.text, definition });
   return null;
 }
 
-/** A figure met through a reference: its value and, where it is one of a definition's own, the figure. */
-export interface ReferredFigure {
-  readonly quantity: Quantity;
-  readonly unit: string;
-}
-
 /** `words of NAME`, or a cell of one of its tables. */
-export function evaluateReference(reference: Reference, context: Context): ReferredFigure | null {
+export function evaluateReference(
+  reference: Reference,
+  context: Context,
+  evaluateAt: EvaluateAt,
+): ReferredFigure | null {
   const { name } = reference;
   if (!name) return null; // the grammar has said that a name is missing
   const named = context.scope.lookup(name.text);
@@ -39,19 +39,23 @@ export function evaluateReference(reference: Reference, context: Context): Refer
     return null;
   }
   if (named) context.mean(name.span, { kind: 'definition', name: name.text, definition: named.definition });
-  const owner = named
-    ? { ...named.definition, portions: named.material?.portions ?? null }
+  const owner: Owner | null = named
+    ? { of: named.definition, portions: named.material?.portions ?? null }
     : catalogueOwner(name, context);
   if (!owner) return null;
-  if (reference.row) return evaluateCell(reference, reference.row, owner, context);
+  if (reference.row) return evaluateCell(reference, reference.row, owner, evaluateAt, context);
   const id = reference.words.replaceAll(' ', '-');
-  const figure = owner.figures.find((candidate) => candidate.id === id);
+  if (reference.at && isToldOverTemperature(owner.of.tables, id)) {
+    return evaluateAtTemperature(reference, reference.at, owner.of, id, evaluateAt, context);
+  }
+  const { figures, absent } = owner.of;
+  const figure = figures.find((candidate) => candidate.id === id);
   if (!figure) {
-    const missing = owner.absent.get(id);
+    const missing = absent.get(id);
     if (missing)
       context.report(reference.span, { code: 'balance/no-data', what: context.written(reference.span), missing });
     if (missing !== undefined) return null;
-    const ids = [...owner.figures.map((candidate) => candidate.id), ...owner.absent.keys()];
+    const ids = [...figures.map((candidate) => candidate.id), ...absent.keys()];
     const known = ids.map((candidate) => candidate.replaceAll('-', ' '));
     const suggestions = nearByTrade(reference.words, known);
     context.report(reference.wordsSpan, {
@@ -79,10 +83,9 @@ export function evaluateReference(reference: Reference, context: Context): Refer
   return figure;
 }
 
+/** What a reference is asked of. Its figures are read only when one is asked for: a burn solves its states then. */
 interface Owner {
-  readonly figures: readonly Figure[];
-  readonly tables: readonly Table[];
-  readonly absent: Absent;
+  readonly of: { readonly figures: readonly Figure[]; readonly tables: readonly Table[]; readonly absent: Absent };
   /** Of a blend. */
   readonly portions: readonly PortionShare[] | null;
 }
@@ -91,15 +94,23 @@ function catalogueOwner(name: Word, context: Context): Owner | null {
   const material = materialNamed(name, context);
   return (
     material && {
-      figures: [...figuresOfMaterial(material), ...givenFigures(material.card)],
-      tables: [],
-      absent: new Map(),
+      of: {
+        figures: [...figuresOfMaterial(material), ...givenFigures(material.card)],
+        tables: [],
+        absent: new Map(),
+      },
       portions: null,
     }
   );
 }
 
-function evaluateCell(reference: Reference, row: Word, owner: Owner, context: Context): ReferredFigure | null {
+function evaluateCell(
+  reference: Reference,
+  row: Word,
+  owner: Owner,
+  evaluateAt: EvaluateAt,
+  context: Context,
+): ReferredFigure | null {
   const columnId = reference.words.replaceAll(' ', '-');
   const wanted = context.written(row.span).replaceAll("'", '');
   const material = materialNamed(row, context, 'quiet');
@@ -108,28 +119,61 @@ function evaluateCell(reference: Reference, row: Word, owner: Owner, context: Co
     const quantity = shareOf(owner.portions, material.name, basis);
     return quantity && { quantity, unit: '1' };
   }
-  for (const table of owner.tables) {
-    const column = table.columns.findIndex((candidate) => candidate.id === columnId && candidate.unit !== null);
-    if (column < 0) continue;
-    const found = table.rows.find((cells) => cells[0] === wanted || (material && cells[0] === material.name));
-    const cell = found?.[column];
-    const unit = table.columns[column]?.unit;
-    if (!found || !unit) continue;
-    if (typeof cell !== 'number') return null; // the table itself shows that it could not be had
-    const known = knownUnit(unit);
-    return { quantity: quantityOf(toSi(cell, known), known.dimension), unit };
-  }
+  const temperature = reference.at ? readTemperature(reference.at, evaluateAt, context) : undefined;
+  if (temperature === null) return null;
+  const { tables, absent } = owner.of;
+  const isNamed = (name: string): boolean => name === wanted || name === material?.name;
+  const answer = findCell(tables, isNamed, columnId, temperature);
+  if (answer.kind === 'cell') return answer.cell;
   // A definition that could not be worked out has no tables, and why has been said there.
-  if ([...owner.absent.values()].includes(null)) return null;
-  const rows = owner.tables.flatMap((table) => table.rows.map((cells) => String(cells[0]))).slice(0, 12);
+  if ([...absent.values()].includes(null)) return null;
+  if (answer.kind === 'no-state' && reference.at)
+    return reportNoState(reference, reference.at, answer.statesK, context);
+  const allowed = answer.kind === 'no-row' ? answer.names.slice(0, 12) : [];
   context.report(row.span, {
     code: 'name/unknown',
     what: 'portion',
     word: wanted,
-    near: near(wanted, rows),
+    near: near(wanted, allowed),
     owner: reference.name?.text ?? '',
-    allowed: rows,
+    allowed,
   });
+  return null;
+}
+
+/** `condensed share of test_combustor at 350 degC`: a cell of the table whose rows are temperatures. */
+function evaluateAtTemperature(
+  reference: Reference,
+  at: Expression,
+  { tables, absent }: Owner['of'],
+  id: string,
+  evaluateAt: EvaluateAt,
+  context: Context,
+): ReferredFigure | null {
+  const temperature = readTemperature(at, evaluateAt, context);
+  if (!temperature) return null;
+  const answer = findFigureAt(tables, id, temperature);
+  if (answer.kind === 'cell') return answer.cell;
+  if ([...absent.values()].includes(null)) return null;
+  return reportNoState(reference, at, answer.statesK, context);
+}
+
+/** Works out what stands behind `at`; handed in, since expressions hold references and not the other way round. */
+export type EvaluateAt = (at: Expression) => Quantity | null;
+
+function readTemperature(at: Expression, evaluateAt: EvaluateAt, context: Context): Quantity | null {
+  const quantity = evaluateAt(at);
+  const needed = { dimension: knownUnit('K').dimension, kind: 'temperature', example: 'degC' } as const;
+  return quantity && fit(quantity, needed, at.span, context);
+}
+
+/** Says at which temperatures there is an answer. */
+function reportNoState(reference: Reference, at: Expression, statesK: readonly number[], context: Context): null {
+  const owner = reference.name?.text ?? '';
+  const named = context.scope.lookup(owner);
+  const kind = named?.kind === 'definition' ? named.definition.kind : '';
+  const states = statesK.map((stateK) => quantityOf(stateK, knownUnit('K').dimension, undefined, 'temperature'));
+  context.report(at.span, { code: 'name/unknown-state', text: context.written(at.span), owner, kind, states });
   return null;
 }
 

@@ -78,6 +78,8 @@ export interface Table {
   readonly columns: readonly Column[];
   /** Cells in the column's unit; null where a number could not be had. */
   readonly rows: readonly (readonly (string | number | null)[])[];
+  /** Rows too small to be worth showing, for those who ask for one by its name. */
+  readonly traces?: readonly (readonly (string | number | null)[])[];
 }
 
 export interface Column {

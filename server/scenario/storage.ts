@@ -2,6 +2,7 @@
 // volume is solid, and whether a solid is heavier than the liquid around it. By melting and boiling points at 1 atm alone:
 // solution, depression of freezing and gelling are not seen. Knows no syntax.
 
+import { knownUnit } from '../core/quantity/convert.ts';
 import { add, isFault, multiply, quantityOf, type Quantity } from '../core/quantity/quantity.ts';
 import type { Material, PortionShare } from './material.ts';
 import type { PortionState, StoredPhase } from './portion-state.ts';
@@ -56,6 +57,12 @@ export function solidsVolumeShare(portions: readonly PortionShare[], temperature
 
 function solidFraction(material: Material, temperature: Quantity): Quantity {
   return quantityOf(phaseAt(material, temperature) === 'solid' ? 1 : 0);
+}
+
+/** The phase of one material at a temperature in K and a pressure in Pa; null for a mixture or a solution. */
+export function storedPhase(material: Material, temperatureK: number, pressurePa: number): StoredPhase | null {
+  const temperature = quantityOf(temperatureK, knownUnit('K').dimension, undefined, 'temperature');
+  return phaseAt(material, temperature, pressurePa > boilingPressurePa);
 }
 
 const phaseWords: Readonly<Record<string, StoredPhase>> = { cr: 'solid', l: 'liquid', g: 'gas' };

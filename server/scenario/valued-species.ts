@@ -95,11 +95,12 @@ function range([fromK, toK]: readonly [number, number]): readonly [Quantity, Qua
 }
 
 /** `steam` names a phase that is not the usual one, so it means that phase at any state. */
-function isNamedPhase(material: Material): boolean {
+export function isNamedPhase(material: Material): boolean {
   return material.formula !== null && findSubstance(material.formula.text)?.phase !== material.phase;
 }
 
-function withoutPhase({ kind, text, composition, charge }: Formula): Formula {
+/** The formula as it is where no phase is asked for. */
+export function withoutPhase({ kind, text, composition, charge }: Formula): Formula {
   return { kind, text, composition, charge };
 }
 

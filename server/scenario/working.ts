@@ -46,7 +46,22 @@ export type MethodId =
   | 'solids-share'
   | 'wet-gas'
   | 'humidity-ratio'
-  | 'ideal-gas-density';
+  | 'ideal-gas-density'
+  | 'flame-temperature'
+  | 'flame-at-temperature'
+  | 'zone-temperature'
+  | 'flame-pressure'
+  | 'condensed-share'
+  | 'excess-air'
+  | 'flame-gas'
+  | 'flame-heat-capacity'
+  | 'flame-gamma'
+  | 'speed-of-sound'
+  | 'carbonate-share'
+  | 'heat-released'
+  | 'preheat'
+  | 'heat-above-exhaust'
+  | 'peak-gas';
 
 export type AssumptionId =
   | 'reference-state'
@@ -64,4 +79,11 @@ export type AssumptionId =
   | 'element-scale'
   | 'no-dissolving'
   | 'fossil-by-default'
-  | 'several-alkalis-proportional';
+  | 'several-alkalis-proportional'
+  | 'complete-equilibrium'
+  | 'pure-condensed'
+  | 'dense-gas'
+  | 'no-other-loss'
+  | 'kinetics-decide'
+  | 'carbonate-on-cooling'
+  | 'slow-solids';

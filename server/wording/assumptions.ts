@@ -29,4 +29,12 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'fossil-by-default': 'Carbon whose origin is not stated is taken as fossil.',
   'several-alkalis-proportional':
     'Several alkali metals share the acids and the carbon in proportion to their amounts.',
+  'complete-equilibrium': 'Every reaction reaches its equilibrium: time and mixing are no limit.',
+  'pure-condensed': 'What is condensed is pure: melts and solids do not dissolve in each other.',
+  'dense-gas': 'Above 100 bar real gases differ from ideal ones by several percent.',
+  'no-other-loss': 'No heat is lost but what is stated: radiation and walls take none.',
+  'kinetics-decide': 'What freezes in a flame is decided by kinetics; equilibrium gives the order of magnitude.',
+  'carbonate-on-cooling': 'Carbonate is made as the gas cools, seldom in the flame itself.',
+  'slow-solids':
+    'Hydrogen carbonates and hydrates take hours and moisture: where they appear they are a limit, not a forecast.',
 };

@@ -172,4 +172,101 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols: 'p pressure, M molar mass, R gas constant, T temperature',
     validity: 'Within 1 % for air below about 30 bar at room temperature; worse above.',
   },
+  'flame-temperature': {
+    words:
+      'The temperature at which the products, in the state of lowest Gibbs energy, hold all the energy the charge brought in less the loss.',
+    equation: 'Σ nₚ hₚ(T) = h(fuel) + L h(oxidant) − q LHV, with Σ nₚ gₚ(T, p) least',
+    symbols:
+      'nₚ, hₚ, gₚ amount, enthalpy and Gibbs energy of product p, h enthalpies of fuel and oxidant as they come in, L oxidant per fuel, q share of the lower heating value LHV that is lost; at constant volume energies stand in the place of enthalpies',
+    validity:
+      'Ideal gases and pure condensed phases. Real flames stay below it by what they radiate and by unburnt fuel.',
+  },
+  'flame-at-temperature': {
+    words: 'The products in the state of lowest Gibbs energy at the temperature that is given.',
+    equation: 'Σ nₚ gₚ(T, p) least',
+    symbols: 'nₚ, gₚ amount and Gibbs energy of product p',
+    validity: 'Ideal gases and pure condensed phases.',
+  },
+  'zone-temperature': {
+    words: 'The same for the fuel with the oxidant of its zone alone, before the rest mixes in; no loss is taken here.',
+    equation: 'Σ nₚ hₚ(T) = h(fuel) + L h(oxidant), with Σ nₚ gₚ(T, p) least',
+    symbols: 'nₚ, hₚ, gₚ amount, enthalpy and Gibbs energy of product p, L oxidant per fuel in the zone',
+    validity: 'Ideal gases and pure condensed phases, the zone evenly mixed.',
+  },
+  'flame-pressure': {
+    words: 'The pressure that is held, or the one that the products make in the volume that is held.',
+    equation: 'p = n R T / V',
+    symbols: 'n amount of gas, R gas constant, T temperature, V volume of the charge',
+    validity: 'Ideal gas; above 100 bar the real pressure is several percent higher.',
+  },
+  'condensed-share': {
+    words: 'The mass of all liquid and solid products over the mass of all products.',
+    equation: 'w = Σ nₖ Mₖ / m',
+    symbols: 'nₖ, Mₖ amount and molar mass of each condensed product, m mass of fuel and oxidant',
+    validity: 'At the state told, pure condensed phases.',
+  },
+  'excess-air': {
+    words: 'The oxygen that the oxidant brings over the oxygen that the fuel needs, both counted by valence.',
+    equation: 'λ = L ν(oxidant) / ν(fuel)',
+    symbols: 'L oxidant per fuel, ν oxygen brought or needed per kg by valence (C 4, H 1, O −2, Na 1, Mg 2 …)',
+    validity: 'The same whether alkali ends as oxide, hydroxide or carbonate; sulphates and peroxides take more.',
+  },
+  'flame-gas': {
+    words: 'The gas of the products alone, without what floats in it.',
+    equation: 'M = Σ nᵢ Mᵢ / Σ nᵢ; c = Σ nᵢ cᵢ / Σ nᵢ Mᵢ',
+    symbols: 'nᵢ, Mᵢ, cᵢ amount, molar mass and molar heat capacity of each gas',
+    validity: 'Ideal gas at the temperature of the flame, composition held.',
+  },
+  'flame-heat-capacity': {
+    words:
+      'The heat capacity of all products at constant pressure, with the composition held or following its equilibrium.',
+    equation: 'c = (∂H/∂T)ₚ / m',
+    symbols: 'H enthalpy of all products, m their mass',
+    validity:
+      'Where two phases of one substance hold the temperature, the one that follows is without bound and not told.',
+  },
+  'flame-gamma': {
+    words: 'How steeply the pressure rises as the products are compressed, with the composition held or following.',
+    equation: 'γ = cₚ / (cₚ − n R); γₛ = −(∂ ln p / ∂ ln V)ₛ',
+    symbols:
+      'cₚ heat capacity of all products, n amount of gas, R gas constant, p pressure, V volume, s at constant entropy',
+    validity: 'Condensed products warm and cool with the gas and take no room.',
+  },
+  'speed-of-sound': {
+    words: 'The speed of sound in the products, the reactions following it.',
+    equation: 'a = √(γₛ n R T / m)',
+    symbols: 'γₛ isentropic exponent, n amount of gas, m mass of all products, T temperature',
+    validity: 'For slow sound and fine particles, which move with the gas.',
+  },
+  'carbonate-share': {
+    words: 'The carbon that is in carbonate, in any phase, over all the carbon of the charge.',
+    equation: 'c = n(C in carbonate) / n(C)',
+    symbols: 'n moles of carbon atoms',
+    validity: 'At the state told. Carbonate is made on cooling, seldom in the flame.',
+  },
+  'heat-released': {
+    words: 'The enthalpy of fuel and oxidant as they come in, less that of the products at 25 °C.',
+    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(25 °C)',
+    symbols: 'h enthalpies as they come in, L oxidant per fuel, nₚ, hₚ amount and enthalpy of each product at 25 °C',
+    validity:
+      'Products in equilibrium at 25 °C, or as they froze. Water counts as liquid where it condenses, so it can be more than the lower heating value.',
+  },
+  preheat: {
+    words: 'What fuel and oxidant hold over their enthalpy at 25 °C.',
+    equation: 'q = h(T) − h(25 °C)',
+    symbols: 'h enthalpy of fuel and oxidant together, per kg of fuel',
+    validity: 'It is part of the heat released and no part of a heating value.',
+  },
+  'heat-above-exhaust': {
+    words: 'The enthalpy of fuel and oxidant as they come in, less that of the products at the exhaust temperature.',
+    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(T)',
+    symbols: 'T exhaust temperature, nₚ, hₚ amount and enthalpy of each product there',
+    validity: 'What a boiler without other losses could pass on; it is not work.',
+  },
+  'peak-gas': {
+    words: 'The share of the dry gas at the peak of temperature, if nothing of it reacted back on cooling.',
+    equation: null,
+    symbols: '',
+    validity: 'Order of magnitude only: rates of reaction and the time in the flame decide.',
+  },
 };

@@ -180,7 +180,7 @@ function reportMissingWater(
   const hasOxide = products?.rows.some(([product]) => typeof product === 'string' && oxides.includes(product));
   const missing = answer.figures.find((figure) => figure.id === 'water-missing')?.quantity.value ?? 0;
   if (hasOxide && missing > 0) {
-    context.report(header, { code: 'balance/water-missing', name: material.name, waterKgPerKg: missing });
+    context.report(header, { code: 'balance/water-missing', of: 'blend', name: material.name, waterKgPerKg: missing });
   }
 }
 

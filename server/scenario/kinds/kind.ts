@@ -6,6 +6,7 @@ import type { Context } from '../context.ts';
 import type { EntryTable } from '../entries.ts';
 import type { Material } from '../material.ts';
 import type { FigureRow } from '../material-figures.ts';
+import type { OxidantStream } from '../oxidant-stream.ts';
 import type { Absent, Figure, LineResult, Table } from '../scenario.ts';
 
 export interface Kind {
@@ -30,6 +31,8 @@ export interface KindAnswer {
   readonly lines: readonly LineResult[];
   /** What the definition is as a portion of something else; null when it is no material or could not be worked out. */
   readonly material: Material | null;
+  /** What it is as something to burn in; only an oxidant has one. */
+  readonly stream?: OxidantStream | null;
 }
 
 /** An answer that says nothing: the cause has been reported. Its figures are all absent for that reason. */

@@ -19,6 +19,7 @@ import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
 import type { FigureRow } from '../material-figures.ts';
 import { mixOrReport, readParts, type Part } from '../mixing.ts';
+import type { OxidantStream } from '../oxidant-stream.ts';
 import { quantityReader, stateReader } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
 import type { Working, WorkingInput } from '../working.ts';
@@ -155,7 +156,35 @@ function answerGas(
     return { kind: 'portion', line, material: material.card, shares: values, state: null };
   });
   const absent = new Map(gas.isGas ? [] : [['density', ['a density of what is no gas']]]);
-  return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null };
+  const stream: OxidantStream = {
+    name: context.owner,
+    moleShares: moleSharesOf(gas, [temperature, pressure, humidity], vapourShare),
+    temperature,
+    pressure,
+    sources: working.sources,
+    assumptions: working.assumptions,
+  };
+  return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null, stream };
+}
+
+/** Mole shares of the wet gas, uncertain where its state or humidity is. */
+function moleSharesOf(
+  gas: DryGas,
+  inputs: readonly [temperature: Quantity, pressure: Quantity, humidity: Quantity],
+  vapourShare: (temperatureK: number, pressurePa: number, humidity: number) => number,
+): ReadonlyMap<string, Quantity> {
+  const names = [...new Set([...gas.species.map(({ name }) => name), vapour])];
+  const outcomes = propagate(inputs, ([t = NaN, p = NaN, h = NaN]) => {
+    const added = vapourShare(t, p, h);
+    const ofPortions = new Map(gas.species.map(({ name, share }) => [name, share * (1 - added)]));
+    return names.map((name) => (ofPortions.get(name) ?? 0) + (name === vapour ? added : 0));
+  });
+  return new Map(
+    names.flatMap((name, index) => {
+      const { value = 0, parts } = outcomes[index] ?? {};
+      return value > 0 ? [[name, quantityOf(value, dimensionless, parts)] as const] : [];
+    }),
+  );
 }
 
 type FigureId = (typeof figures)[number]['id'];

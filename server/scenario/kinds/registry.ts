@@ -2,6 +2,7 @@
 // other. A kind that is not evaluated yet still has its help, so that hovers and completion can speak of it.
 
 import { blend } from './blend.ts';
+import { burn } from './burn.ts';
 import type { Kind } from './kind.ts';
 import { oxidant } from './oxidant.ts';
 import { reaction } from './reaction.ts';
@@ -12,7 +13,7 @@ export const kinds: readonly Kind[] = [
   blend,
   oxidant,
   reaction,
-  later('burn', 'A blend burnt in an oxidant to chemical equilibrium, and its products as they cool.'),
+  burn,
   later('engine', 'An engine, by the cycle it works or by its measured consumption against load.'),
   later('duty', 'What an engine has to do: legs by time or by distance and speed, or a named test cycle.'),
   later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),

@@ -171,7 +171,7 @@ describe('in an expression', () => {
       { first: ['slurry'], has: ['methanol'], lacks: ['days'] },
     ],
     ['`of` an unknown figure', `${SLURRY}expect nonsense of $0\n`, { lacks: ['slurry', 'methanol'] }],
-    ['definitions that are not worked out', 'burn b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
+    ['definitions that are not worked out', 'engine b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
     ['rows of a table', `${SLURRY}expect mass share of $0\n`, { has: ['sodium in slurry'] }],
     [
       'blends behind `in`',

@@ -87,8 +87,8 @@ describe('the meaning of', () => {
     ],
     [
       'a definition that is not worked out',
-      'burn b {\n  fuel: methanol\n}\n',
-      ['burn kind', 'b class declaration', 'methanol substance defaultLibrary'],
+      'engine b {\n  fuel: methanol\n}\n',
+      ['engine kind', 'b class declaration', 'methanol substance defaultLibrary'],
     ],
     [
       'a name of a used file',

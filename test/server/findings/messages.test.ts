@@ -129,6 +129,30 @@ const ROWS: readonly (readonly [Fact, string])[] = [
     '`stored` cannot be read with `red`. It takes a temperature and a pressure.',
   ],
   [
+    {
+      code: 'name/unknown-state',
+      text: '350 degC',
+      owner: 'lamp',
+      kind: 'burn',
+      states: [quantity(900, 'degC', 0, 'temperature'), quantity(150, 'degC', 0, 'temperature')],
+    },
+    '`lamp` has no state at `350 degC`, only at 900 °C and 150 °C. List the temperature in its definition, under `cooled to`.',
+  ],
+  [
+    { code: 'name/unknown-state', text: '350 degC', owner: 'lamp', kind: 'burn', states: [] },
+    '`lamp` has no state at `350 degC`. List the temperature in its definition, under `cooled to`.',
+  ],
+  [
+    {
+      code: 'name/unknown-state',
+      text: '900 K',
+      owner: 'route',
+      kind: 'reaction',
+      states: [1, 2, 3, 4, 5, 6, 7, 8].map((value) => quantity(100 * value, 'degC', 0, 'temperature')),
+    },
+    '`route` has no state at `900 K`, only at 100 °C, 200 °C, 300 °C, 400 °C, 500 °C, 600 °C and 2 more.',
+  ],
+  [
     { code: 'name/arguments', name: 'min', takes: 'two values or more', given: 1 },
     '`min` is given 1 value. It takes two values or more.',
   ],
@@ -266,7 +290,150 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [{ code: 'balance/no-portions', name: 'x' }, '`x` has no portions. Add one a line, for example `30 % mass sodium`.'],
   [
-    { code: 'balance/water-missing', name: 'slurry', waterKgPerKg: 0.05214 },
+    {
+      code: 'balance/charge',
+      fault: { kind: 'fault', reason: 'no-oxygen-offered', molPerKg: 0 },
+      fuel: 'metal',
+      oxidant: 'H2O(g)',
+    },
+    '`H2O(g)` has no oxygen to spare as λ counts it: what it holds is bound already. Say how much there is with `oxidant per fuel: … kg/kg`.',
+  ],
+  [
+    {
+      code: 'balance/charge',
+      fault: { kind: 'fault', reason: 'no-oxygen-needed', molPerKg: 0 },
+      fuel: 'ash',
+      oxidant: 'air',
+    },
+    '`ash` needs no oxygen, so λ says nothing of it. Say how much there is with `oxidant per fuel: … kg/kg`.',
+  ],
+  [
+    {
+      code: 'balance/charge',
+      fault: { kind: 'fault', reason: 'no-valence', of: 'fuel', elements: ['Xe'] },
+      fuel: 'odd',
+      oxidant: 'air',
+    },
+    'In `odd`, Xe has no valence that λ counts. Say how much there is with `oxidant per fuel: … kg/kg`.',
+  ],
+  [
+    {
+      code: 'balance/charge',
+      fault: { kind: 'fault', reason: 'zone-leaner', zoneKgPerKg: 14.5, wholeKgPerKg: 10 },
+      fuel: 'gas_oil',
+      oxidant: 'air',
+    },
+    'The flame zone would have 14.5 kg of oxidant per kg of fuel, more than the 10 kg of the whole. Make the zone richer, or the whole leaner.',
+  ],
+  [
+    { code: 'balance/charge', fault: { kind: 'fault', reason: 'no-gas' }, fuel: 'metal', oxidant: 'water' },
+    'Neither `metal` nor `water` is a gas before it burns, so there is no volume to hold. Hold a pressure instead: `held: pressure 10 bar`.',
+  ],
+  [
+    {
+      code: 'balance/charge',
+      fault: { kind: 'fault', reason: 'not-positive', of: 'zone' },
+      fuel: 'metal',
+      oxidant: 'air',
+    },
+    'The oxidant of the flame zone must be more than nothing.',
+  ],
+  [
+    {
+      code: 'balance/no-equilibrium',
+      name: 'lamp',
+      of: 'flame',
+      fault: { reason: 'no-gas' },
+    },
+    'The flame of `lamp` cannot be worked out: none of the products that may form is a gas, so nothing fills the volume that is held. Hold a pressure, or allow a gas.',
+  ],
+  [
+    {
+      code: 'balance/no-equilibrium',
+      name: 'lamp',
+      of: 'flame',
+      fault: { kind: 'none', reason: 'cannot-form', elements: ['N', 'Ar'] },
+    },
+    'The flame of `lamp` cannot be worked out: no combination of the products that are known and allowed holds its N and Ar. Allow more products, or leave the element out.',
+  ],
+  [
+    {
+      code: 'balance/no-equilibrium',
+      name: 'lamp',
+      of: 'zone',
+      fault: { kind: 'none', reason: 'outside-tables', side: 'above', limitK: 6000 },
+    },
+    'The flame zone of `lamp` would be hotter than 6000 K (5727 °C), where the data of all products end. Is a temperature or the oxidant mistyped?',
+  ],
+  [
+    {
+      code: 'balance/no-equilibrium',
+      name: 'lamp',
+      of: 'flame',
+      fault: { kind: 'none', reason: 'outside-tables', side: 'below', limitK: 200 },
+    },
+    'The flame of `lamp` would be colder than 200 K (−73.15 °C), where the data of all products begin. Does the fuel burn at all?',
+  ],
+  [
+    {
+      code: 'range/rich',
+      of: 'flame',
+      lambda: 0.67,
+      carbonMonoxideShare: 0.1023,
+      hydrogenShare: 0.0863,
+      sootShare: 0,
+      carbonPerOxygen: 0.33,
+    },
+    'The charge is rich (λ 0.67): at equilibrium its dry gas holds 10.23 % CO and 8.63 % H2.',
+  ],
+  [
+    {
+      code: 'range/rich',
+      of: 'zone',
+      lambda: 0.5,
+      carbonMonoxideShare: 0.2,
+      hydrogenShare: 0.1,
+      sootShare: 0,
+      carbonPerOxygen: 0.68,
+    },
+    'The flame zone is rich (λ 0.5): at equilibrium its dry gas holds 20 % CO and 10 % H2. With 0.68 atoms of carbon per atom of oxygen a flame soots, though equilibrium has no soot.',
+  ],
+  [
+    {
+      code: 'range/rich',
+      of: 'flame',
+      lambda: 0.2,
+      carbonMonoxideShare: 0.2,
+      hydrogenShare: 0.2,
+      sootShare: 0.3,
+      carbonPerOxygen: 1.7,
+    },
+    'The charge is rich (λ 0.2): at equilibrium its dry gas holds 20 % CO and 20 % H2. 30 % of the carbon is soot even at equilibrium.',
+  ],
+  [
+    {
+      code: 'range/cold-charge',
+      temperature: quantity(25, 'degC', 0, 'temperature'),
+      pressure: quantity(40, 'bar'),
+      compressed: quantity(582.2, 'degC', 0, 'temperature'),
+    },
+    'The air comes in at 25 °C and 40 bar. Was its compression forgotten? Without loss and cooling it would be at about 582.2 °C; give that with `oxidant state:`.',
+  ],
+  [
+    {
+      code: 'range/real-gas',
+      temperature: quantity(260, 'degC', 0, 'temperature'),
+      vapourPressure: quantity(39, 'bar'),
+      saturation: quantity(248.9, 'degC', 0, 'temperature'),
+    },
+    'At 260 °C the water vapour (39 bar, saturated at 248.9 °C) is no ideal gas any more: take this state as a guess.',
+  ],
+  [
+    { code: 'balance/water-missing', of: 'burn', name: 'torch', waterKgPerKg: 0.39 },
+    'Neither fuel nor oxidant of `torch` brings enough hydrogen for all the alkali to end as hydroxide or carbonate: 0.39 kg of water per kg of fuel is missing, so oxide and peroxide stay. Humid air or injected water would bring it.',
+  ],
+  [
+    { code: 'balance/water-missing', of: 'blend', name: 'slurry', waterKgPerKg: 0.05214 },
     '`slurry` makes too little water for all its alkali to end as hydroxide: 0.05214 kg of water per kg would have to come from outside.',
   ],
   [{ code: 'range/number', text: '1 / 0', why: 'division-by-zero' }, '`1 / 0` divides by zero, so it has no value.'],
@@ -390,14 +557,20 @@ describe('every code', () => {
     });
     expect(mild.sort()).toEqual([
       'information balance/water-missing',
+      'information balance/water-missing',
       'information kind/not-evaluated',
       'information kind/suspended',
       'information name/like-catalogue',
+      'information range/cold-charge',
       'information range/phase',
+      'information range/real-gas',
+      'information range/rich',
+      'information range/rich',
       'warning balance/contradiction',
       'warning balance/contradiction',
       'warning balance/no-data',
       'warning range/heating-value',
+      'warning range/rich',
       'warning range/temperature',
     ]);
   });

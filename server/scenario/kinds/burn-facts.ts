@@ -1,0 +1,258 @@
+// What is to be said of a burn: that it cannot be worked out and why, that it leans on values beyond their data, and where
+// what is written is hardly meant (cold air under pressure) or has a consequence that is easily missed (soot, no water).
+// Reads the charge, the flame and its zone alone, so that no cooled state is solved for it. Rounds and words nothing.
+
+import type { Burn, BurnFault, Charge } from '../../core/burn/burn.ts';
+import { carbonFate, shareOfForm } from '../../core/burn/fates.ts';
+import { amountOf, dryGasMol, productRows } from '../../core/burn/products.ts';
+import type { Equilibrium, NoEquilibrium } from '../../core/equilibrium/equilibrium.ts';
+import { knownUnit } from '../../core/quantity/convert.ts';
+import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
+import { alkaliMetals, atomicWeightKgPerMol } from '../../core/substance/elements.ts';
+import { waterSaturationPressurePa } from '../../core/substance/water-saturation.ts';
+import type { Span } from '../../../grammar/tree.ts';
+import type { Context } from '../context.ts';
+import type { WrittenBurn } from './burn-question.ts';
+
+/** Where in the text what belongs to which part of a burn is said. */
+export interface BurnPlaces {
+  readonly header: Span;
+  readonly fuel: Span;
+  readonly oxidant: Span;
+  readonly amount: Span;
+  readonly zone: Span;
+  readonly held: Span;
+  readonly heatLoss: Span;
+  /** Of what names the products, where it is written. */
+  readonly products: Span | null;
+}
+
+export interface BurnNames {
+  readonly burn: string;
+  readonly fuel: string;
+  readonly oxidant: string;
+}
+
+/** Says why a charge cannot be burnt. */
+export function reportFault(
+  fault: BurnFault,
+  written: WrittenBurn,
+  names: BurnNames,
+  places: BurnPlaces,
+  context: Context,
+): void {
+  const flame = `the flame of ${names.burn}`;
+  switch (fault.reason) {
+    case 'no-energy': {
+      const { missing } = written[fault.stream];
+      context.report(places[fault.stream], { code: 'balance/no-data', what: flame, missing });
+      return;
+    }
+    case 'no-heating-value': {
+      const missing = [`the lower heating value of ${names.fuel}`];
+      context.report(places.heatLoss, { code: 'balance/no-data', what: flame, missing });
+      return;
+    }
+    case 'nothing':
+      context.report(places.fuel, {
+        code: 'balance/no-data',
+        what: flame,
+        missing: [`the composition of ${names.fuel}`],
+      });
+      return;
+    case 'no-gas': {
+      const noGas = { kind: 'fault', reason: 'no-gas' } as const;
+      context.report(places.held, { code: 'balance/charge', fault: noGas, fuel: names.fuel, oxidant: names.oxidant });
+      return;
+    }
+    case 'zone-leaner':
+    case 'not-positive':
+    case 'no-valence':
+    case 'no-oxygen-needed':
+    case 'no-oxygen-offered': {
+      const isZone = fault.reason === 'zone-leaner' || (fault.reason === 'not-positive' && fault.of === 'zone');
+      const place = isZone ? places.zone : places.amount;
+      context.report(place, { code: 'balance/charge', fault, fuel: names.fuel, oxidant: names.oxidant });
+    }
+  }
+}
+
+/** Says why a state could not be had. */
+export function reportNone(
+  none: NoEquilibrium,
+  of: 'flame' | 'zone',
+  names: BurnNames,
+  places: BurnPlaces,
+  context: Context,
+): void {
+  const place = of === 'zone' ? places.zone : places.header;
+  switch (none.reason) {
+    case 'cannot-form':
+      context.report(places.products ?? place, { code: 'balance/no-equilibrium', name: names.burn, of, fault: none });
+      return;
+    case 'outside-tables':
+      context.report(place, { code: 'balance/no-equilibrium', name: names.burn, of, fault: none });
+      return;
+    case 'no-gas': {
+      const noGas = { reason: 'no-gas' } as const;
+      context.report(places.products ?? places.held, {
+        code: 'balance/no-equilibrium',
+        name: names.burn,
+        of,
+        fault: noGas,
+      });
+      return;
+    }
+    // The charge was checked before, and nobody stops a state that is solved here: it is our bug.
+    case 'nothing':
+    case 'not-finite':
+    case 'stopped':
+      context.report(place, { code: 'program/failed', message: `No equilibrium of ${names.burn}: ${none.reason}` });
+      return;
+    case 'not-converged':
+      context.report(place, { code: 'program/failed', message: `No equilibrium of ${names.burn}: ${none.detail}` });
+  }
+}
+
+/** Says what is doubtful, or easily missed, about a burn that could be solved. */
+export function reportStates(
+  burn: Burn,
+  flame: Equilibrium,
+  written: WrittenBurn,
+  names: BurnNames,
+  places: BurnPlaces,
+  context: Context,
+): void {
+  reportExtrapolated(flame, places.header, context);
+  reportRich('flame', burn.charge, flame, places.amount, context);
+  const zone = burn.zone();
+  if (zone?.kind === 'none') reportNone(zone, 'zone', names, places, context);
+  if (zone?.kind === 'equilibrium' && burn.zoneCharge) {
+    reportExtrapolated(zone, places.zone, context);
+    reportRich('zone', burn.zoneCharge, zone, places.zone, context);
+  }
+  reportMissingWater(burn.charge, names.burn, places.header, context);
+  reportColdCharge(written, places.oxidant, context);
+  reportRealGas(burn, flame, places.header, context);
+}
+
+/** A product below this share by mass may lean on anything: it moves no figure. */
+const leastOfNoteShare = 1e-3;
+
+function reportExtrapolated(state: Equilibrium, place: Span, context: Context): void {
+  const beyond = new Set(state.extrapolated);
+  const species = productRows(state, leastOfNoteShare).flatMap(({ phase, id }) => {
+    const range = beyond.has(phase) ? state.candidates.phases[phase]?.validK : undefined;
+    return range ? [{ name: id, range: [kelvin(range[0]), kelvin(range[1])] as const }] : [];
+  });
+  if (species.length === 0) return;
+  const temperature = kelvin(state.temperatureK);
+  context.report(place, { code: 'range/temperature', why: 'extrapolated', of: 'burn', temperature, species });
+}
+
+/**
+ * Carbon over oxygen from which on premixed flames soot, well before equilibrium has any carbon left: about 0.5 for most
+ * hydrocarbons. Source: Haynes and Wagner 1981, Prog. Energy Combust. Sci. 7, 229 (from memory).
+ */
+export const sootingCarbonPerOxygen = 0.5;
+
+function reportRich(of: 'flame' | 'zone', charge: Charge, state: Equilibrium, place: Span, context: Context): void {
+  const { lambda } = charge;
+  if (lambda === null || lambda >= 1) return;
+  const carbon = carbonFate(state);
+  const sootShare = carbon ? shareOfForm(carbon, 'soot') : 0;
+  const atoms = (symbol: string): number => charge.elementMol[charge.elements.indexOf(symbol)] ?? 0;
+  const carbonPerOxygen = atoms('O') > 0 ? atoms('C') / atoms('O') : null;
+  const isSooting = sootShare > 0 || (carbonPerOxygen !== null && carbonPerOxygen > sootingCarbonPerOxygen);
+  // A zone is meant to be rich; it is told of where that has a price.
+  if (of === 'zone' && !isSooting) return;
+  const dryMol = dryGasMol(state);
+  const shareOf = (id: string): number => (dryMol > 0 ? amountOf(state, id) / dryMol : 0);
+  context.report(place, {
+    code: 'range/rich',
+    of,
+    lambda,
+    carbonMonoxideShare: shareOf('CO(g)'),
+    hydrogenShare: shareOf('H2(g)'),
+    sootShare,
+    carbonPerOxygen,
+  });
+}
+
+/** Alkali that neither acids nor carbon bind, and that the whole charge has too little hydrogen to make hydroxide of. */
+function reportMissingWater({ elements, elementMol }: Charge, name: string, place: Span, context: Context): void {
+  const atoms = (symbol: string): number => elementMol[elements.indexOf(symbol)] ?? 0;
+  const alkali = alkaliMetals.reduce((sum, metal) => sum + atoms(metal), 0);
+  const unbound = alkali - atoms('Cl') - atoms('F') - 2 * atoms('S') - 2 * atoms('C');
+  const missingMol = (unbound - atoms('H')) / 2;
+  if (!(missingMol > leastMissingShare * alkali)) return;
+  const waterKgPerMol = 2 * (atomicWeightKgPerMol('H') ?? 0) + (atomicWeightKgPerMol('O') ?? 0);
+  const waterKgPerKg = missingMol * waterKgPerMol;
+  context.report(place, { code: 'balance/water-missing', of: 'burn', name, waterKgPerKg });
+}
+
+const leastMissingShare = 1e-6;
+
+/** From this pressure on, and up to this temperature, a gas that was not told to be compressed was forgotten so. */
+const coldPressurePa = 5e5;
+const coldTemperatureK = 333.15;
+
+function reportColdCharge({ oxidant, chargePressure, held }: WrittenBurn, place: Span, context: Context): void {
+  const pressure = held.held === 'pressure' ? held.pressure : chargePressure;
+  const { temperature } = oxidant;
+  const isAir = (oxidant.elements.get('N')?.value ?? 0) > 0 && oxidant.gasMolPerKg > 0;
+  if (!isAir || pressure.value < coldPressurePa || temperature.value > coldTemperatureK) return;
+  const compressedK = temperature.value * (pressure.value / 1e5) ** (1 - 1 / gammaOfAir);
+  context.report(place, { code: 'range/cold-charge', temperature, pressure, compressed: kelvin(compressedK) });
+}
+
+/** Of cold air. */
+const gammaOfAir = 1.4;
+
+/** Vapour from 5 bar on is told of where a cooled state lies within 30 K of its saturation, or below it. */
+const vapourPressurePa = 5e5;
+const nearSaturationK = 30;
+
+function reportRealGas(burn: Burn, flame: Equilibrium, place: Span, context: Context): void {
+  const { input, charge } = burn;
+  const held = input.coolingPressurePa ?? (input.held.held === 'pressure' ? input.held.pressurePa : null);
+  const share = vapourShareBurntOut(charge);
+  for (const temperatureK of input.cooledToK) {
+    const atPa = held ?? (flame.pressurePa * temperatureK) / flame.temperatureK;
+    const vapourPa = share * atPa;
+    const saturationK = vapourPa >= vapourPressurePa ? saturationTemperatureK(vapourPa) : null;
+    if (saturationK === null || temperatureK > saturationK + nearSaturationK) continue;
+    context.report(place, {
+      code: 'range/real-gas',
+      temperature: kelvin(temperatureK),
+      vapourPressure: quantityOf(vapourPa, knownUnit('Pa').dimension),
+      saturation: kelvin(saturationK),
+    });
+    return;
+  }
+}
+
+/** Water vapour in the cool gas, before it condenses: all hydrogen as water as far as oxygen reaches, carbon as dioxide. */
+function vapourShareBurntOut({ elements, elementMol }: Charge): number {
+  const atoms = (symbol: string): number => elementMol[elements.indexOf(symbol)] ?? 0;
+  const water = Math.min(atoms('H') / 2, atoms('O'));
+  const left = Math.max(0, atoms('O') - water - 2 * atoms('C')) / 2;
+  const gas = water + (atoms('H') / 2 - water) + atoms('C') + atoms('N') / 2 + atoms('Ar') + atoms('He') + left;
+  return gas > 0 ? water / gas : 0;
+}
+
+/** By bisection of the saturation pressure; null above the critical point. */
+function saturationTemperatureK(pressurePa: number): number | null {
+  let [low, high] = [273.16, 647.096];
+  if (pressurePa > (waterSaturationPressurePa(high) ?? 0)) return null;
+  while (high - low > 1e-3) {
+    const middle = (low + high) / 2;
+    if ((waterSaturationPressurePa(middle) ?? Infinity) < pressurePa) low = middle;
+    else high = middle;
+  }
+  return low;
+}
+
+function kelvin(valueK: number): Quantity {
+  return quantityOf(valueK, knownUnit('K').dimension, undefined, 'temperature');
+}

@@ -1,0 +1,102 @@
+// From the entries of a burn to what core is asked: the uncertain quantities in one list, and the question that any values
+// of them make. Knows no states. Invariant: everything uncertain that the burn rests on is in the list, so that correlations
+// (the same portion in elements, energy and heating value) are kept.
+
+import type { BurnInput, OxidantAmount } from '../../core/burn/burn.ts';
+import type { Formula } from '../../core/substance/formula.ts';
+import { compositionKey } from '../../core/substance/formula.ts';
+import type { ThermoPhase } from '../../core/substance/phases.ts';
+import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
+import { quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
+import type { AmountEntry, HeldEntry } from '../burn-readers.ts';
+
+/** How much oxidant, as it is written. */
+export type WrittenAmount = AmountEntry | { readonly by: 'mass'; readonly quantity: Quantity };
+
+/** A burn as it is written, with its streams. */
+export interface WrittenBurn {
+  readonly fuel: UncertainStream;
+  readonly oxidant: UncertainStream;
+  readonly amount: WrittenAmount;
+  readonly zone: WrittenAmount | null;
+  readonly held: HeldEntry;
+  /** Of the charge before it burns. */
+  readonly chargePressure: Quantity;
+  /** null: adiabatic. */
+  readonly temperature: Quantity | null;
+  /** Share of the lower heating value; null: none. */
+  readonly heatLoss: Quantity | null;
+  readonly lowerHeatingValue: Quantity | null;
+  readonly cooledTo: readonly Quantity[];
+  readonly coolingPressure: Quantity | null;
+  readonly frozenBelow: Quantity | null;
+  readonly exhaustTemperature: Quantity;
+  readonly allowed: readonly Formula[] | null;
+  readonly barred: readonly Formula[];
+  readonly ions: boolean;
+}
+
+/** The uncertain quantities, and the question their values make (in the same order). */
+export interface BurnQuestion {
+  readonly quantities: readonly Quantity[];
+  readonly input: (values: readonly number[]) => BurnInput;
+}
+
+/** The question a written burn asks. */
+export function questionOf(written: WrittenBurn): BurnQuestion {
+  const { fuel, oxidant, amount, zone, held, chargePressure, temperature, heatLoss, lowerHeatingValue } = written;
+  const unknown = quantityOf(NaN);
+  const [ofFuel, ofOxidant] = [quantitiesOf(fuel), quantitiesOf(oxidant)];
+  const scalars = [
+    amount.quantity,
+    zone?.quantity ?? unknown,
+    held.held === 'pressure' ? held.pressure : chargePressure,
+    temperature ?? unknown,
+    heatLoss ?? quantityOf(0),
+    lowerHeatingValue ?? unknown,
+  ];
+  const admits = admittance(written.allowed, written.barred);
+  return {
+    quantities: [...scalars, ...ofFuel, ...ofOxidant],
+    input(values) {
+      const [amountValue = NaN, zoneValue = NaN, pressurePa = NaN, temperatureK = NaN, lossShare = 0, heating = NaN] =
+        values;
+      const fuelValues = values.slice(scalars.length, scalars.length + ofFuel.length);
+      return {
+        fuel: streamNumbers(fuel, fuelValues),
+        oxidant: streamNumbers(oxidant, values.slice(scalars.length + ofFuel.length)),
+        amount: amountOf(amount.by, amountValue),
+        held:
+          held.held === 'pressure'
+            ? { held: 'pressure', pressurePa }
+            : { held: 'volume', chargePressurePa: pressurePa },
+        heat: temperature ? { heat: 'temperature', temperatureK } : { heat: 'adiabatic', lossShare },
+        lowerHeatingValueJPerKg: Number.isNaN(heating) ? null : heating,
+        cooledToK: written.cooledTo.map(({ value }) => value),
+        ...(zone ? { zone: amountOf(zone.by, zoneValue) } : {}),
+        ...(written.frozenBelow ? { frozenBelowK: written.frozenBelow.value } : {}),
+        ...(written.coolingPressure ? { coolingPressurePa: written.coolingPressure.value } : {}),
+        ...(admits ? { admits } : {}),
+        ...(written.ions ? { ions: true } : {}),
+      };
+    },
+  };
+}
+
+function amountOf(by: WrittenAmount['by'], value: number): OxidantAmount {
+  if (by === 'lambda') return { by, lambda: value };
+  return by === 'equivalence-ratio' ? { by, ratio: value } : { by, kgPerKg: value };
+}
+
+/** Which phases may form; null where all may. A formula without a phase stands for all its phases. */
+function admittance(
+  allowed: readonly Formula[] | null,
+  barred: readonly Formula[],
+): ((phase: ThermoPhase) => boolean) | null {
+  if (!allowed && barred.length === 0) return null;
+  const isOf = (formula: Formula, phase: ThermoPhase): boolean =>
+    compositionKey(formula) === compositionKey(phase.formula) &&
+    (formula.phase === undefined || formula.phase === phase.formula.phase);
+  return (phase) =>
+    (!allowed || allowed.some((formula) => isOf(formula, phase))) && !barred.some((formula) => isOf(formula, phase));
+}
