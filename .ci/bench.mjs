@@ -25,6 +25,8 @@ const benches = readdirSync(folder)
 
 // As the package has it.
 const server = await bundle('server/main.ts', 'server.cjs', { format: 'cjs', minify: true });
+await bundle('server/jobs/worker.ts', 'worker.cjs', { format: 'cjs', minify: true });
+const worker = await bundle('test/support/job-worker.ts', 'job-worker.cjs', { format: 'cjs', minify: true });
 
 const measurements = [];
 let failed = 0;
@@ -32,7 +34,7 @@ for (const name of benches) {
   const source = path.join(folder, name);
   const program = name.endsWith('.ts') ? await bundle(source, name.replace(/ts$/, 'mjs'), { format: 'esm' }) : source;
   const flags = isLong ? ['--long'] : [];
-  const { status, stdout } = spawnSync(process.execPath, [program, server, ...flags], {
+  const { status, stdout } = spawnSync(process.execPath, [program, server, worker, ...flags], {
     encoding: 'utf8',
     stdio: ['ignore', 'pipe', 'inherit'],
   });

@@ -2,7 +2,7 @@
 // they are told to stop, and ones that fail in each way there is. Invariant: the same table serves on the thread and in
 // the worker of job-worker.ts.
 import type { JobTable } from '../../server/jobs/job.ts';
-import { phaseOfId, propertiesOfPhase } from '../../server/core/substance/phases.ts';
+import { allPhases, phaseOfId, propertiesOfPhase } from '../../server/core/substance/phases.ts';
 
 interface Curve {
   readonly phase: string;
@@ -36,6 +36,10 @@ export function sumUpTo(last: number, shouldStop: () => boolean): number | null 
 export const jobTable = {
   gibbsEnergies,
   sumUpTo,
+  /** Reads all there is of property tables: how many phases have a Gibbs energy at a temperature. */
+  everyPhase(temperatureK: number): number | null {
+    return allPhases().filter((phase) => propertiesOfPhase(phase, temperatureK)).length;
+  },
   /** Goes on until it is told to stop. */
   endless(_input: undefined, shouldStop: () => boolean): string | null {
     while (!shouldStop());
