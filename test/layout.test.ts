@@ -19,7 +19,7 @@ interface HouseRule {
 }
 
 const OURS = '^(grammar|server|client|test|\\.ci)/';
-const SOLVERS = '^server/core/(balance|equilibrium|engine|hazard|account)/';
+const SOLVERS = '^server/core/(balance|burn|equilibrium|engine|hazard|account)/';
 
 const RULES: readonly HouseRule[] = [
   {
