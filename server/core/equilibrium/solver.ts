@@ -3,12 +3,11 @@
 // Knows no fuel. Invariant: an answer depends on the problem (and on `near`, where it is given) alone, never on what the
 // solver did before; nothing is returned without its certificate.
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import type { Check } from './answer.ts';
 import type { CandidateSet } from './candidates.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, Held, NoEquilibrium } from './equilibrium.ts';
-import type { Aim } from './newton.ts';
+import { aimOf, checkOf } from './held.ts';
 import { startCold, startNear } from './start.ts';
 import { atTemperatureAndPressure, atTemperatureAndVolume, byTemperature, descendAndCertify } from './sure-way.ts';
 import { admitPhases, ionsFromK, takeAmounts, workOf } from './work.ts';
@@ -107,40 +106,3 @@ function isFinite(elementMol: Float64Array, held: Held): boolean {
   }
   return true;
 }
-
-function aimOf(held: Held, scaleMol: number): Aim {
-  const isVolume = 'volumeM3' in held;
-  const perScale = 1 / (molarGasConstantJPerMolK * scaleMol);
-  const common = {
-    isVolume,
-    logPressure: 'pressurePa' in held ? Math.log(held.pressurePa / standardPressurePa) : 0,
-    gasKPerBar: 'volumeM3' in held ? held.volumeM3 * standardPressurePa * perScale : 0,
-  };
-  switch (held.held) {
-    case 'enthalpy-pressure':
-      return { ...common, seeks: 'energy', aimed: held.enthalpyJ * perScale };
-    case 'energy-volume':
-      return { ...common, seeks: 'energy', aimed: held.energyJ * perScale };
-    case 'entropy-pressure':
-    case 'entropy-volume':
-      return { ...common, seeks: 'entropy', aimed: held.entropyJPerK * perScale };
-    default:
-      return { ...common, seeks: 'temperature', aimed: 0 };
-  }
-}
-
-function checkOf(held: Held): Check {
-  switch (held.held) {
-    case 'enthalpy-pressure':
-      return { kind: 'enthalpy', value: held.enthalpyJ };
-    case 'energy-volume':
-      return { kind: 'energy', value: held.energyJ };
-    case 'entropy-pressure':
-    case 'entropy-volume':
-      return { kind: 'entropy', value: held.entropyJPerK };
-    default:
-      return { kind: 'none' };
-  }
-}
-
-const standardPressurePa = 1e5;

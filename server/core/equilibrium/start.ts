@@ -73,7 +73,7 @@ export function startNear(work: Work, aim: Aim, temperatureK: number | undefined
   for (let index = 0; index < condensedCount; index += 1) {
     const phase = at32(condensed, index);
     const amount = at(near.amountsMol, phase);
-    if (amount > 0 && work.presentCount < width) addPresent(work, phase, amount / scaleMol);
+    if (amount > 0 && work.presentCount <= width) addPresent(work, phase, amount / scaleMol);
   }
   work.gasAmount = near.gasMol / scaleMol;
   takeFractions(work, aim);
