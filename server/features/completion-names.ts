@@ -1,14 +1,16 @@
 // Offers what the scenario has names for: definitions, values, figures of definitions, and shares of portions, each with
 // what it comes to where that has been worked out. Works nothing out. Invariant: a number shown is one the evaluation
 // found for this very text; what could not be had is offered without one.
+import { inUnit, knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
+import { quantityOf } from '../core/quantity/quantity.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { parseFormula } from '../core/substance/formula.ts';
 import { givenFigureRows } from '../scenario/given-figures.ts';
 import { kinds } from '../scenario/kinds/registry.ts';
 import { materialFigures, type FigureRow } from '../scenario/material-figures.ts';
 import type { EvaluatedDefinition, EvaluatedScenario } from '../scenario/scenario.ts';
-import { formatPercent } from '../wording/numbers.ts';
+import { formatNumber, formatPercent } from '../wording/numbers.ts';
 import { figureText, quantityText } from '../wording/quantities.ts';
 import { unitOfValue } from '../wording/written-unit.ts';
 import { fits, type CompletionItem } from './completion-item.ts';
@@ -127,15 +129,37 @@ export function shareItems(scenario: EvaluatedScenario, typed: string, start: nu
     .map(({ label, detail }) => ({ label, role: 'share', detail, insert: label, start, rank: 60 }));
 }
 
-/** Rows of a definition's tables that have a column of these words: `sodium in slurry`, behind `mass share of`. */
+/**
+ * Rows of a definition's tables that have a column of these words: `sodium in slurry`, behind `mass share of`; where the
+ * rows hold at several temperatures, with theirs: `Na2CO3(l) in furnace at 900 degC`.
+ */
 export function rowItems(scenario: EvaluatedScenario, words: string, start: number): CompletionItem[] {
-  return definitionsOf(scenario).flatMap((definition) =>
-    definition.tables
+  return definitionsOf(scenario).flatMap((definition) => {
+    const labels = definition.tables
       .filter(({ columns }) => columns.some(({ id, unit }) => unit !== null && wordsOf(id) === words))
-      .flatMap(({ rows: cells }) => cells.flatMap(([first]) => (typeof first === 'string' ? [first] : [])))
-      .map((row) => `${isFormula(row) ? row : writtenName(row)} in ${writtenName(definition.name)}`)
-      .map((label) => ({ label, role: 'share', detail: definition.kind, insert: label, start, rank: 10 })),
-  );
+      .flatMap(({ columns, rows }) => {
+        const state = columns.findIndex(({ id }) => id === 'temperature');
+        return rows.flatMap(({ 0: first, [state]: at }) => {
+          if (typeof first !== 'string') return [];
+          const row = `${isFormula(first) ? first : writtenName(first)} in ${writtenName(definition.name)}`;
+          return [typeof at === 'number' ? `${row} at ${writtenTemperature(at)}` : row];
+        });
+      });
+    return [...new Set(labels)].map((label, index): CompletionItem => ({
+      label,
+      role: 'share',
+      detail: definition.kind,
+      insert: label,
+      start,
+      rank: 10 + index / 1000,
+    }));
+  });
+}
+
+/** As a person writes it, exactly: a state is asked for by its temperature. */
+function writtenTemperature(temperatureK: number): string {
+  const temperature = quantityOf(temperatureK, knownUnit('K').dimension, undefined, 'temperature');
+  return `${formatNumber(inUnit(temperature, 'degC'), 'plain', 8)} degC`;
 }
 
 /** What the figure of these words comes to for a definition, in words; null where it has none. */

@@ -51,7 +51,7 @@ export function valueOffers(
     ...(from === start ? [...shareItems(scenario, words, from, MOST_WRITTEN_OUT), ...functionItems(start)] : []),
   ];
   const materials = (form: 'names' | 'formulas'): CompletionItem[] => [
-    ...definitionItems(scenario, isMaterial, own, start),
+    ...definitionItems(scenario, ({ kind }) => taken.kinds.includes(kind), own, start),
     ...substanceItems(form, typed, start),
   ];
 
@@ -120,7 +120,16 @@ export function valueOffers(
 
 /** What the words of a place may be. `anything`: nobody reads it yet, so it may name any definition. */
 export function takenAt(where: ValueWhere): WordsTaken & { readonly anything: boolean } {
-  const nothing = { listed: [], materials: false, elements: false, formulas: false, numbers: true, anything: false };
+  const kinds = ['substance', 'blend'];
+  const nothing = {
+    listed: [],
+    materials: false,
+    kinds,
+    elements: false,
+    formulas: false,
+    numbers: true,
+    anything: false,
+  };
   if (where.kind !== 'entry') return { ...nothing, materials: where.kind === 'equation' };
   const row = entryRow(where.body.kind, where.entry);
   return row ? { ...wordsTaken(row.reader), anything: false } : { ...nothing, anything: true };

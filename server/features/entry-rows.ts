@@ -18,6 +18,8 @@ export interface WordsTaken {
   readonly listed: readonly string[];
   /** Substances and definitions. */
   readonly materials: boolean;
+  /** Kinds of those definitions. */
+  readonly kinds: readonly string[];
   readonly elements: boolean;
   readonly formulas: boolean;
   /** Names of values, figures and functions: anything that comes to a number. */
@@ -29,6 +31,7 @@ export function wordsTaken(reader: Reader<unknown>): WordsTaken {
   return {
     listed: reader.words ?? [],
     materials: reader.names ?? false,
+    kinds: reader.kinds ?? ['substance', 'blend'],
     elements,
     formulas: reader === formulaReader,
     numbers: reader.unit !== undefined && !elements,

@@ -5,11 +5,14 @@ import type { EvaluatedDefinition, Place } from '../scenario/scenario.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { capitalised, listed } from '../wording/words.ts';
 import { figureText } from '../wording/quantities.ts';
+import { burnLines } from './hover-burn.ts';
 import { balanceText } from './hover-equation.ts';
 import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
 import { leadingFigures } from './leading-figures.ts';
 
 const MOST_FIGURES = 6;
+/** A burn's products and fates take the other lines. */
+const MOST_BURN_FIGURES = 4;
 const MOST_ABSENT = 2;
 
 export function hoverDefinition(place: Place, definition: EvaluatedDefinition): HoverText {
@@ -17,10 +20,12 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
   const what = capitalised(`${definition.kind} ${definition.name}`.trim());
   const doc = shortened(definition.doc);
   const balance = balanceText(definition.tables.find(({ id }) => id === 'elements'));
-  const shown = others.slice(0, MOST_FIGURES);
+  const ofBurn = definition.kind === 'burn' ? burnLines(definition) : [];
+  const shown = others.slice(0, ofBurn.length > 0 ? MOST_BURN_FIGURES : MOST_FIGURES);
   const lines: HoverLine[] = [
     ...(balance === null ? [] : [{ sentence: balance }]),
     ...shown.map((figure) => ({ label: figure.label, text: figureText(figure) })),
+    ...ofBurn,
     ...slateLines(definition),
     ...absentLines(definition),
     ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),

@@ -17,6 +17,11 @@ export function leadingRank(id: string): number {
 
 const RANKS: ReadonlyMap<string, number> = new Map(
   [
+    'flame-temperature',
+    'condensed-share',
+    'flame-zone-temperature',
+    'burn-out-time',
+    'heat-above-exhaust',
     'enthalpy',
     'specific-enthalpy',
     'gibbs-energy',

@@ -172,6 +172,16 @@ describe('in an expression', () => {
     ],
     ['`of` an unknown figure', `${SLURRY}expect nonsense of $0\n`, { lacks: ['slurry', 'methanol'] }],
     ['definitions that are not worked out', 'engine b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
+    [
+      'products at the temperatures they are told at, and in the flame',
+      'burn b {\n  fuel: sodium\n  oxidant: steam\n  oxidant per fuel: 2 kg/kg\n  cooled to: 350 degC\n}\nexpect mass share of $0\n',
+      { has: ['H2(g) in b', 'H2(g) in b at 350 degC'] },
+    ],
+    [
+      'oxidants and substances, not blends',
+      `${SLURRY}oxidant intake {\n  100 % air\n}\nburn b {\n  oxidant: $0\n}\n`,
+      { first: ['intake'], has: ['air'], lacks: ['slurry'] },
+    ],
     ['rows of a table', `${SLURRY}expect mass share of $0\n`, { has: ['sodium in slurry'] }],
     [
       'blends behind `in`',
