@@ -4,6 +4,7 @@
 // long as mutations.test.ts, with a fresh seed that is printed and can be given back as FUZZ_SEED.
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
+import { editBetween } from '../support/edit-between.ts';
 import { fuzzRun, workedMs } from '../support/fuzz-run.ts';
 import {
   HOUSE,
@@ -184,24 +185,4 @@ function positionAt(text: string, offset: number): { line: number; character: nu
   const beyond = Math.round(offset - text.length);
   if (beyond > 0) return { line: before.length - 1 + (beyond % 7), character: beyond };
   return { line: before.length - 1, character: offset < 0 ? Math.round(offset) : (before.at(-1)?.length ?? 0) };
-}
-
-/** The one stretch that differs, as a change by range. */
-function editBetween(before: string, after: string): unknown {
-  const shorter = Math.min(before.length, after.length);
-  let head = 0;
-  while (head < shorter && before[head] === after[head]) head++;
-  let tail = 0;
-  while (tail < shorter - head && before.at(-1 - tail) === after.at(-1 - tail)) tail++;
-  // Between a carriage return and its newline there is no position.
-  while (head > 0 && /[\r\n]/.test(before[head - 1] ?? '')) head--;
-  while (tail > 0 && /[\r\n]/.test(before.at(-tail) ?? '')) tail--;
-  const range = { start: linePosition(before, head), end: linePosition(before, before.length - tail) };
-  return { range, text: after.slice(head, after.length - tail) };
-}
-
-/** As the protocol counts lines: they end with CR LF, LF or CR. */
-function linePosition(text: string, offset: number): { line: number; character: number } {
-  const before = text.slice(0, offset).split(/\r\n|\n|\r/);
-  return { line: before.length - 1, character: before.at(-1)?.length ?? 0 };
 }

@@ -3,6 +3,7 @@
 // test, not by the clock.
 import { HoverRequest } from 'vscode-languageserver/node';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { TEMPO } from '../../server/lsp/stepping.ts';
 import { ProtocolClient } from '../support/protocol-client.ts';
 
 const MAIN = 'file:///ships/main.stoke';
@@ -27,7 +28,7 @@ beforeEach(async () => {
   client = ProtocolClient.inProcess({
     files: new Map(),
     folders: ['file:///ships'],
-    host: { tempo: { sliceMs: 0, quickAfterMs: 0, now: () => clockMs++, turn } },
+    host: { tempo: { ...TEMPO, sliceMs: 0, quickAfterMs: 0, now: () => clockMs++, turn } },
   });
   await client.initialize();
 });

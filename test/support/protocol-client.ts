@@ -25,6 +25,7 @@ import {
   type PublishDiagnosticsParams,
 } from 'vscode-languageserver/node';
 import { readFileRequest, startServer, type Host } from '../../server/lsp/connection.ts';
+import { editBetween } from './edit-between.ts';
 
 export const FULL_CAPABILITIES: ClientCapabilities = {
   general: { positionEncodings: ['utf-16'] },
@@ -165,6 +166,16 @@ export class ProtocolClient {
       contentChanges: [{ text }],
     });
     return version;
+  }
+
+  /** Types what differs between the two texts, as one edit of a range. */
+  async edit(uri: string, before: string, after: string): Promise<void> {
+    const version = (this.#versions.get(uri) ?? 0) + 1;
+    this.#versions.set(uri, version);
+    await this.connection.sendNotification(DidChangeTextDocumentNotification.type, {
+      textDocument: { uri, version },
+      contentChanges: [editBetween(before, after)],
+    });
   }
 
   async close(uri: string): Promise<void> {
