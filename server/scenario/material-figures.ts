@@ -19,8 +19,7 @@ import {
 } from '../core/balance/stoichiometry.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { dimensionless } from '../core/quantity/dimension.ts';
-import { noParts } from '../core/quantity/parts.ts';
-import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
+import { quantityOf, quantityOfOutcome, type Quantity } from '../core/quantity/quantity.ts';
 import { propagate } from '../core/quantity/uncertainty.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../core/substance/elements.ts';
 import { molarMassKgPerMol } from '../core/substance/formula.ts';
@@ -162,7 +161,7 @@ function workOut(material: Material): MaterialAnswer {
     if (!isExpected(row.id, material)) continue;
     const outcome = outcomes[index];
     if (outcome && Number.isFinite(outcome.value)) {
-      const quantity = quantityOf(outcome.value, knownUnit(row.unit).dimension, outcome.parts ?? noParts);
+      const quantity = quantityOfOutcome(outcome, knownUnit(row.unit).dimension);
       const { id, label, unit, method } = row;
       const figure: Figure = { id, label, quantity, unit, working: unreadWorking(method) };
       figures.push(lazily(figure, { working: () => workingOf(row, material, burningOf(id, heats)) }));

@@ -58,3 +58,6 @@ export interface PortionShare {
   readonly mole: Quantity | null;
   readonly volume: Quantity | null;
 }
+
+/** In so many blends in blends in blends the parts of uncertainty may stand unread: reading one reads those below it. */
+export const deepestUnread = 32;

@@ -7,11 +7,10 @@ import { massSharesOf, sharesOn, type MixtureFault, type MixturePart } from '../
 import { mixProperties, type PartProperties } from '../core/balance/mixture-properties.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { dimensionless } from '../core/quantity/dimension.ts';
-import { noParts } from '../core/quantity/parts.ts';
-import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
+import { quantityOf, quantityOfOutcome, type Quantity } from '../core/quantity/quantity.ts';
 import { propagate, type Propagated } from '../core/quantity/uncertainty.ts';
 import type { Context } from './context.ts';
-import type { Material, PortionShare } from './material.ts';
+import { deepestUnread, type Material, type PortionShare } from './material.ts';
 import { materialNamed } from './materials.ts';
 import { readAmount, reportMixtureFault, type WrittenAmount } from './portions.ts';
 
@@ -146,10 +145,11 @@ function mixedOf(
       ...parts.flatMap((_, index) => [massShares[index] ?? 0, mole?.[index] ?? NaN, volume?.[index] ?? NaN]),
     ];
   });
+  // Parts rest on the parts of the portions, so that reading those of a long chain of blends would go as deep as it is long.
+  const depth = 1 + Math.max(0, ...parts.map(({ material }) => depthOf(material)));
+  if (depth % deepestUnread === 0) for (const outcome of outcomes) void outcome.parts;
   const known = (outcome: Propagated | undefined, unit: string): Quantity | null =>
-    outcome && Number.isFinite(outcome.value)
-      ? quantityOf(outcome.value, knownUnit(unit).dimension, outcome.parts ?? noParts)
-      : null;
+    outcome && Number.isFinite(outcome.value) ? quantityOfOutcome(outcome, knownUnit(unit).dimension) : null;
   const [enthalpy, molarMass, density, biogenic, ...others] = outcomes;
   const elementOutcomes = others.slice(0, symbols.length);
   const shareOutcomes = others.slice(symbols.length);
@@ -176,6 +176,19 @@ function mixedOf(
     shares,
   };
 }
+
+/** How many blends stand in each other in a material; asked of its portions before it is asked of the material. */
+function depthOf(material: Material): number {
+  const known = depths.get(material);
+  if (known !== undefined) return known;
+  const depth = material.portions
+    ? 1 + Math.max(0, ...material.portions.map((portion) => depthOf(portion.material)))
+    : 0;
+  depths.set(material, depth);
+  return depth;
+}
+
+const depths = new WeakMap<Material, number>();
 
 /** Mole shares of the species of all parts together; null where the molecules of one are not known. */
 function speciesOf(parts: readonly Part[], shares: readonly PortionShare[]): Material['species'] {

@@ -3,8 +3,9 @@
 // solution, depression of freezing and gelling are not seen. Knows no syntax.
 
 import { knownUnit } from '../core/quantity/convert.ts';
-import { add, isFault, multiply, quantityOf, type Quantity } from '../core/quantity/quantity.ts';
-import type { Material, PortionShare } from './material.ts';
+import { quantityOf, quantityOfOutcome, type Quantity } from '../core/quantity/quantity.ts';
+import { propagate } from '../core/quantity/uncertainty.ts';
+import { deepestUnread, type Material, type PortionShare } from './material.ts';
 import type { PortionState, StoredPhase } from './portion-state.ts';
 
 export interface StoredAt {
@@ -40,23 +41,26 @@ export function portionStates(
 }
 
 /** The share of the volume that is solid; null where a volume is missing. A blend in the blend counts by its own portions. */
-export function solidsVolumeShare(portions: readonly PortionShare[], temperature: Quantity): Quantity | null {
-  let total: Quantity = quantityOf(0);
+export function solidsVolumeShare(
+  portions: readonly PortionShare[],
+  temperature: Quantity,
+  depth = 1,
+): Quantity | null {
+  const inputs: Quantity[] = [];
   for (const { material, volume } of portions) {
     if (!volume) return null;
     const own = material.portions
-      ? solidsVolumeShare(material.portions, temperature)
-      : solidFraction(material, temperature);
-    const solid = own && multiply(volume, own);
-    const sum = solid && !isFault(solid) ? add(total, solid) : null;
-    if (!sum || isFault(sum)) return null;
-    total = sum;
+      ? solidsVolumeShare(material.portions, temperature, depth + 1)
+      : quantityOf(phaseAt(material, temperature) === 'solid' ? 1 : 0);
+    if (!own) return null;
+    inputs.push(volume, own);
   }
-  return total;
-}
-
-function solidFraction(material: Material, temperature: Quantity): Quantity {
-  return quantityOf(phaseAt(material, temperature) === 'solid' ? 1 : 0);
+  const [total] = propagate(inputs, (values) => [
+    portions.reduce((sum, _, index) => sum + (values[2 * index] ?? NaN) * (values[2 * index + 1] ?? NaN), 0),
+  ]);
+  // As in mixing: parts are not left unread in a long chain.
+  if (total && depth % deepestUnread === 0) void total.parts;
+  return total && Number.isFinite(total.value) ? quantityOfOutcome(total) : null;
 }
 
 /** The phase of one material at a temperature in K and a pressure in Pa; null for a mixture or a solution. */

@@ -20,6 +20,7 @@ import { combineParts, noParts, standardUncertaintyOf } from './parts.ts';
 import type { Parts } from './parts.ts';
 import { stepToSi, toSi, unitOne } from './read-unit.ts';
 import type { Unit } from './read-unit.ts';
+import type { Propagated } from './uncertainty.ts';
 
 export type { Parts } from './parts.ts';
 
@@ -129,6 +130,19 @@ export function quantityOf(
   kind: QuantityKind = sameDimension(dimension, temperatureDimension) ? 'temperature-difference' : 'plain',
 ): Quantity {
   return { value, dimension, kind, parts };
+}
+
+/** An outcome of `propagate` as a quantity; no parts where they could not be had. They are worked out when first read. */
+export function quantityOfOutcome(outcome: Propagated, dimension: Dimension = dimensionless): Quantity {
+  const { value, kind } = quantityOf(outcome.value, dimension);
+  return {
+    value,
+    dimension,
+    kind,
+    get parts() {
+      return outcome.parts ?? noParts;
+    },
+  };
 }
 
 /** The standard uncertainty of a quantity in SI base units; 0 when no input has one. */

@@ -1,7 +1,9 @@
 // Carries uncertainty through any numerical function by the law of propagation, to first order and with correlations.
 // Each independent input is moved by plus and minus its standard uncertainty, all the values that depend on it together,
 // and half the change of the outcome is that input's part. It knows nothing of what the function computes.
-// Invariant: exact for linear functions; the function is called 1 + 2n times for n inputs with uncertainty.
+// Most outcomes are looked at for their value alone, so the parts are worked out when somebody first reads one of them.
+// Invariant: exact for linear functions; the function is called once at the values, and 2n times more for n inputs with
+// uncertainty when parts are read. It must be pure.
 // Source: JCGM 100:2008 (GUM), sections 5.1.2 and 5.1.3 note 2.
 
 import { noParts } from './parts.ts';
@@ -29,10 +31,25 @@ export function propagate(
   inputs: readonly Uncertain[],
   f: (values: readonly number[]) => readonly number[],
 ): readonly Propagated[] {
-  const values = inputs.map(({ value }) => value);
-  const centre = f(values);
-  const roots = new Set(inputs.flatMap(({ parts }) => [...parts.keys()]));
-  if (roots.size === 0) return centre.map((value) => ({ value, parts: noParts }));
+  const centre = f(inputs.map(({ value }) => value));
+  let known: readonly (Parts | undefined)[] | undefined;
+  const partsOf = (index: number): Parts | undefined => (known ??= partsOfOutcomes(inputs, f, centre))[index];
+  return centre.map((value, index) => ({
+    value,
+    get parts() {
+      return partsOf(index);
+    },
+  }));
+}
+
+function partsOfOutcomes(
+  inputs: readonly Uncertain[],
+  f: (values: readonly number[]) => readonly number[],
+  centre: readonly number[],
+): readonly (Parts | undefined)[] {
+  const roots = new Set<string>();
+  for (const input of inputs) for (const root of input.parts.keys()) roots.add(root);
+  if (roots.size === 0) return centre.map(() => noParts);
 
   const parts: (Map<string, number> | undefined)[] = centre.map(() => new Map());
   for (const root of roots) {
@@ -44,7 +61,7 @@ export function propagate(
       else if (part !== 0) parts[index]?.set(root, part);
     }
   }
-  return centre.map((value, index) => ({ value, parts: parts[index] }));
+  return parts;
 }
 
 function halfChange(above: number, centre: number, below: number): number | undefined {

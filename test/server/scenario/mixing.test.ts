@@ -42,3 +42,19 @@ describe('shares without a rest keep their uncertainty, however large', () => {
     expect(share && standardUncertainty(share)).toBeGreaterThan(0.009);
   });
 });
+
+test('uncertainty goes through a long chain of blends, whenever it is asked for', () => {
+  const chain = Array.from(
+    { length: 100 },
+    (_, index) => `blend step_${index + 1} {\n  98 % mass  step_${index}\n  rest       water\n}`,
+  );
+  const scenario = checkFacts(`
+      substance step_0 {
+        phase: liquid
+        composition: 85 % C, 15 % H
+        lower heating value: 42 ± 0.5 MJ/kg
+      }
+      ${chain.join('\n')}
+    `);
+  expect(uncertaintyOf(scenario, 'step_100', 'lower-heating-value')).toBeCloseTo(0.5 * 0.98 ** 100, 10);
+});

@@ -54,13 +54,16 @@ describe('propagate', () => {
     expect(outcome?.parts?.size).toBe(0);
   });
 
-  test('calls the function once without uncertainty, and twice more for each root input', () => {
+  test('calls the function once, and once parts are read twice more for each root input', () => {
     const count = (inputs: readonly Uncertain[]): number => {
       let calls = 0;
-      propagate(inputs, (values) => {
+      const outcomes = propagate(inputs, (values) => {
         calls += 1;
         return values;
       });
+      expect(outcomes.map(({ value }) => value)).toEqual(inputs.map(({ value }) => value));
+      expect(calls).toBe(1);
+      for (const { parts } of [...outcomes, ...outcomes]) expect(parts).toBeDefined();
       return calls;
     };
     expect(count([certain(1), certain(2)])).toBe(1);
