@@ -20,6 +20,7 @@ import type {
   FrozenState,
   NoState,
 } from './burn.ts';
+import { heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
 import { chargeOf } from './charge.ts';
 import { coolingPath } from './cooling-path.ts';
 import { frozenState } from './frozen-state.ts';
@@ -38,15 +39,8 @@ export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn 
 
   const whole = new Matter(charge, input, shouldStop);
   const zone = zoneCharge && new Matter(zoneCharge, input, shouldStop);
-  const lossJ = input.heat.heat === 'adiabatic' ? input.heat.lossShare * (input.lowerHeatingValueJPerKg ?? 0) : 0;
 
-  const flame = once((): Equilibrium | NoState => {
-    const held =
-      input.heat.heat === 'temperature'
-        ? heldAt(input, charge, input.heat.temperatureK)
-        : heldAdiabatic(input, charge, lossJ);
-    return whole.solveHot(held);
-  });
+  const flame = once((): Equilibrium | NoState => whole.solveHot(heldByFlame(input, charge)));
   const zoneState = once((): Equilibrium | NoState | null =>
     zone === undefined || zoneCharge === undefined || zoneCharge.enthalpyJ === null
       ? null
@@ -163,31 +157,6 @@ function faultOf(input: BurnInput, charge: Charge, zone: Charge | undefined): Bu
   }
   const hasLoss = input.heat.lossShare !== 0;
   return hasLoss && input.lowerHeatingValueJPerKg === null ? { kind: 'fault', reason: 'no-heating-value' } : undefined;
-}
-
-/** The whole energy stays in but for the loss. Volume: energy is enthalpy less the pressure-volume of the charge's gases. */
-function heldAdiabatic({ held }: BurnInput, charge: Charge, lossJ: number): Held {
-  const enthalpyJ = (charge.enthalpyJ ?? Number.NaN) - lossJ;
-  return held.held === 'pressure'
-    ? { held: 'enthalpy-pressure', enthalpyJ, pressurePa: held.pressurePa }
-    : { held: 'energy-volume', energyJ: enthalpyJ - charge.pressureVolumeJ, volumeM3: charge.volumeM3 };
-}
-
-function heldAt({ held }: BurnInput, charge: Charge, temperatureK: number): Held {
-  return held.held === 'pressure'
-    ? { held: 'temperature-pressure', temperatureK, pressurePa: held.pressurePa }
-    : { held: 'temperature-volume', temperatureK, volumeM3: charge.volumeM3 };
-}
-
-function heldCooling(
-  input: BurnInput,
-  charge: Charge,
-  temperatureK: number,
-): Extract<Held, { readonly temperatureK: number }> {
-  const pressurePa = input.coolingPressurePa ?? (input.held.held === 'pressure' ? input.held.pressurePa : undefined);
-  return pressurePa === undefined
-    ? { held: 'temperature-volume', temperatureK, volumeM3: charge.volumeM3 }
-    : { held: 'temperature-pressure', temperatureK, pressurePa };
 }
 
 /** By enthalpies, as heating values are, also where the volume was held: the two differ by the work of the gas alone. */

@@ -1,10 +1,11 @@
 // Derivatives of a charge against differences of charges.
 
 import { describe, expect, test } from 'vitest';
-import type { BurnInput, BurnStream, Charge, OxidantAmount } from '../../../../server/core/burn/burn.ts';
+import type { BurnInput, Charge, OxidantAmount } from '../../../../server/core/burn/burn.ts';
 import { chargeDirection } from '../../../../server/core/burn/charge-directions.ts';
 import type { BurnParameter } from '../../../../server/core/burn/charge-directions.ts';
 import { chargeOf } from '../../../../server/core/burn/charge.ts';
+import { shiftedInput } from './shifted-input.ts';
 import { burn, mixed, plainAir, stream } from './streams.ts';
 
 const fuel = mixed([0.3, stream('sodium')], [0.5, stream('methane')], [0.2, stream('methanol')]);
@@ -13,31 +14,6 @@ const amounts: readonly OxidantAmount[] = [
   { by: 'equivalence-ratio', ratio: 0.7 },
   { by: 'mass', kgPerKg: 15 },
 ];
-
-function withElement(from: BurnStream, symbol: string, step: number): BurnStream {
-  const elements = new Map(from.elementMolPerKg);
-  elements.set(symbol, (elements.get(symbol) ?? 0) + step);
-  return { ...from, elementMolPerKg: elements };
-}
-
-function shifted(input: BurnInput, parameter: BurnParameter, step: number): BurnInput {
-  switch (parameter.of) {
-    case 'enthalpy': {
-      const from = input[parameter.stream];
-      return { ...input, [parameter.stream]: { ...from, enthalpyJPerKg: (from.enthalpyJPerKg ?? 0) + step } };
-    }
-    case 'element':
-      return { ...input, [parameter.stream]: withElement(input[parameter.stream], parameter.symbol, step) };
-    case 'amount': {
-      const { amount } = input;
-      if (amount.by === 'lambda') return { ...input, amount: { by: 'lambda', lambda: amount.lambda + step } };
-      if (amount.by === 'mass') return { ...input, amount: { by: 'mass', kgPerKg: amount.kgPerKg + step } };
-      return { ...input, amount: { by: 'equivalence-ratio', ratio: amount.ratio + step } };
-    }
-    default:
-      return input;
-  }
-}
 
 function charge(input: BurnInput): Charge {
   const found = chargeOf(input.fuel, input.oxidant, input.amount, input.held);
@@ -62,8 +38,8 @@ describe.each(amounts)('oxidant by $by', (amount) => {
 
   test.each(parameters)('%j', (parameter, step) => {
     const direction = chargeDirection(input, here, parameter);
-    const up = charge(shifted(input, parameter, step));
-    const down = charge(shifted(input, parameter, -step));
+    const up = charge(shiftedInput(input, parameter, step));
+    const down = charge(shiftedInput(input, parameter, -step));
     if (direction === null) throw new Error();
     const slope = (of: (charge: Charge) => number): number => (of(up) - of(down)) / (2 * step);
     const pairs: [number, number][] = [

@@ -1,0 +1,42 @@
+// Which two properties each state of a burn holds, and at which values.
+// Knows no states. Invariant: one place says so, for the states themselves and for how they move.
+
+import type { Held } from '../equilibrium/equilibrium.ts';
+import type { BurnInput, Charge } from './burn.ts';
+
+/** J taken out of the whole charge. */
+export function lossOf({ heat, lowerHeatingValueJPerKg }: BurnInput): number {
+  return heat.heat === 'adiabatic' ? heat.lossShare * (lowerHeatingValueJPerKg ?? 0) : 0;
+}
+
+/** What the whole charge holds as it burns. */
+export function heldByFlame(input: BurnInput, charge: Charge): Held {
+  return input.heat.heat === 'temperature'
+    ? heldAt(input, charge, input.heat.temperatureK)
+    : heldAdiabatic(input, charge, lossOf(input));
+}
+
+/** The whole energy stays in but for the loss. Volume: energy is enthalpy less the pressure-volume of the charge's gases. */
+export function heldAdiabatic({ held }: BurnInput, charge: Charge, lossJ: number): Held {
+  const enthalpyJ = (charge.enthalpyJ ?? Number.NaN) - lossJ;
+  return held.held === 'pressure'
+    ? { held: 'enthalpy-pressure', enthalpyJ, pressurePa: held.pressurePa }
+    : { held: 'energy-volume', energyJ: enthalpyJ - charge.pressureVolumeJ, volumeM3: charge.volumeM3 };
+}
+
+function heldAt({ held }: BurnInput, charge: Charge, temperatureK: number): Held {
+  return held.held === 'pressure'
+    ? { held: 'temperature-pressure', temperatureK, pressurePa: held.pressurePa }
+    : { held: 'temperature-volume', temperatureK, volumeM3: charge.volumeM3 };
+}
+
+export function heldCooling(
+  input: BurnInput,
+  charge: Charge,
+  temperatureK: number,
+): Extract<Held, { readonly temperatureK: number }> {
+  const pressurePa = input.coolingPressurePa ?? (input.held.held === 'pressure' ? input.held.pressurePa : undefined);
+  return pressurePa === undefined
+    ? { held: 'temperature-volume', temperatureK, volumeM3: charge.volumeM3 }
+    : { held: 'temperature-pressure', temperatureK, pressurePa };
+}
