@@ -72,13 +72,21 @@ export function saltsAtTemperature(temperatureK: number): SaltsAtTemperature {
       [gibbsJ('Na2CO3(cr)', 2), gibbsJ('Na2SO4(cr,I)', 2)],
       [gibbsJ('K2CO3(cr)', 2), gibbsJ('K2SO4(cr,beta)', 2)],
     ],
-    crystals: pureCrystals.map(([id, potassium, anion]) => ({
-      phase: 'crystal',
-      potassium,
-      anions: saltAnions.map((_, index) => (index === anion ? 1 : 0)),
-      gibbsJ: gibbsJ(id, anionCharge[anion] ?? 1),
-    })),
+    crystals: pureCrystals
+      .filter(([id]) => isStable(id, temperatureK))
+      .map(([id, potassium, anion]) => ({
+        phase: 'crystal',
+        potassium,
+        anions: saltAnions.map((_, index) => (index === anion ? 1 : 0)),
+        gibbsJ: gibbsJ(id, anionCharge[anion] ?? 1),
+      })),
   };
+}
+
+/** Low forms count where they are the stable ones: their tables run on for hundreds of kelvin, and cross back. */
+function isStable(id: string, temperatureK: number): boolean {
+  const ranges = phaseOfId(id)?.stableK ?? [];
+  return ranges.some(([fromK, toK]) => fromK <= temperatureK && temperatureK <= toK);
 }
 
 /** The melt where it lies lowest: at each share of potassium the best anions in closed form, then the best such share. */

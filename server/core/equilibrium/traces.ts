@@ -8,6 +8,10 @@ import type { Aim } from './newton.ts';
 import type { Work } from './work.ts';
 
 const mostSweeps = 12;
+/** Basis phases with more than this share of the gas are plentiful: Newton's steps serve them. */
+const mostOfTrace = 0.05;
+/** A change of a potential below this is left to Newton's step. */
+const leastChange = 0.7;
 
 /**
  * A balance whose basis phase the vertex leaves (nearly) empty decides itself between traces, over many powers of ten: what its
@@ -15,7 +19,7 @@ const mostSweeps = 12;
  */
 export function balanceTraces(work: Work, aim: Aim): void {
   const { rank, amounts, gases, gasCount, nu, width, fraction, potential } = work;
-  const limit = 1e-4 * work.gasAmount;
+  const limit = mostOfTrace * work.gasAmount;
   let hasTraces = false;
   for (let k = 0; k < rank; k += 1) hasTraces ||= at(amounts, k) < limit;
   if (!hasTraces) return;
@@ -45,11 +49,12 @@ export function balanceTraces(work: Work, aim: Aim): void {
       const slope = madeSlope / made + takenSlope / taken;
       if (!(slope > 0)) continue;
       const change = Math.min(60, Math.max(-60, Math.log(taken / made) / slope));
+      if (Math.abs(change) < leastChange) continue;
       potential[k] = at(potential, k) + change;
       largest = Math.max(largest, Math.abs(change));
-      if (Math.abs(change) > 1e-3) takeFractions(work, aim);
+      takeFractions(work, aim);
     }
-    if (largest < 0.5) return;
+    if (largest === 0) return;
   }
 }
 
