@@ -53,7 +53,9 @@ function compare(
   );
   here.candidates.phases.forEach((_, phase) => {
     const found = slope((state) => state.amountsMol[phase] ?? 0);
-    expect(Math.abs((movement.amountsMol[phase] ?? 0) - found)).toBeLessThanOrEqual(2e-4 * Math.abs(found) + 1e-6 * largest);
+    expect(Math.abs((movement.amountsMol[phase] ?? 0) - found)).toBeLessThanOrEqual(
+      2e-4 * Math.abs(found) + 1e-6 * largest,
+    );
   });
   const water = here.candidates.phases.findIndex(({ id }) => id === 'H2O(g)');
   const wet = slope((state) => (state.amountsMol[water] ?? 0) / state.gasMol);
