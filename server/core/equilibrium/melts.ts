@@ -11,7 +11,7 @@
 import { molarMassKgPerMol, type Formula } from '../substance/formula.ts';
 import eutectics from './data/salt-eutectics.json';
 import { moltenMassShare, type SaltMixture } from './salt-equilibrium.ts';
-import { anionCharge, saltAnions } from './salt-solutions.ts';
+import { saltAnions } from './salt-solutions.ts';
 
 /** Share of melt by mass from which particles stick, and from which a deposit runs off by itself. */
 export const stickyMeltShare = 0.15;
@@ -56,9 +56,11 @@ interface Eutectic {
   readonly provenance: 'seen' | 'from memory';
 }
 
-/** Cation, anion and equivalents a mole of each salt that is known here, by the formula's atoms. */
-const salts: Readonly<Record<string, readonly [cation: Ion, anion: Ion, equivalents: number]>> = Object.fromEntries(
-  (['Na', 'K', 'Li'] as const).flatMap((cation) => [
+type Salt = readonly [cation: Ion, anion: Ion, equivalents: number];
+
+/** Cation, anion and equivalents a mole of each salt that is known here, by its formula as it is written. */
+const salts: ReadonlyMap<string, Salt> = new Map(
+  (['Na', 'K', 'Li'] as const).flatMap((cation): readonly (readonly [string, Salt])[] => [
     [`${cation}Cl`, [cation, 'Cl', 1]],
     [`${cation}OH`, [cation, 'OH', 1]],
     [`${cation}2CO3`, [cation, 'CO3', 2]],
@@ -114,7 +116,7 @@ function ionShares(condensed: readonly CondensedAmount[]): {
   for (const { formula, mol } of condensed) {
     const massKg = mol * (molarMassKgPerMol(formula) ?? 0);
     allKg += massKg;
-    const salt = salts[formula.text];
+    const salt = salts.get(formula.text);
     if (!salt || !(mol > 0)) continue;
     const [cation, anion, perMole] = salt;
     for (const ion of [cation, anion]) equivalents.set(ion, (equivalents.get(ion) ?? 0) + mol * perMole);
@@ -174,5 +176,10 @@ function lowestPublished(
 
 const published = (eutectics as readonly unknown[] as readonly Eutectic[]).map((eutectic) => ({
   eutectic,
-  ions: new Set(eutectic.salts.flatMap((salt) => salts[salt]?.slice(0, 2) as Ion[])),
+  ions: new Set(eutectic.salts.flatMap((text) => ionsOf(text))),
 }));
+
+function ionsOf(text: string): readonly Ion[] {
+  const [cation, anion] = salts.get(text) ?? [];
+  return cation && anion ? [cation, anion] : [];
+}
