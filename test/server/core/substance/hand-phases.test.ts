@@ -11,7 +11,8 @@ import { handPhaseRecords, handPhaseSources, phaseFits } from '../../../../serve
 import { phaseOfId, propertiesOfPhase } from '../../../../server/core/substance/phases.ts';
 import { sourceRecords } from '../../../../server/core/substance/records.ts';
 import { sourceRecordSchema } from '../../../../server/core/substance/schema.ts';
-import measured from '../../../reference/calcite.json' with { type: 'json' };
+import dissociation from '../../../reference/calcite-dissociation.json' with { type: 'json' };
+import heatCapacities from '../../../reference/calcite-heat-capacities.json' with { type: 'json' };
 
 const reference = 298.15;
 
@@ -78,8 +79,8 @@ describe('every record', () => {
   });
 });
 
-describe(`calcite against ${measured.heatCapacity.source}`, () => {
-  const { rows, sharePercent } = measured.heatCapacity;
+describe(`calcite against ${heatCapacities.source}`, () => {
+  const { rows, sharePercent } = heatCapacities;
   test.each(rows)('heat capacity at $temperatureK K', ({ temperatureK, jPerMolK }) => {
     const values = propertiesOfPhase(phaseOf('CaCO3(cr,calcite)'), temperatureK);
     const share = (values?.heatCapacityJPerMolK ?? Number.NaN) / jPerMolK - 1;
@@ -88,7 +89,7 @@ describe(`calcite against ${measured.heatCapacity.source}`, () => {
 });
 
 describe('dissociation pressures', () => {
-  test.each(measured.dissociation.rows)('calcite at $temperatureK K: $source', ({ temperatureK, bar, factor }) => {
+  test.each(dissociation.rows)('calcite at $temperatureK K: $source', ({ temperatureK, bar, factor }) => {
     const gibbs = (id: string): number => propertiesOfPhase(phaseOf(id), temperatureK)?.gibbsJPerMol ?? Number.NaN;
     const change = gibbs('CaO(cr)') + gibbs('CO2(g)') - gibbs('CaCO3(cr,calcite)');
     const ratio = Math.exp(-change / (8.31446261815324 * temperatureK)) / bar;
