@@ -7,8 +7,9 @@
 
 import { fillGibbs } from '../substance/property-set.ts';
 import type { Equilibrium } from '../equilibrium/equilibrium.ts';
+import { mayBePresent } from '../equilibrium/work.ts';
 import { eventPrecisionK } from './burn.ts';
-import type { NoState, PathEvent } from './burn.ts';
+import type { MatterState, NoState, PathEvent } from './burn.ts';
 
 /** A state at a temperature in K, `near` being one to start from. */
 export type StateAt = (temperatureK: number, near: Equilibrium) => Equilibrium | NoState;
@@ -22,25 +23,37 @@ export interface CooledPoint {
   readonly affinities: Float64Array;
 }
 
+/**
+ * Condensed phases of a state by rising index. Less than this of one is rounding: where two phases hold an element that
+ * hardly counts (sodium carbonate beside salt and a surplus of lithium), which of them has the last 1e-26 mol is chance.
+ */
+export function condensedPhases({ candidates, amountsMol, massKg }: MatterState): readonly number[] {
+  const present: number[] = [];
+  for (let phase = candidates.gasCount; phase < amountsMol.length; phase += 1) {
+    if ((amountsMol[phase] ?? 0) > negligibleMolPerKg * massKg) present.push(phase);
+  }
+  return present;
+}
+
+const negligibleMolPerKg = 1e-12;
+
 /** Reads a state. */
 export function cooledPoint(state: Equilibrium): CooledPoint {
-  const { candidates, amountsMol, potentials, temperatureK } = state;
+  const { candidates, potentials, temperatureK } = state;
   const { phases, gasCount, elements, atoms } = candidates;
   const gibbs = new Float64Array(phases.length);
   fillGibbs(candidates.properties, temperatureK, gibbs);
-  const present: number[] = [];
   const affinities = new Float64Array(phases.length - gasCount);
   for (let phase = gasCount; phase < phases.length; phase += 1) {
-    if ((amountsMol[phase] ?? 0) > 0) present.push(phase);
     let affinity = -(gibbs[phase] ?? 0);
     elements.forEach((_, element) => {
       const count = atoms[phase * elements.length + element] ?? 0;
       if (count !== 0) affinity += count * (potentials[element] ?? 0);
     });
     // Past its real end a crystal may not form, however low its extrapolated energy.
-    affinities[phase - gasCount] = temperatureK > (candidates.endK[phase] ?? Infinity) ? -Infinity : affinity;
+    affinities[phase - gasCount] = mayBePresent(candidates, phase, temperatureK) ? affinity : -Infinity;
   }
-  return { state, present, affinities };
+  return { state, present: condensedPhases(state), affinities };
 }
 
 /** Events between two points, the upper first, in falling temperature; `complete` is false where a state could not be had. */

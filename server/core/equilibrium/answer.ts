@@ -12,6 +12,7 @@ import { solveDense } from './dense.ts';
 import type { Certificate, Equilibrium, Pinned } from './equilibrium.ts';
 import { assemble } from './newton.ts';
 import type { Aim } from './newton.ts';
+import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
 /** The limits of a certificate. */
@@ -277,7 +278,7 @@ export function answerOf(
       heat += amount * at(enthalpy, phase);
       frozen += amount * at(capacity, phase);
       entropy += amount * (at(enthalpy, phase) - at(gibbs, phase) - (isGas ? logFraction + logPressure : 0));
-    } else if (!isGas && temperatureK <= at(set.endK, phase)) {
+    } else if (!isGas && mayBePresent(set, phase, temperatureK)) {
       largestAffinity = Math.max(largestAffinity, residual);
     }
   }

@@ -3,6 +3,7 @@
 // Knows no amounts and no state. Invariant: every phase consists of the set's elements only, and none is there twice.
 // Data: every phase of the library but those left out of searches.
 
+import { compositionKey } from '../substance/formula.ts';
 import { candidatePhases } from '../substance/phases.ts';
 import type { ThermoPhase } from '../substance/phases.ts';
 import { preparePropertySet } from '../substance/property-set.ts';
@@ -19,7 +20,8 @@ export interface CandidateSet {
   /** Atoms of all elements in one formula unit; 1 for the electron. */
   readonly atomCount: Float64Array;
   readonly molarMassKgPerMol: Float64Array;
-  /** Ends of each condensed phase: outside them it may not be present (the real end of a crystal); infinite where none. */
+  /** Temperatures between which each phase may be present; infinite where nothing ends it (see `rangeK`). */
+  readonly startK: Float64Array;
   readonly endK: Float64Array;
   /** The last row is the charge. */
   readonly hasCharge: boolean;
@@ -66,8 +68,27 @@ export function candidateSet(elements: readonly string[], options: CandidateOpti
       return count || 1;
     }),
     molarMassKgPerMol: Float64Array.from(phases, (phase) => phase.molarMassKgPerMol),
-    endK: Float64Array.from(phases, (phase) => phase.endK),
+    startK: Float64Array.from(phases, (phase) => rangeK(phase, phases)[0]),
+    endK: Float64Array.from(phases, (phase) => rangeK(phase, phases)[1]),
     hasCharge: ions,
     properties: preparePropertySet(phases.map((phase) => phase.curve)),
   };
+}
+
+/**
+ * Where a phase may be present. A crystal ends at its real end, where the data name one. Beyond the ends of its table a condensed
+ * phase gives way to another of its composition that has data there: a crystal's heat capacity carried on far past its melting
+ * point would make it stable again. Where no other has data, it is carried on, and the answer says so.
+ */
+function rangeK(phase: ThermoPhase, phases: readonly ThermoPhase[]): readonly [startK: number, endK: number] {
+  if (phase.formula.phase === 'g') return [-Infinity, Infinity];
+  const [fromK, toK] = phase.validK;
+  const key = compositionKey(phase.formula);
+  const others = phases.filter(
+    (other) => other !== phase && other.formula.phase !== 'g' && compositionKey(other.formula) === key,
+  );
+  return [
+    others.some(({ validK }) => validK[0] < fromK && validK[1] >= fromK) ? fromK : -Infinity,
+    Math.min(phase.endK, others.some(({ validK }) => validK[1] > toK && validK[0] <= toK) ? toK : Infinity),
+  ];
 }

@@ -7,6 +7,7 @@ import { affinityOf, takeFractions, takeStep } from './newton.ts';
 import type { Aim, Step } from './newton.ts';
 import { balanceTraces } from './traces.ts';
 import { takeBasis } from './vertex.ts';
+import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
 export type Rest = 'rest' | 'lost';
@@ -129,7 +130,7 @@ function welcome(work: Work, aim: Aim): boolean {
   let largest = 0;
   for (let index = 0; index < work.condensedCount; index += 1) {
     const phase = at32(work.condensed, index);
-    if (work.temperatureK > at(work.set.endK, phase)) continue;
+    if (!mayBePresent(work.set, phase, work.temperatureK)) continue;
     const affinity = affinityOf(work, phase);
     if (affinity <= affinityLimit) continue;
     const perAtom = affinity / at(work.set.atomCount, phase);
@@ -145,10 +146,10 @@ function welcome(work: Work, aim: Aim): boolean {
   return true;
 }
 
-/** A crystal that is present past its end leaves. */
+/** A phase that is present past its ends leaves. */
 function dismissBeyondEnd(work: Work): boolean {
   for (let index = 0; index < work.presentCount; index += 1) {
-    if (work.temperatureK <= at(work.set.endK, at32(work.present, index))) continue;
+    if (mayBePresent(work.set, at32(work.present, index), work.temperatureK)) continue;
     removePresent(work, index);
     return true;
   }

@@ -52,7 +52,7 @@ function solve(
   const descent: Descent = { steps: 0, step: { change: 0, taken: 0, gasChange: 0 } };
   const attempt = (hasIons: boolean): Equilibrium | NoEquilibrium => {
     // With temperature unknown a crystal may still be there below its end.
-    admitPhases(work, temperatureK ?? 0, hasIons);
+    admitPhases(work, temperatureK, hasIons);
     if (near === undefined || near.candidates !== work.set || !startNear(work, aim, temperatureK, near)) {
       const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
       if (blamed !== undefined) return cannotForm(work, blamed);

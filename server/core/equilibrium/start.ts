@@ -9,6 +9,7 @@ import type { Aim } from './newton.ts';
 import type { Equilibrium } from './equilibrium.ts';
 import { balanceTraces } from './traces.ts';
 import { findVertex, takeBasis } from './vertex.ts';
+import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
 const firstTemperatureK = 1500;
@@ -83,7 +84,7 @@ export function startNear(work: Work, aim: Aim, temperatureK: number | undefined
 function vertexAt(work: Work, aim: Aim, temperatureK: number): readonly number[] | undefined {
   takeTemperature(work, aim, temperatureK);
   const { set, cost } = work;
-  // A crystal past its end is not taken; ions only where nothing neutral can hold a balance, since a vertex that leaves both
+  // A phase past its ends is not taken; ions only where nothing neutral can hold a balance, since a vertex that leaves both
   // empty must choose, and ions are the rarer traces.
   if (set.hasCharge) {
     for (let index = 0; index < work.gasCount; index += 1) {
@@ -93,7 +94,7 @@ function vertexAt(work: Work, aim: Aim, temperatureK: number): readonly number[]
   }
   for (let index = 0; index < work.condensedCount; index += 1) {
     const phase = at32(work.condensed, index);
-    if (temperatureK > at(set.endK, phase)) cost[phase] = at(cost, phase) + 1e3;
+    if (!mayBePresent(set, phase, temperatureK)) cost[phase] = at(cost, phase) + 1e3;
   }
   const blamed = findVertex(work);
   takePressure(work, aim.isVolume ? 0 : aim.logPressure);

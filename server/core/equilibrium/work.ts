@@ -109,6 +109,11 @@ export function takeAmounts(work: Work, elementMol: Float64Array): boolean {
   return true;
 }
 
+/** Whether a phase is inside its ends at a temperature. */
+export function mayBePresent(set: CandidateSet, phase: number, temperatureK: number): boolean {
+  return temperatureK <= at(set.endK, phase) && temperatureK >= at(set.startK, phase);
+}
+
 /**
  * Below this temperature ions are left out also where they are asked for: the most easily ionised vapour, of potassium, has some
  * 1e-9 of itself ionised there.
@@ -116,10 +121,14 @@ export function takeAmounts(work: Work, elementMol: Float64Array): boolean {
 export const ionsFromK = 1000;
 
 /**
- * Lists the phases that may take part: no absent element, condensed ones inside their ends at the temperature, ions from the
- * temperature at which any could matter.
+ * Lists the phases that may take part: no absent element, condensed ones inside their ends at the temperature (all where it is
+ * unknown), ions from the temperature at which any could matter.
  */
-export function admitPhases(work: Work, temperatureK: number, hasIons = temperatureK >= ionsFromK): void {
+export function admitPhases(
+  work: Work,
+  temperatureK: number | undefined,
+  hasIons = (temperatureK ?? 0) >= ionsFromK,
+): void {
   const { set, width, given } = work;
   work.gasCount = 0;
   work.condensedCount = 0;
@@ -131,7 +140,8 @@ export function admitPhases(work: Work, temperatureK: number, hasIons = temperat
     }
     if (!isIn || (!hasIons && chargeRow >= 0 && at(set.atoms, phase * width + chargeRow) !== 0)) continue;
     if (phase < set.gasCount) work.gases[work.gasCount++] = phase;
-    else if (temperatureK <= at(set.endK, phase)) work.condensed[work.condensedCount++] = phase;
+    else if (temperatureK === undefined || mayBePresent(set, phase, temperatureK))
+      work.condensed[work.condensedCount++] = phase;
   }
 }
 
