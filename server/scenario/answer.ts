@@ -33,7 +33,8 @@ export type Answerable = Definition | LetStatement | ExpectStatement;
 export function answerStatement(section: Section, statement: Answerable, scope: Scope): Answer {
   const placed: PlacedSection = { start: 0, end: section.text.length, section };
   const owner = statement.kind === 'expect' ? '' : (statement.name?.text ?? '');
-  const context = new Context('', placed, owner, scope);
+  const { lent, takeBack } = lend(scope);
+  const context = new Context('', placed, owner, lent);
   let named: Named | null = null;
   let expectation: Expectation | null = null;
   if (statement.kind === 'expect') {
@@ -44,8 +45,32 @@ export function answerStatement(section: Section, statement: Answerable, scope: 
       statement.kind === 'let' ? answerLet(statement, owner, context) : answerDefinition(statement, placed, context),
     );
   }
+  takeBack();
   const { facts, meanings, innerPlaces } = context;
   return { section, named, expectation, facts, meanings, innerPlaces };
+}
+
+/**
+ * A scope for as long as a statement is worked out. What is put off until somebody reads it must look up no name, since the
+ * answer would not be known by that; and it must not keep alive all that was worked out beside it.
+ */
+function lend(scope: Scope): { readonly lent: Scope; readonly takeBack: () => void } {
+  let whole: Scope | null = scope;
+  const open = (): Scope => {
+    if (!whole) throw new Error('a name was looked up after its statement was answered');
+    return whole;
+  };
+  const lent: Scope = {
+    lookup: (name) => open().lookup(name),
+    names: () => open().names(),
+    longWork: (work, key, input) => open().longWork(work, key, input),
+  };
+  return {
+    lent,
+    takeBack: () => {
+      whole = null;
+    },
+  };
 }
 
 function answerLet(statement: LetStatement, name: string, context: Context): Named {
