@@ -38,7 +38,7 @@ export function parse(text: string, isUnit: IsUnit, options: ParseOptions = {}):
   const largestText = options.largestText ?? LARGEST_TEXT;
   const isTooLarge = text.length > largestText;
   const sections = isTooLarge
-    ? parseCuts(text, seenCuts(text, options.visible ?? [{ start: 0, end: largestText }]), options.previous, isUnit)
+    ? parseCuts(text, seenCuts(text, largestText, options.visible), options.previous, isUnit)
     : parseWhole(text, options.previous, isUnit);
   const problemCount = sections.reduce((count, { section }) => count + section.problems.length, 0);
   const megabytes = String(largestText / 1_000_000);
@@ -74,8 +74,12 @@ function parseWhole(text: string, previous: SyntaxTree | undefined, isUnit: IsUn
   return sections;
 }
 
-function seenCuts(text: string, seen: readonly Span[]): readonly Cut[] {
-  return cut(text).filter(({ start, end }) => seen.some((window) => start < window.end && window.start < end));
+/** The sections that are seen of a text that is too large. One that is too large by itself is not read at all. */
+function seenCuts(text: string, largestText: number, visible: readonly Span[] | undefined): readonly Cut[] {
+  const seen = visible ?? [{ start: 0, end: largestText }];
+  return cut(text).filter(
+    ({ start, end }) => end - start <= largestText && seen.some((window) => start < window.end && window.start < end),
+  );
 }
 
 /** The sections at some cuts, each taken from the previous ones where that has its text. */
