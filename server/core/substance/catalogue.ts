@@ -7,6 +7,7 @@ import { compositionKey, parseFormula } from './formula.ts';
 import type { Formula, Phase } from './formula.ts';
 import { substancesOfRecord } from './from-record.ts';
 import type { RecordContext } from './from-record.ts';
+import { hazardRecordOf, hazardSourceRecords } from './hazard-records.ts';
 import type { SourceRecord, SubstanceRecord } from './record.ts';
 import { sourceRecords, substanceRecords } from './records.ts';
 import type { Substance } from './substance.ts';
@@ -158,13 +159,14 @@ function indexOfCompositions(): ReadonlyMap<string, readonly SubstanceRecord[]> 
 /** Mixtures are made of other records, which are looked up by formula; a mixture has none, so this ends. */
 const context: RecordContext = {
   sourceOf: (id) => {
-    sources ??= new Map(sourceRecords.map((source) => [source.id, source]));
+    sources ??= new Map([...sourceRecords, ...hazardSourceRecords].map((source) => [source.id, source]));
     return sources.get(id) ?? unknownSource(id);
   },
   gasOf: (formulaText) => {
     const formula = parseFormula(formulaText, 'g');
     return formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
   },
+  hazardsOf: hazardRecordOf,
 };
 
 /** Names are compared in lower case with `_` between words, so that a quoted `sodium oleate` meets `sodium_oleate`. */

@@ -6,6 +6,8 @@ import { heatCapacityAt } from './at-temperature.ts';
 import { molPerKgOfFormula, molPerKgOfMassShares } from './composition.ts';
 import { molarMassKgPerMol, parseFormula } from './formula.ts';
 import type { Formula } from './formula.ts';
+import type { HazardRecord } from './hazard-record.ts';
+import { hazardsOfRecord } from './hazards-from-record.ts';
 import type {
   DensityRecord,
   PhaseRecord,
@@ -17,10 +19,11 @@ import type {
 import { referenceTemperatureK } from './substance.ts';
 import type { Datum, Density, Energy, HeatCapacity, RuleValues, Substance } from './substance.ts';
 
-/** What the records refer to: sources by id, and a gas by its formula for mixtures. */
+/** What the records refer to: sources by id, a gas by its formula for mixtures, and the hazards kept beside them. */
 export interface RecordContext {
   readonly sourceOf: (id: string) => SourceRecord;
   readonly gasOf: (formulaText: string) => Substance | undefined;
+  readonly hazardsOf: (name: string) => HazardRecord | undefined;
 }
 
 /** The substances of a record, the stable phase first. Empty when the record's composition cannot be read. */
@@ -99,6 +102,7 @@ function substanceOfPhase(
   });
   const { formula, molarMassKgPerMol: molarMass } = matter;
   const heatCapacity = heatCapacityOfPhase(phaseRecord, molarMass, context);
+  const hazards = context.hazardsOf(record.name);
   return {
     name: record.name,
     label: record.name.replaceAll('_', ' '),
@@ -114,6 +118,7 @@ function substanceOfPhase(
     ...(density === undefined ? {} : { density: densityOf(density, datum) }),
     ...(heatCapacity === undefined ? {} : { heatCapacity, heatCapacityJPerKgK: heatCapacityAtReference(heatCapacity) }),
     ...ofTheSubstance(record, datum),
+    ...(hazards === undefined ? {} : { hazards: hazardsOfRecord(hazards, context.sourceOf) }),
     carbonBiogenicShare: record.carbonBiogenicShare ?? 0,
     ...(record.compositionSource === undefined
       ? {}

@@ -7,7 +7,6 @@
 // has the same numbers, names, classes and packing groups).
 
 import type { SourceRecord } from './record.ts';
-import type { Datum } from './substance.ts';
 
 /**
  * What a substance is when it meets another; a rule names families, never substances. A substance may be in several:
@@ -105,7 +104,7 @@ export const extinguishingAgents = [
 export type ExtinguishingAgent = (typeof extinguishingAgents)[number];
 
 /** Who publishes an exposure limit. */
-export const limitAuthorities = ['NIOSH', 'OSHA', 'ACGIH', 'EU', 'UK HSE'] as const;
+export const limitAuthorities = ['NIOSH', 'OSHA', 'ACGIH', 'EU', 'UK HSE', 'Ontario'] as const;
 export type LimitAuthority = (typeof limitAuthorities)[number];
 
 /** `eight-hour` is a working day's mean; that of NIOSH holds for up to ten hours. */
@@ -158,7 +157,8 @@ export interface Pyrophoric {
 export interface LimitingOxygen {
   readonly inert: 'nitrogen' | 'carbon-dioxide';
   /** mol O2 per mol of mixture. */
-  readonly moleFraction: Datum;
+  readonly moleFraction: number;
+  readonly source: SourceRecord;
 }
 
 /** A concentration in the air of a workplace; a gas has a mole fraction, a dust or mist a mass concentration. */

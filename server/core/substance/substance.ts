@@ -3,6 +3,7 @@
 // Invariant: `molPerKg` describes one kilogram whole, so its masses add up to 1 kg within the rounding of the composition.
 
 import type { Formula, Phase } from './formula.ts';
+import type { Hazards } from './hazards.ts';
 import type { CarbonOrigin, SourceRecord } from './record.ts';
 
 /** A number with its origin; `uncertainty` is a standard uncertainty in the unit of `value`. */
@@ -97,6 +98,8 @@ export interface Substance {
   readonly flashPointCup?: 'closed' | 'open';
   readonly autoignitionK?: Datum;
   readonly flammableLimits?: FlammableLimits;
+  /** Of the substance in all its phases; absent: nothing is recorded, which does not make it harmless. */
+  readonly hazards?: Hazards;
   /** The usual one; absent where there is no carbon or nobody burns or releases it. */
   readonly carbonOrigin?: CarbonOrigin;
   /** Share of the carbon of biogenic origin, 0 to 1. */
