@@ -54,8 +54,10 @@ export async function answer({ run, load }) {
     };
   });
   const sets = mixtures.map(({ elements, temperatureK }) => {
-    const { phases, gasCount, atoms, endK } = candidateSet(elements);
-    const indices = phases.map((_, index) => index).filter((index) => temperatureK < endK[index]);
+    const { phases, gasCount, atoms, startK, endK } = candidateSet(elements);
+    const indices = phases
+      .map((_, index) => index)
+      .filter((index) => temperatureK >= startK[index] && temperatureK < endK[index]);
     return {
       ids: indices.map((index) => phases[index].id),
       gasCount,

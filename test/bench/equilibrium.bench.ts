@@ -120,8 +120,10 @@ function compareWithScipy(): void {
       print({ name: 'the same by SciPy', value: NaN, unit: 'x', note: 'install python3-scipy to compare' });
       continue;
     }
-    const { phases, gasCount, atoms, endK, elements } = each.solver.candidates;
-    const present = [...phases.keys()].filter((index) => temperatureK < (endK[index] ?? NaN));
+    const { phases, gasCount, atoms, startK, endK, elements } = each.solver.candidates;
+    const present = [...phases.keys()].filter(
+      (index) => temperatureK >= (startK[index] ?? NaN) && temperatureK < (endK[index] ?? NaN),
+    );
     const whole = each.elementMol.reduce((sum, mol) => sum + mol, 0);
     const problem = {
       elementMol: Array.from(each.elementMol, (mol) => mol / whole),

@@ -8,6 +8,7 @@
 
 import type { Equilibrium, Held } from '../../server/core/equilibrium/equilibrium.ts';
 import { charge } from '../../server/core/equilibrium/candidates.ts';
+import { ionsFromK } from '../../server/core/equilibrium/work.ts';
 import { gasConstantJPerMolK } from '../../server/core/substance/heat-capacity-terms.ts';
 import { evaluateCurve, pieceAt } from '../../server/core/substance/phase-curve.ts';
 import { propertiesOfPhase } from '../../server/core/substance/phases.ts';
@@ -68,6 +69,8 @@ export function prove(elementMol: Float64Array, held: Held, answer: Equilibrium)
   const { elements, phases, gasCount, atoms } = candidates;
   const width = elements.length;
   const faults: string[] = [];
+  /** Signs of the ions that have no potential. */
+  const leftOut = new Set<number>();
   const atomsMol = elementMol.reduce((sum, mol, e) => sum + (elements[e] === charge ? 0 : mol), 0);
   const rt = gasConstantJPerMolK * temperatureK;
 
@@ -82,16 +85,19 @@ export function prove(elementMol: Float64Array, held: Held, answer: Equilibrium)
     const mol = amountsMol[index] ?? NaN;
     if (!(mol >= 0)) faults.push(`amount of ${phase.id} is ${mol}`);
     let worth = 0;
-    let isPossible = true;
+    const lacking = new Set<string>();
     for (let e = 0; e < width; e += 1) {
       const count = atoms[index * width + e] ?? NaN;
       if (count === 0) continue;
-      if (elementMol[e] === 0 && elements[e] !== charge) isPossible = false;
+      // Without a potential of the charge there are no ions: allowed where it is too cold for any to matter.
+      const isMissing = elements[e] === charge ? Number.isNaN(potentials[e]) : elementMol[e] === 0;
+      if (isMissing) lacking.add(elements[e] ?? '');
       worth += count * (potentials[e] ?? NaN);
       found[e] = (found[e] ?? NaN) + count * mol;
     }
-    if (!isPossible) {
-      if (mol !== 0) faults.push(`${phase.id} is present without its elements`);
+    if (lacking.size > 0) {
+      if (mol !== 0) faults.push(`${phase.id} is present without ${[...lacking].join(' ')}`);
+      if (lacking.size === 1 && lacking.has(charge)) leftOut.add(Math.sign(phase.formula.charge));
       return;
     }
     const properties = propertiesOfPhase(phase, temperatureK);
@@ -110,11 +116,12 @@ export function prove(elementMol: Float64Array, held: Held, answer: Equilibrium)
       }
     } else {
       if (!Number.isNaN(logFractions[index] ?? 0)) faults.push(`${phase.id} has a fraction of the gas`);
-      const endK = candidates.endK[index] ?? NaN;
+      const [startK, endK] = [candidates.startK[index] ?? NaN, candidates.endK[index] ?? NaN];
       if (mol > 0) {
         residual = Math.max(residual, Math.abs(worth - standard));
-        if (temperatureK > endK * (1 + 1e-12)) faults.push(`${phase.id} is present past its end at ${endK} K`);
-      } else if (temperatureK < endK) affinity = Math.max(affinity, worth - standard);
+        const isOut = temperatureK > endK * (1 + 1e-12) || temperatureK < startK * (1 - 1e-12);
+        if (isOut) faults.push(`${phase.id} is present outside ${startK} to ${endK} K`);
+      } else if (temperatureK > startK && temperatureK < endK) affinity = Math.max(affinity, worth - standard);
     }
     if (mol === 0) return;
     const logActivity = isGas ? (logFractions[index] ?? NaN) + logPressure : 0;
@@ -127,6 +134,8 @@ export function prove(elementMol: Float64Array, held: Held, answer: Equilibrium)
     massKg += mol * phase.molarMassKgPerMol;
     if (isGas) gasMassKg += mol * phase.molarMassKgPerMol;
   });
+
+  if (leftOut.size === 2 && temperatureK >= ionsFromK) faults.push('ions are left out');
 
   let [balance, netCharge, bound, boundScale] = [0, 0, 0, 0];
   elements.forEach((element, e) => {
