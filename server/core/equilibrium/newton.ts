@@ -284,9 +284,10 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
 
 /** The least amount among the basis phases: of gases in the present state, of condensed ones what their balance holds. */
 function leastBasisAmount(work: Work): number {
-  const { rank, basis, set, fraction, gasAmount, fractionSum, amounts } = work;
+  const { rank, basis, set, fraction, gasAmount, fractionSum, amounts, isForced } = work;
   let least = Infinity;
   for (let k = 0; k < rank; k += 1) {
+    if (isForced[k] === 1) continue;
     const phase = at32(basis, k);
     const isGas = phase < set.gasCount;
     const amount = isGas ? (at(fraction, phase) * gasAmount) / fractionSum : Math.abs(at(amounts, k));

@@ -8,7 +8,7 @@ import { takeFractions, takePressure, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
 import type { Equilibrium } from './equilibrium.ts';
 import { balanceTraces } from './traces.ts';
-import { findVertex, takeBasis } from './vertex.ts';
+import { findVertex, markForced, takeBasis } from './vertex.ts';
 import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
@@ -140,7 +140,8 @@ function temperatureOfVertex(work: Work, aim: Aim, fromK: number): number {
 
 /** Potentials and amounts from the vertex. */
 function mixVertex(work: Work, aim: Aim): void {
-  const { rank, basis, amounts, set, cost, potential } = work;
+  const { rank, basis, amounts, set, cost, potential, isForced } = work;
+  markForced(work);
   let gasAmount = 0;
   for (let k = 0; k < rank; k += 1) if (at32(basis, k) < set.gasCount) gasAmount += Math.max(0, at(amounts, k));
   work.presentCount = 0;
@@ -152,8 +153,11 @@ function mixVertex(work: Work, aim: Aim): void {
     const amount = at(amounts, k);
     potential[k] = at(cost, phase);
     if (phase >= set.gasCount) {
-      if (amount > 0) addPresent(work, phase, amount);
-    } else if (inGas > 0) {
+      // Also an empty one: with it the balances are independent, and it leaves if it comes out below nothing.
+      if (isForced[k] === 1) potential[k] = at(potential, k) - forcedDown;
+      else addPresent(work, phase, Math.max(0, amount));
+    } else if (isForced[k] === 1) potential[k] = at(potential, k) - forcedDown;
+    else if (inGas > 0) {
       const fraction = Math.max(amount, traceOfVertex * Math.max(gasAmount, 1e-30)) / inGas;
       potential[k] = at(potential, k) + Math.log(fraction);
     } else potential[k] = at(potential, k) + Math.log(traceOfVertex);
@@ -162,6 +166,8 @@ function mixVertex(work: Work, aim: Aim): void {
   if (work.gasAmount > 0) balanceTraces(work, aim);
 }
 
+/** How far below equilibrium a phase that cannot be there is put, over RT. */
+const forcedDown = 250;
 /** What an empty balance's basis phase starts with, as a share of the gas. */
 const traceOfVertex = 1e-9;
 

@@ -18,7 +18,7 @@ const leastChange = 0.7;
  * gases make of it is set equal to what they take, logarithmically, one balance at a time.
  */
 export function balanceTraces(work: Work, aim: Aim): void {
-  const { rank, amounts, gases, gasCount, nu, width, fraction, potential } = work;
+  const { rank, amounts, isForced, gases, gasCount, nu, width, fraction, potential } = work;
   const limit = mostOfTrace * work.gasAmount;
   let hasTraces = false;
   for (let k = 0; k < rank; k += 1) hasTraces ||= at(amounts, k) < limit;
@@ -27,7 +27,7 @@ export function balanceTraces(work: Work, aim: Aim): void {
   for (let sweep = 0; sweep < mostSweeps; sweep += 1) {
     let largest = 0;
     for (let k = 0; k < rank; k += 1) {
-      if (at(amounts, k) >= limit) continue;
+      if (at(amounts, k) >= limit || isForced[k] === 1) continue;
       let made = Math.max(0, -at(amounts, k));
       let taken = Math.max(0, at(amounts, k));
       let madeSlope = 0;

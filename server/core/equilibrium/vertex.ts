@@ -72,6 +72,19 @@ function start(work: Work): void {
     rank += 1;
   }
   work.rank = rank;
+  work.isForced.fill(0);
+}
+
+/** Marks the empty balances that every phase could only add to. */
+export function markForced(work: Work): void {
+  const { rank, width, nu, amounts, isForced } = work;
+  isForced.fill(0);
+  for (let k = 0; k < rank; k += 1) {
+    if (at(amounts, k) !== 0) continue;
+    let isOneSided = true;
+    forEachPhase(work, (phase) => (isOneSided &&= at(nu, phase * width + k) >= 0));
+    if (isOneSided) isForced[k] = 1;
+  }
 }
 
 function descend(work: Work): void {
@@ -172,7 +185,7 @@ function pivot(work: Work, entering: number, row: number): void {
   for (let k = 0; k < rank; k += 1) {
     const left = at(amounts, k) - moved * at(spare, k);
     // What is left of a difference of equals is nothing.
-    amounts[k] = Math.abs(left) <= 4e-16 * Math.abs(at(amounts, k)) ? 0 : left;
+    amounts[k] = Math.abs(left) <= 4e-15 * Math.abs(at(amounts, k)) ? 0 : left;
   }
   amounts[row] = moved;
   basis[row] = entering;
