@@ -79,11 +79,12 @@ async function pressKeys(client: ProtocolClient, capabilities: InitializeResult[
     const here = { textDocument: { uri: URI }, position: document.positionAt(key.start + key.newText.length) };
     // Asked right behind a key, as an editor does: the answer waits for the evaluation of that key's text.
     version++;
-    const again = { start: key.start, end: key.start, newText: ' ', text: '' };
-    await press(client, messageOf(key.text, again, version));
+    const spaced = `${key.text.slice(0, key.start)} ${key.text.slice(key.start)}`;
+    await press(client, messageOf(key.text, { start: key.start, end: key.start, newText: ' ', text: spaced }, version));
     rounds.hovers.push(await timed(() => client.connection.sendRequest(HoverRequest.type, here)));
     version++;
-    await press(client, messageOf(key.text, { ...again, end: key.start + 1, newText: '' }, version));
+    const back = { start: key.start, end: key.start + 1, newText: '', text: key.text };
+    await press(client, messageOf(spaced, back, version));
     if (capabilities.completionProvider) {
       rounds.completions.push(await timed(() => client.connection.sendRequest(CompletionRequest.type, here)));
     }
@@ -92,7 +93,10 @@ async function pressKeys(client: ProtocolClient, capabilities: InitializeResult[
   return rounds;
 }
 
-/** Sixty keys a second, without waiting for any answer. */
+/**
+ * Sixty keys a second, without waiting for any answer. In the end the findings must be those of the same text opened
+ * afresh, and once the text is again what it was before, so must be the memory.
+ */
 async function pressFast(client: ProtocolClient, where: string, from: string): Promise<void> {
   const before = await memoryOf(client);
   let version = 1_000_000;
@@ -104,13 +108,41 @@ async function pressFast(client: ProtocolClient, where: string, from: string): P
     await press(client, messageOf(current, key, ++version));
     current = key.text;
   }
-  const last = await timed(() => client.diagnosticsOf(URI, version));
   const name = `after ${fastSeconds} s of sixty keys a second ${where}`;
+  const last = await timed(() => client.diagnosticsOf(URI, version));
   print({ name: `last findings ${name}`, value: last.ms, unit: 'ms' });
   const after = await memoryOf(client);
+  const fresh = ProtocolClient.inProcess(options);
+  await fresh.initialize();
+  await fresh.open(URI, current, version);
+  const [findings, afresh] = [await finalFindings(client, version), await finalFindings(fresh, version)];
+  await fresh.stop();
+  const lost = afresh.filter((one) => !findings.includes(one)).length + Math.abs(findings.length - afresh.length);
+  print({ name: `findings lost or left over ${name}`, value: lost, unit: '', budget: 0, note: `of ${afresh.length}` });
   if (!before || !after) return;
   const note = `without garbage; ${before.heapMb.toFixed(1)} MB before; the process has ${after.residentMb.toFixed(0)} MB`;
   print({ name: `memory of the server thread ${name}`, value: after.heapMb, unit: 'MB', budget: 150, note });
+  const back = { start: 0, end: current.length, newText: from, text: from };
+  await press(client, messageOf(current, back, ++version));
+  await client.diagnosticsOf(URI, version);
+  const kept = await memoryOf(client);
+  if (kept)
+    print({
+      name: `the same with the text as before, over that before`,
+      value: kept.heapMb - before.heapMb,
+      unit: 'MB',
+      budget: 3,
+    });
+}
+
+/** The findings of a version once all of it is worked out; what was told early is replaced by then. */
+async function finalFindings(client: ProtocolClient, version: number): Promise<readonly string[]> {
+  await client.diagnosticsOf(URI, version);
+  const here = { textDocument: { uri: URI }, position: { line: 0, character: 0 } };
+  await client.connection.sendRequest(HoverRequest.type, here);
+  await new Promise((resolve) => setTimeout(resolve, 500));
+  const list = client.published.findLast((one) => one.uri === URI && one.version === version);
+  return (list?.diagnostics ?? []).map(({ range, code, message }) => JSON.stringify([range, code, message]));
 }
 
 /** The message of a key, made before the clock runs. */
