@@ -155,9 +155,14 @@ export function assemble(work: Work, aim: Aim): number {
     }
   }
   for (let k = 0; k < rank; k += 1) {
-    if (at(work.amounts, k) === 0 && isEmptyRow(matrix, k * stride, size)) {
-      // Nothing that is there has any of this basis phase: its potential has no say and stays.
-      matrix[k * stride + k] = 1;
+    const start = k * stride;
+    if (Math.abs(at(work.amounts, k)) <= work.idleBelow && isIdleRow(work, start, k, firstPresent)) {
+      // Nothing to speak of has any of this basis phase: its potential has no say and stays.
+      for (let other = 0; other < size; other += 1) {
+        matrix[start + other] = 0;
+        matrix[other * stride + k] = 0;
+      }
+      matrix[start + k] = 1;
       right[k] = 0;
     }
   }
@@ -173,9 +178,12 @@ export function assemble(work: Work, aim: Aim): number {
   return size;
 }
 
-function isEmptyRow(matrix: Float64Array, start: number, size: number): boolean {
-  for (let column = 0; column < size; column += 1) if (at(matrix, start + column) !== 0) return false;
-  return true;
+/** Whether a balance has no condensed phase in it and less gas than counts. */
+function isIdleRow({ matrix, presentCount, idleBelow }: Work, start: number, k: number, firstPresent: number): boolean {
+  for (let index = 0; index < presentCount; index += 1) {
+    if (at(matrix, start + firstPresent + index) !== 0) return false;
+  }
+  return at(matrix, start + k) <= idleBelow;
 }
 
 /** S/R that is missing, with the first-order part that the balances still miss: dS = (dU + p dV - sum of potentials dn)/T. */

@@ -45,6 +45,8 @@ export interface Work {
   presentCount: number;
   /** The phases present can make one of them up among themselves, which fixes the temperature. */
   isTied: boolean;
+  /** Balances with less in them than this keep their potential; 0 to solve every balance that has anything in it. */
+  idleBelow: number;
   temperatureK: number;
   /** Scaled amount of gas; 0 when there is none. With the volume held it follows from the partial pressures. */
   gasAmount: number;
@@ -87,6 +89,7 @@ export function workOf(set: CandidateSet): Work {
     presentAmount: new Float64Array(width + 2),
     presentCount: 0,
     isTied: false,
+    idleBelow: 0,
     temperatureK: 0,
     gasAmount: 0,
     fractionSum: 0,
