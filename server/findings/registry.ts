@@ -38,6 +38,7 @@ import { nameUnknown } from './name-unknown.ts';
 import { nameUseCycle } from './name-use-cycle.ts';
 import { nameWrongKind } from './name-wrong-kind.ts';
 import { programFailed } from './program-failed.ts';
+import { rangeBurnOut } from './range-burn-out.ts';
 import { rangeColdCharge } from './range-cold-charge.ts';
 import { rangeHeatingValue } from './range-heating-value.ts';
 import { rangeHumidity } from './range-humidity.ts';
@@ -47,6 +48,7 @@ import { rangePositive } from './range-positive.ts';
 import { rangeRealGas } from './range-real-gas.ts';
 import { rangeRich } from './range-rich.ts';
 import { rangeShare } from './range-share.ts';
+import { rangeSticky } from './range-sticky.ts';
 import { rangeTemperature } from './range-temperature.ts';
 import type { FactOf, Rule } from './rule.ts';
 import { syntax } from './syntax.ts';
@@ -134,6 +136,8 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/phase': rangePhase,
   'range/positive': rangePositive,
   'range/rich': rangeRich,
+  'range/burn-out': rangeBurnOut,
+  'range/sticky': rangeSticky,
   'range/cold-charge': rangeColdCharge,
   'range/real-gas': rangeRealGas,
   'expect/failed': expectFailed,

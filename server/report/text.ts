@@ -131,12 +131,14 @@ function missing({ absent }: EvaluatedDefinition, width: number): string[] {
 
 /**
  * A table of differences that are all zero says no more than that the equation balances; the elements of a substance say
- * no more than its composition, which is written there. That a burn's answer is exact stands in its sheet and in the JSON.
+ * no more than its composition, which is written there. A burn's
+ * proofs and its sixty points of freezing stand in its sheet and in the JSON.
  */
 function saysSomething({ id, columns: heads, rows }: Table, kind: string): boolean {
   const difference = heads.findIndex((head) => head.id === 'difference');
   if (difference >= 0) return rows.some((row) => row[difference] !== 0);
-  const isProof = kind === 'burn' && (id === 'element-balance' || id === 'certificate');
+  const isProof =
+    kind === 'burn' && (id === 'element-balance' || id === 'certificate' || id === 'carbon-against-freezing');
   return rows.length > 0 && !(kind === 'substance' && id === 'elements') && !isProof;
 }
 

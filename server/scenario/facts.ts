@@ -185,6 +185,29 @@ export type Fact =
       readonly pressure: Quantity;
       readonly compressed: Quantity;
     }
+  /** Walls of these temperatures, of those given, are met by a deposit that sticks. */
+  | {
+      readonly code: 'range/sticky';
+      readonly from: Quantity;
+      readonly to: Quantity;
+      readonly firstMelting: Quantity;
+      /** From where on it sticks; null where only first melting is published. */
+      readonly sticky: Quantity | null;
+      readonly uncertaintyK: number;
+      readonly leading: readonly string[];
+      /** Less than half of the deposit is salt. */
+      readonly mostlyElse: boolean;
+    }
+  /** Droplets or particles have less time than they take to burn out; `timeS` null where no flame holds at all. */
+  | {
+      readonly code: 'range/burn-out';
+      readonly residence: Quantity;
+      readonly portions: readonly {
+        readonly name: string;
+        readonly verdict: 'open' | 'unburnt';
+        readonly timeS: number | null;
+      }[];
+    }
   /** Water vapour near its saturation at a high pressure is no ideal gas. */
   | {
       readonly code: 'range/real-gas';

@@ -61,7 +61,8 @@ export type MethodId =
   | 'heat-released'
   | 'preheat'
   | 'heat-above-exhaust'
-  | 'peak-gas';
+  | 'peak-gas'
+  | 'burn-out';
 
 export type AssumptionId =
   | 'reference-state'

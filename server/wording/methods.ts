@@ -269,4 +269,13 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols: '',
     validity: 'Order of magnitude only: rates of reaction and the time in the flame decide.',
   },
+  'burn-out': {
+    words:
+      'How long a single droplet or particle burns where diffusion decides, in gas halfway between the oxidant as it comes and the burnt gas.',
+    equation: 't = ρ d² / (8 (λ/c) ln(1 + B))',
+    symbols:
+      'ρ density, d diameter, λ and c conductivity and heat capacity of the film, B transfer number; iron and other metals that do not boil take up oxygen at their surface, aluminium follows its own correlation',
+    validity:
+      'Single particles without slip or ignition delay: good within a factor of about two. Sprays burn out later, as neighbours share the oxygen.',
+  },
 };

@@ -11,8 +11,11 @@ import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../../core/substance/elements.ts';
 import { waterSaturationPressurePa } from '../../core/substance/water-saturation.ts';
 import type { Span } from '../../../grammar/tree.ts';
+import type { TemperatureRange } from '../burn-readers.ts';
 import type { Context } from '../context.ts';
+import { stickyWalls } from './burn-deposits.ts';
 import type { WrittenBurn } from './burn-question.ts';
+import type { AskedOfBurn, SolvedBurn } from './burn-solved.ts';
 
 /** Where in the text what belongs to which part of a burn is said. */
 export interface BurnPlaces {
@@ -23,6 +26,8 @@ export interface BurnPlaces {
   readonly zone: Span;
   readonly held: Span;
   readonly heatLoss: Span;
+  readonly size: Span;
+  readonly residence: Span;
   /** Of what names the products, where it is written. */
   readonly products: Span | null;
 }
@@ -134,6 +139,47 @@ export function reportStates(
   reportMissingWater(burn.charge, names.burn, places.header, context);
   reportColdCharge(written, places.oxidant, context);
   reportRealGas(burn, flame, places.header, context);
+}
+
+/** Says where walls of the temperatures given would be met by a sticky deposit; a state is solved for each wall. */
+export function reportStickyWalls(burn: Burn, walls: TemperatureRange, place: Span, context: Context): void {
+  const sticky = stickyWalls(burn, walls);
+  if (!sticky) return;
+  const { melting, leading } = sticky;
+  context.report(place, {
+    code: 'range/sticky',
+    from: kelvin(sticky.fromK),
+    to: kelvin(sticky.toK),
+    firstMelting: kelvin(melting.firstMeltingK),
+    sticky: melting.stickyK === null ? null : kelvin(melting.stickyK),
+    uncertaintyK: melting.uncertaintyK,
+    leading,
+    mostlyElse: melting.validity.includes('much-else'),
+  });
+}
+
+/** Says what has no burn-out time, and what has too little time. Nothing is solved where no size is written. */
+export function reportBurnOut(
+  solved: SolvedBurn,
+  { sizes }: AskedOfBurn,
+  names: BurnNames,
+  places: BurnPlaces,
+  context: Context,
+): void {
+  if (!sizes.dropletSize && !sizes.particleSize) return;
+  const burnOuts = solved.burnOuts();
+  const what = `the burn-out of ${names.fuel}`;
+  const missing = burnOuts.flatMap((one) => one.missing);
+  if (burnOuts.length === 0) missing.push(`a portion of ${names.fuel} that is of such a size`);
+  if (missing.length > 0) context.report(places.size, { code: 'balance/no-data', what, missing });
+  const residence = sizes.residenceTime;
+  const late = burnOuts.flatMap(({ name, burnOut, verdict }) =>
+    burnOut && (verdict === 'unburnt' || verdict === 'open')
+      ? [{ name, verdict, timeS: burnOut.law === 'none' ? null : burnOut.timeS }]
+      : [],
+  );
+  if (residence && late.length > 0)
+    context.report(places.residence, { code: 'range/burn-out', residence, portions: late });
 }
 
 /** A product below this share by mass may lean on anything: it moves no figure. */

@@ -1,9 +1,9 @@
 // The figures of a burn: one row each, with what it reads of the solved states. Values are there once the states are; the
-// uncertainty of a figure, which takes a burn more on either side of each uncertain input, is worked out when its quantity
-// is read. Knows no entries and no tables. Invariant: a figure that cannot be had is not there, never a number.
-// Method of the uncertainty: first-order propagation through the burn, states solved anew (quantity/uncertainty.ts).
+// uncertainty of a figure, by slopes or by a burn more on either side of each uncertain input, is worked out when its
+// quantity is read. Knows no entries and no tables. Invariant: a figure that cannot be had is not there, never a number.
+// Method of the uncertainty: to first order, by the slopes of the converged states where there are some
+// (burn-uncertainty.ts), else with states solved anew (quantity/uncertainty.ts).
 
-import type { Burn, BurnHeatReleased } from '../../core/burn/burn.ts';
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import { prepareBurn } from '../../core/burn/prepare-burn.ts';
 import { peakGases } from '../../core/burn/products.ts';
@@ -16,19 +16,13 @@ import type { FigureRow } from '../material-figures.ts';
 import type { Figure } from '../scenario.ts';
 import type { Working } from '../working.ts';
 import type { BurnQuestion } from './burn-question.ts';
+import { longestBurnOutS } from './burn-out-times.ts';
+import { solvedBurn, type AskedOfBurn, type SolvedBurn } from './burn-solved.ts';
 import { carbonateShare } from './burn-tables.ts';
+import { partsBySlope } from './burn-uncertainty.ts';
 
 /** Which states a figure needs: those of one group are solved together. */
-type Group = 'flame' | 'zone' | 'slate' | 'exhaust';
-
-/** The states of a burn as figures read them; null where there is none, or it could not be had. */
-export interface SolvedBurn {
-  readonly burn: Burn;
-  readonly flame: Equilibrium;
-  readonly zone: () => Equilibrium | null;
-  readonly slate: () => BurnHeatReleased | null;
-  readonly heatAboveJ: () => number | null;
-}
+type Group = 'flame' | 'zone' | 'slate' | 'exhaust' | 'burn-out';
 
 interface BurnFigureRow extends FigureRow {
   readonly group: Group;
@@ -199,6 +193,14 @@ export const burnFigures = [
     'peak-gas',
     ({ zone }) => peakShare(zone(), 'CO(g)'),
   ),
+  row(
+    'burn-out',
+    'burn-out-time',
+    'Burn-out time of a single droplet or particle, the longest of all portions',
+    'ms',
+    'burn-out',
+    ({ burnOuts }) => longestBurnOutS(burnOuts()),
+  ),
 ] as const satisfies readonly BurnFigureRow[];
 
 function row(
@@ -216,36 +218,16 @@ function peakShare(state: Equilibrium | null, id: string): number | null {
   return (state && peakGases(state).find((gas) => gas.id === id)?.dryMoleShare) ?? null;
 }
 
-/** The states of a burn whose flame is known. */
-export function solvedBurn(burn: Burn, flame: Equilibrium, exhaustK: number): SolvedBurn {
-  return {
-    burn,
-    flame,
-    zone: () => {
-      const zone = burn.zone();
-      return zone?.kind === 'equilibrium' ? zone : null;
-    },
-    slate: () => {
-      const heat = burn.heat();
-      return heat && 'releasedJ' in heat ? heat : null;
-    },
-    heatAboveJ: () => {
-      const heat = burn.heatAbove(exhaustK);
-      return typeof heat === 'number' ? heat : null;
-    },
-  };
-}
-
 /** The figures that can be had of a solved burn; `workingOf` tells how one came about. */
 export function figuresOf(
   solved: SolvedBurn,
   question: BurnQuestion,
-  exhaustK: number,
+  asked: AskedOfBurn,
   workingOf: (row: FigureRow) => Working,
 ): readonly Figure[] {
   const uncertain = new Map<Group, ReadonlyMap<string, Propagated>>();
   const propagatedOf = (row: BurnFigureRow): Propagated | undefined => {
-    const known = uncertain.get(row.group) ?? propagateGroup(row.group, solved, question, exhaustK);
+    const known = uncertain.get(row.group) ?? propagateGroup(row.group, solved, question, asked);
     uncertain.set(row.group, known);
     return known.get(row.id);
   };
@@ -263,7 +245,10 @@ export function figuresOf(
     };
     return [
       lazily(figure, {
-        quantity: () => ({ ...plain, parts: propagatedOf(row)?.parts ?? plain.parts }),
+        quantity: () => ({
+          ...plain,
+          parts: partsBySlope(id, solved, question) ?? propagatedOf(row)?.parts ?? plain.parts,
+        }),
         working: () => workingOf(row),
       }),
     ];
@@ -280,21 +265,21 @@ function propagateGroup(
   group: Group,
   solved: SolvedBurn,
   { quantities, input }: BurnQuestion,
-  exhaustK: number,
+  asked: AskedOfBurn,
 ): ReadonlyMap<string, Propagated> {
   const rows = burnFigures.filter((row) => row.group === group);
   const centre = quantities.map(({ value }) => value);
   const outcomes = propagate(quantities, (values) => {
     const isCentre = values.every((value, index) => Object.is(value, centre[index]));
-    const states = isCentre ? solved : solveAt(input(values), exhaustK);
+    const states = isCentre ? solved : solveAt(input(values), asked);
     return rows.map(({ value }) => (states && value(states)) ?? NaN);
   });
   return new Map(rows.flatMap(({ id }, index) => (outcomes[index] ? [[id, outcomes[index]]] : [])));
 }
 
-function solveAt(input: ReturnType<BurnQuestion['input']>, exhaustK: number): SolvedBurn | null {
+function solveAt(input: ReturnType<BurnQuestion['input']>, asked: AskedOfBurn): SolvedBurn | null {
   const burn = prepareBurn(input);
   if (burn.kind === 'fault') return null;
   const flame = burn.flame();
-  return flame.kind === 'equilibrium' ? solvedBurn(burn, flame, exhaustK) : null;
+  return flame.kind === 'equilibrium' ? solvedBurn(burn, flame, asked) : null;
 }

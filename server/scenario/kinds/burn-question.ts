@@ -3,6 +3,7 @@
 // (the same portion in elements, energy and heating value) are kept.
 
 import type { BurnInput, OxidantAmount } from '../../core/burn/burn.ts';
+import type { BurnParameter } from '../../core/burn/charge-directions.ts';
 import type { Formula } from '../../core/substance/formula.ts';
 import { compositionKey } from '../../core/substance/formula.ts';
 import type { ThermoPhase } from '../../core/substance/phases.ts';
@@ -36,9 +37,13 @@ export interface WrittenBurn {
   readonly ions: boolean;
 }
 
+/** What a quantity is to the states: a parameter that moves them, nothing, or something whose slope is not known. */
+export type QuantityRole = BurnParameter | 'none' | 'zone-amount' | 'unknown';
+
 /** The uncertain quantities, and the question their values make (in the same order). */
 export interface BurnQuestion {
   readonly quantities: readonly Quantity[];
+  readonly roles: readonly QuantityRole[];
   readonly input: (values: readonly number[]) => BurnInput;
 }
 
@@ -58,6 +63,7 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
   const admits = admittance(written.allowed, written.barred);
   return {
     quantities: [...scalars, ...ofFuel, ...ofOxidant],
+    roles: [...scalarRoles, ...streamRoles('fuel', fuel, held), ...streamRoles('oxidant', oxidant, held)],
     input(values) {
       const [amountValue = NaN, zoneValue = NaN, pressurePa = NaN, temperatureK = NaN, lossShare = 0, heating = NaN] =
         values;
@@ -81,6 +87,26 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
       };
     },
   };
+}
+
+/** In the order of the scalars of `questionOf`. */
+const scalarRoles: readonly QuantityRole[] = [
+  { of: 'amount' },
+  'zone-amount',
+  { of: 'pressure' },
+  { of: 'temperature' },
+  { of: 'loss-share' },
+  { of: 'heating-value' },
+];
+
+/** In the order of `quantitiesOf`. The temperature a gas comes in with counts by its enthalpy, and where a volume is held too. */
+function streamRoles(stream: 'fuel' | 'oxidant', { elements }: UncertainStream, { held }: HeldEntry): QuantityRole[] {
+  return [
+    { of: 'enthalpy', stream },
+    'none',
+    held === 'volume' ? 'unknown' : 'none',
+    ...[...elements.keys()].map((symbol): QuantityRole => ({ of: 'element', stream, symbol })),
+  ];
 }
 
 function amountOf(by: WrittenAmount['by'], value: number): OxidantAmount {

@@ -4,12 +4,15 @@
 // Invariant: column ids and units are the contract; a number that could not be had is null.
 
 import type { Burn, BurnStateOrNone, MatterState } from '../../core/burn/burn.ts';
-import { alkaliFates, carbonFate, shareOfForm, type Fate } from '../../core/burn/fates.ts';
+import { alkaliFates, carbonFate, carbonFormOf, shareOfForm, type Fate } from '../../core/burn/fates.ts';
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
+import { carbonAgainstFreezing } from '../../core/burn/path-readings.ts';
 import { productRows } from '../../core/burn/products.ts';
 import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
+import { alkaliMetals } from '../../core/substance/elements.ts';
 import type { Formula } from '../../core/substance/formula.ts';
 import { lazily } from '../lazily.ts';
+import { depositOf } from './burn-deposits.ts';
 import type { Column, Table } from '../scenario.ts';
 
 type Row = Table['rows'][number];
@@ -29,6 +32,7 @@ export function burnTables(burn: Burn, flame: Equilibrium): readonly Table[] {
     fateTable('carbon-fate', 'Where the carbon is', burn, flame, (state) => [carbonFate(state)]),
     fateTable('alkali-fate', 'Where the alkali is', burn, flame, alkaliFates),
     condensationTable(burn),
+    freezingTable(burn),
     balanceTable(burn, flame),
     certificateTable(flame),
   ];
@@ -125,11 +129,15 @@ function statesTable(burn: Burn): Table {
     { id: 'carbonate-carbon-share', label: 'Carbon in carbonate', unit: '1' },
     { id: 'heat-above', label: 'Heat released above', unit: 'MJ/kg' },
     { id: 'pressure', label: 'Pressure', unit: 'bar' },
+    { id: 'first-melting', label: 'Deposit melts from', unit: 'K' },
+    { id: 'sticky-point', label: 'sticks from', unit: 'K' },
+    { id: 'flow-point', label: 'runs from', unit: 'K' },
     { id: 'composition', label: 'Composition', unit: null },
   ];
   const row = (state: BurnStateOrNone, temperatureK: number): Row => {
-    if (state.kind === 'none') return [temperatureK, null, null, null, null, null, null];
+    if (state.kind === 'none') return [temperatureK, null, null, null, null, null, null, null, null, null];
     const { enthalpyJ } = burn.charge;
+    const deposit = depositOf(state);
     return [
       temperatureK,
       state.condensedMassShare,
@@ -137,6 +145,9 @@ function statesTable(burn: Burn): Table {
       carbonateShare(state),
       enthalpyJ === null ? null : (enthalpyJ - state.enthalpyJ) / 1e6,
       state.gasMol > 0 ? state.pressurePa / 1e5 : null,
+      deposit?.firstMeltingK ?? null,
+      deposit?.stickyK ?? null,
+      deposit?.flowingK ?? null,
       state.kind === 'frozen' ? 'frozen' : 'equilibrium',
     ];
   };
@@ -145,9 +156,11 @@ function statesTable(burn: Burn): Table {
   );
 }
 
-/** Share of the carbon that is in carbonate, in any phase; null without carbon. */
+/** Share of the carbon that is in carbonate, in any phase; null where there is no carbon or no carbonate could form. */
 export function carbonateShare(state: MatterState): number | null {
-  const fate = carbonFate(state);
+  const fate = state.candidates.phases.some(({ formula }) => carbonFormOf(formula) === 'carbonate')
+    ? carbonFate(state)
+    : undefined;
   return fate ? shareOfForm(fate, 'carbonate') : null;
 }
 
@@ -212,6 +225,30 @@ function condensationTable(burn: Burn): Table {
       return [name(phase), appears, leaves, origin, formula && isSlow(formula) ? 'limit, not forecast' : null];
     });
   });
+}
+
+/** What would become of the carbon if the gas froze at each temperature: the answer to "where would it have to freeze". */
+function freezingTable(burn: Burn): Table {
+  const columns: readonly Column[] = [
+    { id: 'frozen-at', label: 'Frozen at', unit: 'K' },
+    { id: 'frozen-carbonate-share', label: 'Carbon in carbonate', unit: '1' },
+    { id: 'frozen-carbon-dioxide-share', label: 'Carbon in carbon dioxide', unit: '1' },
+  ];
+  const hasCarbonate = burn.charge.elements.includes('C') && burn.charge.elements.some((symbol) => binds(symbol));
+  return lazyTable({ id: 'carbon-against-freezing', label: 'Carbon, if the gas froze', columns }, () =>
+    hasCarbonate
+      ? carbonAgainstFreezing(burn.path()).map((row): Row => [
+          row.temperatureK,
+          row.carbonateShare,
+          row.carbonDioxideShare,
+        ])
+      : [],
+  );
+}
+
+/** Metals whose carbonates are among the products. */
+function binds(symbol: string): boolean {
+  return alkaliMetals.includes(symbol) || symbol === 'Mg' || symbol === 'Ca';
 }
 
 function balanceTable({ charge }: Burn, flame: Equilibrium): Table {

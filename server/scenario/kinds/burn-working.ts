@@ -12,7 +12,7 @@ import type { Place } from '../place.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import type { burnEntries } from './burn-entries.ts';
 import type { BurnNames } from './burn-facts.ts';
-import type { SolvedBurn } from './burn-figures.ts';
+import type { SolvedBurn } from './burn-solved.ts';
 import type { WrittenBurn } from './burn-question.ts';
 import { certificateRows, isSlow } from './burn-tables.ts';
 

@@ -17,9 +17,18 @@ import { lazily } from '../lazily.ts';
 import { figuresOfMaterial } from '../material-figures.ts';
 import type { Absent } from '../scenario.ts';
 import { burnEntries, defaultExhaustC } from './burn-entries.ts';
-import { reportFault, reportNone, reportStates, type BurnPlaces } from './burn-facts.ts';
-import { burnFigures, figuresOf, solvedBurn } from './burn-figures.ts';
+import {
+  reportBurnOut,
+  reportFault,
+  reportNone,
+  reportStates,
+  reportStickyWalls,
+  type BurnPlaces,
+} from './burn-facts.ts';
+import { burnFigures, figuresOf } from './burn-figures.ts';
+import { burnOutTable } from './burn-out-times.ts';
 import { questionOf, type WrittenAmount, type WrittenBurn } from './burn-question.ts';
+import { solvedBurn, type AskedOfBurn } from './burn-solved.ts';
 import { burnTables } from './burn-tables.ts';
 import { burnWorking, workingPlaces } from './burn-working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
@@ -57,16 +66,33 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     reportNone(flame, 'flame', names, places, context);
     return unknownAnswer(evaluated);
   }
+  const asked: AskedOfBurn = {
+    exhaustK: written.exhaustTemperature.value,
+    fuel: read.fuel.value,
+    oxidant: read.oxidant.value,
+    sizes: {
+      dropletSize: read.dropletSize?.value.quantity ?? null,
+      particleSize: read.particleSize?.value.quantity ?? null,
+      residenceTime: read.residenceTime?.value.quantity ?? null,
+    },
+  };
+  const solved = solvedBurn(burning, flame, asked);
   reportStates(burning, flame, written, names, places, context);
-  const exhaustK = written.exhaustTemperature.value;
-  const solved = solvedBurn(burning, flame, exhaustK);
+  if (read.wallTemperature) {
+    const { value, entry } = read.wallTemperature;
+    reportStickyWalls(burning, value, entry.span, context);
+  }
+  reportBurnOut(solved, asked, names, places, context);
+  const hasSize = asked.sizes.dropletSize !== null || asked.sizes.particleSize !== null;
   const entryPlaces = workingPlaces(read, context);
   return lazily<KindAnswer>(
     { figures: [], tables: [], absent: new Map(), lines: [], material: null },
     {
-      figures: () =>
-        figuresOf(solved, question, exhaustK, (row) => burnWorking(row, written, solved, names, entryPlaces)),
-      tables: () => burnTables(burning, flame),
+      figures: () => figuresOf(solved, question, asked, (row) => burnWorking(row, written, solved, names, entryPlaces)),
+      tables: () => [
+        ...burnTables(burning, flame),
+        ...(hasSize ? [burnOutTable(solved.burnOuts, asked.sizes.residenceTime)] : []),
+      ],
       absent: () => absentOf(written, names.fuel),
     },
   );
@@ -99,7 +125,6 @@ function amountOf(
 
 function reportContradictions(read: Read, context: Context): void {
   reportTwice('what heat leaves', read.temperature?.entry, read.heatLoss?.entry, context);
-  reportTwice('what is to burn out', read.dropletSize?.entry, read.particleSize?.entry, context);
 }
 
 function reportTwice(what: string, first: Entry | undefined, second: Entry | undefined, context: Context): void {
@@ -153,6 +178,8 @@ function placesOf(read: Read, header: Span): BurnPlaces {
     zone: read.flameZone?.entry.span ?? header,
     held: read.held?.entry.span ?? header,
     heatLoss: read.heatLoss?.entry.span ?? header,
+    size: read.dropletSize?.entry.span ?? read.particleSize?.entry.span ?? header,
+    residence: read.residenceTime?.entry.span ?? header,
     products: read.allowedProducts?.entry.span ?? read.barredProducts?.entry.span ?? null,
   };
 }

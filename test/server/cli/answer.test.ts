@@ -31,7 +31,9 @@ const UNITS: Readonly<Record<string, string>> = {
 };
 
 describe('the examples', () => {
-  test.each(['dunlin.stoke', 'house/suppliers.stoke'])(
+  const burning = ['hydrogen-burner.stoke', 'sodium-dispersion.stoke', 'magnesium-in-steam.stoke'];
+
+  test.each(['dunlin.stoke', 'house/suppliers.stoke', ...burning])(
     '%s: the document keeps the contract and its units',
     async (example) => {
       const ran = await runIn(EXAMPLES, ['evaluate', example, '--format', 'json']);
@@ -45,6 +47,14 @@ describe('the examples', () => {
       expect(ran.code).toBe(0);
     },
   );
+
+  test.each(burning)('%s: all that is expected holds', async (example) => {
+    const ran = await runIn(EXAMPLES, ['check', example, '--format', 'json', '--strict']);
+    const [file] = checkContract.parse(JSON.parse(ran.out)).files;
+    expect(file?.expectations.length).toBeGreaterThan(3);
+    expect(file?.expectations.map(({ holds }) => holds)).toEqual(file?.expectations.map(() => true));
+    expect(ran.code).toBe(0);
+  });
 
   test('dunlin: check prints the same without figures', async () => {
     const words = ['dunlin.stoke', '--format', 'json'];

@@ -421,6 +421,52 @@ const ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     {
+      code: 'range/sticky',
+      from: quantity(860, 'degC', 0, 'temperature'),
+      to: quantity(950, 'degC', 0, 'temperature'),
+      firstMelting: quantity(851, 'degC', 0, 'temperature'),
+      sticky: quantity(855, 'degC', 0, 'temperature'),
+      uncertaintyK: 30,
+      leading: ['Na2CO3(l)', 'NaOH(l)'],
+      mostlyElse: false,
+    },
+    'On walls from 860 °C to 950 °C the deposit (Na2CO3(l) and NaOH(l)) is sticky: it begins to melt at 851 °C (± 30 K) and sticks from 855 °C on. Keep walls colder than that, or so hot that nothing condenses.',
+  ],
+  [
+    {
+      code: 'range/sticky',
+      from: quantity(900, 'degC', 0, 'temperature'),
+      to: quantity(900, 'degC', 0, 'temperature'),
+      firstMelting: quantity(500, 'degC', 0, 'temperature'),
+      sticky: null,
+      uncertaintyK: 10,
+      leading: ['MgO(cr)', 'Li2CO3(l)'],
+      mostlyElse: true,
+    },
+    'On walls of 900 °C the deposit (MgO(cr) and Li2CO3(l)) is sticky: it begins to melt at 500 °C (± 10 K). Less than half of it is salt, and what stays solid stiffens it. Keep walls colder than that, or so hot that nothing condenses.',
+  ],
+  [
+    {
+      code: 'range/burn-out',
+      residence: quantity(20, 'ms'),
+      portions: [
+        { name: 'gas_oil', verdict: 'open', timeS: 0.015 },
+        { name: 'iron', verdict: 'unburnt', timeS: 0.08 },
+        { name: 'sodium', verdict: 'unburnt', timeS: null },
+      ],
+    },
+    '`gas_oil` takes about 15 ms to burn out, within a factor of two, and has 20 ms: it may not be burnt. `iron` takes about 80 ms to burn out and has 20 ms. `sodium` does not keep a flame in this gas. All figures here count it as burnt.',
+  ],
+  [
+    {
+      code: 'range/burn-out',
+      residence: quantity(20, 'ms'),
+      portions: [{ name: 'gas_oil', verdict: 'open', timeS: 0.015 }],
+    },
+    '`gas_oil` takes about 15 ms to burn out, within a factor of two, and has 20 ms: it may not be burnt. All figures here count it as burnt.',
+  ],
+  [
+    {
       code: 'range/real-gas',
       temperature: quantity(260, 'degC', 0, 'temperature'),
       vapourPressure: quantity(39, 'bar'),
@@ -561,6 +607,7 @@ describe('every code', () => {
       'information kind/not-evaluated',
       'information kind/suspended',
       'information name/like-catalogue',
+      'information range/burn-out',
       'information range/cold-charge',
       'information range/phase',
       'information range/real-gas',
@@ -569,8 +616,11 @@ describe('every code', () => {
       'warning balance/contradiction',
       'warning balance/contradiction',
       'warning balance/no-data',
+      'warning range/burn-out',
       'warning range/heating-value',
       'warning range/rich',
+      'warning range/sticky',
+      'warning range/sticky',
       'warning range/temperature',
     ]);
   });

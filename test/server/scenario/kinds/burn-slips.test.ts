@@ -284,3 +284,67 @@ test('a state that the burn does not tell', () => {
     #                                   ^^^^^^^^ name/unknown-phrase
   `);
 });
+
+test('droplets and particles: too little time, no data, nothing of that size', () => {
+  checkFacts(`
+    blend dispersion {
+      30 % mass sodium
+      rest methanol
+    }
+    burn quick {
+      fuel: dispersion
+      oxidant: air
+      lambda: 1.3
+      droplet size: 50 um
+      particle size: 20 um
+      residence time: 100 ms
+    }
+    burn hasty {
+      fuel: dispersion
+      oxidant: air
+      lambda: 1.3
+      droplet size: 200 um
+      particle size: 20 um
+      residence time: 1 ms
+    # ^^^^^^^^^^^^^^^^^^^^ range/burn-out
+    }
+    burn unknown_oil {
+      fuel: gas_oil
+      oxidant: air
+      lambda: 1.3
+      droplet size: 50 um
+    # ^^^^^^^^^^^^^^^^^^^ balance/no-data
+    }
+    burn gaseous {
+      fuel: hydrogen
+      oxidant: air
+      lambda: 1.3
+      droplet size: 50 um
+    # ^^^^^^^^^^^^^^^^^^^ balance/no-data
+    }
+  `);
+});
+
+test('walls on which the deposit sticks, and walls on which it does not', () => {
+  const furnace = (wall: string, mark = ''): string => `
+    blend dispersion {
+      25 % mass sodium
+      rest gas_oil
+    }
+    burn furnace {
+      fuel: dispersion
+      oxidant: air
+      lambda: 1.25
+      wall temperature: ${wall}
+      ${mark}
+    }
+  `;
+  checkFacts(furnace('400 degC to 700 degC'));
+  checkFacts(furnace('1500 degC'));
+  checkFacts(
+    furnace('800 degC to 950 degC', '# ^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^ range/sticky').replace(
+      '      # ^',
+      '    # ^',
+    ),
+  );
+});

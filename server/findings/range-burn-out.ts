@@ -1,0 +1,25 @@
+/**
+ * Droplets or particles have less time in the flame than they take to burn out, or hardly more: what is worked out here
+ * counts them as burnt. Burn-out times of single particles are good within a factor of about two.
+ */
+import { knownUnit } from '../core/quantity/convert.ts';
+import { quantityOf } from '../core/quantity/quantity.ts';
+import { quantityText } from '../wording/quantities.ts';
+import { quoted, sentences } from '../wording/words.ts';
+import type { FactOf, Rule } from './rule.ts';
+
+export const rangeBurnOut: Rule<FactOf<'range/burn-out'>> = {
+  severity: ({ portions }) => (portions.some(({ verdict }) => verdict === 'unburnt') ? 'warning' : 'information'),
+  message: ({ residence, portions }) =>
+    sentences(
+      ...portions.map(({ name, verdict, timeS }) => {
+        if (timeS === null) return `${quoted(name)} does not keep a flame in this gas.`;
+        const time = quantityText(quantityOf(timeS, knownUnit('s').dimension), 'ms');
+        const has = quantityText(residence, 'ms');
+        return verdict === 'unburnt'
+          ? `${quoted(name)} takes about ${time} to burn out and has ${has}.`
+          : `${quoted(name)} takes about ${time} to burn out, within a factor of two, and has ${has}: it may not be burnt.`;
+      }),
+      'All figures here count it as burnt.',
+    ),
+};
