@@ -121,8 +121,8 @@ export function flammableLiquidCategory(
   flashPointK: number,
   boilingPointK: number | undefined,
 ): '1' | '2' | '3' | '4' | null {
-  const flashPointC = flashPointK - 273.15;
-  if (flashPointC < 23) return boilingPointK !== undefined && boilingPointK - 273.15 > 35 ? '2' : '1';
-  if (flashPointC <= 60) return '3';
-  return flashPointC <= 93 ? '4' : null;
+  // 23, 60 and 93 °C; 35 °C boiling.
+  if (flashPointK < 296.15) return boilingPointK !== undefined && boilingPointK > 308.15 ? '2' : '1';
+  if (flashPointK <= 333.15) return '3';
+  return flashPointK <= 366.15 ? '4' : null;
 }

@@ -60,6 +60,12 @@ export const reactiveFamilies = [
   'strong-reducer',
   'reducible-oxide',
   'fuel-gas',
+  'acetylene',
+  'sulphur',
+  // Its powder, raised in air, explodes.
+  'combustible-dust',
+  // May fall apart or polymerise by itself, with much heat.
+  'unstable',
   'inert-gas',
   'nitrogen',
 ] as const;
