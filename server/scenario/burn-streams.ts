@@ -150,8 +150,3 @@ function at(
 }
 
 const specificEnergy = knownUnit('J/kg').dimension;
-
-/** K that an ideal gas with γ = 1.4 reaches when it is compressed without loss from 1 bar. */
-export function compressedTemperatureK(temperatureK: number, pressurePa: number): number {
-  return temperatureK * (pressurePa / 1e5) ** (1 - 1 / 1.4);
-}

@@ -2,6 +2,7 @@
 // every product and the certificate. Put together when somebody asks. Knows no sentences.
 // Invariant: the places are made with the definition, since an answer's places are gathered then.
 
+import { carbonFormOf } from '../../core/burn/fates.ts';
 import { productRows } from '../../core/burn/products.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
@@ -123,21 +124,30 @@ function certificateInputs({ flame }: SolvedBurn): WorkingInput[] {
 
 const densePa = 1e7;
 
-function assumptionsOf({ id }: FigureRow, written: WrittenBurn, { flame }: SolvedBurn): readonly AssumptionId[] {
+function assumptionsOf({ id }: FigureRow, written: WrittenBurn, solved: SolvedBurn): readonly AssumptionId[] {
+  const { flame } = solved;
   const isPeakGas = /nitric|monoxide/.test(id);
-  const isAdiabatic = !written.temperature;
-  const hasCarbonate = flame.candidates.phases.some(
-    ({ formula }) => formula.phase !== 'g' && formula.composition.get('O') === 3 && formula.composition.has('C'),
-  );
-  const hasSlow = flame.candidates.phases.some(({ formula }) => isSlow(formula));
+  const hasCarbonate = flame.candidates.phases.some(({ formula }) => carbonFormOf(formula) === 'carbonate');
   return [
     ...(isPeakGas ? (['kinetics-decide'] as const) : []),
+    ...(hasSlowSolids(id, written, solved) ? (['slow-solids'] as const) : []),
     ...(flame.pressurePa > densePa ? (['dense-gas'] as const) : []),
     ...(hasCarbonate ? (['carbonate-on-cooling'] as const) : []),
     'complete-equilibrium',
     'pure-condensed',
     'ideal-gas',
-    ...(isAdiabatic ? (['no-other-loss'] as const) : []),
-    ...(hasSlow ? (['slow-solids'] as const) : []),
+    ...(written.temperature ? [] : (['no-other-loss'] as const)),
   ];
+}
+
+/** Whether the state that a figure rests on counts solids that take hours to form. */
+function hasSlowSolids(id: string, { exhaustTemperature }: WrittenBurn, { burn, flame, slate }: SolvedBurn): boolean {
+  const state =
+    id === 'heat-released' || id === 'released-share'
+      ? slate()?.slate
+      : id === 'heat-above-exhaust'
+        ? burn.at(exhaustTemperature.value)
+        : flame;
+  if (!state || state.kind === 'none') return false;
+  return state.candidates.phases.some(({ formula }, phase) => (state.amountsMol[phase] ?? 0) > 0 && isSlow(formula));
 }

@@ -332,3 +332,28 @@ test('a claim about a flame is worked out', () => {
   expect(warm).toMatchObject({ holds: true, unit: 'K' });
   expect(water).toMatchObject({ holds: true, unit: '1' });
 });
+
+test('heat that counts hydrogen carbonate says first that this takes hours; the product is marked so', () => {
+  const scenario = evaluateText(`
+    blend dispersion {
+      30 % mass sodium
+      rest gas_oil
+    }
+    burn furnace {
+      fuel: dispersion
+      oxidant: air
+      lambda: 1.2
+      cooled to: 40 degC
+      exhaust temperature: 40 degC
+    }
+  `);
+  const { figures } = definitionOf(scenario, 'furnace');
+  const assumptionsOf = (id: string): readonly string[] =>
+    figures.find((figure) => figure.id === id)?.working.assumptions ?? [];
+  expect(assumptionsOf('heat-above-exhaust')[0]).toBe('slow-solids');
+  expect(assumptionsOf('flame-temperature')).not.toContain('slow-solids');
+  const slow = tableOf(scenario, 'cooled-products', 'furnace').rows.filter(
+    (row) => row.at(-1) === 'limit, not forecast',
+  );
+  expect(slow.map(([name]) => name)).toContain('NaHCO3(cr)');
+});
