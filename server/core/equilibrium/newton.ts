@@ -71,7 +71,8 @@ export function affinityOf(work: Work, phase: number): number {
 
 /**
  * Assembles the system of the next step: potentials first, then gas, condensed phases, temperature. Returns its size. The
- * right side holds what is missing; amounts of gas and condensed phases come out as new values, not as differences.
+ * right side holds what is missing, and everything comes out as a change: near the solution a rare phase's amount then keeps its
+ * own precision, not that of the plentiful ones.
  */
 export function assemble(work: Work, aim: Aim): number {
   const { rank, width, stride, matrix, right, nu, gases, gasCount, fraction, enthalpy, heatCapacity } = work;
@@ -125,8 +126,8 @@ export function assemble(work: Work, aim: Aim): number {
       const mean = sum / gasAmount;
       matrix[start + gasRow] = mean;
       matrix[gasRow * stride + k] = mean;
-      right[k] = at(work.amounts, k);
-    } else right[k] = at(work.amounts, k) - sum;
+    }
+    right[k] = at(work.amounts, k) - sum;
   }
   if (hasGasRow) {
     right[gasRow] = -Math.log(fractionSum);
@@ -141,17 +142,19 @@ export function assemble(work: Work, aim: Aim): number {
     const row = firstPresent + index;
     for (let k = 0; k < rank; k += 1) {
       const own = at(nu, phase * width + k);
+      if (own === 0) continue;
       matrix[k * stride + row] = own;
       matrix[row * stride + k] = own;
+      right[k] = at(right, k) - own * at(work.presentAmount, index);
     }
     right[row] = -affinityOf(work, phase);
     if (seeksHeat) {
       const energy = at(enthalpy, phase);
       matrix[row * stride + heatRow] = energy;
       matrix[heatStart + row] = energy;
-      const amount = Math.max(0, at(work.presentAmount, index));
+      const amount = at(work.presentAmount, index);
       presentHeat += amount * energy;
-      capacity += amount * at(heatCapacity, phase);
+      capacity += Math.max(0, amount) * at(heatCapacity, phase);
     }
   }
   for (let k = 0; k < rank; k += 1) {
@@ -168,12 +171,8 @@ export function assemble(work: Work, aim: Aim): number {
   }
   if (seeksHeat) {
     matrix[heatStart + heatRow] = squares + capacity;
-    // Gas (pressure held) and condensed amounts come out new, so that what they hold now stays on the left side.
-    const keptLeft = hasGasRow ? 0 : heatSum;
     right[heatRow] =
-      aim.seeks === 'energy'
-        ? aim.aimed / work.temperatureK - keptLeft
-        : entropyMissing(work, aim) + (hasGasRow ? heatSum : 0) + presentHeat;
+      aim.seeks === 'energy' ? aim.aimed / work.temperatureK - heatSum - presentHeat : entropyMissing(work, aim);
   }
   return size;
 }
@@ -205,7 +204,7 @@ function entropyMissing(work: Work, aim: Aim): number {
   }
   for (let index = 0; index < work.presentCount; index += 1) {
     const phase = at32(work.present, index);
-    const amount = Math.max(0, at(work.presentAmount, index));
+    const amount = at(work.presentAmount, index);
     entropy += amount * (at(enthalpy, phase) - at(gibbs, phase));
     potentials -= amount * (affinityOf(work, phase) + at(work.cost, phase));
   }
@@ -266,7 +265,7 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   step.gasChange = 0;
   let gasNext = work.gasAmount;
   if (hasGasRow) {
-    gasNext = at(right, rank) - work.gasAmount * Math.log(work.fractionSum);
+    gasNext = work.gasAmount * (1 - Math.log(work.fractionSum)) + at(right, rank);
     const ratio = gasNext / work.gasAmount;
     step.gasChange = Math.abs(ratio - 1);
     if (ratio > 7.4) taken = Math.min(taken, 6.4 / (ratio - 1));
@@ -280,8 +279,7 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   if (hasGasRow) work.gasAmount = Math.min(mostGas, work.gasAmount + taken * (gasNext - work.gasAmount));
   const firstPresent = rank + (hasGasRow ? 1 : 0);
   for (let index = 0; index < work.presentCount; index += 1) {
-    const before = at(work.presentAmount, index);
-    work.presentAmount[index] = before + taken * (at(right, firstPresent + index) - before);
+    work.presentAmount[index] = at(work.presentAmount, index) + taken * at(right, firstPresent + index);
   }
   if (seeksHeat && warmer !== 0) {
     const next = Math.min(highestK, Math.max(lowestK, work.temperatureK * Math.exp(taken * warmer)));

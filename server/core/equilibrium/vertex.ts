@@ -20,6 +20,7 @@ export function findVertex(work: Work): readonly number[] | undefined {
   const blamed = blamedRows(work);
   if (blamed.length > 0) return blamed;
   replaceArtificials(work);
+  takeAmountsOfBasis(work);
   return undefined;
 }
 
@@ -55,6 +56,7 @@ export function takeBasis(work: Work, amountsMol: Float64Array): boolean {
     pivot(work, best, row);
   }
   replaceArtificials(work);
+  takeAmountsOfBasis(work);
   return true;
 }
 
@@ -64,11 +66,13 @@ function start(work: Work): void {
   const chargeRow = set.hasCharge ? width - 1 : -1;
   // Absent elements have no row: their phases are not admitted.
   let rank = 0;
+  work.inverse.fill(0);
   for (let row = 0; row < width; row += 1) {
     if (row !== chargeRow && at(given, row) === 0) continue;
     if (rank !== row) forEachPhase(work, (phase) => (nu[phase * width + rank] = at(set.atoms, phase * width + row)));
     amounts[rank] = at(given, row);
     basis[rank] = -1 - row;
+    work.inverse[row * width + rank] = 1;
     rank += 1;
   }
   work.rank = rank;
@@ -174,13 +178,11 @@ function pivot(work: Work, entering: number, row: number): void {
     const list = lists[which] as Int32Array;
     const count = counts[which] as number;
     for (let index = 0; index < count; index += 1) {
-      const column = at32(list, index) * width;
-      const taken = at(nu, column + row) * inverse;
-      if (taken === 0) continue;
-      for (let k = 0; k < rank; k += 1) nu[column + k] = clean(at(nu, column + k) - taken * at(spare, k));
-      nu[column + row] = clean(taken);
+      pivotColumn(nu, at32(list, index) * width, row, rank, inverse, spare);
     }
   }
+  for (let element = 0; element < width; element += 1)
+    pivotColumn(work.inverse, element * width, row, rank, inverse, spare);
   const moved = at(amounts, row) * inverse;
   for (let k = 0; k < rank; k += 1) {
     const left = at(amounts, k) - moved * at(spare, k);
@@ -189,6 +191,38 @@ function pivot(work: Work, entering: number, row: number): void {
   }
   amounts[row] = moved;
   basis[row] = entering;
+}
+
+/** One column after the entering phase, whose own is `entering`, has taken a row. */
+function pivotColumn(
+  columns: Float64Array,
+  start: number,
+  row: number,
+  rank: number,
+  inverse: number,
+  entering: Float64Array,
+): void {
+  const taken = at(columns, start + row) * inverse;
+  if (taken === 0) return;
+  for (let k = 0; k < rank; k += 1) columns[start + k] = clean(at(columns, start + k) - taken * at(entering, k));
+  columns[start + row] = clean(taken);
+}
+
+/**
+ * The amounts of the finished basis from the elements given, at one stroke: what the steps on the way left of a rare element,
+ * after plentiful ones had passed through its balance, is not good enough.
+ */
+function takeAmountsOfBasis({ width, rank, given, inverse, amounts }: Work): void {
+  for (let k = 0; k < rank; k += 1) {
+    let sum = 0;
+    let size = 0;
+    for (let row = 0; row < width; row += 1) {
+      const part = at(given, row) * at(inverse, row * width + k);
+      sum += part;
+      size += Math.abs(part);
+    }
+    amounts[k] = Math.abs(sum) <= 2e-15 * size ? 0 : sum;
+  }
 }
 
 /** Entries are small fractions: what elimination leaves below this is rounding. */
@@ -247,6 +281,9 @@ function dropRow(work: Work, row: number): void {
   for (let k = row; k < work.rank; k += 1) {
     basis[k] = at32(basis, k + 1);
     amounts[k] = at(amounts, k + 1);
+    for (let element = 0; element < width; element += 1) {
+      work.inverse[element * width + k] = at(work.inverse, element * width + k + 1);
+    }
   }
   forEachPhase(work, (phase) => {
     for (let k = row; k < work.rank; k += 1) nu[phase * width + k] = at(nu, phase * width + k + 1);

@@ -25,6 +25,8 @@ export interface Work {
   /** Phase index of each basis phase (below zero: the artificial one of an element row, while a vertex is sought). */
   readonly basis: Int32Array;
   readonly nu: Float64Array;
+  /** The elements in the basis, in rows of `width`: what one mole of an element row is of each basis phase. */
+  readonly inverse: Float64Array;
   /** 1 for a basis phase whose balance is empty and to which every phase could only add: none of them can be there. */
   readonly isForced: Uint8Array;
   /** Amount of each basis phase if it and the others of the basis were all there is. */
@@ -76,6 +78,7 @@ export function workOf(set: CandidateSet): Work {
     rank: 0,
     basis: new Int32Array(width),
     nu: new Float64Array(size * width),
+    inverse: new Float64Array(width * width),
     isForced: new Uint8Array(width),
     amounts: new Float64Array(width),
     gibbs: new Float64Array(size),
