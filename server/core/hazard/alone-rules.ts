@@ -55,13 +55,25 @@ export function waterReactionOf(
 /** What gives oxygen to a fuel. A nitro compound carries its own fuel, and ores give theirs up only when hot. */
 export function isOxidiser(portion: StoredPortion): boolean {
   if (!isIn(portion, 'oxidiser') || isIn(portion, 'nitro-compound', 'reducible-oxide')) return false;
-  // Peroxide below 8 % is no oxidiser by its class.
-  return !isPeroxideLiquid(portion) || portion.massShare >= 0.08;
+  return !isWeakPeroxide(portion);
 }
 
 /** Hydrogen peroxide, which rust and copper take apart. */
 export function isPeroxideLiquid(portion: StoredPortion): boolean {
   return isIn(portion, 'oxidiser') && [...portion.molPerKg.keys()].sort().join() === 'H,O';
+}
+
+/** Peroxide below 8 % is no oxidiser by its class, and steady. */
+function isWeakPeroxide(portion: StoredPortion): boolean {
+  return isPeroxideLiquid(portion) && portion.massShare < 0.08;
+}
+
+/** Potassium that meets sodium: between 40 and 90 % of it by mass the alloy is liquid at room temperature. */
+function isPartOfLiquidAlloy(portion: StoredPortion, store: Store): boolean {
+  if (soleElement(portion) !== 'K') return false;
+  const sodium = store.portions.reduce((sum, other) => sum + (soleElement(other) === 'Na' ? other.massShare : 0), 0);
+  const share = portion.massShare / (portion.massShare + sodium);
+  return share >= 0.4 && share <= 0.9;
 }
 
 /** Hydrazine: hydrogen and nitrogen alone, and a reducer. */
@@ -125,7 +137,7 @@ export const aloneRules: readonly HazardRule[] = [
     find: (store) =>
       eachPortion(store, (portion) => {
         const { pyrophoric } = portion.hazards;
-        if (pyrophoric === undefined) return null;
+        if (pyrophoric === undefined) return isPartOfLiquidAlloy(portion, store) ? 'warning' : null;
         // Fineness is not known of a metal; a dry hydride is a powder. A liquid keeps powders from taking fire.
         const counts =
           pyrophoric.form === undefined ||
@@ -147,11 +159,11 @@ export const aloneRules: readonly HazardRule[] = [
           const limitK = portion.decompositionPointK;
           if (limitK !== null && store.temperatureK >= limitK && endsBadly(portion)) return 'error';
           const isCatalysed =
-            (isPeroxideLiquid(portion) || isHydrazine(portion)) &&
+            ((isPeroxideLiquid(portion) && !isWeakPeroxide(portion)) || isHydrazine(portion)) &&
             (store.contact.some((material) => catalysts.includes(material)) ||
               store.portions.some((other) => isIn(other, 'reducible-oxide') || soleElement(other) === 'Fe'));
           if (isCatalysed) return 'error';
-          return isIn(portion, 'unstable') ? 'warning' : null;
+          return isIn(portion, 'unstable') && !isWeakPeroxide(portion) ? 'warning' : null;
         },
         ({ decompositionPointK }) => (decompositionPointK === null ? {} : { limitK: decompositionPointK }),
       ),
@@ -173,9 +185,9 @@ export const aloneRules: readonly HazardRule[] = [
     source: ruleSources.bretherick,
     find: (store) =>
       eachPortion(store, (portion) => {
-        // Liquefied under its own vapour it meets no air.
-        const isPressed = portion.phase === 'gas' && store.pressurePa > 1.2e5;
-        if (!isIn(portion, 'peroxide-former') || isPressed) return null;
+        // Peroxides gather in what is boiled down: a gas leaves none behind.
+        const isGasByNature = portion.phase === 'gas' && portion.usualPhase === 'gas';
+        if (!isIn(portion, 'peroxide-former') || isGasByNature) return null;
         return shareOver(store, 'O2') > traceOxygen ? 'warning' : 'information';
       }),
   },

@@ -49,7 +49,10 @@ export const contactRules: readonly HazardRule[] = [
     source: ruleSources.practice,
     find: (store) =>
       eachContact(store, (portion, material) => {
-        if (!isIn(portion, 'mineral-acid') || !isSharpAcid(portion) || !baseMetals.includes(material)) return null;
+        if (!isIn(portion, 'mineral-acid') || !isSharpAcid(portion)) return null;
+        // Hydrochloric and hydrofluoric acid break the film of stainless steel too.
+        const isHalide = !portion.molPerKg.has('O') && material === 'stainless-steel';
+        if (!isHalide && !baseMetals.includes(material)) return null;
         return isPassivating(portion, material, store) ? null : 'error';
       }),
   },

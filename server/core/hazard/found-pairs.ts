@@ -40,6 +40,13 @@ interface PairKind {
 
 const alkali = (portion: StoredPortion): boolean => isIn(portion, 'alkali-metal');
 
+/** A tertiary amine has none, and alkali metals leave it alone. */
+const holdsNitrogenHydrogen = ({ formula }: StoredPortion): boolean =>
+  formula === null || /NH|HN|H2N/.test(formula.text);
+
+/** Dimethyl sulphoxide and its kin: one sulphur, one oxygen, and carbon. */
+const isSulphoxide = ({ formula }: StoredPortion): boolean => formula !== null && /^\(C.*\)2SO$/.test(formula.text);
+
 const reducer = (portion: StoredPortion, store: Store): boolean =>
   isIn(portion, 'alkali-metal', 'alkaline-earth-metal') ||
   (isIn(portion, 'metal-hydride') && portion.phase !== 'gas') ||
@@ -50,6 +57,26 @@ const kinds: readonly PairKind[] = [
   {
     gives: alkali,
     takes: (portion) => soleElement(portion) === 'S' || isIn(portion, 'acid-chloride-salt', 'nitro-compound'),
+    severity: 'error',
+  },
+  // Explosive at a knock, and by compounds the tables do not hold.
+  {
+    gives: alkali,
+    takes: (portion) => isIn(portion, 'sulphide') && portion.molPerKg.has('C') && portion.phase === 'liquid',
+    severity: 'error',
+    needsNoNumbers: true,
+  },
+  // The solution runs away by itself, hours after it was made.
+  {
+    gives: (portion) => isIn(portion, 'alkali-metal') || (isIn(portion, 'metal-hydride') && portion.phase !== 'gas'),
+    takes: isSulphoxide,
+    severity: 'error',
+    needsNoNumbers: true,
+  },
+  // Ammonium nitrite, which goes to nitrogen and steam.
+  {
+    gives: (portion) => isIn(portion, 'ammonium-salt'),
+    takes: ({ formula }) => formula !== null && /[A-Z][a-z]?NO2$/.test(formula.text),
     severity: 'error',
   },
   // Thermites and their like: quiet until lit.
@@ -64,7 +91,7 @@ const kinds: readonly PairKind[] = [
   // Amides and hydrogen, slowly; rust and iron speed it up.
   {
     gives: alkali,
-    takes: (portion) => isIn(portion, 'ammonia') || (isIn(portion, 'amine') && !isIn(portion, 'alcohol')),
+    takes: (portion) => isIn(portion, 'ammonia') || (isIn(portion, 'amine') && holdsNitrogenHydrogen(portion)),
     severity: 'warning',
     needsNoNumbers: true,
   },

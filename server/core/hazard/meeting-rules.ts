@@ -80,8 +80,14 @@ export function burns(portion: StoredPortion): boolean {
   const element = soleElement(portion);
   if (element !== null) return ['C', 'S', 'P', 'B'].includes(element);
   const { molPerKg } = portion;
-  const isOrganic = molPerKg.has('C') && molPerKg.has('H') && !isIn(portion, 'carbonate', 'water');
+  // Urea's carbon is as oxidised as carbonic acid's: only carbon that holds hydrogen feeds a fire.
+  const isOrganic =
+    molPerKg.has('C') && molPerKg.has('H') && !isIn(portion, 'carbonate', 'water') && holdsCarbonHydrogen(portion);
   return isOrganic && oxygenDemand(molPerKg).molPerKg > leastDemandMolPerKg;
+}
+
+function holdsCarbonHydrogen({ formula }: StoredPortion): boolean {
+  return formula === null || /C\d*H|HC/.test(formula.text);
 }
 
 /** mol O2 per kg: sugar takes 35; what takes less than 5 hardly burns. */
@@ -165,6 +171,17 @@ export const meetingRules: readonly MeetingRule[] = [
     severity: byAmount,
   },
   {
+    id: 'magnesium-with-methanol',
+    code: 'hazard/metal-and-alcohol',
+    happens: 'Methanol dissolves the film and then the powder, as methoxide and hydrogen.',
+    mend: 'Use an oil, or a longer alcohol, for magnesium powder.',
+    source: ruleSources.bretherick,
+    first: (portion, store) => soleElement(portion) === 'Mg' && isPowder(portion, store),
+    second: (portion) => isIn(portion, 'alcohol') && portion.formula?.composition.get('C') === 1,
+    numbers: withHydrogen,
+    severity: always('warning'),
+  },
+  {
     id: 'metal-with-carbonyl',
     code: 'hazard/metal-and-carbonyl',
     happens: 'The metal or hydride reduces and condenses it, hot and sometimes late.',
@@ -201,6 +218,8 @@ export const meetingRules: readonly MeetingRule[] = [
       isIn(portion, 'water') && !(acidDissolves(first) && store.portions.some(isSharpAcid)),
     numbers: withWater,
     severity: (numbers, store, first) => {
+      // Caustic keeps borohydride for months: it is sold in lye.
+      if (first.molPerKg.has('B') && store.portions.some((other) => isIn(other, 'caustic'))) return 'information';
       if (!isIn(first, 'passivated-metal')) return byAmount(numbers);
       return holdsChloride(store) || isMolten(first) ? 'error' : 'warning';
     },

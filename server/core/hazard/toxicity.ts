@@ -26,7 +26,11 @@ const routes = Object.keys(pointEstimates) as Route[];
 export function toxicPortions(store: Store): readonly number[] {
   const found = new Map<number, number>();
   for (const route of routes) {
-    const parts = store.portions.map((portion) => portion.massShare / (estimateOf(portion, store, route) ?? Infinity));
+    // Parts per million of a gas are by volume.
+    const shares = route === 'gas' ? moleShares(store) : null;
+    const parts = store.portions.map(
+      (portion, index) => (shares?.[index] ?? portion.massShare) / (estimateOf(portion, store, route) ?? Infinity),
+    );
     const sum = parts.reduce((total, part) => total + part, 0);
     // A share written as 30 % is not quite 0.3.
     if (!(sum > 0) || 1 / sum > endOfCategory3[route] * (1 + 1e-9)) continue;
@@ -35,6 +39,17 @@ export function toxicPortions(store: Store): readonly number[] {
     });
   }
   return [...found].sort((a, b) => b[1] - a[1]).map(([index]) => index);
+}
+
+/** Null where a molar mass is missing. */
+function moleShares(store: Store): readonly number[] | null {
+  const mols: number[] = [];
+  for (const { massShare, molarMassKgPerMol } of store.portions) {
+    if (molarMassKgPerMol === null) return null;
+    mols.push(massShare / molarMassKgPerMol);
+  }
+  const total = mols.reduce((sum, mol) => sum + mol, 0);
+  return mols.map((mol) => mol / total);
 }
 
 function estimateOf(portion: StoredPortion, store: Store, route: Route): number | null {

@@ -137,6 +137,7 @@ function vapoursOf(store: Store): readonly Vapour[] {
     all.filter((portion) => isPolar(portion, holdsWater)),
     all.filter((portion) => !isPolar(portion, holdsWater)),
   ];
+  const everything = all.reduce((sum, portion) => sum + molOf(portion), 0);
   return layers.flatMap((layer) => {
     const mols = layer.map(molOf);
     const total = mols.reduce((sum, mol) => sum + mol, 0);
@@ -145,10 +146,16 @@ function vapoursOf(store: Store): readonly Vapour[] {
       const curve = vapourCurve(portion);
       if (curve === null) return [];
       const share = (mols[index] ?? 0) / total;
-      return [{ portion, ...curve, activity: share * activityInWater(portion, share, water) }];
+      const inLayer = share * activityInWater(portion, share, water);
+      // A trace dissolves in the other layer, and then exerts less than a layer of its own would.
+      const dissolved = (mostActivity * (mols[index] ?? 0)) / everything;
+      return [{ portion, ...curve, activity: Math.min(inLayer, dissolved) }];
     });
   });
 }
+
+/** Activity coefficient of a trace of alcohol in oil: 30 to 60 are measured. */
+const mostActivity = 60;
 
 /** What goes with water rather than with oil. Ketones and small ethers go with whatever there is. */
 function isPolar(portion: StoredPortion, besideWater: boolean): boolean {

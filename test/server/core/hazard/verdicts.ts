@@ -8,6 +8,8 @@ import gasesContactsAndOxidants from './verdicts/gases-contacts-and-oxidants.jso
 import hydridesAndMetals from './verdicts/hydrides-and-metals.json' with { type: 'json' };
 import otherAlkaliMetals from './verdicts/other-alkali-metals.json' with { type: 'json' };
 import oxidisersAcidsAndBases from './verdicts/oxidisers-acids-and-bases.json' with { type: 'json' };
+import secondLookOnFuels from './verdicts/second-look-on-fuels.json' with { type: 'json' };
+import secondLookOnMetals from './verdicts/second-look-on-metals.json' with { type: 'json' };
 import sodium from './verdicts/sodium.json' with { type: 'json' };
 import vapoursAndUllage from './verdicts/vapours-and-ullage.json' with { type: 'json' };
 
@@ -36,6 +38,8 @@ export const verdicts = [
   ...oxidisersAcidsAndBases,
   ...vapoursAndUllage,
   ...gasesContactsAndOxidants,
+  ...secondLookOnMetals,
+  ...secondLookOnFuels,
 ] as unknown as readonly Verdict[];
 
 /** `sodium 30, gas_oil 70 · 25 °C · under argon`: unique over the table. */
