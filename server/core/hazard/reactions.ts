@@ -21,6 +21,8 @@ export interface WaterStoichiometry {
   readonly gasMol: Readonly<Record<string, number>>;
   /** J per mol of formula, given off; null where a product has no enthalpy of formation. */
   readonly heatJ: number | null;
+  /** The same in plenty of water, in which alkali hydroxides, metaborates, hydrogen chloride and ammonia dissolve. */
+  readonly dissolvedHeatJ: number | null;
 }
 
 /** Heat of strong acid with strong base, J/mol of water made; of aqueous ions at 25 °C. */
@@ -66,6 +68,11 @@ function balanced(formula: Formula, gases: readonly string[]): WaterStoichiometr
           made.filter((one) => one !== undefined),
         )
       : undefined;
+  const heatJ = values?.kind === 'reaction' ? -values.enthalpyJ / own : null;
+  const dissolvingJ = right.reduce(
+    (sum, species, index) => sum + ((balance.coefficients.right[index] ?? 0) / own) * dissolvingHeatJPerMol(species),
+    0,
+  );
   const gasMol: Record<string, number> = {};
   right.forEach(({ text, phase }, index) => {
     if (phase === 'g') gasMol[text] = (balance.coefficients.right[index] ?? 0) / own;
@@ -73,8 +80,31 @@ function balanced(formula: Formula, gases: readonly string[]): WaterStoichiometr
   return {
     waterMol: waterMol / own,
     gasMol,
-    heatJ: values?.kind === 'reaction' ? -values.enthalpyJ / own : null,
+    heatJ,
+    dissolvedHeatJ: heatJ === null ? null : heatJ + dissolvingJ,
   };
+}
+
+/** Given off when a mol of it dissolves in plenty of water; 0 for what stays as it is or whose ions are not known. */
+function dissolvingHeatJPerMol({ text, phase }: Formula): number {
+  const [, metal = '', anion = ''] = /^(Li|Na|K|Rb|Cs)(OH|BO2)$/.exec(text) ?? [];
+  const pieces =
+    text === 'HCl'
+      ? ['H+(aq)', 'Cl-(aq)']
+      : text === 'NH3'
+        ? ['NH3(aq)']
+        : metal === ''
+          ? []
+          : [`${metal}+(aq)`, `${anion}-(aq)`];
+  if (pieces.length === 0) return 0;
+  const enthalpies = [`${text}(${phase ?? 'cr'})`, ...pieces].map((piece) => {
+    const formula = parseFormula(piece);
+    const substance = formula.kind === 'formula' ? findSubstanceOfFormula(formula) : undefined;
+    return substance && reactionTermOf(substance, 1).enthalpyJPerMol;
+  });
+  const [whole, ...parts] = enthalpies;
+  if (whole === undefined || parts.some((part) => part === undefined)) return 0;
+  return whole - parts.reduce((sum: number, part) => sum + (part ?? 0), 0);
 }
 
 /** Hydroxides of the metals, and what water makes of the rest. */
