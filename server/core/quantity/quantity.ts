@@ -134,16 +134,22 @@ export function quantityOf(
 
 /** An outcome of `propagate` as a quantity; no parts where they could not be had. They are worked out when first read. */
 export function quantityOfOutcome(outcome: Propagated, dimension: Dimension = dimensionless): Quantity {
-  const { value, kind } = quantityOf(outcome.value, dimension);
-  return {
-    value,
-    dimension,
-    kind,
-    get parts() {
-      return outcome.parts ?? noParts;
-    },
-  };
+  return Object.defineProperties(quantityOf(outcome.value, dimension), {
+    [unread]: { value: outcome },
+    parts: readOutcome,
+  });
 }
+
+/** Where a quantity has its outcome until its parts are read. */
+const unread = Symbol('unread');
+
+/** One for all of them: with a function of its own each quantity would be of another shape, and slow to make and read. */
+const readOutcome = {
+  enumerable: true,
+  get(this: { readonly [unread]: Propagated }): Parts {
+    return this[unread].parts ?? noParts;
+  },
+};
 
 /** The standard uncertainty of a quantity in SI base units; 0 when no input has one. */
 export function standardUncertainty(quantity: Quantity): number {

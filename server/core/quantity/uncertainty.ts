@@ -34,12 +34,25 @@ export function propagate(
   const centre = f(inputs.map(({ value }) => value));
   let known: readonly (Parts | undefined)[] | undefined;
   const partsOf = (index: number): Parts | undefined => (known ??= partsOfOutcomes(inputs, f, centre))[index];
-  return centre.map((value, index) => ({
-    value,
-    get parts() {
-      return partsOf(index);
-    },
-  }));
+  return centre.map((value, index) => new Outcome(value, index, partsOf));
+}
+
+class Outcome implements Propagated {
+  readonly #index: number;
+  readonly #partsOf: (index: number) => Parts | undefined;
+
+  constructor(
+    readonly value: number,
+    index: number,
+    partsOf: (index: number) => Parts | undefined,
+  ) {
+    this.#index = index;
+    this.#partsOf = partsOf;
+  }
+
+  get parts(): Parts | undefined {
+    return this.#partsOf(this.#index);
+  }
 }
 
 function partsOfOutcomes(
