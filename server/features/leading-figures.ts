@@ -3,8 +3,19 @@
 import type { EvaluatedDefinition, Figure } from '../scenario/scenario.ts';
 
 /** The figures of a definition, the most asked-for first. */
-export function leadingFigures(definition: EvaluatedDefinition): readonly Figure[] {
-  return definition.figures
+export function leadingFigures({ figures }: EvaluatedDefinition): readonly Figure[] {
+  const known = leading.get(figures);
+  if (known) return known;
+  const ordered = inOrder(figures);
+  leading.set(figures, ordered);
+  return ordered;
+}
+
+/** Of the definitions that a key leaves as they are, found once: a completion asks for those of all. */
+const leading = new WeakMap<readonly Figure[], readonly Figure[]>();
+
+function inOrder(figures: readonly Figure[]): readonly Figure[] {
+  return figures
     .map((figure, index) => ({ figure, rank: leadingRank(figure.id) + index / 1000 }))
     .sort((left, right) => left.rank - right.rank)
     .map(({ figure }) => figure);

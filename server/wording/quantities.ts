@@ -45,8 +45,16 @@ export function readingText({ value, uncertainty, unit }: Reading, style: Number
 
 /** A figure's value for a person: a share in percent, a temperature also in °C, the rest in the figure's unit. */
 export function figureText({ id, quantity, unit }: Pick<Figure, 'id' | 'quantity' | 'unit'>): string {
-  return isShare(id, unit) ? shareText(quantity) : toldText(quantity, unit);
+  const key = `${id} ${unit}`;
+  const known = figureTexts.get(quantity);
+  if (known?.key === key) return known.text;
+  const text = isShare(id, unit) ? shareText(quantity) : toldText(quantity, unit);
+  figureTexts.set(quantity, { key, text });
+  return text;
 }
+
+/** Quantities never change, and a list of completions shows those of hundreds of figures at every key. */
+const figureTexts = new WeakMap<Quantity, { readonly key: string; readonly text: string }>();
 
 /** The parts of `figureText` for a table: the number (with ±), its unit, and what stands behind in brackets. */
 export function figureCells({ id, quantity, unit }: Pick<Figure, 'id' | 'quantity' | 'unit'>): FigureCells {
