@@ -50,6 +50,7 @@ export function candidateSet(elements: readonly string[], options: CandidateOpti
   );
   const gases = found.filter((phase) => phase.formula.phase === 'g');
   const phases = [...gases, ...found.filter((phase) => phase.formula.phase !== 'g')];
+  const ranges = rangesK(phases);
   const rows = ions ? [...elements, charge] : [...elements];
   const atoms = new Float64Array(phases.length * rows.length);
   phases.forEach(({ formula }, index) => {
@@ -68,27 +69,34 @@ export function candidateSet(elements: readonly string[], options: CandidateOpti
       return count || 1;
     }),
     molarMassKgPerMol: Float64Array.from(phases, (phase) => phase.molarMassKgPerMol),
-    startK: Float64Array.from(phases, (phase) => rangeK(phase, phases)[0]),
-    endK: Float64Array.from(phases, (phase) => rangeK(phase, phases)[1]),
+    startK: Float64Array.from(ranges, ([startK]) => startK),
+    endK: Float64Array.from(ranges, ([, endK]) => endK),
     hasCharge: ions,
     properties: preparePropertySet(phases.map((phase) => phase.curve)),
   };
 }
 
 /**
- * Where a phase may be present. A crystal ends at its real end, where the data name one. Beyond the ends of its table a condensed
- * phase gives way to another of its composition that has data there: a crystal's heat capacity carried on far past its melting
- * point would make it stable again. Where no other has data, it is carried on, and the answer says so.
+ * Where each phase may be present. A crystal ends at its real end, where the data name one. Beyond the ends of its table a
+ * condensed phase gives way to another of its composition that has data there: a crystal's heat capacity carried on far past its
+ * melting point would make it stable again. Where no other has data, it is carried on, and the answer says so.
  */
-function rangeK(phase: ThermoPhase, phases: readonly ThermoPhase[]): readonly [startK: number, endK: number] {
-  if (phase.formula.phase === 'g') return [-Infinity, Infinity];
-  const [fromK, toK] = phase.validK;
-  const key = compositionKey(phase.formula);
-  const others = phases.filter(
-    (other) => other !== phase && other.formula.phase !== 'g' && compositionKey(other.formula) === key,
-  );
-  return [
-    others.some(({ validK }) => validK[0] < fromK && validK[1] >= fromK) ? fromK : -Infinity,
-    Math.min(phase.endK, others.some(({ validK }) => validK[1] > toK && validK[0] <= toK) ? toK : Infinity),
-  ];
+function rangesK(phases: readonly ThermoPhase[]): readonly (readonly [startK: number, endK: number])[] {
+  const keys = phases.map(({ formula }) => (formula.phase === 'g' ? '' : compositionKey(formula)));
+  const forms = new Map<string, ThermoPhase[]>();
+  phases.forEach((phase, index) => {
+    const key = keys[index] ?? '';
+    const same = forms.get(key);
+    if (same === undefined) forms.set(key, [phase]);
+    else same.push(phase);
+  });
+  return phases.map((phase, index) => {
+    if (phase.formula.phase === 'g') return [-Infinity, Infinity];
+    const [fromK, toK] = phase.validK;
+    const others = forms.get(keys[index] ?? '') ?? [];
+    return [
+      others.some(({ validK }) => validK[0] < fromK && validK[1] >= fromK) ? fromK : -Infinity,
+      Math.min(phase.endK, others.some(({ validK }) => validK[1] > toK && validK[0] <= toK) ? toK : Infinity),
+    ];
+  });
 }

@@ -7,6 +7,7 @@ import type { Check } from './answer.ts';
 import type { CandidateSet } from './candidates.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, Held, NoEquilibrium } from './equilibrium.ts';
+import type { Aim } from './newton.ts';
 import { aimOf, checkOf } from './held.ts';
 import { startCold, startNear } from './start.ts';
 import { atTemperatureAndPressure, atTemperatureAndVolume, byTemperature, descendAndCertify } from './sure-way.ts';
@@ -59,7 +60,7 @@ function solve(
     }
     return (
       descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check) ??
-      sureWay(work, elementMol, held, check, descent) ??
+      sureWay(work, elementMol, aim, held, check, descent) ??
       failed(elementMol, held)
     );
   };
@@ -75,6 +76,7 @@ function solve(
 function sureWay(
   work: Work,
   elementMol: Float64Array,
+  aim: Aim,
   held: Held,
   check: Check,
   descent: Descent,
@@ -85,7 +87,7 @@ function sureWay(
     case 'temperature-volume':
       return atTemperatureAndVolume(work, elementMol, held.temperatureK, held.volumeM3, descent);
     default:
-      return check.kind === 'none' ? undefined : byTemperature(work, elementMol, check, held, tablesK, descent);
+      return check.kind === 'none' ? undefined : byTemperature(work, elementMol, aim, check, held, tablesK, descent);
   }
 }
 

@@ -8,12 +8,13 @@
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { answerOf, isCertified, responseOf, stateOf } from './answer.ts';
 import type { Check } from './answer.ts';
+import { blended } from './blend.ts';
 import { findZero } from './bracket.ts';
 import type { Rising } from './bracket.ts';
 import { followCentre } from './centre.ts';
 import { descend, takePresentBasis } from './descent.ts';
 import type { Descent } from './descent.ts';
-import type { Equilibrium, NoEquilibrium, Pinned } from './equilibrium.ts';
+import type { Equilibrium, NoEquilibrium } from './equilibrium.ts';
 import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
 import { startCold, startNear } from './start.ts';
@@ -100,14 +101,18 @@ export function atTemperatureAndVolume(
     },
     [Math.log(lowestPressurePa), Math.log(highestPressurePa)],
     Math.log(standardPressurePa),
+    (state) => state.volumeM3,
+    volumeM3,
   );
-  return typeof end === 'string' ? undefined : end;
+  if (typeof end === 'string') return undefined;
+  return end.pinned === null ? end : (settled(work, elementMol, aim, end, bounds, descent) ?? end);
 }
 
 /** Enthalpy, entropy or energy held with pressure or volume, by narrowing the temperature. */
 export function byTemperature(
   work: Work,
   elementMol: Float64Array,
+  aim: Aim,
   check: Check & { readonly value: number },
   held: { readonly pressurePa: number } | { readonly volumeM3: number },
   range: Range,
@@ -132,10 +137,16 @@ export function byTemperature(
     },
     [range.lowestK, range.highestK],
     firstTemperatureK,
+    (state) => reached(state, check),
+    check.value,
   );
   if (end === 'failed') return undefined;
   if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
   if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
+  if (end.pinned?.by === 'phase-change') {
+    const state = settled(work, elementMol, aim, end, range, descent, check);
+    if (state !== undefined) return state;
+  }
   return { ...end, certificate: { ...end.certificate, heldResidual: Math.abs(valueOf(end)) } };
 }
 
@@ -146,10 +157,13 @@ function reached(state: Equilibrium, check: Check): number {
   return check.kind === 'energy' ? state.enthalpyJ - state.pressurePa * state.volumeM3 : state.enthalpyJ;
 }
 
+/** The state at the zero, or the blend of those at a jump in the shares that hold what is held. */
 function reach(
   rising: Rising<Equilibrium>,
   bounds: readonly [number, number],
   start: number,
+  amountHeld: (state: Equilibrium) => number,
+  held: number,
 ): Equilibrium | 'below' | 'above' | 'failed' {
   const end = findZero(rising, bounds, start);
   if (end.kind === 'root') return end.state;
@@ -158,78 +172,29 @@ function reach(
   if (Math.max(-end.lowValue, end.highValue) < certifiedValue) {
     return -end.lowValue < end.highValue ? end.low : end.high;
   }
-  return blended(end.low, end.high, -end.lowValue / (end.highValue - end.lowValue));
+  const low = amountHeld(end.low);
+  return blended(end.low, end.high, (held - low) / (amountHeld(end.high) - low));
+}
+
+/** The exact state beside a blend of phases that change into one another: what is rare follows the blend's potentials. */
+function settled(
+  work: Work,
+  elementMol: Float64Array,
+  aim: Aim,
+  blend: Equilibrium,
+  range: Range,
+  descent: Descent,
+  check: Check = { kind: 'none' },
+): Equilibrium | undefined {
+  const { temperatureK, pressurePa } = blend;
+  admitPhases(work, temperatureK);
+  if (!startNear(work, aim, aim.seeks === 'temperature' ? temperatureK : undefined, blend)) return undefined;
+  return descendAndCertify(work, elementMol, aim, range, pressurePa, descent, check);
 }
 
 /** A held property this near (over R times the atoms, and T) is met. */
 const nearEnough = 1e-12;
 const certifiedValue = 1e-9;
-
-/** Two certified states at one temperature and pressure that share what is held. */
-function blended(low: Equilibrium, high: Equilibrium, share: number): Equilibrium {
-  const mix = (a: number, b: number): number => a + share * (b - a);
-  const set = low.candidates;
-  const amountsMol = low.amountsMol.map((amount, phase) => mix(amount, high.amountsMol[phase] ?? 0));
-  let gasMol = 0;
-  let gasMass = 0;
-  for (let phase = 0; phase < set.gasCount; phase += 1) {
-    gasMol += amountsMol[phase] ?? 0;
-    gasMass += (amountsMol[phase] ?? 0) * (set.molarMassKgPerMol[phase] ?? 0);
-  }
-  const hasBoth = low.gasMol > 0 && high.gasMol > 0;
-  const logFractions = (low.gasMol > 0 ? low : high).logFractions.map((logarithm, phase) => {
-    const amount = amountsMol[phase] ?? 0;
-    return hasBoth && phase < set.gasCount && amount > 0 ? Math.log(amount / gasMol) : logarithm;
-  });
-  const enthalpyJ = mix(low.enthalpyJ, high.enthalpyJ);
-  const entropyJPerK = mix(low.entropyJPerK, high.entropyJPerK);
-  const { certificate: one } = low;
-  const { certificate: other } = high;
-  return {
-    ...(share < 0.5 ? low : high),
-    pressurePa: mix(low.pressurePa, high.pressurePa),
-    amountsMol,
-    logFractions,
-    gasMol,
-    gasMolarMassKgPerMol: gasMol > 0 ? gasMass / gasMol : 0,
-    volumeM3: mix(low.volumeM3, high.volumeM3),
-    condensedMassShare: mix(low.condensedMassShare, high.condensedMassShare),
-    enthalpyJ,
-    entropyJPerK,
-    gibbsEnergyJ: enthalpyJ - low.temperatureK * entropyJPerK,
-    frozenHeatCapacityJPerK: mix(low.frozenHeatCapacityJPerK, high.frozenHeatCapacityJPerK),
-    heatCapacityJPerK: null,
-    frozenGamma: null,
-    gamma: null,
-    speedOfSoundMPerS: null,
-    pinned: pinnedBetween(low, high),
-    extrapolated: [...new Set([...low.extrapolated, ...high.extrapolated])],
-    certificate: {
-      elementBalance: Math.max(one.elementBalance, other.elementBalance),
-      largestAffinity: Math.max(one.largestAffinity, other.largestAffinity),
-      potentialResidual: Math.max(one.potentialResidual, other.potentialResidual),
-      heldResidual: 0,
-    },
-  };
-}
-
-function pinnedBetween(low: Equilibrium, high: Equilibrium): Pinned {
-  const set = low.candidates;
-  const leaving: number[] = [];
-  const appearing: number[] = [];
-  let atoms = 0;
-  for (let phase = 0; phase < set.phases.length; phase += 1)
-    atoms += (low.amountsMol[phase] ?? 0) * (set.atomCount[phase] ?? 1);
-  for (let phase = set.gasCount; phase < set.phases.length; phase += 1) {
-    const change = (high.amountsMol[phase] ?? 0) - (low.amountsMol[phase] ?? 0);
-    if (change < -1e-9 * atoms) leaving.push(phase);
-    else if (change > 1e-9 * atoms) appearing.push(phase);
-  }
-  const gasGrows = high.gasMol - low.gasMol > 1e-9 * atoms;
-  const endsHere = leaving.some((phase) => (set.endK[phase] ?? Infinity) <= high.temperatureK);
-  const isStill = leaving.length === 0 && appearing.length === 0 && !gasGrows;
-  return { by: endsHere ? 'end-of-phase' : isStill ? 'transition' : 'phase-change', leaving, appearing, gasGrows };
-}
 
 export function pressureAim(pressurePa: number): Aim {
   return {

@@ -79,9 +79,19 @@ export function allPhases(): readonly ThermoPhase[] {
   return library().phases;
 }
 
-/** The phases that an equilibrium may hold: all that exist, but for those that no search must use. */
+/**
+ * The phases that an equilibrium may hold: all that exist, but for those that no search must use and for forms that are
+ * nowhere the stable one of their composition (anatase, gamma alumina, sodium sulphate III): where two forms come within the
+ * errors of their fits such a one would win by a hair.
+ */
 export function candidatePhases(): readonly ThermoPhase[] {
-  return library().phases.filter(({ leftOut, hypothetical }) => leftOut === undefined && hypothetical === undefined);
+  const { phases, byComposition } = library();
+  return phases.filter((phase) => {
+    if (phase.leftOut !== undefined || phase.hypothetical !== undefined) return false;
+    if (phase.formula.phase === 'g' || phase.stableK.length > 0) return true;
+    const same = byComposition.get(compositionKey(phase.formula)) ?? [];
+    return !same.some(({ stableK }) => stableK.length > 0);
+  });
 }
 
 /** The phase of that exact id, or undefined. */
