@@ -27,7 +27,7 @@ export function balanceTraces(work: Work, aim: Aim): void {
   for (let sweep = 0; sweep < mostSweeps; sweep += 1) {
     let largest = 0;
     for (let k = 0; k < rank; k += 1) {
-      if (at(amounts, k) >= limit || isForced[k] === 1) continue;
+      if (at(amounts, k) >= limit || isForced[k] === 1 || hasCondensed(work, k)) continue;
       let made = Math.max(0, -at(amounts, k));
       let taken = Math.max(0, at(amounts, k));
       let madeSlope = 0;
@@ -56,6 +56,12 @@ export function balanceTraces(work: Work, aim: Aim): void {
     }
     if (largest === 0) return;
   }
+}
+
+/** Whether a condensed phase that is present stands in a balance: gases alone do not decide it then. */
+function hasCondensed({ present, presentCount, nu, width }: Work, k: number): boolean {
+  for (let index = 0; index < presentCount; index += 1) if (at(nu, at32(present, index) * width + k) !== 0) return true;
+  return false;
 }
 
 function at(values: Float64Array, index: number): number {
