@@ -11,9 +11,16 @@ const root = path.resolve(import.meta.dirname, '..');
 const pages = [
   {
     file: 'catalogue.md',
-    modules: ['server/report/catalogue-page.ts', 'server/core/substance/records.ts'],
-    write: ({ cataloguePage, substanceRecords, sourceRecords }) =>
-      cataloguePage(substanceRecords, sourceRecords, 'npm run pages'),
+    modules: [
+      'server/report/catalogue-page.ts',
+      'server/core/substance/records.ts',
+      'server/core/substance/hazard-records.ts',
+    ],
+    write: ({ cataloguePage, substanceRecords, hazardRecords, sourceRecords, hazardSourceRecords }) =>
+      cataloguePage(
+        { records: substanceRecords, hazards: hazardRecords, sources: [...sourceRecords, ...hazardSourceRecords] },
+        'npm run pages',
+      ),
   },
   {
     file: 'language.md',

@@ -1,6 +1,7 @@
 // Tells what is known of a substance or blend: its formula and phase first, then each property with its condition and
 // source. Shows the card as it is handed over. Invariant: no property without its unit and where it comes from.
 import type { MaterialCard, Place } from '../scenario/scenario.ts';
+import { cautionText } from '../wording/hazards.ts';
 import { listed } from '../wording/words.ts';
 import { figureText } from '../wording/quantities.ts';
 import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
@@ -16,12 +17,15 @@ export function cardTitle({ name, formula, phase }: MaterialCard): string {
   return nature.length > 0 ? `${name}: ${nature.join(', ')}` : name;
 }
 
-export function cardLines({ properties }: MaterialCard): HoverLine[] {
-  return properties.map((property) => {
+/** The caution first, so that no length of a card can cut it off. */
+export function cardLines({ name, hazards, properties }: MaterialCard): HoverLine[] {
+  const caution = hazards && cautionText(name.replaceAll('_', ' '), hazards);
+  const known = properties.map((property) => {
     const { label, condition, source } = property;
     const value = condition === '' ? figureText(property) : `${figureText(property)} ${condition}`;
     return { label, text: source === '' ? value : `${value} (${authorAndYear(source)})` };
   });
+  return caution === null ? known : [{ sentence: caution }, ...known];
 }
 
 /** A hover has room for who and when; the whole source is in the catalogue and in a figure's working. */

@@ -4,6 +4,7 @@
 // worked out, from the formulas. Knows no scenario. Invariant: every sourced number of a record is in the page.
 
 import { molarMassKgPerMol, parseFormula } from '../core/substance/formula.ts';
+import type { HazardRecord } from '../core/substance/hazard-record.ts';
 import type {
   DensityRecord,
   HeatCapacityRecord,
@@ -12,15 +13,27 @@ import type {
   SourceRecord,
   SubstanceRecord,
 } from '../core/substance/record.ts';
+import { standingCaution } from '../wording/hazards.ts';
+import { listed } from '../wording/words.ts';
+import { hazardPageRows, statementCodes, unNumbers, type PageRow } from './catalogue-page-hazards.ts';
+
+/** What the page is made of: substances, their hazards, and the sources of both. */
+export interface CataloguePageInput {
+  readonly records: readonly SubstanceRecord[];
+  readonly hazards: readonly HazardRecord[];
+  readonly sources: readonly SourceRecord[];
+}
 
 /** The page as Markdown, substances and sources in alphabetical order; `command` is what writes it anew. */
-export function cataloguePage(
-  records: readonly SubstanceRecord[],
-  sources: readonly SourceRecord[],
-  command: string,
-): string {
+export function cataloguePage({ records, hazards, sources }: CataloguePageInput, command: string): string {
   const substances = [...records].sort((a, b) => (a.name < b.name ? -1 : 1));
-  const rowsOf = new Map(substances.map((record) => [record.name, substanceRows(record)]));
+  const hazardsOf = new Map(hazards.map((record) => [record.name, record]));
+  const rowsOf = new Map(
+    substances.map((record) => [
+      record.name,
+      [...substanceRows(record), ...hazardPageRows(hazardsOf.get(record.name))],
+    ]),
+  );
   const entriesOfSource = new Map<string, number>();
   for (const { source } of [...rowsOf.values()].flat())
     entriesOfSource.set(source, (entriesOfSource.get(source) ?? 0) + 1);
@@ -34,7 +47,10 @@ export function cataloguePage(
     `${provenanceCounts(used, entriesOfSource)}.`,
     'Formation enthalpies and entropies are those at 298.15 K and 1 bar, melting and boiling points those at 1 atm. In a',
     'heat capacity t is T/1000 K. Molar masses come from the formulas and the conventional atomic weights.',
-    'Each source is named by its id; they are listed at the end.',
+    'Each source is named by its id; they are listed at the end. Codes in brackets are of one form alone, such as powder.',
+    '',
+    `Hazards are for screening: ${hazards.length} substances have a record, and one without is not harmless for that.`,
+    standingCaution,
     '',
     '## At a glance',
     '',
@@ -48,12 +64,16 @@ export function cataloguePage(
         'boils, °C',
         'flash point, °C',
         'in air, vol %',
+        'GHS',
+        'UN',
       ],
-      substances.map(glance),
+      substances.map((record) => glance(record, hazardsOf.get(record.name))),
     ),
     '',
     '## One by one',
-    ...substances.flatMap((record) => substanceSection(record, rowsOf.get(record.name) ?? [])),
+    ...substances.flatMap((record) =>
+      substanceSection(record, hazardsOf.get(record.name)?.families ?? [], rowsOf.get(record.name) ?? []),
+    ),
     '',
     '## Sources',
     '',
@@ -65,17 +85,10 @@ export function cataloguePage(
   ].join('\n');
 }
 
-/** One line of a substance's table. */
-interface PageRow {
-  readonly label: string;
-  readonly value: string;
-  readonly source: string;
-}
-
 const phaseWords = { g: 'gas', l: 'liquid', cr: 'crystal', aq: 'in water' } as const;
 const originWords = { fossil: 'fossil', biogenic: 'biogenic', mineral: 'mineral', air: 'from the air' } as const;
 
-function glance(record: SubstanceRecord): string[] {
+function glance(record: SubstanceRecord, hazards: HazardRecord | undefined): string[] {
   const stable = record.phases.find((phase) => phase.stable === true);
   const limits = record.flammableLimits;
   return [
@@ -87,6 +100,8 @@ function glance(record: SubstanceRecord): string[] {
     pointText(record.boilingPoint),
     pointText(record.flashPoint),
     limits === undefined ? '' : limitsText(limits.lowerPercent, limits.upperPercent),
+    statementCodes(hazards),
+    unNumbers(hazards),
   ];
 }
 
@@ -94,7 +109,7 @@ function pointText(point: { readonly celsius: number } | undefined): string {
   return point === undefined ? '' : String(point.celsius);
 }
 
-function substanceSection(record: SubstanceRecord, rows: readonly PageRow[]): string[] {
+function substanceSection(record: SubstanceRecord, families: readonly string[], rows: readonly PageRow[]): string[] {
   const aliases = [record.aliases ?? [], ...record.phases.map((phase) => phase.aliases ?? [])].flat();
   const molarMass = molarMassText(record.formula);
   const facts = [
@@ -102,6 +117,7 @@ function substanceSection(record: SubstanceRecord, rows: readonly PageRow[]): st
     ...(aliases.length === 0 ? [] : [`also ${aliases.join(', ')}`]),
     ...(record.carbonOrigin === undefined ? [] : [`carbon ${originWords[record.carbonOrigin]}`]),
     ...(record.carbonBiogenicShare === undefined ? [] : [`${record.carbonBiogenicShare} of the carbon biogenic`]),
+    ...(families.length === 0 ? [] : [`reacts as ${listed(families.map((family) => family.replaceAll('-', ' ')))}`]),
   ];
   return [
     '',

@@ -2,6 +2,7 @@
 // Shows cards and knows no records. Invariant: no number without its source.
 
 import type { CardProperty, MaterialCard } from '../scenario/scenario.ts';
+import { cautionText, familiesText, hazardRows } from '../wording/hazards.ts';
 import { figureText } from '../wording/quantities.ts';
 import { counted } from '../wording/words.ts';
 import { columns } from './columns.ts';
@@ -25,21 +26,36 @@ function withoutRepeats(card: MaterialCard, before: readonly MaterialCard[]): Ma
   const told = before.filter(({ name }) => name === card.name).flatMap(({ properties }) => properties);
   const isTold = ({ id, quantity, source }: CardProperty): boolean =>
     told.some((other) => other.id === id && other.quantity.value === quantity.value && other.source === source);
-  return { ...card, properties: card.properties.filter((property) => !isTold(property)) };
+  const isHazardTold = before.some(({ name }) => name === card.name);
+  const properties = card.properties.filter((property) => !isTold(property));
+  return { ...card, properties, hazards: isHazardTold ? null : card.hazards };
 }
 
 function cardText(card: MaterialCard, sources: Map<string, number>): string {
   const heading = [card.name, formula(card)].filter((part) => part !== '').join('  ');
-  const rows = card.properties.map((property) => {
-    const { label, condition, source } = property;
+  const row = (label: string, text: string, source: string): string[] => {
     const number = sources.get(source) ?? sources.size + 1;
     sources.set(source, number);
-    return [label, [figureText(property), condition].filter((part) => part !== '').join(' '), `[${number}]`];
+    return [label, text, `[${number}]`];
+  };
+  const rows = card.properties.map((property) => {
+    const { label, condition, source } = property;
+    return row(label, [figureText(property), condition].filter((part) => part !== '').join(' '), source);
+  });
+  const { hazards } = card;
+  const caution = hazards && cautionText(card.name.replaceAll('_', ' '), hazards);
+  // Texts of hazards are long: the source's number stands behind each, not in a column of its own.
+  const dangers = (hazards ? hazardRows(hazards) : []).map(({ label, text, source }) => {
+    const [first = '', ...others] = row(label, text, source);
+    return [first, others.join('  ')];
   });
   return [
     heading,
     ...(card.aliases.length > 0 ? [`  also ${card.aliases.join(', ')}`] : []),
+    ...(caution === null ? [] : [`  ${caution}`]),
+    ...(hazards && hazards.families.length > 0 ? [`  reacts as ${familiesText(hazards)}`] : []),
     ...columns(rows).map((line) => `  ${line}`),
+    ...columns(dangers).map((line) => `  ${line}`),
   ].join('\n');
 }
 

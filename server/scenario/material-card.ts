@@ -17,6 +17,7 @@ export function cardOfSubstance(substance: Substance): MaterialCard {
     phase: substance.phase,
     aliases: substance.aliases,
     properties: [...matterOf(substance), ...temperaturesOf(substance), ...rulesOf(substance)],
+    hazards: substance.hazards ?? null,
   };
 }
 

@@ -141,6 +141,7 @@ function materialOfFormula(formula: Formula): Material {
     phase: formula.phase ?? null,
     aliases: [],
     properties: [],
+    hazards: null,
   };
   return {
     name: text,

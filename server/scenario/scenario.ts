@@ -6,6 +6,7 @@
 
 import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Hazards } from '../core/substance/hazards.ts';
 import type { Fact } from './facts.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
@@ -117,6 +118,8 @@ export interface MaterialCard {
   readonly aliases: readonly string[];
   /** Each known property in its contract unit, with its source in words. */
   readonly properties: readonly CardProperty[];
+  /** What is recorded of its hazards; null when nothing is, which does not make it harmless. A blend's are its portions'. */
+  readonly hazards: Hazards | null;
 }
 
 export interface CardProperty {

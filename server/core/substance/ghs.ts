@@ -13,67 +13,65 @@ export interface GhsClass {
   /** The codes it may carry, one each time: acute toxicity has one a route. */
   readonly statements: readonly string[];
   readonly area: HazardArea;
-  /** The danger in a few words, small letters. */
-  readonly danger: string;
 }
 
-type Row = readonly [hazardClass: string, categories: string, statements: string, danger: string];
+type Row = readonly [hazardClass: string, categories: string, statements: string];
 
 const physical: readonly Row[] = [
-  ['Unst. Expl.', '', 'H200', 'unstable explosive'],
-  ['Expl.', '1.1', 'H201', 'mass explosion'],
-  ['Flam. Gas', '1A', 'H220 H230 H231 H232', 'extremely flammable gas'],
-  ['Flam. Gas', '1B 2', 'H221', 'flammable gas'],
-  ['Flam. Liq.', '1', 'H224', 'extremely flammable liquid'],
-  ['Flam. Liq.', '2', 'H225', 'highly flammable liquid'],
-  ['Flam. Liq.', '3', 'H226', 'flammable liquid'],
-  ['Flam. Liq.', '4', 'H227', 'combustible liquid'],
-  ['Flam. Sol.', '1 2', 'H228', 'flammable solid'],
-  ['Pyr. Liq.', '1', 'H250', 'takes fire in air'],
-  ['Pyr. Sol.', '1', 'H250', 'takes fire in air'],
-  ['Self-heat.', '1', 'H251', 'heats itself in air'],
-  ['Self-heat.', '2', 'H252', 'heats itself in air in large amounts'],
-  ['Water-react.', '1', 'H260', 'water makes flammable gas that may take fire'],
-  ['Water-react.', '2 3', 'H261', 'water makes flammable gas'],
-  ['Ox. Gas', '1', 'H270', 'oxidising gas'],
-  ['Ox. Liq.', '1', 'H271', 'strong oxidiser'],
-  ['Ox. Liq.', '2 3', 'H272', 'oxidiser'],
-  ['Ox. Sol.', '1', 'H271', 'strong oxidiser'],
-  ['Ox. Sol.', '2 3', 'H272', 'oxidiser'],
-  ['Press. Gas', 'Comp. Liq. Diss.', 'H280', 'gas under pressure'],
-  ['Press. Gas', 'Ref.', 'H281', 'refrigerated gas, cold burns'],
-  ['Met. Corr.', '1', 'H290', 'corrodes metals'],
+  ['Unst. Expl.', '', 'H200'],
+  ['Expl.', '1.1', 'H201'],
+  ['Flam. Gas', '1A', 'H220 H230 H231 H232'],
+  ['Flam. Gas', '1B 2', 'H221'],
+  ['Flam. Liq.', '1', 'H224'],
+  ['Flam. Liq.', '2', 'H225'],
+  ['Flam. Liq.', '3', 'H226'],
+  ['Flam. Liq.', '4', 'H227'],
+  ['Flam. Sol.', '1 2', 'H228'],
+  ['Pyr. Liq.', '1', 'H250'],
+  ['Pyr. Sol.', '1', 'H250'],
+  ['Self-heat.', '1', 'H251'],
+  ['Self-heat.', '2', 'H252'],
+  ['Water-react.', '1', 'H260'],
+  ['Water-react.', '2 3', 'H261'],
+  ['Ox. Gas', '1', 'H270'],
+  ['Ox. Liq.', '1', 'H271'],
+  ['Ox. Liq.', '2 3', 'H272'],
+  ['Ox. Sol.', '1', 'H271'],
+  ['Ox. Sol.', '2 3', 'H272'],
+  ['Press. Gas', 'Comp. Liq. Diss.', 'H280'],
+  ['Press. Gas', 'Ref.', 'H281'],
+  ['Met. Corr.', '1', 'H290'],
 ];
 
 const health: readonly Row[] = [
-  ['Acute Tox.', '1 2', 'H300 H310 H330', 'fatal poison'],
-  ['Acute Tox.', '3', 'H301 H311 H331', 'toxic'],
-  ['Acute Tox.', '4', 'H302 H312 H332', 'harmful'],
-  ['Skin Corr.', '1 1A 1B 1C', 'H314', 'burns skin and eyes'],
-  ['Skin Irrit.', '2', 'H315', 'irritates the skin'],
-  ['Eye Dam.', '1', 'H318', 'damages the eyes'],
-  ['Eye Irrit.', '2', 'H319', 'irritates the eyes'],
-  ['Skin Sens.', '1 1A 1B', 'H317', 'skin allergy'],
-  ['Muta.', '1A 1B', 'H340', 'genetic defects'],
-  ['Muta.', '2', 'H341', 'suspected of genetic defects'],
-  ['Carc.', '1A 1B', 'H350', 'causes cancer'],
-  ['Carc.', '2', 'H351', 'suspected of causing cancer'],
-  ['Repr.', '1A 1B', 'H360', 'damages fertility or the unborn child'],
-  ['Repr.', '2', 'H361', 'suspected of damaging fertility or the unborn child'],
-  ['STOT SE', '1', 'H370', 'damages organs'],
-  ['STOT SE', '2', 'H371', 'may damage organs'],
-  ['STOT SE', '3', 'H335 H336', 'irritates the airways or makes drowsy'],
-  ['STOT RE', '1', 'H372', 'damages organs over time'],
-  ['STOT RE', '2', 'H373', 'may damage organs over time'],
-  ['Asp. Tox.', '1', 'H304', 'fatal if swallowed into the airways'],
+  ['Acute Tox.', '1 2', 'H300 H310 H330'],
+  ['Acute Tox.', '3', 'H301 H311 H331'],
+  ['Acute Tox.', '4', 'H302 H312 H332'],
+  ['Skin Corr.', '1 1A 1B 1C', 'H314'],
+  ['Skin Irrit.', '2', 'H315'],
+  ['Eye Dam.', '1', 'H318'],
+  ['Eye Irrit.', '2', 'H319'],
+  ['Skin Sens.', '1 1A 1B', 'H317'],
+  ['Muta.', '1A 1B', 'H340'],
+  ['Muta.', '2', 'H341'],
+  ['Carc.', '1A 1B', 'H350'],
+  ['Carc.', '2', 'H351'],
+  ['Repr.', '1A 1B', 'H360'],
+  ['Repr.', '2', 'H361'],
+  ['STOT SE', '1', 'H370'],
+  ['STOT SE', '2', 'H371'],
+  ['STOT SE', '3', 'H335 H336'],
+  ['STOT RE', '1', 'H372'],
+  ['STOT RE', '2', 'H373'],
+  ['Asp. Tox.', '1', 'H304'],
 ];
 
 const environment: readonly Row[] = [
-  ['Aquatic Acute', '1', 'H400', 'very toxic to water life'],
-  ['Aquatic Chronic', '1', 'H410', 'very toxic to water life, lasting'],
-  ['Aquatic Chronic', '2', 'H411', 'toxic to water life, lasting'],
-  ['Aquatic Chronic', '3', 'H412', 'harmful to water life, lasting'],
-  ['Aquatic Chronic', '4', 'H413', 'may harm water life, lasting'],
+  ['Aquatic Acute', '1', 'H400'],
+  ['Aquatic Chronic', '1', 'H410'],
+  ['Aquatic Chronic', '2', 'H411'],
+  ['Aquatic Chronic', '3', 'H412'],
+  ['Aquatic Chronic', '4', 'H413'],
 ];
 
 export const ghsClasses: readonly GhsClass[] = (
@@ -83,13 +81,12 @@ export const ghsClasses: readonly GhsClass[] = (
     ['environment', environment],
   ] as const
 ).flatMap(([area, rows]) =>
-  rows.flatMap(([hazardClass, categories, statements, danger]) =>
+  rows.flatMap(([hazardClass, categories, statements]) =>
     categories.split(' ').map((category) => ({
       hazardClass,
       category,
       statements: statements.split(' '),
       area,
-      danger,
     })),
   ),
 );

@@ -10,7 +10,7 @@ import metalsAndHydrides from './data/hazards/metals-and-hydrides.json';
 import oxidesAndMinerals from './data/hazards/oxides-and-minerals.json';
 import oxygenates from './data/hazards/oxygenates.json';
 import sources from './data/hazards/sources.json';
-import type { HazardRecord } from './hazard-record.ts';
+import type { HazardRecord, TransportRecord } from './hazard-record.ts';
 import type { SourceRecord } from './record.ts';
 
 // The compiler reads JSON strings as `string`; the schema test vouches for the closed lists.
@@ -32,4 +32,13 @@ export function hazardRecordOf(name: string): HazardRecord | undefined {
   return byName.get(name);
 }
 
+/** What the dangerous goods list says of a number, where some substance here has it. */
+export function transportRecordOf(unNumber: number): TransportRecord | undefined {
+  byUnNumber ??= new Map(
+    hazardRecords.flatMap(({ transport = [] }) => transport).map((entry) => [entry.unNumber, entry]),
+  );
+  return byUnNumber.get(unNumber);
+}
+
+let byUnNumber: ReadonlyMap<number, TransportRecord> | undefined;
 let byName: ReadonlyMap<string, HazardRecord> | undefined;

@@ -127,13 +127,13 @@ export interface HazardClass {
   readonly source: SourceRecord;
 }
 
-/** One entry of the dangerous goods list. */
+/** One entry of the dangerous goods list. Of a user's own substance the number alone may be known. */
 export interface TransportEntry {
   /** Four digits: 1428. */
   readonly unNumber: number;
-  readonly properShippingName: string;
+  readonly properShippingName?: string;
   /** Class or division: `4.3`. */
-  readonly dangerClass: string;
+  readonly dangerClass?: string;
   readonly subsidiary: readonly string[];
   /** Absent where the class has none (gases). */
   readonly packingGroup?: 'I' | 'II' | 'III';

@@ -117,7 +117,7 @@ function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products
     portions: mixed.shares,
     assumptions: [...new Set([...inherited, ...own, ...(mixed.scaled ? (['shares-scaled'] as const) : [])])],
     sources: [...new Set(parts.flatMap(({ material }) => material.sources))],
-    card: { name, origin: 'scenario', formula: null, phase: null, aliases: [], properties: [] },
+    card: { name, origin: 'scenario', formula: null, phase: null, aliases: [], properties: [], hazards: null },
     missing,
   };
 }

@@ -7,6 +7,7 @@ import type { Quantity } from '../../core/quantity/quantity.ts';
 import { compositionReader } from '../composition.ts';
 import type { EntryRow, Reader } from '../entries.ts';
 import { evaluateExpression } from '../expressions.ts';
+import { hazardsReader } from '../hazards-reader.ts';
 import {
   carbonOriginReader,
   formulaReader,
@@ -132,6 +133,11 @@ export const substanceEntries = {
     carbonOriginReader,
     'Where its carbon comes from: biogenic carbon was taken from the air lately, fossil carbon was not.',
     { default: { text: 'fossil', source: 'convention of this program: nothing is credited unasked' } },
+  ),
+  hazards: row(
+    'hazards',
+    hazardsReader,
+    'Its dangers by GHS statement code, its UN number, and what it reacts as; what is not written is not known, which does not make it harmless.',
   ),
   source: row('source', textReader('a text in quotes'), 'Where these numbers come from; shown wherever they are used.'),
 };

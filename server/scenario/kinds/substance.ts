@@ -11,11 +11,13 @@ import { noParts } from '../../core/quantity/parts.ts';
 import { isFault, multiply, divide, quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
 import { referenceTemperatureK, type HeatCapacity } from '../../core/substance/substance.ts';
+import type { SourceRecord } from '../../core/substance/record.ts';
 import { molPerKgOfFormula } from '../../core/substance/composition.ts';
 import { formulaTextWithPhase, molarMassKgPerMol, type Formula } from '../../core/substance/formula.ts';
 import type { Context } from '../context.ts';
 import { checkHeatingValue } from '../heating-value-check.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
+import { hazardsSaid } from '../hazards-reader.ts';
 import { givenFigureRows, givenFigures } from '../given-figures.ts';
 import type { Material, MissingProperty } from '../material.ts';
 import { answerMaterial, materialFigures, slateGaps } from '../material-figures.ts';
@@ -162,6 +164,7 @@ function materialOf(
       phase,
       aliases: [],
       properties: cardProperties(read, molarMass),
+      hazards: read.hazards ? hazardsSaid(read.hazards.value, sourceSaid(read)) : null,
     },
     missing,
   };
@@ -172,15 +175,12 @@ function heatCapacityOf(read: Entries): HeatCapacity | null {
   if (!read.heatCapacity) return null;
   const { quantity, at } = read.heatCapacity.value;
   const atK = at?.value ?? referenceTemperatureK;
-  const source = {
-    id: '',
-    author: '',
-    year: 0,
-    title: read.source?.value ?? '',
-    where: '',
-    provenance: 'seen',
-  } as const;
-  return { terms: [{ power: 0, jPerKgK: quantity.value }], fromK: atK, toK: atK, source };
+  return { terms: [{ power: 0, jPerKgK: quantity.value }], fromK: atK, toK: atK, source: sourceSaid(read) };
+}
+
+/** The definition's own word for where its numbers come from. */
+function sourceSaid(read: Entries): SourceRecord {
+  return { id: '', author: 'this scenario', year: 0, title: read.source?.value ?? '', where: '', provenance: 'seen' };
 }
 
 /** J/kg; null when nothing says it, undefined when it cannot be worked out (said). */

@@ -13,10 +13,22 @@ test('a list, one line a substance', async () => {
 
 test.each([['sodium'], ['Na'], ['Na(cr)']])('%s is found, and every number has its source', async (word) => {
   const [cards = '', sources = ''] = (await told(word)).split('\nSources\n');
-  const numbers = cards.split('\n').filter((line) => line.startsWith('  ') && !line.startsWith('  also'));
+  const numbers = cards.split('\n').filter((line) => /^ {2}(?!also|reacts as|Caution,)/.test(line));
   const listed = sources.split('\n').flatMap((line) => /^ {2}\[(\d+)\] {2}\S/.exec(line)?.[1] ?? []);
   expect(numbers.length).toBeGreaterThan(1);
   for (const line of numbers) expect(listed).toContain(/^ {2}\S.* {2,}\S.* {2,}\[(\d+)\]$/.exec(line)?.[1]);
+});
+
+test('hazards stand below the numbers, the caution above them, both once', async () => {
+  const text = await told('sodium');
+  expect(
+    text.match(/Caution, sodium: water makes flammable gas that may take fire; burns skin and eyes\./g),
+  ).toHaveLength(1);
+  expect(text).toMatch(/Screening only: .* competent person approves the design\./);
+  expect(text).toMatch(/^ {2}Carried as {2,}UN 1391 ALKALI METAL DISPERSION, class 4\.3, .* {2}\[\d+\]$/m);
+  expect(text).toMatch(/^ {2}Never with {2,}water,/m);
+  expect(text).toContain('reacts as alkali metal');
+  expect(text.toLowerCase()).not.toMatch(/\bsafe\b/);
 });
 
 test('what all phases share is told once', async () => {

@@ -114,6 +114,26 @@ describe('a portion', () => {
     ]);
   });
 
+  it('of a hazardous substance has one caution, before its numbers, and of another none', () => {
+    checkHover(fuel.replace('sodium', 'sod$0ium'), [
+      /^30 %/,
+      /^37[.]/,
+      /^sodium: Na, solid$/,
+      /^Solid at/,
+      /^Caution, sodium: water makes flammable gas that may take fire; burns skin and eyes[.] Screening only: /,
+      /^Molar mass/,
+    ]);
+    const salt = hoverAt('blend brine {\n  3 % mass sodium_ca$0rbonate\n  rest water\n}\n');
+    expect(salt?.lines.join('\n')).toMatch(/Molar mass/);
+    expect(salt?.lines.join('\n')).not.toMatch(/Caution/);
+  });
+
+  it('of a substance of the scenario cautions of what it says of itself', () => {
+    const own =
+      'substance mix {\n  formula: NaK\n  hazards: H250, H300, alkali-metal\n}\nblend b {\n  100 % m$0ix\n}\n';
+    checkHover(own, [/^100 %/, /^Caution, mix: takes fire in air; deadly poison[.] Screening only: /]);
+  });
+
   it('that takes the rest tells what that came to', () => {
     checkHover(fuel.replace('rest', 're$0st'), ['70 % by mass: methanol in fuel']);
   });

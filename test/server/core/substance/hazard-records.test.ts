@@ -175,7 +175,7 @@ const notClassified: Readonly<Record<string, string>> = {
 describe('GHS table', () => {
   test('reads what lists write, and nothing else', () => {
     expect(readGhsClass('Water-react. 1 H260')).toMatchObject({ hazardClass: 'Water-react.', category: '1' });
-    expect(readGhsClass('STOT SE 3 H336')?.danger).toContain('drowsy');
+    expect(readGhsClass('STOT SE 3 H336')).toMatchObject({ statement: 'H336', area: 'health' });
     for (const text of ['Water-react. 1 H261', 'Flam. Liq. 2', 'H260', 'Flam. Liq. 5 H226', '']) {
       expect(readGhsClass(text), text).toBeUndefined();
     }

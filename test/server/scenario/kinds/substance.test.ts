@@ -144,3 +144,72 @@ describe('substance', () => {
     `);
   });
 });
+
+describe('hazards a substance says of itself', () => {
+  /** What a blend of it alone is told of its portion. */
+  const hazardsOf = (line: string) =>
+    checkFacts(`
+      substance own {
+        formula: C2H5ONa
+        ${line}
+        source: "sheet 4"
+      }
+      blend all_of_it {
+        100 % own
+      }
+    `)
+      .files.flatMap(({ definitions }) => definitions)
+      .flatMap(({ lines }) => lines)
+      .flatMap((result) => (result?.kind === 'portion' ? [result.material.hazards] : []))[0];
+  const cardOf = (hazards: string) => hazardsOf(`hazards: ${hazards}`);
+
+  test('are codes, UN numbers and families, in any order, each once', () => {
+    const hazards = cardOf('H260, UN 1422, alkali-metal, H314, H260, H360FD, UN1428');
+    expect(hazards?.classes.map(({ hazardClass, category, statement }) => [hazardClass, category, statement])).toEqual([
+      ['Water-react.', '1', 'H260'],
+      ['Skin Corr.', '1', 'H314'],
+      ['Repr.', '1A', 'H360'],
+    ]);
+    expect(hazards?.families).toEqual(['alkali-metal']);
+    expect(hazards?.transport).toMatchObject([
+      { unNumber: 1422, dangerClass: '4.3', packingGroup: 'I', properShippingName: 'POTASSIUM SODIUM ALLOYS, LIQUID' },
+      { unNumber: 1428, dangerClass: '4.3' },
+    ]);
+    expect(hazards?.classes[0]?.source.title).toBe('sheet 4');
+  });
+
+  test('a UN number that no catalogue substance has is kept as it is', () => {
+    const [entry] = cardOf('UN 3077')?.transport ?? [];
+    expect(entry).toMatchObject({ unNumber: 3077, subsidiary: [] });
+    expect(entry).not.toHaveProperty('dangerClass');
+  });
+
+  test('what is not written is not known', () => {
+    expect(hazardsOf('phase: liquid')).toBeNull();
+  });
+
+  test('slips are said where they stand', () => {
+    checkFacts(`
+      substance one {
+        formula: Na
+        hazards: H261, H99
+        #              ^^^ name/unknown
+      }
+      substance two {
+        formula: Na
+        hazards: alkali-metl
+        #        ^^^^^^^^^^^ name/unknown
+      }
+      substance three {
+        formula: Na
+        hazards: UN 1428.5
+        #        ^^^^^^^^^ name/unknown-phrase
+      }
+      substance four {
+        formula: Na
+        hazards: H260 H314
+        #        ^^^^^^^^^ name/unknown-phrase
+      }
+    `);
+  });
+});

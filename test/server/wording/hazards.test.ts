@@ -1,0 +1,83 @@
+// Hazards in words: the caution tells the gravest few and no more, every code has words, and nothing is ever called safe.
+
+import { describe, expect, test } from 'vitest';
+import { allSubstances, findSubstance } from '../../../server/core/substance/catalogue.ts';
+import { ghsClasses } from '../../../server/core/substance/ghs.ts';
+import type { Hazards } from '../../../server/core/substance/hazards.ts';
+import { cautionText, dangerText, exposureText, hazardRows, transportText } from '../../../server/wording/hazards.ts';
+
+function hazardsOf(name: string): Hazards {
+  const hazards = findSubstance(name)?.hazards;
+  if (hazards === undefined) throw new Error(`no hazards of ${name}`);
+  return hazards;
+}
+
+const caution = (name: string): string | null => cautionText(name, hazardsOf(name));
+const standing =
+  ' Screening only: follow the safety data sheet, class, flag and local rules; a competent person approves the design.';
+
+describe('the caution', () => {
+  test.each([
+    ['sodium', 'Caution, sodium: water makes flammable gas that may take fire; burns skin and eyes.'],
+    [
+      'caesium',
+      'Caution, caesium: takes fire in air; water makes flammable gas that may take fire; burns skin and eyes.',
+    ],
+    ['methanol', 'Caution, methanol: toxic; highly flammable liquid; damages organs.'],
+    ['ammonia', 'Caution, ammonia: toxic; burns skin and eyes; flammable gas.'],
+    [
+      'magnesium',
+      'Caution, magnesium: as powder takes fire in air; as powder water makes flammable gas that may take fire; as coated powder water makes flammable gas.',
+    ],
+    ['nitrogen', 'Caution, nitrogen: displaces the air to breathe.'],
+    ['gas_oil', 'Caution, gas_oil: flammable liquid; may be deadly if swallowed and drawn into the lungs.'],
+  ])('of %s', (name, text) => {
+    expect(caution(name)).toBe(text + standing);
+  });
+
+  test.each(['sodium_carbonate', 'water', 'calcium_carbonate', 'zinc_oxide', 'air', 'glycerol', 'vegetable_oil'])(
+    'is not printed for %s',
+    (name) => {
+      expect(caution(name)).toBeNull();
+    },
+  );
+
+  test('is short, and never says safe', () => {
+    for (const { name, hazards } of allSubstances()) {
+      if (hazards === undefined) continue;
+      const text = cautionText(name, hazards) ?? '';
+      expect(text.replace(standing, '').length, name).toBeLessThanOrEqual(180);
+      const rows = hazardRows(hazards).map(({ label, text: value }) => `${label} ${value}`);
+      expect(`${text} ${rows.join(' ')}`.toLowerCase(), name).not.toMatch(/\bsafe\b|harmless/);
+    }
+  });
+});
+
+test('every statement code of the table has words', () => {
+  for (const code of ghsClasses.flatMap(({ statements }) => statements)) expect(dangerText(code)).not.toBe(code);
+});
+
+describe('rows', () => {
+  test('say a limit with its time and what it is measured as', () => {
+    const [ammonia] = hazardsOf('ammonia').exposure;
+    expect(ammonia && exposureText(ammonia)).toBe('25 ppm over up to 10 h');
+    const silica = hazardsOf('silicon_dioxide').exposure.find(({ authority }) => authority === 'OSHA');
+    expect(silica && exposureText(silica)).toBe('0.05 mg/m³ over 8 h (crystalline, respirable)');
+  });
+
+  test('say how it is carried, with strength and form', () => {
+    const texts = hazardsOf('ammonia').transport.map(transportText);
+    expect(texts).toContain('UN 1005 AMMONIA, ANHYDROUS, class 2.3 (8)');
+    expect(texts).toContain('UN 2672 AMMONIA SOLUTION, class 8, packing group III, 10 to 35 % by mass, in solution');
+    expect(texts).toContain('UN 3318 AMMONIA SOLUTION, class 2.3 (8), above 50 % by mass, in solution');
+  });
+
+  test('each have a source', () => {
+    for (const { name, hazards } of allSubstances()) {
+      for (const { source, text } of hazards ? hazardRows(hazards) : []) {
+        expect(source, name).not.toBe('');
+        expect(text, name).not.toBe('');
+      }
+    }
+  });
+});
