@@ -34,6 +34,8 @@ export const reactiveFamilies = [
   'ketone-or-aldehyde',
   'amine',
   'nitro-compound',
+  // Decomposes with much heat, and explodes with hydrides and acid chlorides.
+  'sulphoxide',
   'hydrocarbon',
   'unsaturated-hydrocarbon',
   'halogenated-solvent',
