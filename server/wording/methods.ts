@@ -245,22 +245,27 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     validity: 'At the state told. Carbonate is made on cooling, seldom in the flame.',
   },
   'heat-released': {
-    words: 'The enthalpy of fuel and oxidant as they come in, less that of the products at 25 °C.',
-    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(25 °C)',
-    symbols: 'h enthalpies as they come in, L oxidant per fuel, nₚ, hₚ amount and enthalpy of each product at 25 °C',
+    words:
+      'The enthalpy of fuel and oxidant as they come in, less that of the products at 25 °C; the energy where they cool in a held volume.',
+    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(25 °C); held volume: u = h − p V in place of h',
+    symbols:
+      'h enthalpies as they come in, L oxidant per fuel, nₚ, hₚ amount and enthalpy of each product at 25 °C, u energy, p pressure and V volume of the gas',
     validity:
-      'Products in equilibrium at 25 °C, or as they froze. Water counts as liquid where it condenses, so it can be more than the lower heating value.',
+      'Products in equilibrium at 25 °C, or as they froze. Heating values are by enthalpies: a share of one is off by some tenths of a per cent in a held volume. Water counts as liquid where it condenses, so it can be more than the lower heating value.',
   },
   preheat: {
     words: 'What fuel and oxidant hold over their enthalpy at 25 °C.',
-    equation: 'q = h(T) − h(25 °C)',
-    symbols: 'h enthalpy of fuel and oxidant together, per kg of fuel',
+    equation: 'q = h(T) − h(25 °C); held volume: u = h − p V in place of h',
+    symbols:
+      'h enthalpy of fuel and oxidant together, per kg of fuel, u their energy, p pressure and V volume of their gases',
     validity: 'It is part of the heat released and no part of a heating value.',
   },
   'heat-above-exhaust': {
-    words: 'The enthalpy of fuel and oxidant as they come in, less that of the products at the exhaust temperature.',
-    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(T)',
-    symbols: 'T exhaust temperature, nₚ, hₚ amount and enthalpy of each product there',
+    words:
+      'The enthalpy of fuel and oxidant as they come in, less that of the products at the exhaust temperature; the energy where they cool in a held volume.',
+    equation: 'q = h(fuel) + L h(oxidant) − Σ nₚ hₚ(T); held volume: u = h − p V in place of h',
+    symbols:
+      'T exhaust temperature, h enthalpies as they come in, L oxidant per fuel, nₚ, hₚ amount and enthalpy of each product there, u energy, p pressure and V volume of the gas',
     validity: 'What a boiler without other losses could pass on; it is not work.',
   },
   'peak-gas': {

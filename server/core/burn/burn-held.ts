@@ -2,7 +2,7 @@
 // Knows no states. Invariant: one place says so, for the states themselves and for how they move.
 
 import type { Held } from '../equilibrium/equilibrium.ts';
-import type { BurnInput, Charge } from './burn.ts';
+import type { BurnInput, Charge, MatterState } from './burn.ts';
 
 /** J taken out of the whole charge. */
 export function lossOf({ heat, lowerHeatingValueJPerKg }: BurnInput): number {
@@ -39,4 +39,22 @@ export function heldCooling(
   return pressurePa === undefined
     ? { held: 'temperature-volume', temperatureK, volumeM3: charge.volumeM3 }
     : { held: 'temperature-pressure', temperatureK, pressurePa };
+}
+
+/** Whether the gas cools in the volume it burnt in: what is taken out of it is then energy, not enthalpy. */
+export function coolsInVolume({ held, coolingPressurePa }: BurnInput): boolean {
+  return held.held === 'volume' && coolingPressurePa === undefined;
+}
+
+/**
+ * J given off between the charge and one of its states: by enthalpies at a held pressure, by energies in a held volume.
+ * Null where the energy of the charge is unknown. Gas that burns in a volume and cools at a pressure is weighed by
+ * enthalpies, as if it had come in at that pressure.
+ */
+export function heatGivenOff(input: BurnInput, charge: Charge, state: MatterState): number | null {
+  if (charge.enthalpyJ === null) return null;
+  const byEnthalpyJ = charge.enthalpyJ - state.enthalpyJ;
+  if (!coolsInVolume(input)) return byEnthalpyJ;
+  const pressureVolumeJ = state.gasMol > 0 ? state.pressurePa * state.volumeM3 : 0;
+  return byEnthalpyJ - (charge.pressureVolumeJ - pressureVolumeJ);
 }

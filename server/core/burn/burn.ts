@@ -172,7 +172,10 @@ export interface Burn {
   readonly path: (temperaturesK?: readonly number[]) => CoolingPath;
   /** What is released between the charge and 25 °C. */
   readonly heat: () => BurnHeatReleased | NoState | null;
-  /** J released above a temperature of the exhaust: the charge's enthalpy less that of the cooled gas; null as for `heat`. */
+  /**
+   * J released above a temperature of the exhaust: the charge's enthalpy less that of the cooled gas, or energy where that
+   * cools in a held volume; null as for `heat`.
+   */
   readonly heatAbove: (temperatureK: number) => number | NoState | null;
 }
 
@@ -208,7 +211,7 @@ export interface CoolingPath {
   readonly incomplete: boolean;
 }
 
-/** In J per kg of fuel. */
+/** In J per kg of fuel; enthalpies, or energies where the gas cools in a held volume. */
 export interface BurnHeatReleased {
   /** Charge as it came in, less the products at 25 °C on the slate reached. */
   readonly releasedJ: number;

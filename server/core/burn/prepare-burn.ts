@@ -3,6 +3,7 @@
 // Invariant: every state holds the atoms of the charge; adiabatic ones its enthalpy (or energy) less the loss; a state's
 // answer does not depend on which others were looked at.
 
+import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { referenceTemperatureK } from '../substance/substance.ts';
 import { candidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium, Held } from '../equilibrium/equilibrium.ts';
@@ -20,7 +21,7 @@ import type {
   FrozenState,
   NoState,
 } from './burn.ts';
-import { heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
+import { coolsInVolume, heatGivenOff, heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
 import { chargeOf } from './charge.ts';
 import { coolingPath } from './cooling-path.ts';
 import { frozenState } from './frozen-state.ts';
@@ -91,7 +92,7 @@ export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn 
     heatAbove: (temperatureK) => {
       if (charge.enthalpyJ === null) return null;
       const state = at(temperatureK);
-      return state.kind === 'none' ? state : charge.enthalpyJ - state.enthalpyJ;
+      return state.kind === 'none' ? state : heatGivenOff(input, charge, state);
     },
   };
 }
@@ -159,7 +160,10 @@ function faultOf(input: BurnInput, charge: Charge, zone: Charge | undefined): Bu
   return hasLoss && input.lowerHeatingValueJPerKg === null ? { kind: 'fault', reason: 'no-heating-value' } : undefined;
 }
 
-/** By enthalpies, as heating values are, also where the volume was held: the two differ by the work of the gas alone. */
+/**
+ * The preheat is weighed as the release is, by energies in a held volume. Heating values are by enthalpies always: over
+ * them the share in a held volume is off by R T for each mole of gas that comes or goes, some tenths of a per cent.
+ */
 function heatReleased(
   input: BurnInput,
   charge: Charge,
@@ -168,8 +172,11 @@ function heatReleased(
   if (charge.enthalpyJ === null) return null;
   const slate = at(referenceTemperatureK);
   if (slate.kind === 'none') return slate;
-  const releasedJ = charge.enthalpyJ - slate.enthalpyJ;
-  const preheatJ = charge.referenceEnthalpyJ === null ? null : charge.enthalpyJ - charge.referenceEnthalpyJ;
+  const releasedJ = heatGivenOff(input, charge, slate);
+  if (releasedJ === null) return null;
+  const coldPressureVolumeJ = charge.gasMol * molarGasConstantJPerMolK * referenceTemperatureK;
+  const workJ = coolsInVolume(input) ? charge.pressureVolumeJ - coldPressureVolumeJ : 0;
+  const preheatJ = charge.referenceEnthalpyJ === null ? null : charge.enthalpyJ - charge.referenceEnthalpyJ - workJ;
   const heatingValueJ = input.lowerHeatingValueJPerKg;
   const shareOfHeatingValue =
     preheatJ === null || heatingValueJ === null || heatingValueJ === 0 ? null : (releasedJ - preheatJ) / heatingValueJ;

@@ -4,6 +4,7 @@
 // Invariant: column ids and units are the contract; a number that could not be had is null.
 
 import type { Burn, BurnStateOrNone, MatterState } from '../../core/burn/burn.ts';
+import { heatGivenOff } from '../../core/burn/burn-held.ts';
 import { alkaliFates, carbonFate, carbonFormOf, shareOfForm, type Fate } from '../../core/burn/fates.ts';
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import { carbonAgainstFreezing } from '../../core/burn/path-readings.ts';
@@ -136,14 +137,14 @@ function statesTable(burn: Burn): Table {
   ];
   const row = (state: BurnStateOrNone, temperatureK: number): Row => {
     if (state.kind === 'none') return [temperatureK, null, null, null, null, null, null, null, null, null];
-    const { enthalpyJ } = burn.charge;
+    const heatJ = heatGivenOff(burn.input, burn.charge, state);
     const deposit = depositOf(state);
     return [
       temperatureK,
       state.condensedMassShare,
       inGrams(gasOfState(state)?.molarMassKgPerMol),
       carbonateShare(state),
-      enthalpyJ === null ? null : (enthalpyJ - state.enthalpyJ) / 1e6,
+      heatJ === null ? null : heatJ / 1e6,
       state.gasMol > 0 ? state.pressurePa / 1e5 : null,
       deposit?.firstMeltingK ?? null,
       deposit?.stickyK ?? null,

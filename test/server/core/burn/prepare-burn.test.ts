@@ -207,6 +207,51 @@ describe('heat released', () => {
   });
 });
 
+describe('heats in a held volume are energies', () => {
+  const closed = burn(methane, {
+    held: { held: 'volume', chargePressurePa: 1e5 },
+    lowerHeatingValueJPerKg: heatingValue(methane).lower,
+  });
+
+  test('above the flame nothing is given off', () => {
+    expect(Number(closed.heatAbove(solved(closed.flame()).temperatureK)) / 5e7).toBeCloseTo(0, 6);
+  });
+
+  test('above a temperature with a loss taken out, the loss', () => {
+    const lossShare = 0.2;
+    const lossy = burn(methane, { ...closed.input, heat: { heat: 'adiabatic', lossShare } });
+    const givenOff = Number(lossy.heatAbove(solved(lossy.flame()).temperatureK));
+    expect(givenOff / (lossShare * heatingValue(methane).lower)).toBeCloseTo(1, 6);
+  });
+
+  test('down to 25 °C they are less than by enthalpies by R T for each mole of gas that is gone', () => {
+    const heat = closed.heat();
+    const open = burn(methane).heat();
+    if (heat === null || 'reason' in heat || open === null || 'reason' in open) throw new Error();
+    expect(closed.heatAbove(298.15)).toBeCloseTo(heat.releasedJ, 3);
+    const goneMol = closed.charge.gasMol - heat.slate.gasMol;
+    const byEnthalpiesJ = (closed.charge.enthalpyJ ?? Number.NaN) - heat.slate.enthalpyJ;
+    expect(byEnthalpiesJ - heat.releasedJ).toBeCloseTo(goneMol * 8.31446261815324 * 298.15, 0);
+    expect(heat.preheatJ).toBeCloseTo(0, 3);
+  });
+
+  test('preheat in a volume lacks the work of the gas', () => {
+    const airK = 600;
+    const warm = burn(methane, { ...closed.input, oxidant: plainAir(airK) });
+    const heat = warm.heat();
+    if (heat === null || 'reason' in heat) throw new Error();
+    const { charge } = warm;
+    const airMol = charge.gasMol - methane.gasMolPerKg;
+    const byEnthalpiesJ = (charge.enthalpyJ ?? Number.NaN) - (charge.referenceEnthalpyJ ?? Number.NaN);
+    expect(byEnthalpiesJ - (heat.preheatJ ?? Number.NaN)).toBeCloseTo(airMol * 8.31446261815324 * (airK - 298.15), 0);
+  });
+
+  test('cooling at a pressure is weighed by enthalpies', () => {
+    const vented = burn(methane, { ...closed.input, coolingPressurePa: 1e5 });
+    expect(vented.heatAbove(1000)).toBeCloseTo(Number(burn(methane).heatAbove(1000)), 0);
+  });
+});
+
 describe('only what is asked, whatever was asked before', () => {
   test('a state is the same alone and after others', () => {
     const input = {
