@@ -170,15 +170,31 @@ describe('burning on the surface', () => {
     expect(known(burnOutOnSurface(iron, 5e-5, { ...air, oxygenMassShare: 0.4 })).timeS).toBeLessThan(base);
   });
 
-  test('as much oxygen arrives within the time as the oxide holds', () => {
+  test.each([0.05, 0.2314, 0.5])('far from it stands the oxygen the flux was worked out for, %f by mass', (share) => {
     const diameterM = 5e-5;
-    const { timeS, transferNumber } = known(burnOutOnSurface(iron, diameterM, air));
-    // 2 π d ρD ln(1 + Y) at 1350 K, by hand: ρD = 1.173e-3... from 1 atm nitrogen and 2.1e-5 (1350/298.15)^1.75 m²/s.
+    const { timeS } = known(burnOutOnSurface(iron, diameterM, { ...air, oxygenMassShare: share }));
+    const fluxKgPerS = (iron.oxygenKgPerKg * iron.densityKgPerM3 * Math.PI * diameterM ** 3) / 6 / timeS;
+    // ρD at 1350 K, by hand: 1 atm nitrogen and 2.1e-5 (1350/298.15)^1.75 m²/s.
     const densityKgPerM3 = (101325 * 0.0280134) / (8.31446261815324 * 1350);
     const diffusionKgPerMS = densityKgPerM3 * 2.1e-5 * (1350 / 298.15) ** 1.75;
-    const arrivedKg = 2 * Math.PI * diameterM * diffusionKgPerMS * Math.log(1 + (transferNumber ?? 0)) * timeS;
-    const heldKg = (iron.oxygenKgPerKg * iron.densityKgPerM3 * Math.PI * diameterM ** 3) / 6;
-    expect(arrivedKg / heldKg).toBeCloseTo(1, 10);
+    // All that flows inward is oxygen: ṁ = ṁ Y + 4 π r² ρD dY/dr, integrated in u = 1/r from the surface, where Y = 0, outward.
+    const slope = (oxygen: number): number => (fluxKgPerS * (1 - oxygen)) / (4 * Math.PI * diffusionKgPerMS);
+    const steps = 1000;
+    const step = 2 / diameterM / steps;
+    let oxygen = 0;
+    for (let index = 0; index < steps; index += 1) {
+      oxygen += step * slope(oxygen + (step / 2) * slope(oxygen));
+    }
+    expect(oxygen).toBeCloseTo(share, 5);
+  });
+
+  test('nearly pure oxygen leaves a finite time, in doubt', () => {
+    const pure = known(burnOutOnSurface(iron, 5e-5, { ...air, oxygenMassShare: 1 }));
+    expect(pure.timeS).toBeGreaterThan(0);
+    expect(pure.timeS).toBeLessThan(known(burnOutOnSurface(iron, 5e-5, { ...air, oxygenMassShare: 0.7 })).timeS);
+    expect(pure.doubts).toEqual(['kinetics']);
+    expect(burnOutWithin(pure, 1e3)).toBe('open');
+    expect(known(burnOutOnSurface(iron, 5e-5, { ...air, oxygenMassShare: 0.4 })).doubts).toEqual([]);
   });
 });
 
