@@ -55,7 +55,7 @@ export interface PhaseLimit {
   /** Id of a phase. */
   readonly phase: string;
   readonly atK: number;
-  readonly event: 'melts' | 'melts incongruently' | 'decomposes' | 'sublimes' | 'changes form';
+  readonly event: 'melts' | 'melts incongruently' | 'decomposes' | 'sublimes' | 'changes form' | 'critical point';
   /** For an end that the data themselves give: moles of each phase that one mole turns into, gases together at 1 bar. */
   readonly products?: Readonly<Record<string, number>>;
   /**
