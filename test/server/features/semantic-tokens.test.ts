@@ -45,7 +45,7 @@ describe('the meaning of', () => {
     ],
     [
       'an entry its kind does not take',
-      'substance x {\n  colour: liquid\n}\n',
+      'substance x {\n  zzyzx: liquid\n}\n',
       ['substance kind', 'x class declaration'],
     ],
     [
