@@ -60,7 +60,10 @@ export interface BurnInput {
   readonly coolingPressurePa?: number;
   /** False keeps a phase out of every state. */
   readonly admits?: (phase: ThermoPhase) => boolean;
-  /** Ions and the electron in the zone, the flame and the cooled states where these are hotter than `ionsAboveK`. */
+  /**
+   * Ions and the electron in the zone, the flame and the cooled states where these are hotter than `ionsAboveK`. A path and
+   * the state that freezes have none: along a path the candidates stay the same, and ions move no condensed phase.
+   */
   readonly ions?: boolean;
 }
 
