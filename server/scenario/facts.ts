@@ -7,6 +7,7 @@ import type { NoBalance } from '../core/balance/equation.ts';
 import type { GivenProductsFault } from '../core/balance/given-products.ts';
 import type { BurnFault } from '../core/burn/burn.ts';
 import type { NoEquilibrium } from '../core/equilibrium/equilibrium.ts';
+import type { SaltMeltingValidity } from '../core/equilibrium/melts.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Place } from './place.ts';
@@ -185,18 +186,18 @@ export type Fact =
       readonly pressure: Quantity;
       readonly compressed: Quantity;
     }
-  /** Walls of these temperatures, of those given, are met by a deposit that sticks. */
+  /** Walls of these temperatures, of those given, are met by a deposit that sticks, or of which that is not known. */
   | {
       readonly code: 'range/sticky';
       readonly from: Quantity;
       readonly to: Quantity;
-      readonly firstMelting: Quantity;
-      /** From where on it sticks; null where only first melting is published. */
+      /** Null where nothing is known of its salts together; its uncertainty is null with it. */
+      readonly firstMelting: Quantity | null;
+      readonly uncertaintyK: number | null;
+      /** From where on it sticks; null where that is not known. */
       readonly sticky: Quantity | null;
-      readonly uncertaintyK: number;
       readonly leading: readonly string[];
-      /** Less than half of the deposit is salt. */
-      readonly mostlyElse: boolean;
+      readonly validity: readonly SaltMeltingValidity[];
     }
   /** Droplets or particles have less time than they take to burn out; `timeS` null where no flame holds at all. */
   | {

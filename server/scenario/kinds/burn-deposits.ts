@@ -16,9 +16,9 @@ export function depositOf(state: MatterState): SaltMelting | undefined {
   return condensed.length === 0 ? undefined : saltMelting(condensed);
 }
 
-/** Where walls of a range are met by a sticky deposit. */
-export interface StickyWalls {
-  /** Of the walls looked at, the coldest and the hottest on which it sticks. */
+/** Where walls of a range are met by a sticky deposit, or by one of which that is not known. */
+export interface DoubtfulWalls {
+  /** Of the walls looked at, the coldest and the hottest of the kind. */
   readonly fromK: number;
   readonly toK: number;
   /** On the coldest of them. */
@@ -27,32 +27,54 @@ export interface StickyWalls {
   readonly leading: readonly string[];
 }
 
+export interface JudgedWalls {
+  readonly sticky: DoubtfulWalls | null;
+  readonly notKnown: DoubtfulWalls | null;
+}
+
 /** Walls looked at: both ends and what lies evenly between them. */
 const mostWalls = 7;
 
-/** Null where nothing that is there sticks. */
-export function stickyWalls(burn: Burn, { from, to }: TemperatureRange): StickyWalls | null {
+/** Both null where nothing that is there can stick. */
+export function judgedWalls(burn: Burn, { from, to }: TemperatureRange): JudgedWalls {
   const count = from.value === to.value ? 1 : mostWalls;
   const walls = Array.from(
     { length: count },
     (_, index) => from.value + (index * (to.value - from.value)) / Math.max(1, count - 1),
   );
-  const sticky = walls.flatMap((wallK) => {
+  const met = walls.flatMap((wallK, index) => {
     const state = burn.at(wallK);
     const melting = state.kind === 'none' ? undefined : depositOf(state);
-    if (state.kind === 'none' || !melting || wallK < (melting.stickyK ?? melting.firstMeltingK)) return [];
+    if (state.kind === 'none' || !melting) return [];
     const leading = productRows(state)
       .filter(({ isGas }) => !isGas)
       .slice(0, 3)
       .map(({ id }) => id);
-    return [{ wallK, melting, leading }];
+    return [{ wallK, colderK: walls[index - 1] ?? wallK, melting, leading, verdict: stickinessAt(wallK, melting) }];
   });
-  const [coldest] = sticky;
-  const hottest = sticky.at(-1);
-  if (!coldest || !hottest) return null;
-  const { melting, leading, wallK } = coldest;
-  // Between the last wall that does not stick and the first that does, the deposit's own limit is known better.
-  const below = walls[walls.indexOf(wallK) - 1] ?? wallK;
-  const fromK = Math.min(wallK, Math.max(below, melting.stickyK ?? melting.firstMeltingK));
-  return { fromK, toK: hottest.wallK, melting, leading };
+  const walled = (verdict: Stickiness): DoubtfulWalls | null => {
+    const alike = met.filter((one) => one.verdict === verdict);
+    const [coldest] = alike;
+    const hottest = alike.at(-1);
+    if (!coldest || !hottest) return null;
+    const { wallK, colderK, melting, leading } = coldest;
+    // Between the last wall that is not met so and the first that is, the deposit's own limit is known better.
+    const limitK = verdict === 'sticky' ? melting.stickyK : surelySolidBelowK(melting);
+    const fromK = limitK === null ? wallK : Math.min(wallK, Math.max(colderK, limitK));
+    return { fromK, toK: hottest.wallK, melting, leading };
+  };
+  return { sticky: walled('sticky'), notKnown: walled('not-known') };
+}
+
+type Stickiness = 'sticky' | 'dry' | 'not-known';
+
+function stickinessAt(wallK: number, melting: SaltMelting): Stickiness {
+  if (melting.stickyK !== null) return wallK >= melting.stickyK ? 'sticky' : 'dry';
+  const solidBelowK = surelySolidBelowK(melting);
+  return solidBelowK !== null && wallK < solidBelowK ? 'dry' : 'not-known';
+}
+
+/** Below it nothing of the deposit melts; null where that is not known, as other salts in it may melt earlier. */
+function surelySolidBelowK({ firstMeltingK, validity }: SaltMelting): number | null {
+  return validity.includes('eutectic-of-some') ? null : firstMeltingK;
 }

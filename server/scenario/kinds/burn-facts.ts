@@ -13,7 +13,7 @@ import { waterSaturationPressurePa } from '../../core/substance/water-saturation
 import type { Span } from '../../../grammar/tree.ts';
 import type { TemperatureRange } from '../burn-readers.ts';
 import type { Context } from '../context.ts';
-import { stickyWalls } from './burn-deposits.ts';
+import { judgedWalls } from './burn-deposits.ts';
 import type { WrittenBurn } from './burn-question.ts';
 import type { AskedOfBurn, SolvedBurn } from './burn-solved.ts';
 
@@ -141,21 +141,23 @@ export function reportStates(
   reportRealGas(burn, flame, places.header, context);
 }
 
-/** Says where walls of the temperatures given would be met by a sticky deposit; a state is solved for each wall. */
+/** Says which of the walls given meet a deposit that sticks, or may stick; a state is solved for each wall. */
 export function reportStickyWalls(burn: Burn, walls: TemperatureRange, place: Span, context: Context): void {
-  const sticky = stickyWalls(burn, walls);
-  if (!sticky) return;
-  const { melting, leading } = sticky;
-  context.report(place, {
-    code: 'range/sticky',
-    from: kelvin(sticky.fromK),
-    to: kelvin(sticky.toK),
-    firstMelting: kelvin(melting.firstMeltingK),
-    sticky: melting.stickyK === null ? null : kelvin(melting.stickyK),
-    uncertaintyK: melting.uncertaintyK,
-    leading,
-    mostlyElse: melting.validity.includes('much-else'),
-  });
+  const { sticky, notKnown } = judgedWalls(burn, walls);
+  for (const met of [sticky, notKnown]) {
+    if (!met) continue;
+    const { firstMeltingK, stickyK, uncertaintyK, validity } = met.melting;
+    context.report(place, {
+      code: 'range/sticky',
+      from: kelvin(met.fromK),
+      to: kelvin(met.toK),
+      firstMelting: firstMeltingK === null ? null : kelvin(firstMeltingK),
+      sticky: stickyK === null ? null : kelvin(stickyK),
+      uncertaintyK,
+      leading: met.leading,
+      validity,
+    });
+  }
 }
 
 /** Says what has no burn-out time, and what has too little time. Nothing is solved where no size is written. */

@@ -428,9 +428,9 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       sticky: quantity(855, 'degC', 0, 'temperature'),
       uncertaintyK: 30,
       leading: ['Na2CO3(l)', 'NaOH(l)'],
-      mostlyElse: false,
+      validity: ['traces-left-out'],
     },
-    'On walls from 860 °C to 950 °C the deposit (Na2CO3(l) and NaOH(l)) is sticky: it begins to melt at 851 °C (± 30 K) and sticks from 855 °C on. Keep walls colder than that, or so hot that nothing condenses.',
+    'On walls from 860 °C to 950 °C the deposit (Na2CO3(l) and NaOH(l)) is sticky: it begins to melt at 851 °C (± 30 K) and sticks from 855 °C on. It is judged without traces of other salts, which can make it stick some 30 K earlier. Keep walls colder than that, or so hot that nothing condenses.',
   ],
   [
     {
@@ -441,9 +441,22 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       sticky: null,
       uncertaintyK: 10,
       leading: ['MgO(cr)', 'Li2CO3(l)'],
-      mostlyElse: true,
+      validity: ['eutectic-of-some', 'much-else'],
     },
-    'On walls of 900 °C the deposit (MgO(cr) and Li2CO3(l)) is sticky: it begins to melt at 500 °C (± 10 K). Less than half of it is salt, and what stays solid stiffens it. Keep walls colder than that, or so hot that nothing condenses.',
+    'Whether the deposit (MgO(cr) and Li2CO3(l)) is sticky on walls of 900 °C is not known: it begins to melt at 500 °C (± 10 K), but how much of it is then molten is not published. That is the first melting of some of its salts; together they may melt earlier. Less than half of it is salt, and what stays solid stiffens it. Look at a trial deposit before relying on such walls.',
+  ],
+  [
+    {
+      code: 'range/sticky',
+      from: quantity(300, 'degC', 0, 'temperature'),
+      to: quantity(860, 'degC', 0, 'temperature'),
+      firstMelting: null,
+      sticky: null,
+      uncertaintyK: null,
+      leading: ['LiOH(cr)', 'NaOH(l)'],
+      validity: [],
+    },
+    'Whether the deposit (LiOH(cr) and NaOH(l)) is sticky on walls from 300 °C to 860 °C is not known: how its salts melt together is not published. Look at a trial deposit before relying on such walls.',
   ],
   [
     {
@@ -619,6 +632,7 @@ describe('every code', () => {
       'warning range/burn-out',
       'warning range/heating-value',
       'warning range/rich',
+      'warning range/sticky',
       'warning range/sticky',
       'warning range/sticky',
       'warning range/temperature',

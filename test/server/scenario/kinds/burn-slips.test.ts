@@ -325,10 +325,10 @@ test('droplets and particles: too little time, no data, nothing of that size', (
   `);
 });
 
-test('walls on which the deposit sticks, and walls on which it does not', () => {
-  const furnace = (wall: string, mark = ''): string => `
+test('walls on which the deposit sticks, walls on which it does not, and such of which that is not known', () => {
+  const furnace = (wall: string, mark = '', salts = '25 % mass sodium'): string => `
     blend dispersion {
-      25 % mass sodium
+      ${salts}
       rest gas_oil
     }
     burn furnace {
@@ -347,4 +347,13 @@ test('walls on which the deposit sticks, and walls on which it does not', () => 
       '    # ^',
     ),
   );
+  // With lithium beside sodium only first melting is published, and that a deposit is wet does not make it stick.
+  const mixed = '24 % mass sodium\n      1 % mass lithium';
+  const marks = (text: string): string => text.replace('      # ^', '    # ^');
+  checkFacts(furnace('400 degC', '', mixed));
+  checkFacts(marks(furnace('700 degC', '# ^^^^^^^^^^^^^^^^^^^^^^^^^^ range/sticky', mixed)));
+  // Lithium salts alone melt where their tables say.
+  const lithium = '20 % mass lithium';
+  checkFacts(furnace('500 degC', '', lithium));
+  checkFacts(marks(furnace('300 degC to 860 degC', '# ^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^ range/sticky', lithium)));
 });
