@@ -13,7 +13,7 @@ export const rangeBurnOut: Rule<FactOf<'range/burn-out'>> = {
   message: ({ residence, portions }) =>
     sentences(
       ...portions.map(({ name, verdict, timeS }) => {
-        if (timeS === null) return `${quoted(name)} does not keep a flame in this gas.`;
+        if (timeS === null) return `${quoted(name)} finds too little free oxygen in this gas to keep a flame.`;
         const time = quantityText(quantityOf(timeS, knownUnit('s').dimension), 'ms');
         const has = quantityText(residence, 'ms');
         return verdict === 'unburnt'

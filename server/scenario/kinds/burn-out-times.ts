@@ -45,7 +45,10 @@ export interface PortionBurnOut {
   readonly verdict: 'burnt' | 'open' | 'unburnt' | null;
 }
 
-/** One a portion that has a size; empty where no size is written. */
+/**
+ * One a portion that has a size and burns at all: water and salts have no time and hold up none. A blend is judged portion
+ * by portion, as if each came in droplets or particles of its own. Empty where no size is written.
+ */
 export function burnOutsOf(
   fuel: Material,
   { dropletSize, particleSize, residenceTime }: BurnOutEntries,
@@ -55,12 +58,17 @@ export function burnOutsOf(
 ): readonly PortionBurnOut[] {
   const sized = portionsOf(fuel).flatMap((material) => {
     const size = isParticle(material) ? particleSize : dropletSize;
-    return size && material.phase !== 'g' ? [{ material, diameterM: size.value }] : [];
+    return size && material.phase !== 'g' && oxygenNeedKgPerKg(material) > 0
+      ? [{ material, diameterM: size.value }]
+      : [];
   });
   if (sized.length === 0) return [];
   const surroundings = surroundingsOf(burn, flame, oxidant);
+  const hasOtherOxidiser = [...oxidant.moleShares].some(
+    ([gas, share]) => share.value >= leastOxygenMoleShare && !countedGases.has(gas),
+  );
   return sized.map(({ material, diameterM }) => {
-    const found = burnOutOf(material, diameterM, surroundings);
+    const found = burnOutOf(material, diameterM, surroundings, hasOtherOxidiser);
     const burnOut = 'missing' in found ? null : found;
     return {
       name: material.name,
@@ -108,7 +116,7 @@ const lawNames = {
   vapour: 'flame of its vapour',
   surface: 'oxygen to its surface',
   aluminium: 'aluminium correlation',
-  none: 'no flame',
+  none: 'too little oxygen for a flame',
 } as const;
 
 /** A blend's portions and theirs, each once. */
@@ -128,16 +136,50 @@ function elementOf({ formula }: Material): string | null {
   return symbol !== undefined && others.length === 0 && formula?.phase !== 'g' ? symbol : null;
 }
 
+function elementMolPerKgOf({ elements }: Material): ReadonlyMap<string, number> {
+  return new Map([...elements].map(([symbol, amount]) => [symbol, amount.value]));
+}
+
+function oxygenNeedKgPerKg(material: Material): number {
+  return oxygenDemand(elementMolPerKgOf(material)).molPerKg * 2 * (atomicWeightKgPerMol('O') ?? NaN);
+}
+
+/**
+ * Whether the laws, which know free oxygen only, speak of this gas. Metals and other elements also burn in steam and carbon
+ * dioxide, some in nitrogen, so that a time by the little oxygen beside them would be false; fuels of carbon and hydrogen do
+ * not, but they do in oxidants that are neither, as nitrous oxide. Aluminium's correlation counts steam and carbon dioxide.
+ */
+function hasLawFor(element: string | null, gas: Surroundings, hasOtherOxidiser: boolean): boolean {
+  const { oxygenMoleShare, waterMoleShare, carbonDioxideMoleShare } = gas;
+  if (hasOtherOxidiser) return false;
+  const combined = waterMoleShare + carbonDioxideMoleShare;
+  if (element === 'Al') return oxygenMoleShare + combined >= leastOxygenMoleShare;
+  if (element === null) return true;
+  return oxygenMoleShare >= Math.max(leastOxygenMoleShare, combined / 4);
+}
+
+/** Less oxygen than this is what dissociation leaves, not what was brought. */
+const leastOxygenMoleShare = 0.01;
+
+/** Of an oxidant: free oxygen, what keeps no flame of carbon and hydrogen, and what is itself a fuel. */
+const countedGases: ReadonlySet<string> = new Set(
+  ['O2', 'N2', 'Ar', 'He', 'Ne', 'Kr', 'Xe', 'H2O', 'CO2', 'SO2', 'CO', 'H2', 'CH4'].map((gas) => `${gas}(g)`),
+);
+
 function burnOutOf(
   material: Material,
   diameterM: number,
   gas: Surroundings,
+  hasOtherOxidiser: boolean,
 ): BurnOut | NoBurnOut | { readonly missing: readonly string[] } {
   const { name, density } = material;
   const element = elementOf(material);
+  if (!hasLawFor(element, gas, hasOtherOxidiser)) {
+    return { missing: [`a law of burn-out for ${name} in this gas`] };
+  }
   if (element === 'Al') return burnOutOfAluminium(diameterM, gas);
-  const molPerKg = new Map([...material.elements].map(([symbol, amount]) => [symbol, amount.value]));
-  const oxygenKgPerKg = oxygenDemand(molPerKg).molPerKg * 2 * (atomicWeightKgPerMol('O') ?? NaN);
+  const molPerKg = elementMolPerKgOf(material);
+  const oxygenKgPerKg = oxygenNeedKgPerKg(material);
   const heating = figuresOfMaterial(material).find(({ id }) => id === 'lower-heating-value')?.quantity.value;
   const boiling = element === null ? boilingOf(material) : vaporisationOf(element, gas.pressurePa);
   if (element !== null && surfaceBurners.has(element) && density) {
@@ -204,15 +246,20 @@ function surroundingsOf(burn: Burn, flame: Equilibrium, oxidant: OxidantStream):
   };
 }
 
-/** The flame at λ = 1; null where λ has no meaning or the energy is not known. */
+/** The flame of the whole at λ = 1, without zone or cooling; null where λ has no meaning or the energy is not known. */
 function stoichiometricK(burn: Burn): number | null {
-  const { input } = burn;
+  const { fuel, oxidant, held, lowerHeatingValueJPerKg, admits, ions } = burn.input;
   if (burn.charge.lambda === null) return null;
   const even = prepareBurn({
-    ...input,
+    fuel,
+    oxidant,
+    held,
+    lowerHeatingValueJPerKg,
     amount: { by: 'lambda', lambda: 1 },
     heat: { heat: 'adiabatic', lossShare: 0 },
     cooledToK: [],
+    ...(admits && { admits }),
+    ...(ions && { ions }),
   });
   const state = even.kind === 'burn' ? even.flame() : null;
   return state?.kind === 'equilibrium' ? state.temperatureK : null;

@@ -468,7 +468,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
         { name: 'sodium', verdict: 'unburnt', timeS: null },
       ],
     },
-    '`gas_oil` takes about 15 ms to burn out, within a factor of two, and has 20 ms: it may not be burnt. `iron` takes about 80 ms to burn out and has 20 ms. `sodium` does not keep a flame in this gas. All figures here count it as burnt.',
+    '`gas_oil` takes about 15 ms to burn out, within a factor of two, and has 20 ms: it may not be burnt. `iron` takes about 80 ms to burn out and has 20 ms. `sodium` finds too little free oxygen in this gas to keep a flame. All figures here count it as burnt.',
   ],
   [
     {

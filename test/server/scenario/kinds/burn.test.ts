@@ -241,6 +241,69 @@ test('burn-out times go with the square of the diameter, the longest portion cou
   expect(row?.slice(-3)).toEqual([1, 'flame of its vapour', 'burnt']);
 });
 
+test('water in a blend has no burn-out time and hides none', () => {
+  const scenario = checkFacts(`
+    blend spirit {
+      70 % mass ethanol
+      rest water
+    }
+    burn wet {
+      fuel: spirit
+      oxidant: air
+      lambda: 1.3
+      droplet size: 50 um
+      residence time: 1 s
+    }
+  `);
+  expect(tableOf(scenario, 'burn-out', 'wet').rows.map(([name]) => name)).toEqual(['ethanol']);
+  expect(figureOf(scenario, 'wet', 'burn-out-time')).toBeGreaterThan(0);
+});
+
+test('a zone, leaner than λ = 1 or not, does not move the flame around a droplet', () => {
+  const timeOf = (...entries: readonly string[]): number =>
+    figureOf(
+      evaluateText(
+        ['burn lamp {', 'fuel: methanol', 'oxidant: air', 'lambda: 3', 'droplet size: 50 um', ...entries, '}'].join(
+          '\n',
+        ),
+      ),
+      'lamp',
+      'burn-out-time',
+    ) ?? NaN;
+  expect(timeOf('flame zone: lambda 1.5')).toBeCloseTo(timeOf(), 9);
+});
+
+test('heat above the flame in a held volume is none', () => {
+  const closed = hydrogenBurn('lambda: 1', 'held: volume');
+  const flameK = figureOf(evaluateText(closed), 'flame', 'flame-temperature') ?? NaN;
+  const scenario = evaluateText(hydrogenBurn('lambda: 1', 'held: volume', `cooled to: ${flameK} K`));
+  expect(column(tableOf(scenario, 'cooled-states'), 'heat-above')[0]).toBeCloseTo(0, 3);
+});
+
+test.each([
+  ['magnesium', 'carbon_dioxide', 'particle'],
+  ['magnesium', 'steam', 'particle'],
+  ['sodium', 'steam', 'particle'],
+  ['methanol', 'nitrous_oxide', 'droplet'],
+])('%s in %s has no law of burn-out, and is not said to be out', (fuel, oxidant, kind) => {
+  const scenario = evaluateText(`
+    burn reactor {
+      fuel: ${fuel}
+      oxidant: ${oxidant}
+      ${oxidant === 'nitrous_oxide' ? 'lambda: 0.9' : 'oxidant per fuel: 2 kg/kg'}
+      oxidant state: 200 degC, 1 bar
+      ${kind} size: 50 um
+      residence time: 10 ms
+    }
+  `);
+  expect(figureOf(scenario, 'reactor', 'burn-out-time')).toBeUndefined();
+  const rows = tableOf(scenario, 'burn-out', 'reactor').rows;
+  expect(rows.map((row) => [row[0], row[2], row.at(-1)])).toEqual([[fuel, null, null]]);
+  const facts = scenario.files.flatMap((file) => file.facts.map(({ fact }) => fact));
+  expect(facts.map(({ code }) => code)).not.toContain('range/burn-out');
+  expect(JSON.stringify(facts)).toContain('a law of burn-out for');
+});
+
 test('carbon against freezing is at least what the coldest live state has', () => {
   const scenario = evaluateText(`
     blend dispersion {
