@@ -248,7 +248,7 @@ function twoNumbers(first: Token, second: Token): Problem {
   return { code: 'syntax/unexpected', span, message: message };
 }
 
-const shorten = (text: string): string => (text.length > 40 ? `${text.slice(0, 39)}…` : text);
+export const shorten = (text: string): string => (text.length > 40 ? `${text.slice(0, 39)}…` : text);
 
 /** A character that cannot be seen is named by its number. */
 const printable = (character: string): string =>

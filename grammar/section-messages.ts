@@ -1,6 +1,7 @@
 // The words of syntax problems that belong to a whole statement or definition: headers, braces, missing parts, lines
 // that stand nowhere, files that are too large. Same manner as messages.ts: the thing, what is needed, one next step.
 // Invariant: each function returns one problem; what is missing is placed on the header word or what stands before it.
+import { shorten } from './messages.ts';
 import type { Problem, Span } from './tree.ts';
 import type { StatementWord } from './words.ts';
 
@@ -71,6 +72,13 @@ export const sectionProblems = {
     code: 'syntax/missing',
     span,
     message: `\`${words}\` has no value. Write it behind the colon.`,
+  }),
+  /** Only who knows the entries of a kind can tell: to the grammar `fuel methanol` is a spoilt portion. */
+  colonMissing: (span: Span, words: string, value: string): Problem => ({
+    code: 'syntax/missing',
+    span,
+    message: `Write a colon after \`${words}\`: \`${words}: ${shorten(value)}\`.`,
+    fix: { title: 'Add the colon', span: { start: span.end, end: span.end }, newText: ':' },
   }),
   statementMissing: (span: Span, keyword: StatementWord, what: string): Problem => ({
     code: 'syntax/missing',

@@ -3,8 +3,9 @@
 // default's source, and its help. Checking, completion, hover help, the printed reference and the snippets come from it.
 // Invariant: whatever is written inside a definition is either read by a row or reported; nothing stays silent.
 
-import type { Definition, Entry } from '../../grammar/tree.ts';
-import type { Context } from './context.ts';
+import { sectionProblems } from '../../grammar/section-messages.ts';
+import type { BrokenLine, Definition, Entry } from '../../grammar/tree.ts';
+import { near, type Context } from './context.ts';
 import { nearByTrade } from './trade-names.ts';
 
 /** Reads the value of an entry. `undefined` means it could not be read, and that has been said. */
@@ -98,7 +99,7 @@ export function readEntries<Table extends EntryTable>(
     if (value === undefined) broken.add(key);
     else read[key] = { value, entry: line };
   }
-  const unread = new Set(definition.lines.flatMap((line) => (line.kind === 'broken-line' ? (line.words ?? []) : [])));
+  const unread = unreadEntries(definition, [...keyOf.keys()], context);
   for (const words of unread) {
     const key = keyOf.get(words);
     if (key !== undefined) broken.add(key);
@@ -114,6 +115,49 @@ export function readEntries<Table extends EntryTable>(
   }
   // Each value was made by the reader of its own row, which is what the mapped type says; the loop cannot show it.
   return { entries: read as EntriesRead<Table>, broken };
+}
+
+/** The entries whose lines could not be read: they are written, so they are not called missing as well. */
+function unreadEntries(definition: Definition, known: readonly string[], context: Context): ReadonlySet<string> {
+  const unread = new Set<string>();
+  for (const line of definition.lines) {
+    if (line.kind !== 'broken-line') continue;
+    const words = line.words ?? withoutColon(line, known, context);
+    if (words !== undefined) unread.add(words);
+  }
+  return unread;
+}
+
+/**
+ * The entry with whose name a line starts that has no colon, `fuel methanol`. The grammar knows no entries and took it for
+ * a portion; where that is all it said of the line, what it said is replaced by the colon that is missing.
+ */
+function withoutColon({ span }: BrokenLine, known: readonly string[], context: Context): string | undefined {
+  const text = context.written(span);
+  const longestFirst = [...known].sort((left, right) => right.length - left.length);
+  for (const name of longestFirst) {
+    const [, written, value] = new RegExp(`^(${name.replaceAll(' ', '[ \\t]+')})[ \\t]+(\\S.*)$`, 's').exec(text) ?? [];
+    if (written === undefined || value === undefined) continue;
+    if (isOfLonger(name, text, known)) return undefined;
+    const { problems } = context.placed.section;
+    const isTakenForPortion = problems.some(({ span: of }) => of.start === span.start && of.end <= span.end);
+    if (isTakenForPortion) {
+      const wordsSpan = { start: span.start, end: span.start + written.length };
+      const problem = sectionProblems.colonMissing(wordsSpan, name, value);
+      context.report(wordsSpan, { code: problem.code, problem });
+    }
+    return name;
+  }
+  return undefined;
+}
+
+/** `fuel temprature 20 degC` is a slip of the longer entry's: no fuel is meant. */
+function isOfLonger(name: string, text: string, known: readonly string[]): boolean {
+  const words = text.split(/[ \t]+/);
+  return known.some((longer) => {
+    const written = words.slice(0, longer.split(' ').length).join(' ');
+    return longer.startsWith(`${name} `) && near(written, [longer]).length > 0;
+  });
 }
 
 /** Reports lines of a form this kind does not take. */

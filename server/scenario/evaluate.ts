@@ -131,16 +131,22 @@ function gather(
   lacksFile: boolean,
 ): EvaluatedFile {
   const computed: PlacedFact[] = [...ofNames];
+  // A slip of form of which the evaluation knows more than the grammar is told once, in its words.
+  const retold = new Map<number, PlacedFact>();
   let title: string | null = null;
   for (const placed of tree.sections) {
     const { statement } = placed.section;
     if (statement.kind === 'title') title ??= statement.title?.value ?? null;
-    if (answers.get(placed)?.facts.length) append(computed, placedOf(placed)?.facts ?? []);
+    if (!answers.get(placed)?.facts.length) continue;
+    for (const told of placedOf(placed)?.facts ?? []) {
+      if ('problem' in told.fact) retold.set(told.place.start, told);
+      else computed.push(told);
+    }
   }
-  const problems = problemsOf(tree).map((problem): PlacedFact => ({
-    fact: { code: problem.code, problem },
-    place: { path, start: problem.span.start, end: problem.span.end },
-  }));
+  const problems = problemsOf(tree).map((problem): PlacedFact => {
+    const { start, end } = problem.span;
+    return retold.get(start) ?? { fact: { code: problem.code, problem }, place: { path, start, end } };
+  });
   // A file with so many slips is being pasted, merged or is no scenario: what it computes would only be noise.
   const facts =
     problems.length >= suspendingProblems ? suspended(problems, computed.length) : [...problems, ...computed];
@@ -169,11 +175,6 @@ function suspended(problems: readonly PlacedFact[], hidden: number): readonly Pl
   const [first] = problems;
   if (!first || hidden === 0) return problems;
   return [{ fact: { code: 'kind/suspended', problems: problems.length, hidden }, place: first.place }, ...problems];
-}
-
-/** One by one: a definition of 100,000 lines has more facts than a call can have arguments. */
-function append<T>(list: T[], more: readonly T[]): void {
-  for (const one of more) list.push(one);
 }
 
 /** From this many syntax problems on, a file's computed findings are not told. */
