@@ -9,6 +9,7 @@ import exposure from '../../../reference/hazards-exposure-limits.json' with { ty
 import limits from '../../../reference/hazards-flammable-limits.json' with { type: 'json' };
 import flashPoints from '../../../reference/hazards-flash-point-classes.json' with { type: 'json' };
 import ghs from '../../../reference/hazards-ghs-classes.json' with { type: 'json' };
+import limitingOxygen from '../../../reference/hazards-limiting-oxygen.json' with { type: 'json' };
 import unNumbers from '../../../reference/hazards-un-numbers.json' with { type: 'json' };
 
 interface Row {
@@ -22,7 +23,14 @@ function hazardsOf(name: string): Hazards {
   return hazards;
 }
 
-const all = [unNumbers.rows, ghs.rows, exposure.rows, limits.rows, flashPoints.rows].flat() as readonly Row[];
+const all = [
+  unNumbers.rows,
+  ghs.rows,
+  exposure.rows,
+  limits.rows,
+  flashPoints.rows,
+  limitingOxygen.rows,
+].flat() as readonly Row[];
 
 test('most reference values of hazards were seen in a source', () => {
   const seen = all.filter(({ provenance }) => provenance === 'seen');
@@ -132,6 +140,14 @@ describe('lower flammable limits', () => {
     // The limit is one of the vessel and of the way it is read as much as of the gas: good lists are up to a quarter apart.
     const isNear = Math.abs((lower?.value ?? NaN) * 100 - lowerPercent) <= 0.25 * lowerPercent + 1e-9;
     expect(isNear, `${(lower?.value ?? NaN) * 100} %: ${differs ?? ''}`).toBe(differs === undefined);
+  });
+});
+
+describe('limiting oxygen', () => {
+  test.each(limitingOxygen.rows)('$substance with $inert', ({ substance, inert, percent }) => {
+    const found = hazardsOf(substance).limitingOxygen.filter((one) => one.inert === inert);
+    expect(found).toHaveLength(1);
+    expect((found[0]?.moleFraction ?? NaN) * 100).toBeCloseTo(percent, 9);
   });
 });
 
