@@ -123,26 +123,36 @@ export function byTemperature(
   const perAtoms = 1 / (molarGasConstantJPerMolK * atoms);
   const valueOf = (state: Equilibrium): number =>
     ((reached(state, check) - check.value) * perAtoms) / (check.kind === 'entropy' ? 1 : state.temperatureK);
-  const end = reach(
-    {
-      stateAt: (temperatureK, near) =>
-        'pressurePa' in held
-          ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent, near)
-          : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent),
-      valueOf,
-      // The heat capacity is that at constant pressure.
-      slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
-        heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
-      nearEnough,
-    },
-    [range.lowestK, range.highestK],
-    firstTemperatureK,
-    (state) => reached(state, check),
-    check.value,
-  );
+  const searchTo = (highestK: number): ReturnType<typeof reach> =>
+    reach(
+      {
+        stateAt: (temperatureK, near) =>
+          'pressurePa' in held
+            ? atTemperatureAndPressure(work, elementMol, temperatureK, held.pressurePa, descent, near)
+            : atTemperatureAndVolume(work, elementMol, temperatureK, held.volumeM3, descent),
+        valueOf,
+        // The heat capacity is that at constant pressure.
+        slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
+          heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
+        nearEnough,
+      },
+      [range.lowestK, highestK],
+      firstTemperatureK,
+      (state) => reached(state, check),
+      check.value,
+    );
+  let { highestK } = range;
+  let end = searchTo(highestK);
+  // Above the ends of all phases that could hold some element there is no state at all: the search stops at the last end.
+  for (let tries = 0; end === 'failed' && tries < 8; tries += 1) {
+    const lower = lastEndBelow(work, highestK);
+    if (lower <= range.lowestK) break;
+    highestK = lower;
+    end = searchTo(highestK);
+  }
   if (end === 'failed') return undefined;
   if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
-  if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: range.highestK };
+  if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: highestK };
   if (end.pinned?.by === 'phase-change') {
     const state = settled(work, elementMol, aim, end, range, descent, check);
     if (state !== undefined) return state;
@@ -155,6 +165,11 @@ const firstTemperatureK = 1500;
 function reached(state: Equilibrium, check: Check): number {
   if (check.kind === 'entropy') return state.entropyJPerK;
   return check.kind === 'energy' ? state.enthalpyJ - state.pressurePa * state.volumeM3 : state.enthalpyJ;
+}
+
+/** The highest temperature below a given one at which a condensed phase of the set ends. */
+function lastEndBelow({ set }: Work, temperatureK: number): number {
+  return set.endK.reduce((last, endK) => (endK < temperatureK ? Math.max(last, endK) : last), 0);
 }
 
 /** The state at the zero, or the blend of those at a jump in the shares that hold what is held. */
