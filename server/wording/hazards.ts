@@ -103,10 +103,14 @@ const mostTold = 3;
 export function cautionText(name: string, hazards: Hazards): string | null {
   const ofAllForms = hazards.classes.filter(({ form }) => form === undefined).map((found) => toldOf(found));
   const known = new Set(ofAllForms.map(({ text }) => text));
-  // What holds of a powder or a solution alone is told where it adds something.
-  const ofOneForm = hazards.classes
-    .filter((found) => found.form !== undefined && !known.has(toldOf(found).text))
-    .map((found) => ({ text: `${formText(found.form)} ${toldOf(found).text}`, order: toldOf(found).order }));
+  // What holds of a powder or a solution alone is told where it adds something, and once for all such forms.
+  const ofOneForm: Told[] = [];
+  for (const found of hazards.classes) {
+    const { text, order } = toldOf(found);
+    if (found.form === undefined || known.has(text)) continue;
+    known.add(text);
+    ofOneForm.push({ text: `${formText(found.form)} ${text}`, order });
+  }
   const grave = [...ofAllForms, ...ofOneForm].filter(({ order }) => order <= leastGrave);
   const words = [...new Set(grave.sort((a, b) => a.order - b.order).map(({ text }) => text))].slice(0, mostTold);
   const all = [...words, ...(hazards.families.includes('inert-gas') ? ['displaces the air to breathe'] : [])];

@@ -29,6 +29,7 @@ describe('the caution', () => {
       'magnesium',
       'Caution, magnesium: as powder takes fire in air; as powder water makes flammable gas that may take fire; as coated powder water makes flammable gas.',
     ],
+    ['hydrogen_chloride', 'Caution, hydrogen_chloride: as liquefied gas toxic; burns skin and eyes.'],
     ['nitrogen', 'Caution, nitrogen: displaces the air to breathe.'],
     ['gas_oil', 'Caution, gas_oil: flammable liquid; may be deadly if swallowed and drawn into the lungs.'],
   ])('of %s', (name, text) => {
