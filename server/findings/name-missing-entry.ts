@@ -6,8 +6,8 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const nameMissingEntry: Rule<FactOf<'name/missing-entry'>> = {
   severity: 'error',
-  message: ({ kind, name, entries }) =>
-    `The ${kind} ${quoted(name)} needs ${listed(entries.map(wanted), 'or')}. Add it inside the braces.`,
+  message: ({ kind, name, entries, all }) =>
+    `The ${kind} ${quoted(name)} needs ${listed(entries.map(wanted), all ? 'and' : 'or')}. Add ${all && entries.length > 1 ? 'them' : 'it'} inside the braces.`,
 };
 
 /** An entry as it would be written; `an equation` is no entry and stays as it is. */

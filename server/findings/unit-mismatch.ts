@@ -3,7 +3,8 @@
  * though they are not of one sort. Both are named in words with their SI units.
  */
 import { dimensionPhrase } from '../wording/quantities.ts';
-import { quoted, sentences } from '../wording/words.ts';
+import { formatNumber } from '../wording/numbers.ts';
+import { listed, quoted, sentences } from '../wording/words.ts';
 import type { Sided } from '../scenario/facts.ts';
 import type { FactOf, Rule } from './rule.ts';
 
@@ -32,10 +33,34 @@ export const unitMismatch: Rule<FactOf<'unit/mismatch'>> = {
         bare && `Does ${quoted(bare.text)} lack its unit?`,
       );
     }
+    if (fact.form === 'bare') {
+      const { text, entry, fraction, instead, mends } = fact;
+      return sentences(
+        fraction !== null && `${quoted(text)} is ${formatNumber(fraction)}.`,
+        fraction === null && instead !== null && `${quoted(text)} is a mass of one per mass of the other.`,
+        `${quoted(entry)} takes a number without a unit.`,
+        fraction !== null &&
+          mends.length > 0 &&
+          `Write ${listed(
+            mends.map(({ newText }) => quoted(newText)),
+            'or',
+          )}.`,
+        fraction === null &&
+          (instead === null ? 'Leave the unit out.' : `Such a ratio is written ${quoted(`${instead}: ${text}`)}.`),
+      );
+    }
     const { found, needed, example } = fact;
     return sentences(
       `${quoted(found.text)} is ${phraseOf(found)}, but ${dimensionPhrase(needed)} is needed here.`,
       example !== '' && example !== '1' && `Give it for example in ${quoted(example)}.`,
     );
   },
+  fixes: (fact) =>
+    fact.form === 'bare'
+      ? fact.mends.map(({ title, place, newText }) => ({
+          title,
+          preferred: fact.mends.length === 1,
+          edits: [{ place, newText }],
+        }))
+      : [],
 };

@@ -67,18 +67,21 @@ export function readEntries<Table extends EntryTable>(
   const firsts = new Map<string, Entry>();
   const read: { [Key in keyof Table]?: ReadEntry<unknown> } = {};
   const broken = new Set<keyof Table>();
+  const misspelt = new Set<string>();
   for (const line of definition.lines) {
     if (line.kind !== 'entry') continue;
     const key = keyOf.get(line.words);
     if (key === undefined) {
       const known = [...keyOf.keys()];
+      const meant = nearByTrade(line.words, known);
       context.report(line.wordsSpan, {
         code: 'name/unknown-entry',
         entry: line.words,
         kind: definition.keyword.text,
-        near: nearByTrade(line.words, known),
+        near: meant,
         known,
       });
+      for (const name of meant) misspelt.add(name);
       continue;
     }
     context.mean(line.wordsSpan, { kind: 'entry', definitionKind: definition.keyword.text, entry: line.words });
@@ -100,6 +103,8 @@ export function readEntries<Table extends EntryTable>(
     else read[key] = { value, entry: line };
   }
   const unread = unreadEntries(definition, [...keyOf.keys()], context);
+  // What a misspelt entry may have meant is written, unless it is there as well.
+  for (const name of misspelt) if (!firsts.has(name)) unread.add(name);
   for (const words of unread) {
     const key = keyOf.get(words);
     if (key !== undefined) broken.add(key);
@@ -111,6 +116,7 @@ export function readEntries<Table extends EntryTable>(
       kind: definition.keyword.text,
       name: definition.name?.text ?? '',
       entries: missing.map((row) => row.name),
+      all: true,
     });
   }
   // Each value was made by the reader of its own row, which is what the mapped type says; the loop cannot show it.
@@ -118,7 +124,7 @@ export function readEntries<Table extends EntryTable>(
 }
 
 /** The entries whose lines could not be read: they are written, so they are not called missing as well. */
-function unreadEntries(definition: Definition, known: readonly string[], context: Context): ReadonlySet<string> {
+function unreadEntries(definition: Definition, known: readonly string[], context: Context): Set<string> {
   const unread = new Set<string>();
   for (const line of definition.lines) {
     if (line.kind !== 'broken-line') continue;

@@ -53,6 +53,8 @@ export type Fact =
       readonly kind: string;
       readonly name: string;
       readonly entries: readonly string[];
+      /** Every one of them is needed; otherwise any one will do. */
+      readonly all?: true;
     }
   /** A phrase of an entry that its table does not take. */
   | { readonly code: 'name/unknown-phrase'; readonly entry: string; readonly text: string; readonly takes: string }
@@ -87,6 +89,18 @@ export type Fact =
       readonly needed: Pick<Quantity, 'dimension' | 'kind'>;
       /** A unit that would fit, for "write for example". */
       readonly example: string;
+    }
+  /** A ratio written with `%` or a unit where its bare number is meant. */
+  | {
+      readonly code: 'unit/mismatch';
+      readonly form: 'bare';
+      readonly text: string;
+      readonly entry: string;
+      /** What a percentage is as a number; null for another unit. */
+      readonly fraction: number | null;
+      /** The entry that takes such a ratio, where there is one. */
+      readonly instead: string | null;
+      readonly mends: readonly Mend[];
     }
   /** Two values that cannot be added, compared, … */
   | {

@@ -28,7 +28,13 @@ export type Range = 'any' | 'positive' | 'share';
 export function quantityReader(
   unit: string,
   what: string,
-  options: { readonly range?: Range; readonly temperature?: boolean; readonly at?: boolean } = {},
+  options: {
+    readonly range?: Range;
+    readonly temperature?: boolean;
+    readonly at?: boolean;
+    /** A bare number is meant; the entry named here takes the same thing as a mass ratio. */
+    readonly bareUnlike?: string;
+  } = {},
 ): Reader<QuantityAt> {
   const { dimension } = knownUnit(unit);
   const isThermal = sameDimension(dimension, knownUnit('K').dimension);
@@ -52,6 +58,9 @@ export function quantityReader(
         if (!temperature || extra) return refuseItem(entry, extra ?? connective, takes, context);
       }
       const quantity = readQuantityItem(first, needed, context);
+      if (quantity && options.bareUnlike !== undefined && isUnitOnRatio(first, entry, options.bareUnlike, context)) {
+        return undefined;
+      }
       const hasAt = temperature !== undefined && temperature.kind !== 'connective';
       const at = hasAt ? readQuantityItem(temperature, temperatureNeeded, context) : null;
       if (hasAt && !at) return undefined;
@@ -59,6 +68,34 @@ export function quantityReader(
       return { quantity, at };
     },
   };
+}
+
+/** Whether a ratio bears `%` or a unit such as `kg/kg` where its bare number is meant (said). */
+function isUnitOnRatio(item: Expression, entry: Entry, instead: string, context: Context): boolean {
+  if (item.kind !== 'quantity' || !item.unit) return false;
+  const { value } = item.number;
+  const unit = context.written(item.unit.span);
+  const isPercent = unit === '%';
+  const isByMass = /^([a-zA-Z]+) *(?:\/|per) *\1$/.test(unit) && /^(?:[mkM]?g|t|lb)\b/.test(unit);
+  const place = context.place(item.span);
+  // Of the two numbers a percentage may mean, the one that is nearer to one comes first: these ratios are.
+  const meant = [value, value / 100].sort((left, right) => Math.abs(Math.log(left)) - Math.abs(Math.log(right)));
+  const asNumber = (isPercent ? meant : [value]).map((number) => {
+    const newText = String(Number(number.toPrecision(10)));
+    return { title: `Write ${newText}`, place, newText };
+  });
+  const asEntry = { title: `Write ${instead}`, place: context.place(entry.wordsSpan), newText: instead };
+  context.report(item.span, {
+    code: 'unit/mismatch',
+    form: 'bare',
+    text: context.written(item.span),
+    entry: entry.words,
+    fraction: isPercent ? value / 100 : null,
+    instead: isByMass ? instead : null,
+    // Of `2 ± 5 %` the `%` is of both numbers, and which of them was to have it cannot be told.
+    mends: isByMass ? [asEntry] : item.uncertainty ? [] : asNumber,
+  });
+  return true;
 }
 
 /** One of the listed words. */

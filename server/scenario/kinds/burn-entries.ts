@@ -28,7 +28,7 @@ export const burnEntries = {
   },
   lambda: {
     name: 'lambda',
-    reader: quantityReader('1', 'a number, such as `2.1`', { range: 'positive' }),
+    reader: quantityReader('1', 'a number, such as `2.1`', { range: 'positive', bareUnlike: 'oxidant per fuel' }),
     help: 'The excess-air ratio λ: oxygen brought over oxygen needed, counted by valence. Give this, an equivalence ratio, or the oxidant per fuel.',
   },
   equivalenceRatio: {

@@ -62,3 +62,65 @@ describe('an entry without its colon', () => {
     ]);
   });
 });
+
+test.each([
+  ['burn a { fuel: methanol; oxydant: air; lambda: 2 }', 'oxidant'],
+  ['burn a { fuel: methanol; oxidant: air; lamda: 2 }', 'lambda'],
+  ['burn a { Fuel: methanol; oxidant: air; lambda: 2 }', 'fuel'],
+  ['substance oil { formla: CH4 }', 'formula'],
+])('a misspelt entry is not called missing as well: %s', (text, meant) => {
+  const messages = messagesOf(text);
+  expect(messages).toHaveLength(1);
+  expect(messages[0]).toContain(`Did you mean \`${meant}\`?`);
+});
+
+test('an entry that nothing is near to leaves the missing one missing', () => {
+  expect(
+    told('burn a { fuel: methanol; colour: red; lambda: 2 }')
+      .map(({ code }) => code)
+      .sort(),
+  ).toEqual(['name/missing-entry', 'name/unknown-entry']);
+});
+
+test('entries that are all missing are all needed, and of alternatives one is', () => {
+  expect(messagesOf('burn a { lambda: 2 }')).toEqual([
+    'The burn `a` needs `fuel: …` and `oxidant: …`. Add them inside the braces.',
+  ]);
+  expect(messagesOf('burn a { fuel: methanol; lambda: 2 }')).toEqual([
+    'The burn `a` needs `oxidant: …`. Add it inside the braces.',
+  ]);
+  expect(messagesOf('substance oil { density: 780 kg/m3 }')).toEqual([
+    'The substance `oil` needs `formula: …` or `composition: …`. Add it inside the braces.',
+  ]);
+});
+
+describe('an excess-air ratio with a unit', () => {
+  const burn = (line: string): string => `burn a { fuel: methanol; oxidant: air; ${line} }`;
+
+  test('a mass ratio is pointed to the entry that takes it', () => {
+    const text = burn('lambda: 14.5 kg/kg');
+    expect(messagesOf(text)).toEqual([
+      '`14.5 kg/kg` is a mass of one per mass of the other. `lambda` takes a number without a unit. Such a ratio is written `oxidant per fuel: 14.5 kg/kg`.',
+    ]);
+    expect(mended(text, told(text)[0])).toBe(burn('oxidant per fuel: 14.5 kg/kg'));
+  });
+
+  test('a percentage is told as the number it is', () => {
+    const text = burn('lambda: 2 %');
+    expect(messagesOf(text)).toEqual(['`2 %` is 0.02. `lambda` takes a number without a unit. Write `2` or `0.02`.']);
+    expect(mended(text, told(text)[0])).toBe(burn('lambda: 2'));
+    expect(mended(burn('lambda: 200 %'), told(burn('lambda: 200 %'))[0])).toBe(burn('lambda: 2'));
+  });
+
+  test('where the `%` is that of a ± as well, no number is offered', () => {
+    const [finding] = told(burn('lambda: 2 ± 5 %'));
+    expect(finding?.message).toBe('`2 ± 5 %` is 0.02. `lambda` takes a number without a unit.');
+    expect(finding?.fixes).toEqual([]);
+  });
+
+  test('a bare number, and a mass ratio in its own entry, are neither', () => {
+    for (const line of ['lambda: 2', 'lambda: 2 ± 0.1', 'oxidant per fuel: 14.5 kg/kg']) {
+      expect(told(burn(line)).map(({ code }) => code)).not.toContain('unit/mismatch');
+    }
+  });
+});
