@@ -101,7 +101,9 @@ const mostTold = 3;
  * It tells the gravest few, not all.
  */
 export function cautionText(name: string, hazards: Hazards): string | null {
-  const ofAllForms = hazards.classes.filter(({ form }) => form === undefined).map((found) => toldOf(found));
+  // Some metals are classed by what water does to them, though they take fire in air as well.
+  const inAir = hazards.pyrophoric && hazards.pyrophoric.form === undefined ? [{ statement: 'H250' }] : [];
+  const ofAllForms = [...inAir, ...hazards.classes.filter(({ form }) => form === undefined)].map(toldOf);
   const known = new Set(ofAllForms.map(({ text }) => text));
   // What holds of a powder or a solution alone is told where it adds something, and once for all such forms.
   const ofOneForm: Told[] = [];

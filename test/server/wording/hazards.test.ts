@@ -23,6 +23,10 @@ describe('the caution', () => {
       'caesium',
       'Caution, caesium: takes fire in air; water makes flammable gas that may take fire; burns skin and eyes.',
     ],
+    [
+      'sodium_potassium_alloy',
+      'Caution, sodium_potassium_alloy: takes fire in air; water makes flammable gas that may take fire; burns skin and eyes.',
+    ],
     ['methanol', 'Caution, methanol: toxic; highly flammable liquid; damages organs.'],
     ['ammonia', 'Caution, ammonia: toxic; burns skin and eyes; flammable gas.'],
     [
