@@ -1,6 +1,7 @@
 /**
  * A temperature below absolute zero (0 K, −273.15 °C, −459.67 °F), or one at which the data of some species are not good
- * any more: their published tables end there, or the substance melts, boils or falls apart.
+ * any more: their published tables end there, or the substance melts, boils or falls apart. Where the tables of all
+ * products end, a burn has no state at all. An exhaust cannot be hotter than the flame it comes from.
  */
 import { celsiusText } from '../wording/quantities.ts';
 import { quoted, sentences } from '../wording/words.ts';
@@ -11,6 +12,13 @@ export const rangeTemperature: Rule<FactOf<'range/temperature'>> = {
   message: (fact) => {
     if (fact.why === 'below-absolute-zero') {
       return `${quoted(fact.text)} is below absolute zero (−273.15 °C). Is the sign or the unit wrong?`;
+    }
+    if (fact.why === 'outside-tables') {
+      const [from, to] = fact.range;
+      return `${stateNames[fact.what]} cannot be worked out at ${celsiusText(fact.temperature)}: the data of all products lie between ${celsiusText(from)} and ${celsiusText(to)}.`;
+    }
+    if (fact.why === 'hotter-than-flame') {
+      return `The exhaust would be at ${celsiusText(fact.temperature)}, hotter than the flame at ${celsiusText(fact.flame)}: heat above it would have to be brought in. Is the temperature or its unit mistyped?`;
     }
     const ranges = fact.species.map(({ name, range: [from, to] }) =>
       from.value === to.value
@@ -25,3 +33,9 @@ export const rangeTemperature: Rule<FactOf<'range/temperature'>> = {
     );
   },
 };
+
+const stateNames = {
+  cooled: 'The cooled products',
+  exhaust: 'The exhaust',
+  wall: 'What meets the wall',
+} as const;

@@ -192,6 +192,8 @@ export type Fact =
       readonly sootShare: number;
       /** Atoms of carbon per atom of oxygen in the charge; null without oxygen. */
       readonly carbonPerOxygen: number | null;
+      /** From as many on premixed flames soot. */
+      readonly sootingFrom: number;
     }
   /** A gas at a pressure that it would not have so cold: its compression was forgotten. `compressed` is what it would be. */
   | {
@@ -252,6 +254,21 @@ export type Fact =
       readonly of?: 'burn';
       readonly temperature: Quantity;
       readonly species: readonly { readonly name: string; readonly range: readonly [from: Quantity, to: Quantity] }[];
+    }
+  /** A state of a burn that is asked for, where the tables of no product reach. */
+  | {
+      readonly code: 'range/temperature';
+      readonly why: 'outside-tables';
+      readonly what: 'cooled' | 'exhaust' | 'wall';
+      readonly temperature: Quantity;
+      readonly range: readonly [from: Quantity, to: Quantity];
+    }
+  /** An exhaust that is hotter than the flame it comes from. */
+  | {
+      readonly code: 'range/temperature';
+      readonly why: 'hotter-than-flame';
+      readonly temperature: Quantity;
+      readonly flame: Quantity;
     }
   /** A portion that is in another phase where it is stored than at 25 °C, which its data are of. */
   | { readonly code: 'range/phase'; readonly substance: string; readonly state: PortionState }

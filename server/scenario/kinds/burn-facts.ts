@@ -1,11 +1,13 @@
 // What is to be said of a burn: that it cannot be worked out and why, that it leans on values beyond their data, and where
 // what is written is hardly meant (cold air under pressure) or has a consequence that is easily missed (soot, no water).
-// Reads the charge, the flame and its zone alone, so that no cooled state is solved for it. Rounds and words nothing.
+// Reads the charge, the flame and its zone alone, so that no cooled state is solved for it; but for walls, whose states are
+// solved (burn-deposits.ts says how many), and sizes, which take one more flame. Rounds and words nothing.
 
 import type { Burn, BurnFault, Charge } from '../../core/burn/burn.ts';
 import { carbonFate, shareOfForm } from '../../core/burn/fates.ts';
 import { amountOf, dryGasMol, productRows } from '../../core/burn/products.ts';
 import type { Equilibrium, NoEquilibrium } from '../../core/equilibrium/equilibrium.ts';
+import { tablesK } from '../../core/equilibrium/solver.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../../core/substance/elements.ts';
@@ -13,6 +15,7 @@ import { waterSaturationPressurePa } from '../../core/substance/water-saturation
 import type { Span } from '../../../grammar/tree.ts';
 import type { TemperatureRange } from '../burn-readers.ts';
 import type { Context } from '../context.ts';
+import type { OxidantStream } from '../oxidant-stream.ts';
 import { judgedWalls } from './burn-deposits.ts';
 import type { WrittenBurn } from './burn-question.ts';
 import type { AskedOfBurn, SolvedBurn } from './burn-solved.ts';
@@ -28,6 +31,10 @@ export interface BurnPlaces {
   readonly heatLoss: Span;
   readonly size: Span;
   readonly residence: Span;
+  readonly cooled: Span;
+  /** Of the exhaust temperature, where one is written. */
+  readonly exhaust: Span | null;
+  readonly walls: Span;
   /** Of what names the products, where it is written. */
   readonly products: Span | null;
 }
@@ -76,7 +83,9 @@ export function reportFault(
     case 'no-oxygen-needed':
     case 'no-oxygen-offered': {
       const isZone = fault.reason === 'zone-leaner' || (fault.reason === 'not-positive' && fault.of === 'zone');
-      const place = isZone ? places.zone : places.amount;
+      // A mass of oxidant has no λ to be at fault, so that of the zone is.
+      const place =
+        isZone || (written.amount.by === 'mass' && fault.reason !== 'not-positive') ? places.zone : places.amount;
       context.report(place, { code: 'balance/charge', fault, fuel: names.fuel, oxidant: names.oxidant });
     }
   }
@@ -124,6 +133,7 @@ export function reportStates(
   burn: Burn,
   flame: Equilibrium,
   written: WrittenBurn,
+  { moleShares }: OxidantStream,
   names: BurnNames,
   places: BurnPlaces,
   context: Context,
@@ -137,8 +147,45 @@ export function reportStates(
     reportRich('zone', burn.zoneCharge, zone, places.zone, context);
   }
   reportMissingWater(burn.charge, names.burn, places.header, context);
-  reportColdCharge(written, places.oxidant, context);
+  reportColdCharge(written, moleShares, places.oxidant, context);
   reportRealGas(burn, flame, places.header, context);
+}
+
+/** Says which states are asked for where there are none, and that an exhaust would be hotter than its flame. */
+export function reportAskedTemperatures(
+  burn: Burn,
+  flame: Equilibrium,
+  { cooledTo, exhaustTemperature }: WrittenBurn,
+  walls: TemperatureRange | null,
+  places: BurnPlaces,
+  context: Context,
+): void {
+  const report = (what: 'cooled' | 'exhaust' | 'wall', temperature: Quantity, place: Span): void => {
+    const range = [kelvin(tablesK.lowestK), kelvin(tablesK.highestK)] as const;
+    context.report(place, { code: 'range/temperature', why: 'outside-tables', what, temperature, range });
+  };
+  const [cooled] = cooledTo.filter(({ value }) => isBeyondTables(burn, value));
+  if (cooled) report('cooled', cooled, places.cooled);
+  const wall = walls && [walls.from, walls.to].find(({ value }) => isBeyondTables(burn, value));
+  if (wall) report('wall', wall, places.walls);
+  if (!places.exhaust) return;
+  if (isBeyondTables(burn, exhaustTemperature.value)) {
+    report('exhaust', exhaustTemperature, places.exhaust);
+  } else if (exhaustTemperature.value > flame.temperatureK) {
+    context.report(places.exhaust, {
+      code: 'range/temperature',
+      why: 'hotter-than-flame',
+      temperature: exhaustTemperature,
+      flame: kelvin(flame.temperatureK),
+    });
+  }
+}
+
+/** Whether the cooling gas has no state at a temperature. A composition that froze within the tables is also told below. */
+function isBeyondTables({ input }: Burn, temperatureK: number): boolean {
+  const { frozenBelowK = -Infinity } = input;
+  const solvedK = temperatureK <= frozenBelowK ? Math.min(frozenBelowK, tablesK.highestK) : temperatureK;
+  return solvedK < tablesK.lowestK || solvedK > tablesK.highestK;
 }
 
 /** Says which of the walls given meet a deposit that sticks, or may stick; a state is solved for each wall. */
@@ -202,7 +249,7 @@ function reportExtrapolated(state: Equilibrium, place: Span, context: Context): 
  * Carbon over oxygen from which on premixed flames soot, well before equilibrium has any carbon left: about 0.5 for most
  * hydrocarbons. Source: Haynes and Wagner 1981, Prog. Energy Combust. Sci. 7, 229 (from memory).
  */
-export const sootingCarbonPerOxygen = 0.5;
+const sootingCarbonPerOxygen = 0.5;
 
 function reportRich(of: 'flame' | 'zone', charge: Charge, state: Equilibrium, place: Span, context: Context): void {
   const { lambda } = charge;
@@ -224,14 +271,38 @@ function reportRich(of: 'flame' | 'zone', charge: Charge, state: Equilibrium, pl
     hydrogenShare: shareOf('H2(g)'),
     sootShare,
     carbonPerOxygen,
+    sootingFrom: sootingCarbonPerOxygen,
   });
 }
+
+/** What alkali is known not to be held by: beside acids and carbon, whatever else is there may bind it. */
+const bystanders = new Set([
+  'H',
+  'C',
+  'N',
+  'O',
+  'F',
+  'Cl',
+  'Br',
+  'I',
+  'S',
+  'He',
+  'Ne',
+  'Ar',
+  'Mg',
+  'Ca',
+  ...alkaliMetals,
+]);
 
 /** Alkali that neither acids nor carbon bind, and that the whole charge has too little hydrogen to make hydroxide of. */
 function reportMissingWater({ elements, elementMol }: Charge, name: string, place: Span, context: Context): void {
   const atoms = (symbol: string): number => elementMol[elements.indexOf(symbol)] ?? 0;
   const alkali = alkaliMetals.reduce((sum, metal) => sum + atoms(metal), 0);
-  const unbound = alkali - atoms('Cl') - atoms('F') - 2 * atoms('S') - 2 * atoms('C');
+  // Silicates, borates, phosphates, aluminates and ferrites take an amount of alkali that only the products tell.
+  const others = elements.reduce((sum, symbol) => sum + (bystanders.has(symbol) ? 0 : atoms(symbol)), 0);
+  if (others > leastBinderShare * alkali) return;
+  const halogens = atoms('F') + atoms('Cl') + atoms('Br') + atoms('I');
+  const unbound = alkali - halogens - 2 * atoms('S') - 2 * atoms('C');
   const missingMol = (unbound - atoms('H')) / 2;
   if (!(missingMol > leastMissingShare * alkali)) return;
   const waterKgPerMol = 2 * (atomicWeightKgPerMol('H') ?? 0) + (atomicWeightKgPerMol('O') ?? 0);
@@ -240,18 +311,37 @@ function reportMissingWater({ elements, elementMol }: Charge, name: string, plac
 }
 
 const leastMissingShare = 1e-6;
+/** Fewer atoms than this, of those that may bind alkali, hold too little of it to matter. */
+const leastBinderShare = 1e-3;
 
 /** From this pressure on, and up to this temperature, a gas that was not told to be compressed was forgotten so. */
 const coldPressurePa = 5e5;
 const coldTemperatureK = 333.15;
 
-function reportColdCharge({ oxidant, chargePressure, held }: WrittenBurn, place: Span, context: Context): void {
+function reportColdCharge(
+  { oxidant, chargePressure, held }: WrittenBurn,
+  moleShares: OxidantStream['moleShares'],
+  place: Span,
+  context: Context,
+): void {
   const pressure = held.held === 'pressure' ? held.pressure : chargePressure;
   const { temperature } = oxidant;
-  const isAir = (oxidant.elements.get('N')?.value ?? 0) > 0 && oxidant.gasMolPerKg > 0;
-  if (!isAir || pressure.value < coldPressurePa || temperature.value > coldTemperatureK) return;
+  if (
+    !isAir(moleShares) ||
+    oxidant.gasMolPerKg === 0 ||
+    pressure.value < coldPressurePa ||
+    temperature.value > coldTemperatureK
+  )
+    return;
   const compressedK = temperature.value * (pressure.value / 1e5) ** (1 - 1 / gammaOfAir);
   context.report(place, { code: 'range/cold-charge', temperature, pressure, compressed: kelvin(compressedK) });
+}
+
+/** Nitrogen and oxygen about as in air, with at most some vapour and other gases beside them. */
+function isAir(moleShares: OxidantStream['moleShares']): boolean {
+  const [nitrogen, oxygen] = ['N2(g)', 'O2(g)'].map((id) => moleShares.get(id)?.value ?? 0) as [number, number];
+  const oxygenOfBoth = oxygen / (nitrogen + oxygen);
+  return nitrogen + oxygen > 0.85 && oxygenOfBoth > 0.18 && oxygenOfBoth < 0.24;
 }
 
 /** Of cold air. */

@@ -264,14 +264,14 @@ function figureQuantity(value: number, unit: string): Quantity {
 function propagateGroup(
   group: Group,
   solved: SolvedBurn,
-  { quantities, input }: BurnQuestion,
+  { quantities, input, asked: askedAt }: BurnQuestion,
   asked: AskedOfBurn,
 ): ReadonlyMap<string, Propagated> {
   const rows = burnFigures.filter((row) => row.group === group);
   const centre = quantities.map(({ value }) => value);
   const outcomes = propagate(quantities, (values) => {
     const isCentre = values.every((value, index) => Object.is(value, centre[index]));
-    const states = isCentre ? solved : solveAt(input(values), asked);
+    const states = isCentre ? solved : solveAt(input(values), { ...asked, ...askedAt(values) });
     return rows.map(({ value }) => (states && value(states)) ?? NaN);
   });
   return new Map(rows.flatMap(({ id }, index) => (outcomes[index] ? [[id, outcomes[index]]] : [])));

@@ -1,6 +1,7 @@
 // From the entries of a burn to what core is asked: the uncertain quantities in one list, and the question that any values
-// of them make. Knows no states. Invariant: everything uncertain that the burn rests on is in the list, so that correlations
-// (the same portion in elements, energy and heating value) are kept.
+// of them make. Knows no states. Invariant: everything uncertain that a figure rests on is in the list, so that correlations
+// (the same portion in elements, energy and heating value) are kept. Temperatures the products are cooled to make tables
+// alone, whose cells have no uncertainty.
 
 import type { BurnInput, OxidantAmount } from '../../core/burn/burn.ts';
 import type { BurnParameter } from '../../core/burn/charge-directions.ts';
@@ -10,6 +11,7 @@ import type { ThermoPhase } from '../../core/substance/phases.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
 import type { AmountEntry, HeldEntry } from '../burn-readers.ts';
+import type { BurnOutEntries } from './burn-out-times.ts';
 
 /** How much oxidant, as it is written. */
 export type WrittenAmount = AmountEntry | { readonly by: 'mass'; readonly quantity: Quantity };
@@ -32,6 +34,7 @@ export interface WrittenBurn {
   readonly coolingPressure: Quantity | null;
   readonly frozenBelow: Quantity | null;
   readonly exhaustTemperature: Quantity;
+  readonly sizes: BurnOutEntries;
   readonly allowed: readonly Formula[] | null;
   readonly barred: readonly Formula[];
   readonly ions: boolean;
@@ -45,6 +48,8 @@ export interface BurnQuestion {
   readonly quantities: readonly Quantity[];
   readonly roles: readonly QuantityRole[];
   readonly input: (values: readonly number[]) => BurnInput;
+  /** What those values ask of the states besides. */
+  readonly asked: (values: readonly number[]) => { readonly exhaustK: number; readonly sizes: BurnOutEntries };
 }
 
 /** The question a written burn asks. */
@@ -59,14 +64,20 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
     temperature ?? unknown,
     heatLoss ?? quantityOf(0),
     lowerHeatingValue ?? unknown,
+    written.frozenBelow ?? unknown,
+    written.coolingPressure ?? unknown,
+    written.exhaustTemperature,
+    written.sizes.dropletSize ?? unknown,
+    written.sizes.particleSize ?? unknown,
   ];
   const admits = admittance(written.allowed, written.barred);
   return {
     quantities: [...scalars, ...ofFuel, ...ofOxidant],
     roles: [...scalarRoles, ...streamRoles('fuel', fuel, held), ...streamRoles('oxidant', oxidant, held)],
     input(values) {
-      const [amountValue = NaN, zoneValue = NaN, pressurePa = NaN, temperatureK = NaN, lossShare = 0, heating = NaN] =
+      const [amountValue = NaN, zoneValue = NaN, pressurePa = NaN, temperatureK = NaN, lossShare = 0, ...others] =
         values;
+      const [heating = NaN, frozenBelowK = NaN, coolingPressurePa = NaN] = others;
       const fuelValues = values.slice(scalars.length, scalars.length + ofFuel.length);
       return {
         fuel: streamNumbers(fuel, fuelValues),
@@ -80,10 +91,22 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
         lowerHeatingValueJPerKg: Number.isNaN(heating) ? null : heating,
         cooledToK: written.cooledTo.map(({ value }) => value),
         ...(zone ? { zone: amountOf(zone.by, zoneValue) } : {}),
-        ...(written.frozenBelow ? { frozenBelowK: written.frozenBelow.value } : {}),
-        ...(written.coolingPressure ? { coolingPressurePa: written.coolingPressure.value } : {}),
+        ...(written.frozenBelow ? { frozenBelowK } : {}),
+        ...(written.coolingPressure ? { coolingPressurePa } : {}),
         ...(admits ? { admits } : {}),
         ...(written.ions ? { ions: true } : {}),
+      };
+    },
+    asked(values) {
+      const [exhaustK = NaN, dropletM = NaN, particleM = NaN] = values.slice(firstAsked, scalars.length);
+      const { dropletSize, particleSize, residenceTime } = written.sizes;
+      return {
+        exhaustK,
+        sizes: {
+          dropletSize: dropletSize && quantityOf(dropletM, dropletSize.dimension),
+          particleSize: particleSize && quantityOf(particleM, particleSize.dimension),
+          residenceTime,
+        },
       };
     },
   };
@@ -97,7 +120,16 @@ const scalarRoles: readonly QuantityRole[] = [
   { of: 'temperature' },
   { of: 'loss-share' },
   { of: 'heating-value' },
+  // What follows moves neither flame nor zone.
+  'none',
+  'none',
+  'none',
+  'none',
+  'none',
 ];
+
+/** Where in the scalars begins what is asked besides the states. */
+const firstAsked = 8;
 
 /** In the order of `quantitiesOf`. The temperature a gas comes in with counts by its enthalpy, and where a volume is held too. */
 function streamRoles(stream: 'fuel' | 'oxidant', { elements }: UncertainStream, { held }: HeldEntry): QuantityRole[] {

@@ -31,6 +31,7 @@ export function solvedBurn(
   { exhaustK, fuel, oxidant, sizes }: AskedOfBurn,
 ): SolvedBurn {
   let burnOuts: readonly PortionBurnOut[] | undefined;
+  let heatAboveJ: number | null | undefined;
   return {
     burn,
     flame,
@@ -43,8 +44,9 @@ export function solvedBurn(
       return heat && 'releasedJ' in heat ? heat : null;
     },
     heatAboveJ: () => {
+      if (heatAboveJ !== undefined) return heatAboveJ;
       const heat = burn.heatAbove(exhaustK);
-      return typeof heat === 'number' ? heat : null;
+      return (heatAboveJ = typeof heat === 'number' ? heat : null);
     },
     burnOuts: () => (burnOuts ??= burnOutsOf(fuel, sizes, burn, flame, oxidant)),
   };

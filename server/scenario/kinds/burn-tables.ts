@@ -136,7 +136,10 @@ function statesTable(burn: Burn): Table {
     { id: 'composition', label: 'Composition', unit: null },
   ];
   const row = (state: BurnStateOrNone, temperatureK: number): Row => {
-    if (state.kind === 'none') return [temperatureK, null, null, null, null, null, null, null, null, null];
+    if (state.kind === 'none') {
+      const why = state.reason === 'outside-tables' ? 'beyond all data' : 'not found';
+      return [temperatureK, null, null, null, null, null, null, null, null, why];
+    }
     const heatJ = heatGivenOff(burn.input, burn.charge, state);
     const deposit = depositOf(state);
     return [

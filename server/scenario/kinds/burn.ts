@@ -1,6 +1,6 @@
-// `burn`: a fuel burnt in an oxidant to chemical equilibrium, and its products as they cool. The flame is solved with the
-// definition, since what is to be said of it rests on it; all else (uncertainty, zone, cooled states, the path) when
-// somebody reads it. The states are core/burn's; this file joins entries to them.
+// `burn`: a fuel burnt in an oxidant to chemical equilibrium, and its products as they cool. What findings rest on is solved
+// with the definition: the flame and its zone, and where they are written the states at walls and, for sizes, the flame at
+// λ = 1; all else (uncertainty, cooled states, the path) when somebody reads it. The states are core/burn's; this file joins entries to them.
 // A path may be handed to a worker one day: what would be sent is the question's input, which is plain data but for
 // `admits`, and what comes back is read by burn-tables.ts alone.
 
@@ -18,6 +18,7 @@ import { figuresOfMaterial } from '../material-figures.ts';
 import type { Absent } from '../scenario.ts';
 import { burnEntries, defaultExhaustC } from './burn-entries.ts';
 import {
+  reportAskedTemperatures,
   reportBurnOut,
   reportFault,
   reportNone,
@@ -28,7 +29,7 @@ import {
 import { burnFigures, figuresOf } from './burn-figures.ts';
 import { burnOutTable } from './burn-out-times.ts';
 import { questionOf, type WrittenAmount, type WrittenBurn } from './burn-question.ts';
-import { solvedBurn, type AskedOfBurn } from './burn-solved.ts';
+import { solvedBurn, type AskedOfBurn, type SolvedBurn } from './burn-solved.ts';
 import { burnTables } from './burn-tables.ts';
 import { burnWorking, workingPlaces } from './burn-working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
@@ -70,14 +71,11 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     exhaustK: written.exhaustTemperature.value,
     fuel: read.fuel.value,
     oxidant: read.oxidant.value,
-    sizes: {
-      dropletSize: read.dropletSize?.value.quantity ?? null,
-      particleSize: read.particleSize?.value.quantity ?? null,
-      residenceTime: read.residenceTime?.value.quantity ?? null,
-    },
+    sizes: written.sizes,
   };
   const solved = solvedBurn(burning, flame, asked);
-  reportStates(burning, flame, written, names, places, context);
+  reportStates(burning, flame, written, read.oxidant.value, names, places, context);
+  reportAskedTemperatures(burning, flame, written, read.wallTemperature?.value ?? null, places, context);
   if (read.wallTemperature) {
     const { value, entry } = read.wallTemperature;
     reportStickyWalls(burning, value, entry.span, context);
@@ -93,7 +91,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
         ...burnTables(burning, flame),
         ...(hasSize ? [burnOutTable(solved.burnOuts, asked.sizes.residenceTime)] : []),
       ],
-      absent: () => absentOf(written, names.fuel),
+      absent: () => absentOf(written, solved, names.fuel),
     },
   );
 }
@@ -162,6 +160,11 @@ function writtenBurn(
     coolingPressure: read.coolingPressure?.value.quantity ?? null,
     frozenBelow: read.frozenBelow?.value.quantity ?? null,
     exhaustTemperature: read.exhaustTemperature?.value.quantity ?? kelvin(defaultExhaustC + celsiusZeroK),
+    sizes: {
+      dropletSize: read.dropletSize?.value.quantity ?? null,
+      particleSize: read.particleSize?.value.quantity ?? null,
+      residenceTime: read.residenceTime?.value.quantity ?? null,
+    },
     allowed: read.allowedProducts?.value ?? null,
     barred: read.barredProducts?.value ?? [],
     ions: read.ions?.value ?? false,
@@ -180,21 +183,38 @@ function placesOf(read: Read, header: Span): BurnPlaces {
     heatLoss: read.heatLoss?.entry.span ?? header,
     size: read.dropletSize?.entry.span ?? read.particleSize?.entry.span ?? header,
     residence: read.residenceTime?.entry.span ?? header,
+    cooled: read.cooledTo?.entry.span ?? header,
+    exhaust: read.exhaustTemperature?.entry.span ?? null,
+    walls: read.wallTemperature?.entry.span ?? header,
     products: read.allowedProducts?.entry.span ?? read.barredProducts?.entry.span ?? null,
   };
 }
 
-/** Figures that rest on energies, where a temperature is given and an energy is not known. */
-function absentOf({ fuel, oxidant, lowerHeatingValue }: WrittenBurn, fuelName: string): Absent {
+/** Figures that rest on energies, where a temperature is given and an energy is not known; and on states there are none of. */
+function absentOf(
+  { fuel, oxidant, zone, lowerHeatingValue }: WrittenBurn,
+  solved: SolvedBurn,
+  fuelName: string,
+): Absent {
   const absent = new Map<string, readonly string[]>();
   const missing = [...(fuel.enthalpy ? [] : fuel.missing), ...(oxidant.enthalpy ? [] : oxidant.missing)];
   if (missing.length > 0) {
     for (const id of ['heat-released', 'preheat', 'released-share', 'heat-above-exhaust']) absent.set(id, missing);
+    if (zone) for (const id of zoneFigures) absent.set(id, missing);
   } else if (!lowerHeatingValue) {
     absent.set('released-share', [`the lower heating value of ${fuelName}`]);
   }
+  if (missing.length > 0) return absent;
+  if (solved.heatAboveJ() === null)
+    absent.set('heat-above-exhaust', ['a state of the products at the exhaust temperature']);
+  if (solved.slate() === null) {
+    for (const id of ['heat-released', 'preheat', 'released-share'])
+      absent.set(id, ['a state of the products at 25 °C']);
+  }
   return absent;
 }
+
+const zoneFigures = ['flame-zone-temperature', 'flame-zone-nitric-oxide-share', 'flame-zone-carbon-monoxide-share'];
 
 function kelvin(valueK: number): Quantity {
   return quantityOf(valueK, knownUnit('K').dimension, undefined, 'temperature');

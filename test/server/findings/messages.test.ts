@@ -383,6 +383,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       hydrogenShare: 0.0863,
       sootShare: 0,
       carbonPerOxygen: 0.33,
+      sootingFrom: 0.5,
     },
     'The charge is rich (λ 0.67): at equilibrium its dry gas holds 10.23 % CO and 8.63 % H2.',
   ],
@@ -395,6 +396,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       hydrogenShare: 0.1,
       sootShare: 0,
       carbonPerOxygen: 0.68,
+      sootingFrom: 0.5,
     },
     'The flame zone is rich (λ 0.5): at equilibrium its dry gas holds 20 % CO and 10 % H2. With 0.68 atoms of carbon per atom of oxygen a flame soots, though equilibrium has no soot.',
   ],
@@ -407,6 +409,7 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       hydrogenShare: 0.2,
       sootShare: 0.3,
       carbonPerOxygen: 1.7,
+      sootingFrom: 0.5,
     },
     'The charge is rich (λ 0.2): at equilibrium its dry gas holds 20 % CO and 20 % H2. 30 % of the carbon is soot even at equilibrium.',
   ],
@@ -477,6 +480,25 @@ const ROWS: readonly (readonly [Fact, string])[] = [
       portions: [{ name: 'gas_oil', verdict: 'open', timeS: 0.015 }],
     },
     '`gas_oil` takes about 15 ms to burn out, within a factor of two, and has 20 ms: it may not be burnt. All figures here count it as burnt.',
+  ],
+  [
+    {
+      code: 'range/temperature',
+      why: 'outside-tables',
+      what: 'wall',
+      temperature: quantity(-100, 'degC', 0, 'temperature'),
+      range: [quantity(200, 'K', 0, 'temperature'), quantity(6000, 'K', 0, 'temperature')],
+    },
+    'What meets the wall cannot be worked out at −100 °C: the data of all products lie between −73.15 °C and 5727 °C.',
+  ],
+  [
+    {
+      code: 'range/temperature',
+      why: 'hotter-than-flame',
+      temperature: quantity(3000, 'degC', 0, 'temperature'),
+      flame: quantity(2100, 'degC', 0, 'temperature'),
+    },
+    'The exhaust would be at 3000 °C, hotter than the flame at 2100 °C: heat above it would have to be brought in. Is the temperature or its unit mistyped?',
   ],
   [
     {
@@ -635,6 +657,8 @@ describe('every code', () => {
       'warning range/sticky',
       'warning range/sticky',
       'warning range/sticky',
+      'warning range/temperature',
+      'warning range/temperature',
       'warning range/temperature',
     ]);
   });
