@@ -32,6 +32,11 @@ const pages = [
     modules: ['server/report/codes-page.ts', 'test/support/code-entries.ts'],
     write: ({ codesPage, codeEntries }) => codesPage(codeEntries(root), 'npm run pages'),
   },
+  {
+    file: 'hazards.md',
+    modules: ['server/report/hazards-page.ts'],
+    write: ({ hazardsPage }) => hazardsPage('npm run pages'),
+  },
 ];
 
 for (const { file, modules, write } of pages) {

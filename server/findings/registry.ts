@@ -18,6 +18,7 @@ import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
+import { hazardRules } from './hazard.ts';
 import { kindSuspended } from './kind-suspended.ts';
 import { kindNotEvaluated } from './kind-not-evaluated.ts';
 import { nameAcknowledged } from './name-acknowledged.ts';
@@ -140,6 +141,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/sticky': rangeSticky,
   'range/cold-charge': rangeColdCharge,
   'range/real-gas': rangeRealGas,
+  ...hazardRules,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,
   'kind/not-evaluated': kindNotEvaluated,
@@ -157,6 +159,6 @@ function findingOf({ fact, place }: PlacedFact, file: EvaluatedFile): Finding {
     place,
     related: rule.related?.(fact, site) ?? [],
     fixes: rule.fixes?.(fact, site) ?? [],
-    acknowledged: false,
+    acknowledged: 'acknowledged' in fact && fact.acknowledged === true,
   };
 }

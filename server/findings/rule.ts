@@ -4,13 +4,16 @@
 
 import { nameAsWritten } from '../wording/words.ts';
 import type { Fact, SyntaxFact } from '../scenario/facts.ts';
+import type { HazardCode, HazardFact } from '../scenario/hazard-fact.ts';
 import type { EvaluatedFile, Place } from '../scenario/scenario.ts';
 import type { Finding, Fix, Severity } from './finding.ts';
 
 /** The fact with this code. All five problems of form share one shape. */
 export type FactOf<Code extends Fact['code']> = Code extends SyntaxFact['code']
   ? SyntaxFact
-  : Extract<Fact, { readonly code: Code }>;
+  : Code extends HazardCode
+    ? HazardFact
+    : Extract<Fact, { readonly code: Code }>;
 
 export interface Rule<F extends Fact> {
   /** One for all, or by what the fact says. */

@@ -8,6 +8,7 @@ import type { Definition, ExpectStatement, LetStatement, PlacedSection, Section,
 import { evaluateClaim } from './claims.ts';
 import { Context, near, type Named, type Scope } from './context.ts';
 import { evaluateExpression } from './expressions.ts';
+import { isHazardCode } from './hazard-fact.ts';
 import type { KindAnswer } from './kinds/kind.ts';
 import { kindOf, kinds } from './kinds/registry.ts';
 import { lazily } from './lazily.ts';
@@ -133,6 +134,8 @@ function checkAcknowledgements(statement: Definition, context: Context): void {
     const acknowledged = line.code.text;
     if (!acknowledged.startsWith('hazard/')) {
       context.report(line.code.span, { code: 'name/acknowledged', why: 'not-a-hazard', acknowledged });
+    } else if (!isHazardCode(acknowledged)) {
+      context.report(line.code.span, { code: 'name/acknowledged', why: 'unknown-code', acknowledged });
     } else if (line.reason && line.reason.value.trim() === '') {
       context.report(line.reason.span, { code: 'name/acknowledged', why: 'no-reason', acknowledged });
     }

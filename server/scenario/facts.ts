@@ -10,11 +10,13 @@ import type { NoEquilibrium } from '../core/equilibrium/equilibrium.ts';
 import type { SaltMeltingValidity } from '../core/equilibrium/melts.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
+import type { HazardFact } from './hazard-fact.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
 
 export type Fact =
   | SyntaxFact
+  | HazardFact
   /** A word stands for nothing. `what` says what was looked for. */
   | {
       readonly code: 'name/unknown';
@@ -297,7 +299,18 @@ export type Fact =
   | { readonly code: 'kind/suspended'; readonly problems: number; readonly hidden: number }
   | { readonly code: 'kind/not-evaluated'; readonly kind: string; readonly name: string }
   /** An `acknowledge` line that cannot count: only hazards can be acknowledged, by a known code, with a reason. */
-  | { readonly code: 'name/acknowledged'; readonly why: 'not-a-hazard' | 'no-reason'; readonly acknowledged: string }
+  | {
+      readonly code: 'name/acknowledged';
+      readonly why: 'not-a-hazard' | 'no-reason' | 'unknown-code';
+      readonly acknowledged: string;
+    }
+  /** Of a hazard that is not, or no longer, there; `line` is the whole line. */
+  | {
+      readonly code: 'name/acknowledged';
+      readonly why: 'not-there';
+      readonly acknowledged: string;
+      readonly line: Place;
+    }
   | { readonly code: 'program/failed'; readonly message: string };
 
 /** Why a charge cannot be burnt as it is written. */

@@ -118,6 +118,31 @@ export function wordReader<const Listed extends string>(words: readonly Listed[]
   };
 }
 
+/** Listed words with commas between them, each once. */
+export function wordsReader<const Listed extends string>(words: readonly Listed[]): Reader<readonly Listed[]> {
+  const takes = `any of ${words.map((word) => `\`${word}\``).join(', ')}, with commas between them`;
+  return {
+    takes,
+    words,
+    read(entry, context) {
+      const read = new Set<Listed>();
+      for (const phrase of entry.phrases) {
+        const [item, ...rest] = phrase.items;
+        const extra = rest[0];
+        if (extra) return refuseItem(entry, extra, takes, context);
+        if (item?.kind !== 'word') return refuse(entry, phrase, takes, context);
+        const found = words.find((word) => word === item.text);
+        if (found === undefined) {
+          reportListedWord(item, entry.words, words, context);
+          return undefined;
+        }
+        read.add(found);
+      }
+      return [...read];
+    },
+  };
+}
+
 /** `"text"` */
 export function textReader(what: string): Reader<string> {
   return {

@@ -5,12 +5,16 @@ import path from 'node:path';
 import { allCodes, findingsOf } from '../../server/findings/registry.ts';
 import { openingComment, type CodeEntry } from '../../server/report/codes-page.ts';
 import { evaluate } from '../../server/scenario/evaluate.ts';
+import { hazardCodes, isHazardCode } from '../../server/scenario/hazard-fact.ts';
 
 export function codeEntries(root: string): readonly CodeEntry[] {
   return allCodes().map((code) => {
     const file = code.replace('/', '-');
-    const source = path.join(root, 'server/findings', `${code.startsWith('syntax/') ? 'syntax' : file}.ts`);
-    const meaning = openingComment(readFileSync(source, 'utf8'));
+    const [area = ''] = code.split('/');
+    // One file speaks for all problems of form, and one for all hazards.
+    const source = path.join(root, 'server/findings', `${['syntax', 'hazard'].includes(area) ? area : file}.ts`);
+    const general = openingComment(readFileSync(source, 'utf8'));
+    const meaning = isHazardCode(code) ? `${hazardCodes[code].says}\n\n${general}` : general;
     return { code, meaning, example: exampleOf(code, path.join(root, 'examples/errors', `${file}.stoke`)) };
   });
 }

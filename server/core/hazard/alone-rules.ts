@@ -5,7 +5,7 @@
 
 import { gasMixtureOf } from './gas-mixtures.ts';
 import type { HazardSeverity } from './hazard-codes.ts';
-import { waterStoichiometry } from './reactions.ts';
+import { molPerKg, waterStoichiometry } from './reactions.ts';
 import { ruleSources } from './rule.ts';
 import type { HazardRule, Hit } from './rule.ts';
 import { isGas, isIn, isPowder, shareOver, soleElement } from './store.ts';
@@ -118,8 +118,8 @@ export const aloneRules: readonly HazardRule[] = [
         },
         (portion) => {
           const stoichiometry = waterStoichiometry(portion);
-          if (stoichiometry === undefined || portion.molarMassKgPerMol === null) return {};
-          const mol = portion.massShare / portion.molarMassKgPerMol;
+          const mol = molPerKg(portion);
+          if (stoichiometry === undefined || mol === null) return {};
           const { gasMol, heatJ } = stoichiometry;
           return {
             gasMolPerKg: Object.fromEntries(Object.entries(gasMol).map(([gas, each]) => [gas, each * mol])),

@@ -5,12 +5,14 @@
 
 import { aloneRules } from './alone-rules.ts';
 import { contactRules } from './contact-rules.ts';
-import { findPair } from './found-pairs.ts';
+import { findPair, needsJudging } from './found-pairs.ts';
+import { pairEquilibrium } from './pair-equilibrium.ts';
+import type { PairEquilibrium } from './pair-equilibrium.ts';
 import type { HazardCode, HazardSeverity } from './hazard-codes.ts';
 import { meetingRules } from './meeting-rules.ts';
 import type { HazardNumbers, HazardRule, Hit } from './rule.ts';
 import { storageRules } from './storage-rules.ts';
-import type { Store } from './store.ts';
+import type { Store, StoredPortion } from './store.ts';
 
 /** A hazard at its place, with the rule that found it. */
 export interface Hazard extends Hit {
@@ -40,42 +42,102 @@ export const allRules: readonly RuleWords[] = [
   foundPairWords,
 ].map(({ id, code, happens, mend, source }) => ({ id, code, happens, mend, source }));
 
-/** Worst first, then by code and portion. */
-export function hazardsOf(store: Store): readonly Hazard[] {
+/** Two portions whose reaction their state of lowest energy must decide, and what it says: that takes long. */
+export interface PairQuestion {
+  readonly giver: StoredPortion;
+  readonly taker: StoredPortion;
+}
+export interface JudgedPair extends PairQuestion {
+  /** Null where data are missing. */
+  readonly equilibrium: PairEquilibrium | null;
+}
+
+/** The pairs of a store that no rule names and no family decides alone. */
+export function pairsToJudge(store: Store): readonly PairQuestion[] {
+  const questions: PairQuestion[] = [];
+  walkMeetings(store, (giver, taker) => {
+    if (needsJudging(giver, taker, store)) questions.push({ giver, taker });
+    return null;
+  });
+  return questions;
+}
+
+/** Long work: the answers in the order of the questions. */
+export function judgePairs(
+  questions: readonly PairQuestion[],
+  shouldStop: () => boolean = () => false,
+): readonly JudgedPair[] | null {
+  const judged: JudgedPair[] = [];
+  for (const { giver, taker } of questions) {
+    if (shouldStop()) return null;
+    judged.push({ giver, taker, equilibrium: pairEquilibrium(giver, taker) ?? null });
+  }
+  return judged;
+}
+
+/**
+ * Worst first. `judged` holds the answers for `pairsToJudge`; a pair without one is not told. Without the argument they
+ * are worked out here.
+ */
+export function hazardsOf(
+  store: Store,
+  judged: readonly JudgedPair[] = judgePairs(pairsToJudge(store)) ?? [],
+): readonly Hazard[] {
   const found: Hazard[] = [];
   for (const rule of [...aloneRules, ...storageRules, ...contactRules]) {
     for (const hit of rule.find(store)) found.push({ ...hit, ...wordsOf(rule) });
   }
-  found.push(...meetings(store));
+  found.push(...meetings(store, judged));
   return onePerCause(found);
 }
 
-function meetings(store: Store): readonly Hazard[] {
+function meetings(store: Store, judged: readonly JudgedPair[]): readonly Hazard[] {
+  return walkMeetings(store, (giver, taker, order) => {
+    const answer = judged.find((one) => one.giver.name === giver.name && one.taker.name === taker.name);
+    const pair = findPair(giver, taker, store, answer?.equilibrium);
+    if (pair === null) return null;
+    const share = giver.massShare + taker.massShare;
+    const heat = pair.equilibrium === null ? {} : { heatJPerKg: pair.equilibrium.heatJPerKg * share };
+    return hazardOf(foundPairWords, pair.severity, order, heat);
+  });
+}
+
+type Order = readonly [first: number, second: number];
+
+/** What the written rules say of each pair; for one they do not name, what `byChemistry` says, in either order. */
+function walkMeetings(
+  store: Store,
+  byChemistry: (giver: StoredPortion, taker: StoredPortion, order: Order) => Hazard | null,
+): readonly Hazard[] {
   const found: Hazard[] = [];
   if (store.kind === 'oxidant') return found;
   for (const [i, a] of store.portions.entries()) {
     for (const [j, b] of store.portions.entries()) {
       if (j <= i) continue;
-      let isNamed = false;
-      for (const rule of meetingRules) {
-        // The one the finding stands at may come first or second in the text.
-        const order =
-          rule.first(a, store) && rule.second(b, store, a)
-            ? ([i, j] as const)
-            : rule.first(b, store) && rule.second(a, store, b)
-              ? ([j, i] as const)
-              : null;
-        if (order === null) continue;
-        const [first, second] = order[0] === i ? [a, b] : [b, a];
-        const numbers = rule.numbers(store, first, second);
-        const severity = rule.severity(numbers, store, first, second);
-        if (severity === null) continue;
-        found.push(hazardOf(rule, severity, order, numbers));
-        isNamed = true;
-        if (!alsoNames.has(rule.id)) break;
-      }
-      if (!isNamed) found.push(...byChemistry(store, i, j));
+      const named = namedMeetings(store, [i, a], [j, b]);
+      const hazard = named.length > 0 ? null : (byChemistry(a, b, [i, j]) ?? byChemistry(b, a, [j, i]));
+      found.push(...named, ...(hazard ? [hazard] : []));
     }
+  }
+  return found;
+}
+
+function namedMeetings(
+  store: Store,
+  [i, a]: readonly [number, StoredPortion],
+  [j, b]: readonly [number, StoredPortion],
+): readonly Hazard[] {
+  const found: Hazard[] = [];
+  for (const rule of meetingRules) {
+    // The one the finding stands at may come first or second in the text.
+    const isForward = rule.first(a, store) && rule.second(b, store, a);
+    if (!isForward && !(rule.first(b, store) && rule.second(a, store, b))) continue;
+    const [first, second, order] = isForward ? ([a, b, [i, j]] as const) : ([b, a, [j, i]] as const);
+    const numbers = rule.numbers(store, first, second);
+    const severity = rule.severity(numbers, store, first, second);
+    if (severity === null) continue;
+    found.push(hazardOf(rule, severity, order, numbers));
+    if (!alsoNames.has(rule.id)) break;
   }
   return found;
 }
@@ -83,27 +145,7 @@ function meetings(store: Store): readonly Hazard[] {
 /** An emulsifier is ester and alcohol at once: these rules leave a pair open to the next. */
 const alsoNames: ReadonlySet<string> = new Set(['metal-with-alcohol']);
 
-function byChemistry(store: Store, i: number, j: number): readonly Hazard[] {
-  for (const [giver, taker] of [
-    [i, j],
-    [j, i],
-  ] as const) {
-    const [a, b] = [store.portions[giver], store.portions[taker]];
-    const pair = a && b ? findPair(a, b, store) : null;
-    if (!a || !b || pair === null) continue;
-    const share = a.massShare + b.massShare;
-    const heat = pair.equilibrium === null ? {} : { heatJPerKg: pair.equilibrium.heatJPerKg * share };
-    return [hazardOf(foundPairWords, pair.severity, [giver, taker], heat)];
-  }
-  return [];
-}
-
-function hazardOf(
-  rule: RuleWords,
-  severity: HazardSeverity,
-  [first, second]: readonly [number, number],
-  numbers: HazardNumbers,
-): Hazard {
+function hazardOf(rule: RuleWords, severity: HazardSeverity, [first, second]: Order, numbers: HazardNumbers): Hazard {
   return { ...wordsOf(rule), severity, portion: first, partner: { kind: 'portion', index: second }, numbers };
 }
 

@@ -4,7 +4,6 @@
 // to react, fast ones when cold, the others once lit; and a passivated metal counts as powder or melt only.
 // Invariant: what is more stable together by less than a kindling's worth of heat is never told.
 
-import { pairEquilibrium } from './pair-equilibrium.ts';
 import type { PairEquilibrium } from './pair-equilibrium.ts';
 import type { HazardSeverity } from './hazard-codes.ts';
 import { isIn, isMolten, isPowder, soleElement } from './store.ts';
@@ -20,14 +19,33 @@ export interface FoundPair {
 /** Heat per kg of the pair below which a reaction does not keep itself going: it warms solids by some 500 K. */
 const leastHeatJPerKg = 5e5;
 
-/** The pair as it is found, the first giving and the second taking; null where nothing is known to happen. */
-export function findPair(giver: StoredPortion, taker: StoredPortion, store: Store): FoundPair | null {
-  const kind = kinds.find((one) => one.gives(giver, store) && one.takes(taker));
+/**
+ * The pair as it is found, the first giving and the second taking; null where nothing is known to happen. `equilibrium` is
+ * the two together: null where data are missing (the families alone then speak), undefined where it is not there yet.
+ */
+export function findPair(
+  giver: StoredPortion,
+  taker: StoredPortion,
+  store: Store,
+  equilibrium: PairEquilibrium | null | undefined,
+): FoundPair | null {
+  const kind = kindOf(giver, taker, store);
   if (kind === undefined) return null;
-  if (kind.needsNoNumbers) return { severity: kind.severity, equilibrium: pairEquilibrium(giver, taker) ?? null };
-  const equilibrium = pairEquilibrium(giver, taker);
-  if (equilibrium === undefined) return { severity: kind.severity, equilibrium: null };
-  return equilibrium.heatJPerKg >= leastHeatJPerKg ? { severity: kind.severity, equilibrium } : null;
+  const { severity, needsNoNumbers = false } = kind;
+  if (needsNoNumbers) return { severity, equilibrium: null };
+  if (equilibrium === undefined) return null;
+  if (equilibrium === null || equilibrium.heatJPerKg >= leastHeatJPerKg) return { severity, equilibrium };
+  return null;
+}
+
+/** True where the state of lowest energy decides. */
+export function needsJudging(giver: StoredPortion, taker: StoredPortion, store: Store): boolean {
+  const kind = kindOf(giver, taker, store);
+  return kind !== undefined && kind.needsNoNumbers !== true;
+}
+
+function kindOf(giver: StoredPortion, taker: StoredPortion, store: Store): PairKind | undefined {
+  return kinds.find((one) => one.gives(giver, store) && one.takes(taker));
 }
 
 interface PairKind {

@@ -98,3 +98,7 @@ export const hazardCodes = {
 } as const satisfies Readonly<Record<string, HazardCodeRecord>>;
 
 export type HazardCode = keyof typeof hazardCodes;
+
+export function isHazardCode(text: string): text is HazardCode {
+  return Object.hasOwn(hazardCodes, text);
+}

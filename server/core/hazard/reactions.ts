@@ -34,8 +34,8 @@ const thorntonJPerMol = 420e3;
 
 /** `left` with water to hydroxides and the gases named; undefined where it has no formula or no single balance. */
 export function waterStoichiometry(portion: StoredPortion): WaterStoichiometry | undefined {
-  const { formula } = portion;
-  if (formula === null) return undefined;
+  const formula = formulaOf(portion);
+  if (formula === undefined) return undefined;
   const known = ofFormula.get(formula.text);
   if (known !== undefined) return known;
   const gases = new Set(portion.hazards.withWater.flatMap((reaction) => reaction.gases));
@@ -45,6 +45,15 @@ export function waterStoichiometry(portion: StoredPortion): WaterStoichiometry |
 }
 
 const ofFormula = new Map<string, WaterStoichiometry>();
+
+/** Its own, or the element of a technical metal that is all but pure. */
+function formulaOf({ formula, hazards, molPerKg: elements }: StoredPortion): Formula | undefined {
+  if (formula !== null) return formula;
+  const [most] = [...elements].sort((a, b) => b[1] - a[1]);
+  if (most === undefined || !hazards.families.includes('alkali-metal')) return undefined;
+  const element = parseFormula(most[0], 'cr');
+  return element.kind === 'formula' ? element : undefined;
+}
 
 function balanced(formula: Formula, gases: readonly string[]): WaterStoichiometry | undefined {
   const products = [...solidProducts(formula), ...gases.map((gas) => `${gas}(g)`)].map((text) => parseFormula(text));
@@ -139,8 +148,12 @@ export function waterMolPerKg(portion: StoredPortion): number {
   return (portion.massShare * (portion.molPerKg.get('H') ?? 0)) / 2;
 }
 
-function molPerKg(portion: StoredPortion): number | null {
-  return portion.molarMassKgPerMol === null ? null : portion.massShare / portion.molarMassKgPerMol;
+/** mol of formula per kg of the blend; of a technical metal the mol of its atoms. */
+export function molPerKg(portion: StoredPortion): number | null {
+  const { molarMassKgPerMol, massShare, formula, molPerKg: elements } = portion;
+  if (molarMassKgPerMol !== null) return massShare / molarMassKgPerMol;
+  if (formula !== null || !isIn(portion, 'alkali-metal')) return null;
+  return massShare * [...elements.values()].reduce((sum, mol) => sum + mol, 0);
 }
 
 function numbersOf(

@@ -55,13 +55,18 @@ export interface HazardRule {
 /** m³ of gas per mol at 25 °C and 1 bar, the state in which amounts of gas are told. */
 export const molarVolumeM3PerMol = 0.02478957;
 
-/** Sources the rules rest on, in the form they are shown. */
+/** Sources the rules rest on, short as they are shown; all but common practice are recalled from memory. */
 export const ruleSources = {
-  bretherick: 'Urben (ed.), Bretherick’s Handbook of Reactive Chemical Hazards, 8th ed. (2017), from memory',
-  nfpa484: 'NFPA 484, Standard for Combustible Metals, from memory',
-  solas: 'SOLAS chapter II-2, regulation 4.2, from memory',
-  igc: 'IGC Code (MSC.370(93)), chapters 6, 9 and 17, from memory',
-  ghs: 'UN GHS, 9th revised edition (2021), from memory',
+  /** Urben (ed.), Bretherick’s Handbook of Reactive Chemical Hazards, 8th ed. (2017). */
+  bretherick: 'Urben 2017, Bretherick’s Handbook',
+  /** Standard for Combustible Metals. */
+  nfpa484: 'NFPA 484',
+  solas: 'SOLAS II-2/4.2',
+  /** MSC.370(93), chapters 6, 9 and 17. */
+  igc: 'IGC Code',
+  /** 9th revised edition (2021). */
+  ghs: 'UN GHS',
   practice: 'common practice',
-  crowl: 'Crowl and Louvar, Chemical Process Safety, 3rd ed. (2011), chapter 6, from memory',
+  /** Chemical Process Safety, 3rd ed., chapter 6. */
+  crowl: 'Crowl and Louvar 2011',
 } as const;

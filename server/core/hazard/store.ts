@@ -5,7 +5,7 @@
 
 import { formationEnthalpyOf } from '../balance/formation-enthalpy.ts';
 import type { Formula } from '../substance/formula.ts';
-import { nothingRecorded } from '../substance/hazards.ts';
+import { hazardsOrProven } from './proven-hazards.ts';
 import type { ExtinguishingAgent, Hazards, ReactiveFamily } from '../substance/hazards.ts';
 import type { Substance } from '../substance/substance.ts';
 
@@ -100,7 +100,7 @@ export function portionOf(
     massShare,
     phase: phaseAt(usualPhase, points, temperatureK, pressurePa),
     usualPhase,
-    hazards: substance.hazards ?? nothingRecorded,
+    hazards: hazardsOrProven(substance.hazards ?? null, substance.molPerKg),
     formula: substance.formula ?? null,
     molPerKg: substance.molPerKg,
     molarMassKgPerMol: substance.molarMassKgPerMol ?? null,

@@ -4,7 +4,7 @@
 // the portions and never negative; a portion whose reaction is not known is named, not left out in silence.
 
 import { dissolves, waterReactionOf } from './alone-rules.ts';
-import { waterStoichiometry } from './reactions.ts';
+import { molPerKg, waterStoichiometry } from './reactions.ts';
 import { molarVolumeM3PerMol } from './rule.ts';
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import type { Store } from './store.ts';
@@ -42,11 +42,11 @@ export function waterContactOf(store: Store): WaterContact | null {
     if (dissolves(portion) || waterReactionOf(portion, store) === null) continue;
     reacts = true;
     const stoichiometry = waterStoichiometry(portion);
-    if (stoichiometry === undefined || portion.molarMassKgPerMol === null) {
+    const mol = molPerKg(portion);
+    if (stoichiometry === undefined || mol === null) {
       withoutReaction.push(portion.name);
       continue;
     }
-    const mol = portion.massShare / portion.molarMassKgPerMol;
     waterMol += mol * stoichiometry.waterMol;
     if (stoichiometry.dissolvedHeatJ === null) withoutHeat.push(portion.name);
     else heatJPerKg += Math.max(0, mol * stoichiometry.dissolvedHeatJ);

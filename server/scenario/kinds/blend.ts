@@ -7,16 +7,20 @@ import type { EnergyFault } from '../../core/balance/formation-enthalpy.ts';
 import type { GivenProductsFault } from '../../core/balance/given-products.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf } from '../../core/quantity/quantity.ts';
+import { contactMaterials } from '../../core/hazard/store.ts';
+import { extinguishingAgents } from '../../core/substance/hazards.ts';
 import { alkaliMetals } from '../../core/substance/elements.ts';
 import { referenceTemperatureK } from '../../core/substance/substance.ts';
+import { reportHazards } from '../blend-hazards.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import type { Material, MissingProperty, PortionShare } from '../material.ts';
 import { answerMaterial, materialFigures, type FigureRow, type MaterialAnswer } from '../material-figures.ts';
 import { mixOrReport, readParts, type Mixed, type Part } from '../mixing.ts';
 import type { PortionState } from '../portion-state.ts';
-import { formulasReader, materialReader, stateReader, type State } from '../readers.ts';
+import { formulasReader, materialReader, stateReader, wordsReader, type State } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
+import type { Keeping } from '../stored-blend.ts';
 import { portionStates, solidsVolumeShare, type StoredAt } from '../storage.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
@@ -33,6 +37,16 @@ const entries = {
     reader: materialReader,
     help: 'The gas over it in its tank.',
     default: { text: 'air', source: 'the cautious case' },
+  },
+  contact: {
+    name: 'contact',
+    reader: wordsReader(contactMaterials),
+    help: 'What its tank, pipes and seals are of, so that what must not meet it is told.',
+  },
+  extinguishing: {
+    name: 'extinguishing',
+    reader: wordsReader(extinguishingAgents),
+    help: 'What is kept ready to put its fire out.',
   },
   products: {
     name: 'products',
@@ -80,6 +94,23 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const stored = storedAt(read.stored?.value);
   const states = portionStates(mixed.shares, stored);
   reportChangedPhases(definition, parts, states, context);
+  const keeping: Keeping = {
+    kind: 'tank',
+    temperatureK: stored.temperature.value,
+    pressurePa: stored.pressure.value,
+    blanket: broken.has('blanket') ? undefined : (read.blanket?.value ?? null),
+    contact: read.contact?.value ?? [],
+    extinguishing: read.extinguishing?.value ?? [],
+  };
+  if (!broken.has('stored')) {
+    const written = {
+      stored: read.stored?.entry,
+      blanket: read.blanket?.entry,
+      contact: read.contact?.entry,
+      extinguishing: read.extinguishing?.entry,
+    };
+    reportHazards(definition, parts, mixed.shares, keeping, written, context);
+  }
   return {
     figures: [...answer.figures, ...solidsFigure(mixed, states, stored, material)],
     tables: [portionsTable(mixed.shares, energy), ...answer.tables],

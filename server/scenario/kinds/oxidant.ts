@@ -15,13 +15,16 @@ import { noParts } from '../../core/quantity/parts.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
 import { molarMassKgPerMol, parseFormula } from '../../core/substance/formula.ts';
+import { reportHazards } from '../blend-hazards.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
 import type { FigureRow } from '../material-figures.ts';
 import { mixOrReport, readParts, type Part } from '../mixing.ts';
+import type { PortionShare } from '../material.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 import { quantityReader, stateReader } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
+import type { Keeping } from '../stored-blend.ts';
 import type { Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
@@ -83,7 +86,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     context.report(header, { code: 'balance/no-data', what: `the composition of ${name}`, missing });
     return unknownAnswer(evaluated);
   }
-  return answerGas(gas, read, parts, mixed.shares, context);
+  return answerGas(gas, read, parts, mixed.shares, definition, context);
 }
 
 /** The portions as a gas before humidity: mole shares and molar masses of its species. */
@@ -118,7 +121,8 @@ function answerGas(
   gas: DryGas,
   read: EntriesRead<typeof entries>,
   parts: readonly Part[],
-  shares: readonly { readonly mass: Quantity; readonly mole: Quantity | null; readonly volume: Quantity | null }[],
+  shares: readonly PortionShare[],
+  definition: Definition,
   context: Context,
 ): KindAnswer {
   const state = read.state?.value;
@@ -164,6 +168,15 @@ function answerGas(
     sources: working.sources,
     assumptions: working.assumptions,
   };
+  const keeping: Keeping = {
+    kind: 'oxidant',
+    temperatureK: temperature.value,
+    pressurePa: pressure.value,
+    blanket: null,
+    contact: [],
+    extinguishing: [],
+  };
+  reportHazards(definition, parts, shares, keeping, { stored: undefined }, context);
   return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null, stream };
 }
 

@@ -3,6 +3,7 @@ import { readFileSync } from 'node:fs';
 import { expect, test } from 'vitest';
 import { allCodes } from '../../../server/findings/registry.ts';
 import { codesPage, openingComment } from '../../../server/report/codes-page.ts';
+import { hazardsPage } from '../../../server/report/hazards-page.ts';
 import { languagePage } from '../../../server/report/language-page.ts';
 import { kinds } from '../../../server/scenario/kinds/registry.ts';
 import { codeEntries } from '../../support/code-entries.ts';
@@ -13,6 +14,10 @@ test('the language page is not stale (npm run pages writes it)', () => {
 
 test('the page of codes is not stale (npm run pages writes it)', () => {
   expect(readFileSync('examples/reference/codes.md', 'utf8')).toBe(codesPage(codeEntries('.'), 'npm run pages'));
+});
+
+test('the page of hazards is not stale (npm run pages writes it)', () => {
+  expect(readFileSync('examples/reference/hazards.md', 'utf8')).toBe(hazardsPage('npm run pages'));
 });
 
 test("every code says what it means, and all but the program's own fault and huge files have an example", () => {

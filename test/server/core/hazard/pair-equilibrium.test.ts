@@ -46,7 +46,7 @@ describe('heat', () => {
     const store = storeOf({ percent: { sodium: 33, gas_oil: 67 } });
     const [sodium, oil] = store.portions;
     if (!sodium || !oil) throw new Error();
-    expect(findPair(sodium, oil, store)).toBeNull();
+    expect(findPair(sodium, oil, store, pairEquilibrium(sodium, oil))).toBeNull();
   });
 
   test('never more free energy together than apart', () => {

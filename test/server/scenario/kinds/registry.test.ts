@@ -30,6 +30,9 @@ describe('kinds not evaluated yet', () => {
         acknowledge hazard/water-reactive: ""
         #                                  ^^ name/acknowledged
         acknowledge hazard/flammable: "design note 3"
+        #           ^^^^^^^^^^^^^^^^ name/acknowledged
+        acknowledge hazard/toxic: "design note 4"
+        #           ^^^^^^^^^^^^ name/acknowledged
       }
     `);
   });

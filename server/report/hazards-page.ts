@@ -1,0 +1,32 @@
+// The hazard rules as a page: code by code what it says, and each rule with what happens, what mends it and its source.
+// Made from the rules' own words, so that a rule is written once. Knows no scenario.
+
+import { hazardCodes, hazardRuleWords } from '../scenario/hazard-fact.ts';
+
+const causes = {
+  alone: 'by what it is',
+  storage: 'by how it is kept',
+  meeting: 'by what it meets',
+} as const;
+
+export function hazardsPage(command: string): string {
+  const lines = [
+    `<!-- Written by \`${command}\` from the program's own rules. -->`,
+    '',
+    '# Hazards',
+    '',
+    'What the rules look at in a blend or oxidant, code by code. Screening only: rules name families of substances, and',
+    'what they do not know they do not tell. An empty list of findings says which rules were looked at and that none fired;',
+    'it never says that a blend is safe. Follow the safety data sheet, class, flag and local rules; a competent person',
+    'approves the design. Numbers are per kilogram of the blend and upper bounds.',
+    '',
+    'A code is accepted with a reason inside its definition: `acknowledge hazard/water-reactive: "closed tanks; note 7"`.',
+  ];
+  for (const [code, { cause, says }] of Object.entries(hazardCodes)) {
+    lines.push('', `## \`${code}\``, '', `${says} Earned ${causes[cause]}.`, '');
+    for (const rule of hazardRuleWords.filter((one) => one.code === code)) {
+      lines.push(`- ${rule.happens} ${rule.mend} Source: ${rule.source}.`);
+    }
+  }
+  return `${lines.join('\n')}\n`;
+}
