@@ -70,7 +70,8 @@ function solve(
   const withIons = attempt(true);
   if (withIons.kind === 'equilibrium' && withIons.temperatureK >= ionsFromK) return withIons;
   const without = attempt(false);
-  return without.kind === 'equilibrium' ? without : withIons;
+  // Warm enough for ions and without an answer that has them is no answer.
+  return without.kind === 'equilibrium' && without.temperatureK < ionsFromK * (1 + 1e-9) ? without : withIons;
 }
 
 function sureWay(

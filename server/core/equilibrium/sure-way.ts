@@ -146,7 +146,7 @@ export function byTemperature(
   // Above the ends of all phases that could hold some element there is no state at all: the search stops at the last end.
   for (let tries = 0; end === 'failed' && tries < 8; tries += 1) {
     const lower = lastEndBelow(work, highestK);
-    if (lower <= range.lowestK) break;
+    if (lower <= range.lowestK || !isBeyondAll(work, aim, lower * (1 + 1e-9))) break;
     highestK = lower;
     end = searchTo(highestK);
   }
@@ -170,6 +170,12 @@ function reached(state: Equilibrium, check: Check): number {
 /** The highest temperature below a given one at which a condensed phase of the set ends. */
 function lastEndBelow({ set }: Work, temperatureK: number): number {
   return set.endK.reduce((last, endK) => (endK < temperatureK ? Math.max(last, endK) : last), 0);
+}
+
+/** Whether no phases that may be present at a temperature can hold the elements. */
+function isBeyondAll(work: Work, aim: Aim, temperatureK: number): boolean {
+  admitPhases(work, temperatureK);
+  return startCold(work, { ...aim, seeks: 'temperature' }, temperatureK, temperatureK, temperatureK) !== undefined;
 }
 
 /** The state at the zero, or the blend of those at a jump in the shares that hold what is held. */
@@ -281,17 +287,28 @@ interface KeptBasis {
   readonly rank: number;
   readonly basis: Int32Array;
   readonly nu: Float64Array;
+  readonly inverse: Float64Array;
+  readonly isForced: Uint8Array;
   readonly amounts: Float64Array;
 }
 
-function keepBasis({ rank, basis, nu, amounts }: Work): KeptBasis {
-  return { rank, basis: basis.slice(), nu: nu.slice(), amounts: amounts.slice() };
+function keepBasis({ rank, basis, nu, inverse, isForced, amounts }: Work): KeptBasis {
+  return {
+    rank,
+    basis: basis.slice(),
+    nu: nu.slice(),
+    inverse: inverse.slice(),
+    isForced: isForced.slice(),
+    amounts: amounts.slice(),
+  };
 }
 
-function restoreBasis(work: Work, { rank, basis, nu, amounts }: KeptBasis): void {
+function restoreBasis(work: Work, { rank, basis, nu, inverse, isForced, amounts }: KeptBasis): void {
   work.rank = rank;
   work.basis.set(basis);
   work.nu.set(nu);
+  work.inverse.set(inverse);
+  work.isForced.set(isForced);
   work.amounts.set(amounts);
 }
 
