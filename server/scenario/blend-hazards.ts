@@ -4,8 +4,10 @@
 // acknowledgement is said to be idle.
 
 import type { Definition, Entry, Span } from '../../grammar/tree.ts';
+import { isPartly } from '../core/hazard/blanket-rules.ts';
 import { hazardsOf, judgePairs, pairsToJudge } from '../core/hazard/find-hazards.ts';
 import type { Hazard } from '../core/hazard/find-hazards.ts';
+import { isMetal } from '../core/hazard/store.ts';
 import type { Store } from '../core/hazard/store.ts';
 import type { Context } from './context.ts';
 import { isHazardCode } from './hazard-fact.ts';
@@ -154,7 +156,7 @@ function mendsOf(
   if (!['hazard/blanket', 'hazard/superoxide', 'hazard/flammable-range', 'hazard/oxygen-enriched'].includes(code))
     return [];
   // Argon suits all; nitrogen is cheaper, and wrong over lithium alone.
-  const holdsLithium = store.portions.some(({ molPerKg }) => molPerKg.has('Li'));
+  const holdsLithium = store.portions.some((portion) => isMetal(portion) && isPartly(portion, ['Li']));
   return (holdsLithium ? ['argon'] : ['nitrogen', 'argon']).map((gas) => ({
     title: `Blanket it with ${gas}`,
     place: context.place(span),

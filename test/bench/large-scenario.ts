@@ -30,7 +30,7 @@ function group(index: number): string[] {
     ...[1, 2, 3, 4].flatMap((number) => [
       `blend mixed_${index}_${number} {`,
       `  ${percent + number} % mass  sodium`,
-      `  ${number} % mass   methanol               # keeps it liquid`,
+      `  ${number} % mass   toluene                # keeps it liquid`,
       `  rest       fuel_${index}`,
       '}',
       '',
@@ -38,7 +38,7 @@ function group(index: number): string[] {
     ...[1, 2].flatMap((number) => [
       `blend trial_${index}_${number} {`,
       `  (margin_${index}) mass  mixed_${index}_${number}`,
-      `  20 % mass      ethanol`,
+      `  20 % mass      xylene`,
       `  rest           mixed_${index}_${number + 2}`,
       '}',
       '',

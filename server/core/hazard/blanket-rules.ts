@@ -21,7 +21,20 @@ interface BlanketReaction {
 
 /** Potassium, rubidium and caesium, alone or in an alloy: their crust is superoxide. */
 const formsSuperoxide = (portion: StoredPortion): boolean =>
-  isIn(portion, 'alkali-metal') && ['K', 'Rb', 'Cs'].some((symbol) => portion.molPerKg.has(symbol));
+  isIn(portion, 'alkali-metal') && isPartly(portion, ['K', 'Rb', 'Cs']);
+
+/** A tenth of its atoms at least: what technical sodium holds of potassium makes no crust of its own. */
+export function isPartly({ molPerKg }: StoredPortion, symbols: readonly string[]): boolean {
+  let all = 0;
+  let some = 0;
+  for (const [symbol, mol] of molPerKg) {
+    all += mol;
+    if (symbols.includes(symbol)) some += mol;
+  }
+  return some >= leastPart * all && some > 0;
+}
+
+const leastPart = 0.1;
 
 /** Solid under a liquid the gas reaches it slowly; bare or molten at once. */
 const byCover = (portion: StoredPortion, store: Store): HazardSeverity =>
@@ -74,9 +87,8 @@ const reactions: readonly BlanketReaction[] = [
     mend: 'Blanket it with argon or helium.',
     source: ruleSources.bretherick,
     judge: (portion, store) => {
-      if (isIn(portion, 'alkali-metal') && portion.molPerKg.has('Li')) return byCover(portion, store);
-      const isNitrideMelt =
-        portion.phase === 'liquid' && ['Mg', 'Ca', 'Ti'].some((symbol) => portion.molPerKg.has(symbol));
+      if (isIn(portion, 'alkali-metal') && isPartly(portion, ['Li'])) return byCover(portion, store);
+      const isNitrideMelt = portion.phase === 'liquid' && isPartly(portion, ['Mg', 'Ca', 'Ti']);
       return isNitrideMelt && isIn(portion, 'passivated-metal', 'alkaline-earth-metal') ? 'error' : null;
     },
   },

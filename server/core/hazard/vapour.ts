@@ -32,11 +32,7 @@ const usualLimitingOxygen = 0.08;
 
 /** Vapours of the liquids at a temperature (the stored one if not given); null where none of them can burn. */
 export function ullageOf(store: Store, temperatureK: number = store.temperatureK): Ullage | null {
-  const vapours = vapoursOf(store).map((vapour) => ({
-    ...vapour,
-    share: (vapour.activity * vapour.pressurePa(temperatureK)) / store.pressurePa,
-    lower: lowerLimitAt(vapour.portion, vapour.lower, temperatureK),
-  }));
+  const vapours = sharesAt(vapoursOf(store), temperatureK, store.pressurePa);
   if (vapours.length === 0) return null;
   const vapourShare = vapours.reduce((sum, { share }) => sum + share, 0);
   const uppers = vapours.map(({ portion, share }) => {
@@ -44,7 +40,7 @@ export function ullageOf(store: Store, temperatureK: number = store.temperatureK
     return upper === null ? null : share / upper;
   });
   return {
-    overLowerLimit: vapours.reduce((sum, { share, lower }) => sum + share / lower, 0),
+    overLowerLimit: overLowerOf(vapours),
     overUpperLimit: uppers.reduce(
       (sum, part) => (sum === null || part === null ? null : sum + part),
       0 as number | null,
@@ -56,14 +52,24 @@ export function ullageOf(store: Store, temperatureK: number = store.temperatureK
 
 /** Where the vapours together reach their lower limit, K; null where nothing in the blend has a flash point. */
 export function flashPointK(store: Store): number | null {
+  const known = flashOf.get(store);
+  if (known !== undefined) return known;
+  const flash = searchFlashPointK(store);
+  flashOf.set(store, flash);
+  return flash;
+}
+
+const flashOf = new WeakMap<Store, number | null>();
+
+function searchFlashPointK(store: Store): number | null {
   const [only, ...others] = liquids(store);
   if (only !== undefined && others.length === 0) return only.flashPointK;
-  const atOneAtmosphere = { ...store, pressurePa: atmospherePa };
-  const over = (temperatureK: number): number => ullageOf(atOneAtmosphere, temperatureK)?.overLowerLimit ?? 0;
+  const vapours = vapoursOf(store);
+  const over = (temperatureK: number): number => overLowerOf(sharesAt(vapours, temperatureK, atmospherePa));
   let lowK = 150;
   let highK = 700;
   if (!(over(lowK) < 1 && over(highK) >= 1)) return null;
-  while (highK - lowK > 1e-3) {
+  while (highK - lowK > 1e-2) {
     const middleK = (lowK + highK) / 2;
     if (over(middleK) >= 1) highK = middleK;
     else lowK = middleK;
@@ -130,7 +136,35 @@ interface Vapour {
   readonly activity: number;
 }
 
+/** Each vapour's mole share and lower limit at a temperature and pressure. */
+function sharesAt(
+  vapours: readonly Vapour[],
+  temperatureK: number,
+  pressurePa: number,
+): readonly { readonly portion: StoredPortion; readonly share: number; readonly lower: number }[] {
+  return vapours.map(({ portion, activity, pressurePa: own, lower }) => ({
+    portion,
+    share: (activity * own(temperatureK)) / pressurePa,
+    lower: lowerLimitAt(portion, lower, temperatureK),
+  }));
+}
+
+function overLowerOf(vapours: readonly { readonly share: number; readonly lower: number }[]): number {
+  return vapours.reduce((sum, { share, lower }) => sum + share / lower, 0);
+}
+
+/** Worked out once a store: its rules ask for them several times. */
 function vapoursOf(store: Store): readonly Vapour[] {
+  const known = vapoursOfStore.get(store);
+  if (known !== undefined) return known;
+  const vapours = workOutVapours(store);
+  vapoursOfStore.set(store, vapours);
+  return vapours;
+}
+
+const vapoursOfStore = new WeakMap<Store, readonly Vapour[]>();
+
+function workOutVapours(store: Store): readonly Vapour[] {
   const all = liquids(store);
   const holdsWater = all.some((portion) => isIn(portion, 'water'));
   const layers = [

@@ -7,7 +7,7 @@ import { placeInText } from '../../support/place-in-text.ts';
 import { openScenarios, type ScenarioWindow } from './scenarios.ts';
 
 const UNBALANCED = 'reaction soda_route {\n  Na(cr) + O2(g) + CO2(g) -> Na2CO3(cr)\n}\n';
-const NOT_CLOSED = 'blend two_parts {\n  60 % mass methanol\n  30 % mass ethanol\n}\n';
+const NOT_CLOSED = 'blend two_parts {\n  60 % mass fame\n  30 % mass gas_oil\n}\n';
 
 let window: ScenarioWindow;
 beforeAll(async () => {

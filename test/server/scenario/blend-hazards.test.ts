@@ -119,6 +119,10 @@ test('a technical metal is known by its atoms', () => {
       .map(({ code }) => code)
       .sort(),
   ).toEqual(['hazard/water-in-contact', 'hazard/water-reactive']);
+  // The trace of potassium in it makes no superoxide.
+  const inAir = text.replace('  blanket: argon\n', '  blanket: air\n');
+  expect(hazardsIn(inAir).map(({ code }) => code)).toContain('hazard/blanket');
+  expect(hazardsIn(inAir).map(({ code }) => code)).not.toContain('hazard/superoxide');
 });
 
 describe('acknowledge', () => {
