@@ -3,7 +3,7 @@
 // Knows no equations. Invariant: on the scale where the elements in their reference states at 298.15 K have no enthalpy,
 // so that sums over a balanced equation are those of the reaction. Method: lowest Gibbs energy, gases with R T ln(p / 1 bar).
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import type { Formula } from '../substance/formula.ts';
 import { phasesOfFormula, propertiesOfPhase, type PhaseProperties, type ThermoPhase } from '../substance/phases.ts';
 
@@ -37,5 +37,3 @@ export function speciesAtTemperature(
   }
   return best && { phase: best.phase, properties: best.properties, guessed: formula.phase === undefined };
 }
-
-const standardPressurePa = 1e5;

@@ -2,7 +2,7 @@
 // Knows no mixtures and no dimers: vapours of alkali metals hold some pairs, which lower the boiling point by a few kelvin.
 // Invariant: at the temperature given back liquid and vapour have the same Gibbs energy at that pressure.
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import { phaseOfId, propertiesOfPhase } from '../substance/phases.ts';
 
 export interface Vaporisation {
@@ -34,5 +34,3 @@ export function vaporisationOf(symbol: string, pressurePa: number): Vaporisation
     (propertiesOfPhase(liquid, boilingK)?.enthalpyJPerMol ?? Number.NaN);
   return { boilingK, latentJPerKg: latentJPerMol / gas.molarMassKgPerMol };
 }
-
-const standardPressurePa = 1e5;

@@ -4,7 +4,7 @@
 // Derivatives at equilibrium: the converged system solved for a change of temperature and for one of pressure; heat capacities,
 // isentropic exponent and speed of sound follow by the relations that hold for any substance (Smith and Missen 1982).
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import type { CandidateSet } from './candidates.ts';
 import { madeUpBy } from './descent.ts';
@@ -342,8 +342,6 @@ export function answerOf(
     iterations,
   };
 }
-
-const standardPressurePa = 1e5;
 /** A phase with less of the mass than this decides nothing by its extrapolated data. */
 const extrapolatedShare = 1e-6;
 

@@ -1,7 +1,7 @@
 // What a problem holds, in the forms the solver's parts take it.
 // Knows no state. Invariant: one place turns J, J/K, Pa and m³ into scaled numbers without dimension.
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import type { Check } from './answer.ts';
 import type { Held } from './equilibrium.ts';
 import type { Aim } from './newton.ts';
@@ -42,5 +42,3 @@ export function checkOf(held: Held): Check {
       return { kind: 'none' };
   }
 }
-
-const standardPressurePa = 1e5;

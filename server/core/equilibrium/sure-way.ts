@@ -5,7 +5,7 @@
 // the end of its data.
 // Knows no speed. Invariant: every state it passes through is certified.
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import { answerOf, isCertified, responseOf, stateOf } from './answer.ts';
 import type { Check } from './answer.ts';
 import { blended } from './blend.ts';
@@ -339,5 +339,3 @@ function restore(work: Work, kept: Kept, aim: Aim): void {
   takeTemperature(work, aim, work.temperatureK);
   takeFractions(work, aim);
 }
-
-const standardPressurePa = 1e5;

@@ -9,5 +9,8 @@ export const molarGasConstantJPerMolK = 8.31446261815324;
 /** Standard atmosphere, Pa (10th General Conference on Weights and Measures, 1954): the zero of gauge pressures here. */
 export const standardAtmospherePa = 101325;
 
+/** Standard pressure of the tables and of every standard state here, Pa (IUPAC 1982). */
+export const standardPressurePa = 1e5;
+
 /** Zero of the Celsius scale, K (SI Brochure, section 2.3.1). */
 export const celsiusZeroK = 273.15;
