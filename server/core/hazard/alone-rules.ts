@@ -103,7 +103,7 @@ export const aloneRules: readonly HazardRule[] = [
   {
     id: 'water-reactive',
     code: 'hazard/water-reactive',
-    happens: 'Water makes a gas that burns or poisons from it, or much heat.',
+    happens: 'It reacts with water and gives off a gas that burns or poisons, or much heat.',
     mend: 'Keep it closed, dry and under its blanket; no water, foam or steam near it.',
     source: ruleSources.ghs,
     find: (store) =>
