@@ -23,6 +23,8 @@ export function knownSlip(misfit: Misfit): Problem | undefined {
     foreignPhase(misfit) ??
     foreignArrow(misfit) ??
     strangeCharacter(misfit) ??
+    portionsInARow(misfit) ??
+    amountBehind(misfit) ??
     tradeShare(misfit) ??
     tradeUnit(misfit) ??
     coefficient(misfit) ??
@@ -168,6 +170,34 @@ function tradeShare({ tokens, actual, place }: Misfit): Problem | undefined {
   const span = { start: word.startOffset, end: t.endOf(last) };
   const said = isBy ? `by ${next?.image ?? ''}` : isTwice ? `${word.image}/${beyond.image}` : word.image;
   const message = `\`${said}${isPercent ? '%' : ''}\` is written \`${newText}\` here, as in \`30 % ${basis} methanol\`.`;
+  return unexpected(span, message, { title: `Write ${newText}`, newText });
+}
+
+/** `30 % sodium, 70 % gas_oil`: portions on one line, or with commas at their ends. */
+function portionsInARow({ tokens, place }: Misfit): Problem | undefined {
+  if (place !== 'portion') return undefined;
+  const index = tokens.findIndex(({ tokenType }) => tokenType === t.Comma);
+  const [comma, next] = [tokens[index], tokens[index + 1]];
+  if (index < 2 || comma === undefined) return undefined;
+  const amount = tokens[0]?.tokenType;
+  if (amount !== t.NumberToken && amount !== t.OpenBracket && amount !== t.Rest) return undefined;
+  const message = 'A portion ends without a comma. Write each one on a line of its own, or a `;` between two.';
+  return next === undefined
+    ? unexpected(spanOf(comma), message, { title: 'Remove the comma', newText: '' })
+    : unexpected(spanOf(comma), message, { title: 'Write ;', newText: ';' });
+}
+
+/** `gas_oil 70 %`: the amount behind its substance. */
+function amountBehind({ tokens, actual, place }: Misfit): Problem | undefined {
+  const [substance, number, percent, basis, more] = tokens;
+  if (place !== 'portion' || substance === undefined || actual?.startOffset !== substance.startOffset) return undefined;
+  if (number?.tokenType !== t.NumberToken || percent === undefined || more !== undefined) return undefined;
+  if (/^[^a-z'%]/i.test(substance.image) || !/^(?:%|[a-z]+)$/i.test(percent.image)) return undefined;
+  if (basis !== undefined && !/^(?:mass|mole|volume)$/.test(basis.image)) return undefined;
+  const amount = [number, percent, ...(basis === undefined ? [] : [basis])].map(({ image }) => image).join(' ');
+  const newText = `${amount} ${substance.image}`;
+  const span = { start: substance.startOffset, end: t.endOf(basis ?? percent) };
+  const message = `The amount of a portion stands before its substance: \`${newText}\`.`;
   return unexpected(span, message, { title: `Write ${newText}`, newText });
 }
 

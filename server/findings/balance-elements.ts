@@ -8,7 +8,7 @@ import { formatNumber } from '../wording/numbers.ts';
 import { listed, quoted, sentences } from '../wording/words.ts';
 import { placeOf, sectionAt } from '../scenario/place.ts';
 import type { Place } from '../scenario/scenario.ts';
-import type { FactOf, Rule, Site } from './rule.ts';
+import { textAt, type FactOf, type Rule, type Site } from './rule.ts';
 
 type Unbalanced = FactOf<'balance/elements'>;
 type NoBalance = Extract<Unbalanced['solution'], { readonly kind: 'none' }>['why'];
@@ -17,8 +17,19 @@ const MOST_ELEMENTS = 4;
 
 export const balanceElements: Rule<Unbalanced> = {
   severity: 'error',
-  message: (fact) => sentences('The equation is not balanced.', deficits(fact), way(fact)),
+  message: (fact, site) => {
+    const ion = ionMeant(site);
+    const hint =
+      ion &&
+      `${quoted(ion.written)} reads as ${ion.count} atoms with a single charge; the ion is written ${quoted(ion.meant)}.`;
+    return sentences('The equation is not balanced.', deficits(fact), hint ?? way(fact));
+  },
   fixes: ({ solution }, site) => {
+    const ion = ionMeant(site);
+    if (ion) {
+      const newText = textAt({ ...site, place: equationAround(site) }).replaceAll(ion.written, ion.meant);
+      return [{ title: `Write \`${ion.meant}\``, preferred: true, edits: [{ place: equationAround(site), newText }] }];
+    }
     if (solution.kind === 'none') return [];
     const title =
       solution.kind === 'unique' ? `Balance: ${solution.equation}` : `Balance the simplest way: ${solution.equation}`;
@@ -31,6 +42,17 @@ export const balanceElements: Rule<Unbalanced> = {
     ];
   },
 };
+
+/** `CO32-`, as ions are printed with raised charges: read as it stands it has 32 oxygen atoms. */
+function ionMeant(
+  site: Site,
+): { readonly written: string; readonly meant: string; readonly count: string } | undefined {
+  const text = textAt({ ...site, place: equationAround(site) });
+  const [written, formula = '', atoms = '', charge = '', sign = ''] =
+    /\b([A-Z][A-Za-z0-9()]*?)(\d)([2-4])([+-])(?=[\s,;)]|$)/.exec(text) ?? [];
+  if (written === undefined || Number(atoms) < 2) return undefined;
+  return { written, meant: `${formula}${atoms}^${charge}${sign}`, count: `${atoms}${charge}` };
+}
 
 function deficits({ differences }: Unbalanced): string {
   const said = differences

@@ -9,9 +9,16 @@ const MOST_LISTED = 10;
 
 export const nameUnknownEntry: Rule<FactOf<'name/unknown-entry'>> = {
   severity: 'error',
-  message: ({ entry, kind, near, known }) =>
-    sentences(`${withArticle(kind)} has no entry ${quoted(entry)}.`.replace(/^a/, 'A'), didYouMean(near) || has(known)),
-  fixes: ({ near }, site) => replacements(site, near),
+  message: ({ entry, kind, near, known, portion }) =>
+    sentences(
+      `${withArticle(kind)} has no entry ${quoted(entry)}.`.replace(/^a/, 'A'),
+      portion ? `A portion has no colon: ${quoted(portion.text)}.` : didYouMean(near) || has(known),
+    ),
+  fixes: ({ near, portion }, site) => {
+    if (!portion) return replacements(site, near);
+    const edits = [{ place: portion.place, newText: portion.text }];
+    return [{ title: `Write \`${portion.text}\``, preferred: true, edits }];
+  },
 };
 
 function has(known: readonly string[]): string {

@@ -6,6 +6,7 @@
 import { sectionProblems } from '../../grammar/section-messages.ts';
 import type { BrokenLine, Definition, Entry } from '../../grammar/tree.ts';
 import { near, type Context } from './context.ts';
+import { portionMeant } from './portion-meant.ts';
 import { nearByTrade } from './trade-names.ts';
 
 /** Reads the value of an entry. `undefined` means it could not be read, and that has been said. */
@@ -54,13 +55,16 @@ export interface DefinitionRead<Table extends EntryTable> {
   readonly entries: EntriesRead<Table>;
   /** Keys of entries that are written but could not be read: what depends on them is unknown, and silent. */
   readonly broken: ReadonlySet<keyof Table>;
+  /** Some line was meant as a portion (said): the portions are not all there. */
+  readonly lacksPortion: boolean;
 }
 
-/** Reads a definition's entries by its kind's table. Portions and equations are left to the kind. */
+/** Reads a definition's entries by its kind's table. Portions and equations, where it takes them, are left to the kind. */
 export function readEntries<Table extends EntryTable>(
   definition: Definition,
   table: Table,
   context: Context,
+  taken: readonly ('portion' | 'equation')[] = [],
 ): DefinitionRead<Table> {
   const keyOf = new Map<string, keyof Table>();
   for (const key of Object.keys(table)) keyOf.set(table[key]?.name ?? key, key);
@@ -68,18 +72,22 @@ export function readEntries<Table extends EntryTable>(
   const read: { [Key in keyof Table]?: ReadEntry<unknown> } = {};
   const broken = new Set<keyof Table>();
   const misspelt = new Set<string>();
+  let lacksPortion = false;
   for (const line of definition.lines) {
     if (line.kind !== 'entry') continue;
     const key = keyOf.get(line.words);
     if (key === undefined) {
       const known = [...keyOf.keys()];
       const meant = nearByTrade(line.words, known);
+      const portion = taken.includes('portion') ? portionMeant(line, context) : null;
+      if (portion !== null) lacksPortion = true;
       context.report(line.wordsSpan, {
         code: 'name/unknown-entry',
         entry: line.words,
         kind: definition.keyword.text,
         near: meant,
         known,
+        ...(portion === null ? {} : { portion: { place: context.place(line.span), text: portion } }),
       });
       for (const name of meant) misspelt.add(name);
       continue;
@@ -120,7 +128,7 @@ export function readEntries<Table extends EntryTable>(
     });
   }
   // Each value was made by the reader of its own row, which is what the mapped type says; the loop cannot show it.
-  return { entries: read as EntriesRead<Table>, broken };
+  return { entries: read as EntriesRead<Table>, broken, lacksPortion };
 }
 
 /** The entries whose lines could not be read: they are written, so they are not called missing as well. */

@@ -48,6 +48,8 @@ export type Fact =
       readonly kind: string;
       readonly near: readonly string[];
       readonly known: readonly string[];
+      /** Where the line names a substance and an amount of it: where it stands, and the portion it would be. */
+      readonly portion?: { readonly place: Place; readonly text: string };
     }
   | { readonly code: 'name/repeated-entry'; readonly entry: string; readonly first: Place }
   | {
@@ -139,7 +141,7 @@ export type Fact =
       readonly code: 'unit/ambiguous';
       readonly text: string;
       readonly offers: readonly string[];
-      readonly why: 'brackets' | 'scale' | 'form';
+      readonly why: 'brackets' | 'scale' | 'share' | 'form';
     }
   | {
       readonly code: 'balance/elements';

@@ -24,6 +24,7 @@ const basisOfUnit: readonly (readonly [string, Basis])[] = [
 
 /** The amount an expression stands for; null when it is none (said). `basis` is that written behind it, if any. */
 export function readAmount(expression: Expression, basis: Basis | undefined, context: Context): WrittenAmount | null {
+  if (isShareTimesUnit(expression, context)) return null;
   const quantity = evaluateExpression(expression, context);
   if (!quantity) return null;
   const { span } = expression;
@@ -53,6 +54,20 @@ export function readAmount(expression: Expression, basis: Basis | undefined, con
     return null;
   }
   return { kind: 'amount', basis: own, quantity, span };
+}
+
+/** `30 % mol` (said): the unit word multiplies the percent, where the basis `mole` was meant. */
+function isShareTimesUnit(expression: Expression, context: Context): boolean {
+  if (expression.kind !== 'quantity' || !expression.unit) return false;
+  const [percent, times, word, ...more] = expression.unit.tokens;
+  if (percent?.text !== '%' || times?.kind !== 'times' || word?.kind !== 'word' || more.length > 0) return false;
+  const { dimension } = knownUnit(word.text);
+  const basis = basisOfUnit.find(([unit]) => sameDimension(knownUnit(unit).dimension, dimension))?.[1];
+  if (!basis) return false;
+  const { span } = expression.unit;
+  const offers = [`% ${basis}`];
+  context.report(span, { code: 'unit/ambiguous', text: context.written(span), offers, why: 'share' });
+  return true;
 }
 
 /** What the finding about a mixture's amounts needs to know of its parts. */

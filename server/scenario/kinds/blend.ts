@@ -74,12 +74,13 @@ export const blend: Kind = {
 };
 
 function evaluate(definition: Definition, context: Context): KindAnswer {
-  const { entries: read, broken } = readEntries(definition, entries, context);
-  refuseLines(definition, ['portion'], context);
+  const { entries: read, broken, lacksPortion } = readEntries(definition, entries, context, evaluated.lines);
+  refuseLines(definition, evaluated.lines, context);
   const name = definition.name?.text ?? '';
   const header = definition.name?.span ?? definition.header;
   const parts = readParts(definition, context);
-  const isBroken = definition.lines.some((line) => line.kind === 'broken-line') || broken.has('products');
+  const isUnread = lacksPortion || definition.lines.some((line) => line.kind === 'broken-line');
+  const isBroken = isUnread || broken.has('products');
   // A line that could not be read may be the very portion that is missing: its own finding says enough.
   const mixed = parts && !isBroken ? mixOrReport(definition, parts, context) : null;
   if (!parts || !mixed) return unknownAnswer(evaluated);

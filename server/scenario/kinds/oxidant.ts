@@ -66,11 +66,11 @@ export const oxidant: Kind = {
 };
 
 function evaluate(definition: Definition, context: Context): KindAnswer {
-  const { entries: read, broken } = readEntries(definition, entries, context);
-  refuseLines(definition, ['portion'], context);
+  const { entries: read, broken, lacksPortion } = readEntries(definition, entries, context, evaluated.lines);
+  refuseLines(definition, evaluated.lines, context);
   const name = definition.name?.text ?? '';
   const header = definition.name?.span ?? definition.header;
-  const isBroken = broken.size > 0 || definition.lines.some((line) => line.kind === 'broken-line');
+  const isBroken = lacksPortion || broken.size > 0 || definition.lines.some((line) => line.kind === 'broken-line');
   const parts = readParts(definition, context);
   const mixed = parts && !isBroken ? mixOrReport(definition, parts, context) : null;
   if (!parts || !mixed) return unknownAnswer(evaluated);
