@@ -1,4 +1,4 @@
-// The pressure at which water vapour is in balance with liquid water or ice, for humid air and dew points.
+// The pressure at which water vapour is in balance with liquid water or ice, for humid air, dew points and steam.
 // Knows nothing of air: no enhancement by the gas above it is counted. Ranges: ice 50 to 273.16 K, liquid to 647.096 K.
 // Sources: IAPWS-IF97, region 4, equation 30 (Wagner et al. 2000, J. Eng. Gas Turbines Power 122, 150) for the liquid;
 // IAPWS R14-08(2011), equation 6 (Wagner et al. 2011, J. Phys. Chem. Ref. Data 40, 043103) for ice.
@@ -12,7 +12,22 @@ export function waterSaturationPressurePa(temperatureK: number): number | undefi
   return temperatureK >= triplePointK && temperatureK <= criticalPointK ? overLiquid(temperatureK) : undefined;
 }
 
+/**
+ * Temperature in K at which liquid water boils at a pressure in Pa: the same equation solved for it (IF97, equation 31);
+ * undefined outside the triple point's pressure to 22.064 MPa.
+ */
+export function waterSaturationTemperatureK(pressurePa: number): number | undefined {
+  if (!(pressurePa >= triplePointPa && pressurePa <= criticalPointPa)) return undefined;
+  const beta = (pressurePa / 1e6) ** 0.25;
+  const e = beta * beta + n3 * beta + n6;
+  const f = n1 * beta * beta + n4 * beta + n7;
+  const g = n2 * beta * beta + n5 * beta + n8;
+  const d = (2 * g) / (-f - Math.sqrt(f * f - 4 * e * g));
+  return (n10 + d - Math.sqrt((n10 + d) ** 2 - 4 * (n9 + n10 * d))) / 2;
+}
+
 const criticalPointK = 647.096;
+const criticalPointPa = 22.064e6;
 const triplePointPa = 611.657;
 
 /** Symbols as in IF97: n1 to n10; θ = T + n9 / (T - n10). */
