@@ -3,7 +3,7 @@
 // Invariant: shares told in a line are those of one state, largest first, and what is below a tenth of a percent is left out.
 import { knownUnit } from '../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
-import type { EvaluatedDefinition, Table } from '../scenario/scenario.ts';
+import type { EvaluatedDefinition, Table, TableWork } from '../scenario/scenario.ts';
 import { assumptionText } from '../wording/assumptions.ts';
 import { formatPercent } from '../wording/numbers.ts';
 import { celsiusText } from '../wording/quantities.ts';
@@ -21,6 +21,7 @@ export function burnLines({ figures, tables }: EvaluatedDefinition): HoverLine[]
     ...productLines(find('products')),
     ...fateLines('Carbon', find('carbon-fate')),
     ...fateLines('Alkali', find('alkali-fate')),
+    ...condensationLines(find('condensation')),
     ...(pressure && pressure.quantity.value > DENSE_BAR * 1e5 ? [{ sentence: assumptionText('dense-gas') }] : []),
   ];
 }
@@ -29,6 +30,29 @@ function productLines(table: Table | undefined): HoverLine[] {
   const share = columnOf(table, 'mass-share');
   const products = table?.rows.slice(0, MOST_PRODUCTS).map((row) => `${text(row[0])} ${percent(row[share])}`) ?? [];
   return products.length === 0 ? [] : [{ label: 'Leading products, by mass', text: products.join(', ') }];
+}
+
+/** What condenses first of each substance, at most so many. */
+const MOST_CONDENSING = 4;
+
+/** Which substances condense on the way down and from which temperature on; that it is being worked out, until it is. */
+function condensationLines(table: Table | undefined): HoverLine[] {
+  if (!table) return [];
+  const label = 'Condenses as it cools';
+  if (table.work && !table.work.isDone()) return [{ label, text: 'being worked out …' }];
+  const point = columnOf(table, 'dew-point');
+  const told = table.rows.flatMap((row) => {
+    const from = row[point];
+    return typeof from === 'number' ? [`${text(row[0])} from ${celsiusText(temperatureOf(from))}`] : [];
+  });
+  const shown = told.slice(0, MOST_CONDENSING);
+  const more = told.length > shown.length ? [`${String(told.length - shown.length)} more`] : [];
+  return told.length === 0 ? [] : [{ label, text: [...shown, ...more].join(', ') }];
+}
+
+/** The long work whose outcome these lines tell of. */
+export function awaitedByBurn({ tables }: EvaluatedDefinition): readonly TableWork[] {
+  return tables.flatMap(({ id, work }) => (id === 'condensation' && work && !work.isDone() ? [work] : []));
 }
 
 /** Each element's forms in the flame, and at the coldest of the states asked for where there are some. */

@@ -5,7 +5,7 @@ import type { EvaluatedDefinition, Place } from '../scenario/scenario.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { capitalised, listed } from '../wording/words.ts';
 import { figureText } from '../wording/quantities.ts';
-import { burnLines } from './hover-burn.ts';
+import { awaitedByBurn, burnLines } from './hover-burn.ts';
 import { balanceText } from './hover-equation.ts';
 import { shortened, type HoverLine, type HoverText } from './hover-text.ts';
 import { leadingFigures } from './leading-figures.ts';
@@ -20,7 +20,9 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
   const what = capitalised(`${definition.kind} ${definition.name}`.trim());
   const doc = shortened(definition.doc);
   const balance = balanceText(definition.tables.find(({ id }) => id === 'elements'));
-  const ofBurn = definition.kind === 'burn' ? burnLines(definition) : [];
+  const isBurn = definition.kind === 'burn';
+  const ofBurn = isBurn ? burnLines(definition) : [];
+  const awaited = isBurn ? { awaits: awaitedByBurn(definition) } : {};
   const shown = others.slice(0, ofBurn.length > 0 ? MOST_BURN_FIGURES : MOST_FIGURES);
   const lines: HoverLine[] = [
     ...(balance === null ? [] : [{ sentence: balance }]),
@@ -30,12 +32,13 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
     ...absentLines(definition),
     ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),
   ];
-  if (!first) return { place, title: what, origin: doc === '' ? null : doc, lines };
+  if (!first) return { place, title: what, origin: doc === '' ? null : doc, lines, ...awaited };
   return {
     place,
     title: `${figureText(first)}: ${first.label}`,
     origin: doc === '' ? what : `${what}. ${doc}`,
     lines,
+    ...awaited,
   };
 }
 

@@ -3,7 +3,7 @@
 // are shown as characters and never become markup, links, pictures or new lines.
 // Invariants: at most `MOST_LINES` lines; no control characters. Source: CommonMark 0.31.2, "Backslash escapes"; GFM,
 // "Autolinks (extension)".
-import type { Place } from '../scenario/scenario.ts';
+import type { Place, TableWork } from '../scenario/scenario.ts';
 
 export interface HoverText {
   /** What the hover is about, for the editor to mark. */
@@ -14,6 +14,8 @@ export interface HoverText {
   readonly origin: string | null;
   /** Then one line each: a value with its label, or a sentence. */
   readonly lines: readonly HoverLine[];
+  /** What it tells of as being worked out: once that is done, the same place has more to tell. */
+  readonly awaits?: readonly TableWork[];
 }
 
 export type HoverLine = { readonly label: string; readonly text: string } | { readonly sentence: string };

@@ -32,6 +32,7 @@ import { answerRequests, requestCapabilities } from './requests.ts';
 import { Schedule } from './schedule.ts';
 import { asSettings, DEFAULT_SETTINGS } from './settings.ts';
 import type { Tempo } from './stepping.ts';
+import { ViewedWork } from './viewed-work.ts';
 import { VisibleRanges } from './visible-ranges.ts';
 
 /** The client's part: `{ uri }` to `{ text }`, or `{ fault: 'missing' | 'unreadable', detail? }`. */
@@ -77,6 +78,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
     (text, document) => visible.readingOf(text, document, settings.largestText),
     new JobAnswers(runner),
   );
+  const viewedWork = new ViewedWork(runner);
   const publications = new Publications(
     (address) => documents.at(address),
     (uri, version, list) => {
@@ -198,6 +200,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
     connection,
     documents,
     evaluations,
+    viewedWork,
     abilities: () => abilities,
     settings: () => settings,
     readingOf: (document) => visible.readingOf(document.getText(), document, settings.largestText),
@@ -210,6 +213,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
       fileMayHaveChanged(addressOf(uri));
     },
     changed(uri) {
+      viewedWork.cancel(uri);
       schedule.after(settings.pauseMs, uri);
       lookAgain(addressOf(uri), uri);
     },
@@ -223,6 +227,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
       const address = addressOf(uri);
       schedule.drop(uri);
       evaluations.drop(uri);
+      viewedWork.cancel(uri);
       visible.drop(uri);
       publications.close(address);
       fileMayHaveChanged(address);

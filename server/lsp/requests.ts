@@ -48,7 +48,7 @@ export function requestCapabilities(abilities: Abilities): ServerCapabilities {
 
 /** Answers the requests from now on. */
 export function answerRequests(serving: Serving): void {
-  const { connection, documents, evaluations, abilities, settings, log } = serving;
+  const { connection, documents, evaluations, viewedWork, abilities, settings, log } = serving;
   answerCompletion(serving);
   answerNavigation(serving);
   answerSemanticTokens(serving);
@@ -57,7 +57,12 @@ export function answerRequests(serving: Serving): void {
     answered('Hover', null, log, async ({ textDocument, position }): Promise<Hover | null> => {
       const evaluated = await evaluations.current(textDocument.uri);
       if (!evaluated?.scenario) return null;
-      const found = hover(evaluated.scenario, evaluated.address, offsetAt(evaluated.document, position));
+      const offset = offsetAt(evaluated.document, position);
+      let found = hover(evaluated.scenario, evaluated.address, offset);
+      if (found?.awaits && found.awaits.length > 0) {
+        await viewedWork.bring(textDocument.uri, found.awaits);
+        found = hover(evaluated.scenario, evaluated.address, offset);
+      }
       return found && toHover(found, evaluated.document, abilities().markdown);
     }),
   );

@@ -7,11 +7,13 @@ import type { TextDocument } from 'vscode-languageserver-textdocument';
 import type { Reading } from '../scenario/files.ts';
 import type { Evaluations } from './evaluations.ts';
 import type { Settings } from './settings.ts';
+import type { ViewedWork } from './viewed-work.ts';
 
 export interface Serving {
   readonly connection: Connection;
   readonly documents: OpenDocuments;
   readonly evaluations: Evaluations;
+  readonly viewedWork: ViewedWork;
   readonly abilities: () => Abilities;
   readonly settings: () => Settings;
   /** How an open document is to be read: whole, or what is seen of it. */

@@ -44,6 +44,8 @@ export interface JsonTable {
   readonly id: string;
   readonly columns: readonly { readonly id: string; readonly unit: string | null }[];
   readonly rows: readonly (readonly (string | number | null)[])[];
+  /** Between which temperatures (K) the rows may lack something; absent where they lack nothing. */
+  readonly gaps?: readonly { readonly from: number; readonly to: number }[];
 }
 
 export interface JsonValue {
@@ -127,11 +129,12 @@ function jsonFigure({ id, label, quantity, unit }: Figure): JsonFigure[] {
   return reading ? [{ id, label, ...reading }] : [];
 }
 
-function jsonTable({ id, columns, rows }: Table): JsonTable {
+function jsonTable({ id, columns, rows, gaps = [] }: Table): JsonTable {
   return {
     id,
     columns: columns.map((column) => ({ id: column.id, unit: column.unit })),
     rows: rows.map((row) => row.map((cell) => (typeof cell === 'number' && !Number.isFinite(cell) ? null : cell))),
+    ...(gaps.length > 0 ? { gaps: gaps.map(({ fromK, toK }) => ({ from: fromK, to: toK })) } : {}),
   };
 }
 

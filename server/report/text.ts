@@ -5,6 +5,7 @@
 
 import type { Finding, Severity } from '../findings/finding.ts';
 import type { EvaluatedDefinition, EvaluatedFile, Table } from '../scenario/scenario.ts';
+import { formatNumber } from '../wording/numbers.ts';
 import { figureCells, toldText } from '../wording/quantities.ts';
 import { counted, countedFindings, listed, sharingHeads } from '../wording/words.ts';
 import { unitOfClaim, unitOfValue } from '../wording/written-unit.ts';
@@ -96,7 +97,7 @@ function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: n
     ...missing(definition, width).map((line) => paint.faint(line)),
     ...tables
       .filter((table) => saysSomething(table, kind))
-      .map((table) => `\n  ${paint.faint(table.label)}\n${indented(tableLines(table), 4)}`),
+      .map((table) => `\n  ${paint.faint(table.label)}\n${indented([...tableLines(table), ...gapLines(table)], 4)}`),
   ].join('\n');
 }
 
@@ -127,6 +128,14 @@ function missing({ absent }: EvaluatedDefinition, width: number): string[] {
       )
       .map((line) => `  ${line}`)
   );
+}
+
+/** Where a table may lack something. */
+function gapLines({ gaps = [] }: Table): string[] {
+  const told = gaps.map(({ fromK, toK }) => `${formatNumber(fromK)} and ${formatNumber(toK)} K`);
+  return told.length === 0
+    ? []
+    : [`Between ${listed(told)} nothing could be worked out: what happens there is not told.`];
 }
 
 /**

@@ -6,7 +6,7 @@ import type { PlacedSection, Span } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import { nearestWords } from '../core/spelling/nearest-words.ts';
 import type { Fact } from './facts.ts';
-import type { LongWork } from './long-work.ts';
+import type { AskLongWork } from './long-work.ts';
 import type { Material } from './material.ts';
 import type { OxidantStream } from './oxidant-stream.ts';
 import { placeOf } from './place.ts';
@@ -34,7 +34,7 @@ export interface Scope {
    * What `work` gives for `input`, of which `key` says all; null where it is not there yet. The statement then says what
    * it can without it, and is asked again. To be asked for while the statement is worked out, and not later.
    */
-  longWork<Input, Output>(work: LongWork<Input, Output>, key: string, input: Input): Output | null;
+  readonly longWork: AskLongWork;
 }
 
 export class Context {

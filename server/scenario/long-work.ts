@@ -5,6 +5,9 @@
 /** A function of core from plain data to plain data. Null only where it was told to stop; an exception is our bug. */
 export type LongWork<Input, Output> = (input: Input, shouldStop: () => boolean) => Output | null;
 
+/** Asks for what `work` gives for `input`, of which `key` says all; null where it is not there yet. */
+export type AskLongWork = <Input, Output>(work: LongWork<Input, Output>, key: string, input: Input) => Output | null;
+
 /** Whoever does long work while the evaluation goes on. */
 export interface WorkElsewhere {
   /**

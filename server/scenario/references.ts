@@ -123,8 +123,9 @@ function evaluateCell(
   if (temperature === null) return null;
   const { tables, absent } = owner.of;
   const isNamed = (name: string): boolean => name === wanted || name === material?.name;
-  const answer = findCell(tables, isNamed, columnId, temperature);
+  const answer = findCell(tables, isNamed, columnId, temperature, context.scope.longWork);
   if (answer.kind === 'cell') return answer.cell;
+  if (answer.kind === 'awaited') return null;
   // A definition that could not be worked out has no tables, and why has been said there.
   if ([...absent.values()].includes(null)) return null;
   if (answer.kind === 'no-state' && reference.at)

@@ -8,6 +8,7 @@ import type { PlacedSection, SyntaxTree } from '../../grammar/tree.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Hazards } from '../core/substance/hazards.ts';
 import type { Fact } from './facts.ts';
+import type { AskLongWork } from './long-work.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
 import type { Working } from './working.ts';
@@ -81,6 +82,17 @@ export interface Table {
   readonly rows: readonly (readonly (string | number | null)[])[];
   /** Rows too small to be worth showing, for those who ask for one by its name. */
   readonly traces?: readonly (readonly (string | number | null)[])[];
+  /** Where the rows are not the whole truth: temperatures (K) between which nothing could be worked out. */
+  readonly gaps?: readonly { readonly fromK: number; readonly toK: number }[];
+  /** Of a table whose rows take long to work out. Rows that are read before it is done are worked out on the spot. */
+  readonly work?: TableWork;
+}
+
+export interface TableWork {
+  /** Whether reading the rows takes no time any more. */
+  readonly isDone: () => boolean;
+  /** Asks for what the rows rest on; false while it is not there yet. */
+  readonly ask: (longWork: AskLongWork) => boolean;
 }
 
 export interface Column {

@@ -6,6 +6,7 @@
 import { knownUnit } from '../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
 import { toSi } from '../core/quantity/read-unit.ts';
+import type { AskLongWork } from './long-work.ts';
 import type { Table } from './scenario.ts';
 
 /** A figure met through a reference: its value and, where it is one of a definition's own, the figure. */
@@ -18,6 +19,8 @@ export interface ReferredFigure {
 export type FoundCell =
   | { readonly kind: 'cell'; readonly cell: ReferredFigure | null }
   | { readonly kind: 'no-row'; readonly names: readonly string[] }
+  /** Its table takes long and is not there yet. */
+  | { readonly kind: 'awaited' }
   /** It is told at these temperatures (K) only. */
   | { readonly kind: 'no-state'; readonly statesK: readonly number[] };
 
@@ -27,6 +30,7 @@ export function findCell(
   isNamed: (name: string) => boolean,
   columnId: string,
   temperature: Quantity | undefined,
+  longWork: AskLongWork,
 ): FoundCell {
   const wanted = tables.filter((table) => isStated(table) === (temperature !== undefined) && !isOverTemperature(table));
   const statesK = new Set<number>();
@@ -35,6 +39,7 @@ export function findCell(
     const state = temperatureColumn(table);
     const unit = table.columns[column]?.unit;
     if (!unit) continue;
+    if (table.work && !table.work.ask(longWork)) return { kind: 'awaited' };
     const isAsked = (cells: Row): boolean =>
       isNamed(String(cells[0])) && (!temperature || isAt(cells[state], temperature.value));
     const found = table.rows.find(isAsked) ?? table.traces?.find(isAsked);
@@ -44,7 +49,10 @@ export function findCell(
   if (temperature && ![...statesK].some((stateK) => isAt(stateK, temperature.value))) {
     return { kind: 'no-state', statesK: [...statesK] };
   }
-  const rows = wanted.flatMap((table) => table.rows.map((cells) => String(cells[0])));
+  // A table that takes long is not worked out for the names in it.
+  const rows = wanted.flatMap((table) =>
+    !table.work || table.work.isDone() ? table.rows.map((cells) => String(cells[0])) : [],
+  );
   return { kind: 'no-row', names: [...new Set(rows)] };
 }
 
@@ -53,7 +61,7 @@ export function findFigureAt(
   tables: readonly Table[],
   columnId: string,
   temperature: Quantity,
-): Exclude<FoundCell, { kind: 'no-row' }> {
+): Exclude<FoundCell, { kind: 'no-row' | 'awaited' }> {
   const statesK: number[] = [];
   for (const table of tables) {
     const unit = isOverTemperature(table) ? table.columns[columnOf(table, columnId)]?.unit : undefined;

@@ -6,7 +6,7 @@
 
 import type { CandidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium, NoEquilibrium } from '../equilibrium/equilibrium.ts';
-import type { ThermoPhase } from '../substance/phases.ts';
+import type { AdmittedProducts } from './admitted-products.ts';
 
 /** Fuel or oxidant as it comes in, per kg of itself. */
 export interface BurnStream {
@@ -39,7 +39,8 @@ export type BurnHeat =
   | { readonly heat: 'adiabatic'; readonly lossShare: number }
   | { readonly heat: 'temperature'; readonly temperatureK: number };
 
-export interface BurnInput {
+/** Plain data: it can be handed to another thread. */
+export interface BurnInput extends AdmittedProducts {
   readonly fuel: BurnStream;
   readonly oxidant: BurnStream;
   readonly amount: OxidantAmount;
@@ -58,8 +59,6 @@ export interface BurnInput {
   readonly frozenBelowK?: number;
   /** Pressure at which the gas cools; without it what was held while burning stays held. */
   readonly coolingPressurePa?: number;
-  /** False keeps a phase out of every state. */
-  readonly admits?: (phase: ThermoPhase) => boolean;
   /**
    * Ions and the electron in the zone, the flame and the cooled states where these are hotter than `ionsAboveK`. A path and
    * the state that freezes have none: along a path the candidates stay the same, and ions move no condensed phase.
@@ -200,6 +199,12 @@ export interface PathEvent {
 
 export const eventPrecisionK = 0.01;
 
+/** Between two temperatures; equal ones where a single state is missing at an end of the path. */
+export interface PathGap {
+  readonly fromK: number;
+  readonly toK: number;
+}
+
 /** States at the temperatures that were asked for, and what happens between them. */
 export interface CoolingPath {
   readonly candidates: CandidateSet;
@@ -210,7 +215,9 @@ export interface CoolingPath {
   readonly presentAtStart: readonly number[];
   /** In falling temperature. Phases that freeze within a frozen composition are not among them. */
   readonly events: readonly PathEvent[];
-  /** True where the path was stopped, or a state of it could not be had: events near it may be missing. */
+  /** Where a state could not be had, from the hottest down: events there may be missing. */
+  readonly gaps: readonly PathGap[];
+  /** True where there are such gaps, or the path was stopped. */
   readonly incomplete: boolean;
 }
 

@@ -5,7 +5,7 @@
 
 import type { CandidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium } from '../equilibrium/equilibrium.ts';
-import type { BurnStateOrNone, CoolingPath, FrozenState, NoState, PathEvent } from './burn.ts';
+import type { BurnStateOrNone, CoolingPath, FrozenState, NoState, PathEvent, PathGap } from './burn.ts';
 import { cooledPoint, eventsBetween, hiddenVisit } from './condensation.ts';
 import type { CooledPoint } from './condensation.ts';
 
@@ -28,19 +28,22 @@ export function coolingPath(gas: PathGas, temperaturesK: readonly number[]): Coo
   const freezeK = gas.frozen?.atK ?? -Infinity;
   const states: BurnStateOrNone[] = [];
   const points: CooledPoint[] = [];
-  let incomplete = false;
-  for (const temperatureK of falling) {
+  const missing: PathGap[] = [];
+  let isStopped = false;
+  for (const [index, temperatureK] of falling.entries()) {
+    const around = { fromK: falling[index - 1] ?? temperatureK, toK: falling[index + 1] ?? temperatureK };
     if (temperatureK <= freezeK && gas.frozen !== undefined) {
       const { from, state } = gas.frozen;
       states.push(from.kind === 'equilibrium' ? state(from, temperatureK) : from);
-      incomplete ||= from.kind === 'none';
+      if (from.kind === 'none') missing.push(around);
       continue;
     }
     const solved = gas.solve(temperatureK, points.at(-1)?.state);
     states.push(solved);
     if (solved.kind === 'equilibrium') points.push(cooledPoint(solved));
-    else incomplete = true;
-    if (solved.kind === 'none' && solved.reason === 'stopped') break;
+    else missing.push(around);
+    isStopped ||= solved.kind === 'none' && solved.reason === 'stopped';
+    if (isStopped) break;
   }
   // The last stretch of live composition ends where it freezes, wherever the list's own temperatures lie.
   const from = gas.frozen?.from;
@@ -53,7 +56,9 @@ export function coolingPath(gas: PathGas, temperaturesK: readonly number[]): Coo
   for (let index = 1; index < points.length; index += 1) {
     const found = eventsOfStep(gas, points, index);
     events.push(...found.events);
-    incomplete ||= !found.complete;
+    const [upper, lower] = [points[index - 1], points[index]];
+    if (!found.complete && upper && lower)
+      missing.push({ fromK: upper.state.temperatureK, toK: lower.state.temperatureK });
   }
   return {
     candidates: gas.candidates,
@@ -61,8 +66,21 @@ export function coolingPath(gas: PathGas, temperaturesK: readonly number[]): Coo
     states,
     presentAtStart: points[0]?.present ?? [],
     events,
-    incomplete,
+    gaps: joined(missing),
+    incomplete: isStopped || missing.length > 0,
   };
+}
+
+/** Gaps from the hottest down, those that meet as one. */
+function joined(gaps: readonly PathGap[]): readonly PathGap[] {
+  const falling = [...gaps].sort((a, b) => b.fromK - a.fromK);
+  const whole: PathGap[] = [];
+  for (const gap of falling) {
+    const last = whole.at(-1);
+    if (last && gap.fromK >= last.toK) whole[whole.length - 1] = { ...last, toK: Math.min(last.toK, gap.toK) };
+    else whole.push(gap);
+  }
+  return whole;
 }
 
 /** Events between a point and the one before it. */

@@ -9,6 +9,7 @@ import { candidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium, Held } from '../equilibrium/equilibrium.ts';
 import { equilibriumSolver } from '../equilibrium/solver.ts';
 import type { EquilibriumSolver } from '../equilibrium/solver.ts';
+import { admittanceOf } from './admitted-products.ts';
 import { ionsAboveK } from './burn.ts';
 import type {
   Burn,
@@ -118,7 +119,8 @@ class Matter {
     private readonly input: BurnInput,
     private readonly shouldStop: (() => boolean) | undefined,
   ) {
-    const admits = input.admits === undefined ? {} : { admits: input.admits };
+    const admitted = admittanceOf(input);
+    const admits = admitted === undefined ? {} : { admits: admitted };
     this.plain = once(() => equilibriumSolver(candidateSet(charge.elements, admits)));
     this.withIons = once(() => equilibriumSolver(candidateSet(charge.elements, { ...admits, ions: true })));
   }

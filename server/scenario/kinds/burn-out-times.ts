@@ -248,7 +248,7 @@ function surroundingsOf(burn: Burn, flame: Equilibrium, oxidant: OxidantStream):
 
 /** The flame of the whole at λ = 1, without zone or cooling; null where λ has no meaning or the energy is not known. */
 function stoichiometricK(burn: Burn): number | null {
-  const { fuel, oxidant, held, lowerHeatingValueJPerKg, admits, ions } = burn.input;
+  const { fuel, oxidant, held, lowerHeatingValueJPerKg, allowed, barred, ions } = burn.input;
   if (burn.charge.lambda === null) return null;
   const even = prepareBurn({
     fuel,
@@ -258,7 +258,8 @@ function stoichiometricK(burn: Burn): number | null {
     amount: { by: 'lambda', lambda: 1 },
     heat: { heat: 'adiabatic', lossShare: 0 },
     cooledToK: [],
-    ...(admits && { admits }),
+    ...(allowed && { allowed }),
+    ...(barred && { barred }),
     ...(ions && { ions }),
   });
   const state = even.kind === 'burn' ? even.flame() : null;

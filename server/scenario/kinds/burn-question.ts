@@ -6,8 +6,6 @@
 import type { BurnInput, OxidantAmount } from '../../core/burn/burn.ts';
 import type { BurnParameter } from '../../core/burn/charge-directions.ts';
 import type { Formula } from '../../core/substance/formula.ts';
-import { compositionKey } from '../../core/substance/formula.ts';
-import type { ThermoPhase } from '../../core/substance/phases.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
 import type { AmountEntry, HeldEntry } from '../burn-readers.ts';
@@ -70,7 +68,6 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
     written.sizes.dropletSize ?? unknown,
     written.sizes.particleSize ?? unknown,
   ];
-  const admits = admittance(written.allowed, written.barred);
   return {
     quantities: [...scalars, ...ofFuel, ...ofOxidant],
     roles: [...scalarRoles, ...streamRoles('fuel', fuel, held), ...streamRoles('oxidant', oxidant, held)],
@@ -93,7 +90,8 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
         ...(zone ? { zone: amountOf(zone.by, zoneValue) } : {}),
         ...(written.frozenBelow ? { frozenBelowK } : {}),
         ...(written.coolingPressure ? { coolingPressurePa } : {}),
-        ...(admits ? { admits } : {}),
+        ...(written.allowed ? { allowed: written.allowed } : {}),
+        ...(written.barred.length > 0 ? { barred: written.barred } : {}),
         ...(written.ions ? { ions: true } : {}),
       };
     },
@@ -144,17 +142,4 @@ function streamRoles(stream: 'fuel' | 'oxidant', { elements }: UncertainStream, 
 function amountOf(by: WrittenAmount['by'], value: number): OxidantAmount {
   if (by === 'lambda') return { by, lambda: value };
   return by === 'equivalence-ratio' ? { by, ratio: value } : { by, kgPerKg: value };
-}
-
-/** Which phases may form; null where all may. A formula without a phase stands for all its phases. */
-function admittance(
-  allowed: readonly Formula[] | null,
-  barred: readonly Formula[],
-): ((phase: ThermoPhase) => boolean) | null {
-  if (!allowed && barred.length === 0) return null;
-  const isOf = (formula: Formula, phase: ThermoPhase): boolean =>
-    compositionKey(formula) === compositionKey(phase.formula) &&
-    (formula.phase === undefined || formula.phase === phase.formula.phase);
-  return (phase) =>
-    (!allowed || allowed.some((formula) => isOf(formula, phase))) && !barred.some((formula) => isOf(formula, phase));
 }

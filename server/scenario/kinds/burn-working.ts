@@ -15,7 +15,8 @@ import type { burnEntries } from './burn-entries.ts';
 import type { BurnNames } from './burn-facts.ts';
 import type { SolvedBurn } from './burn-solved.ts';
 import type { WrittenBurn } from './burn-question.ts';
-import { certificateRows, isSlow } from './burn-tables.ts';
+import { isSlow } from './burn-products.ts';
+import { certificateRows } from './burn-tables.ts';
 
 /** Where the entries stand, by their keys. */
 export type EntryPlaces = Partial<Record<keyof typeof burnEntries, Place>>;

@@ -1,8 +1,7 @@
 // `burn`: a fuel burnt in an oxidant to chemical equilibrium, and its products as they cool. What findings rest on is solved
 // with the definition: the flame and its zone, and where they are written the states at walls and, for sizes, the flame at
 // λ = 1; all else (uncertainty, cooled states, the path) when somebody reads it. The states are core/burn's; this file joins entries to them.
-// A path may be handed to a worker one day: what would be sent is the question's input, which is plain data but for
-// `admits`, and what comes back is read by burn-tables.ts alone.
+// The path is long work, asked for by whoever looks at it (burn-path-tables.ts).
 
 import type { Definition, Entry, Span } from '../../../grammar/tree.ts';
 import { prepareBurn } from '../../core/burn/prepare-burn.ts';

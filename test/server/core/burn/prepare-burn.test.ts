@@ -6,7 +6,7 @@ import { heatingValueOfFuel } from '../../../../server/core/balance/heating-valu
 import type { BurnInput, BurnState, BurnStream } from '../../../../server/core/burn/burn.ts';
 import { prepareBurn } from '../../../../server/core/burn/prepare-burn.ts';
 import { amountOf, peakGases } from '../../../../server/core/burn/products.ts';
-import { atomGap, burn, mixed, plainAir, solved, stream } from './streams.ts';
+import { atomGap, burn, formulaOf, mixed, plainAir, solved, stream } from './streams.ts';
 
 const methane = stream('methane');
 const slurry = mixed(
@@ -283,7 +283,7 @@ describe('which products', () => {
   test('a barred one is in no state', () => {
     const barred = burn(methane, {
       amount: { by: 'lambda', lambda: 0.8 },
-      admits: ({ formula }) => formula.text !== 'CO',
+      barred: [formulaOf('CO')],
     });
     const state = solved(barred.flame());
     expect(state.candidates.phases.some(({ id }) => id === 'CO(g)')).toBe(false);

@@ -4,7 +4,7 @@ import { formationEnthalpyOf } from '../../../../server/core/balance/formation-e
 import type { Burn, BurnInput, BurnState, BurnStateOrNone, BurnStream } from '../../../../server/core/burn/burn.ts';
 import { prepareBurn } from '../../../../server/core/burn/prepare-burn.ts';
 import { findSubstance } from '../../../../server/core/substance/catalogue.ts';
-import { parseFormula } from '../../../../server/core/substance/formula.ts';
+import { parseFormula, type Formula } from '../../../../server/core/substance/formula.ts';
 import { phasesOfFormula, propertiesOfPhase } from '../../../../server/core/substance/phases.ts';
 
 /** A catalogue substance at 25 °C. */
@@ -58,6 +58,13 @@ function gasEnthalpy(text: string, temperatureK: number): number {
   const formula = parseFormula(text, 'g');
   const phase = formula.kind === 'formula' ? phasesOfFormula(formula)[0] : undefined;
   return (phase && propertiesOfPhase(phase, temperatureK)?.enthalpyJPerMol) ?? Number.NaN;
+}
+
+/** A formula without a phase, unless one is written. */
+export function formulaOf(text: string): Formula {
+  const formula = parseFormula(text);
+  if (formula.kind !== 'formula') throw new Error(text);
+  return formula;
 }
 
 /** A burn of a fuel in plain air at 1 bar and λ = 1, adiabatic, with what is given changed. */
