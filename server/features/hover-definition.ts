@@ -2,6 +2,7 @@
 // figures. Shows what the evaluation found and works nothing out. Invariant: a definition without figures still says its
 // kind and name.
 import type { EvaluatedDefinition, Place } from '../scenario/scenario.ts';
+import { routeText, screeningText } from '../wording/hazards.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { capitalised, listed } from '../wording/words.ts';
 import { figureText } from '../wording/quantities.ts';
@@ -29,6 +30,7 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
     ...shown.map((figure) => ({ label: figure.label, text: figureText(figure) })),
     ...ofBurn,
     ...slateLines(definition),
+    ...outlookLines(definition),
     ...absentLines(definition),
     ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),
   ];
@@ -49,6 +51,15 @@ function slateLines({ tables }: EvaluatedDefinition): HoverLine[] {
     typeof product === 'string' && typeof amount === 'number' ? [`${formatNumber(amount)} ${product}`] : [],
   );
   return products && products.length > 0 ? [{ label: 'Burnt to, in mol/kg', text: products.join(', ') }] : [];
+}
+
+/** Which code governs it aboard a ship, and what the hazard rules came to. */
+function outlookLines({ tables, screening }: EvaluatedDefinition): HoverLine[] {
+  const [route] = tables.find(({ id }) => id === 'approval-route')?.rows ?? [];
+  return [
+    ...(route ? [{ label: 'As a ship’s fuel', text: shortened(routeText(route)) }] : []),
+    ...(screening ? [{ sentence: screeningText(screening) }] : []),
+  ];
 }
 
 /** The first figures that could not be had for want of data, with what is missing. */

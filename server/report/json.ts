@@ -5,6 +5,8 @@
 
 import type { Severity } from '../findings/finding.ts';
 import type { EvaluatedDefinition, Expectation, Figure, Place, Table } from '../scenario/scenario.ts';
+import type { Screening } from '../scenario/screening.ts';
+import { reportCaution } from '../wording/hazards.ts';
 import { readingIn } from '../wording/quantities.ts';
 import type { ReportedFile } from './gather.ts';
 import { Lines } from './positions.ts';
@@ -30,6 +32,15 @@ export interface JsonDefinition {
   readonly line: number;
   readonly figures: readonly JsonFigure[];
   readonly tables: readonly JsonTable[];
+  /** What the hazard rules came to; absent where there is nothing for them to look at. */
+  readonly screening?: JsonScreening;
+}
+
+export interface JsonScreening {
+  readonly rulesLookedAt: number;
+  readonly found: readonly string[];
+  readonly unrecorded: readonly string[];
+  readonly caution: string | null;
 }
 
 export interface JsonFigure {
@@ -114,13 +125,17 @@ function jsonFile({ file, used, findings }: ReportedFile, extent: Extent): JsonF
   };
 }
 
-function jsonDefinition({ kind, name, place, figures, tables }: EvaluatedDefinition, lines: Lines): JsonDefinition {
+function jsonDefinition(
+  { kind, name, place, figures, tables, screening }: EvaluatedDefinition,
+  lines: Lines,
+): JsonDefinition {
   return {
     kind,
     name,
     line: lines.position(place.start).line,
     figures: figures.flatMap(jsonFigure),
     tables: tables.map(jsonTable),
+    ...(screening ? { screening: jsonScreening(screening) } : {}),
   };
 }
 
@@ -136,6 +151,11 @@ function jsonTable({ id, columns, rows, gaps = [] }: Table): JsonTable {
     rows: rows.map((row) => row.map((cell) => (typeof cell === 'number' && !Number.isFinite(cell) ? null : cell))),
     ...(gaps.length > 0 ? { gaps: gaps.map(({ fromK, toK }) => ({ from: fromK, to: toK })) } : {}),
   };
+}
+
+function jsonScreening(screening: Screening): JsonScreening {
+  const { rulesLookedAt, found, unrecorded } = screening;
+  return { rulesLookedAt, found, unrecorded, caution: reportCaution([screening]) };
 }
 
 function jsonExpectation({ place, holds, found, unit }: Expectation, lines: Lines): JsonExpectation {

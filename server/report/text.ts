@@ -5,6 +5,7 @@
 
 import type { Finding, Severity } from '../findings/finding.ts';
 import type { EvaluatedDefinition, EvaluatedFile, Table } from '../scenario/scenario.ts';
+import { reportCaution, routeText, screeningText } from '../wording/hazards.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { figureCells, toldText } from '../wording/quantities.ts';
 import { counted, countedFindings, listed, sharingHeads } from '../wording/words.ts';
@@ -35,7 +36,7 @@ export function textReport(files: readonly ReportedFile[], { extent, paint, widt
     ...(extent === 'evaluate' && !used ? fileBlocks(file, paint, room) : []),
     ...findingBlocks(findings, linesOf, paint, room),
   ]);
-  return `${[...blocks, ...notEvaluated(files, room), summary(files, paint)].join('\n\n')}\n`;
+  return `${[...blocks, ...notEvaluated(files, room), ...caution(files, room), summary(files, paint)].join('\n\n')}\n`;
 }
 
 const NOT_EVALUATED = 'kind/not-evaluated';
@@ -95,6 +96,7 @@ function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: n
     ...equations(definition).map((equation) => `  ${cut(printable(equation), width - 2)}`),
     ...(rows.length === 0 ? [] : [indented(columns(rows), 2)]),
     ...missing(definition, width).map((line) => paint.faint(line)),
+    ...outlook(definition, width),
     ...tables
       .filter((table) => saysSomething(table, kind))
       .map((table) => `\n  ${paint.faint(table.label)}\n${indented([...tableLines(table), ...gapLines(table)], 4)}`),
@@ -146,6 +148,8 @@ function gapLines({ gaps = [] }: Table): string[] {
 function saysSomething({ id, columns: heads, rows }: Table, kind: string): boolean {
   const difference = heads.findIndex((head) => head.id === 'difference');
   if (difference >= 0) return rows.some((row) => row[difference] !== 0);
+  // The route is told in a sentence.
+  if (id === 'approval-route') return false;
   const isProof =
     kind === 'burn' && (id === 'element-balance' || id === 'certificate' || id === 'carbon-against-freezing');
   return rows.length > 0 && !(kind === 'substance' && id === 'elements') && !isProof;
@@ -164,6 +168,23 @@ function expectationsBlock(file: EvaluatedFile, paint: Paint, width: number): st
     return `  ${mark} ${cut(printable(claim), width - 4)}  ${paint.faint(value)}`;
   });
   return [['Expected', ...lines].join('\n')];
+}
+
+/** One for the whole report. */
+function caution(files: readonly ReportedFile[], width: number): string[] {
+  const screenings = files.flatMap(({ file }) => file.definitions.flatMap(({ screening }) => screening ?? []));
+  const text = reportCaution(screenings);
+  return text === null ? [] : [wrapped(printable(text), width)];
+}
+
+/** Which code governs it, and what the hazard rules came to. */
+function outlook({ tables, screening }: EvaluatedDefinition, width: number): string[] {
+  const [route] = tables.find(({ id }) => id === 'approval-route')?.rows ?? [];
+  const texts = [
+    ...(route ? [`As a ship’s fuel: ${routeText(route)}`] : []),
+    ...(screening ? [screeningText(screening)] : []),
+  ];
+  return texts.flatMap((text) => wrapped(printable(text), width - 2).split('\n')).map((line) => `  ${line}`);
 }
 
 /** One sentence instead of one note a definition. */

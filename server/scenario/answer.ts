@@ -114,6 +114,7 @@ function answerDefinition(statement: Definition, placed: PlacedSection, context:
     tables: [],
     absent: new Map(),
     lines: answer?.lines ?? [],
+    screening: answer?.screening,
   };
   if (statement.name) context.mean(statement.name.span, { kind: 'definition', name, definition });
   if (!answer) return { kind: 'unevaluated', definition };

@@ -5,16 +5,15 @@
 
 import type { Definition, Entry, Span } from '../../grammar/tree.ts';
 import { isPartly } from '../core/hazard/blanket-rules.ts';
-import { hazardsOf, judgePairs, pairsToJudge } from '../core/hazard/find-hazards.ts';
+import { hazardsOf, judgePairs, pairsToJudge, rulesLookedAt } from '../core/hazard/find-hazards.ts';
 import type { Hazard } from '../core/hazard/find-hazards.ts';
 import { isMetal } from '../core/hazard/store.ts';
 import type { Store } from '../core/hazard/store.ts';
 import type { Context } from './context.ts';
 import { isHazardCode } from './hazard-fact.ts';
 import type { HazardFact, HazardPartner } from './hazard-fact.ts';
-import type { PortionShare } from './material.ts';
-import { storedBlend } from './stored-blend.ts';
-import type { Keeping } from './stored-blend.ts';
+import type { Screening } from './screening.ts';
+import type { Keeping, StoredBlend } from './stored-blend.ts';
 
 /** The entries that say how it is kept, as far as they are written. */
 export interface KeepingEntries {
@@ -32,12 +31,12 @@ export interface HazardPart {
 export function reportHazards(
   definition: Definition,
   parts: readonly HazardPart[],
-  shares: readonly PortionShare[],
-  keeping: Keeping,
+  stored: StoredBlend,
+  keeping: Pick<Keeping, 'blanket'>,
   entries: KeepingEntries,
   context: Context,
-): void {
-  const { store, partOf } = storedBlend(shares, keeping);
+): Screening {
+  const { store, partOf } = stored;
   const questions = pairsToJudge(store);
   const judged =
     questions.length === 0 ? [] : context.scope.longWork(judgePairs, `hazard pairs ${keyOf(questions)}`, questions);
@@ -75,9 +74,18 @@ export function reportHazards(
     };
     context.report(place, fact);
   }
-  const isKnown = store.portions.every(({ hazards: { families, classes } }) => families.length + classes.length > 0);
-  if (isKnown && judged !== null && keeping.blanket !== undefined)
-    reportIdle(definition, new Set(hazards.map(({ code }) => code)), context);
+  const found = new Set(hazards.map(({ code }) => code));
+  const unrecorded = store.portions.filter(({ hazards: own }) => own.families.length + own.classes.length === 0);
+  if (unrecorded.length === 0 && judged !== null && keeping.blanket !== undefined)
+    reportIdle(definition, found, context);
+  return {
+    rulesLookedAt: rulesLookedAt(store, judged !== null),
+    found: [...found],
+    unrecorded: [...new Set(unrecorded.map(({ name }) => name))],
+    substances: [
+      ...new Map(stored.materials.map(({ name, card: { hazards: own } }) => [name, { name, hazards: own }])).values(),
+    ],
+  };
 }
 
 /** Air that nobody spoke of is a cautious guess, and a guess is no error. */

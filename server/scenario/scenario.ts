@@ -11,6 +11,7 @@ import type { Fact } from './facts.ts';
 import type { AskLongWork } from './long-work.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
+import type { Screening } from './screening.ts';
 import type { Working } from './working.ts';
 
 export interface EvaluatedScenario {
@@ -55,6 +56,8 @@ export interface EvaluatedDefinition {
   readonly absent: Absent;
   /** Per line of the definition (by its index in the tree): what was worked out for it. */
   readonly lines: readonly LineResult[];
+  /** What the hazard rules came to; absent where there is nothing for them to look at. */
+  readonly screening?: Screening | undefined;
 }
 
 /**

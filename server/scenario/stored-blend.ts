@@ -5,6 +5,8 @@
 import { hazardsOrProven } from '../core/hazard/proven-hazards.ts';
 import { gasOver, phaseAt, portionOf } from '../core/hazard/store.ts';
 import type { ContactMaterial, GasOver, Store, StoredPhase, StoredPortion } from '../core/hazard/store.ts';
+import { quantityOf, quantityOfOutcome, type Quantity } from '../core/quantity/quantity.ts';
+import { propagate } from '../core/quantity/uncertainty.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import type { Phase } from '../core/substance/formula.ts';
 import type { ExtinguishingAgent } from '../core/substance/hazards.ts';
@@ -15,6 +17,10 @@ export interface StoredBlend {
   readonly store: Store;
   /** By index of the store's portions: which of the definition's own portions it belongs to. */
   readonly partOf: readonly number[];
+  /** By the same index: what it is a portion of, with its card. */
+  readonly materials: readonly Material[];
+  /** By the same index: mass shares of the whole with their uncertainty. */
+  readonly massShares: () => readonly Quantity[];
 }
 
 export interface Keeping {
@@ -30,16 +36,20 @@ export interface Keeping {
 export function storedBlend(shares: readonly PortionShare[], keeping: Keeping): StoredBlend {
   const portions: StoredPortion[] = [];
   const partOf: number[] = [];
-  const add = (material: Material, massShare: number, part: number): void => {
+  const materials: Material[] = [];
+  const chains: (readonly Quantity[])[] = [];
+  const add = (material: Material, massShare: number, chain: readonly Quantity[], part: number): void => {
     if (material.portions) {
-      for (const own of material.portions) add(own.material, massShare * own.mass.value, part);
+      for (const own of material.portions) add(own.material, massShare * own.mass.value, [...chain, own.mass], part);
     } else if (massShare > 0) {
       portions.push(storedPortion(material, massShare, keeping));
       partOf.push(part);
+      materials.push(material);
+      chains.push(chain);
     }
   };
   shares.forEach(({ material, mass }, part) => {
-    add(material, mass.value, part);
+    add(material, mass.value, [mass], part);
   });
   const { kind, temperatureK, pressurePa, contact, extinguishing } = keeping;
   const store = {
@@ -51,7 +61,15 @@ export function storedBlend(shares: readonly PortionShare[], keeping: Keeping): 
     contact,
     extinguishing,
   };
-  return { store, partOf };
+  return { store, partOf, materials, massShares: () => chains.map(productOf) };
+}
+
+/** The share of a share of a share. */
+function productOf(chain: readonly Quantity[]): Quantity {
+  const [only, ...others] = chain;
+  if (only && others.length === 0) return only;
+  const [product] = propagate(chain, (values) => [values.reduce((left, right) => left * right, 1)]);
+  return product ? quantityOfOutcome(product) : quantityOf(NaN);
 }
 
 function gasOverOf(blanket: Material | null | undefined): GasOver {
@@ -73,6 +91,7 @@ function storedPortion(material: Material, massShare: number, { temperatureK, pr
   const usualPhase = phaseWords[material.phase ?? ''] ?? null;
   const molPerKg = new Map([...elements].map(([symbol, quantity]) => [symbol, quantity.value]));
   const property = (id: string): number | null => card.properties.find((one) => one.id === id)?.quantity.value ?? null;
+  const lower = property('lower-flammable-limit');
   return {
     name: material.name,
     massShare,
@@ -85,10 +104,10 @@ function storedPortion(material: Material, massShare: number, { temperatureK, pr
     formationEnthalpyJPerKg: formationEnthalpy?.value ?? null,
     heatCapacityJPerKgK: heatCapacity?.terms.length === 1 ? (heatCapacity.terms[0]?.jPerKgK ?? null) : null,
     flashPointK: property('flash-point'),
-    autoignitionK: null,
+    autoignitionK: property('autoignition-temperature'),
     ...points,
     decompositionPointK: null,
-    flammableLimits: null,
+    flammableLimits: lower === null ? null : { lower, upper: property('upper-flammable-limit'), temperatureK: null },
   };
 }
 

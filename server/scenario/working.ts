@@ -62,7 +62,15 @@ export type MethodId =
   | 'preheat'
   | 'heat-above-exhaust'
   | 'peak-gas'
-  | 'burn-out';
+  | 'burn-out'
+  | 'blend-flash-point'
+  | 'le-chatelier'
+  | 'limiting-oxygen'
+  | 'water-contact'
+  | 'own-hydrogen'
+  | 'ullage-hydrogen'
+  | 'ullage-pressure'
+  | 'ullage-water';
 
 export type AssumptionId =
   | 'reference-state'
@@ -87,4 +95,7 @@ export type AssumptionId =
   | 'no-other-loss'
   | 'kinetics-decide'
   | 'carbonate-on-cooling'
-  | 'slow-solids';
+  | 'slow-solids'
+  | 'vapours-by-layers'
+  | 'usual-oil-limit'
+  | 'everything-reacts';

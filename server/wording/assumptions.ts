@@ -37,4 +37,8 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'carbonate-on-cooling': 'Carbonate is made as the gas cools, seldom in the flame itself.',
   'slow-solids':
     'Hydrogen carbonates and hydrates take hours and moisture: where they appear they are a limit, not a forecast.',
+  'vapours-by-layers':
+    'Vapours follow Raoult’s law; water and polar liquids on one side and oils on the other exert their pressures as if they did not mix, which errs towards danger.',
+  'usual-oil-limit': 'Where no lower limit of an oil’s vapour is recorded, 0.7 % is taken.',
+  'everything-reacts': 'All that can react does, whatever the time it takes: an upper bound.',
 };

@@ -3,7 +3,8 @@
 // Knows no rule of what must not meet. Invariants: no code of the GHS table is without words; nothing is ever called safe.
 
 import { sourceText } from '../scenario/material-card.ts';
-import type { MaterialCard } from '../scenario/scenario.ts';
+import type { MaterialCard, Table } from '../scenario/scenario.ts';
+import type { Screening } from '../scenario/screening.ts';
 import { formatNumber } from './numbers.ts';
 import { listed } from './words.ts';
 
@@ -101,6 +102,12 @@ const mostTold = 3;
  * It tells the gravest few, not all.
  */
 export function cautionText(name: string, hazards: Hazards): string | null {
+  const dangers = gravestDangers(hazards);
+  return dangers === null ? null : `Caution, ${name}: ${dangers.text}. ${standingCaution}`;
+}
+
+/** The gravest few dangers of a substance in a few words, and the rank of the first; null where nothing grave is recorded. */
+function gravestDangers(hazards: Hazards): Told | null {
   // Some metals are classed by what water does to them, though they take fire in air as well.
   const inAir = hazards.pyrophoric && hazards.pyrophoric.form === undefined ? [{ statement: 'H250' }] : [];
   const ofAllForms = [...inAir, ...hazards.classes.filter(({ form }) => form === undefined)].map(toldOf);
@@ -116,7 +123,42 @@ export function cautionText(name: string, hazards: Hazards): string | null {
   const grave = [...ofAllForms, ...ofOneForm].filter(({ order }) => order <= leastGrave);
   const words = [...new Set(grave.sort((a, b) => a.order - b.order).map(({ text }) => text))].slice(0, mostTold);
   const all = [...words, ...(hazards.families.includes('inert-gas') ? ['displaces the air to breathe'] : [])];
-  return all.length === 0 ? null : `Caution, ${name}: ${all.join('; ')}. ${standingCaution}`;
+  return all.length === 0 ? null : { text: all.join('; '), order: grave[0]?.order ?? rank.size };
+}
+
+/** The one caution of a report: its most dangerous substances, each once, and what stands above any program. */
+export function reportCaution(screenings: readonly Screening[]): string | null {
+  const substances = new Map(screenings.flatMap((screening) => screening.substances).map((card) => [card.name, card]));
+  const told = [...substances.values()].flatMap(({ name, hazards }) => {
+    const dangers = hazards && gravestDangers(hazards);
+    return dangers === null ? [] : [{ ...dangers, text: `${name.replaceAll('_', ' ')}: ${dangers.text}.` }];
+  });
+  if (told.length === 0) return null;
+  const shown = told.sort((a, b) => a.order - b.order).slice(0, mostSubstancesTold);
+  const others = told.length - shown.length;
+  const more = others === 0 ? [] : [`${others === 1 ? 'One' : String(others)} more with dangers of their own.`];
+  return ['Caution.', ...shown.map(({ text }) => text), ...more, standingCaution].join(' ');
+}
+
+const mostSubstancesTold = 5;
+
+/** What the rules came to for one definition: never that it is harmless. */
+export function screeningText({ rulesLookedAt, found, unrecorded }: Screening): string {
+  const fired =
+    found.length === 0
+      ? 'none fired'
+      : `found ${listed(found.map((code) => code.replace('hazard/', '').replaceAll('-', ' ')))}`;
+  const unseen =
+    unrecorded.length === 0
+      ? ''
+      : ` Nothing is recorded of the hazards of ${listed(unrecorded)}: rules cannot see that.`;
+  return `Hazard rules: ${String(rulesLookedAt)} looked at, ${fired}.${unseen}`;
+}
+
+/** The row of an approval route in a sentence. */
+export function routeText([instrument, status, since, knownAsOf, says]: Table['rows'][number]): string {
+  const standing = status === 'none' ? '' : ` (${String(status)}, since ${String(since)})`;
+  return `${String(instrument)}${standing}, as known in ${String(knownAsOf)}. ${String(says)}`;
 }
 
 /** What every report and first hover of such a substance says beside its dangers. */

@@ -283,4 +283,68 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     validity:
       'Single particles without slip or ignition delay: good within a factor of about two. Sprays burn out later, as neighbours share the oxygen. A blend is judged portion by portion, as if each came by itself.',
   },
+  'blend-flash-point': {
+    words: 'The temperature at which the vapours over the liquid portions together reach their lower flammable limit.',
+    equation: 'Σ xᵢ γᵢ pᵢ(T) / (p Lᵢ(T)) = 1',
+    symbols:
+      'xᵢ mole share of portion i in its layer, γᵢ activity coefficient (1 but for alcohols and acetone with water), pᵢ its vapour pressure through its own flash and boiling points, p 1 atm, Lᵢ its lower limit',
+    validity:
+      'Alcohol with water: within 5 K of published values. Other blends: an estimate for screening, to be measured (ISO 2719, ISO 3679) before anything rests on it. A single liquid has its own flash point.',
+  },
+  'le-chatelier': {
+    words: 'The limits of the vapours, each weighed by its share of the vapour over the blend (Le Chatelier 1891).',
+    equation: '1 / L = Σ yᵢ / Lᵢ(T);  Lᵢ(T) = Lᵢ − 3138 J/mol (T − 25 °C) / ΔHᵢ per cent',
+    symbols:
+      'yᵢ share of vapour i without air, Lᵢ its limit, ΔHᵢ its net heat of combustion; the second equation (Burgess and Wheeler, after Zabetakis 1965) is for the lower limit and for vapours of C, H and O alone',
+    validity:
+      'In air at about 1 atm. Good for paraffins among themselves; hydrogen, ethers and carbon disulphide, cool flames, mist and foam keep to no such rule.',
+  },
+  'limiting-oxygen': {
+    words: 'The least oxygen in nitrogen in which each vapour burns, weighed by the oxygen that each needs.',
+    equation: 'O = Σ yᵢ / Σ (yᵢ / Oᵢ)',
+    symbols: 'yᵢ share of vapour i without air, Oᵢ its limiting oxygen, or its lower limit times its oxygen demand',
+    validity:
+      'At room temperature and about 1 atm, nitrogen as the inert gas; inerted tanks are kept well below it (8 % by volume and less).',
+  },
+  'water-contact': {
+    words:
+      'Everything that reacts with water does so to hydroxide and gas, in so much water that what can dissolve does.',
+    equation: 'q = Σ wᵢ qᵢ / Mᵢ;  V = Σ wᵢ νᵢ Vm / Mᵢ',
+    symbols:
+      'wᵢ mass share of portion i, Mᵢ its molar mass, qᵢ heat and νᵢ mol of gas by a mol of it, Vm 24.79 L/mol (25 °C, 1 bar)',
+    validity:
+      'An upper bound without a rate: oil around a metal, crusts and little water slow it down, and hydrogen that burns gives further heat.',
+  },
+  'own-hydrogen': {
+    words: 'Hydrogen by the written reactions of the portions with each other, pair by pair.',
+    equation: 'V = Σ n(H₂) Vm',
+    symbols: 'n(H₂) mol of hydrogen of a pair by kg of the blend, Vm 24.79 L/mol (25 °C, 1 bar)',
+    validity:
+      'An upper bound: what reacts with two portions is counted with both. Walls and moisture let in are not counted.',
+  },
+  'ullage-hydrogen': {
+    words: 'Hydrogen made in the tank washes the gas out over the blend, well mixed, at the stored pressure.',
+    equation: 'y = 1 − exp(−n ρ R T / (p u));  u = (1 − f) / f',
+    symbols:
+      'n mol of hydrogen by kg of the blend, ρ its density, f filled share of the tank, T and p its state, R gas constant',
+    validity:
+      'As if all that can be made were made at once. Above the lower limit (4 % in air) the gas burns where it meets air.',
+  },
+  'ullage-pressure': {
+    words: 'Hydrogen made in a closed tank adds its pressure.',
+    equation: 'Δp = n ρ R T / u;  u = (1 − f) / f',
+    symbols:
+      'n mol of hydrogen by kg of the blend, ρ its density, f filled share of the tank, T its temperature, R gas constant',
+    validity:
+      'As if all that can be made were made and nothing were let out, at the stored temperature: the reaction’s heat adds to it.',
+  },
+  'ullage-water': {
+    words:
+      'How much water has to get in for its hydrogen to bring the gas over the blend to the lower limit of hydrogen.',
+    equation: 'w = −ln(1 − L) p u M(H₂O) / (R T ρ h);  u = (1 − f) / f',
+    symbols:
+      'L lower limit of hydrogen in air, h mol of hydrogen by mol of water, ρ density of the blend, f filled share of the tank, T and p its state, R gas constant, M(H₂O) molar mass of water',
+    validity:
+      'All that water reacts, and the tank is vented and well mixed. Under a full tank’s small ullage it is little.',
+  },
 };

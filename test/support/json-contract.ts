@@ -45,6 +45,14 @@ const definition = z.strictObject({
   line: position,
   figures: z.array(figure),
   tables: z.array(table),
+  screening: z
+    .strictObject({
+      rulesLookedAt: z.number().int().positive(),
+      found: z.array(z.string().regex(/^hazard\/[a-z]+(-[a-z]+)*$/)),
+      unrecorded: z.array(z.string()),
+      caution: z.string().nullable(),
+    })
+    .optional(),
 });
 
 const value = z.strictObject({

@@ -42,6 +42,13 @@ export const allRules: readonly RuleWords[] = [
   foundPairWords,
 ].map(({ id, code, happens, mend, source }) => ({ id, code, happens, mend, source }));
 
+/** How many rules `hazardsOf` looks at for a store; without `allJudged` an answer about pairs is still awaited. */
+export function rulesLookedAt(store: Store, allJudged: boolean): number {
+  // What is in an oxidant is meant to be together.
+  const ofPairs = store.kind === 'oxidant' ? 0 : meetingRules.length + (allJudged ? 1 : 0);
+  return aloneRules.length + storageRules.length + contactRules.length + ofPairs;
+}
+
 /** Two portions whose reaction their state of lowest energy must decide, and what it says: that takes long. */
 export interface PairQuestion {
   readonly giver: StoredPortion;
@@ -100,6 +107,14 @@ function meetings(store: Store, judged: readonly JudgedPair[]): readonly Hazard[
     const heat = pair.equilibrium === null ? {} : { heatJPerKg: pair.equilibrium.heatJPerKg * share };
     return hazardOf(foundPairWords, pair.severity, order, heat);
   });
+}
+
+/**
+ * Hydrogen that the portions make of each other in their tank, mol per kg of the blend: the sum over the pairs that written
+ * rules name. What takes part in two pairs counts in both, so it is an upper bound; walls are not counted.
+ */
+export function ownHydrogenMolPerKg(store: Store): number {
+  return walkMeetings(store, () => null).reduce((sum, { numbers }) => sum + (numbers.gasMolPerKg?.['H2'] ?? 0), 0);
 }
 
 type Order = readonly [first: number, second: number];

@@ -50,6 +50,45 @@ export function ullageOf(store: Store, temperatureK: number = store.temperatureK
   };
 }
 
+/** The vapours over the liquids as one fuel in air: limits by Le Chatelier's rule, each vapour's share without the gas. */
+export interface VapourLimits {
+  readonly lower: number;
+  /** Null where the upper limit of one is not known. */
+  readonly upper: number | null;
+  readonly limitingOxygenShare: number;
+  readonly vapours: readonly {
+    readonly portion: StoredPortion;
+    readonly moleShare: number;
+    /** At the temperature asked for. */
+    readonly lower: number;
+    /** No limit of its own is recorded: it is that of heavy oils. */
+    readonly isUsual: boolean;
+  }[];
+}
+
+/** Of the vapours at a temperature (the stored one if not given); null where none of them can burn. */
+export function vapourLimitsOf(store: Store, temperatureK: number = store.temperatureK): VapourLimits | null {
+  const vapours = sharesAt(vapoursOf(store), temperatureK, store.pressurePa);
+  const total = vapours.reduce((sum, { share }) => sum + share, 0);
+  if (!(total > 0)) return null;
+  const parts = vapours.map(({ portion, share, lower }) => ({
+    portion,
+    moleShare: share / total,
+    lower,
+    isUsual: portion.flammableLimits === null,
+  }));
+  const overUpper = parts.reduce<number | null>((sum, { portion, moleShare }) => {
+    const upper = portion.flammableLimits?.upper ?? null;
+    return sum === null || upper === null ? null : sum + moleShare / upper;
+  }, 0);
+  return {
+    lower: 1 / parts.reduce((sum, { moleShare, lower }) => sum + moleShare / lower, 0),
+    upper: overUpper === null ? null : 1 / overUpper,
+    limitingOxygenShare: limitingOxygenOf(parts),
+    vapours: parts,
+  };
+}
+
 /** Where the vapours together reach their lower limit, K; null where nothing in the blend has a flash point. */
 export function flashPointK(store: Store): number | null {
   const known = flashOf.get(store);

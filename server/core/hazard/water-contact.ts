@@ -25,7 +25,8 @@ export interface WaterContact {
   readonly withoutReaction: readonly string[];
 }
 
-const waterKgPerMol = 0.018015;
+/** kg per mol of water. */
+export const waterKgPerMol = 0.018015;
 /** 75 K of liquid water at 4.18 kJ/(kg K), and 2257 kJ/kg to evaporate it at 100 °C. */
 const steamJPerKg = 75 * 4180 + 2.257e6;
 
@@ -84,12 +85,28 @@ export function hydrogenOver(
   temperatureK: number,
   pressurePa: number,
 ): HydrogenOver {
-  const ullagePerBlend = (1 - filledShare) / filledShare;
-  const hydrogenMolPerM3 = (hydrogenMolPerKg * densityKgPerM3) / ullagePerBlend;
+  const hydrogenMolPerM3 = (hydrogenMolPerKg * densityKgPerM3) / ullagePerBlend(filledShare);
   const gasMolPerM3 = pressurePa / (molarGasConstantJPerMolK * temperatureK);
   return {
     // A stirred volume that hydrogen washes out: 1 - exp(-made / held).
     ventedShare: 1 - Math.exp(-hydrogenMolPerM3 / gasMolPerM3),
     closedRisePa: hydrogenMolPerM3 * molarGasConstantJPerMolK * temperatureK,
   };
+}
+
+/** The hydrogen, mol per kg of the blend, that brings the gas over it to a share, as `hydrogenOver` counts with venting. */
+export function hydrogenForShare(
+  share: number,
+  densityKgPerM3: number,
+  filledShare: number,
+  temperatureK: number,
+  pressurePa: number,
+): number {
+  const gasMolPerM3 = pressurePa / (molarGasConstantJPerMolK * temperatureK);
+  return (-Math.log(1 - share) * gasMolPerM3 * ullagePerBlend(filledShare)) / densityKgPerM3;
+}
+
+/** m³ of gas over a m³ of the blend. */
+function ullagePerBlend(filledShare: number): number {
+  return (1 - filledShare) / filledShare;
 }

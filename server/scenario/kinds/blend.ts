@@ -12,15 +12,24 @@ import { extinguishingAgents } from '../../core/substance/hazards.ts';
 import { alkaliMetals } from '../../core/substance/elements.ts';
 import { referenceTemperatureK } from '../../core/substance/substance.ts';
 import { reportHazards } from '../blend-hazards.ts';
+import {
+  hazardFigures,
+  hazardFiguresOf,
+  hazardTables,
+  type HazardFigures,
+  type TankInputs,
+} from '../blend-hazard-figures.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
+import { lazily } from '../lazily.ts';
 import type { Material, MissingProperty, PortionShare } from '../material.ts';
 import { answerMaterial, materialFigures, type FigureRow, type MaterialAnswer } from '../material-figures.ts';
 import { mixOrReport, readParts, type Mixed, type Part } from '../mixing.ts';
 import type { PortionState } from '../portion-state.ts';
-import { formulasReader, materialReader, stateReader, wordsReader, type State } from '../readers.ts';
+import { formulasReader, materialReader, quantityReader, stateReader, wordsReader, type State } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
-import type { Keeping } from '../stored-blend.ts';
+import { storedBlend, type Keeping } from '../stored-blend.ts';
+import type { Screening } from '../screening.ts';
 import { portionStates, solidsVolumeShare, type StoredAt } from '../storage.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
@@ -48,6 +57,12 @@ const entries = {
     reader: wordsReader(extinguishingAgents),
     help: 'What is kept ready to put its fire out.',
   },
+  filling: {
+    name: 'filling',
+    reader: quantityReader('%', 'a share, such as `90 %`', { range: 'share' }),
+    help: 'How far it fills its tank: what is left is where its vapour and hydrogen gather.',
+    default: { text: '95 %', source: 'common practice: the fullest that fuel tanks are filled' },
+  },
   products: {
     name: 'products',
     reader: formulasReader,
@@ -65,7 +80,12 @@ const solidsRow = {
   method: 'solids-share',
 } as const satisfies FigureRow;
 
-const evaluated: EvaluatedKind = { entries, lines: ['portion'], figures: [...blendFigures, solidsRow], evaluate };
+const evaluated: EvaluatedKind = {
+  entries,
+  lines: ['portion'],
+  figures: [...blendFigures, solidsRow, ...hazardFigures],
+  evaluate,
+};
 
 export const blend: Kind = {
   kind: 'blend',
@@ -103,23 +123,43 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     contact: read.contact?.value ?? [],
     extinguishing: read.extinguishing?.value ?? [],
   };
-  if (!broken.has('stored')) {
+  const inTank = broken.has('stored') ? null : storedBlend(mixed.shares, keeping);
+  let screening: Screening | undefined;
+  if (inTank) {
     const written = {
       stored: read.stored?.entry,
       blanket: read.blanket?.entry,
       contact: read.contact?.entry,
       extinguishing: read.extinguishing?.entry,
     };
-    reportHazards(definition, parts, mixed.shares, keeping, written, context);
+    screening = reportHazards(definition, parts, inTank, keeping, written, context);
   }
-  return {
-    figures: [...answer.figures, ...solidsFigure(mixed, states, stored, material)],
-    tables: [portionsTable(mixed.shares, energy), ...answer.tables],
-    absent: answer.absent,
-    lines: lineResults(parts, mixed.shares, energy, states),
-    material,
+  const tank: TankInputs = {
+    ...stored,
+    density: material.density,
+    filling: read.filling?.value.quantity ?? quantityOf(usualFilling),
   };
+  let found: HazardFigures | undefined;
+  const ofHazards = (): HazardFigures =>
+    (found ??= inTank ? hazardFiguresOf(inTank, tank) : { figures: [], absent: new Map() });
+  return lazily<KindAnswer>(
+    {
+      figures: [],
+      tables: [],
+      absent: new Map(),
+      lines: lineResults(parts, mixed.shares, energy, states),
+      material,
+      screening,
+    },
+    {
+      figures: () => [...answer.figures, ...solidsFigure(mixed, states, stored, material), ...ofHazards().figures],
+      tables: () => [portionsTable(mixed.shares, energy), ...answer.tables, ...(inTank ? hazardTables(inTank) : [])],
+      absent: () => new Map([...answer.absent, ...ofHazards().absent]),
+    },
+  );
 }
+
+const usualFilling = 0.95;
 
 function materialOf(parts: readonly Part[], mixed: Mixed, name: string, products: Material['products']): Material {
   const missing = new Map<MissingProperty, readonly string[]>();

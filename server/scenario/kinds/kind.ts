@@ -8,6 +8,7 @@ import type { Material } from '../material.ts';
 import type { FigureRow } from '../material-figures.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 import type { Absent, Figure, LineResult, Table } from '../scenario.ts';
+import type { Screening } from '../screening.ts';
 
 export interface Kind {
   readonly kind: string;
@@ -31,6 +32,7 @@ export interface KindAnswer {
   readonly lines: readonly LineResult[];
   /** What the definition is as a portion of something else; null when it is no material or could not be worked out. */
   readonly material: Material | null;
+  readonly screening?: Screening | undefined;
   /** What it is as something to burn in; only an oxidant has one. */
   readonly stream?: OxidantStream | null;
 }

@@ -24,7 +24,7 @@ import type { PortionShare } from '../material.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 import { quantityReader, stateReader } from '../readers.ts';
 import type { Figure, LineResult, Table } from '../scenario.ts';
-import type { Keeping } from '../stored-blend.ts';
+import { storedBlend, type Keeping } from '../stored-blend.ts';
 import type { Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
@@ -176,8 +176,15 @@ function answerGas(
     contact: [],
     extinguishing: [],
   };
-  reportHazards(definition, parts, shares, keeping, { stored: undefined }, context);
-  return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null, stream };
+  const screening = reportHazards(
+    definition,
+    parts,
+    storedBlend(shares, keeping),
+    keeping,
+    { stored: undefined },
+    context,
+  );
+  return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null, stream, screening };
 }
 
 /** Mole shares of the wet gas, uncertain where its state or humidity is. */

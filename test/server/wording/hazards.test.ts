@@ -4,7 +4,17 @@ import { describe, expect, test } from 'vitest';
 import { allSubstances, findSubstance } from '../../../server/core/substance/catalogue.ts';
 import { ghsClasses } from '../../../server/core/substance/ghs.ts';
 import type { Hazards } from '../../../server/core/substance/hazards.ts';
-import { cautionText, dangerText, exposureText, hazardRows, transportText } from '../../../server/wording/hazards.ts';
+import type { Screening } from '../../../server/scenario/screening.ts';
+import {
+  cautionText,
+  dangerText,
+  exposureText,
+  hazardRows,
+  reportCaution,
+  screeningText,
+  transportText,
+} from '../../../server/wording/hazards.ts';
+import { evaluateText } from '../../support/facts.ts';
 
 function hazardsOf(name: string): Hazards {
   const hazards = findSubstance(name)?.hazards;
@@ -83,6 +93,51 @@ describe('rows', () => {
         expect(source, name).not.toBe('');
         expect(text, name).not.toBe('');
       }
+    }
+  });
+});
+
+describe('a report', () => {
+  const screeningOf = (lines: string): Screening => {
+    const screening = evaluateText(`blend it {\n${lines}\n}\n`).files[0]?.definitions[0]?.screening;
+    if (!screening) throw new Error('not screened');
+    return screening;
+  };
+  const grave = ['sodium', 'hydrazine', 'methanol', 'ethanol', 'gas_oil', 'carbon_monoxide', 'petrol'];
+
+  test('says how many rules were looked at, which fired, and never that it is safe', () => {
+    const quiet = screeningText(screeningOf('  100 % vegetable_oil'));
+    expect(quiet).toMatch(/^Hazard rules: \d{2} looked at, none fired\.$/);
+    expect(screeningText(screeningOf('  30 % mass sodium\n  rest gas_oil\n  blanket: argon'))).toContain(
+      'found water reactive.',
+    );
+  });
+
+  test('names what it cannot see', () => {
+    const text =
+      'substance additive {\n  phase: liquid\n  composition: 70 % C, 11 % H, 19 % O\n  density: 900 kg/m3\n}\n' +
+      'blend it {\n  2 % mass additive\n  rest gas_oil\n}\n';
+    const screening = evaluateText(text).files[0]?.definitions[1]?.screening;
+    expect(screening && screeningText(screening)).toContain('Nothing is recorded of the hazards of additive');
+  });
+
+  test('bears one caution, the gravest substances first and each once', () => {
+    const [first, second] = [
+      screeningOf(grave.map((name) => `  14 % ${name}`).join('\n') + '\n  2 % water'),
+      screeningOf('  100 % sodium'),
+    ];
+    const text = reportCaution([first, second]) ?? '';
+    expect(text.match(/sodium:/g)).toHaveLength(1);
+    expect(text).toContain('2 more with dangers of their own.');
+    expect(text.endsWith(standing.trim())).toBe(true);
+    expect(text.indexOf('sodium:')).toBeLessThan(text.indexOf('methanol:'));
+    expect(reportCaution([screeningOf('  100 % water')])).toBeNull();
+  });
+
+  test('of any substance: the word safe is never printed', () => {
+    for (const { name } of allSubstances().slice(0, 400)) {
+      const screening = screeningOf(`  100 % '${name}'`);
+      expect(`${screeningText(screening)} ${reportCaution([screening]) ?? ''}`).not.toMatch(/\bsafe\b/i);
     }
   });
 });
