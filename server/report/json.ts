@@ -49,6 +49,9 @@ export interface JsonFigure {
   readonly value: number;
   readonly unit: string;
   readonly uncertainty: number | null;
+  /** The ends of a band, of which `value` is one; both or neither. */
+  readonly low?: number;
+  readonly high?: number;
 }
 
 export interface JsonTable {
@@ -139,9 +142,12 @@ function jsonDefinition(
   };
 }
 
-function jsonFigure({ id, label, quantity, unit }: Figure): JsonFigure[] {
+function jsonFigure({ id, label, quantity, band, unit }: Figure): JsonFigure[] {
   const reading = finite(readingIn(quantity, unit));
-  return reading ? [{ id, label, ...reading }] : [];
+  if (!reading) return [];
+  const ends = band && { low: readingIn(band.low, unit).value, high: readingIn(band.high, unit).value };
+  const isBand = ends && Number.isFinite(ends.low) && Number.isFinite(ends.high);
+  return [{ id, label, ...reading, ...(isBand ? ends : {}) }];
 }
 
 function jsonTable({ id, columns, rows, gaps = [] }: Table): JsonTable {
@@ -170,7 +176,11 @@ function range(place: Place, lines: Lines): JsonRange {
 }
 
 /** The number as the contract takes it, or null when it is none. */
-function finite({ value, unit, uncertainty }: ReturnType<typeof readingIn>): Omit<JsonFigure, 'id' | 'label'> | null {
+function finite({
+  value,
+  unit,
+  uncertainty,
+}: ReturnType<typeof readingIn>): Pick<JsonFigure, 'value' | 'unit' | 'uncertainty'> | null {
   if (!Number.isFinite(value)) return null;
   return { value, unit, uncertainty: uncertainty !== null && Number.isFinite(uncertainty) ? uncertainty : null };
 }

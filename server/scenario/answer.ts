@@ -118,14 +118,14 @@ function answerDefinition(statement: Definition, placed: PlacedSection, context:
   };
   if (statement.name) context.mean(statement.name.span, { kind: 'definition', name, definition });
   if (!answer) return { kind: 'unevaluated', definition };
-  const { material, stream = null } = answer;
+  const { material, stream = null, machinery = null } = answer;
   // A kind may leave its figures and tables until somebody reads them.
   lazily(definition, {
     figures: () => answer.figures,
     tables: () => answer.tables,
     absent: () => answer.absent,
   });
-  return { kind: 'definition', definition, material, stream };
+  return { kind: 'definition', definition, material, stream, machinery };
 }
 
 /** `acknowledge` lines: only hazards can be acknowledged, and only with a reason. */

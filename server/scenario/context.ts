@@ -7,6 +7,7 @@ import type { Quantity } from '../core/quantity/quantity.ts';
 import { nearestWords } from '../core/spelling/nearest-words.ts';
 import type { Fact } from './facts.ts';
 import type { AskLongWork } from './long-work.ts';
+import type { Machinery } from './machinery.ts';
 import type { Material } from './material.ts';
 import type { OxidantStream } from './oxidant-stream.ts';
 import { placeOf } from './place.ts';
@@ -21,6 +22,7 @@ export type Named =
       readonly definition: EvaluatedDefinition;
       readonly material: Material | null;
       readonly stream: OxidantStream | null;
+      readonly machinery: Machinery | null;
     }
   /** Of a kind that is not evaluated: it can be gone to, but whatever uses it stays silent. */
   | { readonly kind: 'unevaluated'; readonly definition: EvaluatedDefinition }

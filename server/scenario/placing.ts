@@ -117,8 +117,9 @@ export class PlacedAnswer {
   #placeFigures(figures: readonly Figure[]): readonly Figure[] {
     if (this.#innerPlaces.size === 0) return figures;
     return figures.map((figure) => {
-      const { id, label, unit } = figure;
-      const placed: Figure = { id, label, unit, quantity: quantityOf(0), working: unreadWorking };
+      const { id, label, unit, band } = figure;
+      const ends = band && { band };
+      const placed: Figure = { id, label, unit, quantity: quantityOf(0), ...ends, working: unreadWorking };
       return lazily(placed, {
         quantity: () => figure.quantity,
         working: () => this.#withPlaces(figure.working),

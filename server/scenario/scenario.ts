@@ -72,9 +72,16 @@ export interface Figure {
   /** What it is called, with its basis (per kg of what, wet or dry, higher or lower). */
   readonly label: string;
   readonly quantity: Quantity;
+  /** Where it is a band: its ends. `quantity` is then the end an engineer has to reckon with. */
+  readonly band?: FigureBand;
   /** The unit the JSON contract gives it in; fixed for each id. */
   readonly unit: string;
   readonly working: Working;
+}
+
+export interface FigureBand {
+  readonly low: Quantity;
+  readonly high: Quantity;
 }
 
 export interface Table {

@@ -44,29 +44,41 @@ export function readingText({ value, uncertainty, unit }: Reading, style: Number
 }
 
 /** A figure's value for a person: a share in percent, a temperature also in °C, the rest in the figure's unit. */
-export function figureText({ id, quantity, unit }: Pick<Figure, 'id' | 'quantity' | 'unit'>): string {
+export function figureText({ id, quantity, unit, band }: ToldFigure): string {
   const key = `${id} ${unit}`;
   const known = figureTexts.get(quantity);
-  if (known?.key === key) return known.text;
-  const text = isShare(id, unit) ? shareText(quantity) : toldText(quantity, unit);
-  figureTexts.set(quantity, { key, text });
-  return text;
+  if (known?.key === key && !band) return known.text;
+  const told = isShare(id, unit) ? shareText(quantity) : toldText(quantity, unit);
+  if (band) return `${told} (${bandText(id, unit, band)})`;
+  figureTexts.set(quantity, { key, text: told });
+  return told;
+}
+
+type ToldFigure = Pick<Figure, 'id' | 'quantity' | 'unit' | 'band'>;
+
+/** The ends of a band as plain numbers in the figure's unit: `195 to 205`, `41 % to 43 %`. */
+function bandText(id: string, unit: string, { low, high }: NonNullable<Figure['band']>): string {
+  const end = (quantity: Quantity): string =>
+    isShare(id, unit) ? formatPercent(quantity.value) : formatNumber(inUnit(quantity, unit));
+  return `${end(low)} to ${end(high)}`;
 }
 
 /** Quantities never change, and a list of completions shows those of hundreds of figures at every key. */
 const figureTexts = new WeakMap<Quantity, { readonly key: string; readonly text: string }>();
 
 /** The parts of `figureText` for a table: the number (with ±), its unit, and what stands behind in brackets. */
-export function figureCells({ id, quantity, unit }: Pick<Figure, 'id' | 'quantity' | 'unit'>): FigureCells {
+export function figureCells({ id, quantity, unit, band }: ToldFigure): FigureCells {
   const { value, uncertainty } = readingIn(quantity, unit);
+  const ends = band ? bandText(id, unit, band) : '';
   if (isShare(id, unit)) {
     return {
       number: formatWithUncertainty(value * 100, uncertainty === null ? null : uncertainty * 100),
       unit: '%',
-      note: '',
+      note: ends,
     };
   }
-  const note = quantity.kind === 'temperature' && unit === 'K' ? celsiusText(quantity) : '';
+  const celsius = quantity.kind === 'temperature' && unit === 'K' ? celsiusText(quantity) : '';
+  const note = [celsius, ends].filter((part) => part !== '').join(', ');
   return { number: formatWithUncertainty(value, uncertainty), unit: unitForPeople(unit), note };
 }
 

@@ -29,6 +29,8 @@ const figure = z.strictObject({
   value: z.number(),
   unit,
   uncertainty: z.number().positive().nullable(),
+  low: z.number().optional(),
+  high: z.number().optional(),
 });
 
 const table = z

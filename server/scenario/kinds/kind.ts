@@ -5,6 +5,7 @@ import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
 import type { EntryTable } from '../entries.ts';
 import type { Material } from '../material.ts';
+import type { Machinery } from '../machinery.ts';
 import type { FigureRow } from '../material-figures.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 import type { Absent, Figure, LineResult, Table } from '../scenario.ts';
@@ -35,6 +36,8 @@ export interface KindAnswer {
   readonly screening?: Screening | undefined;
   /** What it is as something to burn in; only an oxidant has one. */
   readonly stream?: OxidantStream | null;
+  /** What it is to the work that is done: an engine, what engines have to do, or that over a year. */
+  readonly machinery?: Machinery | null;
 }
 
 /** An answer that says nothing: the cause has been reported. Its figures are all absent for that reason. */

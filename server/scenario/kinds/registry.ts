@@ -3,6 +3,7 @@
 
 import { blend } from './blend.ts';
 import { burn } from './burn.ts';
+import { engine } from './engine.ts';
 import type { Kind } from './kind.ts';
 import { oxidant } from './oxidant.ts';
 import { reaction } from './reaction.ts';
@@ -14,7 +15,7 @@ export const kinds: readonly Kind[] = [
   oxidant,
   reaction,
   burn,
-  later('engine', 'An engine, by the cycle it works or by its measured consumption against load.'),
+  engine,
   later('duty', 'What an engine has to do: legs by time or by distance and speed, or a named test cycle.'),
   later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),
   later('supply', 'How a substance is made: electricity, heat, emissions, price and by-products.'),

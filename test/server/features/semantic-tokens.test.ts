@@ -87,8 +87,8 @@ describe('the meaning of', () => {
     ],
     [
       'a definition that is not worked out',
-      'engine b {\n  fuel: methanol\n}\n',
-      ['engine kind', 'b class declaration', 'methanol substance defaultLibrary'],
+      'supply b {\n  of: methanol\n}\n',
+      ['supply kind', 'b class declaration', 'methanol substance defaultLibrary'],
     ],
     [
       'a name of a used file',

@@ -83,9 +83,9 @@ describe('names', () => {
 
   test('a listed word, or one of an entry that nobody reads, names nothing', () => {
     checkFacts(`
-        engine twin {
-      # ^^^^^^ kind/not-evaluated
-          cycle: twin
+        site twin {
+      # ^^^^ kind/not-evaluated
+          wind: twin
         }
       blend b {
         100 % methanol

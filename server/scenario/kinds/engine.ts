@@ -1,0 +1,63 @@
+// `engine`: what an engine makes of its fuel, by the cycle it works or by its measured consumption against load. Reads the
+// one entry table and hands on to the way that is written; works nothing out itself. Two ways at once contradict each
+// other; none is asked for. Invariant: exactly one way answers a definition.
+
+import type { Definition } from '../../../grammar/tree.ts';
+import type { Context } from '../context.ts';
+import { readEntries, refuseLines } from '../entries.ts';
+import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
+import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+
+/** The way of each cycle; null for one that is not worked out yet. */
+const cycles: Readonly<Record<CycleWord, EngineWay | null>> = {
+  otto: null,
+  diesel: null,
+  dual: null,
+  brayton: null,
+  rankine: null,
+};
+
+const evaluated: EvaluatedKind = { entries: engineEntries, lines: [], figures: [], evaluate };
+
+export const engine: Kind = {
+  kind: 'engine',
+  help: 'An engine, by the cycle it works or by its measured consumption against load.',
+  evaluated,
+};
+
+function evaluate(definition: Definition, context: Context): KindAnswer {
+  const { entries: read, broken } = readEntries(definition, engineEntries, context);
+  refuseLines(definition, [], context);
+  const asked: EngineAsked = { read, broken, definition, context };
+  const measured = read.specificFuelConsumption ?? read.efficiency;
+  const isMeasured = measured !== undefined || broken.has('specificFuelConsumption') || broken.has('efficiency');
+  if (read.cycle && measured) {
+    context.report(measured.entry.wordsSpan, {
+      code: 'balance/contradiction',
+      what: 'how the engine is known',
+      first: read.cycle.entry.words,
+      second: measured.entry.words,
+      compared: null,
+    });
+  }
+  if (read.cycle) {
+    const way = cycles[read.cycle.value];
+    return way ? way(asked) : notEvaluated(definition, context);
+  }
+  if (isMeasured) return notEvaluated(definition, context);
+  if (!broken.has('cycle')) {
+    const entries = [engineEntries.cycle, engineEntries.specificFuelConsumption, engineEntries.efficiency];
+    context.report(definition.name?.span ?? definition.header, {
+      code: 'name/missing-entry',
+      kind: 'engine',
+      name: context.owner,
+      entries: entries.map(({ name }) => name),
+    });
+  }
+  return unknownAnswer(evaluated);
+}
+
+function notEvaluated({ keyword }: Definition, context: Context): KindAnswer {
+  context.report(keyword.span, { code: 'kind/not-evaluated', kind: 'engine', name: context.owner });
+  return unknownAnswer(evaluated);
+}

@@ -1,0 +1,60 @@
+// What definitions are to the work that is done, as far as other definitions ask: an engine gives its consumption on any
+// fuel. Plain data and pure functions that look up no name; made by the kinds, read by duties and services.
+// Invariant: what could not be had is null or `missing`, and has been said or says in words what it lacks.
+
+import type { Band, Consumption } from '../core/engine/consumption.ts';
+import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Material } from './material.ts';
+import type { AssumptionId } from './working.ts';
+
+export type Machinery = EngineMachine;
+
+export interface EngineMachine {
+  readonly machinery: 'engine';
+  readonly name: string;
+  /** The fuel it is defined with. */
+  readonly fuel: Material;
+  /** Brake power at a load of 1; null where it is not given. */
+  readonly ratedPower: Quantity | null;
+  /** The engine burning a fuel: its own, or another by the rule of the way it was worked out. */
+  burning(fuel: Material): BurningEngine | NotBurning;
+}
+
+/** An engine on one fuel. */
+export interface BurningEngine {
+  readonly kind: 'burning';
+  /** Null without a rated power. Of all fuel, pilot included. */
+  readonly consumption: Consumption | null;
+  /** J of fuel per J of work at the rating, or as the cycle was worked out. */
+  readonly ratedHeatRate: Band;
+  readonly pilot: PilotEntry | null;
+  readonly slips: EngineSlips;
+  readonly assumptions: readonly AssumptionId[];
+}
+
+export interface EngineSlips {
+  readonly methane: SlipEntry | null;
+  readonly nitrousOxide: SlipEntry | null;
+  readonly ammonia: SlipEntry | null;
+  readonly urea: SlipEntry | null;
+}
+
+/** A second fuel that lights the first. */
+export interface PilotEntry {
+  /** Share of the energy (lower heating value) or of the mass of all fuel. */
+  readonly share: Quantity;
+  readonly by: 'energy' | 'mass';
+  readonly fuel: Material;
+}
+
+/** What slips through, as a share of the fuel's mass, or as a mass for the work at the shaft (kg/J). */
+export interface SlipEntry {
+  readonly per: 'fuel' | 'work';
+  readonly quantity: Quantity;
+}
+
+/** The names of data without which it cannot be told; empty where the cause has been said. */
+export interface NotBurning {
+  readonly kind: 'not-burning';
+  readonly missing: readonly string[];
+}
