@@ -46,10 +46,10 @@ export interface ExpandingState {
   /** Set apart from the gas, at the temperature they had at the start. */
   readonly apart: ParticlesApart | null;
   /**
-   * The composition as tables and deposits read it, at this temperature and pressure; worked out when asked for. Particles
-   * set apart are among its amounts, and its enthalpy is that of everything at one temperature.
+   * The composition as tables and deposits read it, here or frozen at another temperature and pressure. Particles set apart
+   * are among its amounts, and its enthalpy is that of everything at one temperature.
    */
-  readonly matter: () => MatterState;
+  readonly matter: (at?: { readonly temperatureK: number; readonly pressurePa: number }) => MatterState;
   /** To start a neighbouring state from. */
   readonly near: Equilibrium | MixtureState;
 }
@@ -189,11 +189,12 @@ function expandingState(
     gasMol,
     isFrozen: frozenFrom !== null,
     apart,
-    matter: () => {
+    matter: (at) => {
       const from = frozenFrom ?? (state.kind === 'equilibrium' ? state : start);
       const isWhole = from.candidates === start.candidates;
-      if (state.kind === 'equilibrium' && isWhole) return state;
-      return frozenState(isWhole ? from : withParticles(from, start), temperatureK, { pressurePa });
+      if (state.kind === 'equilibrium' && isWhole && at === undefined) return state;
+      const whole = isWhole ? from : withParticles(from, start);
+      return frozenState(whole, at?.temperatureK ?? temperatureK, { pressurePa: at?.pressurePa ?? pressurePa });
     },
     near: state,
   };

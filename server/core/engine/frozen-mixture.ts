@@ -74,14 +74,20 @@ export function frozenMixture(parts: readonly MixturePart[]): FrozenMixture {
   return mixtureOver(sorted, gases.length, elementMol, []);
 }
 
-/** The composition of an equilibrium; its condensed substances may take any of their forms among the candidates. */
-export function mixtureFrozenFrom({ candidates, amountsMol }: Equilibrium): FrozenMixture {
+/** A gas with less of the amount than this is below rounding in every sum. */
+const traceShare = 1e-15;
+
+/**
+ * The composition of an equilibrium; its condensed substances may take any of their forms among the candidates. Traces of
+ * gas are left out.
+ */
+export function mixtureFrozenFrom({ candidates, amountsMol, gasMol }: Equilibrium): FrozenMixture {
   const present: MixturePart[] = [];
   const forms: MixtureSpecies[] = [];
   const keys = new Set<string>();
   candidates.phases.forEach((species, phase) => {
     const mol = amountsMol[phase] ?? 0;
-    if (!(mol > 0)) return;
+    if (!(mol > (phase < candidates.gasCount ? traceShare * gasMol : 0))) return;
     present.push({ species, mol });
     if (phase >= candidates.gasCount) keys.add(compositionKey(species.formula));
   });

@@ -175,9 +175,7 @@ describe('products that expand', () => {
         equalTo(expansion.start.temperatureK, start.temperatureK);
         equalTo(expansion.start.enthalpyJ, start.enthalpyJ);
         const { entropyJPerK } = expansion.start;
-        const same = sure(
-          expansion.to({ held: 'entropy-volume', entropyJPerK, volumeM3: start.volumeM3 }),
-        );
+        const same = sure(expansion.to({ held: 'entropy-volume', entropyJPerK, volumeM3: start.volumeM3 }));
         equalTo(same.temperatureK, start.temperatureK);
         equalTo(same.enthalpyJ, start.enthalpyJ);
         equalTo(same.pressurePa, start.pressurePa);
