@@ -1,5 +1,5 @@
 // Random questions to the minimiser: each answer is proven from outside, each refusal is checked to be true. Twenty thousand in
-// the suite; `FUZZ_PROBLEMS=200000 FUZZ_FIRST=0 npx vitest run test/fuzz/equilibrium.test.ts` for a long run. A question is
+// the suite; two hundred thousand others in `npm run fuzz`. A question is
 // named by its number, so a failure can be asked again; those that once failed stand in equilibrium-regressions.json in full.
 
 import { expect, test } from 'vitest';
@@ -11,16 +11,8 @@ const FIRST = Number(process.env['FUZZ_FIRST'] ?? 1_000_000);
 
 const reasonableTimeMs = 60_000 + 10 * PROBLEMS;
 
-/**
- * Of a thousand random questions no more than two may go unanswered. Those that do are told as not converged, never answered
- * wrongly: most ask for exactly the elements of some solids, with everything else in traces of 1e-10 or less. This share is to
- * come down to none.
- */
-const mostUnanswered = 2e-3;
-
 test(`${PROBLEMS} random questions from number ${FIRST} on`, { timeout: reasonableTimeMs }, () => {
   const failures: string[] = [];
-  const unanswered: number[] = [];
   const answered = new Map<string, number>();
   for (let seed = FIRST; seed < FIRST + PROBLEMS && failures.length < 10; seed += 1) {
     const { problem, solver } = equilibriumProblem(seed);
@@ -29,15 +21,12 @@ test(`${PROBLEMS} random questions from number ${FIRST} on`, { timeout: reasonab
     if (faults.length === 0) continue;
     const elementMol = Float64Array.from(problem.ions ? [...problem.elementMol, 0] : problem.elementMol);
     const answer = solver.solve(elementMol, problem.held);
-    if (answer.kind === 'none' && answer.reason === 'not-converged') unanswered.push(seed);
     // A change inside one phase's table has two heats at one temperature, and the proof knows one of them only.
-    else if (answer.kind === 'none' || answer.pinned?.by !== 'transition') {
+    if (answer.kind === 'none' || answer.pinned?.by !== 'transition') {
       failures.push(`${seed} ${JSON.stringify(problem)}: ${faults.join('; ')}`);
     }
   }
   expect(failures).toEqual([]);
-  expect(unanswered.length / PROBLEMS, `unanswered: ${unanswered.join(' ')}`).toBeLessThan(mostUnanswered);
-  process.stdout.write(`${PROBLEMS} random equilibria, ${unanswered.length} not converged\n`);
   // A run in which hardly anything has an answer would show nothing.
   const least = Object.fromEntries([...answered].map(([held, count]) => [held, count > PROBLEMS / 20]));
   expect(least).toEqual({

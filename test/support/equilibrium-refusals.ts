@@ -33,12 +33,12 @@ export function doubtOf(
     case 'cannot-form': {
       const temperatureK = 'temperatureK' in held ? held.temperatureK : undefined;
       const shortage = leastShortage(solver.candidates, elementMol, temperatureK);
-      if (shortage < 1e-9) return `the candidates can form it, short of ${shortage.toExponential(1)}`;
+      if (shortage < 1e-10) return `the candidates can form it, short of ${shortage.toExponential(1)}`;
       return refusal.elements.length > 0 ? undefined : 'nobody is to blame';
     }
     case 'no-gas': {
       if (!('volumeM3' in held)) return 'no volume is held';
-      const gas = gasOf(solver.candidates, elementMol);
+      const gas = gasOf(solver.candidates, elementMol, 'temperatureK' in held ? held.temperatureK : Infinity);
       return gas === undefined ? undefined : `${gas} can fill the volume`;
     }
     case 'outside-tables':
@@ -46,12 +46,16 @@ export function doubtOf(
   }
 }
 
-/** A gas among the candidates that consists of elements that are there. */
-function gasOf({ elements, phases, gasCount, atoms }: CandidateSet, elementMol: Float64Array): string | undefined {
+/** A gas among the candidates that consists of elements that are there; ions only where it is warm enough for them. */
+function gasOf(
+  { elements, phases, gasCount, atoms }: CandidateSet,
+  elementMol: Float64Array,
+  temperatureK: number,
+): string | undefined {
   const isPossible = (index: number): boolean =>
     elements.every((element, e) => {
       const count = atoms[index * elements.length + e] ?? NaN;
-      return count === 0 || element === charge || (elementMol[e] ?? 0) > 0;
+      return count === 0 || (element === charge ? temperatureK >= ionsFromK : (elementMol[e] ?? 0) > 0);
     });
   return phases.find((_, index) => index < gasCount && isPossible(index))?.id;
 }
@@ -77,7 +81,8 @@ function doubtOfLimit(
   if (side === 'below' ? limitK > 300 : limitK < 5000) {
     // Short of the tables' own ends only where the elements cannot be together any further: past the end of a crystal.
     const beyond = stateAt(limitK * (side === 'below' ? 1 - 1e-6 : 1 + 1e-6));
-    if (beyond.kind !== 'none' || beyond.reason !== 'cannot-form') return `tables do not end at ${limitK} K`;
+    const isNone = beyond.kind === 'none' && (beyond.reason === 'cannot-form' || beyond.reason === 'no-gas');
+    if (!isNone) return `tables do not end at ${limitK} K`;
   }
   const atLimit = stateAt(limitK * (side === 'below' ? 1 : 1 - 1e-12));
   if (atLimit.kind === 'none') return `no state at ${limitK} K either: ${JSON.stringify(atLimit)}`;
@@ -102,7 +107,9 @@ function leastShortage(
 ): number {
   const width = elements.length;
   const rows = elements.flatMap((element, e) => (element === charge || (elementMol[e] ?? 0) > 0 ? [e] : []));
-  const scale = (e: number): number => (elements[e] === charge ? 1 : 1 / (elementMol[e] ?? NaN));
+  // A charge is as large as the rarest element that may carry it.
+  const rarest = Math.min(...elementMol.filter((mol) => mol > 0));
+  const scale = (e: number): number => 1 / (elements[e] === charge ? rarest : (elementMol[e] ?? NaN));
   const columns = phases.flatMap((phase, index) => {
     const own = elements.map((_, e) => atoms[index * width + e] ?? NaN);
     const isThere =

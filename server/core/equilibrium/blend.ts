@@ -5,9 +5,22 @@
 
 import type { Equilibrium, Pinned } from './equilibrium.ts';
 
-/** Two certified states at one temperature and pressure that share what is held. */
-export function blended(low: Equilibrium, high: Equilibrium, share: number): Equilibrium {
-  const mix = (a: number, b: number): number => a + share * (b - a);
+/** What is held, and how much of it each side has. */
+export interface Parts {
+  readonly held: number;
+  readonly low: number;
+  readonly high: number;
+}
+
+/**
+ * Two certified states at one temperature and pressure that share what is held, each with its amount of that. Where these differ
+ * by many powers of ten a single share would lose the smaller one in its last digits, so each side has its own.
+ */
+export function blended(low: Equilibrium, high: Equilibrium, parts: Parts): Equilibrium {
+  const span = parts.high - parts.low;
+  const highShare = (parts.held - parts.low) / span;
+  const lowShare = (parts.high - parts.held) / span;
+  const mix = (a: number, b: number): number => lowShare * a + highShare * b;
   const set = low.candidates;
   const amountsMol = low.amountsMol.map((amount, phase) => mix(amount, high.amountsMol[phase] ?? 0));
   let gasMol = 0;
@@ -21,12 +34,21 @@ export function blended(low: Equilibrium, high: Equilibrium, share: number): Equ
     const amount = amountsMol[phase] ?? 0;
     return hasBoth && phase < set.gasCount && amount > 0 ? Math.log(amount / gasMol) : logarithm;
   });
+  const main = highShare < 0.5 ? low : high;
+  const pinned = pinnedBetween(low, high);
+  // The potentials are those of one side. Where the other's are not the same, a gas is there in another fraction than they ask
+  // for, and the certificate says so; past the end of a crystal's data there are two, each with its own.
+  let differing = 0;
+  for (let phase = 0; phase < set.gasCount && pinned.by !== 'end-of-phase'; phase += 1) {
+    if ((amountsMol[phase] ?? 0) > leastOfGas)
+      differing = Math.max(differing, Math.abs((logFractions[phase] ?? NaN) - (main.logFractions[phase] ?? NaN)));
+  }
   const enthalpyJ = mix(low.enthalpyJ, high.enthalpyJ);
   const entropyJPerK = mix(low.entropyJPerK, high.entropyJPerK);
   const { certificate: one } = low;
   const { certificate: other } = high;
   return {
-    ...(share < 0.5 ? low : high),
+    ...main,
     pressurePa: mix(low.pressurePa, high.pressurePa),
     amountsMol,
     logFractions,
@@ -42,16 +64,19 @@ export function blended(low: Equilibrium, high: Equilibrium, share: number): Equ
     frozenGamma: null,
     gamma: null,
     speedOfSoundMPerS: null,
-    pinned: pinnedBetween(low, high),
+    pinned,
     extrapolated: [...new Set([...low.extrapolated, ...high.extrapolated])],
     certificate: {
       elementBalance: Math.max(one.elementBalance, other.elementBalance),
       largestAffinity: Math.max(one.largestAffinity, other.largestAffinity),
-      potentialResidual: Math.max(one.potentialResidual, other.potentialResidual),
+      potentialResidual: Math.max(one.potentialResidual, other.potentialResidual) + differing,
       heldResidual: 0,
     },
   };
 }
+
+/** mol below which an amount has few digits left. */
+const leastOfGas = 1e-290;
 
 function pinnedBetween(low: Equilibrium, high: Equilibrium): Pinned {
   const set = low.candidates;

@@ -15,8 +15,8 @@ import type { Work } from './work.ts';
 
 const mostSteps = 200;
 /** Gaps (amount times distance from equilibrium, the mean over the phases) at which the state is shown; then the path ends. */
-const stations = [1e-9, 1e-11, 1e-13, 1e-16, 1e-20, 1e-24] as const;
-const lastGap = 1e-24;
+const stations = [1e-9, 1e-11, 1e-13, 1e-16, 1e-20, 1e-24, 1e-30, 1e-37, 1e-45] as const;
+const lastGap = 1e-45;
 /** How far the gas's distance from equilibrium may be off its value; the next step takes it back. */
 const rounding = 1e-13;
 

@@ -33,11 +33,20 @@ export interface Descent {
 
 /** Goes down from the state in `work` until it rests, for at most a hundred steps. */
 export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent): Rest {
+  work.isGasHeld = false;
+  const rest = goDown(work, aim, bounds, descent);
+  work.isGasHeld = false;
+  return rest;
+}
+
+function goDown(work: Work, aim: Aim, bounds: Bounds, descent: Descent): Rest {
   const { step } = descent;
   let arrivals = 0;
   let negative = 0;
   let atBound = 0;
   let creeping = 0;
+  let stalled = 0;
+  let lastChange = Infinity;
   const mostArrivals = 12 + 3 * work.width;
   for (let count = 0; count < mostSteps; count += 1) {
     if (count === 10 || count === 25 || count === 50) takePresentBasis(work, aim);
@@ -64,7 +73,12 @@ export function descend(work: Work, aim: Aim, bounds: Bounds, descent: Descent):
       }
       continue;
     }
-    const rests = step.change < 1e-7 && step.gasChange < 1e-7;
+    // A vapour that only traces keep from filling everything: its amount is lost in rounding, and the traces follow it.
+    stalled = step.change < 1e-4 && step.change > 0.2 * lastChange ? stalled + 1 : 0;
+    lastChange = step.change;
+    if (stalled >= 3 && step.change > 1e-13 && aim.seeks === 'temperature') work.isGasHeld = true;
+    const limit = work.isGasHeld ? 1e-12 : 1e-7;
+    const rests = step.change < limit && step.gasChange < limit;
     if (step.change > 0.3) continue;
     if (dismiss(work)) continue;
     if (!rests && step.change > 1e-2) continue;

@@ -161,20 +161,26 @@ export function assemble(work: Work, aim: Aim): number {
     const start = k * stride;
     if (Math.abs(at(work.amounts, k)) <= work.idleBelow && isIdleRow(work, start, k, firstPresent)) {
       // Nothing to speak of has any of this basis phase: its potential has no say and stays.
-      for (let other = 0; other < size; other += 1) {
-        matrix[start + other] = 0;
-        matrix[other * stride + k] = 0;
-      }
-      matrix[start + k] = 1;
-      right[k] = 0;
+      holdRow(work, k, size);
     }
   }
+  if (hasGasRow && work.isGasHeld) holdRow(work, gasRow, size);
   if (seeksHeat) {
     matrix[heatStart + heatRow] = squares + capacity;
     right[heatRow] =
       aim.seeks === 'energy' ? aim.aimed / work.temperatureK - heatSum - presentHeat : entropyMissing(work, aim);
   }
   return size;
+}
+
+/** Makes one unknown of the system stay what it is. */
+function holdRow({ matrix, right, stride }: Work, row: number, size: number): void {
+  for (let other = 0; other < size; other += 1) {
+    matrix[row * stride + other] = 0;
+    matrix[other * stride + row] = 0;
+  }
+  matrix[row * stride + row] = 1;
+  right[row] = 0;
 }
 
 /** Whether a balance has no condensed phase in it and less gas than counts. */
@@ -221,6 +227,11 @@ export interface Step {
   gasChange: number;
 }
 
+/**
+ * A system of traces beside solids is graded: its smallest pivots are small because what they stand for is rare, and carry as many
+ * digits as the others. Below this there is no telling.
+ */
+const leastQuality = 1e-24;
 const largestChange = 2;
 const largestTemperatureChange = 0.35;
 const mostGas = 2;
@@ -236,7 +247,7 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   const size = assemble(work, aim);
   const quality = solveDense(work.matrix, work.stride, size, right, work.dense);
   step.change = Infinity;
-  if (!(quality > 1e-15)) return;
+  if (!(quality > leastQuality)) return;
   const hasGasRow = !aim.isVolume && work.gasAmount > 0;
   const heatRow = size - 1;
   const seeksHeat = aim.seeks !== 'temperature';

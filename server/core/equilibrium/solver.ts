@@ -40,7 +40,6 @@ function solve(
 ): Equilibrium | NoEquilibrium {
   if (!isFinite(elementMol, held)) return { kind: 'none', reason: 'not-finite' };
   if (!takeAmounts(work, elementMol)) return { kind: 'none', reason: 'nothing' };
-  if ('volumeM3' in held && work.set.gasCount === 0) return { kind: 'none', reason: 'no-gas' };
   const temperatureK = 'temperatureK' in held ? held.temperatureK : undefined;
   if (temperatureK !== undefined) {
     const { lowestK, highestK } = tablesK;
@@ -54,15 +53,19 @@ function solve(
   const attempt = (hasIons: boolean): Equilibrium | NoEquilibrium => {
     // With temperature unknown a crystal may still be there below its end.
     admitPhases(work, temperatureK, hasIons);
+    if (aim.isVolume && work.gasCount === 0) return { kind: 'none', reason: 'no-gas' };
     if (near === undefined || near.candidates !== work.set || !startNear(work, aim, temperatureK, near)) {
       const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
       if (blamed !== undefined) return cannotForm(work, blamed);
     }
-    return (
-      descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check) ??
-      sureWay(work, elementMol, aim, held, check, descent) ??
-      failed(elementMol, held)
-    );
+    const quick = descendAndCertify(work, elementMol, aim, tablesK, pressurePa, descent, check);
+    if (quick !== undefined) return quick;
+    // A neighbour says nothing about whether the elements can be held at this temperature.
+    if (near !== undefined) {
+      const blamed = startCold(work, aim, temperatureK, tablesK.lowestK, tablesK.highestK);
+      if (blamed !== undefined) return cannotForm(work, blamed);
+    }
+    return sureWay(work, elementMol, aim, held, check, descent) ?? failed(elementMol, held);
   };
   if (!work.set.hasCharge || temperatureK !== undefined) {
     return attempt(work.set.hasCharge && (temperatureK ?? 0) >= ionsFromK);

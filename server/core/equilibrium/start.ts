@@ -2,6 +2,7 @@
 // and balances that the vertex leaves empty brought near their solution one by one.
 // Knows no answer. Invariant: the start is a function of the problem alone.
 
+import { standardPressurePa } from '../quantity/constants.ts';
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import { addPresent } from './descent.ts';
 import { takeFractions, takePressure, takeTemperature } from './newton.ts';
@@ -58,15 +59,16 @@ export function startNear(work: Work, aim: Aim, temperatureK: number | undefined
       const atoms = at(set.atoms, at32(work.basis, k) * width + row);
       if (atoms !== 0) sum += atoms * at(near.potentials, row);
     }
-    // At another temperature a phase keeps its activity rather than its potential.
+    // A phase keeps its activity rather than its potential: at another temperature, and where the state is a blend of two.
     const phase = at32(work.basis, k);
     const isGas = phase < set.gasCount;
-    potential[k] =
-      temperatureK === undefined || temperatureK === near.temperatureK
-        ? sum
-        : at(work.cost, phase) +
-          (isGas ? at(near.logFractions, phase) : 0) +
-          (isGas && aim.isVolume ? Math.log(near.pressurePa / 1e5) : 0);
+    const isSame = temperatureK === undefined || temperatureK === near.temperatureK;
+    const isAbsent = isSame && (isGas ? !(near.gasMol > 0) : !(at(near.amountsMol, phase) > 0));
+    potential[k] = isAbsent
+      ? sum
+      : at(work.cost, phase) +
+        (isGas ? at(near.logFractions, phase) : 0) +
+        (isGas && aim.isVolume ? Math.log(near.pressurePa / standardPressurePa) : 0);
     if (!Number.isFinite(at(potential, k))) return false;
   }
   work.presentCount = 0;

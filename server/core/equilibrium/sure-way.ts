@@ -15,16 +15,14 @@ import { followCentre } from './centre.ts';
 import { descend, takePresentBasis } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, NoEquilibrium } from './equilibrium.ts';
+import { offProportion } from './off-proportion.ts';
 import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
+import { spansOf } from './spans.ts';
+import type { Range } from './spans.ts';
 import { startCold, startNear } from './start.ts';
-import { admitPhases } from './work.ts';
+import { admitPhases, takeAmounts } from './work.ts';
 import type { Work } from './work.ts';
-
-export interface Range {
-  readonly lowestK: number;
-  readonly highestK: number;
-}
 
 /** Pressures in Pa between which a held volume is sought; far outside anything real. */
 const lowestPressurePa = 1e-250;
@@ -46,6 +44,24 @@ export function atTemperatureAndPressure(
     const warm = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
     if (warm !== undefined) return warm;
   }
+  const answer = byInterior(work, elementMol, aim, temperatureK, pressurePa, descent);
+  if (answer !== undefined) return answer;
+  takeAmounts(work, offProportion(work, elementMol));
+  const beside = byInterior(work, elementMol, aim, temperatureK, pressurePa, descent);
+  takeAmounts(work, elementMol);
+  return beside;
+}
+
+/** For the amounts that `work` holds: quick from cold, then along the interior path, certified against `elementMol`. */
+function byInterior(
+  work: Work,
+  elementMol: Float64Array,
+  aim: Aim,
+  temperatureK: number,
+  pressurePa: number,
+  descent: Descent,
+): Equilibrium | undefined {
+  const bounds = { lowestK: temperatureK, highestK: temperatureK };
   if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
   const quick = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
   if (quick !== undefined) return quick;
@@ -54,18 +70,22 @@ export function atTemperatureAndPressure(
   return followCentre(work, aim, () => {
     const before = keep(work);
     const asItIs = certified(work, elementMol, aim, pressurePa, descent);
-    restore(work, before, aim);
-    const polished = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
-    if (polished !== undefined) return polished;
-    // Where the elements fit some phases exactly, whole balances are left to traces that decide nothing: they keep their
-    // potentials while the others are solved.
-    restoreBasis(work, basis);
-    restore(work, before, aim);
-    work.idleBelow = idleShare * leastGiven(work);
-    const rested = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+    const polished = (prepare: () => void): Equilibrium | undefined => {
+      restoreBasis(work, basis);
+      restore(work, before, aim);
+      prepare();
+      return descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+    };
+    const answer =
+      polished(() => undefined) ??
+      // Balances written in what is rare now are lost in the rounding of what is plentiful.
+      polished(() => takePresentBasis(work, aim)) ??
+      // Where the elements fit some phases exactly, whole balances are left to traces that decide nothing: they keep their
+      // potentials while the others are solved.
+      polished(() => (work.idleBelow = idleShare * leastGiven(work)));
     work.idleBelow = 0;
     restoreBasis(work, basis);
-    return rested ?? asItIs;
+    return answer ?? asItIs;
   });
 }
 
@@ -76,7 +96,7 @@ function leastGiven({ given }: Work): number {
   return given.reduce((least, amount) => (amount > 0 ? Math.min(least, amount) : least), Infinity);
 }
 
-/** Temperature and volume held, by narrowing the pressure. */
+/** Temperature and volume held: quick from cold, then by narrowing the pressure. */
 export function atTemperatureAndVolume(
   work: Work,
   elementMol: Float64Array,
@@ -90,10 +110,29 @@ export function atTemperatureAndVolume(
   if (startCold(work, aim, temperatureK, temperatureK, temperatureK) !== undefined) return undefined;
   const quick = descendAndCertify(work, elementMol, aim, bounds, 0, descent);
   if (quick !== undefined) return quick;
+  const answer = byPressure(work, elementMol, elementMol, temperatureK, volumeM3, descent);
+  if (answer !== undefined) return answer;
+  admitPhases(work, temperatureK);
+  const beside = offProportion(work, elementMol);
+  takeAmounts(work, beside);
+  const found = byPressure(work, beside, elementMol, temperatureK, volumeM3, descent);
+  takeAmounts(work, elementMol);
+  return found;
+}
+
+/** The state of `sought` that fills the volume, certified against `elementMol`. */
+function byPressure(
+  work: Work,
+  sought: Float64Array,
+  elementMol: Float64Array,
+  temperatureK: number,
+  volumeM3: number,
+  descent: Descent,
+): Equilibrium | undefined {
   const end = reach(
     {
       stateAt: (logPressure, near) =>
-        atTemperatureAndPressure(work, elementMol, temperatureK, Math.exp(logPressure), descent, near),
+        atTemperatureAndPressure(work, sought, temperatureK, Math.exp(logPressure), descent, near),
       // Rising with pressure: what is missing of the volume, as a share of both.
       valueOf: (state) => (volumeM3 - state.volumeM3) / (volumeM3 + state.volumeM3),
       slopeOf: () => null,
@@ -105,7 +144,11 @@ export function atTemperatureAndVolume(
     volumeM3,
   );
   if (typeof end === 'string') return undefined;
-  return end.pinned === null ? end : (settled(work, elementMol, aim, end, bounds, descent) ?? end);
+  if (end.pinned === null && sought === elementMol) return end;
+  const bounds = { lowestK: temperatureK, highestK: temperatureK };
+  const state = settled(work, elementMol, volumeAim(work, volumeM3), end, bounds, descent);
+  if (state !== undefined) return state;
+  return sought === elementMol && isCertified(end.certificate) ? end : undefined;
 }
 
 /** Enthalpy, entropy or energy held with pressure or volume, by narrowing the temperature. */
@@ -123,7 +166,7 @@ export function byTemperature(
   const perAtoms = 1 / (molarGasConstantJPerMolK * atoms);
   const valueOf = (state: Equilibrium): number =>
     ((reached(state, check) - check.value) * perAtoms) / (check.kind === 'entropy' ? 1 : state.temperatureK);
-  const searchTo = (highestK: number): ReturnType<typeof reach> =>
+  const searchIn = ({ lowestK, highestK }: Range): ReturnType<typeof reach> =>
     reach(
       {
         stateAt: (temperatureK, near) =>
@@ -136,28 +179,32 @@ export function byTemperature(
           heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
         nearEnough,
       },
-      [range.lowestK, highestK],
+      [lowestK, highestK],
       firstTemperatureK,
       (state) => reached(state, check),
       check.value,
     );
-  let { highestK } = range;
-  let end = searchTo(highestK);
-  // Above the ends of all phases that could hold some element there is no state at all: the search stops at the last end.
-  for (let tries = 0; end === 'failed' && tries < 8; tries += 1) {
-    const lower = lastEndBelow(work, highestK);
-    if (lower <= range.lowestK || !isBeyondAll(work, aim, lower * (1 + 1e-9))) break;
-    highestK = lower;
-    end = searchTo(highestK);
+  let span = range;
+  let end = searchIn(span);
+  if (end === 'failed') {
+    // Somewhere in the range there may be no state at all: each span that has states is searched by itself. What is asked
+    // between the end of one and the start of the next is beyond the first.
+    for (const next of spansOf(work, aim, range)) {
+      const found = searchIn(next);
+      if (found === 'below' && end === 'above') break;
+      [span, end] = [next, found];
+      if (found !== 'above') break;
+    }
   }
   if (end === 'failed') return undefined;
-  if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: range.lowestK };
-  if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: highestK };
-  if (end.pinned?.by === 'phase-change') {
+  if (end === 'below') return { kind: 'none', reason: 'outside-tables', side: 'below', limitK: span.lowestK };
+  if (end === 'above') return { kind: 'none', reason: 'outside-tables', side: 'above', limitK: span.highestK };
+  if (end.pinned !== null && end.pinned.by !== 'end-of-phase') {
     const state = settled(work, elementMol, aim, end, range, descent, check);
     if (state !== undefined) return state;
   }
-  return { ...end, certificate: { ...end.certificate, heldResidual: Math.abs(valueOf(end)) } };
+  const certificate = { ...end.certificate, heldResidual: Math.abs(valueOf(end)) };
+  return isCertified(certificate) ? { ...end, certificate } : undefined;
 }
 
 const firstTemperatureK = 1500;
@@ -165,17 +212,6 @@ const firstTemperatureK = 1500;
 function reached(state: Equilibrium, check: Check): number {
   if (check.kind === 'entropy') return state.entropyJPerK;
   return check.kind === 'energy' ? state.enthalpyJ - state.pressurePa * state.volumeM3 : state.enthalpyJ;
-}
-
-/** The highest temperature below a given one at which a condensed phase of the set ends. */
-function lastEndBelow({ set }: Work, temperatureK: number): number {
-  return set.endK.reduce((last, endK) => (endK < temperatureK ? Math.max(last, endK) : last), 0);
-}
-
-/** Whether no phases that may be present at a temperature can hold the elements. */
-function isBeyondAll(work: Work, aim: Aim, temperatureK: number): boolean {
-  admitPhases(work, temperatureK);
-  return startCold(work, { ...aim, seeks: 'temperature' }, temperatureK, temperatureK, temperatureK) !== undefined;
 }
 
 /** The state at the zero, or the blend of those at a jump in the shares that hold what is held. */
@@ -193,8 +229,7 @@ function reach(
   if (Math.max(-end.lowValue, end.highValue) < certifiedValue) {
     return -end.lowValue < end.highValue ? end.low : end.high;
   }
-  const low = amountHeld(end.low);
-  return blended(end.low, end.high, (held - low) / (amountHeld(end.high) - low));
+  return blended(end.low, end.high, { held, low: amountHeld(end.low), high: amountHeld(end.high) });
 }
 
 /** The exact state beside a blend of phases that change into one another: what is rare follows the blend's potentials. */

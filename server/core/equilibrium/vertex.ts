@@ -210,9 +210,11 @@ function pivotColumn(
 
 /**
  * The amounts of the finished basis from the elements given, at one stroke: what the steps on the way left of a rare element,
- * after plentiful ones had passed through its balance, is not good enough.
+ * after plentiful ones had passed through its balance, is not good enough. Where several basis phases share a rare element with
+ * plentiful ones, each of their amounts carries the rounding of these; what that leaves of the rare element's own balance is
+ * shared out once more, so that every element adds up to its own last digits.
  */
-function takeAmountsOfBasis({ width, rank, given, inverse, amounts }: Work): void {
+function takeAmountsOfBasis({ set, width, rank, given, inverse, amounts, basis, spare }: Work): void {
   for (let k = 0; k < rank; k += 1) {
     let sum = 0;
     let size = 0;
@@ -222,6 +224,17 @@ function takeAmountsOfBasis({ width, rank, given, inverse, amounts }: Work): voi
       size += Math.abs(part);
     }
     amounts[k] = Math.abs(sum) <= 2e-15 * size ? 0 : sum;
+  }
+  for (let row = 0; row < width; row += 1) {
+    let left = at(given, row);
+    for (let k = 0; k < rank; k += 1) left -= at(set.atoms, at32(basis, k) * width + row) * at(amounts, k);
+    spare[row] = left;
+  }
+  for (let k = 0; k < rank; k += 1) {
+    if (at(amounts, k) === 0) continue;
+    let sum = 0;
+    for (let row = 0; row < width; row += 1) sum += at(spare, row) * at(inverse, row * width + k);
+    amounts[k] = at(amounts, k) + sum;
   }
 }
 
@@ -235,7 +248,7 @@ function blamedRows({ rank, basis, amounts, given }: Work): number[] {
   const rows: number[] = [];
   for (let k = 0; k < rank; k += 1) {
     const phase = at32(basis, k);
-    if (phase < 0 && at(amounts, k) > 1e-9 * Math.max(at(given, -1 - phase), 1e-300)) rows.push(-1 - phase);
+    if (phase < 0 && at(amounts, k) > 1e-10 * Math.max(at(given, -1 - phase), 1e-300)) rows.push(-1 - phase);
   }
   return rows;
 }

@@ -49,6 +49,8 @@ export interface Work {
   isTied: boolean;
   /** Balances with less in them than this keep their potential; 0 to solve every balance that has anything in it. */
   idleBelow: number;
+  /** The amount of gas stays what it is: where traces alone tell it, rounding in their sum with what is plentiful would. */
+  isGasHeld: boolean;
   temperatureK: number;
   /** Scaled amount of gas; 0 when there is none. With the volume held it follows from the partial pressures. */
   gasAmount: number;
@@ -93,6 +95,7 @@ export function workOf(set: CandidateSet): Work {
     presentCount: 0,
     isTied: false,
     idleBelow: 0,
+    isGasHeld: false,
     temperatureK: 0,
     gasAmount: 0,
     fractionSum: 0,
