@@ -18,11 +18,7 @@ const hazard: Rule<HazardFact> = {
     return [{ place: partnerPlace, message: `${quoted(name)} is here` }];
   },
   fixes: ({ mends }) =>
-    mends.map(({ title, place, newText }, index) => ({
-      title,
-      preferred: index === 0 && mends.length === 1,
-      edits: [{ place, newText }],
-    })),
+    mends.map(({ title, preferred, place, newText }) => ({ title, preferred, edits: [{ place, newText }] })),
 };
 
 /** One rule serves every hazard code. */

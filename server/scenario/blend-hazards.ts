@@ -1,19 +1,23 @@
-// The hazards of a blend or oxidant as facts at their places: at the portion, or at the entry that says how it is kept;
-// and what its `acknowledge` lines come to.
+// The hazards of a blend or oxidant as facts at their places: at the portion, or at the entry that says how it is kept; those
+// of a fuel named without a blend, at the entry that names it; and what the `acknowledge` lines come to.
 // Knows no rule and no wording. Invariants: one fact a code and place; what could not be read is not judged, and then no
 // acknowledgement is said to be idle.
 
 import type { Definition, Entry, Span } from '../../grammar/tree.ts';
-import { isPartly } from '../core/hazard/blanket-rules.ts';
+import { aloneRules } from '../core/hazard/alone-rules.ts';
 import { hazardsOf, judgePairs, pairsToJudge, rulesLookedAt } from '../core/hazard/find-hazards.ts';
 import type { Hazard } from '../core/hazard/find-hazards.ts';
-import { isMetal } from '../core/hazard/store.ts';
 import type { Store } from '../core/hazard/store.ts';
+import { standardPressurePa } from '../core/quantity/constants.ts';
+import { quantityOf } from '../core/quantity/quantity.ts';
+import { referenceTemperatureK } from '../core/substance/substance.ts';
 import type { Context } from './context.ts';
-import { isHazardCode } from './hazard-fact.ts';
+import { hazardCodes, isHazardCode } from './hazard-fact.ts';
 import type { HazardFact, HazardPartner } from './hazard-fact.ts';
+import { acknowledgement, mendsOf } from './hazard-mends.ts';
+import type { Material } from './material.ts';
 import type { Screening } from './screening.ts';
-import type { Keeping, StoredBlend } from './stored-blend.ts';
+import { storedBlend, type Keeping, type StoredBlend } from './stored-blend.ts';
 
 /** The entries that say how it is kept, as far as they are written. */
 export interface KeepingEntries {
@@ -40,50 +44,107 @@ export function reportHazards(
   const questions = pairsToJudge(store);
   const judged =
     questions.length === 0 ? [] : context.scope.longWork(judgePairs, `hazard pairs ${keyOf(questions)}`, questions);
-  const acknowledged = new Set(
-    definition.lines.flatMap((line) =>
-      line.kind === 'acknowledge' && line.code && line.reason?.value.trim() ? [line.code.text] : [],
-    ),
-  );
+  const judge = (one: Store): readonly Hazard[] => hazardsOf(one, judged ?? []);
+  const hazards = judge(store);
   const spanOfPortion = (index: number | null): Span | null => {
     const line = index === null ? undefined : definition.lines[parts[partOf[index] ?? -1]?.line ?? -1];
     return line?.kind === 'portion' ? (line.substance?.span ?? line.span) : null;
   };
   const header = definition.name?.span ?? definition.header;
+  const mendable = { definition, store, ...entries, hazards, storeAt: stored.storeAt, judge };
+  tell(hazards, definition, store, context, (hazard) => ({
+    ...placesOf(hazard, spanOfPortion, entries, header),
+    mends: mendsOf(hazard, mendable, context),
+  }));
+  const screening = screeningOf(stored, hazards, rulesLookedAt(store, judged !== null));
+  if (screening.unrecorded.length === 0 && judged !== null && keeping.blanket !== undefined)
+    reportIdle(definition, screening.found, context);
+  return screening;
+}
+
+/**
+ * The hazards of a fuel that is named without a blend, at the place that names it: what it earns by itself, for nothing is
+ * said of how it is kept. Those of a blend are told where it is defined.
+ */
+export function reportFuelHazards(
+  definition: Definition,
+  fuel: Material,
+  entry: Entry,
+  context: Context,
+): Screening | undefined {
+  if (fuel.portions) {
+    reportIdle(definition, [], context);
+    return undefined;
+  }
+  const whole = { name: fuel.name, material: fuel, mass: quantityOf(1), mole: null, volume: null };
+  const stored = storedBlend([whole], unsaidKeeping);
+  const hazards = hazardsOf(stored.store, []).filter(({ code }) => hazardCodes[code].cause === 'alone');
+  const place = entry.phrases[0]?.span ?? entry.span;
+  tell(hazards, definition, stored.store, context, () => ({ place, other: null, mends: [] }));
+  const screening = screeningOf(stored, hazards, aloneRules.length);
+  if (screening.unrecorded.length === 0) reportIdle(definition, screening.found, context);
+  return screening;
+}
+
+const unsaidKeeping: Keeping = {
+  kind: 'tank',
+  temperatureK: referenceTemperatureK,
+  pressurePa: standardPressurePa,
+  blanket: undefined,
+  contact: [],
+  extinguishing: [],
+};
+
+/** Reports each code once a place, as acknowledged where a line of the definition says why. */
+function tell(
+  hazards: readonly Hazard[],
+  definition: Definition,
+  store: Store,
+  context: Context,
+  siteOf: (hazard: Hazard) => {
+    readonly place: Span;
+    readonly other: Span | null;
+    readonly mends: HazardFact['mends'];
+  },
+): void {
+  const acknowledged = new Set(
+    definition.lines.flatMap((line) =>
+      line.kind === 'acknowledge' && line.code && line.reason?.value.trim() ? [line.code.text] : [],
+    ),
+  );
+  // A line whose reason is still to be written is not offered again.
+  const begun = new Set(definition.lines.flatMap((line) => (line.kind === 'acknowledge' ? [line.code?.text] : [])));
   const told = new Set<string>();
-  const hazards = hazardsOf(store, judged ?? []);
   for (const hazard of hazards) {
-    const { place, other } = placesOf(hazard, spanOfPortion, entries, header);
+    const { place, other, mends } = siteOf(hazard);
     const key = `${hazard.code} ${String(place.start)}`;
     if (told.has(key)) continue;
     told.add(key);
-    const portion = hazard.portion === null ? null : (store.portions[hazard.portion]?.name ?? null);
-    const fact: HazardFact = {
+    context.report(place, {
       code: hazard.code,
       severity: acknowledged.has(hazard.code) ? 'information' : severityOf(hazard, store),
       acknowledged: acknowledged.has(hazard.code),
       blend: definition.name?.text ?? '',
-      portion,
+      portion: hazard.portion === null ? null : (store.portions[hazard.portion]?.name ?? null),
       partner: partnerOf(hazard, store),
       partnerPlace: other && context.place(other),
       happens: hazard.happens,
       mend: hazard.mend,
       source: hazard.source,
       numbers: hazard.numbers,
-      mends: mendsOf(hazard, store, entries, context),
-    };
-    context.report(place, fact);
+      mends: [...mends, ...(begun.has(hazard.code) ? [] : [acknowledgement(hazard.code, definition, context)])],
+    });
   }
-  const found = new Set(hazards.map(({ code }) => code));
+}
+
+function screeningOf({ store, materials }: StoredBlend, hazards: readonly Hazard[], looked: number): Screening {
   const unrecorded = store.portions.filter(({ hazards: own }) => own.families.length + own.classes.length === 0);
-  if (unrecorded.length === 0 && judged !== null && keeping.blanket !== undefined)
-    reportIdle(definition, found, context);
   return {
-    rulesLookedAt: rulesLookedAt(store, judged !== null),
-    found: [...found],
+    rulesLookedAt: looked,
+    found: [...new Set(hazards.map(({ code }) => code))],
     unrecorded: [...new Set(unrecorded.map(({ name }) => name))],
     substances: [
-      ...new Map(stored.materials.map(({ name, card: { hazards: own } }) => [name, { name, hazards: own }])).values(),
+      ...new Map(materials.map(({ name, card: { hazards: own } }) => [name, { name, hazards: own }])).values(),
     ],
   };
 }
@@ -152,33 +213,13 @@ function partnerOf({ partner }: Hazard, store: Store): HazardPartner | null {
   }
 }
 
-/** Another blanket, where one is written and would do. */
-function mendsOf(
-  { code, partner }: Hazard,
-  store: Store,
-  { blanket }: KeepingEntries,
-  context: Context,
-): HazardFact['mends'] {
-  const span = blanket?.phrases[0]?.span;
-  if (!span || partner?.kind !== 'gas') return [];
-  if (!['hazard/blanket', 'hazard/superoxide', 'hazard/flammable-range', 'hazard/oxygen-enriched'].includes(code))
-    return [];
-  // Argon suits all; nitrogen is cheaper, and wrong over lithium alone.
-  const holdsLithium = store.portions.some((portion) => isMetal(portion) && isPartly(portion, ['Li']));
-  return (holdsLithium ? ['argon'] : ['nitrogen', 'argon']).map((gas) => ({
-    title: `Blanket it with ${gas}`,
-    place: context.place(span),
-    newText: gas,
-  }));
-}
-
 /** Acknowledgements of what is not there. */
-function reportIdle(definition: Definition, found: ReadonlySet<string>, context: Context): void {
+function reportIdle(definition: Definition, found: readonly string[], context: Context): void {
   for (const line of definition.lines) {
     // One without a reason has been told of already.
     if (line.kind !== 'acknowledge' || !line.code || !line.reason?.value.trim()) continue;
     if (!isHazardCode(line.code.text)) continue;
-    if (!found.has(line.code.text)) {
+    if (!found.includes(line.code.text)) {
       context.report(line.code.span, {
         code: 'name/acknowledged',
         why: 'not-there',

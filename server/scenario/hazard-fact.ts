@@ -25,7 +25,13 @@ export interface HazardFact {
   readonly source: string;
   readonly numbers: HazardNumbers;
   /** Edits that would mend it, the best first. */
-  readonly mends: readonly { readonly title: string; readonly place: Place; readonly newText: string }[];
+  readonly mends: readonly {
+    readonly title: string;
+    /** The only mend of its kind: an editor may apply it without asking which. */
+    readonly preferred: boolean;
+    readonly place: Place;
+    readonly newText: string;
+  }[];
 }
 
 export type HazardPartner =

@@ -103,6 +103,7 @@ export class PlacedAnswer {
       tables: [],
       absent: new Map(),
       lines: [],
+      screening: definition.screening,
     };
     // Read when somebody looks: at most keys nobody does, and a burn solves its states then only.
     return lazily(placed, {

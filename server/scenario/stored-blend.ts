@@ -2,7 +2,7 @@
 // its phase where it is kept, and the gas over it by species.
 // Knows no rule. Invariant: every portion of the store remembers the line of the definition it came from.
 
-import { hazardsOrProven } from '../core/hazard/proven-hazards.ts';
+import { hazardsOfOwn } from '../core/hazard/proven-hazards.ts';
 import { gasOver, phaseAt, portionOf } from '../core/hazard/store.ts';
 import type { ContactMaterial, GasOver, Store, StoredPhase, StoredPortion } from '../core/hazard/store.ts';
 import { quantityOf, quantityOfOutcome, type Quantity } from '../core/quantity/quantity.ts';
@@ -19,6 +19,8 @@ export interface StoredBlend {
   readonly partOf: readonly number[];
   /** By the same index: what it is a portion of, with its card. */
   readonly materials: readonly Material[];
+  /** The same kept at another temperature. */
+  readonly storeAt: (temperatureK: number) => Store;
   /** By the same index: mass shares of the whole with their uncertainty. */
   readonly massShares: () => readonly Quantity[];
 }
@@ -61,7 +63,14 @@ export function storedBlend(shares: readonly PortionShare[], keeping: Keeping): 
     contact,
     extinguishing,
   };
-  return { store, partOf, materials, massShares: () => chains.map(productOf) };
+  const storeAt = (otherK: number): Store => {
+    const otherwise = { ...keeping, temperatureK: otherK };
+    const moved = materials.map((material, index) =>
+      storedPortion(material, portions[index]?.massShare ?? 0, otherwise),
+    );
+    return { ...store, temperatureK: otherK, portions: moved };
+  };
+  return { store, partOf, materials, storeAt, massShares: () => chains.map(productOf) };
 }
 
 /** The share of a share of a share. */
@@ -97,7 +106,7 @@ function storedPortion(material: Material, massShare: number, { temperatureK, pr
     massShare,
     phase: phaseAt(usualPhase, points, temperatureK, pressurePa),
     usualPhase,
-    hazards: hazardsOrProven(card.hazards, molPerKg),
+    hazards: hazardsOfOwn(card.hazards, molPerKg),
     formula,
     molPerKg,
     molarMassKgPerMol: molarMass?.value ?? null,

@@ -9,6 +9,7 @@ import { celsiusZeroK } from '../../core/quantity/constants.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { referenceTemperatureK } from '../../core/substance/substance.ts';
+import { reportFuelHazards } from '../blend-hazards.ts';
 import { fuelStream, oxidantStream } from '../burn-streams.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type DefinitionRead, type EntriesRead } from '../entries.ts';
@@ -49,6 +50,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const header = definition.name?.span ?? definition.header;
   const amount = amountOf(read, broken, header, context);
   reportContradictions(read, context);
+  const screening = read.fuel && reportFuelHazards(definition, read.fuel.value, read.fuel.entry, context);
   // A line that could not be read may be the very one the flame rests on: its own finding says enough.
   const isBroken = broken.size > 0 || definition.lines.some((line) => line.kind === 'broken-line');
   if (!read.fuel || !read.oxidant || !amount || isBroken) return unknownAnswer(evaluated);
@@ -83,7 +85,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const hasSize = asked.sizes.dropletSize !== null || asked.sizes.particleSize !== null;
   const entryPlaces = workingPlaces(read, context);
   return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null },
+    { figures: [], tables: [], absent: new Map(), lines: [], material: null, screening },
     {
       figures: () => figuresOf(solved, question, asked, (row) => burnWorking(row, written, solved, names, entryPlaces)),
       tables: () => [

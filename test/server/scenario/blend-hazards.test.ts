@@ -100,14 +100,107 @@ test('air that nobody spoke of is no error, air that is written is', () => {
   expect(severity('  blanket: nitrogen\n')).toBeUndefined();
 });
 
-test('another blanket is offered where one is written', () => {
-  const text = 'blend metal {\n  30 % mass lithium\n  rest gas_oil\n  blanket: nitrogen\n}\n';
-  const [fix, ...others] = hazardsIn(text).find(({ code }) => code === 'hazard/blanket')?.fixes ?? [];
-  expect(others).toEqual([]);
-  const [edit] = fix?.edits ?? [];
-  expect(text.slice(0, edit?.place.start) + (edit?.newText ?? '') + text.slice(edit?.place.end)).toContain(
-    'blanket: argon\n',
-  );
+describe('mends', () => {
+  /** The text after each mend of the code's first finding, by the mend's title; acknowledgements apart. */
+  const mendsIn = (text: string, code: string): Readonly<Record<string, string>> => {
+    const fixes = hazardsIn(text).find((finding) => finding.code === code)?.fixes ?? [];
+    return Object.fromEntries(
+      fixes
+        .filter(({ title }) => !title.startsWith('Acknowledge'))
+        .map(({ title, edits: [edit] }) => [
+          title,
+          text.slice(0, edit?.place.start) + (edit?.newText ?? '') + text.slice(edit?.place.end),
+        ]),
+    );
+  };
+  const isGone = (text: string, code: string): boolean => hazardsIn(text).every((finding) => finding.code !== code);
+
+  test('another blanket where one is written, and only one that mends', () => {
+    const text = 'blend metal {\n  30 % mass lithium\n  rest gas_oil\n  blanket: nitrogen\n}\n';
+    const mends = mendsIn(text, 'hazard/blanket');
+    expect(Object.keys(mends)).toEqual(['Blanket it with argon']);
+    expect(Object.values(mends)[0]).toContain('\n  blanket: argon\n');
+    expect(isGone(Object.values(mends)[0] ?? '', 'hazard/blanket')).toBe(true);
+  });
+
+  test('a line with a blanket where none is, behind the comment of the last one', () => {
+    const text = 'blend spirit {\r\n\t100 % ethanol # neat }\r\n}\r\n';
+    const mends = mendsIn(text, 'hazard/flammable-range');
+    expect(mends['Blanket it with nitrogen']).toBe(
+      'blend spirit {\r\n\t100 % ethanol # neat }\r\n\tblanket: nitrogen\r\n}\r\n',
+    );
+    expect(isGone(mends['Blanket it with nitrogen'] ?? '', 'hazard/flammable-range')).toBe(true);
+  });
+
+  test('on one line as well', () => {
+    const mends = mendsIn('blend spirit { 100 % ethanol }\n', 'hazard/flammable-range');
+    expect(isGone(mends['Blanket it with nitrogen'] ?? '', 'hazard/flammable-range')).toBe(true);
+  });
+
+  test.each([
+    ['hazard/near-flash-point', '100 % gas_oil', '55 degC', 'Store it at 50 degC, 10 K below its flash point'],
+    ['hazard/near-flash-point', '100 % gas_oil', '328 K', 'Store it at 323 K, 10 K below its flash point'],
+    ['hazard/flammable-range', '100 % gas_oil', '70 degC', 'Store it at 50 degC, 10 K below its flash point'],
+    ['hazard/molten-metal', '100 % sodium', '120 degC', 'Store it at 87 degC, 10 K below its melting point'],
+    ['hazard/molten-metal', '100 % sodium', '120 ± 5 degC', 'Store it at 87 degC, 10 K below its melting point'],
+  ])('%s: a lower temperature for %s at %s', (code, portion, stored, title) => {
+    const text = `blend it {\n  ${portion}\n  stored: ${stored}, 1 atm\n}\n`;
+    const mended = mendsIn(text, code)[title] ?? '';
+    expect(mended).toContain(', 1 atm');
+    expect(isGone(mended, code)).toBe(true);
+  });
+
+  test('no cold below freezing, and none where the temperature is not the matter or not a number', () => {
+    const titles = (text: string, code: string): string => Object.keys(mendsIn(text, code)).join();
+    expect(titles('blend it {\n  100 % petrol\n  stored: 20 degC\n}\n', 'hazard/flammable-range')).not.toContain(
+      'Store',
+    );
+    const named = 'let warm = 120 degC\nblend it {\n  100 % sodium\n  stored: warm\n  blanket: argon\n}\n';
+    expect(titles(named, 'hazard/molten-metal')).toBe('');
+  });
+});
+
+test.each([
+  ['H260', 'hazard/water-reactive'],
+  ['H261', 'hazard/water-reactive'],
+  ['H250', 'hazard/pyrophoric'],
+  ['H272', 'hazard/oxidiser'],
+  ['H242', 'hazard/unstable'],
+  ['H330', 'hazard/toxic'],
+])('a class said of a substance of the scenario counts: %s', (statement, code) => {
+  const text = (hazards: string): string =>
+    `substance additive {\n  phase: solid\n  composition: 40 % C, 40 % Na, 20 % O\n${hazards}}\nblend it {\n  100 % additive\n  blanket: argon\n}\n`;
+  const codes = (hazards: string): readonly string[] => hazardsIn(text(hazards)).map((finding) => finding.code);
+  expect(codes(`  hazards: ${statement}\n`)).toContain(code);
+  expect(codes('')).toEqual([]);
+});
+
+describe('a fuel named without a blend', () => {
+  const flame = 'oxidant o {\n  100 % air\n}\nburn fire {\n  fuel: FUEL\n  oxidant: o\n  lambda: 2\n}\n';
+
+  test('is told where it is named, by what it is and not by how it may be kept', () => {
+    const text = flame.replace('FUEL', 'sodium');
+    const found = hazardsIn(text);
+    expect(found.map(({ code }) => code)).toEqual(['hazard/water-reactive']);
+    expect(text.slice(found[0]?.place.start, found[0]?.place.end)).toBe('sodium');
+    const acknowledged = text.replace('  lambda', '  acknowledge hazard/water-reactive: "note 7"\n  lambda');
+    expect(hazardsIn(acknowledged)).toMatchObject([{ severity: 'information', acknowledged: true }]);
+  });
+
+  test('a blend is told where it is defined, and there alone', () => {
+    const text = `blend slurry {\n  30 % mass sodium\n  rest gas_oil\n  blanket: argon\n}\n${flame.replace('FUEL', 'slurry')}`;
+    expect(hazardsIn(text).map(({ code }) => code)).toEqual(['hazard/water-reactive']);
+    const idle = text.replace('  lambda', '  acknowledge hazard/water-reactive: "note 7"\n  lambda');
+    expect(findingsOf(evaluateText(idle)).map(({ code }) => code)).toContain('name/acknowledged');
+  });
+
+  test('one of the scenario by what it says of itself', () => {
+    const substance =
+      'substance drum {\n  phase: solid\n  composition: 99.7 % Na, 0.3 % Ca\n  lower heating value: 9 MJ/kg\n  hazards: H260, alkali-metal\n}\n';
+    expect(hazardsIn(substance + flame.replace('FUEL', 'drum')).map(({ code }) => code)).toContain(
+      'hazard/water-reactive',
+    );
+  });
 });
 
 test('a technical metal is known by its atoms', () => {
