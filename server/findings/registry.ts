@@ -16,6 +16,8 @@ import { balanceProducts } from './balance-products.ts';
 import { balanceShares } from './balance-shares.ts';
 import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
+import { engineMeasuredFuel } from './engine-measured-fuel.ts';
+import { engineRepeatedLoad } from './engine-repeated-load.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
 import { hazardRules } from './hazard.ts';
@@ -142,6 +144,8 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/cold-charge': rangeColdCharge,
   'range/real-gas': rangeRealGas,
   ...hazardRules,
+  'engine/measured-fuel': engineMeasuredFuel,
+  'engine/repeated-load': engineRepeatedLoad,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,
   'kind/not-evaluated': kindNotEvaluated,

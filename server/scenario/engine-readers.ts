@@ -2,7 +2,7 @@
 // pilot fuel, and emissions that slip through. Each reports what it cannot take, at that phrase.
 // Knows nothing of cycles and works nothing out. Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Expression, Phrase, PhraseItem } from '../../grammar/tree.ts';
+import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
@@ -10,6 +10,7 @@ import type { Context } from './context.ts';
 import type { Reader } from './entries.ts';
 import { evaluateExpression } from './expressions.ts';
 import type { PilotEntry, SlipEntry } from './machinery.ts';
+import type { Material } from './material.ts';
 import { materialNamed } from './materials.ts';
 import { fit, type Needed } from './read-quantity.ts';
 import {
@@ -62,6 +63,8 @@ export function atLoadsReader(unit: string, what: string, range: 'positive' | 's
 
 /** What a specific consumption was measured on. */
 export interface MeasuredOn {
+  /** The fuel it was measured with, where it is not the engine's own. */
+  readonly fuel: Material | null;
   /** J/kg of the fuel it was measured with. */
   readonly heatingValue: Quantity | null;
   readonly basis: 'lower' | 'higher';
@@ -74,17 +77,28 @@ export interface MeasuredOn {
 /** `42.7 MJ/kg lower, tolerance 5 %`, and the ambient state as `25 degC, 100 kPa`, in any order. */
 export const measuredOnReader: Reader<MeasuredOn> = {
   takes:
-    'a heating value with `lower` or `higher`, `tolerance` and a share, and the ambient temperature and pressure: `42.7 MJ/kg lower, tolerance 5 %, 25 degC, 100 kPa`',
+    "a heating value with `lower` or `higher`, `tolerance` and a share, the fuel if it is not the engine's own, and the ambient temperature and pressure: `42.7 MJ/kg lower, tolerance 5 %, gas_oil, 25 degC, 100 kPa`",
   words: ['lower', 'higher', 'tolerance'],
+  names: true,
   unit: 'MJ/kg',
   otherUnits: ['%', 'degC', 'kPa'],
   read(entry, context) {
     const { takes } = measuredOnReader;
-    let read: MeasuredOn = { heatingValue: null, basis: 'lower', tolerance: null, temperature: null, pressure: null };
+    let read: MeasuredOn = {
+      fuel: null,
+      heatingValue: null,
+      basis: 'lower',
+      tolerance: null,
+      temperature: null,
+      pressure: null,
+    };
     for (const phrase of entry.phrases) {
-      const part = isWord(phrase.items[0], 'tolerance')
+      const [first, second] = phrase.items;
+      const part = isWord(first, 'tolerance')
         ? readTolerance(entry, phrase, context)
-        : readMeasuredPhrase(entry, phrase, context);
+        : first?.kind === 'word' && !second && isFuelName(first, context)
+          ? readMeasuredFuel(first, context)
+          : readMeasuredPhrase(entry, phrase, context);
       if (!part) return undefined;
       const isTwice = Object.keys(part).some((key) => key !== 'basis' && read[key as keyof MeasuredOn] !== null);
       if (isTwice) return refuse(entry, phrase, takes, context);
@@ -93,6 +107,16 @@ export const measuredOnReader: Reader<MeasuredOn> = {
     return read;
   },
 };
+
+/** A bare word that stands for no number is a fuel's name. */
+function isFuelName(word: Word, context: Context): boolean {
+  return context.scope.lookup(word.text)?.kind !== 'value';
+}
+
+function readMeasuredFuel(word: Word, context: Context): Partial<MeasuredOn> | undefined {
+  const fuel = materialNamed(word, context);
+  return fuel ? { fuel } : undefined;
+}
 
 function readTolerance(entry: Entry, phrase: Phrase, context: Context): Partial<MeasuredOn> | undefined {
   const { takes } = measuredOnReader;

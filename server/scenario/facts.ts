@@ -13,10 +13,12 @@ import type { Quantity } from '../core/quantity/quantity.ts';
 import type { HazardFact } from './hazard-fact.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
+import type { WorkFact } from './work-facts.ts';
 
 export type Fact =
   | SyntaxFact
   | HazardFact
+  | WorkFact
   /** A word stands for nothing. `what` says what was looked for. */
   | {
       readonly code: 'name/unknown';

@@ -27,6 +27,9 @@ export interface BurningEngine {
   readonly consumption: Consumption | null;
   /** J of fuel per J of work at the rating, or as the cycle was worked out. */
   readonly ratedHeatRate: Band;
+  /** What is uncertain about its consumption, and the consumption at other values of that, in the same order. */
+  readonly uncertain: readonly Quantity[];
+  readonly consumptionAt: (values: readonly number[]) => Consumption | null;
   readonly pilot: PilotEntry | null;
   readonly slips: EngineSlips;
   readonly assumptions: readonly AssumptionId[];

@@ -3,6 +3,7 @@
 
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Place } from './place.ts';
+import type { WorkAssumptionId, WorkMethodId } from './work-methods.ts';
 
 export interface Working {
   readonly method: MethodId;
@@ -23,6 +24,7 @@ export interface WorkingInput {
 }
 
 export type MethodId =
+  | WorkMethodId
   | 'as-given'
   | 'molar-mass'
   | 'mean-molar-mass'
@@ -73,6 +75,7 @@ export type MethodId =
   | 'ullage-water';
 
 export type AssumptionId =
+  | WorkAssumptionId
   | 'reference-state'
   | 'ideal-mixing-enthalpy'
   | 'volumes-add'

@@ -4,17 +4,8 @@
 // Sources of the methods: language reference, "Conventions the answers rest on", and the textbooks named in the rows.
 
 import type { MethodId } from '../scenario/working.ts';
-
-export interface MethodText {
-  /** What was done, one sentence. */
-  readonly words: string;
-  /** The equation in symbols, or null where there is nothing to write down. */
-  readonly equation: string | null;
-  /** What the symbols mean; empty without an equation. */
-  readonly symbols: string;
-  /** Where the result is valid; one sentence. */
-  readonly validity: string;
-}
+import type { MethodText } from './method-text.ts';
+import { workMethods } from './work-methods.ts';
 
 /** The text of a method. */
 export function methodText(method: MethodId): MethodText {
@@ -22,6 +13,7 @@ export function methodText(method: MethodId): MethodText {
 }
 
 const methods: Readonly<Record<MethodId, MethodText>> = {
+  ...workMethods,
   'as-given': {
     words: 'Taken as it is given.',
     equation: null,

@@ -79,6 +79,10 @@ export const engineEntries = {
     name: 'lambda',
     reader: quantityReader('1', 'a number, such as `2.1`', { range: 'positive' }),
     help: 'The excess-air ratio λ of what is trapped in the cylinder, or of the combustor.',
+    default: {
+      text: '2.2 where consumption was measured',
+      source: 'common practice of turbocharged compression-ignition engines',
+    },
   },
   pilot: {
     name: 'pilot',
@@ -153,7 +157,10 @@ export const engineEntries = {
     name: 'exhaust temperature',
     reader: temperature('350 degC'),
     help: 'Where the exhaust leaves. A measured consumption is carried over to another fuel by the heat released above it.',
-    default: { text: '350 °C', source: 'common practice behind the turbine of a compression-ignition engine' },
+    default: {
+      text: '350 °C where consumption was measured',
+      source: 'common practice behind the turbine of a compression-ignition engine',
+    },
   },
   metalTemperature: {
     name: 'metal temperature',

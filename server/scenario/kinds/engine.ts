@@ -5,7 +5,9 @@
 import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
+import { consumptionFigures } from '../engine-consumption.ts';
 import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
+import { evaluateMeasured } from './engine-measured.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 /** The way of each cycle; null for one that is not worked out yet. */
@@ -17,7 +19,7 @@ const cycles: Readonly<Record<CycleWord, EngineWay | null>> = {
   rankine: null,
 };
 
-const evaluated: EvaluatedKind = { entries: engineEntries, lines: [], figures: [], evaluate };
+const evaluated: EvaluatedKind = { entries: engineEntries, lines: [], figures: consumptionFigures, evaluate };
 
 export const engine: Kind = {
   kind: 'engine',
@@ -44,7 +46,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     const way = cycles[read.cycle.value];
     return way ? way(asked) : notEvaluated(definition, context);
   }
-  if (isMeasured) return notEvaluated(definition, context);
+  if (measured) return evaluateMeasured(asked);
+  if (isMeasured) return unknownAnswer(evaluated);
   if (!broken.has('cycle')) {
     const entries = [engineEntries.cycle, engineEntries.specificFuelConsumption, engineEntries.efficiency];
     context.report(definition.name?.span ?? definition.header, {
