@@ -1,20 +1,12 @@
-// What the condensed products of a state would do on a wall: where their salts begin to melt, stick and run off, as one
-// mixed deposit. Joins states to core/equilibrium/melts.ts. Knows no walls but their temperatures.
+// What the condensed products of a burn would do on its walls: where their deposit sticks. Knows no walls but their
+// temperatures.
 // Invariant: a wall is looked at in the products' equilibrium at its own temperature, as what meets it is cooled to that.
 
-import type { Burn, MatterState } from '../../core/burn/burn.ts';
+import type { Burn } from '../../core/burn/burn.ts';
+import { depositOf } from '../../core/burn/deposit.ts';
 import { productRows } from '../../core/burn/products.ts';
-import { saltMelting, type SaltMelting } from '../../core/equilibrium/melts.ts';
+import type { SaltMelting } from '../../core/equilibrium/melts.ts';
 import type { TemperatureRange } from '../burn-readers.ts';
-
-/** Melting of the condensed products of a state as one deposit; undefined without salts that are known. */
-export function depositOf(state: MatterState): SaltMelting | undefined {
-  const { candidates, amountsMol } = state;
-  const condensed = candidates.phases
-    .map(({ formula }, phase) => ({ formula, mol: amountsMol[phase] ?? 0 }))
-    .filter(({ formula, mol }) => formula.phase !== 'g' && formula.text !== 'H2O' && mol > 0);
-  return condensed.length === 0 ? undefined : saltMelting(condensed);
-}
 
 /** Where walls of a range are met by a sticky deposit, or by one of which that is not known. */
 export interface DoubtfulWalls {

@@ -5,11 +5,11 @@
 
 import type { Burn, BurnStateOrNone, MatterState } from '../../core/burn/burn.ts';
 import { heatGivenOff } from '../../core/burn/burn-held.ts';
+import { depositOf } from '../../core/burn/deposit.ts';
 import { alkaliFates, carbonFate, carbonFormOf, shareOfForm, type Fate } from '../../core/burn/fates.ts';
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { lazily } from '../lazily.ts';
-import { depositOf } from './burn-deposits.ts';
 import { burnPathTables } from './burn-path-tables.ts';
 import {
   isShown,
