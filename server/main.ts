@@ -8,10 +8,14 @@ import { nodeWorkers } from './jobs/node-worker.ts';
 import { startServer } from './lsp/connection.ts';
 import { wholeMessages } from './lsp/framing.ts';
 import { readLocalFile } from './lsp/local-files.ts';
+import { messageWriter } from './lsp/message-writer.ts';
+
+/** The library takes a writer beside a stream to read from, whose end it then watches for; its types ask for two streams. */
+const output = (): NodeJS.WritableStream => messageWriter(process.stdout) as unknown as NodeJS.WritableStream;
 
 // Any other transport is chosen by the library, from the program's arguments.
 const connection = process.argv.includes('--stdio')
-  ? createConnection(ProposedFeatures.all, wholeMessages(process.stdin), process.stdout)
+  ? createConnection(ProposedFeatures.all, wholeMessages(process.stdin), output())
   : createConnection(ProposedFeatures.all);
 startServer(connection, {
   readFile: readLocalFile,

@@ -17,7 +17,7 @@ const MOST_ELEMENTS = 4;
 
 export const balanceElements: Rule<Unbalanced> = {
   severity: 'error',
-  message: (fact, site) => {
+  messageAt: (fact, site) => {
     const ion = ionMeant(site);
     const hint =
       ion &&

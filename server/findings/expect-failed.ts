@@ -13,7 +13,7 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const expectFailed: Rule<FactOf<'expect/failed'>> = {
   severity: 'error',
-  message: ({ claim, found, unit, limit, tolerance }, { place, file }) => {
+  messageAt: ({ claim, found, unit, limit, tolerance }, { place, file }) => {
     // In the unit the claim is written in, so that found and limit are compared at sight.
     const told = unitOfClaim(place, found, file) ?? unit;
     const shown = `${quoted(claim)} does not hold: found ${toldApart(found, limit, told)}`;

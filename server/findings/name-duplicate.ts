@@ -7,7 +7,7 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const nameDuplicate: Rule<FactOf<'name/duplicate'>> = {
   severity: 'error',
-  message: ({ name, others }, { place }) => {
+  messageAt: ({ name, others }, { place }) => {
     const elsewhere = others.find(({ path }) => path !== place.path);
     const where = elsewhere ? ` (also in ${elsewhere.path})` : '';
     return `${quoted(name)} is defined more than once${where}, so it could mean either. Rename one of them.`;

@@ -15,13 +15,18 @@ export type FactOf<Code extends Fact['code']> = Code extends SyntaxFact['code']
     ? HazardFact
     : Extract<Fact, { readonly code: Code }>;
 
-export interface Rule<F extends Fact> {
+export type Rule<F extends Fact> = Message<F> & {
   /** One for all, or by what the fact says. */
   readonly severity: Severity | ((fact: F) => Severity);
-  readonly message: (fact: F, site: Site) => string;
   readonly related?: (fact: F, site: Site) => Finding['related'];
   readonly fixes?: (fact: F, site: Site) => readonly Fix[];
-}
+};
+
+type Message<F extends Fact> =
+  /** Says nothing that depends on where the fact stands, so that it is made once for a fact that moves. */
+  | { readonly message: (fact: F) => string }
+  /** Quotes the text, or what else there is at the place. */
+  | { readonly messageAt: (fact: F, site: Site) => string };
 
 /** Where a fact stands. */
 export interface Site {

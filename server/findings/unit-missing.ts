@@ -7,7 +7,7 @@ import { replacements, textAt, type FactOf, type Rule, type Site } from './rule.
 
 export const unitMissing: Rule<FactOf<'unit/missing'>> = {
   severity: 'error',
-  message: ({ needed, example }, site) =>
+  messageAt: ({ needed, example }, site) =>
     `${quoted(textAt(site))} has no unit, but ${dimensionPhrase({ dimension: needed, kind: 'plain' })} is needed here. ` +
     `Write for example ${quoted(withUnitWritten(example, site))}.`,
   fixes: ({ example }, site) =>

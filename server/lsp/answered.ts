@@ -33,6 +33,7 @@ function cancelled(): ResponseError {
   return new ResponseError(LSPErrorCodes.RequestCancelled, 'The request was cancelled.');
 }
 
-function turn(): Promise<void> {
+/** Resolves once the messages that wait have been taken in. */
+export function turn(): Promise<void> {
   return new Promise((resolve) => setTimeout(resolve, 0));
 }

@@ -23,6 +23,7 @@ import { jobs } from '../jobs/jobs.ts';
 import { JobRunner } from '../jobs/runner.ts';
 import { abilitiesOf, folderAddresses } from './abilities.ts';
 import { addressOf } from './addresses.ts';
+import { turn } from './answered.ts';
 import { toDiagnostic } from './convert.ts';
 import { OpenDocuments } from './documents.ts';
 import { Evaluations, type Evaluated } from './evaluations.ts';
@@ -89,7 +90,11 @@ export function startServer(connection: Connection, host: Host = {}): void {
     try {
       const publish = (evaluated: Evaluated): void => publications.replace(evaluated.address, said(evaluated));
       const evaluated = await evaluations.current(uri, publish);
-      if (evaluated) publish(evaluated);
+      // A list can be long, and whoever asked for something while it was worked out waits for one short answer: what has
+      // been asked is taken in at one turn and answered by the next. A text that moved on meanwhile is looked at again.
+      await turn();
+      await turn();
+      if (evaluated && documents.get(uri)?.version === evaluated.document.version) publish(evaluated);
     } catch (error) {
       log(`Publishing the findings of ${uri} failed: ${String(error)}`);
     }

@@ -12,6 +12,7 @@ import { JobRunner } from '../jobs/runner.ts';
 import type { Answer } from '../scenario/answer.ts';
 import { evaluateInSteps } from '../scenario/evaluate.ts';
 import type { ReadAnswer, Reading } from '../scenario/files.ts';
+import { lazily } from '../scenario/lazily.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
 import { addressOf, folderOf, isInside, uriOf } from './addresses.ts';
@@ -155,12 +156,20 @@ export class Evaluations {
       this.log(`The evaluation of ${uri} failed: ${detail}`);
       return { ...own, scenario: null, findings: [failure(address, error)] };
     };
+    const findingsIn = (scenario: EvaluatedScenario): readonly Finding[] => {
+      try {
+        return findingsOf(scenario);
+      } catch (error) {
+        return failed(error).findings;
+      }
+    };
     const evaluatedOf = (scenario: EvaluatedScenario): Evaluated => {
       try {
         for (const { path, tree } of scenario.files) {
           if (!texts.has(path)) texts.set(path, this.#placed(path, tree.text));
         }
-        return { ...own, scenario, findings: findingsOf(scenario) };
+        // Put into words when somebody reads them: a hover does not.
+        return lazily<Evaluated>({ ...own, scenario, findings: [] }, { findings: () => findingsIn(scenario) });
       } catch (error) {
         return failed(error);
       }

@@ -22,7 +22,7 @@ export type Send = (uri: string, version: number | null, diagnostics: readonly D
 interface Sent {
   readonly uri: string;
   readonly version: number | null;
-  readonly list: string;
+  readonly diagnostics: readonly Diagnostic[];
 }
 
 export class Publications {
@@ -65,11 +65,11 @@ export class Publications {
       return;
     }
     const diagnostics = once(said.flatMap((one) => one.diagnostics));
-    const next: Sent = { uri, version: open?.version ?? null, list: JSON.stringify(diagnostics) };
+    const next: Sent = { uri, version: open?.version ?? null, diagnostics };
     const last = this.#sent.get(address);
     // The same list for a newer version is sent: the editor has moved its marks with the edits in between, and a mark whose
     // text was deleted and typed again is gone although the list is the same.
-    if (last?.uri === next.uri && last.version === next.version && last.list === next.list) return;
+    if (last?.uri === next.uri && last.version === next.version && isSame(last.diagnostics, diagnostics)) return;
     if (last && last.uri !== next.uri) this.#clear(address);
     // A closed file without findings that never had any need not be spoken of.
     if (!open && !this.#sent.has(address) && diagnostics.length === 0) return;
@@ -92,10 +92,26 @@ export class Publications {
   }
 }
 
+/** Each finding once. Those that begin at one place and bear one code are few, so only they are compared in full. */
 function once(diagnostics: readonly Diagnostic[]): Diagnostic[] {
-  const seen = new Set<string>();
-  return diagnostics.filter(({ range, code, message }) => {
-    const key = JSON.stringify([range, code, message]);
-    return !seen.has(key) && seen.add(key);
+  const seen = new Map<string, Diagnostic[]>();
+  return diagnostics.filter((diagnostic) => {
+    const { range, code } = diagnostic;
+    const key = `${range.start.line} ${range.start.character} ${String(code)}`;
+    const others = seen.get(key);
+    if (!others) seen.set(key, [diagnostic]);
+    else if (others.some((other) => saysTheSame(other, diagnostic))) return false;
+    else others.push(diagnostic);
+    return true;
   });
+}
+
+/** Of two that begin at one place. */
+function saysTheSame(first: Diagnostic, second: Diagnostic): boolean {
+  const [end, otherEnd] = [first.range.end, second.range.end];
+  return first.message === second.message && end.line === otherEnd.line && end.character === otherEnd.character;
+}
+
+function isSame(first: readonly Diagnostic[], second: readonly Diagnostic[]): boolean {
+  return first.length === second.length && JSON.stringify(first) === JSON.stringify(second);
 }

@@ -5,6 +5,7 @@
 import type { PlacedSection } from '../../grammar/tree.ts';
 import { quantityOf } from '../core/quantity/quantity.ts';
 import type { Answer } from './answer.ts';
+import type { Fact } from './facts.ts';
 import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
 import type {
@@ -33,6 +34,14 @@ export function placeAnswer(answer: Answer, path: string, placed: PlacedSection)
 
 const lastPlaced = new WeakMap<Answer, PlacedAnswer>();
 
+/** The fact as its statement told it: one and the same for as long as that is not answered anew, wherever it stands. */
+export function sourceOf(fact: Fact): Fact {
+  return sources.get(fact) ?? fact;
+}
+
+/** Of the facts that hold places, by the copies in which those are put where they are now. */
+const sources = new WeakMap<Fact, Fact>();
+
 export class PlacedAnswer {
   readonly definition: EvaluatedDefinition | null;
   readonly value: EvaluatedValue | null;
@@ -51,7 +60,7 @@ export class PlacedAnswer {
       named && named.kind !== 'value' && named.kind !== 'unknown' ? this.#place(named.definition) : null;
     this.value = named?.kind === 'value' ? this.#placeValue(named.value) : null;
     this.expectation = expectation && { ...expectation, place: this.#placeOf(expectation.place) };
-    this.facts = facts.map(({ fact, place }) => ({ fact: this.#withPlaces(fact), place: this.#placeOf(place) }));
+    this.facts = facts.map(({ fact, place }) => ({ fact: this.#placeFact(fact), place: this.#placeOf(place) }));
   }
 
   standsAt(path: string, { start, section }: PlacedSection): boolean {
@@ -126,6 +135,12 @@ export class PlacedAnswer {
         working: () => this.#withPlaces(figure.working),
       });
     });
+  }
+
+  #placeFact(fact: Fact): Fact {
+    const placed = this.#withPlaces(fact);
+    if (placed !== fact) sources.set(placed, fact);
+    return placed;
   }
 
   #placeValue(value: EvaluatedValue): EvaluatedValue {

@@ -69,6 +69,17 @@ describe('a hover', () => {
     expect(JSON.stringify(hover)).toContain('7 kn');
   });
 
+  it('asked behind a change is answered before the list of findings goes out', async () => {
+    await open('let alpha = 38 nmi\n');
+    await client.diagnosticsOf(MAIN, 1);
+    for (let round = 0; round < 5; round++) {
+      const version = await client.change(MAIN, `let alpha = ${round} kn\n`);
+      await client.connection.sendRequest(HoverRequest.type, at);
+      expect(client.published.at(-1)?.version).toBe(version - 1);
+      await client.diagnosticsOf(MAIN, version);
+    }
+  });
+
   it('is nothing where nothing is', async () => {
     await open('\n\nlet alpha = 38 nmi\n');
     expect(await client.connection.sendRequest(HoverRequest.type, at)).toBeNull();

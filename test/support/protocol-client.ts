@@ -25,6 +25,7 @@ import {
   type PublishDiagnosticsParams,
 } from 'vscode-languageserver/node';
 import { readFileRequest, startServer, type Host } from '../../server/lsp/connection.ts';
+import { messageWriter } from '../../server/lsp/message-writer.ts';
 import { editBetween } from './edit-between.ts';
 
 export const FULL_CAPABILITIES: ClientCapabilities = {
@@ -117,7 +118,7 @@ export class ProtocolClient {
   /** A client and a server in this process, not yet introduced to each other. */
   static inProcess(options: ClientOptions = {}): ProtocolClient {
     const [near, far] = pipes();
-    const server = createConnection(new StreamMessageReader(far), new StreamMessageWriter(far));
+    const server = createConnection(new StreamMessageReader(far), messageWriter(far));
     startServer(server, options.host);
     const connection = createProtocolConnection(new StreamMessageReader(near), new StreamMessageWriter(near));
     const client = new ProtocolClient(connection, null, options);

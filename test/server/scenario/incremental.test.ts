@@ -5,6 +5,7 @@ import path from 'node:path';
 import { isDeepStrictEqual } from 'node:util';
 import fc from 'fast-check';
 import { describe, expect, it, test } from 'vitest';
+import { findingsOf } from '../../../server/findings/registry.ts';
 import { MemoStore } from '../../../server/jobs/memo.ts';
 import type { Answer } from '../../../server/scenario/answer.ts';
 import { evaluate, evaluateInSteps } from '../../../server/scenario/evaluate.ts';
@@ -54,6 +55,8 @@ function readerOf(texts: Texts) {
 
 function expectSame(incremental: EvaluatedScenario, fresh: EvaluatedScenario): void {
   if (!isDeepStrictEqual(incremental, fresh)) expect(incremental).toStrictEqual(fresh);
+  // What is put into words once must be the words for the text as it is now.
+  expect(findingsOf(incremental)).toEqual(findingsOf(fresh));
 }
 
 const TEXT = `# A small house.
