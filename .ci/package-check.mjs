@@ -24,6 +24,8 @@ const CONTENTS = [
   'extension/dist/extension.cjs',
   'extension/dist/server.cjs',
   'extension/dist/worker.cjs',
+  'extension/examples/reference/codes.md',
+  'extension/examples/reference/hazards.md',
   'extension/grammar/language-configuration.json',
   'extension/grammar/stokehold.tmLanguage.json',
   'extension/package.json',

@@ -9,6 +9,7 @@ import {
   type LanguageClientOptions,
   type ServerOptions,
 } from 'vscode-languageclient/node';
+import { linkingCodes, registerFindingPages } from './finding-pages.ts';
 import { readFile, type FileAnswer } from './read-file.ts';
 import { tellingWhenOpened, tellWhatIsVisible } from './visible-ranges.ts';
 
@@ -28,12 +29,13 @@ export function activate(context: ExtensionContext): StokeholdApi {
     // No scheme is named: scenarios in unsaved buffers, remote folders and virtual workspaces are served alike.
     documentSelector: [{ language: 'stokehold' }],
     initializationOptions: { readFile: true, suggestCommand: 'editor.action.triggerSuggest' },
-    middleware: tellingWhenOpened(() => client),
+    middleware: { ...tellingWhenOpened(() => client), ...linkingCodes() },
   };
   const started = new LanguageClient('stokehold', 'Stokehold', serverOptions, clientOptions);
   client = started;
   context.subscriptions.push(
     ...tellWhatIsVisible(() => client),
+    registerFindingPages(context.extensionUri),
     started.onRequest<FileAnswer, void>('stokehold/readFile', ({ uri }: { uri: string }) => readFile(uri)),
     // A server that failed too often is not started again by the client itself, so there is a way to ask for it.
     commands.registerCommand('stokehold.restartServer', () => started.restart()),

@@ -20,6 +20,13 @@ export function hazardsPage(command: string): string {
     'it never says that a blend is safe. Follow the safety data sheet, class, flag and local rules; a competent person',
     'approves the design. Numbers are per kilogram of the blend and upper bounds.',
     '',
+    'A blend without a `blanket` is taken to have air over it, as a vented tank has. What rests on that guess alone is a',
+    'warning, not an error: a blend that is still being written down should not stop a run for a tank nobody has spoken of.',
+    'Write `blanket: air` and it is an error where it is one, or write the gas that is really there.',
+    '',
+    'A fuel that another definition names without a blend (`fuel: sodium`) is told there, by what it is alone, for nothing is',
+    'said of how it is kept. A blend is told where it is defined, once, however many definitions burn it.',
+    '',
     'A code is accepted with a reason inside its definition: `acknowledge hazard/water-reactive: "closed tanks; note 7"`.',
   ];
   for (const [code, { cause, says }] of Object.entries(hazardCodes)) {

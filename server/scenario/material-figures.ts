@@ -318,6 +318,7 @@ function workingOf(row: FigureRow, material: Material, { slate, heat }: Burning)
   }
   if (needsDensity.has(row.id)) add('Density', material.density, 'kg/m3');
   if (row.id === 'stoichiometric-air') assumptions.push('dry-air');
+  if (row.id === 'biogenic-carbon-share') assumptions.push('usual-carbon-origin');
   if (row.id === 'stoichiometric-air' || row.id === 'carbon-factor' || row.id === 'alkali-carbon-ratio') {
     for (const [symbol, amount] of material.elements) add(symbol, amount, 'mol/kg');
   }

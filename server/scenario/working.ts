@@ -99,6 +99,7 @@ export type AssumptionId =
   | 'kinetics-decide'
   | 'carbonate-on-cooling'
   | 'slow-solids'
+  | 'usual-carbon-origin'
   | 'vapours-by-layers'
   | 'usual-oil-limit'
   | 'everything-reacts';

@@ -39,6 +39,8 @@ const assumptions: Readonly<Record<AssumptionId, string>> = {
   'carbonate-on-cooling': 'Carbonate is made as the gas cools, seldom in the flame itself.',
   'slow-solids':
     'Hydrogen carbonates and hydrates take hours and moisture: where they appear they are a limit, not a forecast.',
+  'usual-carbon-origin':
+    'Substances of the catalogue count with the usual origin of their carbon (ethanol as fermented, methanol as made of natural gas); a substance of the scenario can say another.',
   'vapours-by-layers':
     'Vapours follow Raoult’s law; water and polar liquids on one side and oils on the other exert their pressures as if they did not mix, which errs towards danger.',
   'usual-oil-limit': 'Where no lower limit of an oil’s vapour is recorded, 0.7 % is taken.',

@@ -63,6 +63,22 @@ test("the findings are the command line's, with code, severity and place", async
   assert.equal(shown[0]?.severity, vscode.DiagnosticSeverity.Error);
 });
 
+test("a hazard's code leads to its page, which is in the installed extension", async () => {
+  const document = await openScenario('blend metal {\n  100 % sodium\n}\n');
+  const target = await eventually('the hazard', () => {
+    const codes = vscode.languages.getDiagnostics(document.uri).map(({ code }) => code);
+    return codes.find((code) => typeof code === 'object' && code.value === 'hazard/water-reactive');
+  });
+  assert.ok(typeof target === 'object');
+  assert.equal(target.target.scheme, 'command');
+  const args = JSON.parse(target.target.query) as unknown[];
+  await vscode.commands.executeCommand(target.target.path, ...args);
+  const tab = await eventually('the page', () =>
+    vscode.window.tabGroups.all.flatMap(({ tabs }) => tabs).find(({ label }) => label.includes('hazards.md')),
+  );
+  await vscode.window.tabGroups.close(tab);
+});
+
 test('the quick fix that balances the equation is offered as the preferred one', async () => {
   const document = await openScenario(UNBALANCED);
   const actions = await eventually('the quick fix', async () => {
