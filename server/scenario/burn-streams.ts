@@ -4,6 +4,7 @@
 
 import { speciesAtTemperature } from '../core/balance/species-at-temperature.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
+import { combineParts, noParts } from '../core/quantity/parts.ts';
 import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
 import { propagate } from '../core/quantity/uncertainty.ts';
 import { molarMassKgPerMol, parseFormula, type Formula } from '../core/substance/formula.ts';
@@ -21,7 +22,7 @@ export interface UncertainStream {
   readonly enthalpy: Quantity | null;
   readonly referenceEnthalpy: Quantity | null;
   readonly temperature: Quantity;
-  readonly gasMolPerKg: number;
+  readonly gasMolPerKg: Quantity;
   /** Names of the data without which there is no enthalpy. */
   readonly missing: readonly string[];
   readonly sources: readonly string[];
@@ -29,13 +30,13 @@ export interface UncertainStream {
 
 /** The numbers of a stream as core takes them, out of the values of `quantitiesOf` in their order. */
 export function streamNumbers(stream: UncertainStream, values: readonly number[]): BurnStream {
-  const [enthalpy = NaN, reference = NaN, temperatureK = NaN, ...amounts] = values;
+  const [enthalpy = NaN, reference = NaN, temperatureK = NaN, gasMolPerKg = NaN, ...amounts] = values;
   return {
     elementMolPerKg: new Map([...stream.elements.keys()].map((symbol, index) => [symbol, amounts[index] ?? 0])),
     enthalpyJPerKg: Number.isNaN(enthalpy) ? null : enthalpy,
     referenceEnthalpyJPerKg: Number.isNaN(reference) ? null : reference,
     temperatureK,
-    gasMolPerKg: stream.gasMolPerKg,
+    gasMolPerKg,
   };
 }
 
@@ -44,10 +45,11 @@ export function quantitiesOf({
   enthalpy,
   referenceEnthalpy,
   temperature,
+  gasMolPerKg,
   elements,
 }: UncertainStream): readonly Quantity[] {
   const unknown = quantityOf(NaN);
-  return [enthalpy ?? unknown, referenceEnthalpy ?? unknown, temperature, ...elements.values()];
+  return [enthalpy ?? unknown, referenceEnthalpy ?? unknown, temperature, gasMolPerKg, ...elements.values()];
 }
 
 /** A fuel at its temperature, its melting and boiling on the way from 25 °C counted. */
@@ -70,10 +72,12 @@ export function fuelStream(fuel: Material, temperature: Quantity, pressurePa: nu
   return {
     elements: fuel.elements,
     enthalpy:
-      outcome && Number.isFinite(outcome.value) ? quantityOf(outcome.value, specificEnergy, outcome.parts) : null,
+      outcome && Number.isFinite(outcome.value) && preheat.kind === 'preheat'
+        ? quantityOf(outcome.value, specificEnergy, combineParts(outcome.parts ?? noParts, 1, preheat.parts, 1))
+        : null,
     referenceEnthalpy: formationEnthalpy,
     temperature,
-    gasMolPerKg: preheat.kind === 'preheat' ? preheat.gasMolPerKg : 0,
+    gasMolPerKg: quantityOf(preheat.kind === 'preheat' ? preheat.gasMolPerKg : 0, molPerKg),
     missing,
     sources: [...fuel.sources, ...(preheat.kind === 'preheat' ? preheat.sources : [])],
   };
@@ -105,6 +109,8 @@ export function oxidantStream(oxidant: OxidantStream): UncertainStream {
     return [
       total((one) => at(one, temperatureK, pressure.value)?.jPerMol ?? NaN),
       total((one) => at(one, referenceTemperatureK, pressure.value)?.jPerMol ?? NaN),
+      // What is gas stays gas over a small step.
+      total(({ name }) => (found.get(name)?.isGas ? 1 : 0)),
       ...symbols.map((symbol) => total(({ formula }) => formula.composition.get(symbol) ?? 0)),
     ];
   });
@@ -114,23 +120,15 @@ export function oxidantStream(oxidant: OxidantStream): UncertainStream {
       ? quantityOf(outcome.value, knownUnit(unit).dimension, outcome.parts)
       : null;
   };
-  const massKg = species.reduce((sum, { name, molarMass }) => sum + (moleShares.get(name)?.value ?? 0) * molarMass, 0);
-  const gasMol = species.reduce(
-    (sum, { name }) => sum + (found.get(name)?.isGas ? (moleShares.get(name)?.value ?? 0) : 0),
-    0,
-  );
   const sources = [...found.values()].flatMap((one) => (one ? [one.source] : []));
   return {
     elements: new Map(
-      symbols.map((symbol, index) => [
-        symbol,
-        quantity(index + 2, 'mol/kg') ?? quantityOf(0, knownUnit('mol/kg').dimension),
-      ]),
+      symbols.map((symbol, index) => [symbol, quantity(index + 3, 'mol/kg') ?? quantityOf(0, molPerKg)]),
     ),
     enthalpy: quantity(0, 'J/kg'),
     referenceEnthalpy: quantity(1, 'J/kg'),
     temperature,
-    gasMolPerKg: gasMol / massKg,
+    gasMolPerKg: quantity(2, 'mol/kg') ?? quantityOf(0, molPerKg),
     missing,
     sources: [...new Set([...oxidant.sources, ...sources])],
   };
@@ -150,3 +148,4 @@ function at(
 }
 
 const specificEnergy = knownUnit('J/kg').dimension;
+const molPerKg = knownUnit('mol/kg').dimension;

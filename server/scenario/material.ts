@@ -2,6 +2,7 @@
 // blend of others. Per kilogram, as quantities with their uncertainty, so that one computation serves all three.
 // Plain data; how it is come by is in materials.ts (catalogue, formula) and in the kinds (substance, blend).
 
+import type { Parts } from '../core/quantity/parts.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Formula } from '../core/substance/formula.ts';
 import type { HeatCapacity } from '../core/substance/substance.ts';
@@ -29,6 +30,8 @@ export interface Material {
   readonly entropy: Quantity | null;
   /** Per kilogram, with the range it is good for. */
   readonly heatCapacity: HeatCapacity | null;
+  /** What makes it uncertain, as shares of itself; absent where it is certain. */
+  readonly heatCapacityParts?: Parts;
   /** kg/m³ */
   readonly density: Quantity | null;
   /** At 1 atm. */

@@ -3,6 +3,7 @@
 // Knows no flames. Invariant: nothing is guessed; what is missing is named in words.
 
 import { speciesAtTemperature } from '../core/balance/species-at-temperature.ts';
+import { combineParts, noParts, type Parts } from '../core/quantity/parts.ts';
 import { enthalpyRise } from '../core/substance/at-temperature.ts';
 import { findSubstance, phasesOfSubstance } from '../core/substance/catalogue.ts';
 import { molarMassKgPerMol, parseFormula } from '../core/substance/formula.ts';
@@ -17,6 +18,8 @@ export type Preheat =
       readonly kind: 'preheat';
       /** J/kg taken up from 25 °C on, melting and boiling counted; negative below. */
       readonly jPerKg: number;
+      /** What makes it uncertain besides the temperature: the portions' shares, and heat capacities that say so. */
+      readonly parts: Parts;
       /** mol of gas per kg at the temperature. */
       readonly gasMolPerKg: number;
       readonly sources: readonly string[];
@@ -27,7 +30,13 @@ export type Preheat =
 export function preheatOf(material: Material, temperatureK: number, pressurePa: number): Preheat {
   if (material.portions) return ofPortions(material, temperatureK, pressurePa);
   if (isReference(temperatureK)) {
-    return { kind: 'preheat', jPerKg: 0, gasMolPerKg: material.phase === 'g' ? molPerKg(material) : 0, sources: [] };
+    return {
+      kind: 'preheat',
+      jPerKg: 0,
+      parts: noParts,
+      gasMolPerKg: material.phase === 'g' ? molPerKg(material) : 0,
+      sources: [],
+    };
   }
   return (
     byTables(material, temperatureK, pressurePa) ??
@@ -40,18 +49,20 @@ function ofPortions(material: Material, temperatureK: number, pressurePa: number
   const missing: string[] = [];
   const sources: string[] = [];
   let jPerKg = 0;
+  let parts: Parts = noParts;
   let gasMolPerKg = 0;
   for (const { material: portion, mass } of material.portions ?? []) {
     const own = preheatOf(portion, temperatureK, pressurePa);
     if (own.kind === 'missing') missing.push(...own.missing);
     else {
       jPerKg += mass.value * own.jPerKg;
+      parts = combineParts(parts, 1, combineParts(own.parts, mass.value, mass.parts, own.jPerKg), 1);
       gasMolPerKg += mass.value * own.gasMolPerKg;
       sources.push(...own.sources);
     }
   }
   if (missing.length > 0) return { kind: 'missing', missing: [...new Set(missing)] };
-  return { kind: 'preheat', jPerKg, gasMolPerKg, sources: [...new Set(sources)] };
+  return { kind: 'preheat', jPerKg, parts, gasMolPerKg, sources: [...new Set(sources)] };
 }
 
 /** J/mol that a name's isomer may differ by and still be taken for it: less than any two isomers do. */
@@ -73,6 +84,7 @@ function byTables(material: Material, temperatureK: number, pressurePa: number):
   return {
     kind: 'preheat',
     jPerKg: (found.properties.enthalpyJPerMol - own.formationEnthalpyJPerMol) / molarMass.value,
+    parts: noParts,
     gasMolPerKg: found.phase.formula.phase === 'g' ? 1 / molarMass.value : 0,
     sources: [found.phase.source],
   };
@@ -92,6 +104,7 @@ function bySpecies({ species, formula, phase, molarMass }: Material, temperature
   return {
     kind: 'preheat',
     jPerKg: jPerMol / molarMass.value,
+    parts: noParts,
     gasMolPerKg: 1 / molarMass.value,
     sources: [...new Set(sources)],
   };
@@ -114,7 +127,8 @@ function byHeatCapacity(material: Material, temperatureK: number, pressurePa: nu
   if (phase === null || phaseLetters[phase] === material.phase) {
     if (!heatCapacity) return { kind: 'missing', missing: [`the heat capacity of ${name}`] };
     const jPerKg = enthalpyRise(heatCapacity, referenceTemperatureK, temperatureK);
-    return { kind: 'preheat', jPerKg, gasMolPerKg: isGas && molarMass ? 1 / molarMass.value : 0, sources: [] };
+    const parts = combineParts(material.heatCapacityParts ?? noParts, jPerKg, noParts, 0);
+    return { kind: 'preheat', jPerKg, parts, gasMolPerKg: isGas && molarMass ? 1 / molarMass.value : 0, sources: [] };
   }
   const substance = material.origin === 'catalogue' ? findSubstance(name) : undefined;
   const other = substance && phasesOfSubstance(substance.name).find((one) => one.phase === phaseLetters[phase]);
@@ -127,6 +141,7 @@ function byHeatCapacity(material: Material, temperatureK: number, pressurePa: nu
   return {
     kind: 'preheat',
     jPerKg: otherJPerKg + rise - formationEnthalpy.value,
+    parts: noParts,
     gasMolPerKg: isGas && molarMass ? 1 / molarMass.value : 0,
     sources: [],
   };

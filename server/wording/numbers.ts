@@ -61,6 +61,16 @@ export function formatWithUncertainty(
   return withPower(`(${mantissas})`, exponent, style);
 }
 
+/**
+ * The uncertainty where it says anything of a number of four digits: below half a unit of the fourth it does not, and digits
+ * that only the inputs have, and no model, would be told. Otherwise null.
+ */
+export function tellingUncertainty(value: number, uncertainty: number | null): number | null {
+  if (uncertainty === null || value === 0 || !Number.isFinite(value)) return uncertainty;
+  const fourthDigit = 10 ** (exponentOf(value) - (SIGNIFICANT_DIGITS - 1));
+  return uncertainty < fourthDigit / 2 ? null : uncertainty;
+}
+
 /** A fraction as percent: `30 %`, `0.012 %`. */
 export function formatPercent(fraction: number, style: NumberStyle = 'people'): string {
   return `${formatNumber(fraction * 100, style)} %`;

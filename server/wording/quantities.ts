@@ -3,10 +3,11 @@
 // nothing out. Invariant: the unit shown is always the unit of the number before it.
 
 import { canBeIn, inUnit, knownUnit, uncertaintyInUnit } from '../core/quantity/convert.ts';
+import { noParts } from '../core/quantity/parts.ts';
 import { describeQuantity, standardUncertainty, type Quantity } from '../core/quantity/quantity.ts';
 import { stepFromSi } from '../core/quantity/read-unit.ts';
 import type { Figure } from '../scenario/scenario.ts';
-import { formatNumber, formatPercent, formatWithUncertainty, type NumberStyle } from './numbers.ts';
+import { formatNumber, formatPercent, formatWithUncertainty, tellingUncertainty, type NumberStyle } from './numbers.ts';
 import { bracketed, unitForPeople, withUnit } from './units.ts';
 
 /** A number and its standard uncertainty (null: none) in a unit of the contract. Unrounded. */
@@ -48,10 +49,17 @@ export function figureText({ id, quantity, unit, band }: ToldFigure): string {
   const key = `${id} ${unit}`;
   const known = figureTexts.get(quantity);
   if (known?.key === key && !band) return known.text;
-  const told = isShare(id, unit) ? shareText(quantity) : toldText(quantity, unit);
+  const { value, uncertainty } = readingIn(quantity, unit);
+  const telling =
+    uncertainty !== null && tellingUncertainty(value, uncertainty) === null ? certain(quantity) : quantity;
+  const told = isShare(id, unit) ? shareText(telling) : toldText(telling, unit);
   if (band) return `${told} (${bandText(id, unit, band)})`;
   figureTexts.set(quantity, { key, text: told });
   return told;
+}
+
+function certain(quantity: Quantity): Quantity {
+  return { ...quantity, parts: noParts };
 }
 
 type ToldFigure = Pick<Figure, 'id' | 'quantity' | 'unit' | 'band'>;
@@ -68,7 +76,8 @@ const figureTexts = new WeakMap<Quantity, { readonly key: string; readonly text:
 
 /** The parts of `figureText` for a table: the number (with ±), its unit, and what stands behind in brackets. */
 export function figureCells({ id, quantity, unit, band }: ToldFigure): FigureCells {
-  const { value, uncertainty } = readingIn(quantity, unit);
+  const { value, uncertainty: own } = readingIn(quantity, unit);
+  const uncertainty = tellingUncertainty(value, own);
   const ends = band ? bandText(id, unit, band) : '';
   if (isShare(id, unit)) {
     return {

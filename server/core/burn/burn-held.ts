@@ -2,7 +2,9 @@
 // Knows no states. Invariant: one place says so, for the states themselves and for how they move.
 
 import type { Held } from '../equilibrium/equilibrium.ts';
-import type { BurnInput, Charge, MatterState } from './burn.ts';
+import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
+import { referenceTemperatureK } from '../substance/substance.ts';
+import type { BurnHeatReleased, BurnInput, Charge, MatterState } from './burn.ts';
 
 /** J taken out of the whole charge. */
 export function lossOf({ heat, lowerHeatingValueJPerKg }: BurnInput): number {
@@ -57,4 +59,25 @@ export function heatGivenOff(input: BurnInput, charge: Charge, state: MatterStat
   if (!coolsInVolume(input)) return byEnthalpyJ;
   const pressureVolumeJ = state.gasMol > 0 ? state.pressurePa * state.volumeM3 : 0;
   return byEnthalpyJ - (charge.pressureVolumeJ - pressureVolumeJ);
+}
+
+/**
+ * What is released down to a slate at 25 °C; null where the energy of the charge is unknown. The preheat is weighed as the
+ * release is, by energies in a held volume. Heating values are by enthalpies always: over them the share in a held volume is
+ * off by R T for each mole of gas that comes or goes, some tenths of a per cent.
+ */
+export function heatReleased(
+  input: BurnInput,
+  charge: Charge,
+  slate: MatterState,
+): Omit<BurnHeatReleased, 'slate'> | null {
+  const releasedJ = heatGivenOff(input, charge, slate);
+  if (releasedJ === null || charge.enthalpyJ === null) return null;
+  const coldPressureVolumeJ = charge.gasMol * molarGasConstantJPerMolK * referenceTemperatureK;
+  const workJ = coolsInVolume(input) ? charge.pressureVolumeJ - coldPressureVolumeJ : 0;
+  const preheatJ = charge.referenceEnthalpyJ === null ? null : charge.enthalpyJ - charge.referenceEnthalpyJ - workJ;
+  const heatingValueJ = input.lowerHeatingValueJPerKg;
+  const shareOfHeatingValue =
+    preheatJ === null || heatingValueJ === null || heatingValueJ === 0 ? null : (releasedJ - preheatJ) / heatingValueJ;
+  return { releasedJ, preheatJ, shareOfHeatingValue };
 }

@@ -10,7 +10,7 @@ import { sensitivitiesOf } from '../equilibrium/sensitivity.ts';
 import type { Movement, Sensitivities } from '../equilibrium/sensitivity.ts';
 import type { Burn, Charge, MatterState, NoState } from './burn.ts';
 import { heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
-import { chargeDirection } from './charge-directions.ts';
+import { chargeDirection, still } from './charge-directions.ts';
 import type { BurnParameter, ChargeDirection } from './charge-directions.ts';
 
 /** Per unit of the parameter, in K and in mol per kg of fuel. */
@@ -26,7 +26,12 @@ export interface BurnSensitivities {
   readonly frozenAt: (parameter: BurnParameter) => StateMovement | null;
   /** The `index`-th of the cooled states, with its temperature held; null also where that is frozen. */
   readonly cooled: (index: number, parameter: BurnParameter) => StateMovement | null;
+  /** Any equilibrium of the cooling gas, with its temperature held. */
+  readonly cooling: (state: Equilibrium, parameter: CoolingParameter) => StateMovement | null;
 }
+
+/** What moves a cooled state besides the charge: its own temperature in K, and in Pa the pressure given for cooling. */
+export type CoolingParameter = BurnParameter | { readonly of: 'own-temperature' } | { readonly of: 'cooling-pressure' };
 
 /** Of a burn whose states are solved as they are asked for. */
 export function burnSensitivities(burn: Burn): BurnSensitivities {
@@ -47,11 +52,17 @@ export function burnSensitivities(burn: Burn): BurnSensitivities {
     const sensitivities = known.get(state);
     return sensitivities === undefined ? null : along(sensitivities, direction, held, matter);
   };
-  const atTemperature = (state: Equilibrium | NoState | null, parameter: BurnParameter): StateMovement | null => {
+  const atTemperature = (state: Equilibrium | NoState | null, parameter: CoolingParameter): StateMovement | null => {
     if (state?.kind !== 'equilibrium') return null;
-    const direction = chargeDirection(input, charge, parameter);
+    const direction =
+      parameter.of === 'own-temperature' || parameter.of === 'cooling-pressure'
+        ? still(charge)
+        : chargeDirection(input, charge, parameter);
     // A cooled state has its own temperature, and its own pressure where one was given for cooling.
-    const own = input.coolingPressurePa === undefined ? { temperatureK: 0 } : { temperatureK: 0, pressurePa: 0 };
+    const own = {
+      temperatureK: parameter.of === 'own-temperature' ? 1 : 0,
+      ...(input.coolingPressurePa === undefined ? {} : { pressurePa: parameter.of === 'cooling-pressure' ? 1 : 0 }),
+    };
     const held = heldCooling(input, charge, state.temperatureK);
     return move(state, charge, held, direction && { ...direction, ...own });
   };
@@ -77,6 +88,7 @@ export function burnSensitivities(burn: Burn): BurnSensitivities {
       const state = burn.cooled[index]?.state() ?? null;
       return state?.kind === 'frozen' ? null : atTemperature(state, parameter);
     },
+    cooling: atTemperature,
   };
 }
 

@@ -16,6 +16,8 @@ import { oxidantForLambda } from './charge.ts';
 export type BurnParameter =
   | { readonly of: 'enthalpy'; readonly stream: 'fuel' | 'oxidant' }
   | { readonly of: 'element'; readonly stream: 'fuel' | 'oxidant'; readonly symbol: string }
+  /** Temperature and mol per kg of what is gas as it comes in, its enthalpy apart: they make the volume where that is held. */
+  | { readonly of: 'gas-temperature' | 'gas-amount'; readonly stream: 'fuel' | 'oxidant' }
   | { readonly of: 'amount' | 'pressure' | 'loss-share' | 'heating-value' | 'temperature' };
 
 /** Per unit of the parameter, in its SI unit: mol, J, J of pressure times volume, Pa and K. */
@@ -54,6 +56,13 @@ export function chargeDirection(
       return moved(charge, { temperatureK: 1 });
     case 'amount':
       return withOxidant(input.oxidant, charge, amountSlope(input, charge, of), moved(charge, {}));
+    case 'gas-temperature':
+    case 'gas-amount': {
+      const kg = parameter.stream === 'fuel' ? 1 : charge.oxidantKgPerKg;
+      const { gasMolPerKg, temperatureK } = input[parameter.stream];
+      const other = parameter.of === 'gas-amount' ? temperatureK : gasMolPerKg;
+      return moved(charge, { pressureVolumeJ: kg * other * molarGasConstantJPerMolK });
+    }
     case 'element':
       return elementDirection(input, charge, parameter, of);
   }
@@ -113,6 +122,11 @@ function withOxidant(oxidant: BurnStream, charge: Charge, kg: number, own: Charg
     pressureVolumeJ: own.pressureVolumeJ + kg * oxidant.gasMolPerKg * molarGasConstantJPerMolK * oxidant.temperatureK,
     oxidantKgPerKg: own.oxidantKgPerKg + kg,
   };
+}
+
+/** The direction in which nothing of a charge moves. */
+export function still(charge: Charge): ChargeDirection {
+  return moved(charge, {});
 }
 
 function moved(charge: Charge, by: Partial<ChargeDirection>): ChargeDirection {

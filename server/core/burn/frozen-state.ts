@@ -3,65 +3,40 @@
 // solidifying and changes of crystal need no partner. Knows no fuel and does not find out when a composition freezes.
 // Invariant: atoms, gas and condensed mass are those of the state it comes from.
 
-import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
+import { fillGibbs } from '../substance/property-set.ts';
 import { compositionKey } from '../substance/formula.ts';
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import type { CandidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium } from '../equilibrium/equilibrium.ts';
-import type { FrozenState } from './burn.ts';
+import type { FrozenState, MatterState } from './burn.ts';
+import { matterState } from './matter-state.ts';
 
 /** What stays the same while the frozen gas cools: pressure in Pa, or the gas's volume in m³. */
 export type FrozenHeld = { readonly pressurePa: number } | { readonly volumeM3: number };
 
 /** The composition of `from` at a temperature in K. */
 export function frozenState(from: Equilibrium, temperatureK: number, held: FrozenHeld): FrozenState {
-  const { candidates, gasMol, massKg } = from;
-  const { phases, gasCount, properties, molarMassKgPerMol } = candidates;
-  const size = phases.length;
-  const enthalpies = new Float64Array(size);
-  const capacities = new Float64Array(size);
-  fillEnthalpies(properties, temperatureK, enthalpies, capacities);
-  const amountsMol = stablyCondensed(from, temperatureK);
-  let enthalpyOverRT = 0;
-  let capacityOverR = 0;
-  let condensedKg = 0;
-  const extrapolated: number[] = [];
-  for (let phase = 0; phase < size; phase += 1) {
-    const mol = amountsMol[phase] ?? 0;
-    if (mol === 0) continue;
-    enthalpyOverRT += mol * (enthalpies[phase] ?? 0);
-    capacityOverR += mol * (capacities[phase] ?? 0);
-    if (phase >= gasCount) condensedKg += mol * (molarMassKgPerMol[phase] ?? 0);
-    const [fromK, toK] = phases[phase]?.validK ?? [0, Infinity];
-    if (temperatureK < fromK || temperatureK > toK) extrapolated.push(phase);
-  }
-  const gasRTJ = gasMol * molarGasConstantJPerMolK * temperatureK;
+  return { kind: 'frozen', from, ...frozenMatter(from, temperatureK, held) };
+}
+
+/** The same of any matter, whether or not it is an equilibrium. */
+export function frozenMatter(from: MatterState, temperatureK: number, held: FrozenHeld): MatterState {
+  const { candidates, gasMol } = from;
   // Without gas there is no volume to hold, and the pressure is whatever it was.
-  const pressurePa = 'pressurePa' in held ? held.pressurePa : gasMol > 0 ? gasRTJ / held.volumeM3 : from.pressurePa;
-  return {
-    kind: 'frozen',
-    from,
-    candidates,
-    temperatureK,
-    pressurePa,
-    amountsMol,
-    gasMol,
-    gasMolarMassKgPerMol: from.gasMolarMassKgPerMol,
-    volumeM3: gasRTJ / pressurePa,
-    massKg,
-    condensedMassShare: condensedKg / massKg,
-    enthalpyJ: enthalpyOverRT * molarGasConstantJPerMolK * temperatureK,
-    frozenHeatCapacityJPerK: capacityOverR * molarGasConstantJPerMolK,
-    frozenGamma: gasMol > 0 ? capacityOverR / (capacityOverR - gasMol) : null,
-    extrapolated,
-  };
+  const pressurePa =
+    'pressurePa' in held
+      ? held.pressurePa
+      : gasMol > 0
+        ? (gasMol * molarGasConstantJPerMolK * temperatureK) / held.volumeM3
+        : from.pressurePa;
+  return matterState(candidates, stablyCondensed(from, temperatureK), temperatureK, pressurePa);
 }
 
 /**
  * The amounts with each condensed substance in the form that is stable at the temperature, among the candidates whose data
  * reach it; where none do, it stays in the form it has.
  */
-function stablyCondensed(from: Equilibrium, temperatureK: number): Float64Array {
+function stablyCondensed(from: MatterState, temperatureK: number): Float64Array {
   const { candidates, amountsMol } = from;
   const moved = amountsMol.slice();
   let gibbs: Float64Array | undefined;

@@ -3,7 +3,6 @@
 // Invariant: every state holds the atoms of the charge; adiabatic ones its enthalpy (or energy) less the loss; a state's
 // answer does not depend on which others were looked at.
 
-import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { referenceTemperatureK } from '../substance/substance.ts';
 import { candidateSet } from '../equilibrium/candidates.ts';
 import type { Equilibrium, Held } from '../equilibrium/equilibrium.ts';
@@ -11,18 +10,8 @@ import { equilibriumSolver } from '../equilibrium/solver.ts';
 import type { EquilibriumSolver } from '../equilibrium/solver.ts';
 import { admittanceOf } from './admitted-products.ts';
 import { ionsAboveK } from './burn.ts';
-import type {
-  Burn,
-  BurnFault,
-  BurnHeatReleased,
-  BurnInput,
-  BurnStateOrNone,
-  Charge,
-  CoolingPath,
-  FrozenState,
-  NoState,
-} from './burn.ts';
-import { coolsInVolume, heatGivenOff, heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
+import type { Burn, BurnFault, BurnInput, BurnStateOrNone, Charge, CoolingPath, FrozenState, NoState } from './burn.ts';
+import { heatGivenOff, heatReleased, heldAdiabatic, heldByFlame, heldCooling } from './burn-held.ts';
 import { chargeOf } from './charge.ts';
 import { coolingPath } from './cooling-path.ts';
 import { frozenState } from './frozen-state.ts';
@@ -89,7 +78,13 @@ export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn 
     frozenAt,
     at,
     path: (temperaturesK) => (temperaturesK === undefined ? defaultPath() : pathOver(temperaturesK)),
-    heat: once(() => heatReleased(input, charge, at)),
+    heat: once(() => {
+      if (charge.enthalpyJ === null) return null;
+      const slate = at(referenceTemperatureK);
+      if (slate.kind === 'none') return slate;
+      const heat = heatReleased(input, charge, slate);
+      return heat && { ...heat, slate };
+    }),
     heatAbove: (temperatureK) => {
       if (charge.enthalpyJ === null) return null;
       const state = at(temperatureK);
@@ -160,29 +155,6 @@ function faultOf(input: BurnInput, charge: Charge, zone: Charge | undefined): Bu
   }
   const hasLoss = input.heat.lossShare !== 0;
   return hasLoss && input.lowerHeatingValueJPerKg === null ? { kind: 'fault', reason: 'no-heating-value' } : undefined;
-}
-
-/**
- * The preheat is weighed as the release is, by energies in a held volume. Heating values are by enthalpies always: over
- * them the share in a held volume is off by R T for each mole of gas that comes or goes, some tenths of a per cent.
- */
-function heatReleased(
-  input: BurnInput,
-  charge: Charge,
-  at: (temperatureK: number) => BurnStateOrNone,
-): BurnHeatReleased | NoState | null {
-  if (charge.enthalpyJ === null) return null;
-  const slate = at(referenceTemperatureK);
-  if (slate.kind === 'none') return slate;
-  const releasedJ = heatGivenOff(input, charge, slate);
-  if (releasedJ === null) return null;
-  const coldPressureVolumeJ = charge.gasMol * molarGasConstantJPerMolK * referenceTemperatureK;
-  const workJ = coolsInVolume(input) ? charge.pressureVolumeJ - coldPressureVolumeJ : 0;
-  const preheatJ = charge.referenceEnthalpyJ === null ? null : charge.enthalpyJ - charge.referenceEnthalpyJ - workJ;
-  const heatingValueJ = input.lowerHeatingValueJPerKg;
-  const shareOfHeatingValue =
-    preheatJ === null || heatingValueJ === null || heatingValueJ === 0 ? null : (releasedJ - preheatJ) / heatingValueJ;
-  return { releasedJ, preheatJ, shareOfHeatingValue, slate };
 }
 
 function once<T>(compute: () => T): () => T {

@@ -328,7 +328,7 @@ function reportColdCharge(
   const { temperature } = oxidant;
   if (
     !isAir(moleShares) ||
-    oxidant.gasMolPerKg === 0 ||
+    oxidant.gasMolPerKg.value === 0 ||
     pressure.value < coldPressurePa ||
     temperature.value > coldTemperatureK
   )

@@ -1,14 +1,15 @@
-// The figures of a burn: one row each, with what it reads of the solved states. Values are there once the states are; the
-// uncertainty of a figure, by slopes or by a burn more on either side of each uncertain input, is worked out when its
-// quantity is read. Knows no entries and no tables. Invariant: a figure that cannot be had is not there, never a number.
-// Method of the uncertainty: to first order, by the slopes of the converged states where there are some
-// (burn-uncertainty.ts), else with states solved anew (quantity/uncertainty.ts).
+// The figures of a burn: one row each, with what it reads of the states. Values are there once the states are; the
+// uncertainty of a figure is worked out when its quantity is read. Knows no entries and no tables.
+// Invariant: a figure that cannot be had is not there, never a number.
+// Method of the uncertainty: to first order, by the slopes of the converged states (burn-uncertainty.ts); where these are not
+// known, by burns solved anew on either side of each uncertain input (quantity/uncertainty.ts).
 
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
+import type { MatterState } from '../../core/burn/burn.ts';
 import { prepareBurn } from '../../core/burn/prepare-burn.ts';
 import { peakGases } from '../../core/burn/products.ts';
-import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
+import type { Parts } from '../../core/quantity/parts.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate, type Propagated } from '../../core/quantity/uncertainty.ts';
 import { lazily } from '../lazily.ts';
@@ -17,16 +18,16 @@ import type { Figure } from '../scenario.ts';
 import type { Working } from '../working.ts';
 import type { BurnQuestion } from './burn-question.ts';
 import { longestBurnOutS } from './burn-out-times.ts';
-import { solvedBurn, type AskedOfBurn, type SolvedBurn } from './burn-solved.ts';
+import { readingsOf, solvedBurn, type AskedOfBurn, type BurnReadings, type SolvedBurn } from './burn-solved.ts';
 import { carbonateShare } from './burn-tables.ts';
 import { partsBySlope } from './burn-uncertainty.ts';
 
-/** Which states a figure needs: those of one group are solved together. */
+/** Which states a figure needs: where states are solved anew, those of one group are solved together. */
 type Group = 'flame' | 'zone' | 'slate' | 'exhaust' | 'burn-out';
 
 interface BurnFigureRow extends FigureRow {
   readonly group: Group;
-  readonly value: (solved: SolvedBurn) => number | null;
+  readonly value: (readings: BurnReadings) => number | null;
 }
 
 /** Every figure a burn may have. Ids and units are the contract: they never change. */
@@ -37,7 +38,7 @@ export const burnFigures = [
     'Flame temperature, of the whole charge',
     'K',
     'flame-temperature',
-    ({ flame }) => flame.temperatureK,
+    ({ flame }) => flame()?.temperatureK ?? null,
   ),
   row(
     'zone',
@@ -47,31 +48,33 @@ export const burnFigures = [
     'zone-temperature',
     ({ zone }) => zone()?.temperatureK ?? null,
   ),
-  row('flame', 'pressure', 'Pressure in the flame', 'bar', 'flame-pressure', ({ flame }) => flame.pressurePa),
+  row(
+    'flame',
+    'pressure',
+    'Pressure in the flame',
+    'bar',
+    'flame-pressure',
+    ({ flame }) => flame()?.pressurePa ?? null,
+  ),
   row(
     'flame',
     'condensed-share',
     'Condensed products in the flame, by mass',
     '1',
     'condensed-share',
-    ({ flame }) => flame.condensedMassShare,
+    ({ flame }) => flame()?.condensedMassShare ?? null,
   ),
-  row('flame', 'excess-air-ratio', 'Excess-air ratio λ', '1', 'excess-air', ({ burn }) => burn.charge.lambda),
+  row('flame', 'excess-air-ratio', 'Excess-air ratio λ', '1', 'excess-air', ({ charge }) => charge.lambda),
   row(
     'flame',
     'oxidant-fuel-ratio',
     'Oxidant, per kg of fuel',
     'kg/kg',
     'excess-air',
-    ({ burn }) => burn.charge.oxidantKgPerKg,
+    ({ charge }) => charge.oxidantKgPerKg,
   ),
-  row(
-    'flame',
-    'gas-molar-mass',
-    'Gas in the flame, molar mass',
-    'g/mol',
-    'flame-gas',
-    ({ flame }) => gasOfState(flame)?.molarMassKgPerMol ?? null,
+  row('flame', 'gas-molar-mass', 'Gas in the flame, molar mass', 'g/mol', 'flame-gas', ({ flame }) =>
+    of(flame(), (state) => gasOfState(state)?.molarMassKgPerMol ?? null),
   ),
   row(
     'flame',
@@ -79,7 +82,7 @@ export const burnFigures = [
     'Gas in the flame, heat capacity at constant composition, per kg of gas',
     'kJ/(kg K)',
     'flame-gas',
-    ({ flame }) => gasOfState(flame)?.heatCapacityJPerKgK ?? null,
+    ({ flame }) => of(flame(), (state) => gasOfState(state)?.heatCapacityJPerKgK ?? null),
   ),
   row(
     'flame',
@@ -87,7 +90,7 @@ export const burnFigures = [
     'All products, heat capacity at constant composition, per kg of products',
     'kJ/(kg K)',
     'flame-heat-capacity',
-    ({ flame }) => flame.frozenHeatCapacityJPerK / flame.massKg,
+    ({ flame }) => of(flame(), ({ frozenHeatCapacityJPerK, massKg }) => frozenHeatCapacityJPerK / massKg),
   ),
   row(
     'flame',
@@ -95,7 +98,10 @@ export const burnFigures = [
     'All products, heat capacity with the reactions following, per kg of products',
     'kJ/(kg K)',
     'flame-heat-capacity',
-    ({ flame }) => (flame.heatCapacityJPerK === null ? null : flame.heatCapacityJPerK / flame.massKg),
+    ({ flame, response }) => {
+      const [state, capacityJPerK] = [flame(), response()?.heatCapacityJPerK ?? null];
+      return state && capacityJPerK !== null ? capacityJPerK / state.massKg : null;
+    },
   ),
   row(
     'flame',
@@ -103,7 +109,7 @@ export const burnFigures = [
     'Ratio of heat capacities at constant composition',
     '1',
     'flame-gamma',
-    ({ flame }) => flame.frozenGamma,
+    ({ flame }) => flame()?.frozenGamma ?? null,
   ),
   row(
     'flame',
@@ -111,7 +117,7 @@ export const burnFigures = [
     'Isentropic exponent with the reactions following',
     '1',
     'flame-gamma',
-    ({ flame }) => flame.gamma,
+    ({ response }) => response()?.gamma ?? null,
   ),
   row(
     'flame',
@@ -119,7 +125,7 @@ export const burnFigures = [
     'Speed of sound, condensed products moving with the gas',
     'm/s',
     'speed-of-sound',
-    ({ flame }) => flame.speedOfSoundMPerS,
+    ({ response }) => response()?.speedOfSoundMPerS ?? null,
   ),
   row(
     'flame',
@@ -127,7 +133,7 @@ export const burnFigures = [
     'Carbon held in carbonate, in the flame',
     '1',
     'carbonate-share',
-    ({ flame }) => carbonateShare(flame),
+    ({ flame }) => of(flame(), carbonateShare),
   ),
   row(
     'slate',
@@ -135,7 +141,7 @@ export const burnFigures = [
     'Heat released down to 25 °C, per kg of fuel',
     'MJ/kg',
     'heat-released',
-    ({ slate }) => slate()?.releasedJ ?? null,
+    ({ heat }) => heat()?.releasedJ ?? null,
   ),
   row(
     'slate',
@@ -143,7 +149,7 @@ export const burnFigures = [
     'Heat brought in over 25 °C by fuel and oxidant, per kg of fuel',
     'MJ/kg',
     'preheat',
-    ({ slate }) => slate()?.preheatJ ?? null,
+    ({ heat }) => heat()?.preheatJ ?? null,
   ),
   row(
     'slate',
@@ -151,7 +157,7 @@ export const burnFigures = [
     'Heat released down to 25 °C less preheat, over the lower heating value',
     '1',
     'heat-released',
-    ({ slate }) => slate()?.shareOfHeatingValue ?? null,
+    ({ heat }) => heat()?.shareOfHeatingValue ?? null,
   ),
   row(
     'exhaust',
@@ -167,7 +173,7 @@ export const burnFigures = [
     'NO if it froze in the flame, by mole, dry (order of magnitude, kinetics decide)',
     '1',
     'peak-gas',
-    ({ flame }) => peakShare(flame, 'NO(g)'),
+    ({ flame }) => peakShare(flame(), 'NO(g)'),
   ),
   row(
     'flame',
@@ -175,7 +181,7 @@ export const burnFigures = [
     'CO if it froze in the flame, by mole, dry (order of magnitude, kinetics decide)',
     '1',
     'peak-gas',
-    ({ flame }) => peakShare(flame, 'CO(g)'),
+    ({ flame }) => peakShare(flame(), 'CO(g)'),
   ),
   row(
     'zone',
@@ -199,7 +205,7 @@ export const burnFigures = [
     'Burn-out time of a single droplet or particle, the longest of all portions',
     'ms',
     'burn-out',
-    ({ burnOuts }) => longestBurnOutS(burnOuts()),
+    ({ burnOuts }) => longestBurnOutS(burnOuts() ?? []),
   ),
 ] as const satisfies readonly BurnFigureRow[];
 
@@ -214,7 +220,11 @@ function row(
   return { group, id, label, unit, method, value };
 }
 
-function peakShare(state: Equilibrium | null, id: string): number | null {
+function of(state: MatterState | null, read: (state: MatterState) => number | null): number | null {
+  return state && read(state);
+}
+
+function peakShare(state: MatterState | null, id: string): number | null {
   return (state && peakGases(state).find((gas) => gas.id === id)?.dryMoleShare) ?? null;
 }
 
@@ -225,14 +235,16 @@ export function figuresOf(
   asked: AskedOfBurn,
   workingOf: (row: FigureRow) => Working,
 ): readonly Figure[] {
-  const uncertain = new Map<Group, ReadonlyMap<string, Propagated>>();
-  const propagatedOf = (row: BurnFigureRow): Propagated | undefined => {
-    const known = uncertain.get(row.group) ?? propagateGroup(row.group, solved, question, asked);
-    uncertain.set(row.group, known);
-    return known.get(row.id);
+  const readings = readingsOf(solved);
+  const bySlope = partsBySlope(solved, question, asked);
+  const anew = new Map<Group, ReadonlyMap<string, Propagated>>();
+  const partsAnew = (row: BurnFigureRow): Parts | undefined => {
+    const known = anew.get(row.group) ?? propagateGroup(row.group, solved, question, asked);
+    anew.set(row.group, known);
+    return known.get(row.id)?.parts;
   };
   return burnFigures.flatMap((row: BurnFigureRow): Figure[] => {
-    const value = row.value(solved);
+    const value = row.value(readings);
     if (value === null || !Number.isFinite(value)) return [];
     const { id, label, unit, method } = row;
     const plain = figureQuantity(value, unit);
@@ -245,10 +257,7 @@ export function figuresOf(
     };
     return [
       lazily(figure, {
-        quantity: () => ({
-          ...plain,
-          parts: partsBySlope(id, solved, question) ?? propagatedOf(row)?.parts ?? plain.parts,
-        }),
+        quantity: () => ({ ...plain, parts: bySlope(row.value) ?? partsAnew(row) ?? plain.parts }),
         working: () => workingOf(row),
       }),
     ];
@@ -272,7 +281,8 @@ function propagateGroup(
   const outcomes = propagate(quantities, (values) => {
     const isCentre = values.every((value, index) => Object.is(value, centre[index]));
     const states = isCentre ? solved : solveAt(input(values), { ...asked, ...askedAt(values) });
-    return rows.map(({ value }) => (states && value(states)) ?? NaN);
+    const readings = states && readingsOf(states);
+    return rows.map(({ value }) => (readings && value(readings)) ?? NaN);
   });
   return new Map(rows.flatMap(({ id }, index) => (outcomes[index] ? [[id, outcomes[index]]] : [])));
 }

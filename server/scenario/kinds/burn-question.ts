@@ -4,7 +4,7 @@
 // alone, whose cells have no uncertainty.
 
 import type { BurnInput, OxidantAmount } from '../../core/burn/burn.ts';
-import type { BurnParameter } from '../../core/burn/charge-directions.ts';
+import type { BurnMove } from '../../core/burn/moved-burn.ts';
 import type { Formula } from '../../core/substance/formula.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
@@ -38,13 +38,11 @@ export interface WrittenBurn {
   readonly ions: boolean;
 }
 
-/** What a quantity is to the states: a parameter that moves them, nothing, or something whose slope is not known. */
-export type QuantityRole = BurnParameter | 'none' | 'zone-amount' | 'unknown';
-
 /** The uncertain quantities, and the question their values make (in the same order). */
 export interface BurnQuestion {
   readonly quantities: readonly Quantity[];
-  readonly roles: readonly QuantityRole[];
+  /** What each is to the states. */
+  readonly roles: readonly BurnMove[];
   readonly input: (values: readonly number[]) => BurnInput;
   /** What those values ask of the states besides. */
   readonly asked: (values: readonly number[]) => { readonly exhaustK: number; readonly sizes: BurnOutEntries };
@@ -70,7 +68,7 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
   ];
   return {
     quantities: [...scalars, ...ofFuel, ...ofOxidant],
-    roles: [...scalarRoles, ...streamRoles('fuel', fuel, held), ...streamRoles('oxidant', oxidant, held)],
+    roles: [...scalarRoles, ...streamRoles('fuel', fuel), ...streamRoles('oxidant', oxidant)],
     input(values) {
       const [amountValue = NaN, zoneValue = NaN, pressurePa = NaN, temperatureK = NaN, lossShare = 0, ...others] =
         values;
@@ -111,31 +109,32 @@ export function questionOf(written: WrittenBurn): BurnQuestion {
 }
 
 /** In the order of the scalars of `questionOf`. */
-const scalarRoles: readonly QuantityRole[] = [
+const scalarRoles: readonly BurnMove[] = [
   { of: 'amount' },
-  'zone-amount',
+  { of: 'zone-amount' },
   { of: 'pressure' },
   { of: 'temperature' },
   { of: 'loss-share' },
   { of: 'heating-value' },
-  // What follows moves neither flame nor zone.
-  'none',
-  'none',
-  'none',
-  'none',
-  'none',
+  { of: 'frozen-temperature' },
+  { of: 'cooling-pressure' },
+  // What is asked besides moves no state.
+  { of: 'bystander' },
+  { of: 'bystander' },
+  { of: 'bystander' },
 ];
 
 /** Where in the scalars begins what is asked besides the states. */
 const firstAsked = 8;
 
-/** In the order of `quantitiesOf`. The temperature a gas comes in with counts by its enthalpy, and where a volume is held too. */
-function streamRoles(stream: 'fuel' | 'oxidant', { elements }: UncertainStream, { held }: HeldEntry): QuantityRole[] {
+/** In the order of `quantitiesOf`. The enthalpy at 25 °C is that of no state. */
+function streamRoles(stream: 'fuel' | 'oxidant', { elements }: UncertainStream): BurnMove[] {
   return [
     { of: 'enthalpy', stream },
-    'none',
-    held === 'volume' ? 'unknown' : 'none',
-    ...[...elements.keys()].map((symbol): QuantityRole => ({ of: 'element', stream, symbol })),
+    { of: 'bystander' },
+    { of: 'gas-temperature', stream },
+    { of: 'gas-amount', stream },
+    ...[...elements.keys()].map((symbol): BurnMove => ({ of: 'element', stream, symbol })),
   ];
 }
 

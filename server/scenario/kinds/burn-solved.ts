@@ -1,19 +1,37 @@
 // The states of a burn as its figures read them, and what the scenario asks besides: the exhaust temperature, and sizes that
 // have to burn out. Solves nothing before it is read. Invariant: a state that could not be had is null.
 
-import type { Burn, BurnHeatReleased } from '../../core/burn/burn.ts';
+import type { Burn, BurnHeatReleased, BurnState, Charge, MatterState } from '../../core/burn/burn.ts';
+import type { BurnSensitivities } from '../../core/burn/burn-sensitivities.ts';
+import { heatGivenOff } from '../../core/burn/burn-held.ts';
 import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { burnOutsOf, type BurnOutEntries, type PortionBurnOut } from './burn-out-times.ts';
 import type { Material } from '../material.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
+
+/** What figures read: of the states as they were solved, or moved by a step. */
+export interface BurnReadings {
+  readonly charge: Charge;
+  readonly flame: () => MatterState | null;
+  /** What only a solved state has. */
+  readonly response: () => Pick<Equilibrium, 'heatCapacityJPerK' | 'gamma' | 'speedOfSoundMPerS'> | null;
+  readonly zone: () => MatterState | null;
+  readonly heat: () => Omit<BurnHeatReleased, 'slate'> | null;
+  readonly heatAboveJ: () => number | null;
+  readonly burnOuts: () => readonly PortionBurnOut[] | null;
+}
 
 export interface SolvedBurn {
   readonly burn: Burn;
   readonly flame: Equilibrium;
   readonly zone: () => Equilibrium | null;
   readonly slate: () => BurnHeatReleased | null;
+  /** At the exhaust temperature. */
+  readonly exhaust: () => BurnState | null;
   readonly heatAboveJ: () => number | null;
   readonly burnOuts: () => readonly PortionBurnOut[];
+  /** Once somebody has asked. */
+  sensitivities: BurnSensitivities | undefined;
 }
 
 /** What is asked of the states besides what they are. */
@@ -31,7 +49,12 @@ export function solvedBurn(
   { exhaustK, fuel, oxidant, sizes }: AskedOfBurn,
 ): SolvedBurn {
   let burnOuts: readonly PortionBurnOut[] | undefined;
-  let heatAboveJ: number | null | undefined;
+  let atExhaust: BurnState | null | undefined;
+  const exhaust = (): BurnState | null => {
+    if (atExhaust !== undefined) return atExhaust;
+    const state = burn.at(exhaustK);
+    return (atExhaust = state.kind === 'none' ? null : state);
+  };
   return {
     burn,
     flame,
@@ -43,11 +66,19 @@ export function solvedBurn(
       const heat = burn.heat();
       return heat && 'releasedJ' in heat ? heat : null;
     },
+    exhaust,
     heatAboveJ: () => {
-      if (heatAboveJ !== undefined) return heatAboveJ;
-      const heat = burn.heatAbove(exhaustK);
-      return (heatAboveJ = typeof heat === 'number' ? heat : null);
+      // Without the charge's energy nothing asks for the state.
+      const state = burn.charge.enthalpyJ === null ? null : exhaust();
+      return state && heatGivenOff(burn.input, burn.charge, state);
     },
     burnOuts: () => (burnOuts ??= burnOutsOf(fuel, sizes, burn, flame, oxidant)),
+    sensitivities: undefined,
   };
+}
+
+/** A solved burn as its figures read it. */
+export function readingsOf(solved: SolvedBurn): BurnReadings {
+  const { burn, flame, zone, slate, heatAboveJ, burnOuts } = solved;
+  return { charge: burn.charge, flame: () => flame, response: () => flame, zone, heat: slate, heatAboveJ, burnOuts };
 }

@@ -1,60 +1,102 @@
-// The uncertainty of what a flame and its zone are, by the slopes of the converged states: one linear problem instead of two
-// burns for each uncertain input. Knows temperatures and condensed shares; other figures are worked out anew.
-// Invariant: to first order, as all propagation here; undefined where a slope is not known, never half an answer.
-// Method: core/burn/burn-sensitivities.ts.
+// The uncertainty of a burn's figures by the slopes of the converged states: what a figure reads of the states on either side
+// of a small step along each uncertain input, no burn solved anew.
+// Knows no figures but that each reads the states. Invariant: to first order, as all propagation here; undefined where a
+// slope is not known, never half an answer.
+// Method: core/burn/moved-burn.ts; the step is so small that what is left out lies below 1e-7 of a slope.
 
-import { burnSensitivities, condensedShareMovement, type StateMovement } from '../../core/burn/burn-sensitivities.ts';
-import type { BurnParameter } from '../../core/burn/charge-directions.ts';
+import { heatGivenOff, heatReleased } from '../../core/burn/burn-held.ts';
+import { burnSensitivities } from '../../core/burn/burn-sensitivities.ts';
+import { movedBurn, movementsOf, relativeSpeed, type BurnMovements } from '../../core/burn/moved-burn.ts';
 import { combineParts, noParts, type Parts } from '../../core/quantity/parts.ts';
-import type { BurnQuestion, QuantityRole } from './burn-question.ts';
-import type { SolvedBurn } from './burn-solved.ts';
+import type { BurnQuestion } from './burn-question.ts';
+import type { AskedOfBurn, BurnReadings, SolvedBurn } from './burn-solved.ts';
 
-/** The parts of a figure by its id; undefined where its slopes are not known. */
-export function partsBySlope(id: string, solved: SolvedBurn, question: BurnQuestion): Parts | undefined {
-  const slopeOf = slopes(id, solved);
-  if (!slopeOf) return undefined;
-  let parts: Parts = noParts;
-  for (const [index, quantity] of question.quantities.entries()) {
-    if (quantity.parts.size === 0) continue;
-    const slope = slopeOf(question.roles[index] ?? 'unknown');
-    if (slope === undefined) return undefined;
-    parts = combineParts(parts, 1, quantity.parts, slope);
-  }
-  return parts;
+/** Gives the parts of what is read of a burn's states; undefined where slopes are not known. */
+export type PartsOfReading = (read: (readings: BurnReadings) => number | null) => Parts | undefined;
+
+/** For one solved burn; its movements are worked out when the first figure asks. */
+export function partsBySlope(solved: SolvedBurn, question: BurnQuestion, asked: AskedOfBurn): PartsOfReading {
+  const sides = new Map<number, Sides | null>();
+  const uncertain = question.quantities.flatMap(({ parts }, index) => (parts.size > 0 ? [{ index, parts }] : []));
+  const sidesOf = (index: number): Sides | null => {
+    if (!sides.has(index)) sides.set(index, sidesAlong(index, solved, question, asked));
+    return sides.get(index) ?? null;
+  };
+  return (read) => {
+    let sum: Parts = noParts;
+    for (const { index, parts } of uncertain) {
+      const found = sidesOf(index);
+      if (!found) return undefined;
+      const slope = ((read(found.above) ?? NaN) - (read(found.below) ?? NaN)) / (2 * found.step);
+      if (!Number.isFinite(slope)) return undefined;
+      sum = combineParts(sum, 1, parts, slope);
+    }
+    return sum;
+  };
 }
 
-type SlopeOf = (role: QuantityRole) => number | undefined;
-
-function slopes(id: string, { burn, flame }: SolvedBurn): SlopeOf | undefined {
-  const sensitivities = burnSensitivities(burn);
-  const ofFlame =
-    (read: (movement: StateMovement) => number): SlopeOf =>
-    (role) => {
-      if (role === 'none' || role === 'zone-amount') return 0;
-      return role === 'unknown' ? undefined : known(sensitivities.flame(role), read);
-    };
-  switch (id) {
-    case 'flame-temperature':
-      return ofFlame(({ temperatureK }) => temperatureK);
-    case 'condensed-share':
-      return ofFlame((movement) => condensedShareMovement(flame, movement));
-    case 'flame-zone-temperature':
-      return (role) => {
-        if (role === 'none' || (role !== 'unknown' && role !== 'zone-amount' && isOfWhole(role))) return 0;
-        const parameter: BurnParameter | 'unknown' = role === 'zone-amount' ? { of: 'amount' } : role;
-        return parameter === 'unknown' ? undefined : known(sensitivities.zone(parameter), (one) => one.temperatureK);
-      };
-    default:
-      return undefined;
-  }
+/** What is read on either side of a step. */
+interface Sides {
+  readonly step: number;
+  readonly above: BurnReadings;
+  readonly below: BurnReadings;
 }
 
-/** What the zone has nothing of: its own amount, no loss, and never a given temperature. */
-function isOfWhole({ of }: BurnParameter): boolean {
-  return of === 'amount' || of === 'loss-share' || of === 'heating-value' || of === 'temperature';
+/** Of what moves at all, the fastest moves by this share of itself. */
+const relativeStep = 1e-4;
+
+function sidesAlong(index: number, solved: SolvedBurn, question: BurnQuestion, asked: AskedOfBurn): Sides | null {
+  const { burn } = solved;
+  const values = question.quantities.map(({ value }) => value);
+  const move = question.roles[index];
+  if (!move) return null;
+  const movements = movementsOf(burn, (solved.sensitivities ??= burnSensitivities(burn)), move);
+  const step = relativeStep / (fastest(solved, movements) || 1 / Math.abs(values[index] || 1));
+  const side = (by: number): BurnReadings | null => {
+    const there = values.map((value, other) => (other === index ? value + by : value));
+    const { exhaustK } = question.asked(there);
+    return readingsAt(solved, movements, question.input(there), by, { ...asked, exhaustK });
+  };
+  const [above, below] = [side(step), side(-step)];
+  return above && below ? { step, above, below } : null;
 }
 
-function known(movement: StateMovement | null, read: (movement: StateMovement) => number): number | undefined {
-  const slope = movement ? read(movement) : NaN;
-  return Number.isFinite(slope) ? slope : undefined;
+function fastest(solved: SolvedBurn, movements: BurnMovements): number {
+  const zone = solved.zone();
+  const slate = solved.slate()?.slate;
+  return Math.max(
+    relativeSpeed(solved.flame, movements.flame()),
+    zone ? relativeSpeed(zone, movements.zone()) : 0,
+    slate ? relativeSpeed(slate, movements.cooled(slate)) : 0,
+  );
+}
+
+function readingsAt(
+  solved: SolvedBurn,
+  movements: BurnMovements,
+  input: ReturnType<BurnQuestion['input']>,
+  by: number,
+  { exhaustK }: AskedOfBurn,
+): BurnReadings | null {
+  const there = movedBurn(solved.burn, movements, input, by);
+  if (!there) return null;
+  const { charge } = there;
+  return {
+    charge,
+    flame: there.flame,
+    // The heat capacity that follows the reactions is itself a slope: how it moves, the first slopes do not say.
+    response: () => null,
+    zone: there.zone,
+    heat: () => {
+      const slate = solved.slate();
+      const moved = slate && there.cooled(slate.slate, slate.slate.temperatureK);
+      return moved && heatReleased(input, charge, moved);
+    },
+    heatAboveJ: () => {
+      const exhaust = solved.exhaust();
+      const moved = exhaust && there.cooled(exhaust, exhaustK);
+      return moved && heatGivenOff(input, charge, moved);
+    },
+    burnOuts: () => null,
+  };
 }

@@ -131,21 +131,28 @@ function answerGas(
   const pressure = state?.pressure ?? quantityOf(1e5, knownUnit('Pa').dimension);
   const relative = read.relativeHumidity?.value.quantity ?? null;
   const ratio = relative ? null : (read.humidityRatio?.value.quantity ?? null);
-  const vapourShare = (temperatureK: number, pressurePa: number, humidity: number): number => {
+  const vapourShare = (of: DryGas, temperatureK: number, pressurePa: number, humidity: number): number => {
     if (relative) return vapourShareAt(humidity, temperatureK, pressurePa) ?? NaN;
-    return ratio ? vapourShareOfRatio(humidity, gas.molarMass, waterKgPerMol) : 0;
+    return ratio ? vapourShareOfRatio(humidity, of.molarMass, waterKgPerMol) : 0;
   };
   const humidity = relative ?? ratio ?? quantityOf(0);
-  const added = vapourShare(temperature.value, pressure.value, humidity.value);
+  const added = vapourShare(gas, temperature.value, pressure.value, humidity.value);
   if (Number.isNaN(added)) {
     const { span } = read.relativeHumidity?.entry ?? { span: context.placed.section.statement.span };
     context.report(span, { code: 'range/humidity', temperature, pressure });
     return unknownAnswer(evaluated);
   }
-  const outcomes = propagate([temperature, pressure, humidity], ([t = NaN, p = NaN, h = NaN]) => {
-    const values = valuesOf(gas, vapourShare(t, p, h), t, p);
-    return figures.map((row) => values[row.id] ?? NaN);
-  });
+  const portions = shares.flatMap(({ mole }) => mole ?? []);
+  const gasAt = (moles: readonly number[]): DryGas =>
+    moles.every((mole, index) => mole === portions[index]?.value) ? gas : (gasOfPortions(parts, moles) ?? gas);
+  const outcomes = propagate(
+    [temperature, pressure, humidity, ...portions],
+    ([t = NaN, p = NaN, h = NaN, ...moles]) => {
+      const moved = gasAt(moles);
+      const values = valuesOf(moved, vapourShare(moved, t, p, h), t, p);
+      return figures.map((row) => values[row.id] ?? NaN);
+    },
+  );
   const working = workingOf(temperature, pressure, relative, ratio, parts);
   const found: Figure[] = [];
   for (const [index, row] of figures.entries()) {
@@ -162,7 +169,7 @@ function answerGas(
   const absent = new Map(gas.isGas ? [] : [['density', ['a density of what is no gas']]]);
   const stream: OxidantStream = {
     name: context.owner,
-    moleShares: moleSharesOf(gas, [temperature, pressure, humidity], vapourShare),
+    moleShares: moleSharesOf(gas, gasAt, [temperature, pressure, humidity, ...portions], vapourShare),
     temperature,
     pressure,
     sources: working.sources,
@@ -187,16 +194,30 @@ function answerGas(
   return { figures: found, tables: [compositionTable(gas, added)], absent, lines, material: null, stream, screening };
 }
 
-/** Mole shares of the wet gas, uncertain where its state or humidity is. */
+/** The gas of portions whose mole shares have moved; null where those of a portion, or its molecules, are not known. */
+function gasOfPortions(parts: readonly Part[], moles: readonly number[]): DryGas | null {
+  if (moles.length !== parts.length) return null;
+  const species = new Map<string, number>();
+  for (const [index, { material }] of parts.entries()) {
+    if (!material.species) return null;
+    for (const [name, share] of material.species)
+      species.set(name, (species.get(name) ?? 0) + share * (moles[index] ?? 0));
+  }
+  return dryGasOf(species);
+}
+
+/** Mole shares of the wet gas, uncertain where its state, its humidity or its portions are. */
 function moleSharesOf(
   gas: DryGas,
-  inputs: readonly [temperature: Quantity, pressure: Quantity, humidity: Quantity],
-  vapourShare: (temperatureK: number, pressurePa: number, humidity: number) => number,
+  gasAt: (moles: readonly number[]) => DryGas,
+  inputs: readonly Quantity[],
+  vapourShare: (of: DryGas, temperatureK: number, pressurePa: number, humidity: number) => number,
 ): ReadonlyMap<string, Quantity> {
   const names = [...new Set([...gas.species.map(({ name }) => name), vapour])];
-  const outcomes = propagate(inputs, ([t = NaN, p = NaN, h = NaN]) => {
-    const added = vapourShare(t, p, h);
-    const ofPortions = new Map(gas.species.map(({ name, share }) => [name, share * (1 - added)]));
+  const outcomes = propagate(inputs, ([t = NaN, p = NaN, h = NaN, ...moles]) => {
+    const moved = gasAt(moles);
+    const added = vapourShare(moved, t, p, h);
+    const ofPortions = new Map(moved.species.map(({ name, share }) => [name, share * (1 - added)]));
     return names.map((name) => (ofPortions.get(name) ?? 0) + (name === vapour ? added : 0));
   });
   return new Map(

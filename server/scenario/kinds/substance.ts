@@ -7,7 +7,7 @@ import { formationEnthalpyBehind } from '../../core/balance/heating-value.ts';
 import { celsiusZeroK } from '../../core/quantity/constants.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { dimensionless, sameDimension } from '../../core/quantity/dimension.ts';
-import { noParts } from '../../core/quantity/parts.ts';
+import { combineParts, noParts } from '../../core/quantity/parts.ts';
 import { isFault, multiply, divide, quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { propagate } from '../../core/quantity/uncertainty.ts';
 import { referenceTemperatureK, type HeatCapacity } from '../../core/substance/substance.ts';
@@ -149,6 +149,7 @@ function materialOf(
     entropy: read.entropy?.value.quantity ?? null,
     energyFrom: read.formationEnthalpy ? 'formation-enthalpy' : 'heating-value',
     heatCapacity: heatCapacityOf(read),
+    ...heatCapacityPartsOf(read),
     density,
     meltingPoint: read.meltingPoint?.value.quantity ?? null,
     boilingPoint: read.boilingPoint?.value.quantity ?? null,
@@ -171,6 +172,12 @@ function materialOf(
 }
 
 /** One written number is good at its own temperature; elsewhere it is taken as constant, and said to be. */
+function heatCapacityPartsOf(read: Entries): Pick<Material, 'heatCapacityParts'> {
+  const quantity = read.heatCapacity?.value.quantity;
+  if (!quantity || quantity.parts.size === 0) return {};
+  return { heatCapacityParts: combineParts(quantity.parts, 1 / quantity.value, noParts, 0) };
+}
+
 function heatCapacityOf(read: Entries): HeatCapacity | null {
   if (!read.heatCapacity) return null;
   const { quantity, at } = read.heatCapacity.value;

@@ -50,6 +50,13 @@ test('shares are read in percent, other plain numbers are not', () => {
   expect(figureText(figure('condensed-share', 0.1234, '1'))).toBe('12.34 %');
   expect(figureText(figure('condensed-share', 0.3, '1', { uncertainty: 0.02 }))).toBe('(30.0 ± 2.0) %');
   expect(figureText(figure('alkali-carbon-ratio', 0.3, '1'))).toBe('0.3');
+  // An uncertainty below half a unit of the fourth digit says nothing of four digits.
+  expect(figureText(figure('flame-temperature', 2446.76, 'K', { uncertainty: 0.041 }))).toBe('2447 K (2174 °C)');
+  expect(figureText(figure('flame-temperature', 2446.76, 'K', { uncertainty: 0.51 }))).toMatch(
+    /^\(2446\.76 ± 0\.51\) K/,
+  );
+  expect(figureText(figure('released-share', 0.99999999641, '1', { uncertainty: 1.6e-8 }))).toBe('100.0 %');
+  expect(figureText(figure('condensed-share', 0, '1', { uncertainty: 1e-9 }))).toMatch(/±/);
 });
 
 test('a distance is positive, and of temperatures it is in K', () => {

@@ -24,6 +24,10 @@ function charge(input: BurnInput): Charge {
 const parameters: readonly [BurnParameter, number][] = [
   [{ of: 'enthalpy', stream: 'fuel' }, 1e3],
   [{ of: 'enthalpy', stream: 'oxidant' }, 1e3],
+  [{ of: 'gas-temperature', stream: 'fuel' }, 0.1],
+  [{ of: 'gas-temperature', stream: 'oxidant' }, 0.1],
+  [{ of: 'gas-amount', stream: 'fuel' }, 1e-3],
+  [{ of: 'gas-amount', stream: 'oxidant' }, 1e-3],
   [{ of: 'element', stream: 'fuel', symbol: 'C' }, 1e-3],
   [{ of: 'element', stream: 'fuel', symbol: 'Na' }, 1e-3],
   [{ of: 'element', stream: 'fuel', symbol: 'O' }, 1e-3],

@@ -9,6 +9,14 @@ export function shiftedInput(input: BurnInput, parameter: BurnParameter, step: n
       const from = input[parameter.stream];
       return { ...input, [parameter.stream]: { ...from, enthalpyJPerKg: (from.enthalpyJPerKg ?? 0) + step } };
     }
+    case 'gas-temperature': {
+      const from = input[parameter.stream];
+      return { ...input, [parameter.stream]: { ...from, temperatureK: from.temperatureK + step } };
+    }
+    case 'gas-amount': {
+      const from = input[parameter.stream];
+      return { ...input, [parameter.stream]: { ...from, gasMolPerKg: from.gasMolPerKg + step } };
+    }
     case 'element':
       return { ...input, [parameter.stream]: withElement(input[parameter.stream], parameter.symbol, step) };
     case 'amount': {
