@@ -17,7 +17,10 @@ import { balanceProducts } from './balance-products.ts';
 import { balanceShares } from './balance-shares.ts';
 import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
+import { engineCompressionRatio } from './engine-compression-ratio.ts';
+import { engineFiringPressure } from './engine-firing-pressure.ts';
 import { engineMeasuredFuel } from './engine-measured-fuel.ts';
+import { engineNoCycle } from './engine-no-cycle.ts';
 import { engineRepeatedLoad } from './engine-repeated-load.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
@@ -145,7 +148,10 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/cold-charge': rangeColdCharge,
   'range/real-gas': rangeRealGas,
   ...hazardRules,
+  'engine/compression-ratio': engineCompressionRatio,
+  'engine/firing-pressure': engineFiringPressure,
   'engine/measured-fuel': engineMeasuredFuel,
+  'engine/no-cycle': engineNoCycle,
   'engine/repeated-load': engineRepeatedLoad,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,

@@ -10,6 +10,7 @@ import type { NoEquilibrium } from '../core/equilibrium/equilibrium.ts';
 import type { SaltMeltingValidity } from '../core/equilibrium/melts.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
+import type { CycleFact } from './cycle-facts.ts';
 import type { HazardFact } from './hazard-fact.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
@@ -19,6 +20,7 @@ export type Fact =
   | SyntaxFact
   | HazardFact
   | WorkFact
+  | CycleFact
   /** A word stands for nothing. `what` says what was looked for. */
   | {
       readonly code: 'name/unknown';

@@ -2,6 +2,7 @@
 // the constants, what was assumed and where the result is valid. It holds no sentences: wording/ turns the ids into text.
 
 import type { Quantity } from '../core/quantity/quantity.ts';
+import type { CycleAssumptionId, CycleMethodId } from './cycle-methods.ts';
 import type { Place } from './place.ts';
 import type { WorkAssumptionId, WorkMethodId } from './work-methods.ts';
 
@@ -25,6 +26,7 @@ export interface WorkingInput {
 
 export type MethodId =
   | WorkMethodId
+  | CycleMethodId
   | 'as-given'
   | 'molar-mass'
   | 'mean-molar-mass'
@@ -76,6 +78,7 @@ export type MethodId =
 
 export type AssumptionId =
   | WorkAssumptionId
+  | CycleAssumptionId
   | 'reference-state'
   | 'ideal-mixing-enthalpy'
   | 'volumes-add'

@@ -3,6 +3,7 @@
 // Source: language reference, "Conventions the answers rest on".
 
 import type { AssumptionId } from '../scenario/working.ts';
+import { cycleAssumptions } from './cycle-methods.ts';
 import { workAssumptions } from './work-methods.ts';
 
 /** The sentence of an assumption. */
@@ -12,6 +13,7 @@ export function assumptionText(assumption: AssumptionId): string {
 
 const assumptions: Readonly<Record<AssumptionId, string>> = {
   ...workAssumptions,
+  ...cycleAssumptions,
   'reference-state': 'Everything starts and ends at the reference state, 25 °C and 1 bar.',
   'ideal-mixing-enthalpy': 'Mixing the portions sets no heat free and takes none up.',
   'volumes-add': 'The volumes of the portions add up.',

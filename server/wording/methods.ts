@@ -5,6 +5,7 @@
 
 import type { MethodId } from '../scenario/working.ts';
 import type { MethodText } from './method-text.ts';
+import { cycleMethods } from './cycle-methods.ts';
 import { workMethods } from './work-methods.ts';
 
 /** The text of a method. */
@@ -14,6 +15,7 @@ export function methodText(method: MethodId): MethodText {
 
 const methods: Readonly<Record<MethodId, MethodText>> = {
   ...workMethods,
+  ...cycleMethods,
   'as-given': {
     words: 'Taken as it is given.',
     equation: null,

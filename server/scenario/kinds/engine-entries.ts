@@ -121,7 +121,34 @@ export const engineEntries = {
     name: 'residual gas share',
     reader: share('4 %'),
     help: 'Share by mass of the charge that is burnt gas of the cycle before.',
-    default: { text: 'none', source: convention },
+    default: {
+      text: 'what fills the smallest volume at the pressure of the exhaust; 5 % with two strokes',
+      source: 'convention of this program; common practice of uniflow scavenging',
+    },
+  },
+  strokes: {
+    name: 'strokes',
+    reader: wordReader(['four', 'two']),
+    help: 'Strokes of the piston for one cycle. With four it draws in and pushes out its gas; with two it is scavenged.',
+    default: { text: 'four', source: convention },
+  },
+  exhaustPressure: {
+    name: 'exhaust pressure',
+    reader: pressure('2.8 bar'),
+    help: 'Absolute pressure behind the cylinder, before any turbine.',
+    default: { text: "the oxidant's pressure", source: convention },
+  },
+  fuelTemperature: {
+    name: 'fuel temperature',
+    reader: temperature('120 degC'),
+    help: 'The temperature the fuel comes in with; melting on the way from 25 °C is counted.',
+    default: { text: '25 °C', source: convention },
+  },
+  heatLossInCombustion: {
+    name: 'heat loss while burning',
+    reader: share('60 %'),
+    help: 'What part of the heat loss leaves while it burns, where it costs most work; the rest leaves at the end of expansion.',
+    default: { text: '100 %, the cautious end', source: convention },
   },
   mixture: {
     name: 'mixture',

@@ -6,20 +6,29 @@ import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import { consumptionFigures } from '../engine-consumption.ts';
+import { evaluateCycle } from './engine-cycle.ts';
+import { pistonFigures } from './engine-cycle-figures.ts';
 import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
 import { evaluateMeasured } from './engine-measured.ts';
+import { turbineFigures } from './engine-turbine-figures.ts';
+import { evaluateTurbine } from './engine-turbine.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 /** The way of each cycle; null for one that is not worked out yet. */
 const cycles: Readonly<Record<CycleWord, EngineWay | null>> = {
-  otto: null,
-  diesel: null,
-  dual: null,
-  brayton: null,
+  otto: evaluateCycle,
+  diesel: evaluateCycle,
+  dual: evaluateCycle,
+  brayton: evaluateTurbine,
   rankine: null,
 };
 
-const evaluated: EvaluatedKind = { entries: engineEntries, lines: [], figures: consumptionFigures, evaluate };
+const evaluated: EvaluatedKind = {
+  entries: engineEntries,
+  lines: [],
+  figures: [...consumptionFigures, ...pistonFigures],
+  evaluate,
+};
 
 export const engine: Kind = {
   kind: 'engine',

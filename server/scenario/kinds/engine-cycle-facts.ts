@@ -1,0 +1,118 @@
+// What is to be said of an engine with pistons: that it has no cycle and why, and where its pressures pass what is stated.
+// Reads the solved cycle; rounds and words nothing.
+
+import type { Span } from '../../../grammar/tree.ts';
+import type { BurnFault } from '../../core/burn/burn.ts';
+import type { CycleFault } from '../../core/engine/reciprocating.ts';
+import type { SolvedEngine } from '../../core/engine/solved-engine.ts';
+import { knownUnit } from '../../core/quantity/convert.ts';
+import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
+import type { Context } from '../context.ts';
+import type { EngineRead } from './engine-entries.ts';
+import type { WrittenCycle } from './engine-cycle-question.ts';
+
+/** Where in the text what belongs to which part of a cycle is said. */
+export interface CyclePlaces {
+  readonly header: Span;
+  readonly fuel: Span;
+  readonly lambda: Span;
+  readonly intake: Span;
+  readonly exhaust: Span;
+  readonly limit: Span;
+  readonly products: Span;
+}
+
+export function cyclePlaces(read: EngineRead, header: Span): CyclePlaces {
+  return {
+    header,
+    fuel: read.fuel?.entry.span ?? header,
+    lambda: read.lambda?.entry.span ?? header,
+    intake: read.boostTemperature?.entry.span ?? read.oxidant?.entry.span ?? header,
+    exhaust: read.exhaustPressure?.entry.span ?? read.boostPressure?.entry.span ?? header,
+    limit: read.maximumFiringPressure?.entry.span ?? header,
+    products: read.metalTemperature?.entry.span ?? read.cycle?.entry.span ?? header,
+  };
+}
+
+/** Says why there is no cycle. */
+export function reportNoCycle(
+  fault: CycleFault | BurnFault,
+  { fuel, oxidant }: WrittenCycle,
+  places: CyclePlaces,
+  context: Context,
+): void {
+  switch (fault.reason) {
+    case 'no-fresh-gas':
+      context.report(places.exhaust, { code: 'engine/no-cycle', why: 'no-fresh-gas' });
+      return;
+    case 'no-state':
+      reportNoState(fault, places, context);
+      return;
+    case 'no-valence':
+    case 'no-oxygen-needed':
+    case 'no-oxygen-offered':
+    case 'not-positive': {
+      const names = { fuel: fuel.material.name, oxidant: oxidant.name };
+      context.report(places.lambda, { code: 'balance/charge', fault, ...names });
+      return;
+    }
+    // Every entry is read within its range, and every fuel here has an energy: it is our bug.
+    case 'not-in-range':
+    case 'zone-leaner':
+    case 'no-energy':
+    case 'no-heating-value':
+    case 'no-gas':
+    case 'nothing':
+      context.report(places.header, { code: 'program/failed', message: `No cycle: ${JSON.stringify(fault)}` });
+  }
+}
+
+function reportNoState(
+  { state, why }: Extract<CycleFault, { readonly reason: 'no-state' }>,
+  places: CyclePlaces,
+  context: Context,
+): void {
+  const isBug = why.reason === 'not-converged' || why.reason === 'not-finite' || why.reason === 'stopped';
+  if (isBug) {
+    context.report(places.header, { code: 'program/failed', message: `No cycle: ${JSON.stringify({ state, why })}` });
+    return;
+  }
+  const isOutside = why.reason === 'outside-tables';
+  context.report(state === 'intake' ? places.intake : places.header, {
+    code: 'engine/no-cycle',
+    why: 'no-state',
+    state,
+    side: isOutside ? why.side : null,
+    limit: isOutside ? kelvin(why.limitK) : null,
+  });
+}
+
+/** Says what is doubtful about a cycle that could be solved. */
+export function reportCycle(
+  engine: SolvedEngine,
+  { maximumFiringPressure: maximum }: WrittenCycle,
+  places: CyclePlaces,
+  context: Context,
+): void {
+  reportPressure(engine, maximum, places.limit, context);
+}
+
+/** Rounding of a pressure that is held at its limit. */
+const roundingOfPressure = 1e-9;
+
+function reportPressure({ cycles }: SolvedEngine, maximum: Quantity | null, place: Span, context: Context): void {
+  if (!maximum) return;
+  const highest = (read: (cycle: (typeof cycles)[number]['cycle']) => number): number =>
+    Math.max(...cycles.map(({ cycle }) => read(cycle)));
+  const compressedPa = highest((cycle) => cycle.compressed.pressurePa);
+  const peakPa = highest((cycle) => cycle.burnt.pressurePa);
+  const limitPa = maximum.value * (1 + roundingOfPressure);
+  if (peakPa <= limitPa) return;
+  const by = compressedPa > limitPa ? 'compression' : 'burning';
+  const peak = quantityOf(by === 'compression' ? compressedPa : peakPa, knownUnit('Pa').dimension);
+  context.report(place, { code: 'engine/firing-pressure', by, peak, maximum });
+}
+
+function kelvin(valueK: number): Quantity {
+  return quantityOf(valueK, knownUnit('K').dimension, undefined, 'temperature');
+}
