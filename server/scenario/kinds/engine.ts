@@ -10,8 +10,6 @@ import { evaluateCycle } from './engine-cycle.ts';
 import { pistonFigures } from './engine-cycle-figures.ts';
 import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
 import { evaluateMeasured } from './engine-measured.ts';
-import { turbineFigures } from './engine-turbine-figures.ts';
-import { evaluateTurbine } from './engine-turbine.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 /** The way of each cycle; null for one that is not worked out yet. */
@@ -19,7 +17,7 @@ const cycles: Readonly<Record<CycleWord, EngineWay | null>> = {
   otto: evaluateCycle,
   diesel: evaluateCycle,
   dual: evaluateCycle,
-  brayton: evaluateTurbine,
+  brayton: null,
   rankine: null,
 };
 
