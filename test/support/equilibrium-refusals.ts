@@ -33,7 +33,7 @@ export function doubtOf(
     case 'cannot-form': {
       const temperatureK = 'temperatureK' in held ? held.temperatureK : undefined;
       const shortage = leastShortage(solver.candidates, elementMol, temperatureK);
-      if (shortage < 1e-10) return `the candidates can form it, short of ${shortage.toExponential(1)}`;
+      if (shortage < 1e-12) return `the candidates can form it, short of ${shortage.toExponential(1)}`;
       return refusal.elements.length > 0 ? undefined : 'nobody is to blame';
     }
     case 'no-gas': {

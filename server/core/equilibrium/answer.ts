@@ -9,6 +9,7 @@ import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import type { CandidateSet } from './candidates.ts';
 import { madeUpBy } from './descent.ts';
 import { solveDense } from './dense.ts';
+import { at, at32 } from './entry.ts';
 import type { Certificate, Equilibrium, Pinned } from './equilibrium.ts';
 import { assemble } from './newton.ts';
 import type { Aim } from './newton.ts';
@@ -78,58 +79,21 @@ export function stateOf(work: Work, pressurePa: number): State {
 }
 
 /**
- * Potentials of the elements over RT from those of the basis; NaN for an absent element (and for the charge where no ion takes
- * part), 0 for one locked to others.
+ * Potentials of the elements over RT: each element is worth what the basis phases that it is of are; NaN for an absent element
+ * (and for the charge where no ion takes part), 0 for one locked to others.
  */
 function elementPotentials(work: Work): Float64Array {
-  const { set, width, rank, basis, potential, given, matrix, stride } = work;
+  const { set, width, rank, basis, potential, given, inverse } = work;
   const chargeRow = set.hasCharge ? width - 1 : -1;
+  let hasIons = false;
+  for (let k = 0; k < rank; k += 1)
+    hasIons ||= chargeRow >= 0 && at(set.atoms, at32(basis, k) * width + chargeRow) !== 0;
   const potentials = new Float64Array(width);
-  for (let k = 0; k < rank; k += 1) {
-    const start = k * stride;
-    for (let row = 0; row < width; row += 1) matrix[start + row] = at(set.atoms, at32(basis, k) * width + row);
-    matrix[start + width] = at(potential, k);
-  }
-  const columns: number[] = [];
-  for (let k = 0; k < rank; k += 1) {
-    const start = k * stride;
-    let best = 0;
-    let bestRow = k;
-    let size = 0;
-    for (let other = k; other < rank; other += 1) {
-      for (let row = 0; row < width; row += 1) {
-        const entry = Math.abs(at(matrix, other * stride + row));
-        if (entry > size) {
-          size = entry;
-          best = row;
-          bestRow = other;
-        }
-      }
-    }
-    if (bestRow !== k) {
-      for (let row = 0; row <= width; row += 1) {
-        const held = at(matrix, start + row);
-        matrix[start + row] = at(matrix, bestRow * stride + row);
-        matrix[bestRow * stride + row] = held;
-      }
-    }
-    columns.push(best);
-    for (let other = 0; other < rank; other += 1) {
-      if (other === k) continue;
-      const factor = at(matrix, other * stride + best) / at(matrix, start + best);
-      if (factor === 0) continue;
-      for (let row = 0; row <= width; row += 1) {
-        matrix[other * stride + row] = at(matrix, other * stride + row) - factor * at(matrix, start + row);
-      }
-      matrix[other * stride + best] = 0;
-    }
-  }
-  columns.forEach((row, k) => {
-    potentials[row] = at(matrix, k * stride + width) / at(matrix, k * stride + row);
-  });
   for (let row = 0; row < width; row += 1) {
-    const isAbsent = row === chargeRow ? !columns.includes(row) : at(given, row) === 0;
-    if (isAbsent) potentials[row] = Number.NaN;
+    const isAbsent = row === chargeRow ? !hasIons : at(given, row) === 0;
+    let worth = 0;
+    for (let k = 0; k < rank; k += 1) worth += at(inverse, row * width + k) * at(potential, k);
+    potentials[row] = isAbsent ? Number.NaN : worth;
   }
   return potentials;
 }
@@ -344,11 +308,3 @@ export function answerOf(
 }
 /** A phase with less of the mass than this decides nothing by its extrapolated data. */
 const extrapolatedShare = 1e-6;
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
-}

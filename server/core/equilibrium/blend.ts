@@ -3,7 +3,8 @@
 // Knows no search. Invariant: amounts, enthalpy, entropy and volume are those of the two states in the shares given, so elements
 // are held as well as in the worse of the two.
 
-import type { Equilibrium, Pinned } from './equilibrium.ts';
+import { answerOf } from './answer.ts';
+import type { Certificate, Equilibrium, Pinned } from './equilibrium.ts';
 
 /** What is held, and how much of it each side has. */
 export interface Parts {
@@ -12,11 +13,14 @@ export interface Parts {
   readonly high: number;
 }
 
+/** mol below which an amount has few digits left, and its fraction is that of one side. */
+const leastOfGas = 1e-290;
+
 /**
  * Two certified states at one temperature and pressure that share what is held, each with its amount of that. Where these differ
  * by many powers of ten a single share would lose the smaller one in its last digits, so each side has its own.
  */
-export function blended(low: Equilibrium, high: Equilibrium, parts: Parts): Equilibrium {
+export function blended(low: Equilibrium, high: Equilibrium, parts: Parts, elementMol: Float64Array): Equilibrium {
   const span = parts.high - parts.low;
   const highShare = (parts.held - parts.low) / span;
   const lowShare = (parts.high - parts.held) / span;
@@ -30,26 +34,18 @@ export function blended(low: Equilibrium, high: Equilibrium, parts: Parts): Equi
     gasMass += (amountsMol[phase] ?? 0) * (set.molarMassKgPerMol[phase] ?? 0);
   }
   const hasBoth = low.gasMol > 0 && high.gasMol > 0;
-  const logFractions = (low.gasMol > 0 ? low : high).logFractions.map((logarithm, phase) => {
-    const amount = amountsMol[phase] ?? 0;
-    return hasBoth && phase < set.gasCount && amount > 0 ? Math.log(amount / gasMol) : logarithm;
-  });
   const main = highShare < 0.5 ? low : high;
+  const logFractions = (hasBoth ? main : low.gasMol > 0 ? low : high).logFractions.map((logarithm, phase) => {
+    const amount = amountsMol[phase] ?? 0;
+    return hasBoth && phase < set.gasCount && amount > leastOfGas ? Math.log(amount / gasMol) : logarithm;
+  });
   const pinned = pinnedBetween(low, high);
-  // The potentials are those of one side. Where the other's are not the same, a gas is there in another fraction than they ask
-  // for, and the certificate says so; past the end of a crystal's data there are two, each with its own.
-  let differing = 0;
-  for (let phase = 0; phase < set.gasCount && pinned.by !== 'end-of-phase'; phase += 1) {
-    if ((amountsMol[phase] ?? 0) > leastOfGas)
-      differing = Math.max(differing, Math.abs((logFractions[phase] ?? NaN) - (main.logFractions[phase] ?? NaN)));
-  }
   const enthalpyJ = mix(low.enthalpyJ, high.enthalpyJ);
   const entropyJPerK = mix(low.entropyJPerK, high.entropyJPerK);
-  const { certificate: one } = low;
-  const { certificate: other } = high;
+  const pressurePa = mix(low.pressurePa, high.pressurePa);
   return {
     ...main,
-    pressurePa: mix(low.pressurePa, high.pressurePa),
+    pressurePa,
     amountsMol,
     logFractions,
     gasMol,
@@ -66,17 +62,27 @@ export function blended(low: Equilibrium, high: Equilibrium, parts: Parts): Equi
     speedOfSoundMPerS: null,
     pinned,
     extrapolated: [...new Set([...low.extrapolated, ...high.extrapolated])],
-    certificate: {
-      elementBalance: Math.max(one.elementBalance, other.elementBalance),
-      largestAffinity: Math.max(one.largestAffinity, other.largestAffinity),
-      potentialResidual: Math.max(one.potentialResidual, other.potentialResidual) + differing,
-      heldResidual: 0,
-    },
+    // Past the end of a crystal's data there are two states, each with its own potentials; elsewhere one set of them must do.
+    certificate:
+      pinned.by === 'end-of-phase'
+        ? worse(low.certificate, high.certificate)
+        : certificateOf({ ...main, pressurePa, amountsMol, logFractions }, elementMol),
   };
 }
 
-/** mol below which an amount has few digits left. */
-const leastOfGas = 1e-290;
+function certificateOf(state: Equilibrium, elementMol: Float64Array): Certificate {
+  const response = { heatCapacityJPerK: null, gamma: null, pinned: null };
+  return answerOf(state.candidates, state, response, elementMol, { kind: 'none' }, 0).certificate;
+}
+
+function worse(one: Certificate, other: Certificate): Certificate {
+  return {
+    elementBalance: Math.max(one.elementBalance, other.elementBalance),
+    largestAffinity: Math.max(one.largestAffinity, other.largestAffinity),
+    potentialResidual: Math.max(one.potentialResidual, other.potentialResidual),
+    heldResidual: 0,
+  };
+}
 
 function pinnedBetween(low: Equilibrium, high: Equilibrium): Pinned {
   const set = low.candidates;

@@ -8,6 +8,7 @@
 // Vandenberghe, Convex Optimization, 2004, chapter 11).
 
 import { solveDense } from './dense.ts';
+import { at, at32 } from './entry.ts';
 import { affinityOf, takeFractions } from './newton.ts';
 import type { Aim } from './newton.ts';
 import { addPresent } from './descent.ts';
@@ -200,12 +201,4 @@ function enterInterior(work: Work, aim: Aim, direction: Float64Array): boolean {
     if (isInside) return true;
   }
   return false;
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
 }

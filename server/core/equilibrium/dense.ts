@@ -3,6 +3,8 @@
 // never divided through. Method: symmetric equilibration by the square roots of the rows' largest entries, Gaussian
 // elimination with partial pivoting.
 
+import { at } from './entry.ts';
+
 /** What `solveDense` works in; `size` is the largest system it can take. */
 export interface DenseWork {
   readonly scale: Float64Array;
@@ -13,7 +15,8 @@ export function denseWork(size: number): DenseWork {
 }
 
 /**
- * Solves `matrix` x = `right` for a symmetric matrix of `size` rows stored with row length `stride`; `right` becomes x and
+ * Solves `matrix` x = `right` for a matrix of `size` rows stored with row length `stride`, symmetric or nearly so in the size of
+ * its entries; `right` becomes x and
  * the matrix is used up. Returns the smallest pivot over the largest after equilibration; 0 means singular, and then
  * `right` is worthless.
  */
@@ -89,8 +92,4 @@ export function solveDense(
   }
   for (let row = 0; row < size; row += 1) right[row] = at(right, row) * at(scale, row);
   return smallest / largestPivot;
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
 }

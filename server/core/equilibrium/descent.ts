@@ -3,10 +3,11 @@
 // Knows no start of its own and gives no certificate: it says only whether it came to rest. Invariant: at rest no phase present
 // has less than nothing and no absent one has an affinity above the limit.
 
+import { at, at32 } from './entry.ts';
 import { affinityOf, takeFractions, takeStep } from './newton.ts';
 import type { Aim, Step } from './newton.ts';
 import { balanceTraces } from './traces.ts';
-import { takeBasis } from './vertex.ts';
+import { forcedDown, takeBasis } from './vertex.ts';
 import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
@@ -113,7 +114,10 @@ export function takePresentBasis(work: Work, aim: Aim): void {
     amounts[at32(work.present, index)] = Math.max(0, at(work.presentAmount, index));
   }
   takeBasis(work, amounts);
-  for (let k = 0; k < work.rank; k += 1) potential[k] = at(potentials, at32(work.basis, k));
+  for (let k = 0; k < work.rank; k += 1) {
+    const phase = at32(work.basis, k);
+    potential[k] = work.isForced[k] === 1 ? at(cost, phase) - forcedDown : at(potentials, phase);
+  }
   takeFractions(work, aim);
 }
 
@@ -293,12 +297,4 @@ function meanOfGas({ gases, gasCount, fraction, fractionSum, nu, width }: Work, 
     sum += at(fraction, gas) * at(nu, gas * width + k);
   }
   return sum / fractionSum;
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
 }

@@ -8,6 +8,7 @@
 
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import { solveDense } from './dense.ts';
+import { at, at32 } from './entry.ts';
 import type { Work } from './work.ts';
 
 /** What is held, scaled to the work's amounts. */
@@ -159,10 +160,11 @@ export function assemble(work: Work, aim: Aim): number {
   }
   for (let k = 0; k < rank; k += 1) {
     const start = k * stride;
-    if (Math.abs(at(work.amounts, k)) <= work.idleBelow && isIdleRow(work, start, k, firstPresent)) {
-      // Nothing to speak of has any of this basis phase: its potential has no say and stays.
-      holdRow(work, k, size);
-    }
+    // Nothing to speak of has any of this basis phase, or nothing can: its potential has no say and stays.
+    const isIdle =
+      work.isForced[k] === 1 ||
+      (Math.abs(at(work.amounts, k)) <= work.idleBelow && at(matrix, start + k) <= work.idleBelow);
+    if (isIdle && !hasPresent(work, start, firstPresent)) holdRow(work, k, size);
   }
   if (hasGasRow && work.isGasHeld) holdRow(work, gasRow, size);
   if (seeksHeat) {
@@ -183,12 +185,12 @@ function holdRow({ matrix, right, stride }: Work, row: number, size: number): vo
   right[row] = 0;
 }
 
-/** Whether a balance has no condensed phase in it and less gas than counts. */
-function isIdleRow({ matrix, presentCount, idleBelow }: Work, start: number, k: number, firstPresent: number): boolean {
+/** Whether a balance has a condensed phase that is present in it. */
+function hasPresent({ matrix, presentCount }: Work, start: number, firstPresent: number): boolean {
   for (let index = 0; index < presentCount; index += 1) {
-    if (at(matrix, start + firstPresent + index) !== 0) return false;
+    if (at(matrix, start + firstPresent + index) !== 0) return true;
   }
-  return at(matrix, start + k) <= idleBelow;
+  return false;
 }
 
 /** S/R that is missing, with the first-order part that the balances still miss: dS = (dU + p dV - sum of potentials dn)/T. */
@@ -232,6 +234,8 @@ export interface Step {
  * digits as the others. Below this there is no telling.
  */
 const leastQuality = 1e-24;
+/** A potential that moves further than any substance's energy reaches has nothing to hold it: the system is singular. */
+const mostChange = 1e4;
 const largestChange = 2;
 const largestTemperatureChange = 0.35;
 const mostGas = 2;
@@ -254,7 +258,7 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   const warmer = seeksHeat ? at(right, heatRow) : 0;
   let change = Math.abs(warmer);
   for (let k = 0; k < rank; k += 1) change = Math.max(change, Math.abs(at(right, k)));
-  if (!Number.isFinite(change)) return;
+  if (!(change < mostChange)) return;
   let taken = 1;
   if (Math.abs(warmer) > largestTemperatureChange) taken = largestTemperatureChange / Math.abs(warmer);
   if (work.gasAmount > 0 && change > 1e-3) {
@@ -311,12 +315,4 @@ function leastBasisAmount(work: Work): number {
     if (amount < least && (isGas || amount > 0)) least = amount;
   }
   return least === Infinity ? 0 : least;
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
 }

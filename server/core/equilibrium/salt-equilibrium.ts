@@ -6,6 +6,7 @@
 // under the present potentials, until none lies lower (column generation; revised simplex of at most five rows).
 
 import { atomicWeightKgPerMol } from '../substance/elements.ts';
+import { denseWork, solveDense } from './dense.ts';
 import {
   anionCharge,
   lowestHalite,
@@ -156,26 +157,10 @@ function atomicWeight(symbol: string): number {
   return atomicWeightKgPerMol(symbol) ?? Number.NaN;
 }
 
-/** The solution of a small square system, by elimination with the largest pivot of each column. */
+/** The solution of a small square system. */
 function solved(matrix: readonly (readonly number[])[], right: readonly number[]): number[] {
-  const lines = matrix.map((line, row) => [...line, right[row] ?? 0]);
-  const size = lines.length;
-  for (let column = 0; column < size; column += 1) {
-    let best = column;
-    for (let row = column + 1; row < size; row += 1) {
-      if (Math.abs(lines[row]?.[column] ?? 0) > Math.abs(lines[best]?.[column] ?? 0)) best = row;
-    }
-    const [first, second] = [lines[column] ?? [], lines[best] ?? []];
-    lines[column] = second;
-    lines[best] = first;
-    const pivot = lines[column] ?? [];
-    for (let row = 0; row < size; row += 1) {
-      const line = lines[row] ?? [];
-      if (row === column) continue;
-      const factor = (line[column] ?? 0) / (pivot[column] ?? 1);
-      if (factor === 0) continue;
-      for (let k = column; k <= size; k += 1) line[k] = (line[k] ?? 0) - factor * (pivot[k] ?? 0);
-    }
-  }
-  return lines.map((line, row) => (line[size] ?? 0) / (line[row] ?? 1));
+  const size = matrix.length;
+  const solution = Float64Array.from(right);
+  solveDense(Float64Array.from(matrix.flat()), size, size, solution, denseWork(size));
+  return [...solution];
 }

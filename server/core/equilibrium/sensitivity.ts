@@ -165,32 +165,13 @@ function press(work: Work, aim: Aim, sign: number): number {
   return heat;
 }
 
-/** One atom of an element written in the basis phases; undefined when they cannot make it up. */
-function inBasis(work: Work, row: number): Float64Array | undefined {
-  const { set, width, rank, basis } = work;
-  const rows = Array.from({ length: width }, (_, element) => {
-    const line = new Float64Array(rank + 1);
-    for (let k = 0; k < rank; k += 1) line[k] = set.atoms[(basis[k] ?? 0) * width + element] ?? 0;
-    line[rank] = element === row ? 1 : 0;
-    return line;
-  });
-  for (let k = 0; k < rank; k += 1) {
-    let best = k;
-    for (let other = k; other < width; other += 1) {
-      if (Math.abs(rows[other]?.[k] ?? 0) > Math.abs(rows[best]?.[k] ?? 0)) best = other;
-    }
-    const pivotLine = rows[best];
-    const held = rows[k];
-    if (pivotLine === undefined || held === undefined || Math.abs(pivotLine[k] ?? 0) < 1e-9) return undefined;
-    rows[best] = held;
-    rows[k] = pivotLine;
-    for (let other = 0; other < width; other += 1) {
-      const line = rows[other];
-      if (other === k || line === undefined) continue;
-      const factor = (line[k] ?? 0) / (pivotLine[k] ?? 1);
-      if (factor !== 0) for (let c = k; c <= rank; c += 1) line[c] = (line[c] ?? 0) - factor * (pivotLine[c] ?? 0);
-    }
+/** One mole of an element written in the basis phases; undefined when they cannot make it up. */
+function inBasis({ set, width, rank, basis, inverse }: Work, row: number): Float64Array | undefined {
+  const shares = inverse.slice(row * width, row * width + rank);
+  for (let element = 0; element < width; element += 1) {
+    let made = 0;
+    for (let k = 0; k < rank; k += 1) made += (shares[k] ?? 0) * (set.atoms[(basis[k] ?? 0) * width + element] ?? 0);
+    if (Math.abs(made - (element === row ? 1 : 0)) > 1e-9) return undefined;
   }
-  if (rows.slice(rank).some((line) => Math.abs(line[rank] ?? 0) > 1e-9)) return undefined;
-  return Float64Array.from({ length: rank }, (_, k) => (rows[k]?.[rank] ?? 0) / (rows[k]?.[k] ?? 1));
+  return shares;
 }

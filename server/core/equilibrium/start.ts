@@ -5,11 +5,13 @@
 import { standardPressurePa } from '../quantity/constants.ts';
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
 import { addPresent } from './descent.ts';
+import { at, at32 } from './entry.ts';
 import { takeFractions, takePressure, takeTemperature } from './newton.ts';
 import type { Aim } from './newton.ts';
 import type { Equilibrium } from './equilibrium.ts';
+import { startBesideVapour } from './start-vapour.ts';
 import { balanceTraces } from './traces.ts';
-import { findVertex, markForced, takeBasis } from './vertex.ts';
+import { findVertex, forcedDown, markForced, takeBasis } from './vertex.ts';
 import { mayBePresent } from './work.ts';
 import type { Work } from './work.ts';
 
@@ -30,15 +32,38 @@ export function startCold(
   let startK = temperatureK ?? firstTemperatureK;
   const blamed = vertexAt(work, aim, startK);
   if (blamed !== undefined) return blamed;
-  if (temperatureK === undefined) {
-    const warmerK = Math.min(Math.max(temperatureOfVertex(work, aim, startK), Math.max(lowestK, 300)), highestK, 3500);
-    if (Math.abs(warmerK - startK) > 150) {
-      startK = warmerK;
-      vertexAt(work, aim, startK);
-    }
+  if (temperatureK !== undefined) {
+    mixVertex(work, aim);
+    return undefined;
+  }
+  const isDry = !hasGas(work);
+  const vertexK = temperatureOfVertex(work, aim, startK);
+  const warmerK = Math.min(Math.max(vertexK, Math.max(lowestK, 300)), highestK, 3500);
+  if (Math.abs(warmerK - startK) > 150) {
+    vertexAt(work, aim, warmerK);
+    // Too much heat for the condensed phases, too little for the gas: between them.
+    const isBetween = isDry && hasGas(work) && temperatureOfVertex(work, aim, warmerK) < warmerK;
+    if (isBetween) vertexAt(work, aim, startK);
+    else startK = warmerK;
   }
   mixVertex(work, aim);
+  if (aim.isVolume || work.gasCount === 0 || hasGas(work)) return undefined;
+  if (!(work.fractionSum > 1 || vertexK > startK)) return undefined;
+  startBesideVapour(work, aim, vertexK, highestK);
+  const boilingK = work.temperatureK;
+  if (Math.abs(boilingK - startK) > 150) {
+    // Others may be condensed there than where the search began.
+    vertexAt(work, aim, boilingK);
+    mixVertex(work, aim);
+    if (!hasGas(work)) startBesideVapour(work, aim, vertexK, highestK);
+  }
   return undefined;
+}
+
+/** Whether the vertex has a gas. */
+function hasGas({ rank, basis, amounts, set }: Work): boolean {
+  for (let k = 0; k < rank; k += 1) if (at32(basis, k) < set.gasCount && at(amounts, k) > 0) return true;
+  return false;
 }
 
 /**
@@ -69,6 +94,7 @@ export function startNear(work: Work, aim: Aim, temperatureK: number | undefined
       : at(work.cost, phase) +
         (isGas ? at(near.logFractions, phase) : 0) +
         (isGas && aim.isVolume ? Math.log(near.pressurePa / standardPressurePa) : 0);
+    if (work.isForced[k] === 1) potential[k] = at(work.cost, phase) - forcedDown;
     if (!Number.isFinite(at(potential, k))) return false;
   }
   work.presentCount = 0;
@@ -168,15 +194,5 @@ function mixVertex(work: Work, aim: Aim): void {
   if (work.gasAmount > 0) balanceTraces(work, aim);
 }
 
-/** How far below equilibrium a phase that cannot be there is put, over RT. */
-const forcedDown = 250;
 /** What an empty balance's basis phase starts with, as a share of the gas. */
 const traceOfVertex = 1e-9;
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
-}

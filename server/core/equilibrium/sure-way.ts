@@ -129,19 +129,27 @@ function byPressure(
   volumeM3: number,
   descent: Descent,
 ): Equilibrium | undefined {
+  let last: Equilibrium | undefined;
+  let slope = 1;
   const end = reach(
     {
-      stateAt: (logPressure, near) =>
-        atTemperatureAndPressure(work, sought, temperatureK, Math.exp(logPressure), descent, near),
-      // Rising with pressure: what is missing of the volume, as a share of both.
-      valueOf: (state) => (volumeM3 - state.volumeM3) / (volumeM3 + state.volumeM3),
-      slopeOf: () => null,
+      stateAt: (logPressure, near) => {
+        const state = atTemperatureAndPressure(work, sought, temperatureK, Math.exp(logPressure), descent, near);
+        // How fast ln V falls with ln p: as fast as an ideal gas's, and faster where some of it condenses.
+        if (state !== undefined && last !== undefined && state.volumeM3 > 0 && last.volumeM3 > 0)
+          slope = Math.log(last.volumeM3 / state.volumeM3) / Math.log(state.pressurePa / last.pressurePa);
+        last = state;
+        return state;
+      },
+      valueOf: (state) => Math.log(volumeM3 / state.volumeM3),
+      slopeOf: ({ volumeM3: found }) => (found > 0 ? Math.max(1, slope) : null),
       nearEnough,
     },
     [Math.log(lowestPressurePa), Math.log(highestPressurePa)],
     Math.log(standardPressurePa),
     (state) => state.volumeM3,
     volumeM3,
+    sought,
   );
   if (typeof end === 'string') return undefined;
   if (end.pinned === null && sought === elementMol) return end;
@@ -183,6 +191,7 @@ export function byTemperature(
       firstTemperatureK,
       (state) => reached(state, check),
       check.value,
+      elementMol,
     );
   let span = range;
   let end = searchIn(span);
@@ -221,6 +230,7 @@ function reach(
   start: number,
   amountHeld: (state: Equilibrium) => number,
   held: number,
+  elementMol: Float64Array,
 ): Equilibrium | 'below' | 'above' | 'failed' {
   const end = findZero(rising, bounds, start);
   if (end.kind === 'root') return end.state;
@@ -229,7 +239,7 @@ function reach(
   if (Math.max(-end.lowValue, end.highValue) < certifiedValue) {
     return -end.lowValue < end.highValue ? end.low : end.high;
   }
-  return blended(end.low, end.high, { held, low: amountHeld(end.low), high: amountHeld(end.high) });
+  return blended(end.low, end.high, { held, low: amountHeld(end.low), high: amountHeld(end.high) }, elementMol);
 }
 
 /** The exact state beside a blend of phases that change into one another: what is rare follows the blend's potentials. */

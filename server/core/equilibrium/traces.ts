@@ -3,6 +3,7 @@
 // Knows no condensed phases. Invariant: potentials of plentiful basis phases are not touched.
 // Method: one balance at a time, what its gases make set equal to what they take, logarithmically.
 
+import { at, at32 } from './entry.ts';
 import { takeFractions } from './newton.ts';
 import type { Aim } from './newton.ts';
 import type { Work } from './work.ts';
@@ -62,12 +63,4 @@ export function balanceTraces(work: Work, aim: Aim): void {
 function hasCondensed({ present, presentCount, nu, width }: Work, k: number): boolean {
   for (let index = 0; index < presentCount; index += 1) if (at(nu, at32(present, index) * width + k) !== 0) return true;
   return false;
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
 }

@@ -5,6 +5,7 @@
 // Method: primal simplex on the full tableau with artificial phases at a high cost, steepest cost per atom first, the
 // first of equals against cycling (Dantzig; Bland's rule once the objective has stood still).
 
+import { at, at32 } from './entry.ts';
 import type { Work } from './work.ts';
 
 const artificialCost = 1e6;
@@ -57,6 +58,7 @@ export function takeBasis(work: Work, amountsMol: Float64Array): boolean {
   }
   replaceArtificials(work);
   takeAmountsOfBasis(work);
+  markForced(work);
   return true;
 }
 
@@ -78,6 +80,9 @@ function start(work: Work): void {
   work.rank = rank;
   work.isForced.fill(0);
 }
+
+/** How far below equilibrium a phase that cannot be there is put, over RT. */
+export const forcedDown = 250;
 
 /** Marks the empty balances that every phase could only add to. */
 export function markForced(work: Work): void {
@@ -248,7 +253,7 @@ function blamedRows({ rank, basis, amounts, given }: Work): number[] {
   const rows: number[] = [];
   for (let k = 0; k < rank; k += 1) {
     const phase = at32(basis, k);
-    if (phase < 0 && at(amounts, k) > 1e-10 * Math.max(at(given, -1 - phase), 1e-300)) rows.push(-1 - phase);
+    if (phase < 0 && at(amounts, k) > 1e-11 * Math.max(at(given, -1 - phase), 1e-300)) rows.push(-1 - phase);
   }
   return rows;
 }
@@ -306,12 +311,4 @@ function dropRow(work: Work, row: number): void {
 function forEachPhase(work: Work, visit: (phase: number) => void): void {
   for (let index = 0; index < work.gasCount; index += 1) visit(at32(work.gases, index));
   for (let index = 0; index < work.condensedCount; index += 1) visit(at32(work.condensed, index));
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
-}
-
-function at32(values: Int32Array, index: number): number {
-  return values[index] as number;
 }

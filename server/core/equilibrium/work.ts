@@ -6,6 +6,7 @@
 import type { CandidateSet } from './candidates.ts';
 import { denseWork } from './dense.ts';
 import type { DenseWork } from './dense.ts';
+import { at } from './entry.ts';
 
 export interface Work {
   readonly set: CandidateSet;
@@ -155,8 +156,4 @@ export function admitPhases(
     else if (temperatureK === undefined || mayBePresent(set, phase, temperatureK))
       work.condensed[work.condensedCount++] = phase;
   }
-}
-
-function at(values: Float64Array, index: number): number {
-  return values[index] as number;
 }

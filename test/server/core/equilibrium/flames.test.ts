@@ -18,6 +18,7 @@ import {
   solverOf,
   solverOver,
 } from '../../../support/equilibrium.ts';
+import { faultsOf } from '../../../support/equilibrium-proof.ts';
 
 /** mol of O2 for one of the fuel. */
 function oxygenFor(formula: string): number {
@@ -125,4 +126,18 @@ describe('a metal in oxygen burns as hot as its oxide lasts', () => {
       expect(more.temperatureK - flame.temperatureK).toBeLessThan(60);
     },
   );
+
+  // All of such a flame's oxide changes to gas at one temperature: a search over temperatures sees a jump there and would halve
+  // its way to it, over a thousand steps; from beside its vapour it takes a few.
+  test.each(['Mg', 'Al', 'Li', 'Ca', 'Si'])('%s in exactly the oxygen it needs is found in a few steps', (metal) => {
+    const oxygen = { Mg: 0.5, Al: 0.75, Li: 0.25, Ca: 0.5, Si: 1 }[metal] ?? NaN;
+    const solver = solverOf(`${metal} O`);
+    for (const enthalpyJ of [-80_000, -20_000, 0, 40_000]) {
+      const held = { held: 'enthalpy-pressure', enthalpyJ, pressurePa: 101_325 } as const;
+      const flame = equilibriumOf(solver, { [metal]: 1, O2: oxygen }, held);
+      expect(faultsOf(elementMolOf(solver.candidates, { [metal]: 1, O2: oxygen }), held, flame)).toEqual([]);
+      expect(flame.pinned).toMatchObject({ by: 'phase-change', gasGrows: true });
+      expect(flame.iterations).toBeLessThan(60);
+    }
+  });
 });
