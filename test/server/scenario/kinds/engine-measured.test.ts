@@ -207,10 +207,11 @@ describe('slips', () => {
   test('a cycle beside a measurement contradicts it', () => {
     checkFacts(`
         engine a {
-      # ^^^^^^ kind/not-evaluated
           cycle: otto
+          compression ratio: 9
+          lambda: 1.2
           maximum continuous rating: 900 kW
-          fuel: gas_oil
+          fuel: methane
           efficiency: 40 % at 100 %
       #   ^^^^^^^^^^ balance/contradiction
         }
