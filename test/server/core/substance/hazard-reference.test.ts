@@ -2,7 +2,7 @@
 // limits, lower flammable limits, and the GHS bounds of flammable liquids. A row that `differs` says why, and must still differ.
 
 import { describe, expect, test } from 'vitest';
-import { findSubstance } from '../../../../server/core/substance/catalogue.ts';
+import { allSubstances, findSubstance } from '../../../../server/core/substance/catalogue.ts';
 import { flammableLiquidCategory } from '../../../../server/core/substance/ghs.ts';
 import type { Hazards } from '../../../../server/core/substance/hazards.ts';
 import exposure from '../../../reference/hazards-exposure-limits.json' with { type: 'json' };
@@ -10,6 +10,7 @@ import limits from '../../../reference/hazards-flammable-limits.json' with { typ
 import flashPoints from '../../../reference/hazards-flash-point-classes.json' with { type: 'json' };
 import ghs from '../../../reference/hazards-ghs-classes.json' with { type: 'json' };
 import limitingOxygen from '../../../reference/hazards-limiting-oxygen.json' with { type: 'json' };
+import packingGroups from '../../../reference/hazards-packing-groups.json' with { type: 'json' };
 import unNumbers from '../../../reference/hazards-un-numbers.json' with { type: 'json' };
 
 interface Row {
@@ -25,6 +26,7 @@ function hazardsOf(name: string): Hazards {
 
 const all = [
   unNumbers.rows,
+  packingGroups.rows,
   ghs.rows,
   exposure.rows,
   limits.rows,
@@ -56,6 +58,27 @@ describe('UN numbers', () => {
       }
     },
   );
+
+  const transports = allSubstances().flatMap(({ name, hazards }) =>
+    (hazards?.transport ?? []).map((entry) => ({ name, entry })),
+  );
+
+  test.each(packingGroups.rows)('$unNumber: division, subsidiary hazards and packing group', (row) => {
+    const entries = transports.filter(({ entry }) => entry.unNumber === row.unNumber);
+    expect(entries.length).toBeGreaterThan(0);
+    for (const { name, entry } of entries) {
+      const { dangerClass, subsidiary, packingGroup = null } = entry;
+      const read = { dangerClass: row.dangerClass, subsidiary: row.subsidiary, packingGroup: row.packingGroup };
+      expect({ dangerClass, subsidiary, packingGroup }, name).toEqual(read);
+    }
+  });
+
+  test('what is said to have been seen in the list is a row here', () => {
+    const rows = new Set([...packingGroups.rows, ...unNumbers.rows].map(({ unNumber }) => unNumber));
+    const seen = transports.filter(({ entry }) => entry.source.provenance === 'seen');
+    expect(seen.filter(({ entry }) => !rows.has(entry.unNumber)).map(({ name }) => name)).toEqual([]);
+    expect(seen.length).toBeGreaterThan(transports.length / 2);
+  });
 
   test('at least forty substances are held against the list', () => {
     expect(new Set((unNumbers.rows as readonly UnRow[]).flatMap(({ substances }) => substances)).size).toBeGreaterThan(
