@@ -36,7 +36,7 @@ function statesTable(engine: SolvedEngine): Table {
     { id: 'state', label: 'State', unit: null },
     { id: 'pressure', label: 'Pressure', unit: 'bar' },
     { id: 'temperature', label: 'Temperature', unit: 'K' },
-    { id: 'volume-ratio', label: 'Volume over the smallest', unit: '1' },
+    { id: 'volume-ratio', label: 'Volume over clearance volume', unit: '1' },
     { id: 'enthalpy', label: 'Enthalpy, per kg of fuel', unit: 'MJ/kg' },
     { id: 'composition', label: 'Composition', unit: null },
   ];
@@ -80,7 +80,7 @@ function statesTable(engine: SolvedEngine): Table {
 }
 
 const lossLabels: Readonly<Record<LossId, string>> = {
-  'brake-work': 'work at the shaft',
+  'brake-work': 'brake work',
   friction: 'friction and auxiliaries',
   'wall-heat': 'heat to the walls',
   'exhaust-sensible': 'sensible heat of the exhaust above 25 °C',
@@ -174,7 +174,7 @@ const kinetic = new Set(['NO(g)', 'NO2(g)', 'N2O(g)', 'CO(g)', 'H2(g)', 'OH(g)',
 function diagramTable(engine: SolvedEngine): Table {
   const columns: readonly Column[] = [
     { id: 'stroke', label: 'Stroke', unit: null },
-    { id: 'volume-ratio', label: 'Volume over the smallest', unit: '1' },
+    { id: 'volume-ratio', label: 'Volume over clearance volume', unit: '1' },
     { id: 'pressure', label: 'Pressure', unit: 'bar' },
     { id: 'temperature', label: 'Temperature', unit: 'K' },
     { id: 'condensed-share', label: 'Condensed, by mass', unit: '1' },
