@@ -5,6 +5,10 @@
 import type { Fact } from '../scenario/facts.ts';
 import { sourceOf } from '../scenario/placing.ts';
 import type { EvaluatedFile, EvaluatedScenario, PlacedFact } from '../scenario/scenario.ts';
+import { accountPrecipitation } from './account-precipitation.ts';
+import { accountReceivingLimit } from './account-receiving-limit.ts';
+import { accountSeaState } from './account-sea-state.ts';
+import { accountSeaVariables } from './account-sea-variables.ts';
 import { balanceCharge } from './balance-charge.ts';
 import { balanceContradiction } from './balance-contradiction.ts';
 import { balanceElements } from './balance-elements.ts';
@@ -54,6 +58,7 @@ import { rangePhase } from './range-phase.ts';
 import { rangePositive } from './range-positive.ts';
 import { rangeRealGas } from './range-real-gas.ts';
 import { rangeRich } from './range-rich.ts';
+import { rangeSeaWater } from './range-sea-water.ts';
 import { rangeShare } from './range-share.ts';
 import { rangeSticky } from './range-sticky.ts';
 import { rangeTemperature } from './range-temperature.ts';
@@ -140,6 +145,11 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/number': rangeNumber,
   'range/temperature': rangeTemperature,
   'range/share': rangeShare,
+  'range/sea-water': rangeSeaWater,
+  'account/sea-variables': accountSeaVariables,
+  'account/sea-state': accountSeaState,
+  'account/receiving-limit': accountReceivingLimit,
+  'account/precipitation': accountPrecipitation,
   'range/phase': rangePhase,
   'range/positive': rangePositive,
   'range/rich': rangeRich,

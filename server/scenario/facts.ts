@@ -14,11 +14,13 @@ import type { CycleFact } from './cycle-facts.ts';
 import type { HazardFact } from './hazard-fact.ts';
 import type { Place } from './place.ts';
 import type { PortionState } from './portion-state.ts';
+import type { SeaFact } from './sea-fact.ts';
 import type { WorkFact } from './work-facts.ts';
 
 export type Fact =
   | SyntaxFact
   | HazardFact
+  | SeaFact
   | WorkFact
   | CycleFact
   /** A word stands for nothing. `what` says what was looked for. */

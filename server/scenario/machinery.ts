@@ -5,9 +5,10 @@
 import type { Band, Consumption } from '../core/engine/consumption.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Material } from './material.ts';
+import type { ReceivingWater } from './receiving-water.ts';
 import type { AssumptionId } from './working.ts';
 
-export type Machinery = EngineMachine;
+export type Machinery = EngineMachine | ReceivingWater;
 
 export interface EngineMachine {
   readonly machinery: 'engine';

@@ -4,6 +4,7 @@
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { CycleAssumptionId, CycleMethodId } from './cycle-methods.ts';
 import type { Place } from './place.ts';
+import type { SeaAssumptionId, SeaMethodId } from './sea-methods.ts';
 import type { WorkAssumptionId, WorkMethodId } from './work-methods.ts';
 
 export interface Working {
@@ -27,6 +28,7 @@ export interface WorkingInput {
 export type MethodId =
   | WorkMethodId
   | CycleMethodId
+  | SeaMethodId
   | 'as-given'
   | 'molar-mass'
   | 'mean-molar-mass'
@@ -79,6 +81,7 @@ export type MethodId =
 export type AssumptionId =
   | WorkAssumptionId
   | CycleAssumptionId
+  | SeaAssumptionId
   | 'reference-state'
   | 'ideal-mixing-enthalpy'
   | 'volumes-add'

@@ -6,6 +6,7 @@
 import type { MethodId } from '../scenario/working.ts';
 import type { MethodText } from './method-text.ts';
 import { cycleMethods } from './cycle-methods.ts';
+import { seaMethods } from './sea-methods.ts';
 import { workMethods } from './work-methods.ts';
 
 /** The text of a method. */
@@ -16,6 +17,7 @@ export function methodText(method: MethodId): MethodText {
 const methods: Readonly<Record<MethodId, MethodText>> = {
   ...workMethods,
   ...cycleMethods,
+  ...seaMethods,
   'as-given': {
     words: 'Taken as it is given.',
     equation: null,

@@ -7,6 +7,7 @@ import { engine } from './engine.ts';
 import type { Kind } from './kind.ts';
 import { oxidant } from './oxidant.ts';
 import { reaction } from './reaction.ts';
+import { sea } from './sea.ts';
 import { substance } from './substance.ts';
 
 export const kinds: readonly Kind[] = [
@@ -19,7 +20,7 @@ export const kinds: readonly Kind[] = [
   later('duty', 'What an engine has to do: legs by time or by distance and speed, or a named test cycle.'),
   later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),
   later('supply', 'How a substance is made: electricity, heat, emissions, price and by-products.'),
-  later('sea', 'The water that takes up what is released: salinity, temperature and its carbonate system.'),
+  sea,
   later('space', 'An enclosed volume with its air changes, and what a leak, spill or boil-off does in it.'),
   later('site', 'Who and what is near a release, the wind and the stack.'),
   later('account', 'The whole: stack, supply, sea, regulation, money and people.'),

@@ -8,7 +8,7 @@ const FILES = {
   'wrong.stoke': 'blend fuel {\n  30 % mass  ethanolx\n  rest       methanol\n}\n',
   'failed.stoke':
     'blend fuel {\n  30 % mass  ethanol\n  rest       methanol\n}\nexpect lower heating value of fuel > 99 MJ/kg\n',
-  'noted.stoke': 'sea bay {\n  temperature: 11 degC\n}\nexpect acidity of bay > 8\n',
+  'noted.stoke': 'fleet ferries {\n  ships: 12\n}\nexpect sodium of ferries > 8 t\n',
   'shapeless.stoke': 'blend   fuel {\n30 % mass ethanol\nrest methanol\n}\n',
 };
 

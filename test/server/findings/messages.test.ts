@@ -5,6 +5,7 @@ import { allCodes, findingsIn } from '../../../server/findings/registry.ts';
 import type { Fact, Sided } from '../../../server/scenario/facts.ts';
 import type { HazardFact } from '../../../server/scenario/hazard-fact.ts';
 import { file, quantity } from '../../support/scenario-builder.ts';
+import { SEA_MILD, SEA_ROWS } from './sea-messages.ts';
 import { WORK_MILD, WORK_ROWS } from './work-messages.ts';
 
 const place = { path: 'trial.stoke', start: 0, end: 1 };
@@ -30,6 +31,7 @@ const hazard: Omit<HazardFact, 'code' | 'severity'> = {
 
 const ROWS: readonly (readonly [Fact, string])[] = [
   ...WORK_ROWS,
+  ...SEA_ROWS,
   [
     {
       code: 'syntax/missing',
@@ -715,8 +717,9 @@ describe('every code', () => {
       const [finding] = findingsIn(file('10', { facts: [['10', fact]] }));
       return finding && finding.severity !== 'error' ? [`${finding.severity} ${finding.code}`] : [];
     });
-    const others = mild.filter((one) => !WORK_MILD.includes(one));
+    const others = mild.filter((one) => !WORK_MILD.includes(one) && !SEA_MILD.includes(one));
     expect(mild.filter((one) => WORK_MILD.includes(one)).sort()).toEqual([...WORK_MILD].sort());
+    expect(mild.filter((one) => SEA_MILD.includes(one)).sort()).toEqual([...SEA_MILD].sort());
     expect(others.sort()).toEqual([
       'information balance/water-missing',
       'information balance/water-missing',

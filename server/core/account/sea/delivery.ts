@@ -67,3 +67,40 @@ export function uptakePerMole(state: CarbonateState, form: DeliveredForm): numbe
   const { alkalinity, carbon } = formBrings[form];
   return uptakePerAlkalinity(state) * alkalinity - carbon;
 }
+
+/** What a kilogram of effluent leaves per kilogram of sea water at a dilution (kg of sea water per kg of effluent). */
+export function dilutedDelivery(effluent: Delivery, dilution: number): Delivery {
+  return { alkalinity: effluent.alkalinity / dilution, carbon: effluent.carbon / dilution };
+}
+
+/**
+ * The least dilution from the one given on at which the mixed water is as `holds` asks; null where not even the water without
+ * effluent is. The further it is diluted the nearer it comes to that.
+ */
+export function enoughDilution(
+  state: CarbonateState,
+  effluent: Delivery,
+  dilution: number,
+  holds: (mixed: CarbonateState) => boolean,
+): number | null {
+  const isEnough = (trial: number): boolean => {
+    const response = respondTo(state, dilutedDelivery(effluent, trial));
+    return response !== null && holds(response.mixed);
+  };
+  if (!holds(state)) return null;
+  if (isEnough(dilution)) return dilution;
+  let [low, high] = [Math.log(dilution), Math.log(dilution) + 1];
+  while (!isEnough(Math.exp(high))) {
+    if (high > largestLnDilution) return null;
+    [low, high] = [high, high + 2];
+  }
+  while (high - low > 1e-6) {
+    const middle = (low + high) / 2;
+    if (isEnough(Math.exp(middle))) high = middle;
+    else low = middle;
+  }
+  return Math.exp(high);
+}
+
+/** Beyond it what is left cannot be told from rounding. */
+const largestLnDilution = Math.log(1e12);

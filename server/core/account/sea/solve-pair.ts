@@ -224,8 +224,8 @@ function zeroOf(
   return (Math.abs(end.lowValue) <= Math.abs(end.highValue) ? end.low : end.high).lnHydrogen;
 }
 
-/** mol/kg: a millionth of what is measured at best. */
-const alkalinityNearEnough = 1e-13;
+/** mol/kg: some hundred times the rounding of the sum, so that slopes may be taken by small steps. */
+const alkalinityNearEnough = 1e-16;
 
 function solved(state: CarbonateState | undefined, other?: CarbonateState): PairSolution {
   return state ? { kind: 'solved', state, other: other ?? null } : { kind: 'none' };

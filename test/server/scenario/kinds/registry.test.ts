@@ -12,11 +12,11 @@ describe('kinds not evaluated yet', () => {
   test('one information each; what refers to them is silent', () => {
     const scenario = checkFacts(`
       let x = 1
-        sea bay {
-      # ^^^ kind/not-evaluated
-        temperature: 11 degC
+        fleet ferries {
+      # ^^^^^ kind/not-evaluated
+        ships: 12
       }
-      expect acidity of bay > 3
+      expect sodium of ferries > 3 t
     `);
     expect(scenario.files[0]?.expectations[0]?.holds).toBeNull();
   });
