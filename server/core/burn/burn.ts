@@ -144,8 +144,14 @@ export interface FrozenState extends MatterState {
   readonly from: Equilibrium;
 }
 
-/** Why there is no state: the minimiser's reason, or the question was given up before its turn came. */
-export type NoState = NoEquilibrium | { readonly kind: 'none'; readonly reason: 'stopped' };
+/** The question was given up before its turn came. Only a burn that was prepared with a `shouldStop` ever says so. */
+export interface Stopped {
+  readonly kind: 'none';
+  readonly reason: 'stopped';
+}
+
+/** Why there is no state. */
+export type NoState = NoEquilibrium | Stopped;
 
 export type BurnState = Equilibrium | FrozenState;
 export type BurnStateOrNone = BurnState | NoState;

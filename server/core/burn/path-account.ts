@@ -34,10 +34,11 @@ export interface PathAccount {
 
 /** The account of the default path of a question, as a job; null where it was told to stop. A charge at fault has none. */
 export function pathAccountOf(input: BurnInput, shouldStop: () => boolean): PathAccount | null {
-  const burn = prepareBurn(input, shouldStop);
+  let isStopped = false;
+  const burn = prepareBurn(input, () => (isStopped ||= shouldStop()));
   if (burn.kind === 'fault') return { stays: [], carbon: [], gaps: [] };
   const account = accountOfPath(burn.path());
-  return shouldStop() ? null : account;
+  return isStopped ? null : account;
 }
 
 /** Says all of a question: equal keys, equal questions. */

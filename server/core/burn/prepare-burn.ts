@@ -17,8 +17,8 @@ import { coolingPath } from './cooling-path.ts';
 import { frozenState } from './frozen-state.ts';
 
 /**
- * The burn of an input, or why nothing can be burnt. `shouldStop` is asked before each state is solved; a stopped state
- * is `stopped` for good, so ask a new burn afterwards.
+ * The burn of an input, or why nothing can be burnt. `shouldStop` is asked before each state is solved; once it has said yes
+ * every state that is not there yet is `stopped`, for good, so ask a new burn afterwards. Without it none ever is.
  */
 export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn | BurnFault {
   const charge = chargeOf(input.fuel, input.oxidant, input.amount, input.held);
@@ -28,8 +28,10 @@ export function prepareBurn(input: BurnInput, shouldStop?: () => boolean): Burn 
   const fault = faultOf(input, charge, zoneCharge);
   if (fault !== undefined) return fault;
 
-  const whole = new Matter(charge, input, shouldStop);
-  const zone = zoneCharge && new Matter(zoneCharge, input, shouldStop);
+  let isStopped = false;
+  const stops = (): boolean => (isStopped ||= shouldStop?.() === true);
+  const whole = new Matter(charge, input, stops);
+  const zone = zoneCharge && new Matter(zoneCharge, input, stops);
 
   const flame = once((): Equilibrium | NoState => whole.solveHot(heldByFlame(input, charge)));
   const zoneState = once((): Equilibrium | NoState | null =>
@@ -112,7 +114,7 @@ class Matter {
   constructor(
     private readonly charge: Charge,
     private readonly input: BurnInput,
-    private readonly shouldStop: (() => boolean) | undefined,
+    private readonly stops: () => boolean,
   ) {
     const admitted = admittanceOf(input);
     const admits = admitted === undefined ? {} : { admits: admitted };
@@ -125,7 +127,7 @@ class Matter {
   }
 
   solve(held: Held, near?: Equilibrium): Equilibrium | NoState {
-    if (this.shouldStop?.() === true) return { kind: 'none', reason: 'stopped' };
+    if (this.stops()) return { kind: 'none', reason: 'stopped' };
     return this.plain().solve(this.charge.elementMol, held, near);
   }
 
@@ -135,6 +137,7 @@ class Matter {
     if (this.input.ions !== true || state.kind === 'none' || state.temperatureK <= ionsAboveK) return state;
     const neutral = new Float64Array(this.charge.elementMol.length + 1);
     neutral.set(this.charge.elementMol);
+    if (this.stops()) return { kind: 'none', reason: 'stopped' };
     return this.withIons().solve(neutral, held);
   }
 }

@@ -234,8 +234,6 @@ export interface Step {
  * digits as the others. Below this there is no telling.
  */
 const leastQuality = 1e-24;
-/** A potential that moves further than any substance's energy reaches has nothing to hold it: the system is singular. */
-const mostChange = 1e4;
 const largestChange = 2;
 const largestTemperatureChange = 0.35;
 const mostGas = 2;
@@ -258,7 +256,7 @@ export function takeStep(work: Work, aim: Aim, step: Step, lowestK: number, high
   const warmer = seeksHeat ? at(right, heatRow) : 0;
   let change = Math.abs(warmer);
   for (let k = 0; k < rank; k += 1) change = Math.max(change, Math.abs(at(right, k)));
-  if (!(change < mostChange)) return;
+  if (!Number.isFinite(change)) return;
   let taken = 1;
   if (Math.abs(warmer) > largestTemperatureChange) taken = largestTemperatureChange / Math.abs(warmer);
   if (work.gasAmount > 0 && change > 1e-3) {

@@ -185,7 +185,7 @@ export function byTemperature(
         // The heat capacity is that at constant pressure.
         slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
           heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
-        nearEnough,
+        nearEnough: 'volumeM3' in held ? nearEnoughInVolume : nearEnough,
       },
       [lowestK, highestK],
       firstTemperatureK,
@@ -260,6 +260,8 @@ function settled(
 
 /** A held property this near (over R times the atoms, and T) is met. */
 const nearEnough = 1e-12;
+/** With a volume held each state is itself the end of a search, and no better than that. */
+const nearEnoughInVolume = 1e-10;
 const certifiedValue = 1e-9;
 
 export function pressureAim(pressurePa: number): Aim {

@@ -87,6 +87,16 @@ describe('as a job', () => {
     expect(asked).toBeLessThan(12);
   });
 
+  test('stops for good, however late on the path and however shortly it is told to', () => {
+    let whole = 0;
+    pathAccountOf(input, () => (whole += 1) < 0);
+    for (const turn of [1, Math.floor(whole / 2), whole]) {
+      let asked = 0;
+      expect(pathAccountOf(input, () => (asked += 1) === turn)).toBeNull();
+      expect(asked).toBe(turn);
+    }
+  });
+
   test('the key tells questions apart by every number, element and product', () => {
     const fuel = new Map(input.fuel.elementMolPerKg);
     fuel.set('Na', (fuel.get('Na') ?? 0) * (1 + 1e-15 * 4));
