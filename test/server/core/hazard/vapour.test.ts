@@ -3,6 +3,7 @@
 import { describe, expect, test } from 'vitest';
 import { gasMixtureOf } from '../../../../server/core/hazard/gas-mixtures.ts';
 import { flashPointK, lowerLimitAt, ullageOf } from '../../../../server/core/hazard/vapour.ts';
+import mixtures from '../../../reference/le-chatelier-mixtures.json' with { type: 'json' };
 import published from '../../../reference/flash-points-of-mixtures.json' with { type: 'json' };
 import { storeOf } from './stores.ts';
 
@@ -116,6 +117,24 @@ describe('lower limits', () => {
     const [a, b] = [50 * (methane ?? 0), 50 * (propane ?? 0)];
     const mixture = gasMixtureOf(storeOf({ basis: 'mole', percent: { methane: a, propane: b, air: 100 - a - b } }));
     expect(mixture?.overLowerLimit).toBeCloseTo(1, 2);
+  });
+});
+
+describe('limits of mixtures against published worked examples', () => {
+  test.each(mixtures.rows)('$limit limit of $substances', (row) => {
+    const { substances, percentOfFuel, limitPercent, mixturePercent } = row;
+    const store = storeOf({
+      basis: 'mole',
+      percent: Object.fromEntries(substances.map((name, index) => [name, percentOfFuel[index] ?? 0])),
+    });
+    // With the limits of the example in place of the catalogue's.
+    const portions = store.portions.map((portion, index) => {
+      const limit = (limitPercent[index] ?? Number.NaN) / 100;
+      return { ...portion, flammableLimits: { lower: limit, upper: limit, temperatureK: 298.15 } };
+    });
+    const mixture = gasMixtureOf({ ...store, portions, temperatureK: 298.15 });
+    const over = row.limit === 'lower' ? mixture?.overLowerLimit : mixture?.overUpperLimit;
+    expect(100 / (over ?? Number.NaN)).toBeCloseTo(mixturePercent, 9);
   });
 });
 
