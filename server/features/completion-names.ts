@@ -1,21 +1,23 @@
 // Offers what the scenario has names for: definitions, values, figures of definitions, and shares of portions, each with
-// what it comes to where that has been worked out. Works nothing out. Invariant: a number shown is one the evaluation
-// found for this very text; what could not be had is offered without one.
+// what it comes to where that has been worked out already: a list is made at every key, and for it nothing is worked out that
+// nobody has looked at. What an offer comes to is seen beside it (completion-documentation.ts). Invariant: a number shown is
+// one the evaluation found for this very text; what could not be had is offered without one.
 import { inUnit, knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
 import { quantityOf } from '../core/quantity/quantity.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { parseFormula } from '../core/substance/formula.ts';
+import { figuresAtHand, isAtHand, tablesAtHand } from '../scenario/at-hand.ts';
 import { givenFigureRows } from '../scenario/given-figures.ts';
-import { kinds } from '../scenario/kinds/registry.ts';
+import { kindOf, kinds } from '../scenario/kinds/registry.ts';
 import { materialFigures, type FigureRow } from '../scenario/material-figures.ts';
-import type { EvaluatedDefinition, EvaluatedScenario } from '../scenario/scenario.ts';
+import type { EvaluatedDefinition, EvaluatedScenario, Figure } from '../scenario/scenario.ts';
 import { formatNumber, formatPercent } from '../wording/numbers.ts';
 import { figureText, quantityText } from '../wording/quantities.ts';
 import { unitOfValue } from '../wording/written-unit.ts';
 import { fits, type CompletionItem } from './completion-item.ts';
 import type { Wanted } from './completion-units.ts';
-import { leadingFigures, leadingRank } from './leading-figures.ts';
+import { inLeadingOrder, leadingFigures, leadingRank } from './leading-figures.ts';
 import { writtenName } from './written-name.ts';
 
 /** Definitions that pass, by kind; the one at the cursor is left out, because it cannot speak of itself. */
@@ -63,18 +65,18 @@ export function valueItems(
 export function figureItems(scenario: EvaluatedScenario, typed: string, start: number, most: number): CompletionItem[] {
   const items: CompletionItem[] = [];
   for (const definition of definitionsOf(scenario)) {
-    for (const [rank, figure] of leadingFigures(definition).entries()) {
-      const label = `${wordsOf(figure.id)} of ${writtenName(definition.name)}`;
+    for (const [rank, { id, detail }] of figuresOffered(definition).entries()) {
+      const label = `${wordsOf(id)} of ${writtenName(definition.name)}`;
       if (items.length === most) return items;
       if (!fits(label, typed)) continue;
-      const subject = { kind: 'figure', of: definition.name, id: figure.id } as const;
+      const subject = { kind: 'figure', of: definition.name, id } as const;
       items.push({
         label,
         role: 'figure',
-        detail: figureText(figure),
+        detail,
         insert: label,
         start,
-        rank: 30.5 + leadingRank(figure.id) + rank / 1000,
+        rank: 30.5 + leadingRank(id) + rank / 1000,
         subject,
       });
     }
@@ -82,12 +84,34 @@ export function figureItems(scenario: EvaluatedScenario, typed: string, start: n
   return items;
 }
 
+/** The figures of a definition, leading first; those its kind may have, where nobody has looked at its own yet. */
+function figuresOffered(definition: EvaluatedDefinition): readonly { readonly id: string; readonly detail: string }[] {
+  const figures = figuresAtHand(definition);
+  if (!figures) return leadingRows(definition.kind).map(({ id }) => ({ id, detail: definition.kind }));
+  return leadingFigures(definition).map((figure) => ({ id: figure.id, detail: detailOfFigure(figure, definition) }));
+}
+
+function detailOfFigure(figure: Figure, { kind }: EvaluatedDefinition): string {
+  return isAtHand(figure) ? figureText(figure) : kind;
+}
+
+function leadingRows(kind: string): readonly FigureRow[] {
+  const known = rowsOfKind.get(kind);
+  if (known) return known;
+  const ordered = inLeadingOrder(kindOf(kind)?.evaluated?.figures ?? []);
+  rowsOfKind.set(kind, ordered);
+  return ordered;
+}
+
+const rowsOfKind = new Map<string, readonly FigureRow[]>();
+
 /**
  * The words of every figure a definition or substance may have, to be followed by `of` and a name; those that something in
- * the scenario has come first.
+ * the scenario may have come first.
  */
 export function figureWordItems(scenario: EvaluatedScenario, start: number): CompletionItem[] {
-  const had = new Set(definitionsOf(scenario).flatMap(({ figures }) => figures.map(({ id }) => id)));
+  const kindsHere = new Set(definitionsOf(scenario).map(({ kind }) => kind));
+  const had = new Set([...kindsHere].flatMap((kind) => leadingRows(kind).map(({ id }) => id)));
   return figureRows().map(({ id, label }, index) => ({
     label: wordsOf(id),
     role: 'figure',
@@ -135,7 +159,7 @@ export function shareItems(scenario: EvaluatedScenario, typed: string, start: nu
  */
 export function rowItems(scenario: EvaluatedScenario, words: string, start: number): CompletionItem[] {
   return definitionsOf(scenario).flatMap((definition) => {
-    const labels = definition.tables
+    const labels = tablesAtHand(definition)
       .filter(({ columns }) => columns.some(({ id, unit }) => unit !== null && wordsOf(id) === words))
       .flatMap(({ columns, rows }) => {
         const state = columns.findIndex(({ id }) => id === 'temperature');
@@ -162,10 +186,12 @@ function writtenTemperature(temperatureK: number): string {
   return `${formatNumber(inUnit(temperature, 'degC'), 'plain', 8)} degC`;
 }
 
-/** What the figure of these words comes to for a definition, in words; null where it has none. */
+/**
+ * What the figure of these words comes to for a definition, in words, or the kind where that is not worked out; null where
+ * it has none.
+ */
 export function figureDetail(definition: EvaluatedDefinition, words: string): string | null {
-  const figure = definition.figures.find(({ id }) => wordsOf(id) === words);
-  return figure ? figureText(figure) : null;
+  return figuresOffered(definition).find(({ id }) => wordsOf(id) === words)?.detail ?? null;
 }
 
 /** The share by mass of a substance in a definition, in words; null when it is no portion of it. */
@@ -188,8 +214,8 @@ function portionsOf({ kind, lines }: EvaluatedDefinition): { name: string; mass:
 }
 
 function leadingDetail(definition: EvaluatedDefinition): string {
-  const [first] = leadingFigures(definition);
-  return first ? `${definition.kind}, ${figureText(first)}` : definition.kind;
+  const [first] = figuresAtHand(definition) ? leadingFigures(definition) : [];
+  return first && isAtHand(first) ? `${definition.kind}, ${figureText(first)}` : definition.kind;
 }
 
 /** Those that have a name, each name once. */

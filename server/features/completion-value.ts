@@ -4,6 +4,7 @@
 // asks for, where it asks for something.
 import { Comma, Compare, WordToken, type Token } from '../../grammar/tokens.ts';
 import { BASIS_WORDS, CONNECTIVE_WORDS } from '../../grammar/words.ts';
+import { figuresAtHand } from '../scenario/at-hand.ts';
 import { functions } from '../scenario/functions.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { Behind } from './completion-behind.ts';
@@ -91,7 +92,7 @@ export function valueOffers(
         ...rowItems(scenario, behind.words, start),
         ...definitionItems(
           scenario,
-          (definition) => definition.figures.length === 0 && !isMaterial(definition),
+          (definition) => figuresAtHand(definition)?.length === 0 && !isMaterial(definition),
           own,
           start,
         ).map((item) => ({ ...item, rank: item.rank + 50 })),

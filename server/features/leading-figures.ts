@@ -6,7 +6,7 @@ import type { EvaluatedDefinition, Figure } from '../scenario/scenario.ts';
 export function leadingFigures({ figures }: EvaluatedDefinition): readonly Figure[] {
   const known = leading.get(figures);
   if (known) return known;
-  const ordered = inOrder(figures);
+  const ordered = inLeadingOrder(figures);
   leading.set(figures, ordered);
   return ordered;
 }
@@ -14,7 +14,7 @@ export function leadingFigures({ figures }: EvaluatedDefinition): readonly Figur
 /** Of the definitions that a key leaves as they are, found once: a completion asks for those of all. */
 const leading = new WeakMap<readonly Figure[], readonly Figure[]>();
 
-function inOrder(figures: readonly Figure[]): readonly Figure[] {
+export function inLeadingOrder<Row extends { readonly id: string }>(figures: readonly Row[]): readonly Row[] {
   return figures
     .map((figure, index) => ({ figure, rank: leadingRank(figure.id) + index / 1000 }))
     .sort((left, right) => left.rank - right.rank)

@@ -44,14 +44,18 @@ export function burnTables(burn: Burn, flame: Equilibrium): readonly Table[] {
 const temperature: Column = { id: 'temperature', label: 'Temperature', unit: 'K' };
 
 function productsTable(flame: Equilibrium): Table {
-  return lazyTable(
-    {
-      id: 'products',
-      label: 'Products in the flame, per kg of fuel',
-      columns: [substanceColumn, ...productColumns, remarkColumn],
-    },
-    () => productCells(flame, isShown),
-    () => productCells(flame, (row) => !isShown(row)),
+  return flameTable(flame, {
+    id: 'products',
+    label: 'Products in the flame, per kg of fuel',
+    columns: [substanceColumn, ...productColumns, remarkColumn],
+  });
+}
+
+/** The state is there, so its rows are at hand for those who have nothing worked out. */
+function flameTable(state: Equilibrium, table: Pick<Table, 'id' | 'label' | 'columns'>): Table {
+  return lazily<Table & { readonly traces: readonly Row[] }>(
+    { ...table, rows: productCells(state, isShown), traces: [] },
+    { traces: () => productCells(state, (row) => !isShown(row)) },
   );
 }
 
@@ -61,11 +65,11 @@ function zoneTable(zone: Equilibrium): Table {
     ...productColumns.map((column) => ({ ...column, id: `flame-zone-${column.id}` })),
     remarkColumn,
   ];
-  return lazyTable(
-    { id: 'flame-zone-products', label: 'Products in the flame zone, per kg of fuel', columns },
-    () => productCells(zone, isShown),
-    () => productCells(zone, (row) => !isShown(row)),
-  );
+  return flameTable(zone, {
+    id: 'flame-zone-products',
+    label: 'Products in the flame zone, per kg of fuel',
+    columns,
+  });
 }
 
 function cooledProductsTable(burn: Burn): Table {

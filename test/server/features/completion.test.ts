@@ -1,10 +1,13 @@
 // What is offered where: short scenarios with the cursor, the first offers or some of them, and what must not be there.
 import { describe, expect, it } from 'vitest';
+import { completion } from '../../../server/features/completion.ts';
 import { completionDocumentation } from '../../../server/features/completion-documentation.ts';
+import { isWorkedOut } from '../../../server/scenario/lazily.ts';
 import { evaluateFixture } from '../../support/features.ts';
 import { checkNoOffers, checkOffers, offersAt, taken, type ExpectedOffers } from '../../support/completion.ts';
 
 const SLURRY = 'blend slurry {\n  30 % mass sodium\n  rest methanol\n}\n';
+const BURN = 'burn b {\n  fuel: sodium\n  oxidant: steam\n  oxidant per fuel: 2 kg/kg\n  cooled to: 350 degC\n}\n';
 const SHIP = 'let days = 210 per year\nlet heat = 40 MJ/kg\n';
 
 function checkAll(cases: readonly [what: string, marked: string, expected: ExpectedOffers][]): void {
@@ -173,9 +176,19 @@ describe('in an expression', () => {
     ['`of` an unknown figure', `${SLURRY}expect nonsense of $0\n`, { lacks: ['slurry', 'methanol'] }],
     ['definitions that are not worked out', 'engine b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
     [
-      'products at the temperatures they are told at, and in the flame',
-      'burn b {\n  fuel: sodium\n  oxidant: steam\n  oxidant per fuel: 2 kg/kg\n  cooled to: 350 degC\n}\nexpect mass share of $0\n',
+      'products in the flame, and none for which a state would have to be solved',
+      `${BURN}expect mass share of $0\n`,
+      { has: ['H2(g) in b'], lacks: ['H2(g) in b at 350 degC'] },
+    ],
+    [
+      'products at the temperatures they are told at, once the state is there',
+      `${BURN}expect mass share of H2(g) in b at 350 degC > 0 %\nexpect mass share of $0\n`,
       { has: ['H2(g) in b', 'H2(g) in b at 350 degC'] },
+    ],
+    [
+      'figures of a burn by its kind, until somebody has looked at them',
+      `${BURN}expect flame temperature of $0\n`,
+      { first: ['b'], has: ['b: burn'] },
     ],
     [
       'oxidants and substances, not blends',
@@ -316,4 +329,29 @@ describe('beside an offer', () => {
   ])('%s', (_, marked, label, says) => {
     expect(documentationOf(marked, label)).toContain(says);
   });
+});
+
+describe('a list of offers', () => {
+  const places = [
+    'let a = $0',
+    'let a = fla$0',
+    'expect $0',
+    'expect flame temperature of $0',
+    'expect mass share of $0',
+  ];
+  it.each([...places, 'expect sodium in $0', 'expect dew point of $0', 'burn c {\n  fuel: $0\n}'])(
+    'behind `%s` has nothing worked out',
+    (line) => {
+      const { scenario, file, start } = evaluateFixture(`${SLURRY}${BURN}${line}\n`);
+      completion(scenario, file, start);
+      const definitions = scenario.files.flatMap((one) => one.definitions).filter(({ name }) => name !== 'c');
+      expect(definitions.map((one) => [one.name, isWorkedOut(one, 'figures')])).toEqual([
+        ['slurry', false],
+        ['b', false],
+      ]);
+      const tables = definitions.flatMap((one) => one.tables);
+      const solved = tables.filter(({ id }) => id === 'cooled-products' || id === 'condensation');
+      expect(solved.map((table) => isWorkedOut(table, 'rows'))).toEqual([false, false]);
+    },
+  );
 });
