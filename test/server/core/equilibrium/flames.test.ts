@@ -3,6 +3,7 @@
 
 import { describe, expect, test } from 'vitest';
 import type { Equilibrium } from '../../../../server/core/equilibrium/equilibrium.ts';
+import burnt from '../../../reference/burnt-completely.json' with { type: 'json' };
 import turns from '../../../reference/flame-temperatures-turns.json' with { type: 'json' };
 import lean from '../../../reference/lean-flames-janaf.json' with { type: 'json' };
 import twoPhase from '../../../reference/two-phase-temperatures.json' with { type: 'json' };
@@ -64,6 +65,36 @@ describe(`${lean.source}`, () => {
     });
     expect(losses[0]).toBeGreaterThan(0);
     expect(losses).toEqual([...losses].sort((a, b) => a - b));
+  });
+});
+
+describe(`${burnt.source}`, () => {
+  // No oxygen among the products either: C, H and O are locked together, and exactly the air needed is the only amount that can
+  // burn. The older water table is 0.14 kJ/mol off the present one at 2400 K, a kelvin or two of the flame.
+  const complete = solverOver('C H O N', ['CO2(g)', 'H2O(g)', 'N2(g)']);
+  const mixtureOf = (formula: string, airRatio = 1): Readonly<Record<string, number>> => {
+    const [carbon = 0, hydrogen = 0, oxygen = 0] = elementMolOf({ elements: ['C', 'H', 'O'] }, { [formula]: 1 });
+    const needed = airRatio * (carbon + hydrogen / 4 - oxygen / 2);
+    return { [formula]: 1, O2: needed, N2: 3.76 * needed };
+  };
+
+  test.each(burnt.rows)('$fuel ($phase)', ({ formula, formationKJPerMol, flameK }) => {
+    const mixture = mixtureOf(formula);
+    const held = { held: 'enthalpy-pressure', enthalpyJ: formationKJPerMol * 1000, pressurePa: atmospherePa } as const;
+    const flame = equilibriumOf(complete, mixture, held);
+    expect(Math.abs(flame.temperatureK - flameK)).toBeLessThan(2);
+    expect(faultsOf(elementMolOf(complete.candidates, mixture), held, flame)).toEqual([]);
+    expect(flame.iterations).toBeLessThan(12);
+  });
+
+  test.each([0.999, 1.001, 1 + 1e-9])('in %d of the air needed nothing else can be formed', (airRatio) => {
+    const amounts = elementMolOf(complete.candidates, mixtureOf('C3H8', airRatio));
+    for (const held of [
+      { held: 'enthalpy-pressure', enthalpyJ: -103_850, pressurePa: atmospherePa },
+      { held: 'temperature-pressure', temperatureK: 1500, pressurePa: atmospherePa },
+    ] as const) {
+      expect(complete.solve(amounts, held)).toMatchObject({ kind: 'none', reason: 'cannot-form' });
+    }
   });
 });
 
