@@ -23,7 +23,14 @@ import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
 import { engineCompressionRatio } from './engine-compression-ratio.ts';
 import { engineFiringPressure } from './engine-firing-pressure.ts';
+import { dutyLegName } from './duty-leg-name.ts';
+import { dutySpeed } from './duty-speed.ts';
+import { dutyTestCycle } from './duty-test-cycle.ts';
+import { dutyUnused } from './duty-unused.ts';
 import { engineMeasuredFuel } from './engine-measured-fuel.ts';
+import { engineMeasuredRange } from './engine-measured-range.ts';
+import { engineNoIdle } from './engine-no-idle.ts';
+import { engineOverload } from './engine-overload.ts';
 import { engineNoCycle } from './engine-no-cycle.ts';
 import { engineRepeatedLoad } from './engine-repeated-load.ts';
 import { expectFailed } from './expect-failed.ts';
@@ -160,7 +167,14 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   ...hazardRules,
   'engine/compression-ratio': engineCompressionRatio,
   'engine/firing-pressure': engineFiringPressure,
+  'duty/leg-name': dutyLegName,
+  'duty/speed': dutySpeed,
+  'duty/test-cycle': dutyTestCycle,
+  'duty/unused': dutyUnused,
   'engine/measured-fuel': engineMeasuredFuel,
+  'engine/measured-range': engineMeasuredRange,
+  'engine/no-idle': engineNoIdle,
+  'engine/overload': engineOverload,
   'engine/no-cycle': engineNoCycle,
   'engine/repeated-load': engineRepeatedLoad,
   'expect/failed': expectFailed,

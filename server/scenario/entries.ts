@@ -65,6 +65,8 @@ export function readEntries<Table extends EntryTable>(
   table: Table,
   context: Context,
   taken: readonly ('portion' | 'equation')[] = [],
+  /** Takes an entry that the table does not know, such as a leg of a duty; false where it is none either. */
+  takes: (entry: Entry) => boolean = () => false,
 ): DefinitionRead<Table> {
   const keyOf = new Map<string, keyof Table>();
   for (const key of Object.keys(table)) keyOf.set(table[key]?.name ?? key, key);
@@ -76,6 +78,7 @@ export function readEntries<Table extends EntryTable>(
   for (const line of definition.lines) {
     if (line.kind !== 'entry') continue;
     const key = keyOf.get(line.words);
+    if (key === undefined && takes(line)) continue;
     if (key === undefined) {
       const known = [...keyOf.keys()];
       const meant = nearByTrade(line.words, known);

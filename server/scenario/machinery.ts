@@ -2,13 +2,14 @@
 // fuel. Plain data and pure functions that look up no name; made by the kinds, read by duties and services.
 // Invariant: what could not be had is null or `missing`, and has been said or says in words what it lacks.
 
+import type { PlannedLeg } from '../core/duty/plan.ts';
 import type { Band, Consumption } from '../core/engine/consumption.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Material } from './material.ts';
 import type { ReceivingWater } from './receiving-water.ts';
 import type { AssumptionId } from './working.ts';
 
-export type Machinery = EngineMachine | ReceivingWater;
+export type Machinery = EngineMachine | DutyMachine | ReceivingWater;
 
 export interface EngineMachine {
   readonly machinery: 'engine';
@@ -55,6 +56,22 @@ export interface PilotEntry {
 export interface SlipEntry {
   readonly per: 'fuel' | 'work';
   readonly quantity: Quantity;
+}
+
+/** What engines have to do. */
+export interface DutyMachine {
+  readonly machinery: 'duty';
+  readonly name: string;
+  /** Plans name engines by their index here; a null machine could not be worked out. */
+  readonly engines: readonly { readonly name: string; readonly machine: EngineMachine | null }[];
+  readonly boilers: readonly { readonly fuel: Material; readonly efficiency: Quantity }[];
+  /** In the order of the plan's legs. */
+  readonly legNames: readonly string[];
+  readonly isTestCycle: boolean;
+  /** What is uncertain about it; the plan and the ratings (W) at other values of that, in the same order. */
+  readonly uncertain: readonly Quantity[];
+  readonly planAt: (values: readonly number[]) => readonly PlannedLeg[];
+  readonly ratedPowerAt: (values: readonly number[]) => readonly number[];
 }
 
 /** The names of data without which it cannot be told; empty where the cause has been said. */

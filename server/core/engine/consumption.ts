@@ -97,6 +97,17 @@ export function consumptionOfCycle(
   };
 }
 
+/** Fuel power in W at a shaft power in W, idling where that is 0; null where it idles and that is not known. */
+export function fuelPowerAt(
+  consumption: Consumption,
+  powerW: number,
+): { readonly fuelW: Band | null; readonly range: LoadRange } {
+  if (powerW === 0) return { fuelW: consumption.idleFuelW, range: 'within' };
+  const { heatRate, range } = consumption.heatRateAt(powerW / consumption.ratedPowerW);
+  const { value, low, high } = heatRate;
+  return { fuelW: { value: value * powerW, low: low * powerW, high: high * powerW }, range };
+}
+
 /** The same engine on a fuel of which it takes `factor` times the energy for the same work. */
 export function scaledConsumption(consumption: Consumption, factor: number): Consumption {
   const scaled = ({ value, low, high }: Band): Band => ({

@@ -3,7 +3,7 @@
 
 import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
-import type { EntryTable } from '../entries.ts';
+import type { EntryTable, Reader } from '../entries.ts';
 import type { Material } from '../material.ts';
 import type { Machinery } from '../machinery.ts';
 import type { FigureRow } from '../material-figures.ts';
@@ -20,6 +20,8 @@ export interface Kind {
 
 export interface EvaluatedKind {
   readonly entries: EntryTable;
+  /** How an entry is read that the table does not know and that is a leg: a line of its own, named by the user. */
+  readonly legs?: Reader<unknown>;
   /** The lines it takes besides entries. */
   readonly lines: readonly ('portion' | 'equation')[];
   readonly figures: readonly FigureRow[];

@@ -3,6 +3,7 @@
 
 import { blend } from './blend.ts';
 import { burn } from './burn.ts';
+import { duty } from './duty.ts';
 import { engine } from './engine.ts';
 import type { Kind } from './kind.ts';
 import { oxidant } from './oxidant.ts';
@@ -17,7 +18,7 @@ export const kinds: readonly Kind[] = [
   reaction,
   burn,
   engine,
-  later('duty', 'What an engine has to do: legs by time or by distance and speed, or a named test cycle.'),
+  duty,
   later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),
   later('supply', 'How a substance is made: electricity, heat, emissions, price and by-products.'),
   sea,
@@ -56,8 +57,9 @@ export interface EntryHelp {
  * `diesel` is no ring.
  */
 export function entryWordNamesThing(kind: string, entry: string, word: string): boolean {
-  const rows = Object.values(byWord.get(kind)?.evaluated?.entries ?? {});
-  const reader = rows.find((candidate) => candidate.name === entry)?.reader;
+  const evaluated = byWord.get(kind)?.evaluated;
+  const rows = Object.values(evaluated?.entries ?? {});
+  const reader = rows.find((candidate) => candidate.name === entry)?.reader ?? evaluated?.legs;
   if (!reader || reader.elements || reader.words?.includes(word)) return false;
   return (reader.names ?? false) || reader.unit !== undefined;
 }

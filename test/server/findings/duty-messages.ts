@@ -1,0 +1,50 @@
+// Rows of messages.test.ts about duties and services: a shape of each fact and what a person reads of it, and which of them
+// are no errors.
+import type { Fact } from '../../../server/scenario/facts.ts';
+import { quantity } from '../../support/scenario-builder.ts';
+
+export const DUTY_ROWS: readonly (readonly [Fact, string])[] = [
+  [
+    { code: 'engine/overload', leg: 'pull', engine: 'main', power: quantity(7.2, 'MW'), rating: quantity(6.4, 'MW') },
+    '`pull` asks `main` for 7.2 MW, which is 112.5 % of its rating of 6.4 MW. Lower the load or the speed, or share it with another engine.',
+  ],
+  [
+    { code: 'engine/measured-range', leg: 'wait', engine: 'main', load: 0.12, fromLoad: 0.25, toLoad: 1 },
+    '`wait` runs `main` at a load of 12 %, but its consumption is known from 25 % to 100 %. It is carried on in a straight line. Add a point there, or `idle consumption`.',
+  ],
+  [
+    { code: 'engine/measured-range', leg: 'push', engine: 'main', load: 1, fromLoad: 0.85, toLoad: 0.85 },
+    '`push` runs `main` at a load of 100 %, but its consumption is known only at 85 %. It is carried on in a straight line. Add a point there.',
+  ],
+  [
+    { code: 'engine/no-idle', leg: 'mode 5', engine: 'main' },
+    '`mode 5` runs `main` without load, and what it takes then is not known. Give its `idle consumption`.',
+  ],
+  [
+    { code: 'duty/speed', leg: 'sail', speed: quantity(13.5, 'kn'), service: quantity(13, 'kn') },
+    '`sail` goes 13.5 kn, above the service speed of 13 kn. The propeller law says too little power there.',
+  ],
+  [
+    { code: 'duty/leg-name', leg: 'boilr', near: ['boiler'] },
+    '`boilr` is taken as a leg of that name. Did you mean the entry `boiler`?',
+  ],
+  [
+    { code: 'duty/unused', entry: 'service speed' },
+    'Nothing in this duty uses `service speed`. Take it out, or let a leg need it.',
+  ],
+  [
+    { code: 'duty/test-cycle', cycle: 'E3' },
+    'The test cycle E3 certifies an engine and does not describe what one does. For fuel over a year, write the legs.',
+  ],
+];
+
+export const DUTY_MILD: readonly string[] = [
+  'hint duty/leg-name',
+  'information duty/test-cycle',
+  'warning duty/speed',
+  'warning duty/unused',
+  'warning engine/measured-range',
+  'warning engine/measured-range',
+  'warning engine/no-idle',
+  'warning engine/overload',
+];
