@@ -1,8 +1,8 @@
 // Sets up what a fresh machine with Node 20 lacks: the packages of the lock file, the editor host, and Chromium where
 // it may be installed. Needs no package itself. Invariant: what is there and fits is left alone, and nothing but the
-// npm registry and the system's own package sources is asked.
+// npm registry and the system's own package sources is asked. Run by itself it sets up all of it; imported it does nothing.
 import { spawnSync } from 'node:child_process';
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, realpathSync } from 'node:fs';
 import path from 'node:path';
 
 const root = path.resolve(import.meta.dirname, '..');
@@ -48,4 +48,10 @@ function run(command, args, env = process.env) {
   const result = spawnSync(command, args, { cwd: root, env, stdio: ['ignore', 'inherit', 'inherit'] });
   if (result.error) throw result.error;
   if (result.status !== 0) throw new Error(`${command} ${args.join(' ')} ended with ${result.status ?? result.signal}`);
+}
+
+if (process.argv[1] !== undefined && realpathSync(process.argv[1]) === import.meta.filename) {
+  setUpPackages();
+  setUpEditor();
+  console.log('set-up: all is there');
 }

@@ -201,39 +201,3 @@ describe('limits', () => {
     expect(parse('let a = 3', isTestUnit, { largestText: 5 }).fileProblems).toHaveLength(1);
   });
 });
-
-describe('time grows with the text', () => {
-  /** Milliseconds of work, not of waiting for a busy machine; the least of three, since garbage only ever adds to it. */
-  const fastest = (text: string): number => {
-    const runs = [1, 2, 3].map(() => {
-      const before = process.cpuUsage();
-      parse(text, isTestUnit);
-      const { user, system } = process.cpuUsage(before);
-      return (user + system) / 1000;
-    });
-    return Math.min(...runs);
-  };
-  test.each([
-    ['unclosed headers', (count: number) => numbered(count, (n) => `blend a${n} {\n`)],
-    ['stray braces', (count: number) => '}'.repeat(count)],
-    ['open brackets', (count: number) => `let a = ${'( '.repeat(count)}`],
-    ['bracketed letters', (count: number) => `let a = ${'(H'.repeat(count)}`],
-    ['a long formula', (count: number) => `let a = ${'H2'.repeat(count)}+x`],
-    ['a long run of units', (count: number) => `let a = 3 ${'kg '.repeat(count)}`],
-    ['words that lead to no reference', (count: number) => `blend a {\n x: ${'word '.repeat(count)}\n}`],
-    ['an entry over many lines', (count: number) => `blend a {\n x: ${'word,\n'.repeat(count)} y\n}`],
-    ['blank lines', (count: number) => `blend a {\n x: y,${'\n'.repeat(count)}}`],
-    ['plus signs', (count: number) => `let a = H${'+'.repeat(count)}x`],
-  ])('%s', { retry: 4 }, (_name, make) => {
-    // A busy machine can slow one of the two; quadratic time fails every time.
-    // Four times the text takes about four times as long; quadratic time would take sixteen times.
-    const short = make(4000);
-    const long = make(16_000);
-    fastest(short);
-    expect(fastest(long)).toBeLessThan(10 * fastest(short) + 20);
-  });
-});
-
-function numbered(count: number, make: (number: number) => string): string {
-  return Array.from({ length: count }, (_, number) => make(number)).join('');
-}
