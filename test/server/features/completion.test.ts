@@ -54,7 +54,7 @@ describe('at the start of a line in a definition', () => {
     ['before a definition that follows', `blend f {\n  $0\n\n${SLURRY}`, { has: ['stored'] }],
     ['a reaction takes species too', 'reaction r {\n  Na$0\n}\n', { has: ['Na(cr)', 'Na2CO3(cr)'] }],
     ['no portions in a reaction', 'reaction r {\n  $0\n}\n', { has: ['state'], lacks: ['rest'] }],
-    ['a kind that is not worked out', 'sea e {\n  $0\n}\n', { first: ['acknowledge'] }],
+    ['a kind that is not worked out', 'fleet e {\n  $0\n}\n', { first: ['acknowledge'] }],
     ['an entry that is broken further on', 'blend f {\n  stored: (\n  $0\n}\n', { lacks: ['stored'] }],
     ['what holds otherwise', 'blend f {\n  st$0\n}\n', { has: ['stored: otherwise 25 °C, 1 bar'] }],
   ]);
@@ -281,7 +281,7 @@ describe('an offer that is taken', () => {
   it.each([
     ['blend', 'blend ${1:name} {\n  ${2:30} % mass ${3:substance}\n  rest ${4:substance}\n}'],
     ['reaction', 'reaction ${1:name} {\n  ${2:2 H2(g) + O2(g)} -> ${3:2 H2O(l)}\n}'],
-    ['sea', 'sea ${1:name} {\n  $0\n}'],
+    ['fleet', 'fleet ${1:name} {\n  $0\n}'],
     ['engine', 'engine ${1:name} {\n  fuel: ${2:}\n}'],
     ['let', 'let ${1:name} = ${0:value}'],
   ])('%s writes a skeleton', (label, snippet) => {
