@@ -27,11 +27,14 @@ import { dutyLegName } from './duty-leg-name.ts';
 import { dutySpeed } from './duty-speed.ts';
 import { dutyTestCycle } from './duty-test-cycle.ts';
 import { dutyUnused } from './duty-unused.ts';
+import { engineKnock } from './engine-knock.ts';
 import { engineMeasuredFuel } from './engine-measured-fuel.ts';
 import { engineMeasuredRange } from './engine-measured-range.ts';
 import { engineNoIdle } from './engine-no-idle.ts';
 import { engineOverload } from './engine-overload.ts';
+import { engineMisfire } from './engine-misfire.ts';
 import { engineNoCycle } from './engine-no-cycle.ts';
+import { engineNoStandardFuel } from './engine-no-standard-fuel.ts';
 import { engineRepeatedLoad } from './engine-repeated-load.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
@@ -176,6 +179,9 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'engine/no-idle': engineNoIdle,
   'engine/overload': engineOverload,
   'engine/no-cycle': engineNoCycle,
+  'engine/knock': engineKnock,
+  'engine/misfire': engineMisfire,
+  'engine/no-standard-fuel': engineNoStandardFuel,
   'engine/repeated-load': engineRepeatedLoad,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,

@@ -21,4 +21,38 @@ export type CycleFact =
       readonly state: 'intake' | 'compression' | 'combustion' | 'expansion' | 'blow-down' | 'exhaust' | 'residual';
       readonly side: 'below' | 'above' | null;
       readonly limit: Quantity | null;
+    }
+  /** The end gas lights before the flame reaches it, by the integral over its ignition delay. */
+  | {
+      readonly code: 'engine/knock';
+      readonly integral: number;
+      readonly endGas: Quantity;
+      readonly octaneNumber: Quantity;
+    }
+  /** The charge does not light in time, or at all. */
+  | {
+      readonly code: 'engine/misfire';
+      readonly why: 'delay';
+      readonly delay: Quantity;
+      readonly degrees: number;
+      readonly temperature: Quantity;
+    }
+  | {
+      readonly code: 'engine/misfire';
+      readonly why: 'autoignition';
+      readonly temperature: Quantity;
+      readonly autoignition: Quantity;
+    }
+  | {
+      readonly code: 'engine/misfire';
+      readonly why: 'lean';
+      readonly share: Quantity;
+      readonly limit: Quantity;
+      readonly temperature: Quantity;
+    }
+  /** No fuel of the standard for marine fuels at all, by its elements. */
+  | {
+      readonly code: 'engine/no-standard-fuel';
+      readonly fuel: string;
+      readonly why: readonly ('metal' | 'oxygenate' | 'nitrogen')[];
     };

@@ -3,11 +3,13 @@
 
 import type { Span } from '../../../grammar/tree.ts';
 import type { BurnFault } from '../../core/burn/burn.ts';
+import { knockOf, lowerLimitAt, sprayDelayS } from '../../core/engine/ignition.ts';
 import type { CycleFault } from '../../core/engine/reciprocating.ts';
 import type { SolvedEngine } from '../../core/engine/solved-engine.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import type { Context } from '../context.ts';
+import { autoignitionOf, lowerLimitOf, outsideStandard } from '../fuel-ignition.ts';
 import type { EngineRead } from './engine-entries.ts';
 import type { WrittenCycle } from './engine-cycle-question.ts';
 
@@ -72,7 +74,7 @@ function reportNoState(
   places: CyclePlaces,
   context: Context,
 ): void {
-  const isBug = why.reason === 'not-converged' || why.reason === 'not-finite' || why.reason === 'stopped';
+  const isBug = why.reason === 'not-converged' || why.reason === 'not-finite';
   if (isBug) {
     context.report(places.header, { code: 'program/failed', message: `No cycle: ${JSON.stringify({ state, why })}` });
     return;
@@ -90,11 +92,86 @@ function reportNoState(
 /** Says what is doubtful about a cycle that could be solved. */
 export function reportCycle(
   engine: SolvedEngine,
-  { maximumFiringPressure: maximum }: WrittenCycle,
+  written: WrittenCycle,
+  read: EngineRead,
   places: CyclePlaces,
   context: Context,
 ): void {
-  reportPressure(engine, maximum, places.limit, context);
+  reportPressure(engine, written.maximumFiringPressure, places.limit, context);
+  reportStandardFuel(written, places.fuel, context);
+  const speedPerS = read.speed?.value.quantity.value ?? null;
+  if (written.fuel.vapour) {
+    if (!written.pilot) reportLean(engine, written, places.lambda, context);
+    if (read.octaneNumber && speedPerS !== null) {
+      reportKnock(engine, read.octaneNumber.value.quantity, speedPerS, read.octaneNumber.entry.span, context);
+    }
+  } else if (!written.pilot) reportSpray(engine, written, speedPerS, places.header, context);
+}
+
+/** A gas has standards of its own; this one is for what is stored as a liquid, with solids in it or not. */
+function reportStandardFuel({ fuel }: WrittenCycle, place: Span, context: Context): void {
+  if (fuel.material.phase === 'g') return;
+  const why = outsideStandard(fuel.material);
+  if (why.length > 0) context.report(place, { code: 'engine/no-standard-fuel', fuel: fuel.material.name, why });
+}
+
+function reportKnock(
+  { cautious }: SolvedEngine,
+  octaneNumber: Quantity,
+  speedPerS: number,
+  place: Span,
+  context: Context,
+): void {
+  const knock = knockOf(cautious.cycle, octaneNumber.value, speedPerS);
+  if (!knock || knock.integral < 1) return;
+  context.report(place, {
+    code: 'engine/knock',
+    integral: knock.integral,
+    endGas: kelvin(knock.endGasK),
+    octaneNumber,
+  });
+}
+
+function reportLean({ cautious, charge }: SolvedEngine, { fuel }: WrittenCycle, place: Span, context: Context): void {
+  const limit = lowerLimitOf(fuel.material);
+  if (limit === null) return;
+  const { temperatureK } = cautious.cycle.compressed;
+  const hotLimit = lowerLimitAt(limit, temperatureK);
+  const share = 1 - charge.input.freshGas.gasMol / charge.fresh.gas.gasMol;
+  if (share >= hotLimit) return;
+  context.report(place, {
+    code: 'engine/misfire',
+    why: 'lean',
+    share: quantityOf(share),
+    limit: quantityOf(hotLimit),
+    temperature: kelvin(temperatureK),
+  });
+}
+
+/** A spray that lights later than this turn of the crankshaft lights in the expansion, if at all. */
+const latestDegrees = 20;
+
+function reportSpray(
+  { cautious }: SolvedEngine,
+  { fuel }: WrittenCycle,
+  speedPerS: number | null,
+  place: Span,
+  context: Context,
+): void {
+  const { temperatureK, pressurePa } = cautious.cycle.compressed;
+  const temperature = kelvin(temperatureK);
+  const autoignitionK = autoignitionOf(fuel.material);
+  if (autoignitionK !== null && temperatureK < autoignitionK) {
+    const autoignition = kelvin(autoignitionK);
+    context.report(place, { code: 'engine/misfire', why: 'autoignition', temperature, autoignition });
+    return;
+  }
+  if (speedPerS === null || outsideStandard(fuel.material).some((why) => why !== 'metal')) return;
+  const delayS = sprayDelayS(pressurePa, temperatureK);
+  const degrees = 360 * delayS * speedPerS;
+  if (degrees <= latestDegrees) return;
+  const delay = quantityOf(delayS, knownUnit('s').dimension);
+  context.report(place, { code: 'engine/misfire', why: 'delay', delay, degrees, temperature });
 }
 
 /** Rounding of a pressure that is held at its limit. */

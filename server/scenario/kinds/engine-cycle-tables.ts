@@ -9,7 +9,7 @@ import { lossTree, type LossId } from '../../core/engine/loss-tree.ts';
 import type { SolvedEngine } from '../../core/engine/solved-engine.ts';
 import { lazily } from '../lazily.ts';
 import type { Column, Table } from '../scenario.ts';
-import { isSlow, leastMassShare } from './burn-products.ts';
+import { isSlow } from './burn-products.ts';
 
 type Row = Table['rows'][number];
 
@@ -155,7 +155,7 @@ function exhaustTable(engine: SolvedEngine): Table {
         return [id, mol, massKg, massShare, wetMoleShare, dryMoleShare, shareAt15, remark];
       });
   };
-  const isShown = (massShare: number, isGas: boolean): boolean => massShare >= leastMassShare || !isGas;
+  const isShown = (massShare: number, isGas: boolean): boolean => massShare >= leastExhaustShare || !isGas;
   const table: Table & { readonly traces: readonly Row[] } = {
     id: 'exhaust',
     label: 'Exhaust behind the valve, per kg of fuel',
@@ -169,6 +169,9 @@ function exhaustTable(engine: SolvedEngine): Table {
   });
 }
 
+/** Below this share by mass a gas stands among the traces. */
+const leastExhaustShare = 1e-5;
+
 const kinetic = new Set(['NO(g)', 'NO2(g)', 'N2O(g)', 'CO(g)', 'H2(g)', 'OH(g)', 'SO3(g)', 'NH3(g)']);
 
 function diagramTable(engine: SolvedEngine): Table {
@@ -180,7 +183,7 @@ function diagramTable(engine: SolvedEngine): Table {
     { id: 'condensed-share', label: 'Condensed, by mass', unit: '1' },
   ];
   return lazyTable({ id: 'diagram', label: 'Pressure over volume', columns }, () => {
-    const path = cyclePath(engine.charge, engine.cautious);
+    const path = cyclePath(engine.charge, engine.cautious, shownExpansion, shownCompression);
     const smallestM3 = engine.cautious.cycle.compressed.volumeM3;
     const row = (
       stroke: string,
@@ -193,6 +196,10 @@ function diagramTable(engine: SolvedEngine): Table {
     ];
   });
 }
+
+/** Points of the diagram that are told; in equal ratios of volume they are smooth enough to draw. */
+const shownExpansion = 21;
+const shownCompression = 11;
 
 function lazyTable(table: Pick<Table, 'id' | 'label' | 'columns'>, rows: () => readonly Row[]): Table {
   return lazily<Table>({ ...table, rows: [] }, { rows });

@@ -55,7 +55,7 @@ export function evaluateCycle(asked: EngineAsked): KindAnswer {
     reportNoCycle(solved, written, places, context);
     return nothing;
   }
-  reportCycle(solved.engine, written, places, context);
+  reportCycle(solved.engine, written, read, places, context);
   const machine = machineOf(context.owner, read, read.fuel.value, solved);
   const speed = read.speed?.value.quantity.value ?? null;
   const entryPlaces = placesOfEntries(read, context);

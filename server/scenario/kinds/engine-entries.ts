@@ -84,6 +84,11 @@ export const engineEntries = {
       source: 'common practice of turbocharged compression-ignition engines',
     },
   },
+  octaneNumber: {
+    name: 'octane number',
+    reader: ratio('120'),
+    help: 'Motor octane number of a premixed fuel. With the speed it gives an indicator of knock.',
+  },
   pilot: {
     name: 'pilot',
     reader: pilotReader,

@@ -44,6 +44,61 @@ export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
     { code: 'engine/no-cycle', why: 'no-state', state: 'combustion', side: null, limit: null },
     'There is no state for combustion with these entries.',
   ],
+  [
+    {
+      code: 'engine/knock',
+      integral: 1.62,
+      endGas: quantity(950, 'K', 0, 'temperature'),
+      octaneNumber: quantity(85, '1'),
+    },
+    'Knock is likely: at 676.9 °C and an octane number of 85 the end gas has 1.62 times the time it takes to light by itself (Livengood and Wu, delays of Douaud and Eyzat). Lower the compression ratio, the boost or its temperature, or burn leaner.',
+  ],
+  [
+    {
+      code: 'engine/misfire',
+      why: 'autoignition',
+      temperature: quantity(850, 'K', 0, 'temperature'),
+      autoignition: quantity(924, 'K', 0, 'temperature'),
+    },
+    'Compression ends at 576.9 °C, below the autoignition temperature of the fuel (650.9 °C): without a pilot it does not light. Raise the compression ratio or the boost temperature, or write a `pilot`.',
+  ],
+  [
+    {
+      code: 'engine/misfire',
+      why: 'delay',
+      delay: quantity(6.7, 'ms'),
+      degrees: 60.3,
+      temperature: quantity(720, 'K', 0, 'temperature'),
+    },
+    'At 446.9 °C the spray takes 6.7 ms to light (Wolfer), 60.3 degrees of the crankshaft at its speed: it is likely to misfire. Raise the compression ratio or the boost temperature.',
+  ],
+  [
+    {
+      code: 'engine/misfire',
+      why: 'lean',
+      share: quantity(0.02, '1'),
+      limit: quantity(0.03, '1'),
+      temperature: quantity(700, 'K', 0, 'temperature'),
+    },
+    'The charge holds 2 % of fuel by volume, below the lower flammable limit of 3 % at 426.9 °C (Zabetakis): it is likely to misfire. Lower λ or write a `pilot`.',
+  ],
+  [
+    { code: 'engine/no-standard-fuel', fuel: 'slurry', why: ['metal', 'oxygenate'] },
+    "`slurry` holds metal beyond any ash limit and holds more oxygen than fatty acid methyl esters do: it is no fuel of ISO 8217:2024 at all, rather than one above its limits. Ask the engine's maker.",
+  ],
+  [
+    { code: 'engine/no-standard-fuel', fuel: 'hydrazine', why: ['nitrogen'] },
+    "`hydrazine` holds nitrogen as no hydrocarbon does: it is no fuel of ISO 8217:2024 at all, rather than one above its limits. Ask the engine's maker.",
+  ],
 ];
 
-export const CYCLE_MILD: readonly string[] = ['warning engine/firing-pressure', 'warning engine/firing-pressure'];
+export const CYCLE_MILD: readonly string[] = [
+  'information engine/no-standard-fuel',
+  'information engine/no-standard-fuel',
+  'warning engine/firing-pressure',
+  'warning engine/firing-pressure',
+  'warning engine/knock',
+  'warning engine/misfire',
+  'warning engine/misfire',
+  'warning engine/misfire',
+];
