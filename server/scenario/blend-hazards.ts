@@ -62,28 +62,47 @@ export function reportHazards(
   return screening;
 }
 
+/** A fuel and the entry that names it. */
+export interface NamedFuel {
+  readonly value: Material;
+  readonly entry: Entry;
+}
+
 /**
- * The hazards of a fuel that is named without a blend, at the place that names it: what it earns by itself, for nothing is
- * said of how it is kept. Those of a blend are told where it is defined.
+ * The hazards of fuels that are named without a blend, at the places that name them: what they earn by themselves, for
+ * nothing is said of how they are kept. Those of a blend are told where it is defined. The first fuel is the one that the
+ * definition cannot do without.
  */
 export function reportFuelHazards(
   definition: Definition,
-  fuel: Material,
-  entry: Entry,
+  fuels: readonly (NamedFuel | undefined)[],
   context: Context,
 ): Screening | undefined {
-  if (fuel.portions) {
-    reportIdle(definition, [], context);
-    return undefined;
-  }
-  const whole = { name: fuel.name, material: fuel, mass: quantityOf(1), mole: null, volume: null };
-  const stored = storedBlend([whole], unsaidKeeping);
-  const hazards = hazardsOf(stored.store, []).filter(({ code }) => hazardCodes[code].cause === 'alone');
-  const place = entry.phrases[0]?.span ?? entry.span;
-  tell(hazards, definition, stored.store, context, () => ({ place, other: null, mends: [] }));
-  const screening = screeningOf(stored, hazards, aloneRules.length);
-  if (screening.unrecorded.length === 0) reportIdle(definition, screening.found, context);
-  return screening;
+  // Of a fuel that could not be read nothing is known, nor whether an acknowledgement is idle.
+  if (!fuels[0]) return undefined;
+  const screenings = fuels.flatMap((fuel) => {
+    if (!fuel || fuel.value.portions) return [];
+    const { value, entry } = fuel;
+    const whole = { name: value.name, material: value, mass: quantityOf(1), mole: null, volume: null };
+    const stored = storedBlend([whole], unsaidKeeping);
+    const hazards = hazardsOf(stored.store, []).filter(({ code }) => hazardCodes[code].cause === 'alone');
+    const place = entry.phrases[0]?.span ?? entry.span;
+    tell(hazards, definition, stored.store, context, () => ({ place, other: null, mends: [] }));
+    return [screeningOf(stored, hazards, aloneRules.length)];
+  });
+  const [first, ...others] = screenings;
+  const all = first && others.reduce(joined, first);
+  if (!all || all.unrecorded.length === 0) reportIdle(definition, all?.found ?? [], context);
+  return all;
+}
+
+function joined(left: Screening, right: Screening): Screening {
+  return {
+    rulesLookedAt: left.rulesLookedAt,
+    found: [...new Set([...left.found, ...right.found])],
+    unrecorded: [...new Set([...left.unrecorded, ...right.unrecorded])],
+    substances: [...left.substances, ...right.substances],
+  };
 }
 
 const unsaidKeeping: Keeping = {

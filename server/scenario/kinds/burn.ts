@@ -50,7 +50,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const header = definition.name?.span ?? definition.header;
   const amount = amountOf(read, broken, header, context);
   reportContradictions(read, context);
-  const screening = read.fuel && reportFuelHazards(definition, read.fuel.value, read.fuel.entry, context);
+  const screening = reportFuelHazards(definition, [read.fuel], context);
   // A line that could not be read may be the very one the flame rests on: its own finding says enough.
   const isBroken = broken.size > 0 || definition.lines.some((line) => line.kind === 'broken-line');
   if (!read.fuel || !read.oxidant || !amount || isBroken) return unknownAnswer(evaluated);

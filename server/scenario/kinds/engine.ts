@@ -3,9 +3,11 @@
 // other; none is asked for. Invariant: exactly one way answers a definition.
 
 import type { Definition } from '../../../grammar/tree.ts';
+import { reportFuelHazards } from '../blend-hazards.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
 import { consumptionFigures } from '../engine-consumption.ts';
+import { lazily } from '../lazily.ts';
 import { evaluateCycle } from './engine-cycle.ts';
 import { pistonFigures } from './engine-cycle-figures.ts';
 import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
@@ -38,6 +40,13 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const { entries: read, broken } = readEntries(definition, engineEntries, context);
   refuseLines(definition, [], context);
   const asked: EngineAsked = { read, broken, definition, context };
+  const pilot = read.pilot && { value: read.pilot.value.fuel, entry: read.pilot.entry };
+  const screening = reportFuelHazards(definition, [read.fuel, pilot], context);
+  return lazily(answerOf(asked), { screening: () => screening });
+}
+
+function answerOf(asked: EngineAsked): KindAnswer {
+  const { read, broken, definition, context } = asked;
   const measured = read.specificFuelConsumption ?? read.efficiency;
   const isMeasured = measured !== undefined || broken.has('specificFuelConsumption') || broken.has('efficiency');
   if (read.cycle && measured) {

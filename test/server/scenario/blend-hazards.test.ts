@@ -194,6 +194,19 @@ describe('a fuel named without a blend', () => {
     expect(findingsOf(evaluateText(idle)).map(({ code }) => code)).toContain('name/acknowledged');
   });
 
+  test('an engine and its pilot fuel, each at its entry', () => {
+    const text =
+      'engine main {\n  cycle: diesel\n  compression ratio: 16\n  fuel: ammonia\n  oxidant: air\n  lambda: 2\n  pilot: 5 % energy methanol\n  mechanical efficiency: 92 %\n  boost pressure: 2 bar\n}\n';
+    const places = hazardsIn(text).map(({ code, place }) => [code, text.slice(place.start, place.end)]);
+    expect(places).toContainEqual(['hazard/toxic', 'ammonia']);
+    expect(places).toContainEqual(['hazard/toxic', '5 % energy methanol']);
+  });
+
+  test('one that cannot be read leaves an acknowledgement alone', () => {
+    const text = flame.replace('FUEL', 'sodum').replace('  lambda', '  acknowledge hazard/toxic: "note 7"\n  lambda');
+    expect(findingsOf(evaluateText(text)).map(({ code }) => code)).not.toContain('name/acknowledged');
+  });
+
   test('one of the scenario by what it says of itself', () => {
     const substance =
       'substance drum {\n  phase: solid\n  composition: 99.7 % Na, 0.3 % Ca\n  lower heating value: 9 MJ/kg\n  hazards: H260, alkali-metal\n}\n';
