@@ -13,13 +13,7 @@ import {
   solverOf,
   solverOver,
 } from '../../../support/equilibrium.ts';
-
-const runs = { seed: 20_261_201, numRuns: 60 };
-
-const temperatureK = fc.double({ min: 300, max: 5000, noNaN: true });
-const logPressureBar = fc.double({ min: -4, max: 3, noNaN: true });
-/** Amounts over six powers of ten. */
-const share = fc.double({ min: -6, max: 0, noNaN: true }).map((power) => 10 ** power);
+import { logPressureBar, near, runs, share, temperatureK } from '../../../support/random-equilibria.ts';
 
 function constantOf(terms: Readonly<Record<string, number>>, temperature: number): number {
   let change = 0;
@@ -28,10 +22,6 @@ function constantOf(terms: Readonly<Record<string, number>>, temperature: number
   }
   return Math.exp(-change / (gasConstantJPerMolK * temperature));
 }
-
-/** Relative, or absolute next to 0. */
-const near = (found: number, expected: number): number =>
-  Math.abs(found - expected) / Math.max(Math.abs(expected), 1e-300);
 
 describe('a single reaction has the composition of its closed form', () => {
   test('N2 = 2 N: the degree is the root of K / (K + 4 p)', () => {

@@ -20,17 +20,7 @@ import {
   solverOf,
   solverOver,
 } from '../../../support/equilibrium.ts';
-
-const runs = { seed: 20_261_201, numRuns: 60 };
-
-const temperatureK = fc.double({ min: 300, max: 5000, noNaN: true });
-const logPressureBar = fc.double({ min: -4, max: 3, noNaN: true });
-/** Amounts over six powers of ten. */
-const share = fc.double({ min: -6, max: 0, noNaN: true }).map((power) => 10 ** power);
-
-/** Relative, or absolute next to 0. */
-const near = (found: number, expected: number): number =>
-  Math.abs(found - expected) / Math.max(Math.abs(expected), 1e-300);
+import { logPressureBar, near, runs, share, temperatureK } from '../../../support/random-equilibria.ts';
 
 const fuelElements = ['C', 'H', 'O', 'N', 'S', 'Na', 'Cl'];
 const fuelMixture = fc.tuple(...fuelElements.map(() => share)).map((parts) => Float64Array.from(parts));

@@ -159,6 +159,34 @@ describe('the flame', () => {
   });
 });
 
+test.each(['hydrogen', 'methane', 'propane', 'methanol', 'benzene', 'gas_oil', 'mixed_alcohols'])(
+  'exactly the air needed by %s, and nothing but its fully burnt products',
+  (fuel) => {
+    // Written out, every amount is a rounded number; the products take the elements in one proportion only.
+    const text = `
+      blend mixed_alcohols {
+        37.3 % mass methanol
+        12.1 % mass benzene
+        rest ethanol
+      }
+      burn flame {
+        fuel: ${fuel}
+        oxidant: air
+        lambda: 1
+        allowed products: N2, Ar, CO2, H2O(g), SO2
+        cooled to: 900 degC, 200 degC
+      }
+    `;
+    const scenario = checkFacts(text);
+    const kelvin = figureOf(scenario, 'flame', 'flame-temperature') ?? NaN;
+    expect(kelvin).toBeGreaterThan(2200);
+    expect(kelvin).toBeLessThan(2600);
+    const names = tableOf(scenario, 'products').rows.map(([name]) => name);
+    expect(names).not.toContain('O2(g)');
+    expect(names).toContain('H2O(g)');
+  },
+);
+
 describe('as it cools', () => {
   const SODIUM = `
     blend dispersion {
