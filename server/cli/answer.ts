@@ -3,6 +3,7 @@
 // said once and the other files are still answered. Knows no command line syntax.
 // Invariant: the exit code follows from what was printed, by the table in exit-codes.ts.
 
+import { leadingFigures } from '../features/leading-figures.ts';
 import { findingsOf } from '../findings/registry.ts';
 import { csvReport } from '../report/csv.ts';
 import { gatherFiles, hasFailed, type Answer, type ReportedFile } from '../report/gather.ts';
@@ -21,7 +22,12 @@ export interface AnswerOptions {
   readonly format: Format;
   readonly strict: boolean;
   readonly colour: boolean;
+  /** In text, of each definition the figures a person looks for first. */
+  readonly brief: boolean;
 }
+
+/** Figures of a definition in a brief answer. */
+const MOST_BRIEF = 6;
 
 /** Works out the named files, prints them, and says how to exit. */
 export function answerFiles(names: readonly string[], extent: Extent, options: AnswerOptions, io: Io): ExitCode {
@@ -53,13 +59,23 @@ export function answerFiles(names: readonly string[], extent: Extent, options: A
   return hasFailed(files, options.strict) ? ExitCode.Findings : ExitCode.Good;
 }
 
-function printed(files: readonly ReportedFile[], extent: Extent, { format, colour }: AnswerOptions, io: Io): string {
+function printed(
+  files: readonly ReportedFile[],
+  extent: Extent,
+  { format, colour, brief }: AnswerOptions,
+  io: Io,
+): string {
   switch (format) {
     case 'json':
       return jsonReport(files, extent);
     case 'csv':
       return csvReport(files);
     case 'text':
-      return textReport(files, { extent, paint: colour ? terminalPaint : noPaint, width: io.columns ?? 100 });
+      return textReport(files, {
+        extent,
+        paint: colour ? terminalPaint : noPaint,
+        width: io.columns ?? 100,
+        ...(brief ? { brief: (definition) => leadingFigures(definition).slice(0, MOST_BRIEF) } : {}),
+      });
   }
 }

@@ -4,7 +4,7 @@
 
 import { Command, CommanderError, Option } from 'commander';
 import { version } from '../../package.json';
-import { answerFiles, type Format } from './answer.ts';
+import { answerFiles, type AnswerOptions, type Format } from './answer.ts';
 import { ExitCode } from './exit-codes.ts';
 import { formatFiles } from './format-files.ts';
 import type { Io } from './io.ts';
@@ -48,6 +48,7 @@ function commands(io: Io, finish: (code: ExitCode) => void): Command {
       `
 Examples:
   stokehold evaluate trial.stoke                 figures, findings and expectations
+  stokehold evaluate trial.stoke --brief         the leading figures and the findings
   stokehold check *.stoke --strict               findings only; warnings fail too
   stokehold evaluate trial.stoke --format json   the same answers for a program
   stokehold format trial.stoke                   bring it into shape, in place
@@ -64,13 +65,13 @@ Exit code:
   answering(program.command('check'), 'print what is wrong with scenarios, and no figures', ['text', 'json']).action(
     (files: string[], options: AnswerFlags) => finish(answerFiles(files, 'check', answerOptions(options, io), io)),
   );
-  answering(program.command('evaluate'), 'print all figures, findings and expectations', [
-    'text',
-    'json',
-    'csv',
-  ]).action((files: string[], options: AnswerFlags) =>
-    finish(answerFiles(files, 'evaluate', answerOptions(options, io), io)),
-  );
+  answering(program.command('evaluate'), 'print all figures, findings and expectations', ['text', 'json', 'csv'])
+    .option('--brief', 'only the figures a person looks for first, and no tables (text)')
+    .action((files: string[], options: AnswerFlags, command: Command) => {
+      if (options.brief === true && options.format !== 'text')
+        command.error(`stokehold: --brief is for text; ${options.format} gives everything`);
+      finish(answerFiles(files, 'evaluate', answerOptions(options, io), io));
+    });
   program
     .command('format')
     .description('bring scenarios into shape, in place; `-` from standard input to standard output')
@@ -94,6 +95,7 @@ interface AnswerFlags {
   readonly format: Format;
   readonly strict?: boolean;
   readonly color: boolean;
+  readonly brief?: boolean;
 }
 
 function answering(command: Command, description: string, formats: readonly Format[]): Command {
@@ -114,11 +116,8 @@ function answering(command: Command, description: string, formats: readonly Form
     .option('--no-color', 'do not colour, not even on a terminal');
 }
 
-function answerOptions(
-  { format, strict, color }: AnswerFlags,
-  io: Io,
-): { format: Format; strict: boolean; colour: boolean } {
+function answerOptions({ format, strict, color, brief }: AnswerFlags, io: Io): AnswerOptions {
   const unwanted = io.environment['NO_COLOR'];
   const colour = color && io.isTerminal && (unwanted === undefined || unwanted === '');
-  return { format, strict: strict === true, colour };
+  return { format, strict: strict === true, colour, brief: brief === true };
 }

@@ -7,6 +7,7 @@ import type { EvaluatedDefinition, Table, TableWork } from '../scenario/scenario
 import { assumptionText } from '../wording/assumptions.ts';
 import { formatPercent } from '../wording/numbers.ts';
 import { celsiusText } from '../wording/quantities.ts';
+import { speciesText } from '../wording/species.ts';
 import { listed } from '../wording/words.ts';
 import type { HoverLine } from './hover-text.ts';
 
@@ -28,7 +29,7 @@ export function burnLines({ figures, tables }: EvaluatedDefinition): HoverLine[]
 
 function productLines(table: Table | undefined): HoverLine[] {
   const share = columnOf(table, 'mass-share');
-  const products = table?.rows.slice(0, MOST_PRODUCTS).map((row) => `${text(row[0])} ${percent(row[share])}`) ?? [];
+  const products = table?.rows.slice(0, MOST_PRODUCTS).map((row) => `${speciesText(text(row[0]))} ${percent(row[share])}`) ?? [];
   return products.length === 0 ? [] : [{ label: 'Leading products, by mass', text: products.join(', ') }];
 }
 
@@ -43,7 +44,7 @@ function condensationLines(table: Table | undefined): HoverLine[] {
   const point = columnOf(table, 'dew-point');
   const told = table.rows.flatMap((row) => {
     const from = row[point];
-    return typeof from === 'number' ? [`${text(row[0])} from ${celsiusText(temperatureOf(from))}`] : [];
+    return typeof from === 'number' ? [`${speciesText(text(row[0]))} from ${celsiusText(temperatureOf(from))}`] : [];
   });
   const shown = told.slice(0, MOST_CONDENSING);
   const more = told.length > shown.length ? [`${String(told.length - shown.length)} more`] : [];

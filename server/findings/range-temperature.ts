@@ -26,8 +26,10 @@ export const rangeTemperature: Rule<FactOf<'range/temperature'>> = {
         : `${quoted(name)} has data from ${celsiusText(from)} to ${celsiusText(to)}`,
     );
     return sentences(
-      `At ${celsiusText(fact.temperature)} this ${fact.of ?? 'reaction'} leans on values beyond their data: ${ranges.join('; ')}.`,
-      fact.of === 'burn'
+      fact.of === 'cooled-products'
+        ? `Cooled to ${celsiusText(fact.temperature)} the products lean on values beyond their data: ${ranges.join('; ')}.`
+        : `At ${celsiusText(fact.temperature)} this ${fact.of ?? 'reaction'} leans on values beyond their data: ${ranges.join('; ')}.`,
+      fact.of !== undefined
         ? 'Take the result as a guess.'
         : 'Take the result as a guess, or give a state within the data.',
     );

@@ -4,13 +4,13 @@
 // Invariant: no line of figures or tables is painted inside a column, so that they align with and without colour.
 
 import type { Finding, Severity } from '../findings/finding.ts';
-import type { EvaluatedDefinition, EvaluatedFile, Table } from '../scenario/scenario.ts';
+import type { EvaluatedDefinition, EvaluatedFile, Figure, Table } from '../scenario/scenario.ts';
 import { reportCaution, routeText, screeningText } from '../wording/hazards.ts';
 import { formatNumber } from '../wording/numbers.ts';
 import { figureCells, toldText } from '../wording/quantities.ts';
 import { counted, countedFindings, listed, sharingHeads } from '../wording/words.ts';
 import { unitOfClaim, unitOfValue } from '../wording/written-unit.ts';
-import { alignedAtPoint, columns, cut, tableLines } from './columns.ts';
+import { alignedAtPoint, columns, cut, figureLines, tableLines, wordWrapped, type FigureCellRow } from './columns.ts';
 import { findingLines, printable } from './finding-text.ts';
 import { hasFailed, type ReportedFile } from './gather.ts';
 import type { Extent } from './json.ts';
@@ -22,18 +22,20 @@ export interface TextOptions {
   readonly paint: Paint;
   /** Columns of the terminal. */
   readonly width: number;
+  /** Of each definition these figures alone, and no tables; absent: all there is. */
+  readonly brief?: (definition: EvaluatedDefinition) => readonly Figure[];
 }
 
 const WIDEST = 100;
 const NARROWEST = 40;
 
 /** The whole text, ending with a newline. */
-export function textReport(files: readonly ReportedFile[], { extent, paint, width }: TextOptions): string {
+export function textReport(files: readonly ReportedFile[], { extent, paint, width, brief }: TextOptions): string {
   const room = Math.max(NARROWEST, Math.min(WIDEST, width));
   const kept = new Map(files.map(({ file }) => [file.path, new Lines(file.tree.text)]));
   const linesOf = (path: string): Lines | undefined => kept.get(path);
   const blocks = files.flatMap(({ file, used, findings }) => [
-    ...(extent === 'evaluate' && !used ? fileBlocks(file, paint, room) : []),
+    ...(extent === 'evaluate' && !used ? fileBlocks(file, paint, room, brief) : []),
     ...findingBlocks(findings, linesOf, paint, room),
   ]);
   return `${[...blocks, ...notEvaluated(files, room), ...caution(files, room), summary(files, paint)].join('\n\n')}\n`;
@@ -60,14 +62,15 @@ function findingBlocks(
   return blocks.map((lines) => lines.join('\n'));
 }
 
-function fileBlocks(file: EvaluatedFile, paint: Paint, width: number): string[] {
+function fileBlocks(file: EvaluatedFile, paint: Paint, width: number, brief: TextOptions['brief']): string[] {
+  const look: Look = { width, brief, celsius: /\bdegC\b|°C/.test(file.tree.text) };
   const title = file.title === null ? '' : `  ${printable(file.title)}`;
   const heading = paint.strong(printable(file.path)) + cut(title, Math.max(0, width - file.path.length));
   const shown = file.definitions.filter(({ figures, tables }) => figures.length > 0 || tables.length > 0);
   return [
     heading,
     ...valuesBlock(file),
-    ...shown.map((definition) => definitionBlock(definition, paint, width)),
+    ...shown.map((definition) => definitionBlock(definition, paint, look)),
     ...expectationsBlock(file, paint, width),
   ];
 }
@@ -81,25 +84,36 @@ function valuesBlock(file: EvaluatedFile): string[] {
   return rows.length === 0 ? [] : [indented(columns(rows), 2)];
 }
 
-function definitionBlock(definition: EvaluatedDefinition, paint: Paint, width: number): string {
-  const { kind, name, doc, figures, tables } = definition;
+interface Look {
+  readonly width: number;
+  readonly brief: TextOptions['brief'];
+  /** Whoever wrote the file tells temperatures in °C. */
+  readonly celsius: boolean;
+}
+
+function definitionBlock(definition: EvaluatedDefinition, paint: Paint, { width, brief, celsius }: Look): string {
+  const { kind, name, doc, tables } = definition;
+  const figures = brief ? brief(definition) : definition.figures;
   const told = figures.map(figureCells);
   const numbers = alignedAtPoint(told.map(({ number }) => number));
-  const rows = figures.map(({ label }, index) => {
+  const rows = figures.map(({ label }, index): FigureCellRow => {
     const { unit = '', note = '' } = told[index] ?? {};
     return [label, numbers[index] ?? '', note === '' ? unit : `${unit} (${note})`];
   });
+  const room = width - 4;
   const [about = ''] = doc.split('\n');
   return [
     `${paint.informing(kind)} ${paint.strong(printable(name))}`,
     ...(about === '' ? [] : [`  ${paint.faint(cut(printable(about), width - 2))}`]),
     ...equations(definition).map((equation) => `  ${cut(printable(equation), width - 2)}`),
-    ...(rows.length === 0 ? [] : [indented(columns(rows), 2)]),
+    ...(rows.length === 0 ? [] : [indented(figureLines(rows, width - 2), 2)]),
     ...missing(definition, width).map((line) => paint.faint(line)),
     ...outlook(definition, width),
-    ...tables
-      .filter((table) => saysSomething(table, kind))
-      .map((table) => `\n  ${paint.faint(table.label)}\n${indented([...tableLines(table), ...gapLines(table)], 4)}`),
+    ...(brief ? [] : tables.filter((table) => saysSomething(table, kind))).map((table) => {
+      const lines = [...tableLines(table, { room, celsius }), ...gapLines(table)];
+      const heading = wordWrapped(table.label, width - 2, 0).map((line) => paint.faint(line));
+      return `\n${indented(heading, 2)}\n${indented(lines, 4)}`;
+    }),
   ].join('\n');
 }
 
@@ -233,13 +247,5 @@ function indented(lines: readonly string[], by: number): string {
 }
 
 function wrapped(text: string, width: number): string {
-  const lines: string[] = [];
-  let line = '';
-  for (const word of text.split(' ')) {
-    if (line !== '' && line.length + 1 + word.length > width) {
-      lines.push(line);
-      line = `  ${word}`;
-    } else line = line === '' ? word : `${line} ${word}`;
-  }
-  return [...lines, line].join('\n');
+  return wordWrapped(text, width, 2).join('\n');
 }

@@ -223,6 +223,8 @@ export type Fact =
       /** From where on it sticks; null where that is not known. */
       readonly sticky: Quantity | null;
       readonly leading: readonly string[];
+      /** Vapours of a frozen gas that condense on such walls. */
+      readonly vapours: readonly string[];
       readonly validity: readonly SaltMeltingValidity[];
     }
   /** Droplets or particles have less time than they take to burn out; `timeS` null where no flame holds at all. */
@@ -233,6 +235,8 @@ export type Fact =
         readonly name: string;
         readonly verdict: 'open' | 'unburnt';
         readonly timeS: number | null;
+        /** Up and down, within which such times are good; null without a time. */
+        readonly factor: number | null;
       }[];
     }
   /** Water vapour near its saturation at a high pressure is no ideal gas. */
@@ -261,7 +265,7 @@ export type Fact =
       readonly code: 'range/temperature';
       readonly why: 'extrapolated';
       /** The state of a burn, which nobody chose; otherwise one that was asked for. */
-      readonly of?: 'burn';
+      readonly of?: 'burn' | 'cooled-products';
       readonly temperature: Quantity;
       readonly species: readonly { readonly name: string; readonly range: readonly [from: Quantity, to: Quantity] }[];
     }

@@ -277,7 +277,7 @@ const methods: Readonly<Record<MethodId, MethodText>> = {
     symbols:
       'ρ density, d diameter, λ and c conductivity and heat capacity of the film, B transfer number; iron and other metals that do not boil take up oxygen at their surface, aluminium follows its own correlation',
     validity:
-      'Single particles without slip or ignition delay: good within a factor of about two. Sprays burn out later, as neighbours share the oxygen. A blend is judged portion by portion, as if each came by itself.',
+      'Single particles without slip or ignition delay: good within a factor of 1.5 to 2, told beside each time. Sprays burn out later, as neighbours share the oxygen. A blend is judged portion by portion, as if each came by itself.',
   },
   'blend-flash-point': {
     words: 'The temperature at which the vapours over the liquid portions together reach their lower flammable limit.',

@@ -5,6 +5,7 @@
 import type { Burn } from '../../core/burn/burn.ts';
 import { depositOf } from '../../core/burn/deposit.ts';
 import { productRows } from '../../core/burn/products.ts';
+import { vapourOnWall } from '../../core/burn/wall-condensation.ts';
 import type { SaltMelting } from '../../core/equilibrium/melts.ts';
 import type { TemperatureRange } from '../burn-readers.ts';
 
@@ -17,6 +18,8 @@ export interface DoubtfulWalls {
   readonly melting: SaltMelting;
   /** The most of it by mass, at most three. */
   readonly leading: readonly string[];
+  /** Vapours that froze in the gas and condense on the wall. */
+  readonly vapours: readonly string[];
 }
 
 export interface JudgedWalls {
@@ -36,24 +39,30 @@ export function judgedWalls(burn: Burn, { from, to }: TemperatureRange): JudgedW
   );
   const met = walls.flatMap((wallK, index) => {
     const state = burn.at(wallK);
-    const melting = state.kind === 'none' ? undefined : depositOf(state);
-    if (state.kind === 'none' || !melting) return [];
-    const leading = productRows(state)
+    if (state.kind === 'none') return [];
+    // In equilibrium what can condense has; of a frozen gas, vapour may arrive that the wall is too cold for.
+    const condensed = state.kind === 'frozen' ? vapourOnWall(state) : null;
+    const there = condensed?.state ?? state;
+    const melting = depositOf(there);
+    if (!melting) return [];
+    const vapours = condensed?.vapours.map((gas) => state.candidates.phases[gas]?.id ?? '') ?? [];
+    const leading = productRows(there)
       .filter(({ isGas }) => !isGas)
       .slice(0, 3)
       .map(({ id }) => id);
-    return [{ wallK, colderK: walls[index - 1] ?? wallK, melting, leading, verdict: stickinessAt(wallK, melting) }];
+    const colderK = walls[index - 1] ?? wallK;
+    return [{ wallK, colderK, melting, leading, vapours, verdict: stickinessAt(wallK, melting) }];
   });
   const walled = (verdict: Stickiness): DoubtfulWalls | null => {
     const alike = met.filter((one) => one.verdict === verdict);
     const [coldest] = alike;
     const hottest = alike.at(-1);
     if (!coldest || !hottest) return null;
-    const { wallK, colderK, melting, leading } = coldest;
+    const { wallK, colderK, melting, leading, vapours } = coldest;
     // Between the last wall that is not met so and the first that is, the deposit's own limit is known better.
     const limitK = verdict === 'sticky' ? melting.stickyK : surelySolidBelowK(melting);
     const fromK = limitK === null ? wallK : Math.min(wallK, Math.max(colderK, limitK));
-    return { fromK, toK: hottest.wallK, melting, leading };
+    return { fromK, toK: hottest.wallK, melting, leading, vapours };
   };
   return { sticky: walled('sticky'), notKnown: walled('not-known') };
 }

@@ -1,22 +1,22 @@
 // What is to be said of a burn: that it cannot be worked out and why, that it leans on values beyond their data, and where
 // what is written is hardly meant (cold air under pressure) or has a consequence that is easily missed (soot, no water).
-// Reads the charge, the flame and its zone alone, so that no cooled state is solved for it; but for walls, whose states are
-// solved (burn-deposits.ts says how many), and sizes, which take one more flame. Rounds and words nothing.
+// Reads the charge, the flame and its zone; of cooled states a few of those that are written, for walls their own (burn-deposits.ts
+// says how many), and for sizes one more flame. Solves no path. Rounds and words nothing.
 
-import type { Burn, BurnFault, Charge } from '../../core/burn/burn.ts';
+import type { Burn, BurnFault, Charge, MatterState, NoState } from '../../core/burn/burn.ts';
 import { carbonFate, shareOfForm } from '../../core/burn/fates.ts';
 import { amountOf, dryGasMol, productRows } from '../../core/burn/products.ts';
-import type { Equilibrium, NoEquilibrium } from '../../core/equilibrium/equilibrium.ts';
+import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { tablesK } from '../../core/equilibrium/solver.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { alkaliMetals, atomicWeightKgPerMol } from '../../core/substance/elements.ts';
-import { waterSaturationPressurePa } from '../../core/substance/water-saturation.ts';
 import type { Span } from '../../../grammar/tree.ts';
 import type { TemperatureRange } from '../burn-readers.ts';
 import type { Context } from '../context.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 import { judgedWalls } from './burn-deposits.ts';
+import { reportColdCharge, reportRealGas } from './burn-gas-facts.ts';
 import type { WrittenBurn } from './burn-question.ts';
 import type { AskedOfBurn, SolvedBurn } from './burn-solved.ts';
 
@@ -93,7 +93,7 @@ export function reportFault(
 
 /** Says why a state could not be had. */
 export function reportNone(
-  none: NoEquilibrium,
+  none: NoState,
   of: 'flame' | 'zone',
   names: BurnNames,
   places: BurnPlaces,
@@ -202,6 +202,7 @@ export function reportStickyWalls(burn: Burn, walls: TemperatureRange, place: Sp
       sticky: stickyK === null ? null : kelvin(stickyK),
       uncertaintyK,
       leading: met.leading,
+      vapours: met.vapours,
       validity,
     });
   }
@@ -224,7 +225,11 @@ export function reportBurnOut(
   const residence = sizes.residenceTime;
   const late = burnOuts.flatMap(({ name, burnOut, verdict }) =>
     burnOut && (verdict === 'unburnt' || verdict === 'open')
-      ? [{ name, verdict, timeS: burnOut.law === 'none' ? null : burnOut.timeS }]
+      ? [
+          burnOut.law === 'none'
+            ? { name, verdict, timeS: null, factor: null }
+            : { name, verdict, timeS: burnOut.timeS, factor: burnOut.factor },
+        ]
       : [],
   );
   if (residence && late.length > 0)
@@ -234,12 +239,51 @@ export function reportBurnOut(
 /** A product below this share by mass may lean on anything: it moves no figure. */
 const leastOfNoteShare = 1e-3;
 
-function reportExtrapolated(state: Equilibrium, place: Span, context: Context): void {
+interface BeyondData {
+  readonly name: string;
+  readonly range: readonly [from: Quantity, to: Quantity];
+}
+
+function beyondData(state: MatterState): readonly BeyondData[] {
   const beyond = new Set(state.extrapolated);
-  const species = productRows(state, leastOfNoteShare).flatMap(({ phase, id }) => {
+  return productRows(state, leastOfNoteShare).flatMap(({ phase, id }) => {
     const range = beyond.has(phase) ? state.candidates.phases[phase]?.validK : undefined;
     return range ? [{ name: id, range: [kelvin(range[0]), kelvin(range[1])] as const }] : [];
   });
+}
+
+/** A heat capacity carried on so far beyond its end moves an enthalpy less than the data themselves are good for. */
+const harmlessBeyondK = 30;
+
+/** Cooled states that are looked at for products beyond their data: those asked for, from the hottest, at most so many. */
+const mostCooledStates = 8;
+
+/** Says which products of cooled states lean on values beyond their data, each once, where it first does. */
+export function reportCooledBeyondData(burn: Burn, flame: Equilibrium, place: Span, context: Context): void {
+  const told = new Set(beyondData(flame).map(({ name }) => name));
+  const falling = [...burn.cooled].sort((a, b) => b.temperatureK - a.temperatureK).slice(0, mostCooledStates);
+  for (const { temperatureK, state: solve } of falling) {
+    const state = solve();
+    const species =
+      state.kind === 'none'
+        ? []
+        : beyondData(state).filter(
+            ({ name, range: [from, to] }) =>
+              !told.has(name) &&
+              // Water is liquid beyond its data only near its saturation under pressure, and that is told as such.
+              !(name === 'H2O(l)' && temperatureK > to.value) &&
+              Math.max(from.value - temperatureK, temperatureK - to.value) > harmlessBeyondK,
+          );
+    if (species.length === 0) continue;
+    for (const { name } of species) told.add(name);
+    const temperature = kelvin(temperatureK);
+    const of = 'cooled-products' as const;
+    context.report(place, { code: 'range/temperature', why: 'extrapolated', of, temperature, species });
+  }
+}
+
+function reportExtrapolated(state: Equilibrium, place: Span, context: Context): void {
+  const species = beyondData(state);
   if (species.length === 0) return;
   const temperature = kelvin(state.temperatureK);
   context.report(place, { code: 'range/temperature', why: 'extrapolated', of: 'burn', temperature, species });
@@ -313,83 +357,6 @@ function reportMissingWater({ elements, elementMol }: Charge, name: string, plac
 const leastMissingShare = 1e-6;
 /** Fewer atoms than this, of those that may bind alkali, hold too little of it to matter. */
 const leastBinderShare = 1e-3;
-
-/** From this pressure on, and up to this temperature, a gas that was not told to be compressed was forgotten so. */
-const coldPressurePa = 5e5;
-const coldTemperatureK = 333.15;
-
-function reportColdCharge(
-  { oxidant, chargePressure, held }: WrittenBurn,
-  moleShares: OxidantStream['moleShares'],
-  place: Span,
-  context: Context,
-): void {
-  const pressure = held.held === 'pressure' ? held.pressure : chargePressure;
-  const { temperature } = oxidant;
-  if (
-    !isAir(moleShares) ||
-    oxidant.gasMolPerKg.value === 0 ||
-    pressure.value < coldPressurePa ||
-    temperature.value > coldTemperatureK
-  )
-    return;
-  const compressedK = temperature.value * (pressure.value / 1e5) ** (1 - 1 / gammaOfAir);
-  context.report(place, { code: 'range/cold-charge', temperature, pressure, compressed: kelvin(compressedK) });
-}
-
-/** Nitrogen and oxygen about as in air, with at most some vapour and other gases beside them. */
-function isAir(moleShares: OxidantStream['moleShares']): boolean {
-  const [nitrogen, oxygen] = ['N2(g)', 'O2(g)'].map((id) => moleShares.get(id)?.value ?? 0) as [number, number];
-  const oxygenOfBoth = oxygen / (nitrogen + oxygen);
-  return nitrogen + oxygen > 0.85 && oxygenOfBoth > 0.18 && oxygenOfBoth < 0.24;
-}
-
-/** Of cold air. */
-const gammaOfAir = 1.4;
-
-/** Vapour from 5 bar on is told of where a cooled state lies within 30 K of its saturation, or below it. */
-const vapourPressurePa = 5e5;
-const nearSaturationK = 30;
-
-function reportRealGas(burn: Burn, flame: Equilibrium, place: Span, context: Context): void {
-  const { input, charge } = burn;
-  const held = input.coolingPressurePa ?? (input.held.held === 'pressure' ? input.held.pressurePa : null);
-  const share = vapourShareBurntOut(charge);
-  for (const temperatureK of input.cooledToK) {
-    const atPa = held ?? (flame.pressurePa * temperatureK) / flame.temperatureK;
-    const vapourPa = share * atPa;
-    const saturationK = vapourPa >= vapourPressurePa ? saturationTemperatureK(vapourPa) : null;
-    if (saturationK === null || temperatureK > saturationK + nearSaturationK) continue;
-    context.report(place, {
-      code: 'range/real-gas',
-      temperature: kelvin(temperatureK),
-      vapourPressure: quantityOf(vapourPa, knownUnit('Pa').dimension),
-      saturation: kelvin(saturationK),
-    });
-    return;
-  }
-}
-
-/** Water vapour in the cool gas, before it condenses: all hydrogen as water as far as oxygen reaches, carbon as dioxide. */
-function vapourShareBurntOut({ elements, elementMol }: Charge): number {
-  const atoms = (symbol: string): number => elementMol[elements.indexOf(symbol)] ?? 0;
-  const water = Math.min(atoms('H') / 2, atoms('O'));
-  const left = Math.max(0, atoms('O') - water - 2 * atoms('C')) / 2;
-  const gas = water + (atoms('H') / 2 - water) + atoms('C') + atoms('N') / 2 + atoms('Ar') + atoms('He') + left;
-  return gas > 0 ? water / gas : 0;
-}
-
-/** By bisection of the saturation pressure; null above the critical point. */
-function saturationTemperatureK(pressurePa: number): number | null {
-  let [low, high] = [273.16, 647.096];
-  if (pressurePa > (waterSaturationPressurePa(high) ?? 0)) return null;
-  while (high - low > 1e-3) {
-    const middle = (low + high) / 2;
-    if ((waterSaturationPressurePa(middle) ?? Infinity) < pressurePa) low = middle;
-    else high = middle;
-  }
-  return low;
-}
 
 function kelvin(valueK: number): Quantity {
   return quantityOf(valueK, knownUnit('K').dimension, undefined, 'temperature');

@@ -7,7 +7,7 @@
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import type { MatterState } from '../../core/burn/burn.ts';
 import { prepareBurn } from '../../core/burn/prepare-burn.ts';
-import { peakGases } from '../../core/burn/products.ts';
+import { amountOf, peakGases } from '../../core/burn/products.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import type { Parts } from '../../core/quantity/parts.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
@@ -154,7 +154,7 @@ export const burnFigures = [
   row(
     'slate',
     'released-share',
-    'Heat released down to 25 °C less preheat, over the lower heating value',
+    'Heat released down to 25 °C less preheat, over the lower heating value (that has water as vapour)',
     '1',
     'heat-released',
     ({ heat }) => heat()?.shareOfHeatingValue ?? null,
@@ -246,11 +246,11 @@ export function figuresOf(
   return burnFigures.flatMap((row: BurnFigureRow): Figure[] => {
     const value = row.value(readings);
     if (value === null || !Number.isFinite(value)) return [];
-    const { id, label, unit, method } = row;
+    const { id, unit, method } = row;
     const plain = figureQuantity(value, unit);
     const figure: Figure = {
       id,
-      label,
+      label: labelOf(row, solved),
       quantity: plain,
       unit,
       working: { method, inputs: [], sources: [], assumptions: [] },
@@ -262,6 +262,14 @@ export function figuresOf(
       }),
     ];
   });
+}
+
+/** What is made of the heat of condensation: a heating value leaves water as vapour, the products at 25 °C may not. */
+function labelOf({ id, label }: FigureRow, { slate }: SolvedBurn): string {
+  const state = id === 'heat-released' || id === 'released-share' ? slate()?.slate : undefined;
+  if (!state?.candidates.elements.includes('H')) return label;
+  const isCondensed = ['H2O(l)', 'H2O(cr)'].some((water) => amountOf(state, water) > 0);
+  return `${label}, ${isCondensed ? 'water condensed as far as it does' : 'water as vapour'}`;
 }
 
 function figureQuantity(value: number, unit: string): Quantity {

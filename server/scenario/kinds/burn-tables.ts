@@ -11,6 +11,7 @@ import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { lazily } from '../lazily.ts';
 import { burnPathTables } from './burn-path-tables.ts';
+import { peakGasColumns, peakGasRows } from './burn-peak-gases.ts';
 import {
   isShown,
   leastMassShare,
@@ -31,6 +32,8 @@ export function burnTables(burn: Burn, flame: Equilibrium): readonly Table[] {
   return [
     productsTable(flame),
     ...(zone?.kind === 'equilibrium' ? [zoneTable(zone)] : []),
+    peakGasTable('', 'in the flame', flame, burn),
+    ...(zone?.kind === 'equilibrium' ? [peakGasTable('flame-zone-', 'in the flame zone', zone, burn)] : []),
     statesTable(burn),
     cooledProductsTable(burn),
     fateTable('carbon-fate', 'Where the carbon is', burn, flame, (state) => [carbonFate(state)]),
@@ -70,6 +73,12 @@ function zoneTable(zone: Equilibrium): Table {
     label: 'Products in the flame zone, per kg of fuel',
     columns,
   });
+}
+
+function peakGasTable(prefix: string, where: string, state: Equilibrium, { input }: Burn): Table {
+  const columns = [substanceColumn, ...peakGasColumns.map((column) => ({ ...column, id: `${prefix}${column.id}` }))];
+  const label = `NO and CO if they froze ${where}: order of magnitude, kinetics decide; m³ at 0 °C and 101.325 kPa`;
+  return lazyTable({ id: `${prefix}peak-gases`, label, columns }, () => peakGasRows(state, input));
 }
 
 function cooledProductsTable(burn: Burn): Table {

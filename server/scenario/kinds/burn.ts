@@ -1,6 +1,6 @@
 // `burn`: a fuel burnt in an oxidant to chemical equilibrium, and its products as they cool. What findings rest on is solved
-// with the definition: the flame and its zone, and where they are written the states at walls and, for sizes, the flame at
-// λ = 1; all else (uncertainty, cooled states, the path) when somebody reads it. The states are core/burn's; this file joins entries to them.
+// with the definition: the flame and its zone, and where they are written the states at walls, some that are cooled to and,
+// for sizes, the flame at λ = 1; all else (uncertainty, other states, the path) when somebody reads it. The states are core/burn's; this file joins entries to them.
 // The path is long work, asked for by whoever looks at it (burn-path-tables.ts).
 
 import type { Definition, Entry, Span } from '../../../grammar/tree.ts';
@@ -20,6 +20,7 @@ import { burnEntries, defaultExhaustC } from './burn-entries.ts';
 import {
   reportAskedTemperatures,
   reportBurnOut,
+  reportCooledBeyondData,
   reportFault,
   reportNone,
   reportStates,
@@ -82,6 +83,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
     reportStickyWalls(burning, value, entry.span, context);
   }
   reportBurnOut(solved, asked, names, places, context);
+  reportCooledBeyondData(burning, flame, places.cooled, context);
   const hasSize = asked.sizes.dropletSize !== null || asked.sizes.particleSize !== null;
   const entryPlaces = workingPlaces(read, context);
   return lazily<KindAnswer>(

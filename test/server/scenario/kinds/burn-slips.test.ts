@@ -325,6 +325,39 @@ test('droplets and particles: too little time, no data, nothing of that size', (
   `);
 });
 
+test('vapour that froze in the gas makes a deposit stick where its own solids would not', () => {
+  const frozen = (below: string, mark: string): string => `
+    blend slurry {
+      40 % mass  sodium
+      rest       methanol
+    }
+    burn furnace {
+      fuel: slurry
+      oxidant: air
+      lambda: 1.2
+      frozen below: ${below}
+      wall temperature: 450 degC
+      ${mark}
+    }
+  `;
+  // Frozen while hot, hydroxide arrives as vapour and melts with the carbonate it finds; cooled in equilibrium it has become carbonate.
+  checkFacts(frozen('1200 degC', '# ^^^^^^^^^^^^^^^^^^^^^^^^^^ range/sticky').replace('      # ^', '    # ^'));
+  checkFacts(frozen('600 degC', ''));
+});
+
+test('cooled products far beyond their data are told once, not at every state', () => {
+  checkFacts(`
+    burn boat {
+      fuel: magnesium
+      oxidant: air
+      lambda: 0.6
+    # ^^^^^^^^^^^ range/rich
+      cooled to: -20 degC, 15 degC, -40 degC
+    # ^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^^ range/temperature
+    }
+  `);
+});
+
 test('walls on which the deposit sticks, walls on which it does not, and such of which that is not known', () => {
   const furnace = (wall: string, mark = '', salts = '25 % mass sodium'): string => `
     blend dispersion {
