@@ -1,6 +1,7 @@
 // What amounts of phases at a temperature and a pressure come to: gas, mass, enthalpy, heat capacity. Sums and nothing else.
 // Knows no reactions, no condensation and no fuel. Invariant: the amounts are as they were given.
 
+import { phasesBeyondData } from '../equilibrium/beyond-data.ts';
 import type { CandidateSet } from '../equilibrium/candidates.ts';
 import { molarGasConstantJPerMolK } from '../quantity/constants.ts';
 import { fillEnthalpies } from '../substance/property-set.ts';
@@ -23,7 +24,6 @@ export function matterState(
   let gasMol = 0;
   let gasKg = 0;
   let condensedKg = 0;
-  const extrapolated: number[] = [];
   for (let phase = 0; phase < size; phase += 1) {
     const mol = amountsMol[phase] ?? 0;
     if (mol === 0) continue;
@@ -34,8 +34,6 @@ export function matterState(
       gasMol += mol;
       gasKg += kg;
     } else condensedKg += kg;
-    const [fromK, toK] = phases[phase]?.validK ?? [0, Infinity];
-    if (temperatureK < fromK || temperatureK > toK) extrapolated.push(phase);
   }
   const massKg = gasKg + condensedKg;
   return {
@@ -51,6 +49,6 @@ export function matterState(
     enthalpyJ: enthalpyOverRT * molarGasConstantJPerMolK * temperatureK,
     frozenHeatCapacityJPerK: capacityOverR * molarGasConstantJPerMolK,
     frozenGamma: gasMol > 0 ? capacityOverR / (capacityOverR - gasMol) : null,
-    extrapolated,
+    extrapolated: phasesBeyondData(candidates, amountsMol, temperatureK, massKg),
   };
 }

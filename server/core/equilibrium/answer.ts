@@ -6,6 +6,7 @@
 
 import { molarGasConstantJPerMolK, standardPressurePa } from '../quantity/constants.ts';
 import { fillEnthalpies, fillGibbs } from '../substance/property-set.ts';
+import { phasesBeyondData } from './beyond-data.ts';
 import type { CandidateSet } from './candidates.ts';
 import { madeUpBy } from './descent.ts';
 import { solveDense } from './dense.ts';
@@ -215,7 +216,6 @@ export function answerOf(
   let largestAffinity = -Infinity;
   let potentialResidual = 0;
   let gasSum = 0;
-  const extrapolated: number[] = [];
   const found = new Float64Array(width);
   for (let phase = 0; phase < size; phase += 1) {
     const amount = at(amountsMol, phase);
@@ -257,12 +257,6 @@ export function answerOf(
     if (given > 0) elementBalance = Math.max(elementBalance, Math.abs(at(found, row) - given) / given);
   }
   if (set.hasCharge) elementBalance = Math.max(elementBalance, Math.abs(at(found, width - 1)) / atoms);
-  for (let phase = 0; phase < size; phase += 1) {
-    const [fromK, toK] = set.phases[phase]?.validK ?? [0, Infinity];
-    const share = (at(amountsMol, phase) * at(set.molarMassKgPerMol, phase)) / mass;
-    if (share > extrapolatedShare && (temperatureK < fromK - 1e-6 || temperatureK > toK + 1e-6))
-      extrapolated.push(phase);
-  }
   const gasConstant = molarGasConstantJPerMolK;
   const enthalpyJ = heat * gasConstant * temperatureK;
   const entropyJPerK = entropy * gasConstant;
@@ -296,7 +290,7 @@ export function answerOf(
     speedOfSoundMPerS:
       response.gamma === null ? null : Math.sqrt((response.gamma * gasMol * gasConstant * temperatureK) / mass),
     pinned: response.pinned,
-    extrapolated,
+    extrapolated: phasesBeyondData(set, amountsMol, temperatureK, mass),
     certificate: {
       elementBalance,
       largestAffinity: largestAffinity === -Infinity ? 0 : largestAffinity,
@@ -306,5 +300,3 @@ export function answerOf(
     iterations,
   };
 }
-/** A phase with less of the mass than this decides nothing by its extrapolated data. */
-const extrapolatedShare = 1e-6;

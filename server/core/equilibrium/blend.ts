@@ -4,6 +4,7 @@
 // are held as well as in the worse of the two.
 
 import { answerOf } from './answer.ts';
+import { phasesBeyondData } from './beyond-data.ts';
 import type { Certificate, Equilibrium, Pinned } from './equilibrium.ts';
 
 /** What is held, and how much of it each side has. */
@@ -61,7 +62,7 @@ export function blended(low: Equilibrium, high: Equilibrium, parts: Parts, eleme
     gamma: null,
     speedOfSoundMPerS: null,
     pinned,
-    extrapolated: [...new Set([...low.extrapolated, ...high.extrapolated])],
+    extrapolated: phasesBeyondData(set, amountsMol, main.temperatureK, main.massKg),
     // Past the end of a crystal's data there are two states, each with its own potentials; elsewhere one set of them must do.
     certificate:
       pinned.by === 'end-of-phase'

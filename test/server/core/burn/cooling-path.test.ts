@@ -180,3 +180,22 @@ describe('the search for events', () => {
     expect(hiddenVisit(pointAt(380), pointAt(350), pointAt(395), stateAt)).toBeUndefined();
   });
 });
+
+test('each state says by itself which of its phases lean on data carried on', () => {
+  const frozen = burn(salty, { amount: { by: 'lambda', lambda: 1.6 }, frozenBelowK: 900 });
+  const seen = new Set<string>();
+  for (const state of [...lean.path(list(2600, 220, 20)).states, ...frozen.path(list(2000, 160, 20)).states]) {
+    if (state.kind === 'none') throw new Error(state.reason);
+    const { candidates, amountsMol, temperatureK, massKg, extrapolated } = state;
+    const beyond = candidates.phases.flatMap(({ id, validK: [fromK, toK], molarMassKgPerMol }, index) => {
+      const isOutside = temperatureK < fromK - 1e-6 || temperatureK > toK + 1e-6;
+      if (!isOutside || ((amountsMol[index] ?? NaN) * molarMassKgPerMol) / massKg <= 1e-6) return [];
+      seen.add(id);
+      return [index];
+    });
+    expect([temperatureK, extrapolated]).toEqual([temperatureK, beyond]);
+  }
+  // Some do and most do not, or this shows nothing.
+  expect(seen.size).toBeGreaterThan(0);
+  expect(lean.path([1500]).states.map((state) => (state.kind === 'none' ? null : state.extrapolated))).toEqual([[]]);
+});
