@@ -8,6 +8,10 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const accountSeaVariables: Rule<FactOf<'account/sea-variables'>> = {
   severity: ({ why }) => (why === 'too-few' ? 'error' : 'warning'),
+  fixes: (fact) =>
+    fact.why === 'too-many'
+      ? [{ title: `Remove ${quoted(fact.extra)}`, preferred: true, edits: [{ place: fact.line, newText: '' }] }]
+      : [],
   message: (fact) => {
     if (fact.why === 'too-few') {
       const { name, given } = fact;

@@ -1,6 +1,7 @@
 // What the evaluation has to say of seas: variants of `Fact`, for facts.ts alone.
 
 import type { Quantity } from '../core/quantity/quantity.ts';
+import type { Place } from './place.ts';
 
 export type SeaFact =
   /** A sea whose constants are extrapolated (`beyond`: those, with their ranges), or for which there are none. */
@@ -24,6 +25,8 @@ export type SeaFact =
       readonly why: 'too-many';
       readonly taken: readonly string[];
       readonly extra: string;
+      /** Its whole line. */
+      readonly line: Place;
       readonly written: Quantity;
       readonly worked: Quantity | null;
       readonly unit: string;

@@ -61,7 +61,7 @@ export const seaMethods: Readonly<Record<SeaMethodId, MethodText>> = {
     equation: 'τ = (h / k) (∂C/∂[CO₂] at constant A); k = 0.251 U² (Sc/660)^−½ cm/h',
     symbols:
       'h depth of the layer, k transfer velocity, C dissolved inorganic carbon, A total alkalinity, U wind speed in m/s, Sc Schmidt number',
-    validity: 'An open, even layer at winds of 3 to 15 m/s; ± 20 % in the transfer velocity.',
+    validity: 'An open, even layer at winds of 3 to 15 m/s; the transfer velocity itself is known to 20 %.',
   },
   'mixed-layer-share': {
     words: 'Water that leaves the layer at random, on average after its residence, has settled so far.',

@@ -19,7 +19,12 @@ import {
 } from '../../core/account/sea/delivery.ts';
 import { pressureAtDepthBar, seaDensityKgPerM3 } from '../../core/account/sea/density.ts';
 import { fugacityCoefficient, partialPressureOfDryShareAtm } from '../../core/account/sea/fugacity.ts';
-import { settlingTimeS, shareReached, transferVelocityMPerS } from '../../core/account/sea/gas-exchange.ts';
+import {
+  settlingTimeS,
+  shareReached,
+  transferVelocityMPerS,
+  transferVelocityUncertainty,
+} from '../../core/account/sea/gas-exchange.ts';
 import { solvePair, type CarbonateVariable, type PairSolution } from '../../core/account/sea/solve-pair.ts';
 import { celsiusZeroK, standardAtmospherePa } from '../../core/quantity/constants.ts';
 import { dimensionless } from '../../core/quantity/dimension.ts';
@@ -113,6 +118,7 @@ export type SeaKey =
   | 'mixed-layer'
   | 'wind'
   | 'residence'
+  | 'transfer velocity'
   | DeliveredForm
   | `constant ${string}`;
 
@@ -145,6 +151,8 @@ export function withConstants(inputs: ReadonlyMap<SeaKey, Quantity>): ReadonlyMa
     const parts = new Map([[constantInput(constant), constantUncertainty[constant]]]);
     all.set(`constant ${constant}`, quantityOf(0, dimensionless, parts));
   }
+  const transfer = new Map([[constantInput('transfer velocity'), transferVelocityUncertainty]]);
+  if (inputs.has('wind')) all.set('transfer velocity', quantityOf(0, dimensionless, transfer));
   return all;
 }
 
@@ -180,7 +188,7 @@ export function solveSea(question: SeaQuestion, valueOf: (key: SeaKey) => number
   const dilution = valueOf('dilution');
   const nearField =
     state && effluent && dilution !== undefined ? respondTo(state, dilutedDelivery(effluent, dilution)) : null;
-  const settlingS = state && settling(state, temperatureK - celsiusZeroK, valueOf('mixed-layer'), valueOf('wind'));
+  const settlingS = state && settling(state, temperatureK - celsiusZeroK, valueOf);
   const residenceS = valueOf('residence');
   return {
     water,
@@ -196,12 +204,10 @@ export function solveSea(question: SeaQuestion, valueOf: (key: SeaKey) => number
   };
 }
 
-function settling(
-  state: CarbonateState,
-  celsius: number,
-  layerM: number | undefined,
-  windMPerS: number | undefined,
-): number | null {
+function settling(state: CarbonateState, celsius: number, valueOf: (key: SeaKey) => number | undefined): number | null {
+  const layerM = valueOf('mixed-layer');
+  const windMPerS = valueOf('wind');
   if (layerM === undefined || windMPerS === undefined) return null;
-  return settlingTimeS(layerM, transferVelocityMPerS(windMPerS, celsius), carbonPerDioxide(state));
+  const velocity = transferVelocityMPerS(windMPerS, celsius) * Math.exp(valueOf('transfer velocity') ?? 0);
+  return settlingTimeS(layerM, velocity, carbonPerDioxide(state));
 }

@@ -23,7 +23,10 @@ const density = 'Unesco technical papers in marine science 36 (1981): equation o
 const pressure = 'Saunders 1981: pressure by depth, at a latitude of 45 degrees';
 const pressed = 'Millero 1995, with its errata: constants under pressure';
 const solids = 'Mucci 1983: solubility of calcite and aragonite';
-const wind = 'Wanninkhof 2014: gas exchange by wind, and Schmidt numbers';
+const wind = 'Wanninkhof 2014: gas exchange by wind, its uncertainty, and Schmidt numbers';
+const uptake =
+  'Schulz, Bach and Dickson 2023: uptake by alkalinity; published as 0.84 mol/mol in the mean of the ocean';
+const times = 'Ringham et al. 2024: settling in weeks to months, measured';
 
 /** The working of each row. */
 export function seaWorking(question: SeaQuestion, read: SeaRead, context: Context): (row: Row) => Working {
@@ -38,7 +41,7 @@ export function seaWorking(question: SeaQuestion, read: SeaRead, context: Contex
       return { method, inputs: own, sources: method === 'sea-density' ? [density, ...deep] : deep, assumptions: [] };
     }
     const constants = method === 'effluent-sums' ? [] : [guide, carbonic, boron, uncertainty];
-    const more = method === 'saturation-state' ? [solids] : needs === 'layer' || needs === 'residence' ? [wind] : [];
+    const more = moreSources(method, needs);
     return {
       method,
       inputs: own,
@@ -46,6 +49,12 @@ export function seaWorking(question: SeaQuestion, read: SeaRead, context: Contex
       assumptions: assumptionsOf(method, question),
     };
   };
+}
+
+function moreSources(method: MethodId, needs: SeaNeed): readonly string[] {
+  if (method === 'saturation-state') return [solids];
+  if (method === 'uptake-efficiency' || method === 'equilibrium-uptake') return [uptake, times];
+  return needs === 'layer' || needs === 'residence' ? [wind, times] : [];
 }
 
 const waterKeys: readonly SeaKey[] = ['salinity', 'temperature', 'depth'];

@@ -4,6 +4,9 @@
 // Sources: Wanninkhof 2014 (Limnol. Oceanogr. Methods 12, 351): k = 0.251 U² (Sc/660)^-1/2, cm/h, and Schmidt numbers in sea
 // water of salinity 35, -2 to 40 °C; Jones et al. 2014 (Global Biogeochem. Cycles 28, 1163) for times of months.
 
+/** Standard uncertainty of the natural logarithm of the transfer velocity (Wanninkhof 2014: 20 %). */
+export const transferVelocityUncertainty = 0.2;
+
 /** Schmidt number of CO2 in sea water. */
 export function carbonDioxideSchmidtNumber(celsius: number): number {
   return 2116.8 - 136.25 * celsius + 4.7353 * celsius ** 2 - 0.092307 * celsius ** 3 + 0.0007555 * celsius ** 4;

@@ -202,6 +202,8 @@ describe('an effluent', () => {
     // Weeks to months.
     expect(time).toBeGreaterThan(30);
     expect(time).toBeLessThan(365);
+    // The transfer velocity is known to 20 %.
+    expect((uncertaintyOf(scenario, 'one', 'settling-time') ?? NaN) / time).toBeCloseTo(0.2, 1);
     expect(figureOf(scenario, 'one', 'mixed-layer-share')).toBeCloseTo(200 / (200 + time), 12);
   });
 });
