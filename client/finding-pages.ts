@@ -2,7 +2,18 @@
 // the rest, both shown from the installed extension, so that they open without a network.
 // Knows no code: a page's heading is the code itself. Invariant: a finding keeps its code's text. Source of the headings'
 // addresses: the slugs of VS Code's Markdown preview (lower case, marks dropped, blanks to hyphens).
-import { commands, Uri, type Diagnostic, type Disposable } from 'vscode';
+import {
+  commands,
+  Position,
+  Range,
+  Selection,
+  TextEditorRevealType,
+  Uri,
+  window,
+  workspace,
+  type Diagnostic,
+  type Disposable,
+} from 'vscode';
 import type { Middleware } from 'vscode-languageclient/node';
 
 const SHOW_PAGE = 'stokehold.showFindingPage';
@@ -28,14 +39,25 @@ function linked(code: string): NonNullable<Diagnostic['code']> {
 export function registerFindingPages(extension: Uri): Disposable {
   return commands.registerCommand(SHOW_PAGE, async (code: unknown) => {
     const text = typeof code === 'string' ? code : '';
-    const page = Uri.joinPath(extension, 'examples', 'reference', pageOf(text)).with({ fragment: headingOf(text) });
-    // An editor without the preview shows the page's text.
+    const page = Uri.joinPath(extension, 'examples', 'reference', pageOf(text));
     const known = await commands.getCommands(true);
-    await commands.executeCommand(
-      known.includes('markdown.showPreview') ? 'markdown.showPreview' : 'vscode.open',
-      page,
-    );
+    if (known.includes(SHOW_PREVIEW)) {
+      await commands.executeCommand(SHOW_PREVIEW, page.with({ fragment: headingOf(text) }));
+    } else await showText(page, text);
   });
+}
+
+const SHOW_PREVIEW = 'markdown.showPreview';
+
+/** An editor without the preview shows the page's text, from the code's heading on. */
+async function showText(page: Uri, code: string): Promise<void> {
+  const document = await workspace.openTextDocument(page);
+  const lines = document.getText().split(/\r?\n/);
+  const heading = lines.findIndex((line) => line.startsWith('## ') && line.replaceAll('`', '') === `## ${code}`);
+  const editor = await window.showTextDocument(document);
+  const start = new Position(Math.max(0, heading), 0);
+  editor.selection = new Selection(start, start);
+  editor.revealRange(new Range(start, start), TextEditorRevealType.AtTop);
 }
 
 function pageOf(code: string): string {

@@ -47,6 +47,7 @@ const RANKS: ReadonlyMap<string, number> = new Map(
     'higher-heating-value',
     'stoichiometric-air',
     'density',
+    'flash-point',
     'carbon-factor',
     'biogenic-carbon-share',
     'volumetric-lower-heating-value',

@@ -76,6 +76,11 @@ test("a hazard's code leads to its page, which is in the installed extension", a
   const tab = await eventually('the page', () =>
     vscode.window.tabGroups.all.flatMap(({ tabs }) => tabs).find(({ label }) => label.includes('hazards.md')),
   );
+  // Without a preview it is the page's text, at the heading.
+  const shown = vscode.window.activeTextEditor;
+  if (shown?.document.uri.path.endsWith('hazards.md')) {
+    assert.equal(shown.document.lineAt(shown.selection.active.line).text, '## `hazard/water-reactive`');
+  }
   await vscode.window.tabGroups.close(tab);
 });
 
