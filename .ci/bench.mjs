@@ -6,6 +6,7 @@ import { mkdtempSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
 import { build } from 'esbuild';
+import { jsonAsText } from './json-text.mjs';
 
 const root = path.resolve(import.meta.dirname, '..');
 process.chdir(root);
@@ -75,6 +76,7 @@ async function bundle(source, name, options) {
     platform: 'node',
     target: 'node20',
     logLevel: 'error',
+    plugins: [jsonAsText],
     // Packages in CommonJS look for `require`, which a module does not have by itself. Where a package has modules too,
     // they are taken: not every other form of one can be bundled.
     ...(options.format === 'esm'

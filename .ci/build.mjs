@@ -4,6 +4,7 @@
 import { existsSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { build } from 'esbuild';
+import { jsonAsText } from './json-text.mjs';
 
 const root = path.resolve(import.meta.dirname, '..');
 const minify = process.argv.includes('--minify');
@@ -33,6 +34,7 @@ for (const { source, bundle, readable, banner } of programs) {
     format: 'cjs',
     target: 'node20',
     external: ['vscode'],
+    plugins: [jsonAsText],
     minify: minify && !readable,
     legalComments: 'none',
     ...(banner ? { banner: { js: banner } } : {}),

@@ -66,12 +66,13 @@ function run<Node>(tokens: Token[], rule: () => Node): Outcome<Node> {
   };
 }
 
-class LineParser extends EmbeddedActionsParser {
-  constructor() {
+/** The grammar is checked for ambiguities by a test, and not again whenever a program starts. */
+export class LineParser extends EmbeddedActionsParser {
+  constructor(skipValidations = true) {
     // Our own words come from messages.ts, so the library need not compose any.
     const silent = { buildMismatchTokenMessage: noWords, buildNotAllInputParsedMessage: noWords };
     const errorMessageProvider = { ...silent, buildNoViableAltMessage: noWords, buildEarlyExitMessage: noWords };
-    super(t.parserTypes, { recoveryEnabled: false, maxLookahead: 2, errorMessageProvider });
+    super(t.parserTypes, { recoveryEnabled: false, maxLookahead: 2, errorMessageProvider, skipValidations });
     this.performSelfAnalysis();
   }
 
