@@ -18,8 +18,6 @@ export function doubtOf(
   switch (refusal.reason) {
     case 'not-converged':
       return `not converged: ${refusal.detail}`;
-    case 'stopped':
-      return 'stopped, and nobody asked for it';
     case 'not-finite': {
       const isInRange = ([name, value]: [string, unknown]): boolean =>
         typeof value !== 'number' ||

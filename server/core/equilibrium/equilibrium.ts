@@ -99,5 +99,5 @@ export type NoEquilibrium =
       readonly side: 'below' | 'above';
       readonly limitK: number;
     }
-  | { readonly kind: 'none'; readonly reason: 'nothing' | 'no-gas' | 'not-finite' | 'stopped' }
+  | { readonly kind: 'none'; readonly reason: 'nothing' | 'no-gas' | 'not-finite' }
   | { readonly kind: 'none'; readonly reason: 'not-converged'; readonly detail: string };
