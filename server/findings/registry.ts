@@ -21,21 +21,31 @@ import { balanceProducts } from './balance-products.ts';
 import { balanceShares } from './balance-shares.ts';
 import { balanceTwoRests } from './balance-two-rests.ts';
 import { balanceWaterMissing } from './balance-water-missing.ts';
+import { engineBasicAttack } from './engine-basic-attack.ts';
+import { engineBoilerHeat } from './engine-boiler-heat.ts';
 import { engineCompressionRatio } from './engine-compression-ratio.ts';
+import { engineDeposits } from './engine-deposits.ts';
 import { engineFiringPressure } from './engine-firing-pressure.ts';
+import { engineHotCorrosion } from './engine-hot-corrosion.ts';
+import { engineKnock } from './engine-knock.ts';
+import { engineMeasuredFuel } from './engine-measured-fuel.ts';
+import { engineMeasuredRange } from './engine-measured-range.ts';
+import { engineMisfire } from './engine-misfire.ts';
+import { engineNoCycle } from './engine-no-cycle.ts';
+import { engineNoIdle } from './engine-no-idle.ts';
+import { engineNoPlant } from './engine-no-plant.ts';
+import { engineNoStandardFuel } from './engine-no-standard-fuel.ts';
+import { engineOverload } from './engine-overload.ts';
+import { enginePressureRatio } from './engine-pressure-ratio.ts';
+import { engineRepeatedLoad } from './engine-repeated-load.ts';
+import { engineSteamStates } from './engine-steam-states.ts';
+import { engineTurbineInlet } from './engine-turbine-inlet.ts';
+import { engineTurbineSolids } from './engine-turbine-solids.ts';
+import { engineWetSteam } from './engine-wet-steam.ts';
 import { dutyLegName } from './duty-leg-name.ts';
 import { dutySpeed } from './duty-speed.ts';
 import { dutyTestCycle } from './duty-test-cycle.ts';
 import { dutyUnused } from './duty-unused.ts';
-import { engineKnock } from './engine-knock.ts';
-import { engineMeasuredFuel } from './engine-measured-fuel.ts';
-import { engineMeasuredRange } from './engine-measured-range.ts';
-import { engineNoIdle } from './engine-no-idle.ts';
-import { engineOverload } from './engine-overload.ts';
-import { engineMisfire } from './engine-misfire.ts';
-import { engineNoCycle } from './engine-no-cycle.ts';
-import { engineNoStandardFuel } from './engine-no-standard-fuel.ts';
-import { engineRepeatedLoad } from './engine-repeated-load.ts';
 import { expectFailed } from './expect-failed.ts';
 import type { Finding } from './finding.ts';
 import { hazardRules } from './hazard.ts';
@@ -168,21 +178,31 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'range/cold-charge': rangeColdCharge,
   'range/real-gas': rangeRealGas,
   ...hazardRules,
+  'engine/basic-attack': engineBasicAttack,
+  'engine/boiler-heat': engineBoilerHeat,
   'engine/compression-ratio': engineCompressionRatio,
+  'engine/deposits': engineDeposits,
   'engine/firing-pressure': engineFiringPressure,
+  'engine/hot-corrosion': engineHotCorrosion,
+  'engine/knock': engineKnock,
+  'engine/measured-fuel': engineMeasuredFuel,
+  'engine/measured-range': engineMeasuredRange,
+  'engine/misfire': engineMisfire,
+  'engine/no-cycle': engineNoCycle,
+  'engine/no-idle': engineNoIdle,
+  'engine/no-plant': engineNoPlant,
+  'engine/no-standard-fuel': engineNoStandardFuel,
+  'engine/overload': engineOverload,
+  'engine/pressure-ratio': enginePressureRatio,
+  'engine/repeated-load': engineRepeatedLoad,
+  'engine/steam-states': engineSteamStates,
+  'engine/turbine-inlet': engineTurbineInlet,
+  'engine/turbine-solids': engineTurbineSolids,
+  'engine/wet-steam': engineWetSteam,
   'duty/leg-name': dutyLegName,
   'duty/speed': dutySpeed,
   'duty/test-cycle': dutyTestCycle,
   'duty/unused': dutyUnused,
-  'engine/measured-fuel': engineMeasuredFuel,
-  'engine/measured-range': engineMeasuredRange,
-  'engine/no-idle': engineNoIdle,
-  'engine/overload': engineOverload,
-  'engine/no-cycle': engineNoCycle,
-  'engine/knock': engineKnock,
-  'engine/misfire': engineMisfire,
-  'engine/no-standard-fuel': engineNoStandardFuel,
-  'engine/repeated-load': engineRepeatedLoad,
   'expect/failed': expectFailed,
   'kind/suspended': kindSuspended,
   'kind/not-evaluated': kindNotEvaluated,

@@ -13,6 +13,7 @@ import type { Quantity } from '../core/quantity/quantity.ts';
 import type { CycleFact } from './cycle-facts.ts';
 import type { HazardFact } from './hazard-fact.ts';
 import type { Place } from './place.ts';
+import type { PlantFact } from './plant-facts.ts';
 import type { PortionState } from './portion-state.ts';
 import type { SeaFact } from './sea-fact.ts';
 import type { WorkFact } from './work-facts.ts';
@@ -23,6 +24,7 @@ export type Fact =
   | SeaFact
   | WorkFact
   | CycleFact
+  | PlantFact
   /** A word stands for nothing. `what` says what was looked for. */
   | {
       readonly code: 'name/unknown';

@@ -4,6 +4,7 @@
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { CycleAssumptionId, CycleMethodId } from './cycle-methods.ts';
 import type { Place } from './place.ts';
+import type { PlantAssumptionId, PlantMethodId } from './plant-methods.ts';
 import type { SeaAssumptionId, SeaMethodId } from './sea-methods.ts';
 import type { WorkAssumptionId, WorkMethodId } from './work-methods.ts';
 
@@ -28,6 +29,7 @@ export interface WorkingInput {
 export type MethodId =
   | WorkMethodId
   | CycleMethodId
+  | PlantMethodId
   | SeaMethodId
   | 'as-given'
   | 'molar-mass'
@@ -81,6 +83,7 @@ export type MethodId =
 export type AssumptionId =
   | WorkAssumptionId
   | CycleAssumptionId
+  | PlantAssumptionId
   | SeaAssumptionId
   | 'reference-state'
   | 'ideal-mixing-enthalpy'

@@ -4,6 +4,7 @@
 
 import type { AssumptionId } from '../scenario/working.ts';
 import { cycleAssumptions } from './cycle-methods.ts';
+import { plantAssumptions } from './plant-methods.ts';
 import { seaAssumptions } from './sea-methods.ts';
 import { workAssumptions } from './work-methods.ts';
 
@@ -15,6 +16,7 @@ export function assumptionText(assumption: AssumptionId): string {
 const assumptions: Readonly<Record<AssumptionId, string>> = {
   ...workAssumptions,
   ...cycleAssumptions,
+  ...plantAssumptions,
   ...seaAssumptions,
   'reference-state': 'Everything starts and ends at the reference state, 25 °C and 1 bar.',
   'ideal-mixing-enthalpy': 'Mixing the portions sets no heat free and takes none up.',

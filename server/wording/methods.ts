@@ -6,6 +6,7 @@
 import type { MethodId } from '../scenario/working.ts';
 import type { MethodText } from './method-text.ts';
 import { cycleMethods } from './cycle-methods.ts';
+import { plantMethods } from './plant-methods.ts';
 import { seaMethods } from './sea-methods.ts';
 import { workMethods } from './work-methods.ts';
 
@@ -17,6 +18,7 @@ export function methodText(method: MethodId): MethodText {
 const methods: Readonly<Record<MethodId, MethodText>> = {
   ...workMethods,
   ...cycleMethods,
+  ...plantMethods,
   ...seaMethods,
   'as-given': {
     words: 'Taken as it is given.',

@@ -6,12 +6,12 @@ import type { Definition } from '../../../grammar/tree.ts';
 import { reportFuelHazards } from '../blend-hazards.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
-import { consumptionFigures } from '../engine-consumption.ts';
-import { lazily } from '../lazily.ts';
 import { evaluateCycle } from './engine-cycle.ts';
-import { pistonFigures } from './engine-cycle-figures.ts';
 import { engineEntries, type CycleWord, type EngineAsked, type EngineWay } from './engine-entries.ts';
+import { engineFigures } from './engine-figures.ts';
 import { evaluateMeasured } from './engine-measured.ts';
+import { evaluateSteam } from './engine-steam.ts';
+import { evaluateTurbine } from './engine-turbine.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 /** The way of each cycle; null for one that is not worked out yet. */
@@ -19,16 +19,11 @@ const cycles: Readonly<Record<CycleWord, EngineWay | null>> = {
   otto: evaluateCycle,
   diesel: evaluateCycle,
   dual: evaluateCycle,
-  brayton: null,
-  rankine: null,
+  brayton: evaluateTurbine,
+  rankine: evaluateSteam,
 };
 
-const evaluated: EvaluatedKind = {
-  entries: engineEntries,
-  lines: [],
-  figures: [...consumptionFigures, ...pistonFigures],
-  evaluate,
-};
+const evaluated: EvaluatedKind = { entries: engineEntries, lines: [], figures: engineFigures, evaluate };
 
 export const engine: Kind = {
   kind: 'engine',
@@ -42,7 +37,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const asked: EngineAsked = { read, broken, definition, context };
   const pilot = read.pilot && { value: read.pilot.value.fuel, entry: read.pilot.entry };
   const screening = reportFuelHazards(definition, [read.fuel, pilot], context);
-  return lazily(answerOf(asked), { screening: () => screening });
+  // The answer works its own fields out when they are read; this one is there already.
+  return Object.defineProperty(answerOf(asked), 'screening', { value: screening, enumerable: true });
 }
 
 function answerOf(asked: EngineAsked): KindAnswer {

@@ -2,11 +2,13 @@
 // which of them are no errors.
 import type { Fact } from '../../../server/scenario/facts.ts';
 import { CYCLE_MILD, CYCLE_ROWS } from './cycle-messages.ts';
+import { PLANT_MILD, PLANT_ROWS } from './plant-messages.ts';
 import { DUTY_MILD, DUTY_ROWS } from './duty-messages.ts';
 import { quantity } from '../../support/scenario-builder.ts';
 
 export const WORK_ROWS: readonly (readonly [Fact, string])[] = [
   ...CYCLE_ROWS,
+  ...PLANT_ROWS,
   ...DUTY_ROWS,
   [
     { code: 'engine/repeated-load', load: quantity(0.5, '1') },
@@ -23,4 +25,9 @@ export const WORK_ROWS: readonly (readonly [Fact, string])[] = [
   ],
 ];
 
-export const WORK_MILD: readonly string[] = [...CYCLE_MILD, ...DUTY_MILD, 'warning engine/measured-fuel'];
+export const WORK_MILD: readonly string[] = [
+  ...CYCLE_MILD,
+  ...PLANT_MILD,
+  ...DUTY_MILD,
+  'warning engine/measured-fuel',
+];

@@ -4,7 +4,7 @@
 // Knows no flows. Invariant: entropy never falls along a section.
 // Source: isentropic efficiency of a turbine as in any thermodynamics text; properties water.ts.
 
-import type { NoSteamCycle, SteamCycleInput, SteamPoint } from './steam-cycle.ts';
+import type { NoSteamCycle, SteamCycleInput, SteamPoint } from './steam-question.ts';
 import { waterAt, waterAtEnthalpy, waterAtEntropy } from './water.ts';
 import type { WaterState } from './water.ts';
 

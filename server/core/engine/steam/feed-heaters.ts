@@ -6,7 +6,7 @@
 
 import { findZero } from '../../equilibrium/bracket.ts';
 import { waterSaturationPressurePa } from '../../substance/water-saturation.ts';
-import type { NoSteamCycle, SteamCycleInput } from './steam-cycle.ts';
+import type { NoSteamCycle, SteamCycleInput } from './steam-question.ts';
 import { saturatedWater, waterAtEnthalpy, waterAtEntropy, waterRange } from './water.ts';
 import type { WaterState } from './water.ts';
 

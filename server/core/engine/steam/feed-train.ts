@@ -5,7 +5,7 @@
 
 import type { ExpansionLine } from './expansion-line.ts';
 import { pumped } from './feed-heaters.ts';
-import type { NoSteamCycle, SteamCycleInput, SteamStatePoint } from './steam-cycle.ts';
+import type { NoSteamCycle, SteamCycleInput, SteamStatePoint } from './steam-question.ts';
 import { saturatedWater } from './water.ts';
 import type { WaterState } from './water.ts';
 

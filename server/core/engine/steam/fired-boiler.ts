@@ -6,12 +6,13 @@
 // Source: boiler efficiency by indirect method, losses over heating value, as in EN 12952-15; here with the products' own
 // enthalpies (burn/) in place of mean heat capacities.
 
-import type { Burn, BurnFault, BurnInput, BurnState, Charge, NoState } from '../../burn/burn.ts';
+import type { Burn, BurnFault, BurnInput, BurnState, Charge, FrozenState, NoState } from '../../burn/burn.ts';
 import { chargeOf } from '../../burn/charge.ts';
 import { frozenState } from '../../burn/frozen-state.ts';
 import { prepareBurn } from '../../burn/prepare-burn.ts';
 import type { Equilibrium } from '../../equilibrium/equilibrium.ts';
 import { referenceTemperatureK } from '../../substance/substance.ts';
+import { latentHeat } from '../loss-tree.ts';
 
 export interface FiredBoilerInput {
   /** Fuel, oxidant and its amount (for the whole fuel), pressure, and what may form; the rest follows. */
@@ -42,15 +43,16 @@ export interface FiredBoiler {
   readonly steamHeatJ: number;
   readonly wallLossJ: number;
   readonly unburntJ: number;
-  /** Sensible heat of what leaves, above 25 °C. */
-  readonly stackHeatJ: number;
+  /** Sensible heat of what leaves, above 25 °C; and latent heat of vapours of metals and salts in it (loss-tree.ts). */
+  readonly exhaustSensibleJ: number;
+  readonly exhaustLatentJ: number;
   /**
-   * What the products at 25 °C hold above those of complete combustion that the heating value is taken on; negative where more
-   * is released than that (carbonate instead of hydroxide, water condensed).
+   * What the products at 25 °C hold besides above those of complete combustion that the heating value is taken on; negative
+   * where more is released than that (carbonate instead of hydroxide, water condensed).
    */
-  readonly compositionJ: number;
+  readonly exhaustChemicalJ: number;
   /** Sensible heat that fuel and oxidant bring in above 25 °C; negative where they are colder. */
-  readonly preheatJ: number;
+  readonly broughtInJ: number;
   /** Heat that the gas gives to the steam above a temperature of its own, walls served first. */
   readonly heatAboveJ: (gasTemperatureK: number) => number | NoState;
 }
@@ -91,7 +93,8 @@ export function firedBoiler(input: FiredBoilerInput): FiredBoiler | NoBoiler {
   }
   const { chargeJ, referenceJ, preheatJ } = energies;
   const fuelPreheatJ = (input.burn.fuel.enthalpyJPerKg ?? 0) - (input.burn.fuel.referenceEnthalpyJPerKg ?? 0);
-  const coldJ = coldEnthalpyJ(stack, pressurePa);
+  const cold = coldStack(stack, pressurePa);
+  const latentJ = latentHeat(cold);
   const wallLossJ = wallLossShare * lowerHeatingValueJPerKg;
   const steamHeatJ = completeness * (chargeJ - stack.enthalpyJ) - wallLossJ;
   if (!(steamHeatJ > 0)) return { kind: 'none', reason: 'no-heat' };
@@ -106,9 +109,10 @@ export function firedBoiler(input: FiredBoilerInput): FiredBoiler | NoBoiler {
     steamHeatJ,
     wallLossJ,
     unburntJ: (1 - completeness) * lowerHeatingValueJPerKg,
-    stackHeatJ: completeness * (stack.enthalpyJ - coldJ) + (1 - completeness) * fuelPreheatJ,
-    compositionJ: completeness * (coldJ - referenceJ + lowerHeatingValueJPerKg),
-    preheatJ,
+    exhaustSensibleJ: completeness * (stack.enthalpyJ - cold.enthalpyJ) + (1 - completeness) * fuelPreheatJ,
+    exhaustLatentJ: completeness * latentJ,
+    exhaustChemicalJ: completeness * (cold.enthalpyJ - referenceJ + lowerHeatingValueJPerKg - latentJ),
+    broughtInJ: preheatJ,
     heatAboveJ: (gasTemperatureK) => {
       const state = burn.at(gasTemperatureK);
       return state.kind === 'none' ? state : completeness * (chargeJ - state.enthalpyJ) - wallLossJ;
@@ -128,7 +132,7 @@ function energiesOf(
 }
 
 /** What left the stack, brought to 25 °C as it is. */
-function coldEnthalpyJ(stack: BurnState, pressurePa: number): number {
+function coldStack(stack: BurnState, pressurePa: number): FrozenState {
   const from = stack.kind === 'frozen' ? stack.from : stack;
-  return frozenState(from, referenceTemperatureK, { pressurePa }).enthalpyJ;
+  return frozenState(from, referenceTemperatureK, { pressurePa });
 }

@@ -6,7 +6,7 @@ import type { BurnFault, NoState } from '../../burn/burn.ts';
 import { firedBoiler } from './fired-boiler.ts';
 import type { FiredBoiler, FiredBoilerInput, NoBoiler } from './fired-boiler.ts';
 import { steamCycle } from './steam-cycle.ts';
-import type { NoSteamCycle, SteamCycle, SteamCycleInput } from './steam-cycle.ts';
+import type { NoSteamCycle, SteamCycle, SteamCycleInput } from './steam-question.ts';
 import { saturatedWater } from './water.ts';
 
 export interface SteamPlantInput {
@@ -25,7 +25,7 @@ export interface SteamPlant {
   readonly netWorkJ: number;
   readonly brakeWorkJ: number;
   /** Adding up to the lower heating value. What is brought in above 25 °C counts negative. */
-  readonly balance: readonly SteamPlantTerm[];
+  readonly losses: readonly SteamPlantLoss[];
   /** Heat in the steam over the lower heating value. */
   readonly boilerEfficiency: number;
   readonly cycleEfficiency: number;
@@ -40,10 +40,20 @@ export interface SteamPlant {
     | null;
 }
 
-export interface SteamPlantTerm {
-  readonly term:
-    'brake-work' | 'friction' | 'condenser' | 'exhaust-heat' | 'walls' | 'unburnt' | 'composition' | 'preheat';
-  readonly energyJ: number;
+/** As the losses of a cycle with pistons (loss-tree.ts), and what the condenser carries off. */
+export interface SteamPlantLoss {
+  readonly id:
+    | 'brake-work'
+    | 'friction'
+    | 'condenser-heat'
+    | 'wall-heat'
+    | 'exhaust-sensible'
+    | 'exhaust-latent'
+    | 'exhaust-chemical'
+    | 'unburnt-fuel'
+    | 'brought-in';
+  readonly joulePerKg: number;
+  readonly share: number;
 }
 
 export type NoSteamPlant =
@@ -64,6 +74,17 @@ export function steamPlant(input: SteamPlantInput): SteamPlant | NoSteamPlant {
   const steamKgPerKg = boiler.steamHeatJ / (cycle.boilerHeatJ + cycle.reheatJ);
   const netWorkJ = steamKgPerKg * (cycle.turbineWorkJ - cycle.pumpWorkJ);
   const brakeWorkJ = mechanicalEfficiency * netWorkJ;
+  const rows: readonly (readonly [SteamPlantLoss['id'], number])[] = [
+    ['brake-work', brakeWorkJ],
+    ['friction', netWorkJ - brakeWorkJ],
+    ['condenser-heat', steamKgPerKg * cycle.condenserHeatJ],
+    ['wall-heat', boiler.wallLossJ],
+    ['exhaust-sensible', boiler.exhaustSensibleJ],
+    ['exhaust-latent', boiler.exhaustLatentJ],
+    ['exhaust-chemical', boiler.exhaustChemicalJ],
+    ['unburnt-fuel', boiler.unburntJ],
+    ['brought-in', -boiler.broughtInJ],
+  ];
   return {
     kind: 'steam-plant',
     boiler,
@@ -71,16 +92,7 @@ export function steamPlant(input: SteamPlantInput): SteamPlant | NoSteamPlant {
     steamKgPerKg,
     netWorkJ,
     brakeWorkJ,
-    balance: [
-      { term: 'brake-work', energyJ: brakeWorkJ },
-      { term: 'friction', energyJ: netWorkJ - brakeWorkJ },
-      { term: 'condenser', energyJ: steamKgPerKg * cycle.condenserHeatJ },
-      { term: 'exhaust-heat', energyJ: boiler.stackHeatJ },
-      { term: 'walls', energyJ: boiler.wallLossJ },
-      { term: 'unburnt', energyJ: boiler.unburntJ },
-      { term: 'composition', energyJ: boiler.compositionJ },
-      { term: 'preheat', energyJ: -boiler.preheatJ },
-    ],
+    losses: rows.map(([id, joulePerKg]) => ({ id, joulePerKg, share: joulePerKg / lowerHeatingValueJPerKg })),
     boilerEfficiency: boiler.steamHeatJ / lowerHeatingValueJPerKg,
     cycleEfficiency: cycle.efficiency,
     brakeEfficiency: brakeWorkJ / lowerHeatingValueJPerKg,

@@ -4,7 +4,11 @@ import { describe, expect, test } from 'vitest';
 import textbook from '../../../../reference/steam-cycles-textbook.json' with { type: 'json' };
 import { pumped } from '../../../../../server/core/engine/steam/feed-heaters.ts';
 import { steamCycle } from '../../../../../server/core/engine/steam/steam-cycle.ts';
-import type { NoSteamCycle, SteamCycle, SteamCycleInput } from '../../../../../server/core/engine/steam/steam-cycle.ts';
+import type {
+  NoSteamCycle,
+  SteamCycle,
+  SteamCycleInput,
+} from '../../../../../server/core/engine/steam/steam-question.ts';
 import { saturatedWater } from '../../../../../server/core/engine/steam/water.ts';
 
 const plain: SteamCycleInput = {

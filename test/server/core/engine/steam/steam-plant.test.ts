@@ -69,24 +69,24 @@ describe('the balance', () => {
     ],
   ];
   test.each(cases)('adds up to the lower heating value: %s', (_name, input) => {
-    const { balance, brakeWorkJ, brakeEfficiency } = plantOf(input);
-    const sumJ = balance.reduce((sum, { energyJ }) => sum + energyJ, 0);
+    const { losses, brakeWorkJ, brakeEfficiency } = plantOf(input);
+    const sumJ = losses.reduce((sum, { joulePerKg }) => sum + joulePerKg, 0);
     expect(Math.abs(sumJ / input.boiler.lowerHeatingValueJPerKg - 1)).toBeLessThan(1e-9);
     expect(brakeWorkJ / input.boiler.lowerHeatingValueJPerKg).toBe(brakeEfficiency);
   });
 
   test('the stack and the composition say where a loss is', () => {
     const term = (plant: SteamPlant, name: string): number =>
-      plant.balance.find(({ term: one }) => one === name)?.energyJ ?? Number.NaN;
+      plant.losses.find(({ id }) => id === name)?.joulePerKg ?? Number.NaN;
     const lean = plantOf(inputOf(methane, 1.1));
     // Complete combustion leaves nothing but traces; a rich one leaves carbon monoxide and hydrogen.
-    expect(Math.abs(term(lean, 'composition') / inputOf(methane, 1.1).boiler.lowerHeatingValueJPerKg)).toBeLessThan(
-      1e-4,
-    );
+    expect(
+      Math.abs(term(lean, 'exhaust-chemical') / inputOf(methane, 1.1).boiler.lowerHeatingValueJPerKg),
+    ).toBeLessThan(1e-4);
     const rich = plantOf(inputOf(gasOil, 0.8));
-    expect(term(rich, 'composition') / inputOf(gasOil, 0.8).boiler.lowerHeatingValueJPerKg).toBeGreaterThan(0.1);
+    expect(term(rich, 'exhaust-chemical') / inputOf(gasOil, 0.8).boiler.lowerHeatingValueJPerKg).toBeGreaterThan(0.1);
     // Condensing gives back latent heat beyond the lower heating value.
-    expect(term(plantOf(inputOf(methane, 1.05, { stackTemperatureK: 300 })), 'composition')).toBeLessThan(-3e6);
+    expect(term(plantOf(inputOf(methane, 1.05, { stackTemperatureK: 300 })), 'exhaust-chemical')).toBeLessThan(-3e6);
   });
 });
 
