@@ -38,6 +38,8 @@ export interface CompletionAbilities {
   readonly insertReplace: boolean;
   readonly labelDetails: boolean;
   readonly markdown: boolean;
+  /** Takes the range of most items once, with the list. */
+  readonly defaultRange: boolean;
   /** The command of the client that opens the list again, as it said in the initialization options. */
   readonly suggestCommand: string | null;
 }
@@ -57,6 +59,7 @@ export function abilitiesOf(params: unknown): Abilities {
       insertReplace: has('textDocument', 'completion', 'completionItem', 'insertReplaceSupport'),
       labelDetails: has('textDocument', 'completion', 'completionItem', 'labelDetailsSupport'),
       markdown: list('textDocument', 'completion', 'completionItem', 'documentationFormat').includes('markdown'),
+      defaultRange: list('textDocument', 'completion', 'completionList', 'itemDefaults').includes('editRange'),
       suggestCommand: typeof command === 'string' ? command : null,
     },
     outlineTree: has('textDocument', 'documentSymbol', 'hierarchicalDocumentSymbolSupport'),

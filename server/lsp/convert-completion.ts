@@ -29,19 +29,30 @@ export function toCompletionList(
   uri: string,
   able: CompletionAbilities,
 ): CompletionList {
-  const ranges = new Map<number, { insert: Range; replace: Range }>();
-  const rangesFrom = (start: number): { insert: Range; replace: Range } => {
+  const ranges = new Map<number, EditRange>();
+  const rangeFrom = (start: number): EditRange => {
+    const insert = (): Range => rangeOf(document, start, end);
     const known = ranges.get(start);
-    const made = known ?? { insert: rangeOf(document, start, end), replace: rangeOf(document, start, wordEnd) };
+    const made =
+      known ?? (able.insertReplace ? { insert: insert(), replace: rangeOf(document, start, wordEnd) } : insert());
     ranges.set(start, made);
     return made;
   };
   const sorted = [...items].sort((left, right) => left.rank - right.rank);
+  // Nearly all begin at one place, the word at the cursor.
+  const common = able.defaultRange ? sorted[0]?.start : undefined;
   return {
     isIncomplete,
-    items: sorted.map((item, index) => toItem(item, index, rangesFrom(item.start), uri, able)),
+    ...(common === undefined ? {} : { itemDefaults: { editRange: rangeFrom(common) } }),
+    items: sorted.map((item, index) => {
+      const range = item.start === common ? null : rangeFrom(item.start);
+      return toItem(item, index, range, uri, able);
+    }),
   };
 }
+
+/** One for both, or one each for what is inserted and what is replaced. */
+type EditRange = Range | { readonly insert: Range; readonly replace: Range };
 
 /** What is behind an item that a client asks about again, if it is one of ours. */
 export function subjectOf(data: unknown): { uri: string; subject: CompletionSubject } | null {
@@ -76,7 +87,8 @@ export function toSignatureHelp(signature: Signature, markdown: boolean): Signat
 function toItem(
   item: CompletionItem,
   index: number,
-  { insert, replace }: { readonly insert: Range; readonly replace: Range },
+  /** null: the list's own. */
+  range: EditRange | null,
   uri: string,
   able: CompletionAbilities,
 ): ProtocolItem {
@@ -88,7 +100,7 @@ function toItem(
     kind: KINDS[role],
     sortText: String(index).padStart(4, '0'),
     insertTextFormat: snippet === undefined ? InsertTextFormat.PlainText : InsertTextFormat.Snippet,
-    textEdit: able.insertReplace ? { newText, insert, replace } : { newText, range: insert },
+    ...textOf(newText, range, label),
     ...(detail === '' ? {} : able.labelDetails ? { labelDetails: { description: detail } } : { detail }),
     ...(filter === undefined ? {} : { filterText: filter }),
     ...(documentation ? { documentation: toDocumentation(documentation, able.markdown) } : {}),
@@ -97,6 +109,15 @@ function toItem(
       ? { command: { title: 'Suggest', command: able.suggestCommand } }
       : {}),
   };
+}
+
+function textOf(
+  newText: string,
+  range: EditRange | null,
+  label: string,
+): Pick<ProtocolItem, 'textEdit' | 'textEditText'> {
+  if (range) return { textEdit: 'insert' in range ? { newText, ...range } : { newText, range } };
+  return newText === label ? {} : { textEditText: newText };
 }
 
 function isSubject(subject: unknown): subject is CompletionSubject {

@@ -62,6 +62,24 @@ describe('a completion', () => {
     expect(item?.detail).toBe('Na(cr)');
   });
 
+  it('tells the range of most items once to clients that take it so', async () => {
+    const { textDocument } = FULL_CAPABILITIES;
+    const completion = { ...textDocument?.completion, completionList: { itemDefaults: ['editRange'] } };
+    const list = await completed('let b = lower heating val|ue\n', {
+      ...FULL_CAPABILITIES,
+      textDocument: { ...textDocument, completion },
+    });
+    const range = (start: number, end: number) => ({
+      start: { line: 0, character: start },
+      end: { line: 0, character: end },
+    });
+    expect(list.itemDefaults).toEqual({ editRange: { insert: range(8, 25), replace: range(8, 27) } });
+    const figure = labelled(list, 'lower heating value');
+    expect([figure?.textEdit, figure?.textEditText]).toEqual([undefined, 'lower heating value of ']);
+    // It begins elsewhere.
+    expect(labelled(list, 'of')?.textEdit).toEqual({ newText: 'of', insert: range(22, 25), replace: range(22, 27) });
+  });
+
   it('writes skeletons for clients that have snippets, and plain words for others', async () => {
     expect(labelled(await completed('|'), 'blend')).toMatchObject({ insertTextFormat: 2 });
     await client.stop();
