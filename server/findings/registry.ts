@@ -83,6 +83,7 @@ import { rangeShare } from './range-share.ts';
 import { rangeSticky } from './range-sticky.ts';
 import { rangeTemperature } from './range-temperature.ts';
 import type { FactOf, Rule } from './rule.ts';
+import { serviceTank } from './service-tank.ts';
 import { syntax } from './syntax.ts';
 import { unitAmbiguous } from './unit-ambiguous.ts';
 import { unitExponent } from './unit-exponent.ts';
@@ -139,6 +140,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'name/unexpected-line': nameUnexpectedLine,
   'name/wrong-kind': nameWrongKind,
   'name/acknowledged': nameAcknowledged,
+  'service/tank': serviceTank,
   'unit/unknown': unitUnknown,
   'unit/missing': unitMissing,
   'unit/mismatch': unitMismatch,

@@ -4,12 +4,13 @@
 
 import type { PlannedLeg } from '../core/duty/plan.ts';
 import type { Band, Consumption } from '../core/engine/consumption.ts';
+import type { Corner, ServiceSums } from '../core/service/service.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Material } from './material.ts';
 import type { ReceivingWater } from './receiving-water.ts';
 import type { AssumptionId } from './working.ts';
 
-export type Machinery = EngineMachine | DutyMachine | ReceivingWater;
+export type Machinery = EngineMachine | DutyMachine | ServiceMachine | ReceivingWater;
 
 export interface EngineMachine {
   readonly machinery: 'engine';
@@ -72,6 +73,25 @@ export interface DutyMachine {
   readonly uncertain: readonly Quantity[];
   readonly planAt: (values: readonly number[]) => readonly PlannedLeg[];
   readonly ratedPowerAt: (values: readonly number[]) => readonly number[];
+}
+
+/** A duty over and over, as a comparison asks of it. */
+export interface ServiceMachine {
+  readonly machinery: 'service';
+  readonly name: string;
+  /** The fuel that most of its energy comes from; null where that is not known. */
+  readonly mainFuel: Material | null;
+  /** The same work on the baseline; null without one. */
+  readonly baseline: () => ServiceSums | null;
+  /** 1/s; null where it is not said. */
+  readonly repeated: Quantity | null;
+  /** The service with a fuel in the place of the main one, and its sums at the values as they are. */
+  burning(fuel: Material): {
+    readonly fuels: readonly Material[];
+    readonly missing: readonly string[];
+    readonly values: readonly number[];
+    readonly sumsAt: (values: readonly number[], corner: Corner) => ServiceSums;
+  };
 }
 
 /** The names of data without which it cannot be told; empty where the cause has been said. */

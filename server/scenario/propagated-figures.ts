@@ -28,7 +28,8 @@ export function propagatedFigures(
     const [value, low, high] = outcomes.slice(3 * index, 3 * index + 3);
     if (!value || !Number.isFinite(value.value)) return [];
     const { id, label, unit, method } = row;
-    const isBand = low && high && Number.isFinite(low.value) && Number.isFinite(high.value) && low.value < high.value;
+    const isBand =
+      low && high && Number.isFinite(low.value) && Number.isFinite(high.value) && isApart(low.value, high.value);
     const figure: Figure = {
       id,
       label,
@@ -39,6 +40,11 @@ export function propagatedFigures(
     };
     return [lazily(figure, { working: () => workingOf(row) })];
   });
+}
+
+/** Ends that differ by floating-point rounding only are no band. */
+function isApart(low: number, high: number): boolean {
+  return high - low > 1e-9 * Math.max(Math.abs(low), Math.abs(high));
 }
 
 function numbersOf(found: number | Band | undefined): readonly number[] {

@@ -39,4 +39,12 @@ export type WorkFact =
   /** An entry that nothing in the duty uses. */
   | { readonly code: 'duty/unused'; readonly entry: string }
   /** A duty that is a test cycle. */
-  | { readonly code: 'duty/test-cycle'; readonly cycle: string };
+  | { readonly code: 'duty/test-cycle'; readonly cycle: string }
+  /** The fuel to be carried does not fit; `leg` is the first that would be without. */
+  | {
+      readonly code: 'service/tank';
+      readonly fuel: string;
+      readonly needed: Quantity;
+      readonly capacity: Quantity;
+      readonly leg: string | null;
+    };

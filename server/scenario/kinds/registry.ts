@@ -3,12 +3,14 @@
 
 import { blend } from './blend.ts';
 import { burn } from './burn.ts';
+import { compare } from './compare.ts';
 import { duty } from './duty.ts';
 import { engine } from './engine.ts';
 import type { Kind } from './kind.ts';
 import { oxidant } from './oxidant.ts';
 import { reaction } from './reaction.ts';
 import { sea } from './sea.ts';
+import { service } from './service.ts';
 import { substance } from './substance.ts';
 
 export const kinds: readonly Kind[] = [
@@ -19,7 +21,7 @@ export const kinds: readonly Kind[] = [
   burn,
   engine,
   duty,
-  later('service', 'A duty repeated over a year, with its tanks, reserve, residue and a baseline to hold it against.'),
+  service,
   later('supply', 'How a substance is made: electricity, heat, emissions, price and by-products.'),
   sea,
   later('space', 'An enclosed volume with its air changes, and what a leak, spill or boil-off does in it.'),
@@ -28,7 +30,7 @@ export const kinds: readonly Kind[] = [
   later('fleet', 'A service many times over, year by year.'),
   later('sweep', 'One to three quantities varied over points, and the figures shown for each.'),
   later('find', 'A quantity adjusted until a claim holds.'),
-  later('compare', 'Blends set side by side over one service.'),
+  compare,
 ];
 
 const byWord: ReadonlyMap<string, Kind> = new Map(kinds.map((kind) => [kind.kind, kind]));

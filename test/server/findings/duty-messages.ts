@@ -36,6 +36,16 @@ export const DUTY_ROWS: readonly (readonly [Fact, string])[] = [
     { code: 'duty/test-cycle', cycle: 'E3' },
     'The test cycle E3 certifies an engine and does not describe what one does. For fuel over a year, write the legs.',
   ],
+  [
+    {
+      code: 'service/tank',
+      fuel: 'slurry',
+      needed: quantity(19.9, 'm3'),
+      capacity: quantity(15, 'm3'),
+      leg: 'berth',
+    },
+    'The tanks hold 15 m³, but 19.9 m³ are needed for slurry with its reserve. It would run out on `berth`. Bunker more often, carry less reserve or give the tanks more room.',
+  ],
 ];
 
 export const DUTY_MILD: readonly string[] = [
@@ -47,4 +57,5 @@ export const DUTY_MILD: readonly string[] = [
   'warning engine/measured-range',
   'warning engine/no-idle',
   'warning engine/overload',
+  'warning service/tank',
 ];
