@@ -33,7 +33,7 @@ const UNITS: Readonly<Record<string, string>> = {
 describe('the examples', () => {
   const burning = ['hydrogen-burner.stoke', 'sodium-dispersion.stoke', 'magnesium-in-steam.stoke'];
 
-  test.each(['dunlin.stoke', 'house/suppliers.stoke', ...burning])(
+  test.each(['dunlin.stoke', 'house/suppliers.stoke', 'ostwick-power-station.stoke', ...burning])(
     '%s: the document keeps the contract and its units',
     async (example) => {
       const ran = await runIn(EXAMPLES, ['evaluate', example, '--format', 'json']);
@@ -90,6 +90,7 @@ describe('the examples', () => {
       'dunlin.stoke',
       'constructs.stoke',
       'receiving-water.stoke',
+      'ostwick-power-station.stoke',
       '--format',
       'json',
     ]);
