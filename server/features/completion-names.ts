@@ -1,23 +1,23 @@
-// Offers what the scenario has names for: definitions, values, figures of definitions, and shares of portions, each with
-// what it comes to where that has been worked out already: a list is made at every key, and for it nothing is worked out that
-// nobody has looked at. What an offer comes to is seen beside it (completion-documentation.ts). Invariant: a number shown is
-// one the evaluation found for this very text; what could not be had is offered without one.
+// Offers what the scenario has names for: definitions, values, figures of definitions, and shares of portions. A list is made
+// at every key, and for it no figure is read: a burn solves its states when its figures are. What an offer comes to is seen
+// beside it (completion-documentation.ts). Invariants: a number shown is one the evaluation found for this very text; a list
+// is a function of the text, whatever was looked at before.
 import { inUnit, knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
 import { quantityOf } from '../core/quantity/quantity.ts';
 import { findSubstance } from '../core/substance/catalogue.ts';
 import { parseFormula } from '../core/substance/formula.ts';
-import { figuresAtHand, isAtHand, tablesAtHand } from '../scenario/at-hand.ts';
 import { givenFigureRows } from '../scenario/given-figures.ts';
 import { kindOf, kinds } from '../scenario/kinds/registry.ts';
+import { isPutOff } from '../scenario/lazily.ts';
 import { materialFigures, type FigureRow } from '../scenario/material-figures.ts';
-import type { EvaluatedDefinition, EvaluatedScenario, Figure } from '../scenario/scenario.ts';
+import type { EvaluatedDefinition, EvaluatedScenario } from '../scenario/scenario.ts';
 import { formatNumber, formatPercent } from '../wording/numbers.ts';
-import { figureText, quantityText } from '../wording/quantities.ts';
+import { quantityText } from '../wording/quantities.ts';
 import { unitOfValue } from '../wording/written-unit.ts';
 import { fits, type CompletionItem } from './completion-item.ts';
 import type { Wanted } from './completion-units.ts';
-import { inLeadingOrder, leadingFigures, leadingRank } from './leading-figures.ts';
+import { inLeadingOrder, leadingRank } from './leading-figures.ts';
 import { writtenName } from './written-name.ts';
 
 /** Definitions that pass, by kind; the one at the cursor is left out, because it cannot speak of itself. */
@@ -26,7 +26,7 @@ export function definitionItems(
   passes: (definition: EvaluatedDefinition) => boolean,
   own: string,
   start: number,
-  detailOf: (definition: EvaluatedDefinition) => string | null = leadingDetail,
+  detailOf: (definition: EvaluatedDefinition) => string | null = () => null,
 ): CompletionItem[] {
   return definitionsOf(scenario)
     .filter((definition) => definition.name !== own && passes(definition))
@@ -65,7 +65,7 @@ export function valueItems(
 export function figureItems(scenario: EvaluatedScenario, typed: string, start: number, most: number): CompletionItem[] {
   const items: CompletionItem[] = [];
   for (const definition of definitionsOf(scenario)) {
-    for (const [rank, { id, detail }] of figuresOffered(definition).entries()) {
+    for (const [rank, { id }] of leadingRows(definition.kind).entries()) {
       const label = `${wordsOf(id)} of ${writtenName(definition.name)}`;
       if (items.length === most) return items;
       if (!fits(label, typed)) continue;
@@ -73,7 +73,7 @@ export function figureItems(scenario: EvaluatedScenario, typed: string, start: n
       items.push({
         label,
         role: 'figure',
-        detail,
+        detail: definition.kind,
         insert: label,
         start,
         rank: 30.5 + leadingRank(id) + rank / 1000,
@@ -84,17 +84,7 @@ export function figureItems(scenario: EvaluatedScenario, typed: string, start: n
   return items;
 }
 
-/** The figures of a definition, leading first; those its kind may have, where nobody has looked at its own yet. */
-function figuresOffered(definition: EvaluatedDefinition): readonly { readonly id: string; readonly detail: string }[] {
-  const figures = figuresAtHand(definition);
-  if (!figures) return leadingRows(definition.kind).map(({ id }) => ({ id, detail: definition.kind }));
-  return leadingFigures(definition).map((figure) => ({ id: figure.id, detail: detailOfFigure(figure, definition) }));
-}
-
-function detailOfFigure(figure: Figure, { kind }: EvaluatedDefinition): string {
-  return isAtHand(figure) ? figureText(figure) : kind;
-}
-
+/** The figures that definitions of a kind may have, leading first. */
 function leadingRows(kind: string): readonly FigureRow[] {
   const known = rowsOfKind.get(kind);
   if (known) return known;
@@ -159,7 +149,9 @@ export function shareItems(scenario: EvaluatedScenario, typed: string, start: nu
  */
 export function rowItems(scenario: EvaluatedScenario, words: string, start: number): CompletionItem[] {
   return definitionsOf(scenario).flatMap((definition) => {
-    const labels = tablesAtHand(definition)
+    const labels = definition.tables
+      // For rows that are put off a state may have to be solved.
+      .filter((table) => !isPutOff(table, 'rows'))
       .filter(({ columns }) => columns.some(({ id, unit }) => unit !== null && wordsOf(id) === words))
       .flatMap(({ columns, rows }) => {
         const state = columns.findIndex(({ id }) => id === 'temperature');
@@ -186,12 +178,9 @@ function writtenTemperature(temperatureK: number): string {
   return `${formatNumber(inUnit(temperature, 'degC'), 'plain', 8)} degC`;
 }
 
-/**
- * What the figure of these words comes to for a definition, in words, or the kind where that is not worked out; null where
- * it has none.
- */
-export function figureDetail(definition: EvaluatedDefinition, words: string): string | null {
-  return figuresOffered(definition).find(({ id }) => wordsOf(id) === words)?.detail ?? null;
+/** Whether definitions of its kind may have the figure of these words. */
+export function mayHaveFigure({ kind }: EvaluatedDefinition, words: string): boolean {
+  return leadingRows(kind).some(({ id }) => wordsOf(id) === words);
 }
 
 /** The share by mass of a substance in a definition, in words; null when it is no portion of it. */
@@ -211,11 +200,6 @@ function portionsOf({ kind, lines }: EvaluatedDefinition): { name: string; mass:
   return lines.flatMap((line) =>
     line.kind === 'portion' ? [{ name: line.material.name, mass: line.shares.mass }] : [],
   );
-}
-
-function leadingDetail(definition: EvaluatedDefinition): string {
-  const [first] = figuresAtHand(definition) ? leadingFigures(definition) : [];
-  return first && isAtHand(first) ? `${definition.kind}, ${figureText(first)}` : definition.kind;
 }
 
 /** Those that have a name, each name once. */

@@ -4,20 +4,19 @@
 // asks for, where it asks for something.
 import { Comma, Compare, WordToken, type Token } from '../../grammar/tokens.ts';
 import { BASIS_WORDS, CONNECTIVE_WORDS } from '../../grammar/words.ts';
-import { figuresAtHand } from '../scenario/at-hand.ts';
 import { functions } from '../scenario/functions.ts';
+import { kindOf } from '../scenario/kinds/registry.ts';
 import type { EvaluatedScenario } from '../scenario/scenario.ts';
 import type { Behind } from './completion-behind.ts';
 import { functionItems } from './completion-functions.ts';
 import type { CompletionItem } from './completion-item.ts';
 import {
   definitionItems,
-  figureDetail,
   figureItems,
   figureWordItems,
   isGivenFigure,
-  isMaterial,
   isMaterialFigure,
+  mayHaveFigure,
   rowItems,
   shareDetail,
   shareItems,
@@ -90,19 +89,11 @@ export function valueOffers(
     case 'of':
       return [
         ...rowItems(scenario, behind.words, start),
-        ...definitionItems(
-          scenario,
-          (definition) => figuresAtHand(definition)?.length === 0 && !isMaterial(definition),
-          own,
-          start,
-        ).map((item) => ({ ...item, rank: item.rank + 50 })),
-        ...definitionItems(
-          scenario,
-          (definition) => figureDetail(definition, behind.words) !== null,
-          own,
-          start,
-          (definition) => figureDetail(definition, behind.words),
-        ),
+        ...definitionItems(scenario, ({ kind }) => !kindOf(kind)?.evaluated, own, start).map((item) => ({
+          ...item,
+          rank: item.rank + 50,
+        })),
+        ...definitionItems(scenario, (definition) => mayHaveFigure(definition, behind.words), own, start),
         ...(isMaterialFigure(behind.words) ? substanceItems('names', typed, start) : []),
         ...(isGivenFigure(behind.words)
           ? substanceItems('names', typed, start, substancesWith(behind.words.replaceAll(' ', '-')))

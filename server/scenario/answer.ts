@@ -11,7 +11,7 @@ import { evaluateExpression } from './expressions.ts';
 import { isHazardCode } from './hazard-fact.ts';
 import type { KindAnswer } from './kinds/kind.ts';
 import { kindOf, kinds } from './kinds/registry.ts';
-import { lazilyFrom } from './lazily.ts';
+import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
 import type { EvaluatedDefinition, EvaluatedValue, Expectation, PlacedFact, PlacedMeaning } from './scenario.ts';
 
@@ -120,7 +120,7 @@ function answerDefinition(statement: Definition, placed: PlacedSection, context:
   if (!answer) return { kind: 'unevaluated', definition };
   const { material, stream = null, machinery = null } = answer;
   // A kind may leave its figures and tables until somebody reads them.
-  lazilyFrom(answer, definition, {
+  lazily(definition, {
     figures: () => answer.figures,
     tables: () => answer.tables,
     absent: () => answer.absent,

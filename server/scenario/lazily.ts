@@ -1,7 +1,7 @@
 // Records with fields that are worked out when somebody first reads them: most workings and moved figures are never looked
 // at. The getter of a field is one for all records, so that records with the same fields have the same shape, and what a
-// field is worked out by goes once it has been. Invariants: a field once read keeps its value, and reads like any other
-// from then on; asking whether a field is worked out works nothing out.
+// field is worked out by goes once it has been. Invariant: a field once read keeps its value, and reads like any other
+// from then on.
 
 type WorkOut = () => unknown;
 
@@ -12,26 +12,11 @@ export function lazily<Of extends object>(value: Of, fields: { readonly [Key in 
   return value;
 }
 
-/** The same for a record whose fields only hand on those of another: what is worked out there is worked out here. */
-export function lazilyFrom<Of extends object>(
-  source: object,
-  value: Of,
-  fields: { readonly [Key in keyof Of]?: () => Of[Key] },
-): Of {
-  sources.set(value, source);
-  return lazily(value, fields);
+/** Whether the field was left to be worked out when it is first read, whether that has happened or not. */
+export function isPutOff<Of extends object>(value: Of, key: keyof Of): boolean {
+  const unread: unknown = Reflect.get(value, UNREAD);
+  return typeof unread === 'object' && unread !== null && key in unread;
 }
-
-/** Whether reading the field works nothing out. */
-export function isWorkedOut<Of extends object>(value: Of, key: keyof Of): boolean {
-  for (let record: object | undefined = value; record; record = sources.get(record)) {
-    const field = Object.getOwnPropertyDescriptor(record, key);
-    if (field && 'value' in field) return true;
-  }
-  return false;
-}
-
-const sources = new WeakMap<object, object>();
 
 /** What the fields not read yet are worked out by, in the record itself, where nobody who lists its fields sees it. */
 const UNREAD = Symbol('unread');

@@ -6,7 +6,7 @@ import type { PlacedSection } from '../../grammar/tree.ts';
 import { quantityOf } from '../core/quantity/quantity.ts';
 import type { Answer } from './answer.ts';
 import type { Fact } from './facts.ts';
-import { lazilyFrom } from './lazily.ts';
+import { lazily } from './lazily.ts';
 import type { Place } from './place.ts';
 import type {
   EvaluatedDefinition,
@@ -115,7 +115,7 @@ export class PlacedAnswer {
       screening: definition.screening,
     };
     // Read when somebody looks: at most keys nobody does, and a burn solves its states then only.
-    return lazilyFrom(definition, placed, {
+    return lazily(placed, {
       figures: () => this.#placeFigures(definition.figures),
       tables: () => definition.tables,
       absent: () => definition.absent,
@@ -130,7 +130,7 @@ export class PlacedAnswer {
       const { id, label, unit, band } = figure;
       const ends = band && { band };
       const placed: Figure = { id, label, unit, quantity: quantityOf(0), ...ends, working: unreadWorking };
-      return lazilyFrom(figure, placed, {
+      return lazily(placed, {
         quantity: () => figure.quantity,
         working: () => this.#withPlaces(figure.working),
       });
