@@ -12,6 +12,8 @@ export interface Rising<State> {
   /** Its slope by place, where it is known and finite. */
   readonly slopeOf: (state: State) => number | null;
   readonly nearEnough: number;
+  /** The state at zero out of the states on either side of it, where one can be had from them: tried as they come closer. */
+  readonly between?: (low: State, high: State) => State | undefined;
 }
 
 /** A state at zero, the two states on either side of a jump, or the bound beyond which zero lies. */
@@ -44,6 +46,7 @@ export function findZero<State>(
   let near: State | undefined;
   let slow = 0;
   let lastSize = Infinity;
+  let closeness = firstCloseness;
   for (let count = 0; count < mostCalls; count += 1) {
     const state = rising.stateAt(place, near);
     if (state === undefined) return { kind: 'failed' };
@@ -56,6 +59,15 @@ export function findZero<State>(
     side.state = state;
     side.value = value;
     near = state;
+    if (
+      low.state !== undefined &&
+      high.state !== undefined &&
+      high.place - low.place < closeness * Math.abs(high.place)
+    ) {
+      closeness *= closer;
+      const found = rising.between?.(low.state, high.state);
+      if (found !== undefined) return { kind: 'root', state: found };
+    }
     slow = Math.abs(value) > 0.5 * lastSize ? slow + 1 : 0;
     lastSize = Math.abs(value);
     const next = nextPlace(rising, low, high, side, count);
@@ -99,3 +111,6 @@ function nextPlace<State>(
 }
 
 const mostCalls = 400;
+/** Of the place: sides this close are asked for what lies between them, and again at each further step. */
+const firstCloseness = 0.03;
+const closer = 0.01;

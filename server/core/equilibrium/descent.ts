@@ -29,6 +29,8 @@ const mostSteps = 100;
 
 export interface Descent {
   steps: number;
+  /** A state of this question was found only a little off the proportions given. */
+  isOffProportion: boolean;
   readonly step: Step;
 }
 

@@ -49,7 +49,7 @@ function solve(
   const aim = aimOf(held, work.scaleMol);
   const check = checkOf(held);
   const pressurePa = 'pressurePa' in held ? held.pressurePa : 0;
-  const descent: Descent = { steps: 0, step: { change: 0, taken: 0, gasChange: 0 } };
+  const descent: Descent = { steps: 0, isOffProportion: false, step: { change: 0, taken: 0, gasChange: 0 } };
   const attempt = (hasIons: boolean): Equilibrium | NoEquilibrium => {
     // With temperature unknown a crystal may still be there below its end.
     admitPhases(work, temperatureK, hasIons);

@@ -15,8 +15,9 @@ import { followCentre } from './centre.ts';
 import { descend, takePresentBasis } from './descent.ts';
 import type { Descent } from './descent.ts';
 import type { Equilibrium, NoEquilibrium } from './equilibrium.ts';
+import { keep, keepBasis, restore, restoreBasis } from './kept.ts';
 import { offProportion } from './off-proportion.ts';
-import { takeFractions, takePressure, takeStep, takeTemperature } from './newton.ts';
+import { takeFractions, takePressure, takeStep } from './newton.ts';
 import type { Aim } from './newton.ts';
 import { spansOf } from './spans.ts';
 import type { Range } from './spans.ts';
@@ -40,16 +41,26 @@ export function atTemperatureAndPressure(
   const aim = pressureAim(pressurePa);
   admitPhases(work, temperatureK);
   const bounds = { lowestK: temperatureK, highestK: temperatureK };
-  if (near !== undefined && startNear(work, aim, temperatureK, near)) {
-    const warm = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
-    if (warm !== undefined) return warm;
-  }
-  const answer = byInterior(work, elementMol, aim, temperatureK, pressurePa, descent);
+  const reachedFrom = (): Equilibrium | undefined => {
+    if (near !== undefined && startNear(work, aim, temperatureK, near)) {
+      const warm = descendAndCertify(work, elementMol, aim, bounds, pressurePa, descent);
+      if (warm !== undefined) return warm;
+    }
+    return byInterior(work, elementMol, aim, temperatureK, pressurePa, descent);
+  };
+  const beside = (): Equilibrium | undefined => {
+    takeAmounts(work, offProportion(work, elementMol));
+    const answer = reachedFrom();
+    takeAmounts(work, elementMol);
+    return answer;
+  };
+  // What one state of a search needed the next one needs as well.
+  if (descent.isOffProportion) return beside() ?? reachedFrom();
+  const answer = reachedFrom();
   if (answer !== undefined) return answer;
-  takeAmounts(work, offProportion(work, elementMol));
-  const beside = byInterior(work, elementMol, aim, temperatureK, pressurePa, descent);
-  takeAmounts(work, elementMol);
-  return beside;
+  const found = beside();
+  descent.isOffProportion = found !== undefined;
+  return found;
 }
 
 /** For the amounts that `work` holds: quick from cold, then along the interior path, certified against `elementMol`. */
@@ -186,6 +197,17 @@ export function byTemperature(
         slopeOf: ({ heatCapacityJPerK, temperatureK }) =>
           heatCapacityJPerK === null || 'volumeM3' in held ? null : (heatCapacityJPerK * perAtoms) / temperatureK,
         nearEnough: 'volumeM3' in held ? nearEnoughInVolume : nearEnough,
+        // Where phases change into one another, or nearly so, both sides have all that takes part.
+        between: (low, high) =>
+          settled(
+            work,
+            elementMol,
+            aim,
+            blended(low, high, { held: check.value, low: reached(low, check), high: reached(high, check) }, elementMol),
+            range,
+            descent,
+            check,
+          ),
       },
       [lowestK, highestK],
       firstTemperatureK,
@@ -328,61 +350,4 @@ function certified(
   const response = responseOf(work, atPressure);
   const answer = answerOf(work.set, stateOf(work, pressure), response, elementMol, check, descent.steps);
   return isCertified(answer.certificate) ? answer : undefined;
-}
-
-interface KeptBasis {
-  readonly rank: number;
-  readonly basis: Int32Array;
-  readonly nu: Float64Array;
-  readonly inverse: Float64Array;
-  readonly isForced: Uint8Array;
-  readonly amounts: Float64Array;
-}
-
-function keepBasis({ rank, basis, nu, inverse, isForced, amounts }: Work): KeptBasis {
-  return {
-    rank,
-    basis: basis.slice(),
-    nu: nu.slice(),
-    inverse: inverse.slice(),
-    isForced: isForced.slice(),
-    amounts: amounts.slice(),
-  };
-}
-
-function restoreBasis(work: Work, { rank, basis, nu, inverse, isForced, amounts }: KeptBasis): void {
-  work.rank = rank;
-  work.basis.set(basis);
-  work.nu.set(nu);
-  work.inverse.set(inverse);
-  work.isForced.set(isForced);
-  work.amounts.set(amounts);
-}
-
-interface Kept {
-  readonly potential: Float64Array;
-  readonly present: Int32Array;
-  readonly presentAmount: Float64Array;
-  readonly presentCount: number;
-  readonly gasAmount: number;
-}
-
-function keep(work: Work): Kept {
-  return {
-    potential: work.potential.slice(),
-    present: work.present.slice(),
-    presentAmount: work.presentAmount.slice(),
-    presentCount: work.presentCount,
-    gasAmount: work.gasAmount,
-  };
-}
-
-function restore(work: Work, kept: Kept, aim: Aim): void {
-  work.potential.set(kept.potential);
-  work.present.set(kept.present);
-  work.presentAmount.set(kept.presentAmount);
-  work.presentCount = kept.presentCount;
-  work.gasAmount = kept.gasAmount;
-  takeTemperature(work, aim, work.temperatureK);
-  takeFractions(work, aim);
 }
