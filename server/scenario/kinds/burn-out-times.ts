@@ -15,6 +15,7 @@ import {
   type Surroundings,
 } from '../../core/burn/burn-out.ts';
 import type { Burn } from '../../core/burn/burn.ts';
+import { distillateDroplet, type DistillateDroplet } from '../../core/burn/distillate-droplets.ts';
 import { prepareBurn } from '../../core/burn/prepare-burn.ts';
 import { amountOf } from '../../core/burn/products.ts';
 import { vaporisationOf } from '../../core/burn/vaporisation.ts';
@@ -43,6 +44,8 @@ export interface PortionBurnOut {
   readonly burnOut: BurnOut | NoBurnOut | null;
   readonly missing: readonly string[];
   readonly verdict: 'burnt' | 'open' | 'unburnt' | null;
+  /** Where its boiling point and molar mass are those typical of the trade, their source. */
+  readonly typical: string | null;
 }
 
 /**
@@ -76,6 +79,7 @@ export function burnOutsOf(
       burnOut,
       missing: 'missing' in found ? found.missing : [],
       verdict: burnOut && residenceTime ? burnOutWithin(burnOut, residenceTime.value) : null,
+      typical: burnOut ? (typicalOf(material)?.source ?? null) : null,
     };
   });
 }
@@ -97,7 +101,7 @@ export function burnOutTable(burnOuts: () => readonly PortionBurnOut[], residenc
     { id: 'verdict', label: 'Verdict', unit: null },
   ];
   const rows = (): Table['rows'] =>
-    burnOuts().map(({ name, diameterM, burnOut, verdict }) => {
+    burnOuts().map(({ name, diameterM, burnOut, verdict, typical }) => {
       const known = burnOut && burnOut.law !== 'none' ? burnOut : null;
       return [
         name,
@@ -105,7 +109,7 @@ export function burnOutTable(burnOuts: () => readonly PortionBurnOut[], residenc
         known && known.timeS * 1000,
         known && known.factor,
         known && residenceTime ? burntShareAfter(known, residenceTime.value) : null,
-        burnOut && lawNames[burnOut.law],
+        burnOut && `${lawNames[burnOut.law]}${typical ? ', typical of its trade' : ''}`,
         verdict,
       ];
     });
@@ -175,7 +179,7 @@ function burnOutOf(
   const { name, density } = material;
   const element = elementOf(material);
   if (!hasLawFor(element, gas, hasOtherOxidiser)) {
-    return { missing: [`a law of burn-out for ${name} in this gas`] };
+    return { missing: [`a published law of burn-out for ${name} in ${oxidiserOf(gas, hasOtherOxidiser)}`] };
   }
   if (element === 'Al') return burnOutOfAluminium(diameterM, gas);
   const molPerKg = elementMolPerKgOf(material);
@@ -193,9 +197,7 @@ function burnOutOf(
   ];
   if (missing.length > 0 || !density || heating === undefined || !boiling) return { missing };
   const vapour =
-    element === null && material.molarMass
-      ? { molarMassKgPerMol: material.molarMass.value, elementMolPerKg: molPerKg }
-      : null;
+    element === null ? { molarMassKgPerMol: molarMassOf(material)?.value ?? NaN, elementMolPerKg: molPerKg } : null;
   const fuel = { densityKgPerM3: density.value, ...boiling, heatingValueJPerKg: heating, oxygenKgPerKg, vapour };
   return burnOutOfVapour(fuel, diameterM, gas);
 }
@@ -207,9 +209,11 @@ const surfaceBurners: ReadonlySet<string> = new Set(['Fe', 'Ti', 'Si', 'B']);
  * Boiling at 1 atm and the heat it takes: by the catalogue's vapour where there is one, else by Trouton's rule,
  * 88 J/(mol K) (common practice).
  */
-function boilingOf({ name, origin, boilingPoint, molarMass, formationEnthalpy }: Material) {
-  if (!boilingPoint || !molarMass) return undefined;
-  const boilingK = boilingPoint.value;
+function boilingOf(material: Material) {
+  const { name, origin, formationEnthalpy } = material;
+  const molarMass = molarMassOf(material);
+  const boilingK = material.boilingPoint?.value ?? typicalOf(material)?.boilingK;
+  if (boilingK === undefined || !molarMass) return undefined;
   const substance = origin === 'catalogue' ? findSubstance(name) : undefined;
   const gas = substance && phasesOfSubstance(substance.name).find(({ phase }) => phase === 'g');
   const gasJPerKg = gas?.energy.kind === 'formation-enthalpy' ? gas.energy.jPerKg.value : undefined;
@@ -221,6 +225,24 @@ function boilingOf({ name, origin, boilingPoint, molarMass, formationEnthalpy }:
 }
 
 const troutonJPerMolK = 88;
+
+/** Its own, or the one that is typical of its trade. */
+function molarMassOf(material: Material): { readonly value: number } | null {
+  const typical = typicalOf(material);
+  return material.molarMass ?? (typical ? { value: typical.molarMassKgPerMol } : null);
+}
+
+function typicalOf({ name, origin, phase, boilingPoint, molarMass }: Material): DistillateDroplet | undefined {
+  if (origin !== 'catalogue' || phase !== 'l' || (boilingPoint && molarMass)) return undefined;
+  return distillateDroplet(name);
+}
+
+/** What it would burn by, where the laws know free oxygen only. */
+function oxidiserOf({ waterMoleShare, carbonDioxideMoleShare }: Surroundings, hasOtherOxidiser: boolean): string {
+  if (hasOtherOxidiser) return 'an oxidant other than oxygen';
+  if (waterMoleShare + carbonDioxideMoleShare < leastOxygenMoleShare) return 'a gas without oxygen';
+  return waterMoleShare >= carbonDioxideMoleShare ? 'steam' : 'carbon dioxide';
+}
 
 function surroundingsOf(burn: Burn, flame: Equilibrium, oxidant: OxidantStream): Surroundings {
   const oxygenKgPerMol = 2 * (atomicWeightKgPerMol('O') ?? NaN);

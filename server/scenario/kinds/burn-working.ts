@@ -48,9 +48,13 @@ export function burnWorking(
       ...ownInputs(row, written, solved, places),
       ...(isOfFlame ? [...productInputs(solved), ...certificateInputs(solved)] : []),
     ],
-    sources: [...new Set([...written.fuel.sources, ...written.oxidant.sources, tables])],
+    sources: [...new Set([...written.fuel.sources, ...written.oxidant.sources, tables, ...ownSources(row, solved)])],
     assumptions: assumptionsOf(row, written, solved),
   };
+}
+
+function ownSources({ id }: FigureRow, { burnOuts }: SolvedBurn): readonly string[] {
+  return id === 'burn-out-time' ? burnOuts().flatMap(({ typical }) => typical ?? []) : [];
 }
 
 const tables =

@@ -308,8 +308,14 @@ test('droplets and particles: too little time, no data, nothing of that size', (
       residence time: 1 ms
     # ^^^^^^^^^^^^^^^^^^^^ range/burn-out
     }
-    burn unknown_oil {
+    burn distillate {
       fuel: gas_oil
+      oxidant: air
+      lambda: 1.3
+      droplet size: 50 um
+    }
+    burn coking {
+      fuel: heavy_fuel_oil
       oxidant: air
       lambda: 1.3
       droplet size: 50 um

@@ -310,11 +310,11 @@ test('heat above the flame in a held volume is none', () => {
 });
 
 test.each([
-  ['magnesium', 'carbon_dioxide', 'particle'],
-  ['magnesium', 'steam', 'particle'],
-  ['sodium', 'steam', 'particle'],
-  ['methanol', 'nitrous_oxide', 'droplet'],
-])('%s in %s has no law of burn-out, and is not said to be out', (fuel, oxidant, kind) => {
+  ['magnesium', 'carbon_dioxide', 'particle', 'carbon dioxide'],
+  ['magnesium', 'steam', 'particle', 'steam'],
+  ['sodium', 'steam', 'particle', 'steam'],
+  ['methanol', 'nitrous_oxide', 'droplet', 'an oxidant other than oxygen'],
+])('%s in %s has no law of burn-out, and is not said to be out', (fuel, oxidant, kind, told) => {
   const scenario = evaluateText(`
     burn reactor {
       fuel: ${fuel}
@@ -330,7 +330,39 @@ test.each([
   expect(rows.map((row) => [row[0], row[2], row.at(-1)])).toEqual([[fuel, null, null]]);
   const facts = scenario.files.flatMap((file) => file.facts.map(({ fact }) => fact));
   expect(facts.map(({ code }) => code)).not.toContain('range/burn-out');
-  expect(JSON.stringify(facts)).toContain('a law of burn-out for');
+  expect(JSON.stringify(facts)).toContain(`a published law of burn-out for ${fuel} in ${told}`);
+});
+
+test('a distillate burns out by what is typical of its trade, and says so; its own data go before', () => {
+  const text = (fuel: string): string => `
+    substance own_oil {
+      phase: liquid
+      composition: 87 % C, 13 % H
+      lower heating value: 42.7 MJ/kg
+      density: 845 kg/m3
+      boiling point: 260 degC
+      molar mass: 215 g/mol
+    }
+    burn lamp {
+      fuel: ${fuel}
+      oxidant: air
+      lambda: 1.3
+      droplet size: 60 um
+      residence time: 50 ms
+    }
+  `;
+  const [typical, own] = ['gas_oil', 'own_oil'].map((fuel) => evaluateText(text(fuel))) as [EvaluatedScenario, EvaluatedScenario]; // prettier-ignore
+  const timeOf = (scenario: EvaluatedScenario): number => figureOf(scenario, 'lamp', 'burn-out-time') ?? NaN;
+  // 0.5 to 1 mm²/s: 3.6 to 7.2 ms for 60 µm.
+  expect(timeOf(typical)).toBeGreaterThan(3.6);
+  expect(timeOf(typical)).toBeLessThan(7.2);
+  expect(timeOf(own) / timeOf(typical)).toBeCloseTo(1, 1);
+  const lawOf = (scenario: EvaluatedScenario): unknown => tableOf(scenario, 'burn-out', 'lamp').rows[0]?.at(-2);
+  expect([lawOf(typical), lawOf(own)]).toEqual(['flame of its vapour, typical of its trade', 'flame of its vapour']);
+  const sources = typical.files[0]?.definitions
+    .find(({ name }) => name === 'lamp')
+    ?.figures.find(({ id }) => id === 'burn-out-time')?.working.sources;
+  expect(sources?.some((source) => source.startsWith('typical of the trade'))).toBe(true);
 });
 
 test('carbon against freezing is at least what the coldest live state has', () => {
