@@ -6,6 +6,7 @@
 import { formationEnthalpyOf } from '../balance/formation-enthalpy.ts';
 import type { Formula } from '../substance/formula.ts';
 import { hazardsOrProven } from './proven-hazards.ts';
+import { nothingRecorded } from '../substance/hazards.ts';
 import type { ExtinguishingAgent, Hazards, ReactiveFamily } from '../substance/hazards.ts';
 import type { Substance } from '../substance/substance.ts';
 
@@ -100,7 +101,11 @@ export function portionOf(
     massShare,
     phase: phaseAt(usualPhase, points, temperatureK, pressurePa),
     usualPhase,
-    hazards: hazardsOrProven(substance.hazards ?? null, substance.molPerKg),
+    // The atoms of an ion in water are not those of the metal.
+    hazards:
+      substance.phase === 'aq'
+        ? (substance.hazards ?? nothingRecorded)
+        : hazardsOrProven(substance.hazards ?? null, substance.molPerKg),
     formula: substance.formula ?? null,
     molPerKg: substance.molPerKg,
     molarMassKgPerMol: substance.molarMassKgPerMol ?? null,
