@@ -1,6 +1,6 @@
 // Random questions to the minimiser: each answer is proven from outside, each refusal is checked to be true. Twenty thousand in
-// the suite; two hundred thousand others in `npm run fuzz`. A question is
-// named by its number, so a failure can be asked again; those that once failed stand in equilibrium-regressions.json in full.
+// the suite; two hundred thousand others in `npm run fuzz`. A question is named by its number, so a failure can be asked again;
+// those that once failed stand in equilibrium-regressions.json in full.
 
 import { expect, test } from 'vitest';
 import { equilibriumProblem } from '../support/equilibrium-problems.ts';
