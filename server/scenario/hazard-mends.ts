@@ -52,17 +52,27 @@ function gasMends(hazard: Hazard, mendable: Mendable, context: Context): readonl
   if (blanket && !span) return [];
   // Under a gas that is said and is not the matter, another one would be no mend.
   if (blanket && hazard.partner?.kind !== 'gas') return [];
-  const found = gases.filter((gas) => {
-    const substance = findSubstance(gas);
-    const under = substance && { ...store, blanket: gasOver([{ substance, moleShare: 1 }], false) };
-    return under !== undefined && isMended(hazard, mendable, under);
-  });
+  const found = gases.filter((gas) => isMended(hazard, mendable, hazardsUnder(gas, mendable)));
   return found.map((gas) => ({
     title: `Blanket it with ${gas}`,
     preferred: found.length === 1,
     ...(span ? { place: context.place(span), newText: gas } : lineAfter(definition, `blanket: ${gas}`, context)),
   }));
 }
+
+/** The hazards under another gas, worked out once a store: several of its hazards may ask. */
+function hazardsUnder(gas: (typeof gases)[number], { store, hazards: asItIs, judge }: Mendable): readonly Hazard[] {
+  const ofStore = underGas.get(store) ?? new Map<string, readonly Hazard[]>();
+  underGas.set(store, ofStore);
+  const known = ofStore.get(gas);
+  if (known) return known;
+  const substance = findSubstance(gas);
+  const hazards = substance ? judge({ ...store, blanket: gasOver([{ substance, moleShare: 1 }], false) }) : asItIs;
+  ofStore.set(gas, hazards);
+  return hazards;
+}
+
+const underGas = new WeakMap<Store, Map<string, readonly Hazard[]>>();
 
 const marginK = 10;
 /** Nobody chills a tank below this to keep it from its flash point: there it is inerted. */
@@ -79,7 +89,8 @@ function temperatureMends(hazard: Hazard, mendable: Mendable, context: Context):
     if (unit === undefined) continue;
     const target = quantityOf(limitK - marginK, knownUnit('K').dimension, undefined, 'temperature');
     const number = Math.floor(inUnit(target, unit));
-    const isMend = target.value >= coldestOfferedK && isMended(hazard, mendable, mendable.storeAt(target.value));
+    const isMend =
+      target.value >= coldestOfferedK && isMended(hazard, mendable, mendable.judge(mendable.storeAt(target.value)));
     if (!isMend) return [];
     const newText = String(number);
     const title = `Store it at ${newText} ${unit}, 10 K below its ${hazard.code === 'hazard/molten-metal' ? 'melting' : 'flash'} point`;
@@ -103,9 +114,8 @@ function limitOf({ code, numbers }: Hazard, store: Store): number | null {
   return isOfFlash && !isGas(store) ? flashPointK(store) : null;
 }
 
-function isMended(hazard: Hazard, { hazards, judge }: Mendable, changed: Store): boolean {
+function isMended(hazard: Hazard, { hazards }: Mendable, after: readonly Hazard[]): boolean {
   const before = new Set(hazards.map(({ code, portion }) => `${code} ${String(portion)}`));
-  const after = judge(changed);
   return (
     !after.some(({ code, portion }) => code === hazard.code && portion === hazard.portion) &&
     after.every(({ code, portion }) => before.has(`${code} ${String(portion)}`))
