@@ -56,16 +56,28 @@ export function attacksOn(
 ): readonly Attack[] {
   const count = metal.fromK === metal.toK ? 1 : mostPlaces;
   const found = new Map<AttackKind, Attack>();
+  let colderK = metal.fromK;
   for (let place = 0; place < count; place += 1) {
     const metalK = metal.fromK + (place * (metal.toK - metal.fromK)) / Math.max(1, count - 1);
     const state = stateAt(metalK);
-    if (state === null) continue;
-    for (const one of attacksAt(metalK, state, vanadiumMolPerKg)) {
-      const before = found.get(one.kind);
-      found.set(one.kind, before === undefined ? one : { ...before, toK: metalK });
+    if (state !== null) {
+      for (const one of attacksAt(metalK, state, vanadiumMolPerKg)) {
+        const before = found.get(one.kind);
+        const fromK = Math.min(metalK, Math.max(colderK, beginsAtK(one)));
+        found.set(one.kind, before === undefined ? { ...one, fromK } : { ...before, toK: metalK });
+      }
     }
+    colderK = metalK;
   }
   return [...found.values()];
+}
+
+/** Between the last place that is not met and the first that is, the attack's own limit is known better. */
+function beginsAtK({ kind, fromK, melting }: Attack): number {
+  if (kind === 'vanadate') return vanadateK.fromK;
+  const window = windowsK.find((one) => one.kind === kind);
+  if (window !== undefined) return window.fromK;
+  return (kind === 'sticky' ? melting?.stickyK : melting?.firstMeltingK) ?? fromK;
 }
 
 function attacksAt(metalK: number, state: MatterState, vanadiumMolPerKg: number): readonly Attack[] {

@@ -67,6 +67,8 @@ describe('hot metal', () => {
     const found = attacksOn({ fromK: 700, toK: 1300 }, stateAt).find(({ kind }) => kind === 'basic');
     // Pure sodium carbonate melts at 851 °C.
     expect(found?.fromK).toBeGreaterThan(1100);
+    // Looked at every 100 K, told by what the deposit's own melting says.
+    expect(found?.fromK).toBe(found?.melting?.firstMeltingK);
     expect(found?.toK).toBe(1300);
     expect(found?.salts).toContain('Na2CO3');
   });
