@@ -6,6 +6,7 @@ import { speciesAtTemperature } from '../core/balance/species-at-temperature.ts'
 import { combineParts, noParts, type Parts } from '../core/quantity/parts.ts';
 import { enthalpyRise } from '../core/substance/at-temperature.ts';
 import { findSubstance, phasesOfSubstance } from '../core/substance/catalogue.ts';
+import { harmlessBelowK, liquefiedGas } from '../core/substance/liquefied-gases.ts';
 import { molarMassKgPerMol, parseFormula } from '../core/substance/formula.ts';
 import { phasesOfFormula } from '../core/substance/phases.ts';
 import { referenceTemperatureK } from '../core/substance/substance.ts';
@@ -38,6 +39,7 @@ export function preheatOf(material: Material, temperatureK: number, pressurePa: 
       sources: [],
     };
   }
+  if (isLiquefied(material, temperatureK, pressurePa)) return asLiquid(material, temperatureK, pressurePa);
   return (
     byTables(material, temperatureK, pressurePa) ??
     bySpecies(material, temperatureK) ??
@@ -63,6 +65,37 @@ function ofPortions(material: Material, temperatureK: number, pressurePa: number
   }
   if (missing.length > 0) return { kind: 'missing', missing: [...new Set(missing)] };
   return { kind: 'preheat', jPerKg, parts, gasMolPerKg, sources: [...new Set(sources)] };
+}
+
+/** A gas below its boiling point. Under less than an atmosphere it may still be one. */
+function isLiquefied({ phase, boilingPoint }: Material, temperatureK: number, pressurePa: number): boolean {
+  return phase === 'g' && boilingPoint !== null && temperatureK < boilingPoint.value && pressurePa > leastLiquidPa;
+}
+
+const leastLiquidPa = 0.9e5;
+
+/** As gas down to its boiling point, then the heat that boiling takes, then as liquid. */
+function asLiquid(material: Material, temperatureK: number, pressurePa: number): Preheat {
+  const { name, boilingPoint, molarMass, heatCapacity, origin } = material;
+  const liquid = origin === 'catalogue' ? liquefiedGas(name) : undefined;
+  if (!boilingPoint || !molarMass || !liquid)
+    return { kind: 'missing', missing: [`the heat of vaporization of ${name}`] };
+  const belowK = boilingPoint.value - temperatureK;
+  if (belowK > harmlessBelowK) return { kind: 'missing', missing: [`the heat capacity of liquid ${name} so cold`] };
+  const gas = byTables(material, boilingPoint.value + 0.01, Math.min(pressurePa, leastLiquidPa));
+  const asGasJPerKg =
+    gas?.kind === 'preheat'
+      ? gas.jPerKg
+      : heatCapacity && enthalpyRise(heatCapacity, referenceTemperatureK, boilingPoint.value);
+  if (asGasJPerKg === null) return { kind: 'missing', missing: [`the heat capacity of ${name}`] };
+  const condensingJPerKg = (liquid.latentJPerMol + liquid.liquidJPerMolK * belowK) / molarMass.value;
+  return {
+    kind: 'preheat',
+    jPerKg: asGasJPerKg - condensingJPerKg,
+    parts: noParts,
+    gasMolPerKg: 0,
+    sources: [...(gas?.kind === 'preheat' ? gas.sources : []), liquid.source],
+  };
 }
 
 /** J/mol that a name's isomer may differ by and still be taken for it: less than any two isomers do. */
@@ -134,7 +167,7 @@ function byHeatCapacity(material: Material, temperatureK: number, pressurePa: nu
   const other = substance && phasesOfSubstance(substance.name).find((one) => one.phase === phaseLetters[phase]);
   const otherJPerKg = other?.energy.kind === 'formation-enthalpy' ? other.energy.jPerKg.value : undefined;
   if (!other?.heatCapacity || otherJPerKg === undefined || !formationEnthalpy) {
-    const change = isGas ? 'vaporization' : phase === 'solid' ? 'freezing' : 'melting';
+    const change = isGas || material.phase === 'g' ? 'vaporization' : phase === 'solid' ? 'freezing' : 'melting';
     return { kind: 'missing', missing: [`the heat of ${change} of ${name}`] };
   }
   const rise = enthalpyRise(other.heatCapacity, referenceTemperatureK, temperatureK);
