@@ -5,11 +5,13 @@ import type { Span } from '../../../grammar/tree.ts';
 import type { BurnFault } from '../../core/burn/burn.ts';
 import { knockOf, lowerLimitAt, sprayDelayS } from '../../core/engine/ignition.ts';
 import type { CycleFault } from '../../core/engine/reciprocating.ts';
-import type { SolvedEngine } from '../../core/engine/solved-engine.ts';
+import { hasParticles, type SolvedEngine } from '../../core/engine/solved-engine.ts';
+import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import type { Context } from '../context.ts';
 import { autoignitionOf, lowerLimitOf, outsideStandard } from '../fuel-ignition.ts';
+import { reportMetal } from '../report-metal.ts';
 import type { EngineRead } from './engine-entries.ts';
 import type { WrittenCycle } from './engine-cycle-question.ts';
 
@@ -99,6 +101,7 @@ export function reportCycle(
 ): void {
   reportPressure(engine, written.maximumFiringPressure, places.limit, context);
   reportStandardFuel(written, places.fuel, context);
+  reportHotMetal(engine, written, read, places.products, context);
   const speedPerS = read.speed?.value.quantity.value ?? null;
   if (written.fuel.vapour) {
     if (!written.pilot) reportLean(engine, written, places.lambda, context);
@@ -106,6 +109,31 @@ export function reportCycle(
       reportKnock(engine, read.octaneNumber.value.quantity, speedPerS, read.octaneNumber.entry.span, context);
     }
   } else if (!written.pilot) reportSpray(engine, written, speedPerS, places.header, context);
+}
+
+/**
+ * What the exhaust leaves on metal: of the temperature that is given, or, where none is, of the exhaust behind the valve in all
+ * corners. Valves may be hotter, and cooled seats colder.
+ */
+function reportHotMetal(
+  { cycles, charge }: SolvedEngine,
+  { fuel }: WrittenCycle,
+  read: EngineRead,
+  place: Span,
+  context: Context,
+): void {
+  if (!hasParticles(charge.burningMol.keys())) return;
+  const given = read.metalTemperature?.value.quantity.value;
+  const exhaustK = cycles.map(({ cycle }) => cycle.exhaustTemperatureK);
+  const metal =
+    given === undefined ? { fromK: Math.min(...exhaustK), toK: Math.max(...exhaustK) } : { fromK: given, toK: given };
+  const pressurePa = charge.input.exhaustPressurePa;
+  const stateAt = (temperatureK: number): Equilibrium | null => {
+    const state = charge.reacting.burnt({ held: 'temperature-pressure', temperatureK, pressurePa });
+    return state.kind === 'none' ? null : state;
+  };
+  const vanadiumMolPerKg = fuel.material.elements.get('V')?.value ?? 0;
+  reportMetal(metal, stateAt, vanadiumMolPerKg, place, context);
 }
 
 /** A gas has standards of its own; this one is for what is stored as a liquid, with solids in it or not. */

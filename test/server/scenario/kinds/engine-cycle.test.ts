@@ -270,3 +270,21 @@ ${mark}
     `);
   });
 });
+
+describe('metal in the exhaust', () => {
+  test('of a temperature that is given meets what the products are there, molten caustic and carbonate among them', () => {
+    checkFacts(`${SLURRY}engine main {${MAIN}
+      fuel: slurry
+    # ^^^^^^^^^^^^ engine/no-standard-fuel
+      metal temperature: 900 degC
+    # ^^^^^^^^^^^^^^^^^^^^^^^^^^^ engine/deposits
+    # ^^^^^^^^^^^^^^^^^^^^^^^^^^^ engine/basic-attack
+    }
+    engine cool {${MAIN}
+      fuel: slurry
+    # ^^^^^^^^^^^^ engine/no-standard-fuel
+      metal temperature: 180 degC
+    }
+  `);
+  });
+});
