@@ -97,7 +97,13 @@ export function fuelledService(
     keepsResidue: written.keepsResidue,
     carriesWater: written.carriesWater,
   });
-  return { fuels, missing, sumsAt: (values, corner) => serviceSums(inputAt(values), corner) };
+  // All corners are asked of the same values, and a cycle may have to be worked out for them.
+  let last: { readonly values: readonly number[]; readonly input: ServiceInput } | null = null;
+  const inputOf = (values: readonly number[]): ServiceInput => {
+    if (last?.values !== values) last = { values, input: inputAt(values) };
+    return last.input;
+  };
+  return { fuels, missing, sumsAt: (values, corner) => serviceSums(inputOf(values), corner) };
 }
 
 /** What a comparison asks of a service. */

@@ -194,7 +194,9 @@ function afterLegs(
     fuelLeft -= total(fuelKg);
     const made = overFuels(fuelKg, fuels, ({ alkaliSaltKgPerKg, ashKgPerKg }) => alkaliSaltKgPerKg + ashKgPerKg);
     residue += keepsResidue ? made : 0;
-    return { fuelKg: fuelLeft, residueKg: residue };
+    // Without a reserve the last leg ends with nothing, but for rounding.
+    const isEmpty = Math.abs(fuelLeft) < 1e-9 * carriedKg;
+    return { fuelKg: isEmpty ? 0 : fuelLeft, residueKg: residue };
   });
 }
 
