@@ -55,7 +55,10 @@ export function answerRequests(serving: Serving): void {
 
   connection.onHover(
     answered('Hover', null, log, async ({ textDocument, position }): Promise<Hover | null> => {
-      const evaluated = await evaluations.current(textDocument.uri);
+      // What rests on long work has nothing to show before that is done: a little patience gives more than an empty answer.
+      const evaluated =
+        (await inTime(evaluations.current(textDocument.uri, () => undefined))) ??
+        (await evaluations.current(textDocument.uri));
       if (!evaluated?.scenario) return null;
       const offset = offsetAt(evaluated.document, position);
       let found = hover(evaluated.scenario, evaluated.address, offset);
@@ -110,6 +113,22 @@ export function answerRequests(serving: Serving): void {
       });
     }),
   );
+}
+
+/** As long as a hover waits for long work. */
+const HOVER_MS = 400;
+
+/** What is promised, or null where it takes too long for a person who points at something. */
+async function inTime<T>(promised: Promise<T>): Promise<T | null> {
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  const late = new Promise<null>((resolve) => {
+    timer = setTimeout(() => resolve(null), HOVER_MS);
+  });
+  try {
+    return await Promise.race([promised, late]);
+  } finally {
+    clearTimeout(timer);
+  }
 }
 
 /** `only` names kinds; a kind stands for all kinds below it too. */
