@@ -40,7 +40,9 @@ function pathTable(
   gaps: () => readonly PathGap[],
 ): Table {
   // `gaps` may be absent of a table, so the compiler does not know that it is there to be worked out.
-  const full: Table & { readonly gaps: readonly PathGap[] } = { ...table, rows: [], gaps: [], work };
+  const full: Table & { readonly gaps: readonly PathGap[] } = { ...table, rows: [], gaps: [] };
+  // It is no datum: who lists or compares the table's fields does not meet it.
+  Object.defineProperty(full, 'work', { value: work });
   return lazily(full, { rows, gaps });
 }
 
