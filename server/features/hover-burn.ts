@@ -29,7 +29,8 @@ export function burnLines({ figures, tables }: EvaluatedDefinition): HoverLine[]
 
 function productLines(table: Table | undefined): HoverLine[] {
   const share = columnOf(table, 'mass-share');
-  const products = table?.rows.slice(0, MOST_PRODUCTS).map((row) => `${speciesText(text(row[0]))} ${percent(row[share])}`) ?? [];
+  const products =
+    table?.rows.slice(0, MOST_PRODUCTS).map((row) => `${speciesText(text(row[0]))} ${percent(row[share])}`) ?? [];
   return products.length === 0 ? [] : [{ label: 'Leading products, by mass', text: products.join(', ') }];
 }
 

@@ -131,18 +131,17 @@ export function acknowledgement(code: string, definition: Definition, context: C
   };
 }
 
-/** An edit that puts a line behind the last one of a definition, indented as that is. */
+/**
+ * An edit that puts a line behind the last one of a definition. It hangs on what the text says and not on comments and
+ * blank space, so that it stays where it belongs when these change.
+ */
 function lineAfter(definition: Definition, line: string, context: Context): Pick<Mend, 'place' | 'newText'> {
   const { text } = context.placed.section;
   const last: Span = definition.lines.at(-1)?.span ?? definition.header;
-  const [restOfLine = ''] = /^[^\r\n]*/.exec(text.slice(last.end)) ?? [];
-  const isCommentAtMost = /^\s*(#.*)?$/.test(restOfLine);
-  const at = isCommentAtMost ? last.end + restOfLine.length : last.end;
-  const [, indent = '  '] = /(?:^|\n)([ \t]*)$/.exec(text.slice(0, last.start)) ?? [];
-  const isHeader = definition.lines.length === 0;
-  const newline = text.includes('\r\n') ? '\r\n' : '\n';
-  return {
-    place: context.place({ start: at, end: at }),
-    newText: `${newline}${isHeader ? '  ' : indent}${line}`,
-  };
+  const brace = definition.closed ? definition.span.end - 1 : -1;
+  if (brace >= last.end && text.slice(last.end, brace).includes('\n')) {
+    return { place: context.place({ start: brace, end: brace }), newText: `  ${line}\n` };
+  }
+  const mark = definition.lines.length === 0 ? ' ' : '; ';
+  return { place: context.place({ start: last.end, end: last.end }), newText: `${mark}${line}` };
 }

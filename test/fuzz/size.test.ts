@@ -20,7 +20,7 @@ function codesOf(text: string): ReadonlyMap<string, number> {
 }
 
 const rings = Array.from({ length: 20_000 }, (_, index) => `let a${index} = a0 + a${index + 1}\n`).join('');
-const kinds = Array.from({ length: 20_000 }, (_, index) => `sea s${index} {\n}\n`).join('');
+const kinds = Array.from({ length: 20_000 }, (_, index) => `fleet s${index} {\n}\n`).join('');
 
 describe('a large text', () => {
   test.each<[what: string, text: string, code: string, count: number]>([

@@ -173,7 +173,7 @@ describe('in an expression', () => {
       { first: ['slurry'], has: ['methanol'], lacks: ['days'] },
     ],
     ['`of` an unknown figure', `${SLURRY}expect nonsense of $0\n`, { lacks: ['slurry', 'methanol'] }],
-    ['definitions that are not worked out', 'compare b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
+    ['definitions that are not worked out', 'fleet b {\n}\nexpect flame temperature of $0\n', { first: ['b'] }],
     [
       'products in the flame, and none for which a state would have to be solved',
       `${BURN}expect mass share of $0\n`,

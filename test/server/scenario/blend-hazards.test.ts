@@ -127,7 +127,7 @@ describe('mends', () => {
     const text = 'blend spirit {\r\n\t100 % ethanol # neat }\r\n}\r\n';
     const mends = mendsIn(text, 'hazard/flammable-range');
     expect(mends['Blanket it with nitrogen']).toBe(
-      'blend spirit {\r\n\t100 % ethanol # neat }\r\n\tblanket: nitrogen\r\n}\r\n',
+      'blend spirit {\r\n\t100 % ethanol # neat }\r\n  blanket: nitrogen\n}\r\n',
     );
     expect(isGone(mends['Blanket it with nitrogen'] ?? '', 'hazard/flammable-range')).toBe(true);
   });
