@@ -26,17 +26,21 @@ test('a half-written portion is completed with a substance and its card', async 
   assert.match(text, /CH3OH, liquid/);
 });
 
-test('a figure is offered with its value', async () => {
+test('a figure is offered, and its value stands beside the offer in focus', async () => {
   const document = await openScenario(`${BLEND}expect lower hea\n`);
   const item = await eventually('the offer', async () => {
     const { items } = await vscode.commands.executeCommand<vscode.CompletionList>(
       'vscode.executeCompletionItemProvider',
       document.uri,
       behind(document, 'lower hea'),
+      undefined,
+      5,
     );
     return items.find(({ label }) => labelOf(label) === 'lower heating value of winter_fuel');
   });
-  assert.match(typeof item.label === 'string' ? (item.detail ?? '') : (item.label.description ?? ''), /MJ\/kg$/);
+  const { detail = '', documentation = '' } = item;
+  const beside = `${detail} ${typeof documentation === 'string' ? documentation : documentation.value}`;
+  assert.match(beside, /\d MJ\/kg/);
 });
 
 test('a name leads to its definition', async () => {
