@@ -28,6 +28,18 @@ export function leadingRank(id: string): number {
 
 const RANKS: ReadonlyMap<string, number> = new Map(
   [
+    'brake-efficiency',
+    'specific-fuel-consumption',
+    'specific-consumption',
+    'mean-effective-pressure',
+    'peak-pressure',
+    'exhaust-temperature',
+    'fuel-mass',
+    'annual-fuel-mass',
+    'annual-carbon-dioxide',
+    'added-mass',
+    'payload-lost',
+    'endurance',
     'flame-temperature',
     'condensed-share',
     'flame-zone-temperature',

@@ -18,11 +18,11 @@ import type { Working } from './working.ts';
 export const dutyFigures = [
   { id: 'hours', label: 'Time of the duty', unit: 'h', method: 'duty-sum' },
   { id: 'distance', label: 'Distance run', unit: 'nmi', method: 'duty-sum' },
-  { id: 'energy', label: 'Work at the shafts of all engines', unit: 'kWh', method: 'duty-sum' },
-  { id: 'mean-power', label: 'Work over the time of the duty', unit: 'kW', method: 'duty-sum' },
+  { id: 'energy', label: 'Brake energy of all engines', unit: 'kWh', method: 'duty-sum' },
+  { id: 'mean-power', label: 'Mean brake power over the duty', unit: 'kW', method: 'duty-sum' },
   {
     id: 'weighted-load',
-    label: 'Mean load: work over what the running engines would do at their ratings',
+    label: 'Mean load of the running engines, by time',
     unit: '1',
     method: 'weighted-mode-load',
   },
@@ -30,13 +30,13 @@ export const dutyFigures = [
   { id: 'boiler-heat', label: 'Heat from the boiler', unit: 'kWh', method: 'duty-sum' },
   {
     id: 'specific-consumption',
-    label: 'Fuel energy (lower heating value) for the work, sum over sum',
+    label: 'Specific energy consumption over the duty, on the lower heating value',
     unit: 'MJ/kWh',
     method: 'service-fuel',
   },
   {
     id: 'specific-fuel-consumption',
-    label: 'Mass of fuel for the work, sum over sum',
+    label: 'Specific fuel consumption over the duty',
     unit: 'g/kWh',
     method: 'service-fuel',
   },

@@ -14,7 +14,7 @@ export const serviceFigures = [
   { id: 'fuel-mass', label: 'Fuel, per duty', unit: 't', method: 'service-fuel' },
   { id: 'fuel-volume', label: 'Fuel by volume, per duty', unit: 'm3', method: 'service-fuel' },
   { id: 'fuel-energy', label: 'Fuel energy (lower heating value), per duty', unit: 'GJ', method: 'service-fuel' },
-  { id: 'brake-energy', label: 'Work at the shafts of all engines, per duty', unit: 'MWh', method: 'duty-sum' },
+  { id: 'brake-energy', label: 'Brake energy of all engines, per duty', unit: 'MWh', method: 'duty-sum' },
   {
     id: 'carbon-dioxide',
     label: 'Carbon dioxide if all carbon of the fuel leaves so, tank to wake, per duty',
@@ -53,8 +53,8 @@ export const serviceFigures = [
   { id: 'annual-residue', label: 'Solids made, per year', unit: 't/year', method: 'service-residue' },
   { id: 'annual-alkali', label: 'Alkali metal that leaves, per year', unit: 'kmol/year', method: 'service-emission' },
   { id: 'fuel-carried', label: 'Fuel on board after bunkering, reserve included', unit: 't', method: 'service-tank' },
-  { id: 'tank-volume', label: 'Space for the tanks', unit: 'm3', method: 'service-tank' },
-  { id: 'tank-mass', label: 'Mass of the tanks', unit: 't', method: 'service-tank' },
+  { id: 'tank-volume', label: 'Tank volume', unit: 'm3', method: 'service-tank' },
+  { id: 'tank-mass', label: 'Tank mass', unit: 't', method: 'service-tank' },
   {
     id: 'mass-on-board',
     label: 'Fuel, its tanks and its water after bunkering',
@@ -69,13 +69,13 @@ export const serviceFigures = [
   },
   {
     id: 'endurance',
-    label: 'Time that the fuel carried lasts, reserve included',
+    label: 'Endurance on the fuel carried, reserve included',
     unit: 'd',
     method: 'service-endurance',
   },
   {
     id: 'range',
-    label: 'Distance that the fuel carried lasts, reserve included',
+    label: 'Range on the fuel carried, reserve included',
     unit: 'nmi',
     method: 'service-endurance',
   },
@@ -88,12 +88,12 @@ export const serviceFigures = [
   },
   {
     id: 'added-mass',
-    label: 'More on board than on the baseline, at its greatest',
+    label: 'Added mass against the baseline, at its greatest',
     unit: 't',
     method: 'against-baseline',
   },
-  { id: 'added-volume', label: 'More space for tanks than on the baseline', unit: 'm3', method: 'against-baseline' },
-  { id: 'payload-lost', label: 'Payload that the added mass displaces', unit: 't', method: 'against-baseline' },
+  { id: 'added-volume', label: 'Added tank volume against the baseline', unit: 'm3', method: 'against-baseline' },
+  { id: 'payload-lost', label: 'Payload lost to the added mass', unit: 't', method: 'against-baseline' },
   {
     id: 'extra-bunkering-calls',
     label: 'More bunkering calls than on the baseline if the tank space stays that of the baseline, per year',

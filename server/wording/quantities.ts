@@ -111,7 +111,10 @@ export function celsiusText(temperature: Quantity): string {
 
 /** Whether a figure or column is a share of a whole, which people read in percent. */
 export function isShare(id: string, unit: string | null): boolean {
-  return unit === '1' && /(^|-)(share|flammable-limit|efficiency|wetness)$|^(best-)?load$/.test(id);
+  return (
+    unit === '1' &&
+    /(^|-)(share|flammable-limit|efficiency|wetness)$|^((best|weighted)-)?load(-above|-up-to)?$/.test(id)
+  );
 }
 
 /** A share told in percent: `30 %`, `(30.0 ± 1.5) %`. */
