@@ -6,5 +6,8 @@ import type { FactOf, Rule } from './rule.ts';
 
 export const nameWrongKind: Rule<FactOf<'name/wrong-kind'>> = {
   severity: 'error',
-  message: ({ name, is, needed }) => `${quoted(name)} is ${is}, but ${needed} is needed here.`,
+  message: ({ name, is, needed }) => `${quoted(name)} is ${articled(is)}, but ${articled(needed)} is needed here.`,
 };
+
+/** `an engine` for `a engine`: the sort may be any kind's word. */
+const articled = (sort: string): string => sort.replace(/^a (?=[aeiou])/, 'an ');
