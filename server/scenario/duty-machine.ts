@@ -107,6 +107,7 @@ function legInput(
     speedMPerS: speed(values),
     calm: leg.calm,
     engines: demands.map((one) => one(values)),
+    isOnShore: leg.shore !== null,
     shoreW: shore(values),
   });
 }
@@ -124,6 +125,7 @@ function cycleLegs(
     speedMPerS: null,
     calm: false,
     engines: [{ engine: 0, asked: { by: 'load', load: loadsOfModes(cycle, share(values))[mode] ?? NaN } }],
+    isOnShore: false,
     shoreW: 0,
   }));
 }

@@ -47,7 +47,7 @@ function profileText(): string {
 function serviceOfProfile(text: string): number {
   const profile = readProfile(text);
   if (profile.kind === 'fault') throw new Error(profile.why);
-  const leg = { timeS: rows * 10, distanceM: null, speedMPerS: null, calm: false, shoreW: 0 };
+  const leg = { timeS: rows * 10, distanceM: null, speedMPerS: null, calm: false, isOnShore: false, shoreW: 0 };
   const plan = planOf({
     ratedPowerW: [6.4e6],
     legs: [{ ...leg, engines: [{ engine: 0, asked: { by: 'load', load: 1 } }], profile: profile.steps }],

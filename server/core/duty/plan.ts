@@ -24,6 +24,8 @@ export interface LegInput {
   readonly calm: boolean;
   /** The first is what drives the ship, where a speed is in play. */
   readonly engines: readonly AskedOfEngine[];
+  /** The ship lies on the shore's power: hotel loads come from there, whether an engine runs or not. */
+  readonly isOnShore: boolean;
   /** Power from the shore, W. */
   readonly shoreW: number;
   /** Steps of measured time and power in place of one steady power of the first engine. */
@@ -83,8 +85,9 @@ function plannedLeg(leg: LegInput, input: DutyInput): PlannedLeg {
     if (asked.by === 'load') return asked.load * rated;
     return service && speed !== null ? loadAtSpeed(service, speed, leg.calm) * rated : NaN;
   };
-  const isOnShore = leg.engines.length === 0 && leg.profile === undefined;
-  const others = [...leg.engines.slice(1), ...(isOnShore ? [] : input.hotel), ...(isOnShore ? [] : input.auxiliaries)];
+  const { isOnShore } = leg;
+  const isDriven = first !== undefined || leg.profile !== undefined;
+  const others = [...leg.engines.slice(1), ...(isOnShore ? [] : input.hotel), ...(isDriven ? input.auxiliaries : [])];
   const demands = new Map<number, Demand[]>();
   if (first) {
     const steps = leg.profile ?? [{ timeS, powerW: power(first) }];

@@ -91,13 +91,20 @@ export interface ServiceSums {
   readonly carriedM3: number;
   readonly tankM3: number;
   readonly tankKg: number;
-  /** Fuel, its tank, water for it and, before it is landed, the residue of all duties between two bunkerings. */
+  /** Fuel, its tank and water for it after bunkering. */
   readonly onBoardKg: number;
+  /** The most that these and the residue kept weigh after any leg of any duty between two bunkerings. */
   readonly heaviestKg: number;
   readonly enduranceS: number;
   readonly rangeM: number;
-  /** After each leg: fuel that is left and residue that is kept, kg. */
-  readonly afterLegs: readonly { readonly fuelKg: number; readonly residueKg: number }[];
+  readonly afterLegs: readonly OnBoard[];
+}
+
+/** Fuel and water that are left and residue that is kept, kg. */
+export interface OnBoard {
+  readonly fuelKg: number;
+  readonly residueKg: number;
+  readonly waterKg: number;
 }
 
 /** The sums of one duty at one corner. NaN where something is not known. */
@@ -118,10 +125,8 @@ export function serviceSums(input: ServiceInput, corner: Corner): ServiceSums {
   const carriedM3 = carriedKg * volumePerKg;
   const tankKg = carriedKg * total(fuelKg.map((kg, fuel) => ((tanks.massPerFuel[fuel] ?? 0) * kg) / dutyKg));
   const waterPerDutyKg = input.carriesWater ? over(({ waterMissingKgPerKg }) => waterMissingKgPerKg) : 0;
-  const residueKg = over(({ alkaliSaltKgPerKg, ashKgPerKg }) => alkaliSaltKgPerKg + ashKgPerKg);
   const onBoardKg = carriedKg + tankKg + waterPerDutyKg * duties;
-  // A kilogram of fuel may leave more than a kilogram of residue: the ship is then heaviest before the residue is landed.
-  const endKg = carriedKg - burntBetweenKg - boiledOffKg + tankKg + (input.keepsResidue ? residueKg * duties : 0);
+  const left = afterLegs(byLeg, input, carriedKg, boiledOffKg / duties / timeS);
   const lastsS = (carriedKg - boiledOffKg) / (dutyKg / timeS);
   return {
     fuelKg,
@@ -143,10 +148,10 @@ export function serviceSums(input: ServiceInput, corner: Corner): ServiceSums {
     tankM3: carriedM3 / tanks.maximumFilling / tanks.packingShare,
     tankKg,
     onBoardKg,
-    heaviestKg: Math.max(onBoardKg, endKg),
+    heaviestKg: tankKg + heaviest(left, { fuelKg: carriedKg, residueKg: 0, waterKg: waterPerDutyKg * duties }, duties),
     enduranceS: lastsS,
     rangeM: (lastsS / timeS) * distanceM,
-    afterLegs: afterLegs(byLeg, input, carriedKg),
+    afterLegs: left,
   };
 }
 
@@ -183,21 +188,40 @@ function legFuel(leg: PlannedLeg, { engines, boilers, fuels }: ServiceInput, cor
   return { fuelKg, workJ, slipKg };
 }
 
-/** From the first duty after bunkering on. */
+/** After each leg of the first duty after bunkering. */
 function afterLegs(
   byLeg: readonly LegFuel[],
-  { fuels, keepsResidue }: ServiceInput,
+  { plan, fuels, keepsResidue, carriesWater, dutiesPerBunkering }: ServiceInput,
   carriedKg: number,
-): ServiceSums['afterLegs'] {
-  let [fuelLeft, residue] = [carriedKg, 0];
-  return byLeg.map(({ fuelKg }) => {
-    fuelLeft -= total(fuelKg);
+  boilOffKgPerS: number,
+): readonly OnBoard[] {
+  const missing = byLeg.map(({ fuelKg }) =>
+    carriesWater ? overFuels(fuelKg, fuels, ({ waterMissingKgPerKg }) => waterMissingKgPerKg) : 0,
+  );
+  let [fuelLeft, residue, waterLeft] = [carriedKg, 0, total(missing) * dutiesPerBunkering];
+  return byLeg.map(({ fuelKg }, leg) => {
+    const boiledOffKg = boilOffKgPerS === 0 ? 0 : boilOffKgPerS * (plan[leg]?.timeS ?? NaN);
+    fuelLeft -= total(fuelKg) + boiledOffKg;
+    waterLeft -= missing[leg] ?? 0;
     const made = overFuels(fuelKg, fuels, ({ alkaliSaltKgPerKg, ashKgPerKg }) => alkaliSaltKgPerKg + ashKgPerKg);
     residue += keepsResidue ? made : 0;
     // Without a reserve the last leg ends with nothing, but for rounding.
     const isEmpty = Math.abs(fuelLeft) < 1e-9 * carriedKg;
-    return { fuelKg: isEmpty ? 0 : fuelLeft, residueKg: residue };
+    return { fuelKg: isEmpty ? 0 : fuelLeft, residueKg: residue, waterKg: waterLeft };
   });
+}
+
+/**
+ * A kilogram of fuel may leave more than a kilogram of residue, and another fuel none: what is on board may rise and fall
+ * again. After the same leg it goes in a straight line with the duties done, so the first and the last tell the most.
+ */
+function heaviest(afterFirst: readonly OnBoard[], bunkered: OnBoard, duties: number): number {
+  const massOf = ({ fuelKg, residueKg, waterKg }: OnBoard): number => fuelKg + residueKg + waterKg;
+  const [start, first] = [massOf(bunkered), afterFirst.map(massOf)];
+  const gainPerDutyKg = (first.at(-1) ?? start) - start;
+  // With less than a duty between bunkerings the legs that are reached are not known: what a duty gains goes evenly.
+  if (duties < 1) return Math.max(start, start + duties * gainPerDutyKg);
+  return Math.max(start, ...first, ...first.map((kg) => kg + (duties - 1) * gainPerDutyKg));
 }
 
 /** A number of a fuel that is not known matters only where some of that fuel is burnt. */

@@ -14,6 +14,7 @@ const idleLeg: LegInput = {
   speedMPerS: null,
   calm: false,
   engines: [],
+  isOnShore: false,
   shoreW: 0,
 };
 const duty: DutyInput = {
@@ -74,9 +75,20 @@ describe('a plan', () => {
   });
 
   test('on the shore the hotel load comes from there', () => {
-    const [leg] = planOf({ ...duty, legs: [{ ...idleLeg, shoreW: 50e3 }] });
+    const [leg] = planOf({ ...duty, legs: [{ ...idleLeg, isOnShore: true, shoreW: 50e3 }] });
     expect(leg?.demands).toEqual([]);
     expect(leg?.shoreJ).toBe(230e3 * 3600);
+  });
+
+  test('on the shore it comes from there also while an engine runs', () => {
+    const running = { ...idleLeg, engines: [{ engine: 0, asked: { by: 'power', powerW: 100e3 } as const }] };
+    const auxiliaries = [{ engine: 1, asked: { by: 'power', powerW: 40e3 } as const }];
+    const [leg] = planOf({ ...duty, auxiliaries, legs: [{ ...running, isOnShore: true, shoreW: 300e3 }] });
+    expect(leg?.demands).toEqual([
+      { engine: 0, timeS: 3600, powerW: 100e3 },
+      { engine: 1, timeS: 3600, powerW: 40e3 },
+    ]);
+    expect(leg?.shoreJ).toBe(480e3 * 3600);
   });
 
   test('a distance at a load takes the time of the speed that the load makes', () => {

@@ -107,6 +107,48 @@ describe('a service by hand', () => {
     expect(boiling.carriedKg - sums.carriedKg).toBeCloseTo(boiling.boiledOffKg * 3, 9);
   });
 
+  test('what boils off is taken off by the time of each leg', () => {
+    const boiling = serviceSums({ ...input, tanks: { ...input.tanks, boilOffPerS: 1e-7 } }, 'value');
+    const [first, second] = boiling.afterLegs;
+    const [still] = sums.afterLegs;
+    const firstKg = sums.carriedKg - (still?.fuelKg ?? NaN);
+    expect(boiling.carriedKg - (first?.fuelKg ?? NaN)).toBeCloseTo(firstKg + (boiling.boiledOffKg * 2) / 3, 9);
+    expect(boiling.carriedKg - (second?.fuelKg ?? NaN)).toBeCloseTo(main + pilot + boiling.boiledOffKg, 9);
+  });
+
+  test('residue of one fuel, then another that leaves none: the ship is heaviest between', () => {
+    const [engine] = input.engines;
+    const two = {
+      ...input,
+      engines: engine
+        ? [
+            { ...engine, pilot: null },
+            { ...engine, pilot: null, fuel: 1 },
+          ]
+        : [],
+      plan: input.plan.map((leg, index) => ({
+        ...leg,
+        demands: [{ engine: index, timeS: 3600, powerW: 1e6 }],
+        boilerJ: [0],
+      })),
+      reserveShare: 0,
+      dutiesPerBunkering: 1,
+    };
+    const between = serviceSums(two, 'value');
+    const [slurryKg, oilKg] = [(2.2 * 3.6e9) / 30e6, (2.2 * 3.6e9) / 42.7e6];
+    expect(between.heaviestKg).toBeCloseTo(oilKg + 1.7 * slurryKg + between.tankKg, 9);
+    const greatest = Math.max(
+      ...between.afterLegs.map(({ fuelKg, residueKg, waterKg }) => fuelKg + residueKg + waterKg),
+    );
+    expect(between.heaviestKg).toBeCloseTo(greatest + between.tankKg, 9);
+    // Over three duties it is heaviest within the first or, where a duty leaves more than it burns, within the last.
+    const thrice = serviceSums({ ...two, dutiesPerBunkering: 3 }, 'value');
+    expect(thrice.heaviestKg).toBeCloseTo(3 * oilKg + (2 + 2 * 0.2 + 1.7) * slurryKg + thrice.tankKg, 9);
+    const heavy = { ...two, dutiesPerBunkering: 3, fuels: [{ ...slurry, alkaliSaltKgPerKg: 2.9 }, oil] };
+    const last = serviceSums(heavy, 'value');
+    expect(last.heaviestKg).toBeCloseTo(oilKg + 3 * 3 * slurryKg + last.tankKg, 9);
+  });
+
   test('an engine of which nothing is known leaves work and time', () => {
     const [engine] = input.engines;
     const unknown = serviceSums({ ...input, engines: engine ? [{ ...engine, consumption: null }] : [] }, 'value');
