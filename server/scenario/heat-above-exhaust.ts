@@ -1,5 +1,5 @@
 // How much of a fuel's heating value is set free above the temperature of the exhaust, burnt lean to equilibrium with air
-// at 25 °C: the part that an engine can turn into work. Joins materials to core/burn; knows no engine.
+// at 25 °C and frozen on the way: the part that an engine can turn into work. Joins materials to core/burn; knows no engine.
 // Invariant: null where the fuel's energy, its λ or the state of its exhaust cannot be had.
 
 import { prepareBurn } from '../core/burn/prepare-burn.ts';
@@ -16,10 +16,18 @@ export interface LeanBurning {
   readonly oxidant: OxidantStream;
   readonly lambda: number;
   readonly exhaustK: number;
+  /** What would form in gas colder than this comes too late for work: hydroxides and carbonates of magnesium above all. */
+  readonly frozenBelowK: number;
 }
 
+/** Above it the reactions of flames keep pace with an expansion of milliseconds; below, solids form slowly. */
+export const workFrozenBelowC = 1000;
+
 /** The share of the lower heating value; may be negative where the exhaust takes away more than is set free. */
-export function shareAboveExhaust(fuel: Material, { oxidant, lambda, exhaustK }: LeanBurning): number | null {
+export function shareAboveExhaust(
+  fuel: Material,
+  { oxidant, lambda, exhaustK, frozenBelowK }: LeanBurning,
+): number | null {
   const heatingValue = lowerHeatingValueOf(fuel);
   if (!heatingValue) return null;
   const ambient = { ...oxidant, temperature: kelvin(referenceTemperatureK) };
@@ -31,6 +39,7 @@ export function shareAboveExhaust(fuel: Material, { oxidant, lambda, exhaustK }:
     heat: { heat: 'adiabatic', lossShare: 0 },
     lowerHeatingValueJPerKg: heatingValue.value,
     cooledToK: [],
+    frozenBelowK,
   });
   const heatJ = burning.kind === 'fault' ? null : burning.heatAbove(exhaustK);
   return typeof heatJ === 'number' ? heatJ / heatingValue.value : null;

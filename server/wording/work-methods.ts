@@ -93,7 +93,8 @@ export const workAssumptions: Readonly<Record<WorkAssumptionId, string>> = {
   'lower-heating-value-basis': 'Efficiency and specific consumption are on the lower heating value.',
   'tolerance-upwards':
     'The tolerance of the consumption is taken upwards: the value reckons with all of it, the lower end with none.',
-  'same-use-of-heat': 'On another fuel the engine makes the same work of the heat set free above exhaust temperature.',
+  'same-use-of-heat':
+    'On another fuel the engine makes the same work of the heat set free above exhaust temperature; what would form in gas colder than 1000 °C, or than it is written to freeze at, comes too late for work.',
   'reference-ambient':
     'Consumption holds at 25 °C and 100 kPa unless said otherwise; it is not carried over to other air.',
   'friction-kept':

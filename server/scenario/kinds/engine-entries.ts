@@ -177,7 +177,10 @@ export const engineEntries = {
     name: 'frozen below',
     reader: temperature('1400 degC'),
     help: 'The composition of the expanding gas stays as it is there from this temperature down.',
-    default: { text: 'never', source: convention },
+    default: {
+      text: 'never; 1000 °C where a measured consumption is carried over to another fuel',
+      source: 'convention of this program: solids that form in colder gas come too late for work',
+    },
   },
   mechanicalEfficiency: {
     name: 'mechanical efficiency',

@@ -11,7 +11,7 @@ import type { Context } from '../context.ts';
 import { consumptionFigures, consumptionValues, loadTable } from '../engine-consumption.ts';
 import type { AtLoad } from '../engine-readers.ts';
 import type { ReadEntry } from '../entries.ts';
-import { lowerHeatingValueOf, shareAboveExhaust, type LeanBurning } from '../heat-above-exhaust.ts';
+import { lowerHeatingValueOf, shareAboveExhaust, workFrozenBelowC, type LeanBurning } from '../heat-above-exhaust.ts';
 import { lazily } from '../lazily.ts';
 import type { BurningEngine, EngineMachine, EngineSlips, NotBurning } from '../machinery.ts';
 import type { Material } from '../material.ts';
@@ -59,6 +59,7 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
       oxidant,
       lambda: read.lambda?.value.quantity.value ?? measuredLambda,
       exhaustK: read.exhaustTemperature?.value.quantity.value ?? measuredExhaustC + celsiusZeroK,
+      frozenBelowK: read.frozenBelow?.value.quantity.value ?? workFrozenBelowC + celsiusZeroK,
     },
     slips: slipsOf(read),
   };

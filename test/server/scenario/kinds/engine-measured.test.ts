@@ -113,12 +113,14 @@ describe('another fuel', () => {
         oxidant: air
         lambda: 2.2
         exhaust temperature: 350 degC
+        frozen below: 1000 degC
       }
       burn on_methanol {
         fuel: methanol
         oxidant: air
         lambda: 2.2
         exhaust temperature: 350 degC
+        frozen below: 1000 degC
       }
       let oil = heat above exhaust of on_oil / lower heating value of gas_oil
       let alcohol = heat above exhaust of on_methanol / lower heating value of methanol
@@ -126,6 +128,24 @@ describe('another fuel', () => {
     const [oil = NaN, alcohol = NaN] = scenario.files[0]?.values.map(({ quantity }) => quantity?.value) ?? [];
     expect(figureOf(scenario, 'genset', 'specific-consumption')).toBeCloseTo((0.205 * 42.7 * oil) / alcohol, 6);
     expect(oil / alcohol).not.toBeCloseTo(1, 3);
+  });
+
+  test('makes no work of the carbonate that would form in the exhaust', () => {
+    const engine = (name: string, fuel: string, more = ''): string => `
+      engine ${name} {
+        maximum continuous rating: 900 kW
+        fuel: ${fuel}
+        specific fuel consumption: 209 g/kWh at 50 %, 205 g/kWh at 100 %
+        measured on: gas_oil, 42.7 MJ/kg lower
+        exhaust temperature: 245 degC
+        ${more}
+      }`;
+    const scenario = evaluateText(`
+      blend thick { 40 % mass magnesium; rest gas_oil }
+      ${engine('oil', 'gas_oil')}${engine('late', 'thick', 'frozen below: 100 degC')}${engine('frozen', 'thick')}`);
+    const [oil, late, frozen] = ['oil', 'late', 'frozen'].map((name) => figureOf(scenario, name, 'brake-efficiency'));
+    expect(frozen).toBeGreaterThan(oil ?? NaN);
+    expect(late).toBeGreaterThan((frozen ?? NaN) + 0.01);
   });
 
   test('is asked for where the heating value is none of its own', () => {
