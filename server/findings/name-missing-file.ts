@@ -1,5 +1,5 @@
 /**
- * A file named by `use` is not there, cannot be read, lies outside the folder that may be read, or is not given by a
+ * A file named by `use` or by a profile is not there, cannot be read, lies outside the folder that may be read, or is not given by a
  * relative path. Paths are relative to the file they stand in, with `/`; `..` is allowed as far as the folder reaches.
  */
 import { quoted, sentences } from '../wording/words.ts';

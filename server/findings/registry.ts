@@ -43,6 +43,7 @@ import { engineTurbineInlet } from './engine-turbine-inlet.ts';
 import { engineTurbineSolids } from './engine-turbine-solids.ts';
 import { engineWetSteam } from './engine-wet-steam.ts';
 import { dutyLegName } from './duty-leg-name.ts';
+import { dutyProfile } from './duty-profile.ts';
 import { dutySpeed } from './duty-speed.ts';
 import { dutyTestCycle } from './duty-test-cycle.ts';
 import { dutyUnused } from './duty-unused.ts';
@@ -202,6 +203,7 @@ const rules: { readonly [Code in Fact['code']]: Rule<FactOf<Code>> } = {
   'engine/turbine-solids': engineTurbineSolids,
   'engine/wet-steam': engineWetSteam,
   'duty/leg-name': dutyLegName,
+  'duty/profile': dutyProfile,
   'duty/speed': dutySpeed,
   'duty/test-cycle': dutyTestCycle,
   'duty/unused': dutyUnused,

@@ -167,7 +167,7 @@ export function startServer(connection: Connection, host: Host = {}): void {
       }
       if (abilities.watching) {
         await connection.client.register(DidChangeWatchedFilesNotification.type, {
-          watchers: [{ globPattern: '**/*.stoke' }],
+          watchers: [{ globPattern: '**/*.stoke' }, { globPattern: '**/*.csv' }],
         });
       }
     } catch (error) {

@@ -65,6 +65,7 @@ function lend(scope: Scope): { readonly lent: Scope; readonly takeBack: () => vo
     lookup: (name) => open().lookup(name),
     names: () => open().names(),
     longWork: (work, key, input) => open().longWork(work, key, input),
+    fileText: (path) => open().fileText(path),
   };
   return {
     lent,

@@ -37,6 +37,8 @@ export interface Scope {
    * it can without it, and is asked again. To be asked for while the statement is worked out, and not later.
    */
   readonly longWork: AskLongWork;
+  /** The text of a file that the statement names by this path; null where it is not there, which has been said. */
+  fileText(path: string): string | null;
 }
 
 export class Context {

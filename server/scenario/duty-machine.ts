@@ -109,6 +109,7 @@ function legInput(
     engines: demands.map((one) => one(values)),
     isOnShore: leg.shore !== null,
     shoreW: shore(values),
+    ...(leg.profile ? { profile: leg.profile } : {}),
   });
 }
 

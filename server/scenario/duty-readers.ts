@@ -1,8 +1,9 @@
-// The readers of what only a duty takes: legs, standing demands on an engine, a boiler, a service speed, a test cycle, a
-// profile file. Each reports what it cannot take, at that phrase. Knows no propeller and works nothing out.
+// The readers of what only a duty takes: legs, standing demands on an engine, a boiler, a service speed, a test cycle.
+// Each reports what it cannot take, at that phrase. Knows no propeller and works nothing out.
 // Invariant: a reader looks at every item of every phrase it is given.
 
 import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
+import type { Step } from '../core/duty/plan.ts';
 import { testCycles, testCycleNamed, type TestCycle } from '../core/duty/test-cycles.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
@@ -47,6 +48,8 @@ export interface LegEntry {
   readonly engines: readonly DemandEntry[];
   /** Power from the shore, where that is asked for. */
   readonly shore: Quantity | null;
+  /** Measured steps of the first engine, in place of one power. */
+  readonly profile?: readonly Step[];
 }
 
 const takesLeg =
@@ -382,7 +385,7 @@ function isExtent(dimension: Needed['dimension']): boolean {
   return sameDimension(dimension, timeNeeded.dimension) || sameDimension(dimension, lengthNeeded.dimension);
 }
 
-function isConnective(item: PhraseItem | undefined, word: string): boolean {
+export function isConnective(item: PhraseItem | undefined, word: string): boolean {
   return item?.kind === 'connective' && item.word === word;
 }
 

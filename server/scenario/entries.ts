@@ -25,6 +25,8 @@ export interface Reader<T> {
   readonly names?: boolean;
   /** Kinds of the definitions they name; blends and substances where this is not said. */
   readonly kinds?: readonly string[];
+  /** Texts in quotes here are paths of files, relative to the file of the definition. */
+  readonly files?: boolean;
   /** Bare words here are chemical elements. */
   readonly elements?: boolean;
   read(entry: Entry, context: Context): T | undefined;

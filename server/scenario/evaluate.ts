@@ -57,13 +57,13 @@ export function* evaluateInSteps(
   earlier: Earlier = {},
   elsewhere?: WorkElsewhere,
 ): Generator<Underway, EvaluatedScenario> {
-  const { files, wanted } = loadFiles(path, read, earlier.trees);
+  const { files, wanted, lacksUsed } = loadFiles(path, read, earlier.trees);
   const bindings = bindNames(files);
   const isReadInPart = files.some(({ tree }) => isPartial(tree));
   // What is not there may stand in a file still to be fetched, or in the unread part of one that is too large.
   const mayStandElsewhere = (name: string): boolean => wanted.length > 0 || (isReadInPart && !isWellKnown(name));
   const questions = new Questions(files, bindings, mayStandElsewhere, earlier.answers, elsewhere);
-  const gathered = (): EvaluatedScenario => ({ files: gatherFiles(files, questions), wanted });
+  const gathered = (): EvaluatedScenario => ({ files: gatherFiles(files, questions, lacksUsed), wanted });
   const underway: Underway = {
     soFar() {
       questions.recallRest();
@@ -94,7 +94,7 @@ function isWellKnown(name: string): boolean {
 }
 
 /** The answers at their places, file by file. What stands in no finding is placed when somebody reads it. */
-function gatherFiles(files: readonly LoadedFile[], questions: Questions): readonly EvaluatedFile[] {
+function gatherFiles(files: readonly LoadedFile[], questions: Questions, lacksFile: boolean): readonly EvaluatedFile[] {
   const answers = questions.answersNow();
   const pathOf = new Map<PlacedSection, string>();
   for (const { path, tree } of files) for (const section of tree.sections) pathOf.set(section, path);
@@ -111,7 +111,6 @@ function gatherFiles(files: readonly LoadedFile[], questions: Questions): readon
     const section = questions.sectionNamed(name);
     return section && placedOf(section);
   };
-  const lacksFile = files.some(({ facts }) => facts.some(({ fact }) => fact.code === 'name/missing-file'));
   return files.map((file) => gather(file, answers, placedOf, placedByName, lacksFile));
 }
 

@@ -6,6 +6,7 @@ import type { Problem } from '../../grammar/tree.ts';
 import type { NoBalance } from '../core/balance/equation.ts';
 import type { GivenProductsFault } from '../core/balance/given-products.ts';
 import type { BurnFault } from '../core/burn/burn.ts';
+import type { ProfileFault } from '../core/duty/profile.ts';
 import type { NoEquilibrium } from '../core/equilibrium/equilibrium.ts';
 import type { SaltMeltingValidity } from '../core/equilibrium/melts.ts';
 import type { Dimension } from '../core/quantity/dimension.ts';
@@ -49,6 +50,13 @@ export type Fact =
       readonly path: string;
       readonly why: 'missing' | 'unreadable' | 'outside' | 'not-relative';
       readonly detail?: string;
+    }
+  | {
+      readonly code: 'duty/profile';
+      readonly path: string;
+      readonly why: ProfileFault['why'];
+      readonly row: number;
+      readonly text: string;
     }
   | {
       readonly code: 'name/unknown-entry';

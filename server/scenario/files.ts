@@ -1,12 +1,14 @@
-// Reaches the files of a scenario: parses the one asked about and follows each `use`, relative to the file it stands in.
+// Reaches the files of a scenario: parses the one asked about and follows each `use`, relative to the file it stands in, and
+// has at hand the text of each file of numbers that an entry names, by the same rules. What is in such a text is the kind's.
 // Reads nothing itself; a reader is handed in that answers with a text, a fault, or "wanted" when the text must first be
 // fetched. Each file is reached once. A cycle of files is one fact, at the `use` that closes it.
 // Invariant: the walk is iterative, so that a long chain of files cannot exhaust the stack.
 
 import { isPartial, parse, type ParseOptions } from '../../grammar/parse.ts';
-import type { PlacedSection, SyntaxTree, UseStatement } from '../../grammar/tree.ts';
+import type { Definition, PlacedSection, SyntaxTree, TextLiteral, UseStatement } from '../../grammar/tree.ts';
 import { isUnitWord } from '../core/quantity/read-unit.ts';
 import type { Fact } from './facts.ts';
+import { entryNamesFile } from './kinds/registry.ts';
 import { placeOf } from './place.ts';
 import type { PlacedFact } from './scenario.ts';
 
@@ -27,11 +29,15 @@ export interface LoadedFile {
   readonly used: boolean;
   readonly tree: SyntaxTree;
   readonly facts: PlacedFact[];
+  /** The texts that entries of a section name, by the path as written there; null for one that is not there. */
+  readonly named: Map<PlacedSection, Map<string, string | null>>;
 }
 
 export interface LoadedFiles {
   readonly files: readonly LoadedFile[];
   readonly wanted: readonly string[];
+  /** A file that is used, and may hold any name, is not there. */
+  readonly lacksUsed: boolean;
 }
 
 /**
@@ -44,15 +50,16 @@ export function loadFiles(
   earlier: ReadonlyMap<string, SyntaxTree> = new Map(),
 ): LoadedFiles {
   const answer = read(root);
-  if (answer === 'wanted') return { files: [], wanted: [root] };
-  if (!('text' in answer)) return { files: [], wanted: [] };
+  if (answer === 'wanted') return { files: [], wanted: [root], lacksUsed: false };
+  if (!('text' in answer)) return { files: [], wanted: [], lacksUsed: false };
 
   const files = new Map<string, LoadedFile>();
   const wanted = new Set<string>();
   const faulty = new Set<string>();
+  let lacksUsed = false;
   const open: { file: LoadedFile; next: number }[] = [];
   const enter = (path: string, used: boolean, { text, reading }: ReadText): void => {
-    const file = { path, used, tree: treeOf(text, earlier.get(path), reading), facts: [] };
+    const file = { path, used, tree: treeOf(text, earlier.get(path), reading), facts: [], named: new Map() };
     files.set(path, file);
     open.push({ file, next: 0 });
   };
@@ -64,15 +71,17 @@ export function loadFiles(
       open.pop();
       continue;
     }
-    if (placed.section.statement.kind !== 'use') continue;
-    followUse(top.file, placed, placed.section.statement);
+    const { statement } = placed.section;
+    if (statement.kind === 'use') followUse(top.file, placed, statement);
+    else if (statement.kind === 'definition') readNamed(top.file, placed, statement);
   }
-  return { files: [...files.values()], wanted: [...wanted] };
+  return { files: [...files.values()], wanted: [...wanted], lacksUsed };
 
   function followUse(file: LoadedFile, placed: PlacedSection, statement: UseStatement): void {
     const written = statement.path;
     if (!written) return; // the grammar has said that the path is missing
     const say = (fact: Fact): void => {
+      if (fact.code === 'name/missing-file') lacksUsed = true;
       file.facts.push({ fact, place: placeOf(file.path, placed, written.span) });
     };
     const resolved = resolveUse(file.path, written.value);
@@ -95,6 +104,26 @@ export function loadFiles(
     say(found.detail === undefined ? fact : { ...fact, detail: found.detail });
   }
 
+  /** The texts that a definition's entries name. Each that is not there is said at the entry, since that is what lacks it. */
+  function readNamed(file: LoadedFile, placed: PlacedSection, definition: Definition): void {
+    for (const { value: path, span } of fileNamesIn(definition)) {
+      const texts = file.named.get(placed) ?? new Map<string, string | null>();
+      if (texts.has(path)) continue;
+      file.named.set(placed, texts.set(path, null));
+      const asked = resolveUse(file.path, path);
+      const found = asked === null ? ({ fault: 'not-relative' } as const) : read(asked);
+      if (found === 'wanted') {
+        if (asked !== null) wanted.add(asked);
+      } else if ('text' in found) texts.set(path, found.text);
+      else {
+        const fact = { code: 'name/missing-file', path, why: found.fault } as const;
+        const detail = 'detail' in found ? found.detail : undefined;
+        const told = detail === undefined ? fact : { ...fact, detail };
+        file.facts.push({ fact: told, place: placeOf(file.path, placed, span) });
+      }
+    }
+  }
+
   /** Whether the file has been reached already; says so where that closes a cycle. */
   function isReached(path: string, say: (fact: Fact) => void): boolean {
     const onPath = open.findIndex((entry) => entry.file.path === path);
@@ -103,6 +132,14 @@ export function loadFiles(
     }
     return files.has(path);
   }
+}
+
+/** Where a definition's entries name files. */
+function fileNamesIn({ keyword, lines }: Definition): readonly TextLiteral[] {
+  return lines.flatMap((line) => {
+    if (line.kind !== 'entry' || !entryNamesFile(keyword.text, line.words)) return [];
+    return line.phrases.flatMap(({ items }) => items.filter((item): item is TextLiteral => item.kind === 'text'));
+  });
 }
 
 type ReadText = Extract<ReadAnswer, { text: string }>;

@@ -37,6 +37,10 @@ const UNKNOWN = 'unknown';
 const FAILED = 'failed';
 /** Looked up by a statement that went through all names for a suggestion. No name has a newline in it. */
 const ALL_NAMES = '\n';
+/** Before the path of a file that a statement names. The key is the text itself, so that a changed one asks again. */
+const FILE = '\n\n';
+/** The key of a file that is not there; a number, so unlike any text. */
+const NO_FILE = -1;
 
 export class Questions {
   /** All there is to ask: each statement behind all it mentions, but for rings. */
@@ -54,7 +58,7 @@ export class Questions {
 
   /** Orders what is to be asked; what is wrong with the order (rings) is said in the files. */
   constructor(
-    files: readonly LoadedFile[],
+    private readonly files: readonly LoadedFile[],
     private readonly bindings: Bindings,
     /** Whether a name that is not here may stand in a text that is not at hand. */
     private readonly mayBeElsewhere: (name: string) => boolean,
@@ -95,14 +99,14 @@ export class Questions {
   answer({ placed, statement }: Question): void {
     const question = significantTextOf(placed.section).text;
     this.#waiting.delete(placed);
-    const known = this.#store.recall(question, (name) => this.#keyNow(name));
+    const known = this.#store.recall(question, (name) => this.#keyNow(name, placed));
     if (known) {
       this.#answers.set(placed, known);
       return;
     }
     this.#lookedUp = new Map();
     const awaited: Awaited[] = (this.#awaited = []);
-    const answer = answerStatement(placed.section, statement, this.#scopeOf(awaited));
+    const answer = answerStatement(placed.section, statement, this.#scopeOf(awaited, placed));
     if (awaited.length > 0) {
       this.#waiting.set(placed, awaited);
       this.#answers.set(placed, { key: UNKNOWN, value: answer });
@@ -127,7 +131,7 @@ export class Questions {
     const pending = new Set([...unanswered].flatMap(({ name }) => name ?? []));
     for (const question of unanswered) {
       const known = this.#store.recall(significantTextOf(question.placed.section).text, (name) =>
-        pending.has(name) ? null : this.#keyNow(name),
+        pending.has(name) ? null : this.#keyNow(name, question.placed),
       );
       if (!known) continue;
       this.#answers.set(question.placed, known);
@@ -148,7 +152,7 @@ export class Questions {
   }
 
   /** The names and the long work of one statement. */
-  #scopeOf(awaited: Awaited[]): Scope {
+  #scopeOf(awaited: Awaited[], placed: PlacedSection): Scope {
     return {
       lookup: (name) => this.#lookup(name),
       names: () => {
@@ -160,11 +164,16 @@ export class Questions {
         if (awaited !== this.#awaited) throw new Error('long work was asked for after its statement was answered');
         return this.#longWork(work, key, input);
       },
+      fileText: (path) => {
+        const text = this.#fileText(placed, path);
+        this.#lookedUp.set(FILE + path, text ?? NO_FILE);
+        return text;
+      },
     };
   }
 
   #lookup(name: string): Named | undefined {
-    this.#lookedUp.set(name, this.#keyNow(name) ?? UNKNOWN);
+    this.#lookedUp.set(name, this.#nameKeyNow(name) ?? UNKNOWN);
     if (this.#unknowable.has(name)) return { kind: 'unknown' };
     const binding = this.bindings.unique.get(name);
     if (!binding) return this.mayBeElsewhere(name) ? { kind: 'unknown' } : undefined;
@@ -194,6 +203,14 @@ export class Questions {
     return kept.value;
   }
 
+  #fileText(placed: PlacedSection, path: string): string | null {
+    for (const { named } of this.files) {
+      const texts = named.get(placed);
+      if (texts) return texts.get(path) ?? null;
+    }
+    return null;
+  }
+
   #allNames(): readonly string[] {
     return [...this.bindings.unique.keys(), ...this.bindings.ambiguous];
   }
@@ -202,10 +219,15 @@ export class Questions {
     return (this.#namesKey ??= this.#allNames().join('\n'));
   }
 
-  /** The key of what a name, or a question of long work, stands for now; null for what is awaited or not kept. */
-  #keyNow(name: string): Key | null {
+  /** The key of what a statement looked up, as that is now; null for what is awaited or not kept. */
+  #keyNow(name: string, placed: PlacedSection): Key | null {
     if (name === ALL_NAMES) return this.#allNamesKey();
+    if (name.startsWith(FILE)) return this.#fileText(placed, name.slice(FILE.length)) ?? NO_FILE;
     if (name.startsWith('\n')) return this.elsewhere?.keyNow(name) ?? null;
+    return this.#nameKeyNow(name);
+  }
+
+  #nameKeyNow(name: string): Key | null {
     if (this.#unknowable.has(name)) return UNKNOWN;
     const binding = this.bindings.unique.get(name);
     if (!binding) return this.mayBeElsewhere(name) ? UNKNOWN : ABSENT;

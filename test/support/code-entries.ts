@@ -23,7 +23,10 @@ function exampleOf(code: string, file: string): CodeEntry['example'] {
   if (!existsSync(file)) return null;
   const text = readFileSync(file, 'utf8');
   const name = path.basename(file);
-  const scenario = evaluate(name, (asked) => (asked === name ? { text } : { fault: 'missing' }));
+  const scenario = evaluate(name, (asked) => {
+    const beside = path.join(path.dirname(file), asked);
+    return existsSync(beside) ? { text: readFileSync(beside, 'utf8') } : { fault: 'missing' };
+  });
   const finding = findingsOf(scenario).find((candidate) => candidate.code === code);
   return finding ? { text, severity: finding.severity, message: finding.message } : null;
 }

@@ -2,6 +2,7 @@
 // begins with a time or a distance is a leg, and legs may repeat.
 
 import { boilerReader, demandsReader, serviceSpeedReader, testCycleReader } from '../duty-readers.ts';
+import { profileReader } from '../profile-reader.ts';
 import { quantityReader } from '../readers.ts';
 
 const convention = 'convention of this program';
@@ -15,6 +16,11 @@ export const dutyEntries = {
     name: 'test cycle',
     reader: testCycleReader,
     help: 'A steady test cycle of ISO 8178-4, by name, in place of legs. It certifies an engine and does not describe what one does.',
+  },
+  profile: {
+    name: 'profile',
+    reader: profileReader,
+    help: 'A leg as it was logged: a file of comma-separated rows of time and power behind the line `time (s), power (kW)`. Each power holds until the next row; the last row ends the leg.',
   },
   runningTime: {
     name: 'running time',

@@ -50,9 +50,20 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const { entries: read, broken } = readEntries(definition, dutyEntries, context, [], takeLeg);
   refuseLines(definition, [], context);
   const header = definition.name?.span ?? definition.header;
-  if (!read.testCycle && !broken.has('testCycle') && legs.length + unreadLegs === 0) {
+  if (
+    !read.testCycle &&
+    !broken.has('testCycle') &&
+    !read.profile &&
+    !broken.has('profile') &&
+    legs.length + unreadLegs === 0
+  ) {
     const entries = ['a leg, such as `sail: 38 nmi at 11 kn on main`,', dutyEntries.testCycle.name];
     context.report(header, { code: 'name/missing-entry', kind: 'duty', name: context.owner, entries });
+  }
+  if (read.profile) {
+    const { value: leg, entry } = read.profile;
+    legs.push({ name: entry.words, leg, entry });
+    legs.sort((left, right) => left.entry.span.start - right.entry.span.start);
   }
   const [firstLeg] = legs;
   if (read.testCycle && firstLeg) {

@@ -66,6 +66,12 @@ export function entryWordNamesThing(kind: string, entry: string, word: string): 
   return (reader.names ?? false) || reader.unit !== undefined;
 }
 
+/** Whether texts in quotes in an entry are paths of files. */
+export function entryNamesFile(kind: string, entry: string): boolean {
+  const rows = Object.values(byWord.get(kind)?.evaluated?.entries ?? {});
+  return rows.find(({ name }) => name === entry)?.reader.files ?? false;
+}
+
 function later(kind: string, help: string): Kind {
   return { kind, help, evaluated: null };
 }

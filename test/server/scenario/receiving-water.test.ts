@@ -26,6 +26,7 @@ function waterOf(source: string): ReceivingWater | null {
     lookup: () => undefined,
     names: () => [],
     longWork: () => null,
+    fileText: () => null,
   });
   const { named } = answer;
   return named?.kind === 'definition' && named.machinery?.machinery === 'sea' ? named.machinery : null;
