@@ -132,19 +132,22 @@ export function loadTable(consumption: Consumption, heatingValue: number, loads:
 /** MJ/kWh in one J/J. */
 const joulesPerMJ = 3.6;
 
-/** Where it takes least, to a hundredth of the rating; null where no load is known. */
+/** Where it takes least, to a hundredth of the rating, the highest of equal ones; null where no load is known. */
 function bestLoad(consumption: Consumption): number | null {
   let best: number | null = null;
   let least = Infinity;
   for (let percent = 1; percent <= 110; percent += 1) {
     const load = percent / 100;
     const { heatRate, range } = consumption.heatRateAt(load);
-    if (range !== 'within' || heatRate.value >= least) continue;
+    if (range !== 'within' || heatRate.value > least * (1 + equalRates)) continue;
     best = load;
-    least = heatRate.value;
+    least = Math.min(least, heatRate.value);
   }
   return best;
 }
+
+/** Heat rates that differ by less, relative, differ by rounding alone. */
+const equalRates = 1e-12;
 
 function divided({ value, low, high }: Band, by: number): Band {
   return { value: value / by, low: low / by, high: high / by };

@@ -89,7 +89,7 @@ export function consumptionOfCycle(
     ratedPowerW,
     fromLoad: 0,
     toLoad: 1,
-    idleFuelW: frictionShare > 0 ? band(frictionShare * ratedPowerW) : null,
+    idleFuelW: band(frictionShare * ratedPowerW),
     heatRateAt: (load) => ({
       heatRate: band((load + frictionShare) / load),
       range: load > 1 + rounding ? 'above' : 'within',

@@ -55,6 +55,7 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
     fuel,
     on: read.measuredOn?.value.fuel ?? fuel,
     onHeatingValue: null,
+    condensationJPerKg: 0,
     lean: {
       oxidant,
       lambda: read.lambda?.value.quantity.value ?? measuredLambda,
@@ -65,7 +66,10 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
   };
   const heatingValue = measuredHeatingValue(read, measured, context);
   if (!heatingValue) return { ...nothing, absent: missingHeatingValue(measured.on) };
-  const machine = machineOf({ ...measured, onHeatingValue: heatingValue });
+  const given = read.measuredOn?.value;
+  const higher = given?.basis === 'higher' ? given.heatingValue : null;
+  const condensationJPerKg = higher === null ? 0 : higher.value - heatingValue.value;
+  const machine = machineOf({ ...measured, onHeatingValue: heatingValue, condensationJPerKg });
   const own = machine.burning(fuel);
   if (own.kind === 'not-burning' || !own.consumption) {
     const missing = own.kind === 'not-burning' ? own.missing : [];
@@ -86,6 +90,8 @@ interface Measured {
   readonly on: Material;
   /** J/kg the consumption refers to. */
   readonly onHeatingValue: Quantity | null;
+  /** What an efficiency was measured on besides: 0, or the heat of the water's condensation. */
+  readonly condensationJPerKg: number;
   readonly lean: LeanBurning;
   readonly slips: EngineSlips;
 }
@@ -184,7 +190,7 @@ function machineOf(measured: Measured): EngineMachine {
 }
 
 function burningOn(fuel: Material, measured: Measured): BurningEngine | NotBurning {
-  const { points, rating, tolerance, idle, on, onHeatingValue, lean, isEfficiency } = measured;
+  const { points, rating, tolerance, idle, on, onHeatingValue, condensationJPerKg, lean, isEfficiency } = measured;
   if (!onHeatingValue) return { kind: 'not-burning', missing: [] };
   const factor = factorBetween(on, fuel, lean);
   if (factor.kind === 'not-burning') return factor;
@@ -199,7 +205,8 @@ function burningOn(fuel: Material, measured: Measured): BurningEngine | NotBurni
     const [ratedPowerW = NaN, share = 0, heatingValue = NaN, idleKgPerS = NaN, ...rest] = values;
     const at = points.map((_, index) => {
       const [load = NaN, value = NaN] = [rest[2 * index], rest[2 * index + 1]];
-      return { load, heatRate: isEfficiency ? 1 / value : value * heatingValue };
+      const lowerShare = heatingValue / (heatingValue + condensationJPerKg);
+      return { load, heatRate: isEfficiency ? lowerShare / value : value * heatingValue };
     });
     const idleW = Number.isNaN(idleKgPerS) ? null : idleKgPerS * heatingValue;
     return scaledConsumption(measuredConsumption(at, ratedPowerW, share, idleW), factor.value);

@@ -68,6 +68,19 @@ describe('measured consumption', () => {
     expect(figureOf(scenario, 'genset', 'specific-consumption')).toBeCloseTo(3.6 / 0.42, 9);
   });
 
+  test('an efficiency on the higher heating value is brought to the lower one', () => {
+    const scenario = checkFacts(`
+      engine genset {
+        maximum continuous rating: 2 MW
+        fuel: methane
+        efficiency: 40 % at 100 %
+        measured on: 55.5 MJ/kg higher
+      }
+    `);
+    // 2.246 kg of water a kilogram, whose condensation gives 2.442 MJ/kg.
+    expect(figureOf(scenario, 'genset', 'brake-efficiency')).toBeCloseTo((0.4 * 55.5) / (55.5 - 2.246 * 2.442), 4);
+  });
+
   test('points may be written in any order', () => {
     const scenario = checkFacts(`${OIL}
       engine genset {
