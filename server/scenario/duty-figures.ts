@@ -7,10 +7,12 @@ import type { TestCycle } from '../core/duty/test-cycles.ts';
 import { loadsOfModes } from '../core/duty/test-cycles.ts';
 import { fuelPowerAt, type Band, type Consumption } from '../core/engine/consumption.ts';
 import { lowerHeatingValueOf } from './heat-above-exhaust.ts';
-import type { BurningEngine, DutyMachine } from './machinery.ts';
+import type { BurningEngine, DutyMachine, PilotEntry } from './machinery.ts';
+import type { Material } from './material.ts';
 import type { FigureRow } from './material-figures.ts';
+import { pilotShareIn } from './pilot-share.ts';
 import { propagatedFigures, type FigureValues } from './propagated-figures.ts';
-import { QuantityList } from './quantity-list.ts';
+import { QuantityList, type NumberIn } from './quantity-list.ts';
 import type { Figure, Table } from './scenario.ts';
 import type { Working } from './working.ts';
 
@@ -51,7 +53,7 @@ export function figuresOfDuty(duty: DutyMachine, workingOf: (row: FigureRow) => 
     const on = burning?.kind === 'burning' ? burning : null;
     return {
       consumptionAt: on && consumptionIn(on, list),
-      heatingValue: list.add(machine && lowerHeatingValueOf(machine.fuel)),
+      heatingValue: heatingValueIn(machine?.fuel ?? null, on?.pilot ?? null, list),
     };
   });
   return propagatedFigures(
@@ -78,6 +80,17 @@ export function figuresOfDuty(duty: DutyMachine, workingOf: (row: FigureRow) => 
 function consumptionIn(on: BurningEngine, list: QuantityList): (values: readonly number[]) => Consumption | null {
   const own = list.addAll(on.uncertain);
   return (values) => on.consumptionAt(own(values));
+}
+
+/** J per kg of all that is burnt: with a pilot of another fuel, each by its part of the mass. */
+function heatingValueIn(fuel: Material | null, pilot: PilotEntry | null, list: QuantityList): NumberIn {
+  const main = list.add(fuel && lowerHeatingValueOf(fuel));
+  if (!pilot || pilot.fuel.name === fuel?.name) return main;
+  const [share, own] = [pilotShareIn(pilot, list), list.add(lowerHeatingValueOf(pilot.fuel))];
+  return (values) => {
+    const energyShare = share(values, main(values), own(values));
+    return 1 / ((1 - energyShare) / main(values) + energyShare / own(values));
+  };
 }
 
 function planValues(plan: readonly PlannedLeg[], rated: readonly number[]): FigureValues {
@@ -111,7 +124,8 @@ function fuelValues(
       workJ += powerW * timeS;
     }
   }
-  if (!(workJ > 0)) return {};
+  // Work without end would take nothing per work.
+  if (!(workJ > 0) || !Number.isFinite(workJ) || !Number.isFinite(fuelJ.value)) return {};
   return {
     'specific-consumption': plus(nothing, fuelJ, 1 / workJ),
     'specific-fuel-consumption': plus(nothing, fuelKg, 1 / workJ),

@@ -81,6 +81,8 @@ export interface ServiceMachine {
   readonly name: string;
   /** The fuel that most of its energy comes from; null where that is not known. */
   readonly mainFuel: Material | null;
+  /** The main fuel where a form or mass of tanks or a boil-off is given, which are for that fuel alone. */
+  readonly ownTanksFor: string | null;
   /** The same work on the baseline; null without one. */
   readonly baseline: () => ServiceSums | null;
   /** 1/s; null where it is not said. */

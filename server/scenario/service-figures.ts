@@ -240,10 +240,12 @@ export function compareTable(
   compared: readonly Compared[],
   baseline: ServiceSums | null,
   repeated: number | null,
+  ownTanksFor: string | null,
 ): Table {
+  const isOther = ownTanksFor !== null && compared.some(({ name }) => name !== ownTanksFor);
   return {
     id: 'fuels-compared',
-    label: 'The same service on each fuel, per duty',
+    label: `The same service on each fuel, per duty${isOther ? `; form of tanks and boil-off for ${ownTanksFor} alone` : ''}`,
     columns: [
       { id: 'substance', label: 'Fuel', unit: null },
       { id: 'fuel-mass', label: 'Fuel', unit: 't' },

@@ -16,6 +16,7 @@ import { fuelNumbers } from './fuel-numbers.ts';
 import { lowerHeatingValueOf } from './heat-above-exhaust.ts';
 import type { BurningEngine, DutyMachine, ServiceMachine, SlipEntry } from './machinery.ts';
 import type { Material } from './material.ts';
+import { pilotShareIn } from './pilot-share.ts';
 import { QuantityList } from './quantity-list.ts';
 import { tankForms, type TanksEntry } from './service-readers.ts';
 
@@ -70,7 +71,7 @@ export function fuelledService(
       missing.push(...burning.missing);
       return null;
     }
-    return { burning, fuel: indexOf(fuel), pilot: pilotOf(burning, fuel, indexOf), at: engineIn(burning, list) };
+    return { burning, fuel: indexOf(fuel), pilot: pilotIn(burning, fuel, indexOf, list), at: engineIn(burning, list) };
   });
   const boilers = duty.boilers.map(({ fuel, efficiency }) => ({
     fuel: indexOf(choose(fuel)),
@@ -81,19 +82,20 @@ export function fuelledService(
   const tanks = tanksIn(written, fuels, list, isOther);
   const reserve = list.add(written.reserve, 0);
   const between = list.add(written.dutiesBetween, 1);
+  const repeated = list.add(written.repeated);
   const boilOff = list.add(isOther ? null : written.boilOff, 0);
   const inputAt = (values: readonly number[]): ServiceInput => ({
     plan: duty.planAt(own(values)),
     engines: engines.map((engine): ServiceEngine => {
       if (!engine) return unknownEngine;
-      const { fuel, pilot } = engine;
-      return { ...engine.at(values), fuel, pilot };
+      return { ...engine.at(values), fuel: engine.fuel, pilot: engine.pilot?.(values) ?? null };
     }),
     boilers: boilers.map(({ fuel, efficiency }) => ({ fuel, efficiency: efficiency(values) })),
     fuels: numbers.map((one) => one(values)),
     reserveShare: reserve(values),
     dutiesPerBunkering: between(values),
     tanks: { ...tanks(values), boilOffPerS: boilOff(values) },
+    periodS: written.repeated ? 1 / repeated(values) : null,
     keepsResidue: written.keepsResidue,
     carriesWater: written.carriesWater,
   });
@@ -104,6 +106,11 @@ export function fuelledService(
     return last.input;
   };
   return { fuels, missing, sumsAt: (values, corner) => serviceSums(inputOf(values), corner) };
+}
+
+/** Whether what is given of tanks and boil-off is left out on other fuels. */
+export function hasOwnTanks({ tanks, boilOff }: WrittenService): boolean {
+  return (tanks?.form ?? tanks?.massPerFuel ?? boilOff) !== null;
 }
 
 /** What a comparison asks of a service. */
@@ -127,6 +134,7 @@ export function serviceMachineOf(
     machinery: 'service',
     name: written.name,
     mainFuel,
+    ownTanksFor: hasOwnTanks(written) ? (mainFuel?.name ?? null) : null,
     baseline,
     repeated: written.repeated,
     burning(fuel) {
@@ -173,16 +181,17 @@ function slipIn(slip: SlipEntry | null, list: QuantityList): (values: readonly n
 }
 
 /** The pilot with its share of the energy, where it is another fuel. */
-function pilotOf(
+function pilotIn(
   { pilot }: BurningEngine,
   fuel: Material,
   indexOf: (fuel: Material) => number,
-): ServiceEngine['pilot'] {
+  list: QuantityList,
+): ((values: readonly number[]) => ServiceEngine['pilot']) | null {
   if (!pilot || pilot.fuel.name === fuel.name) return null;
-  const share = pilot.share.value;
-  const [main, own] = [lowerHeatingValueOf(fuel)?.value ?? NaN, lowerHeatingValueOf(pilot.fuel)?.value ?? NaN];
-  const energyShare = pilot.by === 'energy' ? share : (share * own) / (share * own + (1 - share) * main);
-  return { fuel: indexOf(pilot.fuel), energyShare };
+  const index = indexOf(pilot.fuel);
+  const share = pilotShareIn(pilot, list);
+  const [main, own] = [list.add(lowerHeatingValueOf(fuel)), list.add(lowerHeatingValueOf(pilot.fuel))];
+  return (values) => ({ fuel: index, energyShare: share(values, main(values), own(values)) });
 }
 
 function tanksIn(

@@ -25,4 +25,6 @@ export type WorkAssumptionId =
   | 'all-carbon-to-dioxide'
   | 'slate-as-residue'
   | 'cubic-propeller'
-  | 'baseline-all-engines';
+  | 'baseline-all-engines'
+  | 'bare-tanks'
+  | 'boil-off-on-duty';

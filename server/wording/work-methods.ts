@@ -105,4 +105,7 @@ export const workAssumptions: Readonly<Record<WorkAssumptionId, string>> = {
     'Residue is what is solid or liquid at 25 °C of the products of complete combustion, water apart.',
   'cubic-propeller': 'Power goes with the third power of speed.',
   'baseline-all-engines': 'On the baseline every engine burns the baseline fuel.',
+  'bare-tanks':
+    'Form of tanks and boil-off are for the main fuel alone: tanks of any other fuel take their volume, nothing boils off, and they weigh nothing unless the mass of tank names that fuel.',
+  'boil-off-on-duty': 'Without a number of duties per year, fuel boils off while on duty only.',
 };

@@ -64,6 +64,7 @@ function serviceOfProfile(text: string): number {
       fuels: [oil],
       reserveShare: 0.2,
       dutiesPerBunkering: 1,
+      periodS: null,
       tanks: { maximumFilling: 0.95, packingShare: 1, massPerFuel: [0], boilOffPerS: 0 },
       keepsResidue: true,
       carriesWater: false,

@@ -50,6 +50,8 @@ export interface ServiceInput {
   readonly reserveShare: number;
   /** Duties between two bunkerings. */
   readonly dutiesPerBunkering: number;
+  /** From one duty to the next; null where it is not known: fuel boils off on duty alone then. */
+  readonly periodS: number | null;
   readonly tanks: Tanks;
   readonly keepsResidue: boolean;
   /** Water that the fuel lacks is carried. */
@@ -116,17 +118,19 @@ export function serviceSums(input: ServiceInput, corner: Corner): ServiceSums {
   const distanceM = total(input.plan.map((leg) => leg.distanceM ?? 0));
   const dutyKg = total(fuelKg);
   const { tanks, dutiesPerBunkering: duties } = input;
+  const periodS = Math.max(timeS, input.periodS ?? timeS);
   const burntBetweenKg = dutyKg * duties;
   // What is on board falls evenly from the whole to the reserve: half of what is burnt, and all the reserve, boils off.
   const reserveKg = burntBetweenKg * input.reserveShare;
-  const boiledOffKg = (burntBetweenKg / 2 + reserveKg) * tanks.boilOffPerS * timeS * duties;
+  const boiledOffKg = (burntBetweenKg / 2 + reserveKg) * tanks.boilOffPerS * periodS * duties;
   const carriedKg = burntBetweenKg + reserveKg + boiledOffKg;
   const volumePerKg = over(({ densityKgPerM3 }) => 1 / densityKgPerM3) / dutyKg;
   const carriedM3 = carriedKg * volumePerKg;
   const tankKg = carriedKg * total(fuelKg.map((kg, fuel) => ((tanks.massPerFuel[fuel] ?? 0) * kg) / dutyKg));
   const waterPerDutyKg = input.carriesWater ? over(({ waterMissingKgPerKg }) => waterMissingKgPerKg) : 0;
   const onBoardKg = carriedKg + tankKg + waterPerDutyKg * duties;
-  const left = afterLegs(byLeg, input, carriedKg, boiledOffKg / duties / timeS);
+  const boiledPerDutyKg = boiledOffKg / duties;
+  const left = afterLegs(byLeg, input, carriedKg, boiledPerDutyKg / periodS);
   const lastsS = (carriedKg - boiledOffKg) / (dutyKg / timeS);
   return {
     fuelKg,

@@ -40,7 +40,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
           const on = service.burning(fuel);
           return { name: fuel.name, sums: on.sumsAt(on.values, 'value') };
         });
-        return [compareTable(compared, service.baseline(), service.repeated?.value ?? null)];
+        return [compareTable(compared, service.baseline(), service.repeated?.value ?? null, service.ownTanksFor)];
       },
     },
   );

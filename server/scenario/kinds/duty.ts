@@ -12,7 +12,9 @@ import { dutyMachineOf, type NamedLeg, type WrittenDuty } from '../duty-machine.
 import { legReader, startsWithExtent } from '../duty-readers.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
 import { lazily } from '../lazily.ts';
+import type { DutyMachine } from '../machinery.ts';
 import type { Figure } from '../scenario.ts';
+import { unmeasuredLoads } from '../unmeasured-loads.ts';
 import type { Working, WorkingInput } from '../working.ts';
 import { defaultExponent, defaultIntermediate, dutyEntries } from './duty-entries.ts';
 import { reportDuty, reportLegName, type LegPlaces } from './duty-facts.ts';
@@ -82,7 +84,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const written = writtenDuty(read, legs, context);
   const machine = dutyMachineOf(written);
   reportDuty(machine, written, placesOf(read, legs, header), context);
-  const working = workingOf(written, read, context);
+  const working = workingOf(written, machine, read, context);
   return lazily<KindAnswer>(
     { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
     {
@@ -137,6 +139,7 @@ function withCycleLoad(
 
 function workingOf(
   written: WrittenDuty,
+  machine: DutyMachine,
   read: Read,
   context: Context,
 ): (row: { readonly id: string; readonly method: Working['method'] }) => Working {
@@ -157,6 +160,9 @@ function workingOf(
     method,
     inputs: [...legInputs, ...serviceInputs],
     sources: written.cycle ? ['ISO 8178-4:2020, modes and weighting factors'] : [],
-    assumptions: isCubic ? ['cubic-propeller'] : [],
+    assumptions: [
+      ...(isCubic ? (['cubic-propeller'] as const) : []),
+      ...(method === 'service-fuel' && unmeasuredLoads(machine).isBeyond ? (['beyond-measured'] as const) : []),
+    ],
   });
 }

@@ -16,11 +16,13 @@ import type { Absent } from '../scenario.ts';
 import { fuelTable, onBoardTable, serviceFigures, serviceValues } from '../service-figures.ts';
 import {
   fuelledService,
+  hasOwnTanks,
   mainFuelOf,
   serviceMachineOf,
   type FuelledService,
   type WrittenService,
 } from '../service-machine.ts';
+import { unmeasuredLoads } from '../unmeasured-loads.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
 import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 import { defaultFilling, serviceEntries } from './service-entries.ts';
@@ -91,7 +93,7 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
           working,
         ),
       tables: () => [fuelTable(own, sums, written.repeated?.value ?? null), onBoardTable(duty.legNames, sums)],
-      absent: () => absentOf(own, baseline),
+      absent: () => absentOf(own, baseline, unmeasuredLoads(duty).idling),
     },
   );
 }
@@ -120,8 +122,9 @@ function reportTanks(
 }
 
 /** A figure that is not there because an engine does not run on a fuel, or a fuel's datum is not known. */
-function absentOf(own: FuelledService, baseline: FuelledService | null): Absent {
-  const missing = [...own.missing, ...(baseline?.missing ?? [])];
+function absentOf(own: FuelledService, baseline: FuelledService | null, idling: readonly string[]): Absent {
+  const idle = idling.map((engine) => `the idle consumption of ${engine}`);
+  const missing = [...own.missing, ...(baseline?.missing ?? []), ...idle];
   const densities = own.fuels.filter(({ density }) => !density).map(({ name }) => `the density of ${name}`);
   const absent = new Map<string, readonly string[] | null>();
   for (const { id, method } of serviceFigures) {
@@ -160,8 +163,24 @@ function workingOf(written: WrittenService, read: Read, context: Context): (row:
   ];
   const permit =
     read.residue?.value.to === 'discharged' ? [`residue discharged under: ${read.residue.value.permit}`] : [];
-  return ({ method }) => ({ method, inputs, sources: permit, assumptions: assumptionsOf[method] ?? [] });
+  const isBoiling = written.boilOff !== null;
+  const assumptions = (method: Working['method']): readonly AssumptionId[] => [
+    ...(assumptionsOf[method] ?? []),
+    ...(method === 'against-baseline' && hasOwnTanks(written) ? (['bare-tanks'] as const) : []),
+    ...(method === 'service-tank' && isBoiling && !written.repeated ? (['boil-off-on-duty'] as const) : []),
+    ...(restsOnFuel.has(method) && unmeasuredLoads(written.duty).isBeyond ? (['beyond-measured'] as const) : []),
+  ];
+  return ({ method }) => ({ method, inputs, sources: permit, assumptions: assumptions(method) });
 }
+
+const restsOnFuel: ReadonlySet<Working['method']> = new Set([
+  'service-fuel',
+  'service-emission',
+  'service-residue',
+  'service-tank',
+  'service-endurance',
+  'against-baseline',
+]);
 
 const assumptionsOf: Readonly<Partial<Record<Working['method'], readonly AssumptionId[]>>> = {
   'service-fuel': ['lower-heating-value-basis'],

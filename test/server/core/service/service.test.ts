@@ -65,6 +65,7 @@ const input: ServiceInput = {
   fuels: [slurry, oil],
   reserveShare: 0.2,
   dutiesPerBunkering: 3,
+  periodS: null,
   tanks: { maximumFilling: 0.95, packingShare: 0.65, massPerFuel: [0.5, 0], boilOffPerS: 0 },
   keepsResidue: true,
   carriesWater: true,
@@ -114,6 +115,17 @@ describe('a service by hand', () => {
     const firstKg = sums.carriedKg - (still?.fuelKg ?? NaN);
     expect(boiling.carriedKg - (first?.fuelKg ?? NaN)).toBeCloseTo(firstKg + (boiling.boiledOffKg * 2) / 3, 9);
     expect(boiling.carriedKg - (second?.fuelKg ?? NaN)).toBeCloseTo(main + pilot + boiling.boiledOffKg, 9);
+  });
+
+  test('it boils off between duties too, where it is known how often they are done', () => {
+    const tanks = { ...input.tanks, boilOffPerS: 1e-7 };
+    const boiling = serviceSums({ ...input, tanks }, 'value');
+    const lying = serviceSums({ ...input, tanks, periodS: 54e3 }, 'value');
+    expect(lying.boiledOffKg / boiling.boiledOffKg).toBeCloseTo(10, 9);
+    expect(lying.carriedKg - (lying.afterLegs.at(-1)?.fuelKg ?? NaN)).toBeCloseTo(
+      main + pilot + lying.boiledOffKg / 10,
+      9,
+    );
   });
 
   test('residue of one fuel, then another that leaves none: the ship is heaviest between', () => {

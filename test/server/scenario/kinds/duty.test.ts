@@ -1,6 +1,6 @@
 // Duties in scenarios: legs in their forms, standing demands, test cycles, and what is told of what cannot be done.
 import { describe, expect, test } from 'vitest';
-import { checkFacts, figureOf } from '../../../support/facts.ts';
+import { checkFacts, evaluateText, figureOf, uncertaintyOf } from '../../../support/facts.ts';
 
 const ENGINES = `engine main {
         maximum continuous rating: 6.4 MW
@@ -91,6 +91,69 @@ describe('legs', () => {
       blend day_blend { 100 % methanol }
     `,
     );
+  });
+});
+
+describe('fuel of a duty', () => {
+  const piloted = (share: string): string => `engine main {
+        cycle: diesel
+        compression ratio: 18
+        lambda: 1.9
+        fuel: methanol
+        pilot: ${share} gas_oil
+        maximum continuous rating: 2 MW
+      }
+      duty run {
+        sail: 1 h at 100 % on main
+      }
+      service line {
+        duty: run
+      }
+`;
+
+  test('with a pilot of another fuel, mass over work is that of the service', () => {
+    const scenario = evaluateText(piloted('30 % energy'));
+    const perWork =
+      (figureOf(scenario, 'line', 'fuel-mass') ?? NaN) / (figureOf(scenario, 'line', 'brake-energy') ?? NaN);
+    expect(figureOf(scenario, 'run', 'specific-fuel-consumption')).toBeCloseTo(perWork * 1e3, 6);
+  });
+
+  test('the share of a pilot brings its uncertainty', () => {
+    const [sure, unsure] = ['30 % energy', '30 ± 5 % energy'].map((share) => evaluateText(piloted(share)));
+    for (const [name, id] of [
+      ['run', 'specific-fuel-consumption'],
+      ['line', 'fuel-mass'],
+    ] as const) {
+      const [less, more] = [sure, unsure].map((one) => (one && uncertaintyOf(one, name, id)) ?? 0);
+      expect(more).toBeGreaterThan((less ?? NaN) * 1.0001);
+    }
+  });
+
+  test('work without end has no consumption over it', () => {
+    const scenario = checkFacts(`${ENGINES}
+      duty endless {
+        sail: 1e303 h at 75 % on main
+      }
+    `);
+    expect(figureOf(scenario, 'endless', 'specific-fuel-consumption')).toBeUndefined();
+  });
+
+  test('a load that was not measured is told as an assumption', () => {
+    const scenario = checkFacts(`${ENGINES}
+      duty low {
+        wait: 1 h at 5 % on auxiliary
+      # ^^^^^^^^^^^^^^^^^^^^^^^^^^^^^ engine/measured-range
+      }
+      duty high {
+        sail: 1 h at 75 % on auxiliary
+      }
+    `);
+    const assumed = (name: string): readonly string[] =>
+      scenario.files[0]?.definitions
+        .find((one) => one.name === name)
+        ?.figures.find(({ id }) => id === 'specific-fuel-consumption')?.working.assumptions ?? [];
+    expect(assumed('low')).toContain('beyond-measured');
+    expect(assumed('high')).not.toContain('beyond-measured');
   });
 });
 

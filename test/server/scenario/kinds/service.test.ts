@@ -78,6 +78,35 @@ describe('a service', () => {
     expect(figureOf(landed, 'line', 'greatest-mass')).toBeCloseTo(fuel, 9);
   });
 
+  test('without idle consumption says what is lacking', () => {
+    const scenario = checkFacts(
+      service('gas_oil').replace(
+        'sail: 10 h at 100 % on main',
+        'sail: 10 h at 100 % on main\n        wait: 1 h at 0 kW on main\n      # ^^^^^^^^^^^^^^^^^^^^^^^^^ engine/no-idle',
+      ),
+    );
+    expect(figureOf(scenario, 'line', 'brake-energy')).toBeCloseTo(100, 9);
+    const line = scenario.files[0]?.definitions.find(({ name }) => name === 'line');
+    expect(line?.absent.get('fuel-mass')).toEqual(['the idle consumption of main']);
+  });
+
+  test('other fuels go without the form of tanks and boil-off of the main one, and that is said', () => {
+    const scenario =
+      checkFacts(`${service('gas_oil', 'against: methanol\n        boil-off: 0.1 % per d\n        tanks: cylindrical')}
+      compare fuels {
+        service: line
+        across: gas_oil, methanol
+      }
+    `);
+    const [line, fuels] = ['line', 'fuels'].map((of) => scenario.files[0]?.definitions.find(({ name }) => name === of));
+    const added = line?.figures.find(({ id }) => id === 'added-volume');
+    expect(added?.working.assumptions).toContain('bare-tanks');
+    expect(fuels?.tables[0]?.label).toMatch(/form of tanks and boil-off for gas_oil alone/);
+    // A hundred duties a year: 87.66 h from one to the next.
+    const fuel = figureOf(scenario, 'line', 'fuel-mass') ?? NaN;
+    expect(figureOf(scenario, 'line', 'boil-off')).toBeCloseTo((fuel / 2) * 0.001 * 3.6525, 9);
+  });
+
   test('slips', () => {
     checkFacts(`${service('gas_oil')}
       service lost {
