@@ -41,6 +41,17 @@ describe('legs', () => {
     expect(figureOf(scenario, 'round', 'energy')).toBeCloseTo(main + auxiliary, 6);
   });
 
+  test('a leg on the shore takes the hotel load from there though an engine runs', () => {
+    const scenario = checkFacts(`${ENGINES}
+      duty berth {
+        lie: 10 h at 300 kW on shore, 1600 kW on main
+        hotel load: 180 kW on auxiliary
+      }
+    `);
+    expect(figureOf(scenario, 'berth', 'shore-energy')).toBeCloseTo(4800, 9);
+    expect(figureOf(scenario, 'berth', 'energy')).toBeCloseTo(16000, 9);
+  });
+
   test('calm water and a fouled hull', () => {
     const scenario = checkFacts(`${ENGINES}
       duty calm_day {
