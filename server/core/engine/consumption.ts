@@ -97,6 +97,24 @@ export function consumptionOfCycle(
   };
 }
 
+/**
+ * From a plant worked out at its rating alone, whose idle consumption is no matter of friction (a compressor or a boiler is
+ * there at any load): with idle consumption the fuel goes in a straight line from there, without it only the rating is known.
+ */
+export function consumptionAtRating(heatRate: Band, ratedPowerW: number, idleFuelW: number | null): Consumption {
+  const end = (rate: number): Consumption =>
+    measuredConsumption([{ load: 1, heatRate: rate }], ratedPowerW, 0, idleFuelW);
+  const ends = { value: end(heatRate.value), low: end(heatRate.low), high: end(heatRate.high) };
+  return {
+    ...ends.value,
+    heatRateAt(load) {
+      const { heatRate: own, range } = ends.value.heatRateAt(load);
+      const [low, high] = [ends.low, ends.high].map((one) => one.heatRateAt(load).heatRate.value);
+      return { heatRate: { value: own.value, low: low ?? NaN, high: high ?? NaN }, range };
+    },
+  };
+}
+
 /** Fuel power in W at a shaft power in W, idling where that is 0; null where it idles and that is not known. */
 export function fuelPowerAt(
   consumption: Consumption,

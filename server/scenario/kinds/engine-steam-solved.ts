@@ -3,7 +3,7 @@
 // temperature. Reports nothing. Invariant: one input has one answer, and the written one is solved once.
 
 import type { Consumption } from '../../core/engine/consumption.ts';
-import { consumptionOfCycle } from '../../core/engine/consumption.ts';
+import { consumptionAtRating } from '../../core/engine/consumption.ts';
 import { steamPlant } from '../../core/engine/steam/steam-plant.ts';
 import type { NoSteamPlant, SteamPlant, SteamPlantInput } from '../../core/engine/steam/steam-plant.ts';
 import type { Quantity } from '../../core/quantity/quantity.ts';
@@ -12,6 +12,7 @@ import type { Material } from '../material.ts';
 import type { AssumptionId } from '../working.ts';
 import type { EngineRead } from './engine-entries.ts';
 import {
+  idleFuelOf,
   plantQuestion,
   plantStreams,
   type PlantNumbers,
@@ -34,6 +35,7 @@ export const steamKeys = [
   'frozenBelow',
   'mechanicalEfficiency',
   'maximumContinuousRating',
+  'idleConsumption',
 ] as const;
 type SteamKey = (typeof steamKeys)[number] | 'heatLoss' | 'pressure';
 
@@ -47,6 +49,8 @@ export interface SteamAt {
   readonly lowerJPerKg: number;
   readonly higherJPerKg: number | null;
   readonly ratedPowerW: number | null;
+  /** Fuel energy running without load, W; null where it is not given. */
+  readonly idleFuelW: number | null;
 }
 
 export interface SolvedSteamQuestion extends SteamAt {
@@ -68,8 +72,14 @@ export function writtenSteam(read: EngineRead, fuel: Material): WrittenSteam | {
   return { streams, own: all as WrittenSteam['own'] };
 }
 
-/** The plant at the values as written, or why there is none. */
-export function solvedSteamOf(written: WrittenSteam): SolvedSteamQuestion | NoSteamPlant {
+/**
+ * The plant at the values as written, or why there is none. `idleJPerKg` is the heating value of the fuel that its idle
+ * consumption is told of, where that is another one.
+ */
+export function solvedSteamOf(
+  written: WrittenSteam,
+  idleJPerKg: number | null = null,
+): SolvedSteamQuestion | NoSteamPlant {
   const question = plantQuestion(written.streams, written.own);
   const centre = question.quantities.map(({ value }) => value);
   const solveAt = (values: readonly number[]): SteamAt | NoSteamPlant => {
@@ -77,7 +87,8 @@ export function solvedSteamOf(written: WrittenSteam): SolvedSteamQuestion | NoSt
     const plant = steamPlant(inputOf(numbers));
     if (plant.kind === 'no-plant') return plant;
     const { lowerJPerKg, higherJPerKg, own } = numbers;
-    return { plant, lowerJPerKg, higherJPerKg, ratedPowerW: own.maximumContinuousRating };
+    const idleFuelW = idleFuelOf(own.idleConsumption, idleJPerKg ?? lowerJPerKg);
+    return { plant, lowerJPerKg, higherJPerKg, ratedPowerW: own.maximumContinuousRating, idleFuelW };
   };
   const own = solveAt(centre);
   if ('kind' in own) return own;
@@ -129,10 +140,10 @@ function inputOf({ own, fuel, oxidant, lowerJPerKg }: PlantNumbers<SteamKey>): S
 }
 
 /** What a duty asks, of a rated power in W; null where the plant gives no work. */
-export function consumptionOfSteam({ plant, lowerJPerKg }: SteamAt, ratedPowerW: number): Consumption | null {
-  const net = plant.netWorkJ / lowerJPerKg;
-  if (!(net > 0)) return null;
-  return consumptionOfCycle({ value: net, low: net, high: net }, plant.brakeWorkJ / plant.netWorkJ, ratedPowerW);
+export function consumptionOfSteam({ plant, idleFuelW }: SteamAt, ratedPowerW: number): Consumption | null {
+  if (!(plant.brakeEfficiency > 0)) return null;
+  const heatRate = 1 / plant.brakeEfficiency;
+  return consumptionAtRating({ value: heatRate, low: heatRate, high: heatRate }, ratedPowerW, idleFuelW);
 }
 
 /** What the figures of a steam plant rest on. */
@@ -157,17 +168,17 @@ export function steamMachine(name: string, read: EngineRead, fuel: Material, own
     fuel,
     ratedPower: read.maximumContinuousRating?.value.quantity ?? null,
     burning(other) {
-      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other), read);
+      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other, own), read);
       known.set(other, found);
       return found;
     },
   };
 }
 
-function onFuel(read: EngineRead, fuel: Material): SolvedSteamQuestion | NotBurning {
+function onFuel(read: EngineRead, fuel: Material, own: SolvedSteamQuestion): SolvedSteamQuestion | NotBurning {
   const written = writtenSteam(read, fuel);
   if ('missing' in written) return { kind: 'not-burning', missing: written.missing };
-  const solved = solvedSteamOf(written);
+  const solved = solvedSteamOf(written, own.lowerJPerKg);
   return solved.kind === 'solved' ? solved : { kind: 'not-burning', missing: [`a boiler on ${fuel.name}`] };
 }
 
@@ -191,6 +202,6 @@ function burningOn(own: SolvedSteamQuestion | NotBurning, read: EngineRead): Bur
       ammonia: read.ammoniaSlip?.value ?? null,
       urea: read.urea?.value ?? null,
     },
-    assumptions: [...steamAssumptions(own.written), 'friction-kept'],
+    assumptions: steamAssumptions(own.written),
   };
 }

@@ -4,7 +4,7 @@
 
 import type { BurnFault } from '../../core/burn/burn.ts';
 import { oxidantForLambda } from '../../core/burn/charge.ts';
-import { consumptionOfCycle, type Band, type Consumption } from '../../core/engine/consumption.ts';
+import { consumptionAtRating, type Band, type Consumption } from '../../core/engine/consumption.ts';
 import type { GasTurbineCycle, GasTurbineInput, TurbineFault } from '../../core/engine/turbine/gas-turbine.ts';
 import { solveTurbine, type SolvedTurbine } from '../../core/engine/turbine/solved-turbine.ts';
 import type { Quantity } from '../../core/quantity/quantity.ts';
@@ -14,6 +14,7 @@ import type { AssumptionId } from '../working.ts';
 import { foreignSpecies } from './engine-cycle-question.ts';
 import type { EngineRead } from './engine-entries.ts';
 import {
+  idleFuelOf,
   kilogramOf,
   plantQuestion,
   plantStreams,
@@ -36,6 +37,7 @@ export const turbineKeys = [
   'frozenBelow',
   'mechanicalEfficiency',
   'maximumContinuousRating',
+  'idleConsumption',
 ] as const;
 type TurbineKey = (typeof turbineKeys)[number] | 'heatLoss' | 'pressure';
 
@@ -49,6 +51,8 @@ export interface TurbineAt {
   readonly stoichiometricKgPerKg: number;
   readonly lowerJPerKg: number;
   readonly ratedPowerW: number | null;
+  /** Fuel energy running without load, W; null where it is not given. */
+  readonly idleFuelW: number | null;
 }
 
 export interface SolvedTurbineQuestion extends TurbineAt {
@@ -75,8 +79,14 @@ export function writtenTurbine(
   return { streams, own: all as WrittenTurbine['own'] };
 }
 
-/** The turbine at the values as written, or why there is none. */
-export function solvedTurbineOf(written: WrittenTurbine): SolvedTurbineQuestion | TurbineFault | BurnFault {
+/**
+ * The turbine at the values as written, or why there is none. `idleJPerKg` is the heating value of the fuel that its idle
+ * consumption is told of, where that is another one.
+ */
+export function solvedTurbineOf(
+  written: WrittenTurbine,
+  idleJPerKg: number | null = null,
+): SolvedTurbineQuestion | TurbineFault | BurnFault {
   const question = plantQuestion(written.streams, written.own);
   const centre = question.quantities.map(({ value }) => value);
   const solveAt = (values: readonly number[]): TurbineAt | TurbineFault | BurnFault => {
@@ -90,6 +100,7 @@ export function solvedTurbineOf(written: WrittenTurbine): SolvedTurbineQuestion 
       stoichiometricKgPerKg: stoichiometric,
       lowerJPerKg: numbers.lowerJPerKg,
       ratedPowerW: numbers.own.maximumContinuousRating,
+      idleFuelW: idleFuelOf(numbers.own.idleConsumption, idleJPerKg ?? numbers.lowerJPerKg),
     };
   };
   const own = solveAt(centre);
@@ -153,10 +164,11 @@ export function bandOverTurbine({ cautious, cycles }: SolvedTurbine, read: (cycl
 }
 
 /** What a duty asks, of a rated power in W; null where the turbine gives no work. */
-export function consumptionOfTurbine({ solved }: TurbineAt, ratedPowerW: number): Consumption | null {
-  const net = bandOverTurbine(solved, ({ netEfficiency }) => netEfficiency);
-  if (!(net.low > 0)) return null;
-  return consumptionOfCycle(net, solved.turbine.input.mechanicalEfficiency, ratedPowerW);
+export function consumptionOfTurbine({ solved, idleFuelW }: TurbineAt, ratedPowerW: number): Consumption | null {
+  const brake = bandOverTurbine(solved, ({ brakeEfficiency }) => brakeEfficiency);
+  if (!(brake.low > 0)) return null;
+  const heatRate = { value: 1 / brake.low, low: 1 / brake.high, high: 1 / brake.low };
+  return consumptionAtRating(heatRate, ratedPowerW, idleFuelW);
 }
 
 /** What the figures of a gas turbine rest on. */
@@ -189,17 +201,17 @@ export function turbineMachine(
     fuel,
     ratedPower: read.maximumContinuousRating?.value.quantity ?? null,
     burning(other) {
-      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other), read);
+      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other, own), read);
       known.set(other, found);
       return found;
     },
   };
 }
 
-function onFuel(read: EngineRead, fuel: Material): SolvedTurbineQuestion | NotBurning {
+function onFuel(read: EngineRead, fuel: Material, own: SolvedTurbineQuestion): SolvedTurbineQuestion | NotBurning {
   const written = writtenTurbine(read, fuel);
   if ('missing' in written) return { kind: 'not-burning', missing: written.missing };
-  const solved = solvedTurbineOf(written);
+  const solved = solvedTurbineOf(written, own.lowerJPerKg);
   return solved.kind === 'solved' ? solved : { kind: 'not-burning', missing: [`a cycle on ${fuel.name}`] };
 }
 
@@ -222,6 +234,6 @@ function burningOn(own: SolvedTurbineQuestion | NotBurning, read: EngineRead): B
       ammonia: read.ammoniaSlip?.value ?? null,
       urea: read.urea?.value ?? null,
     },
-    assumptions: [...turbineAssumptions(own), 'friction-kept'],
+    assumptions: turbineAssumptions(own),
   };
 }

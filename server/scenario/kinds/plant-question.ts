@@ -103,6 +103,11 @@ export function kilogramOf({ moleShares }: OxidantStream): FrozenMixture {
   return frozenMixture(parts.flatMap(({ species, share }) => (species ? [{ species, mol: share / kgPerMol }] : [])));
 }
 
+/** W of fuel running without load, out of kg/s and J/kg; null where it is not given. */
+export function idleFuelOf(idleKgPerS: number | null, lowerJPerKg: number): number | null {
+  return idleKgPerS === null ? null : idleKgPerS * lowerJPerKg;
+}
+
 export function kelvin(valueK: number): Quantity {
   return quantityOf(valueK, knownUnit('K').dimension, undefined, 'temperature');
 }

@@ -1,6 +1,7 @@
 // Consumption against load: the curve goes through what was measured, never swings between, and says where it guesses.
 import { describe, expect, test } from 'vitest';
 import {
+  consumptionAtRating,
   consumptionOfCycle,
   measuredConsumption,
   scaledConsumption,
@@ -109,5 +110,26 @@ describe('the consumption of a cycle', () => {
 
   test('without friction it idles on nothing', () => {
     expect(consumptionOfCycle(band, 1, 1e6).idleFuelW).toEqual({ value: 0, low: 0, high: 0 });
+  });
+});
+
+describe('the consumption of a plant known at its rating', () => {
+  const rate = { value: 3.2, low: 3, high: 3.2 };
+
+  test('says that it is known there alone', () => {
+    const plant = consumptionAtRating(rate, 4e6, null);
+    expect(plant.heatRateAt(1)).toEqual({ heatRate: rate, range: 'within' });
+    expect([plant.heatRateAt(0.5).range, plant.heatRateAt(1.1).range]).toEqual(['below', 'above']);
+    expect([plant.fromLoad, plant.idleFuelW]).toEqual([1, null]);
+  });
+
+  test('with idle consumption goes in a straight line from there', () => {
+    const plant = consumptionAtRating(rate, 4e6, 0.2 * 3.2 * 4e6);
+    const { heatRate, range } = plant.heatRateAt(0.5);
+    expect(range).toBe('within');
+    // Half way between 0.64 and 3.2 (3.0) of the rated power.
+    expect(heatRate.value * 0.5).toBeCloseTo(1.92, 12);
+    expect(heatRate.low * 0.5).toBeCloseTo(1.82, 12);
+    expect(plant.idleFuelW?.value).toBeCloseTo(2.56e6, 6);
   });
 });

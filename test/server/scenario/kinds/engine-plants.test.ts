@@ -268,3 +268,38 @@ engine hot {
 `);
   });
 });
+
+describe.each([
+  ['a gas turbine', `${TURBINE}\n  turbine inlet temperature: 1200 degC`, 5, 250],
+  ['a steam plant', PLANT, 20, 1000],
+])('%s away from its rating', (_, entries, megawatts, idleKgPerH) => {
+  const engine = `engine plant {${entries}
+      fuel: gas_oil
+      maximum continuous rating: ${megawatts} MW`;
+
+  test('is a guess where only the rating is known', () => {
+    checkFacts(`${engine}
+    }
+    duty peak_hours {
+        slow: 10 h at 40 % on plant
+      # ^^^^^^^^^^^^^^^^^^^^^^^^^^^ engine/measured-range
+    }
+  `);
+  });
+
+  test('goes in a straight line from its idle consumption', () => {
+    const scenario = checkFacts(`${engine}
+      idle consumption: ${idleKgPerH} kg/h
+    }
+    duty peak_hours {
+      slow: 10 h at 40 % on plant
+    }
+  `);
+    const rated = figureOf(scenario, 'plant', 'specific-fuel-consumption') * megawatts;
+    expect(figureOf(scenario, 'plant', 'idle-consumption')).toBeCloseTo(idleKgPerH, 6);
+    const burnt = table(scenario, 'plant', 'load')
+      .find(([load]) => load === 0.5)
+      ?.at(-1);
+    expect(burnt).toBeCloseTo((idleKgPerH + rated) / 2, 6);
+  });
+});
