@@ -143,5 +143,5 @@ export function airStandardEfficiency({ charge, cautious }: SolvedEngine): numbe
   const stages = stagesOf(input.heatRelease, heatJ, squeezed.state);
   if ('kind' in stages) return null;
   const cycle = airCycle({ gas, compressionRatio: input.compressionRatio, temperatureK, pressurePa, ...stages });
-  return cycle.kind === 'none' ? null : cycle.workJ / lowerHeatingValueJ;
+  return cycle.kind === 'none' ? null : cycle.workJ / heatJ;
 }

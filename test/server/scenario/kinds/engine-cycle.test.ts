@@ -50,6 +50,21 @@ describe('an engine by its cycle', () => {
     }
   `);
 
+  test('has the air-standard efficiency of its written equation, whatever is lost to the walls', () => {
+    const otto = checkFacts(`engine spark {
+      cycle: otto
+      compression ratio: 9
+      lambda: 1.6
+      boost pressure: 1 bar
+      boost temperature: 45 degC
+      exhaust pressure: 1 bar
+      heat loss: 20 % of fuel energy
+      fuel: methane
+    }
+  `);
+    expect(figureOf(otto, 'spark', 'air-standard-efficiency')).toBeCloseTo(1 - 9 ** -0.4, 9);
+  });
+
   test('holds the limit of pressure, and has an efficiency between the air standard and nothing', () => {
     expect(figureOf(scenario, 'main', 'peak-pressure')).toBeCloseTo(180, 6);
     const brake = figureOf(scenario, 'main', 'brake-efficiency');
