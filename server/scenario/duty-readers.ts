@@ -2,7 +2,7 @@
 // Each reports what it cannot take, at that phrase. Knows no propeller and works nothing out.
 // Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
+import type { Entry, Expression, Phrase, PhraseItem, Span, Word } from '../../grammar/tree.ts';
 import type { Step } from '../core/duty/plan.ts';
 import { testCycles, testCycleNamed, type TestCycle } from '../core/duty/test-cycles.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
@@ -68,6 +68,12 @@ export const legReader: Reader<LegEntry> = {
     const [phrase, ...others] = entry.phrases;
     const [first] = phrase?.items ?? [];
     if (!phrase || !first || first.kind === 'connective') return phrase && refuse(entry, phrase, takesLeg, context);
+    const nanometres = nanometresIn(first);
+    if (nanometres) {
+      const hint = 'In a leg it would be nanometres; a nautical mile is `nmi`.';
+      context.report(nanometres, { code: 'unit/unknown', word: 'nm', near: ['nmi'], hint });
+      return undefined;
+    }
     const extent = readAs(first, [timeNeeded, lengthNeeded], entry, context);
     if (!extent) return undefined;
     const isTime = extent.needed === timeNeeded;
@@ -93,6 +99,12 @@ export const legReader: Reader<LegEntry> = {
     return leg;
   },
 };
+
+/** `38 nm`: where a ship's distance is meant, the unit of a wavelength. */
+function nanometresIn(item: Expression): Span | null {
+  const words = item.kind === 'quantity' ? (item.unit?.tokens ?? []) : [];
+  return words.length === 1 && words[0]?.text === 'nm' && words[0].power === 1 ? words[0].span : null;
+}
 
 /** Whether the value of an entry begins with a time or a distance, as a leg's does. */
 export function startsWithExtent({ phrases: [phrase] }: Entry, context: Context): boolean {

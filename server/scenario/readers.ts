@@ -22,7 +22,8 @@ export interface QuantityAt {
 }
 
 /** What a value must be besides its dimension. */
-export type Range = 'any' | 'positive' | 'share';
+/** `part`: a share above nothing; `upTo`: a share no larger than that. */
+export type Range = 'any' | 'positive' | 'share' | 'part' | { readonly upTo: number };
 
 /** One quantity of the unit's dimension; with `at`, a temperature may follow (`780 kg/m3 at 15 degC`). */
 export function quantityReader(
@@ -317,12 +318,14 @@ export function isInRange(
   context: Context,
 ): boolean {
   const text = context.written(item.span);
-  if (range === 'positive' && !(quantity.value > 0)) {
+  if ((range === 'positive' || range === 'part') && !(quantity.value > 0)) {
     context.report(item.span, { code: 'range/positive', text, entry: entry.words });
     return false;
   }
-  if (range === 'share' && !(quantity.value >= 0 && quantity.value <= 1)) {
-    context.report(item.span, { code: 'range/share', text, low: 0, high: 1 });
+  if (range === 'any' || range === 'positive') return true;
+  const high = typeof range === 'object' ? range.upTo : 1;
+  if (!(quantity.value >= 0 && quantity.value <= high)) {
+    context.report(item.span, { code: 'range/share', text, low: 0, high });
     return false;
   }
   return true;

@@ -20,6 +20,9 @@ const pressure = (example: string): ReturnType<typeof quantityReader> =>
   quantityReader('bar', `a pressure, such as \`${example}\``, { range: 'positive' });
 const share = (example: string): ReturnType<typeof quantityReader> =>
   quantityReader('%', `a share, such as \`${example}\``, { range: 'share' });
+/** A share above nothing. */
+const part = (example: string): ReturnType<typeof quantityReader> =>
+  quantityReader('%', `a share, such as \`${example}\``, { range: 'part' });
 const ratio = (example: string): ReturnType<typeof quantityReader> =>
   quantityReader('1', `a number, such as \`${example}\``, { range: 'positive' });
 
@@ -124,7 +127,7 @@ export const engineEntries = {
   },
   residualGasShare: {
     name: 'residual gas share',
-    reader: share('4 %'),
+    reader: quantityReader('%', 'a share, such as `4 %`', { range: { upTo: 0.5 } }),
     help: 'Share by mass of the charge that is burnt gas of the cycle before.',
     default: {
       text: 'what fills the smallest volume at the pressure of the exhaust; 5 % with two strokes',
@@ -169,7 +172,7 @@ export const engineEntries = {
   },
   combustionCompleteness: {
     name: 'combustion completeness',
-    reader: share('98.5 %'),
+    reader: part('98.5 %'),
     help: 'Share of the fuel that burns.',
     default: { text: '100 %', source: convention },
   },
@@ -184,7 +187,7 @@ export const engineEntries = {
   },
   mechanicalEfficiency: {
     name: 'mechanical efficiency',
-    reader: share('92 %'),
+    reader: part('92 %'),
     help: 'Brake over indicated power, at the rating.',
     default: { text: '100 %', source: convention },
   },
@@ -214,13 +217,13 @@ export const engineEntries = {
   },
   compressorEfficiency: {
     name: 'compressor efficiency',
-    reader: share('86 %'),
+    reader: part('86 %'),
     help: 'Isentropic efficiency of the compressor.',
     default: { text: '100 %', source: convention },
   },
   turbineEfficiency: {
     name: 'turbine efficiency',
-    reader: share('89 %'),
+    reader: part('89 %'),
     help: 'Isentropic efficiency of the turbine, gas or steam.',
     default: { text: '100 %', source: convention },
   },
@@ -277,7 +280,7 @@ export const engineEntries = {
   },
   pumpEfficiency: {
     name: 'pump efficiency',
-    reader: share('75 %'),
+    reader: part('75 %'),
     help: 'Isentropic efficiency of the feed pump.',
     default: { text: '100 %', source: convention },
   },
