@@ -46,6 +46,30 @@ export const DUTY_ROWS: readonly (readonly [Fact, string])[] = [
     },
     'The tanks hold 15 m³, but 19.9 m³ are needed for slurry with its reserve. It would run out on `berth`. Bunker more often, carry less reserve or give the tanks more room.',
   ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'no-header', row: 1, text: 't,p' },
+    'Row 1 of `x.csv` is `t,p`. Begin the file with `time (s), power (kW)`; time may be in s, min or h, power in W, kW or MW.',
+  ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'no-rows', row: 2, text: '' },
+    '`x.csv` has fewer than two rows of numbers. A power holds until the next row, so give two or more.',
+  ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'gap', row: 3, text: '' },
+    'Row 3 of `x.csv` is empty; a time or a power is missing. Give both, or take the row out.',
+  ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'text', row: 3, text: '60,off' },
+    'Row 3 of `x.csv` is `60,off`; these are not two numbers. Write a time and a power, with a point for decimals.',
+  ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'negative', row: 3, text: '60,-5' },
+    'Row 3 of `x.csv` is `60,-5`; its power is negative. Write 0 where the engine gives none.',
+  ],
+  [
+    { code: 'duty/profile', path: 'x.csv', why: 'time-falls', row: 4, text: '60,5' },
+    'Row 4 of `x.csv` is `60,5`; its time is not later than that of the row before. Put the rows in the order of time, each time once.',
+  ],
 ];
 
 export const DUTY_MILD: readonly string[] = [
