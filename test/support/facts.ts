@@ -8,7 +8,7 @@
 import { expect } from 'vitest';
 import { inUnit, uncertaintyInUnit } from '../../server/core/quantity/convert.ts';
 import { evaluate } from '../../server/scenario/evaluate.ts';
-import type { EvaluatedScenario, Figure } from '../../server/scenario/scenario.ts';
+import type { EvaluatedDefinition, EvaluatedScenario, Figure, Table } from '../../server/scenario/scenario.ts';
 import { readFixture } from './fixture.ts';
 
 export function evaluateText(marked: string): EvaluatedScenario {
@@ -49,6 +49,20 @@ export function uncertaintyOf(scenario: EvaluatedScenario, name: string, id: str
 export function valueOf(scenario: EvaluatedScenario, name: string): number | null {
   const values = scenario.files.flatMap((file) => file.values);
   return values.find((value) => value.name === name)?.quantity?.value ?? null;
+}
+
+/** The definition of that name in any file; throws where there is none. */
+export function definitionOf(scenario: EvaluatedScenario, name: string): EvaluatedDefinition {
+  const found = scenario.files.flatMap(({ definitions }) => definitions).find((one) => one.name === name);
+  if (!found) throw new Error(`no definition ${name}`);
+  return found;
+}
+
+/** A table of it; throws where there is none. */
+export function tableOf(scenario: EvaluatedScenario, name: string, id: string): Table {
+  const found = definitionOf(scenario, name).tables.find((table) => table.id === id);
+  if (!found) throw new Error(`no table ${id} of ${name}`);
+  return found;
 }
 
 function findFigure(scenario: EvaluatedScenario, name: string, id: string): Figure | undefined {

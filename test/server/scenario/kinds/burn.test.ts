@@ -1,8 +1,8 @@
 // Burns by their laws: what λ, preheat, loss, volume and a zone do to the flame, what cooled and frozen states keep, what an
 // uncertainty comes to, and that nothing of a cooling path is solved before somebody reads it.
 import { describe, expect, test } from 'vitest';
-import { checkFacts, evaluateText, figureOf, uncertaintyOf } from '../../../support/facts.ts';
-import type { EvaluatedDefinition, EvaluatedScenario, Table } from '../../../../server/scenario/scenario.ts';
+import { checkFacts, definitionOf, evaluateText, figureOf, tableOf, uncertaintyOf } from '../../../support/facts.ts';
+import type { Table } from '../../../../server/scenario/scenario.ts';
 
 /** A burn of hydrogen in dry air with further entries. */
 function hydrogenBurn(...entries: readonly string[]): string {
@@ -11,18 +11,6 @@ function hydrogenBurn(...entries: readonly string[]): string {
 
 function temperatureOf(...entries: readonly string[]): number {
   return figureOf(checkFacts(hydrogenBurn(...entries)), 'flame', 'flame-temperature') ?? NaN;
-}
-
-function definitionOf(scenario: EvaluatedScenario, name = 'flame'): EvaluatedDefinition {
-  const found = scenario.files.flatMap(({ definitions }) => definitions).find((one) => one.name === name);
-  if (!found) throw new Error(`no definition ${name}`);
-  return found;
-}
-
-function tableOf(scenario: EvaluatedScenario, id: string, name = 'flame'): Table {
-  const found = definitionOf(scenario, name).tables.find((table) => table.id === id);
-  if (!found) throw new Error(`no table ${id}`);
-  return found;
 }
 
 /** Numbers of a column, in the order of the rows. */
@@ -128,31 +116,31 @@ describe('the flame', () => {
     const zoned = checkFacts(hydrogenBurn('lambda: 2', 'flame zone: lambda 1'));
     expect(figureOf(zoned, 'flame', 'flame-zone-temperature')).toBeCloseTo(temperatureOf('lambda: 1'), 6);
     expect(figureOf(zoned, 'flame', 'flame-temperature')).toBeCloseTo(temperatureOf('lambda: 2'), 6);
-    expect(sum(column(tableOf(zoned, 'flame-zone-products'), 'flame-zone-mass-share'))).toBeCloseTo(1, 5);
+    expect(sum(column(tableOf(zoned, 'flame', 'flame-zone-products'), 'flame-zone-mass-share'))).toBeCloseTo(1, 5);
     const inverse = checkFacts(hydrogenBurn('lambda: 2', 'flame zone: equivalence ratio 1'));
     expect(figureOf(inverse, 'flame', 'flame-zone-temperature')).toBeCloseTo(temperatureOf('lambda: 1'), 6);
   });
 
   test('products: shares add up, elements balance, the certificate holds', () => {
     const scenario = checkFacts(hydrogenBurn('lambda: 1.1'));
-    const products = tableOf(scenario, 'products');
+    const products = tableOf(scenario, 'flame', 'products');
     expect(sum(column(products, 'mass-share'))).toBeCloseTo(1, 5);
     expect(sum(column(products, 'wet-mole-share'))).toBeCloseTo(1, 5);
     expect(sum(column(products, 'dry-mole-share'))).toBeCloseTo(1, 5);
-    for (const difference of column(tableOf(scenario, 'element-balance'), 'relative-difference')) {
+    for (const difference of column(tableOf(scenario, 'flame', 'element-balance'), 'relative-difference')) {
       expect(Math.abs(difference)).toBeLessThan(1e-10);
     }
-    const [balance] = column(tableOf(scenario, 'certificate'), 'residual');
+    const [balance] = column(tableOf(scenario, 'flame', 'certificate'), 'residual');
     expect(balance).toBeLessThan(1e-10);
   });
 
   test('barred products do not form, and allowed ones alone do', () => {
     const barred = checkFacts(hydrogenBurn('lambda: 1', 'barred products: NO, OH(g)'));
-    const names = tableOf(barred, 'products').rows.map(([name]) => name);
+    const names = tableOf(barred, 'flame', 'products').rows.map(([name]) => name);
     expect(names).not.toContain('NO(g)');
     expect(names).not.toContain('OH(g)');
     const allowed = checkFacts(hydrogenBurn('lambda: 1.1', 'allowed products: N2, O2, Ar, CO2, H2O(g)'));
-    const formed = tableOf(allowed, 'products').rows.map(([name]) => name);
+    const formed = tableOf(allowed, 'flame', 'products').rows.map(([name]) => name);
     expect(formed).toHaveLength(5);
     // Without dissociation the flame is hotter.
     expect(figureOf(allowed, 'flame', 'flame-temperature')).toBeGreaterThan(temperatureOf('lambda: 1.1') + 50);
@@ -181,7 +169,7 @@ test.each(['hydrogen', 'methane', 'propane', 'methanol', 'benzene', 'gas_oil', '
     const kelvin = figureOf(scenario, 'flame', 'flame-temperature') ?? NaN;
     expect(kelvin).toBeGreaterThan(2200);
     expect(kelvin).toBeLessThan(2600);
-    const names = tableOf(scenario, 'products').rows.map(([name]) => name);
+    const names = tableOf(scenario, 'flame', 'products').rows.map(([name]) => name);
     expect(names).not.toContain('O2(g)');
     expect(names).toContain('H2O(g)');
   },
@@ -217,7 +205,7 @@ describe('as it cools', () => {
     expect(value('melt_when_cold')).toBe(0);
     expect(value('condensed')).toBeGreaterThanOrEqual(value('crystal'));
     expect(value('dew')).toBeGreaterThan(1131);
-    const alkali = tableOf(scenario, 'alkali-fate', 'furnace').rows;
+    const alkali = tableOf(scenario, 'furnace', 'alkali-fate').rows;
     expect(alkali.find(([form, temperatureK]) => form === 'carbonate' && temperatureK === 623.15)?.[4]).toBeCloseTo(
       1,
       2,
@@ -228,8 +216,8 @@ describe('as it cools', () => {
     const frozen = checkFacts(
       SODIUM.replace('cooled to: 900 degC, 350 degC', 'cooled to: 700 degC, 350 degC\n frozen below: 700 degC'),
     );
-    const rows = tableOf(frozen, 'cooled-states', 'furnace').rows;
-    const condensed = column(tableOf(frozen, 'cooled-states', 'furnace'), 'condensed-share');
+    const rows = tableOf(frozen, 'furnace', 'cooled-states').rows;
+    const condensed = column(tableOf(frozen, 'furnace', 'cooled-states'), 'condensed-share');
     expect(rows.map((row) => row.at(-1))).toEqual(['frozen', 'frozen']);
     expect(condensed[1]).toBeCloseTo(condensed[0] ?? NaN, 12);
   });
@@ -248,121 +236,11 @@ describe('as it cools', () => {
   });
 });
 
-test('burn-out times go with the square of the diameter, the longest portion counting', () => {
-  const scenario = checkFacts(`
-    burn fine {
-      fuel: methanol
-      oxidant: air
-      lambda: 1.3
-      droplet size: 50 um
-    }
-    burn coarse {
-      fuel: methanol
-      oxidant: air
-      lambda: 1.3
-      droplet size: 100 um
-      residence time: 1 s
-    }
-  `);
-  const [fine, coarse] = ['fine', 'coarse'].map((name) => figureOf(scenario, name, 'burn-out-time') ?? NaN);
-  expect((coarse ?? NaN) / (fine ?? NaN)).toBeCloseTo(4, 9);
-  const [row] = tableOf(scenario, 'burn-out', 'coarse').rows;
-  expect(row?.slice(-3)).toEqual([1, 'flame of its vapour', 'burnt']);
-});
-
-test('water in a blend has no burn-out time and hides none', () => {
-  const scenario = checkFacts(`
-    blend spirit {
-      70 % mass ethanol
-      rest water
-    }
-    burn wet {
-      fuel: spirit
-      oxidant: air
-      lambda: 1.3
-      droplet size: 50 um
-      residence time: 1 s
-    }
-  `);
-  expect(tableOf(scenario, 'burn-out', 'wet').rows.map(([name]) => name)).toEqual(['ethanol']);
-  expect(figureOf(scenario, 'wet', 'burn-out-time')).toBeGreaterThan(0);
-});
-
-test('a zone, leaner than λ = 1 or not, does not move the flame around a droplet', () => {
-  const timeOf = (...entries: readonly string[]): number =>
-    figureOf(
-      evaluateText(
-        ['burn lamp {', 'fuel: methanol', 'oxidant: air', 'lambda: 3', 'droplet size: 50 um', ...entries, '}'].join(
-          '\n',
-        ),
-      ),
-      'lamp',
-      'burn-out-time',
-    ) ?? NaN;
-  expect(timeOf('flame zone: lambda 1.5')).toBeCloseTo(timeOf(), 9);
-});
-
 test('heat above the flame in a held volume is none', () => {
   const closed = hydrogenBurn('lambda: 1', 'held: volume');
   const flameK = figureOf(evaluateText(closed), 'flame', 'flame-temperature') ?? NaN;
   const scenario = evaluateText(hydrogenBurn('lambda: 1', 'held: volume', `cooled to: ${flameK} K`));
-  expect(column(tableOf(scenario, 'cooled-states'), 'heat-above')[0]).toBeCloseTo(0, 3);
-});
-
-test.each([
-  ['magnesium', 'carbon_dioxide', 'particle', 'carbon dioxide'],
-  ['magnesium', 'steam', 'particle', 'steam'],
-  ['sodium', 'steam', 'particle', 'steam'],
-  ['methanol', 'nitrous_oxide', 'droplet', 'an oxidant other than oxygen'],
-])('%s in %s has no law of burn-out, and is not said to be out', (fuel, oxidant, kind, told) => {
-  const scenario = evaluateText(`
-    burn reactor {
-      fuel: ${fuel}
-      oxidant: ${oxidant}
-      ${oxidant === 'nitrous_oxide' ? 'lambda: 0.9' : 'oxidant per fuel: 2 kg/kg'}
-      oxidant state: 200 degC, 1 bar
-      ${kind} size: 50 um
-      residence time: 10 ms
-    }
-  `);
-  expect(figureOf(scenario, 'reactor', 'burn-out-time')).toBeUndefined();
-  const rows = tableOf(scenario, 'burn-out', 'reactor').rows;
-  expect(rows.map((row) => [row[0], row[2], row.at(-1)])).toEqual([[fuel, null, null]]);
-  const facts = scenario.files.flatMap((file) => file.facts.map(({ fact }) => fact));
-  expect(facts.map(({ code }) => code)).not.toContain('range/burn-out');
-  expect(JSON.stringify(facts)).toContain(`a published law of burn-out for ${fuel} in ${told}`);
-});
-
-test('a distillate burns out by what is typical of its trade, and says so; its own data go before', () => {
-  const text = (fuel: string): string => `
-    substance own_oil {
-      phase: liquid
-      composition: 87 % C, 13 % H
-      lower heating value: 42.7 MJ/kg
-      density: 845 kg/m3
-      boiling point: 260 degC
-      molar mass: 215 g/mol
-    }
-    burn lamp {
-      fuel: ${fuel}
-      oxidant: air
-      lambda: 1.3
-      droplet size: 60 um
-      residence time: 50 ms
-    }
-  `;
-  const [typical, own] = ['gas_oil', 'own_oil'].map((fuel) => evaluateText(text(fuel))) as [EvaluatedScenario, EvaluatedScenario]; // prettier-ignore
-  const timeOf = (scenario: EvaluatedScenario): number => figureOf(scenario, 'lamp', 'burn-out-time') ?? NaN;
-  // 0.5 to 1 mm²/s: 3.6 to 7.2 ms for 60 µm.
-  expect(timeOf(typical)).toBeGreaterThan(3.6);
-  expect(timeOf(typical)).toBeLessThan(7.2);
-  expect(timeOf(own) / timeOf(typical)).toBeCloseTo(1, 1);
-  const lawOf = (scenario: EvaluatedScenario): unknown => tableOf(scenario, 'burn-out', 'lamp').rows[0]?.at(-2);
-  expect([lawOf(typical), lawOf(own)]).toEqual(['flame of its vapour, typical of its trade', 'flame of its vapour']);
-  const sources = typical.files[0]?.definitions
-    .find(({ name }) => name === 'lamp')
-    ?.figures.find(({ id }) => id === 'burn-out-time')?.working.sources;
-  expect(sources?.some((source) => source.startsWith('typical of the trade'))).toBe(true);
+  expect(column(tableOf(scenario, 'flame', 'cooled-states'), 'heat-above')[0]).toBeCloseTo(0, 3);
 });
 
 test('carbon against freezing is at least what the coldest live state has', () => {
@@ -378,11 +256,11 @@ test('carbon against freezing is at least what the coldest live state has', () =
       cooled to: 700 degC
     }
   `);
-  const frozen = column(tableOf(scenario, 'carbon-against-freezing', 'furnace'), 'frozen-carbonate-share');
-  const [cooled] = column(tableOf(scenario, 'cooled-states', 'furnace'), 'carbonate-carbon-share');
+  const frozen = column(tableOf(scenario, 'furnace', 'carbon-against-freezing'), 'frozen-carbonate-share');
+  const [cooled] = column(tableOf(scenario, 'furnace', 'cooled-states'), 'carbonate-carbon-share');
   expect(frozen[0]).toBeLessThan(1e-3);
   expect(Math.max(...frozen)).toBeGreaterThanOrEqual(cooled ?? NaN);
-  const [melting] = column(tableOf(scenario, 'cooled-states', 'furnace'), 'first-melting');
+  const [melting] = column(tableOf(scenario, 'furnace', 'cooled-states'), 'first-melting');
   // Carbonate alone: 850 °C as tabled, or lower with the hydroxide that is there.
   expect(melting).toBeLessThan(1125);
 });
@@ -476,7 +354,7 @@ test('heat that counts hydrogen carbonate says first that this takes hours; the 
     figures.find((figure) => figure.id === id)?.working.assumptions ?? [];
   expect(assumptionsOf('heat-above-exhaust')[0]).toBe('slow-solids');
   expect(assumptionsOf('flame-temperature')).not.toContain('slow-solids');
-  const slow = tableOf(scenario, 'cooled-products', 'furnace').rows.filter(
+  const slow = tableOf(scenario, 'furnace', 'cooled-products').rows.filter(
     (row) => row.at(-1) === 'limit, not forecast',
   );
   expect(slow.map(([name]) => name)).toContain('NaHCO3(cr)');

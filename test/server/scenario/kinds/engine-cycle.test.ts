@@ -2,8 +2,8 @@
 // no engine has.
 
 import { describe, expect, test } from 'vitest';
-import { checkFacts, figureOf as figureOrNone, uncertaintyOf } from '../../../support/facts.ts';
-import type { EvaluatedDefinition, EvaluatedScenario } from '../../../../server/scenario/scenario.ts';
+import { checkFacts, definitionOf, figureOf as figureOrNone, tableOf, uncertaintyOf } from '../../../support/facts.ts';
+import type { EvaluatedScenario } from '../../../../server/scenario/scenario.ts';
 
 const MAIN = `
   cycle: dual
@@ -28,20 +28,12 @@ function figureOf(scenario: EvaluatedScenario, name: string, id: string): number
   return figureOrNone(scenario, name, id) ?? NaN;
 }
 
-function definitionOf(scenario: EvaluatedScenario, name: string): EvaluatedDefinition {
-  const found = scenario.files[0]?.definitions.find((one) => one.name === name);
-  if (!found) throw new Error(name);
-  return found;
-}
-
 function table(
   scenario: EvaluatedScenario,
   name: string,
   id: string,
 ): readonly (readonly (string | number | null)[])[] {
-  const found = definitionOf(scenario, name).tables.find((one) => one.id === id);
-  if (!found) throw new Error(id);
-  return found.rows;
+  return tableOf(scenario, name, id).rows;
 }
 
 describe('an engine by its cycle', () => {

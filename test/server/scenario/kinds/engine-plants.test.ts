@@ -2,8 +2,8 @@
 // that no plant has.
 
 import { describe, expect, test } from 'vitest';
-import { checkFacts, figureOf as figureOrNone, uncertaintyOf } from '../../../support/facts.ts';
-import type { EvaluatedDefinition, EvaluatedScenario } from '../../../../server/scenario/scenario.ts';
+import { checkFacts, definitionOf, figureOf as figureOrNone, tableOf, uncertaintyOf } from '../../../support/facts.ts';
+import type { EvaluatedScenario } from '../../../../server/scenario/scenario.ts';
 
 const TURBINE = `
   cycle: brayton
@@ -28,20 +28,12 @@ function figureOf(scenario: EvaluatedScenario, name: string, id: string): number
   return figureOrNone(scenario, name, id) ?? NaN;
 }
 
-function definitionOf(scenario: EvaluatedScenario, name: string): EvaluatedDefinition {
-  const found = scenario.files[0]?.definitions.find((one) => one.name === name);
-  if (!found) throw new Error(name);
-  return found;
-}
-
 function table(
   scenario: EvaluatedScenario,
   name: string,
   id: string,
 ): readonly (readonly (string | number | null)[])[] {
-  const found = definitionOf(scenario, name).tables.find((one) => one.id === id);
-  if (!found) throw new Error(id);
-  return found.rows;
+  return tableOf(scenario, name, id).rows;
 }
 
 /** Share of the heating value that a row of the losses has. */
@@ -170,7 +162,7 @@ describe('a steam plant', () => {
       'condensate',
       'behind pump',
       'live steam',
-      'end of the turbine',
+      'turbine exhaust',
     ]);
     expect(loss(scenario, 'station', 'lower heating value')).toBeCloseTo(1, 9);
   });
