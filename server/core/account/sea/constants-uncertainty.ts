@@ -2,7 +2,7 @@
 // when every measurement is perfect. It propagates nothing. Invariant: deviations are of natural logarithms, so that none is
 // the constant itself.
 // Source: Orr, Epitalon, Dickson and Gattuso 2018 (Marine Chemistry 207, 84), table 1: standard uncertainties of pK, all-in, and
-// 2 % of the total boron.
+// 2 % of the total boron; the numbers as public transcriptions repeat them.
 
 import { uncertainConstants, type UncertainConstant } from './buffering.ts';
 import type { SeaConstants } from './constants-at-depth.ts';
