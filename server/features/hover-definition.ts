@@ -32,6 +32,7 @@ export function hoverDefinition(place: Place, definition: EvaluatedDefinition): 
     ...slateLines(definition),
     ...outlookLines(definition),
     ...absentLines(definition),
+    ...silentLines(definition),
     ...(shown.length < others.length ? [{ sentence: `and ${others.length - shown.length} more figures` }] : []),
   ];
   if (!first) return { place, title: what, origin: doc === '' ? null : doc, lines, ...awaited };
@@ -60,6 +61,14 @@ function outlookLines({ tables, screening }: EvaluatedDefinition): HoverLine[] {
     ...(route ? [{ label: 'As a ship’s fuel', text: shortened(routeText(route)) }] : []),
     ...(screening ? [{ sentence: screeningText(screening) }] : []),
   ];
+}
+
+/** A definition that is all silent, because what it rests on is amiss, says where to look. */
+function silentLines({ figures, absent }: EvaluatedDefinition): HoverLine[] {
+  const isSilent = figures.length === 0 && absent.size > 0 && [...absent.values()].every((missing) => missing === null);
+  return isSilent
+    ? [{ sentence: 'No figures yet: findings here, or in what it names, say what stands in the way.' }]
+    : [];
 }
 
 /** The first figures that could not be had for want of data, with what is missing. */

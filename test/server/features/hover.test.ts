@@ -37,6 +37,17 @@ describe('a number', () => {
   });
 });
 
+describe('a definition without figures', () => {
+  const sentence = 'No figures yet: findings here, or in what it names, say what stands in the way.';
+
+  it('says where to look, and so does what rests on it', () => {
+    const blend = 'blend sludge {\n  20 % mass magnesium\n  rest: gas_oil\n}\n';
+    checkHover(blend.replace('sludge', 's$0ludge'), ['Blend sludge', sentence]);
+    const burn = 'burn flame {\n  fuel: sludge\n  oxidant: air\n  lambda: 2\n}\n';
+    checkHover(blend + burn.replace('flame', 'f$0lame'), ['Burn flame', sentence]);
+  });
+});
+
 describe('a unit word', () => {
   it.each<[string, readonly (string | RegExp)[], string]>([
     ['let d = 38 n$0mi\n', ['nmi: nautical mile', '1 nmi = 1852 m', /^Source: /, '38 nmi', /^= 70[.]38 km$/], 'nmi'],
