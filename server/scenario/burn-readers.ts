@@ -12,7 +12,9 @@ import { materialNamed } from './materials.ts';
 import { streamOfMaterial, type OxidantStream } from './oxidant-stream.ts';
 import type { Needed } from './read-quantity.ts';
 import {
+  isConnective,
   isInRange,
+  isWord,
   onlyPhrase,
   pressureNeeded,
   readQuantityItem,
@@ -99,7 +101,7 @@ export const heatLossReader: Reader<Quantity> = {
     if (share.kind === 'connective') return refuse(entry, phrase, takes, context);
     const [extra] = rest;
     if (extra) return refuseItem(entry, extra, takes, context);
-    const isWhole = of?.kind === 'connective' && of.word === 'of' && isWord(fuel, 'fuel') && isWord(energy, 'energy');
+    const isWhole = isConnective(of, 'of') && isWord(fuel, 'fuel') && isWord(energy, 'energy');
     if (of && !isWhole) return refuseItem(entry, of, takes, context);
     const quantity = readQuantityItem(share, shareNeeded, context);
     return quantity && isInRange(quantity, 'share', entry, share, context) ? quantity : undefined;
@@ -218,7 +220,7 @@ export const switchReader: Reader<boolean> = {
     if (!phrase || !item) return undefined;
     if (extra) return refuseItem(entry, extra, switchReader.takes, context);
     // `on` also joins operands, so the grammar does not take it for a word.
-    if (item.kind === 'connective' && item.word === 'on') return true;
+    if (isConnective(item, 'on')) return true;
     if (isWord(item, 'off')) return false;
     if (item.kind !== 'word') return refuse(entry, phrase, switchReader.takes, context);
     reportListedWord(item, entry.words, switchReader.words ?? [], context);
@@ -244,8 +246,4 @@ function onlyWord(entry: Entry, takes: string, context: Context): Word | undefin
   if (!phrase || !item) return undefined;
   if (extra) return refuseItem(entry, extra, takes, context);
   return item.kind === 'word' ? item : refuse(entry, phrase, takes, context);
-}
-
-function isWord(item: PhraseItem | undefined, text: string): boolean {
-  return item?.kind === 'word' && item.text === text;
 }

@@ -1,23 +1,26 @@
 // The readers of what only a duty takes: legs, standing demands on an engine, a boiler, a service speed, a test cycle.
-// Each reports what it cannot take, at that phrase. Knows no propeller and works nothing out.
+// Each reports what it cannot take, at that phrase. Knows no law between speed and power, and works nothing out.
 // Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Expression, Phrase, PhraseItem, Span, Word } from '../../grammar/tree.ts';
+import type { Entry, Expression, Phrase, Span, Word } from '../../grammar/tree.ts';
 import type { Step } from '../core/duty/plan.ts';
 import { testCycles, testCycleNamed, type TestCycle } from '../core/duty/test-cycles.ts';
-import { knownUnit } from '../core/quantity/convert.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import { readUnit } from '../core/quantity/read-unit.ts';
-import { near, type Context } from './context.ts';
+import type { Context } from './context.ts';
 import type { Reader } from './entries.ts';
 import { evaluateExpression } from './expressions.ts';
 import type { EngineMachine } from './machinery.ts';
 import type { Material } from './material.ts';
 import { materialNamed } from './materials.ts';
+import { machineryNamed } from './named-machinery.ts';
 import { sided, type Needed } from './read-quantity.ts';
 import {
+  isConnective,
   isInRange,
+  isWord,
+  neededIn,
   onlyPhrase,
   readQuantityItem,
   refuse,
@@ -336,26 +339,8 @@ export const testCycleReader: Reader<TestCycleEntry> = {
 
 /** The engine a word stands for; undefined where it is none (said). One that could not be worked out is without a machine. */
 export function engineNamed(word: Word, context: Context): NamedEngine | undefined {
-  const named = context.scope.lookup(word.text);
-  if (named?.kind === 'unknown') return { name: word.text, machine: null };
-  if (!named) {
-    context.report(word.span, {
-      code: 'name/unknown',
-      what: 'definition',
-      word: word.text,
-      near: near(word.text, context.scope.names()),
-    });
-    return undefined;
-  }
-  if (named.kind !== 'value')
-    context.mean(word.span, { kind: 'definition', name: word.text, definition: named.definition });
-  if (named.kind === 'value' || named.definition.kind !== 'engine') {
-    const is = named.kind === 'value' ? 'a number' : `a ${named.definition.kind}`;
-    context.report(word.span, { code: 'name/wrong-kind', name: word.text, is, needed: 'an engine' });
-    return undefined;
-  }
-  const machinery = named.kind === 'definition' ? named.machinery : null;
-  return { name: word.text, machine: machinery?.machinery === 'engine' ? machinery : null };
+  const machine = machineryNamed(word, 'engine', context);
+  return machine === undefined ? undefined : { name: word.text, machine };
 }
 
 /** The first of the things needed that an expression is, in range; undefined where it is none (said). */
@@ -387,20 +372,11 @@ function isWrittenShare(item: Expression, context: Context): boolean {
   return item.kind !== 'quantity' || /[%a-z]/i.test(context.written(item.span)) || item.number.value <= 1.5;
 }
 
-const need = (unit: string): Needed => ({ dimension: knownUnit(unit).dimension, kind: 'plain', example: unit });
-const timeNeeded = need('h');
-const lengthNeeded = need('nmi');
-const speedNeeded = need('kn');
-export const powerNeeded = need('kW');
+const timeNeeded = neededIn('h');
+const lengthNeeded = neededIn('nmi');
+const speedNeeded = neededIn('kn');
+const powerNeeded = neededIn('kW');
 
 function isExtent(dimension: Needed['dimension']): boolean {
   return sameDimension(dimension, timeNeeded.dimension) || sameDimension(dimension, lengthNeeded.dimension);
-}
-
-export function isConnective(item: PhraseItem | undefined, word: string): boolean {
-  return item?.kind === 'connective' && item.word === word;
-}
-
-function isWord(item: PhraseItem | undefined, text: string): boolean {
-  return item?.kind === 'word' && item.text === text;
 }

@@ -2,8 +2,7 @@
 // pilot fuel, and emissions that slip through. Each reports what it cannot take, at that phrase.
 // Knows nothing of cycles and works nothing out. Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Expression, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
-import { knownUnit } from '../core/quantity/convert.ts';
+import type { Entry, Expression, Phrase, Word } from '../../grammar/tree.ts';
 import { sameDimension } from '../core/quantity/dimension.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Context } from './context.ts';
@@ -12,9 +11,12 @@ import { evaluateExpression } from './expressions.ts';
 import type { PilotEntry, SlipEntry } from './machinery.ts';
 import type { Material } from './material.ts';
 import { materialNamed } from './materials.ts';
-import { fit, type Needed } from './read-quantity.ts';
+import { fit } from './read-quantity.ts';
 import {
+  isConnective,
   isInRange,
+  isWord,
+  neededIn,
   onlyPhrase,
   pressureNeeded,
   readQuantityItem,
@@ -34,7 +36,7 @@ export interface AtLoad {
 
 /** `231 g/kWh at 25 %, 209 g/kWh at 50 %`; one value without a load holds at the rating alone. */
 export function atLoadsReader(unit: string, what: string, range: 'positive' | 'share'): Reader<readonly AtLoad[]> {
-  const needed: Needed = { dimension: knownUnit(unit).dimension, kind: 'plain', example: unit };
+  const needed = neededIn(unit);
   const takes = `${what}, each with \`at\` and a load in % of the rating`;
   return {
     takes,
@@ -46,7 +48,7 @@ export function atLoadsReader(unit: string, what: string, range: 'positive' | 's
         const [first, at, load, extra] = phrase.items;
         if (!first || first.kind === 'connective') return refuse(entry, phrase, takes, context);
         if (extra) return refuseItem(entry, extra, takes, context);
-        if (at?.kind !== 'connective' || at.word !== 'at') return refuse(entry, phrase, takes, context);
+        if (!isConnective(at, 'at')) return refuse(entry, phrase, takes, context);
         if (!load || load.kind === 'connective') return refuse(entry, phrase, takes, context);
         const value = readQuantityItem(first, needed, context);
         const share = readQuantityItem(load, shareNeeded, context);
@@ -199,9 +201,5 @@ export const slipReader: Reader<SlipEntry> = {
   },
 };
 
-const heatingNeeded: Needed = { dimension: knownUnit('MJ/kg').dimension, kind: 'plain', example: 'MJ/kg' };
-const perWorkNeeded: Needed = { dimension: knownUnit('g/kWh').dimension, kind: 'plain', example: 'g/kWh' };
-
-function isWord(item: PhraseItem | undefined, text: string): boolean {
-  return item?.kind === 'word' && item.text === text;
-}
+const heatingNeeded = neededIn('MJ/kg');
+const perWorkNeeded = neededIn('g/kWh');

@@ -5,9 +5,9 @@
 import { readProfile } from '../core/duty/profile.ts';
 import { knownUnit } from '../core/quantity/convert.ts';
 import { quantityOf } from '../core/quantity/quantity.ts';
-import { engineNamed, isConnective, type LegEntry } from './duty-readers.ts';
+import { engineNamed, type LegEntry } from './duty-readers.ts';
 import type { Reader } from './entries.ts';
-import { onlyPhrase, refuse, refuseItem } from './readers.ts';
+import { isConnective, onlyPhrase, refuse, refuseItem } from './readers.ts';
 
 /** `"crossing.csv" on main` */
 export const profileReader: Reader<LegEntry> = {

@@ -53,8 +53,7 @@ export function quantityReader(
       if (first.kind === 'connective') return refuse(entry, phrase, takes, context);
       const [connective, temperature, ...beyond] = rest;
       if (connective) {
-        const isAt = options.at && connective.kind === 'connective' && connective.word === 'at';
-        if (!isAt) return refuseItem(entry, connective, takes, context);
+        if (!options.at || !isConnective(connective, 'at')) return refuseItem(entry, connective, takes, context);
         const extra = temperature?.kind === 'connective' ? temperature : beyond[0];
         if (!temperature || extra) return refuseItem(entry, extra ?? connective, takes, context);
       }
@@ -266,9 +265,22 @@ export const carbonOriginReader: Reader<Quantity> = {
   },
 };
 
-export const shareNeeded: Needed = { dimension: knownUnit('%').dimension, kind: 'plain', example: '%' };
+/** What is written in a unit or others of its dimension. */
+export function neededIn(unit: string): Needed {
+  return { dimension: knownUnit(unit).dimension, kind: 'plain', example: unit };
+}
+
+export const shareNeeded = neededIn('%');
 export const temperatureNeeded: Needed = { dimension: knownUnit('K').dimension, kind: 'temperature', example: 'degC' };
-export const pressureNeeded: Needed = { dimension: knownUnit('bar').dimension, kind: 'plain', example: 'bar' };
+export const pressureNeeded = neededIn('bar');
+
+export function isConnective(item: PhraseItem | undefined, word: string): boolean {
+  return item?.kind === 'connective' && item.word === word;
+}
+
+export function isWord(item: PhraseItem | undefined, text: string): boolean {
+  return item?.kind === 'word' && item.text === text;
+}
 
 /** Says that a phrase is not what the entry takes. */
 export function refuse(entry: Entry, phrase: Phrase, takes: string, context: Context): undefined {

@@ -1,19 +1,26 @@
 // The readers of what only a sea takes: an effluent by the forms of its alkali, and what the receiving water is held to.
 // Knows no chemistry. Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Phrase, PhraseItem } from '../../grammar/tree.ts';
+import type { Entry, Phrase } from '../../grammar/tree.ts';
 import { deliveredForms, type DeliveredForm } from '../core/account/sea/delivery.ts';
-import { knownUnit } from '../core/quantity/convert.ts';
 import type { Quantity } from '../core/quantity/quantity.ts';
 import type { Context } from './context.ts';
 import type { Reader } from './entries.ts';
-import type { Needed } from './read-quantity.ts';
-import { isInRange, readQuantityItem, refuse, refuseItem, reportListedWord } from './readers.ts';
+import {
+  isConnective,
+  isInRange,
+  isWord,
+  neededIn,
+  readQuantityItem,
+  refuse,
+  refuseItem,
+  reportListedWord,
+} from './readers.ts';
 
 export type EffluentEntry = ReadonlyMap<DeliveredForm, Quantity>;
 
-const amountNeeded: Needed = { dimension: knownUnit('mol/kg').dimension, kind: 'plain', example: 'mmol/kg' };
-const numberNeeded: Needed = { dimension: knownUnit('1').dimension, kind: 'plain', example: '1' };
+const amountNeeded = neededIn('mmol/kg');
+const numberNeeded = neededIn('1');
 
 /** `20 mmol/kg hydroxide, 5 mmol/kg carbonate`: moles of each form per kg of effluent, an acid by its protons. */
 export const effluentReader: Reader<EffluentEntry> = {
@@ -75,7 +82,7 @@ function readChange(entry: Entry, phrase: Phrase, context: Context): Partial<Rec
   const { takes } = receivingLimitReader;
   const [, within, amount, extra] = phrase.items;
   if (extra) return refuseItem(entry, extra, takes, context);
-  if (within?.kind !== 'connective' || within.word !== 'within') return refuse(entry, phrase, takes, context);
+  if (!isConnective(within, 'within')) return refuse(entry, phrase, takes, context);
   if (!amount || amount.kind === 'connective') return refuse(entry, phrase, takes, context);
   const change = readQuantityItem(amount, numberNeeded, context);
   return change && isInRange(change, 'positive', entry, amount, context) ? { change } : undefined;
@@ -85,9 +92,9 @@ function readBand(entry: Entry, phrase: Phrase, context: Context): Partial<Recei
   const { takes } = receivingLimitReader;
   const [word, between, first, and, second, extra] = phrase.items;
   if (extra) return refuseItem(entry, extra, takes, context);
-  const isBetween = between?.kind === 'connective' && between.word === 'between';
-  const isAnd = and?.kind === 'connective' && and.word === 'and';
-  if (!isWord(word, 'pH') || !isBetween || !isAnd) return refuse(entry, phrase, takes, context);
+  if (!isWord(word, 'pH') || !isConnective(between, 'between') || !isConnective(and, 'and')) {
+    return refuse(entry, phrase, takes, context);
+  }
   if (!first || first.kind === 'connective' || !second || second.kind === 'connective') {
     return refuse(entry, phrase, takes, context);
   }
@@ -95,8 +102,4 @@ function readBand(entry: Entry, phrase: Phrase, context: Context): Partial<Recei
   if (!one || !two) return undefined;
   if (!isInRange(one, 'positive', entry, first, context)) return undefined;
   return { band: one.value <= two.value ? { low: one, high: two } : { low: two, high: one } };
-}
-
-function isWord(item: PhraseItem | undefined, text: string): boolean {
-  return item?.kind === 'word' && item.text === text;
 }

@@ -2,17 +2,18 @@
 // residue, fuels to set side by side. Each reports what it cannot take, at that phrase. Works nothing out.
 // Invariant: a reader looks at every item of every phrase it is given.
 
-import type { Entry, Phrase, PhraseItem, Word } from '../../grammar/tree.ts';
-import { knownUnit } from '../core/quantity/convert.ts';
+import type { Entry, Phrase } from '../../grammar/tree.ts';
 import { quantityOf, type Quantity } from '../core/quantity/quantity.ts';
-import { near, type Context } from './context.ts';
+import type { Context } from './context.ts';
 import type { Reader } from './entries.ts';
-import type { Machinery } from './machinery.ts';
 import type { Material } from './material.ts';
 import { materialNamed } from './materials.ts';
-import type { Needed } from './read-quantity.ts';
+import { machineryNamed, type MachineryKind, type MachineryOf } from './named-machinery.ts';
 import {
+  isConnective,
   isInRange,
+  isWord,
+  neededIn,
   onlyPhrase,
   readQuantityItem,
   refuse,
@@ -22,12 +23,8 @@ import {
 } from './readers.ts';
 
 /** A definition of one kind by its name: what it is to the work done, or null where it could not be worked out. */
-export function machineryReader<Kind extends 'duty' | 'service'>(
-  kind: Kind,
-): Reader<Extract<Machinery, { readonly machinery: Kind }> | null> {
+export function machineryReader<Kind extends MachineryKind>(kind: Kind): Reader<MachineryOf<Kind> | null> {
   const takes = `a ${kind} by name`;
-  type Found = Extract<Machinery, { readonly machinery: Kind }>;
-  const isFound = (machinery: Machinery | null): machinery is Found => machinery?.machinery === kind;
   return {
     takes,
     names: true,
@@ -38,21 +35,7 @@ export function machineryReader<Kind extends 'duty' | 'service'>(
       if (!phrase || !word) return undefined;
       if (extra) return refuseItem(entry, extra, takes, context);
       if (word.kind !== 'word') return refuse(entry, phrase, takes, context);
-      const named = context.scope.lookup(word.text);
-      if (named?.kind === 'unknown') return null;
-      if (!named) {
-        const suggestions = near(word.text, context.scope.names());
-        context.report(word.span, { code: 'name/unknown', what: 'definition', word: word.text, near: suggestions });
-        return undefined;
-      }
-      if (named.kind === 'value' || named.definition.kind !== kind) {
-        const is = named.kind === 'value' ? 'a number' : `a ${named.definition.kind}`;
-        context.report(word.span, { code: 'name/wrong-kind', name: word.text, is, needed: `a ${kind}` });
-        return undefined;
-      }
-      context.mean(word.span, { kind: 'definition', name: word.text, definition: named.definition });
-      const machinery = named.kind === 'definition' ? named.machinery : null;
-      return isFound(machinery) ? machinery : null;
+      return machineryNamed(word, kind, context);
     },
   };
 }
@@ -205,15 +188,6 @@ export const fuelsReader: Reader<readonly Material[]> = {
   },
 };
 
-const need = (unit: string): Needed => ({ dimension: knownUnit(unit).dimension, kind: 'plain', example: unit });
-const volumeNeeded = need('m3');
-const massNeeded = need('kg');
-const ratioNeeded = need('kg/kg');
-
-function isConnective(item: PhraseItem | undefined, word: string): boolean {
-  return item?.kind === 'connective' && item.word === word;
-}
-
-function isWord(item: PhraseItem | undefined, text: string): item is Word {
-  return item?.kind === 'word' && item.text === text;
-}
+const volumeNeeded = neededIn('m3');
+const massNeeded = neededIn('kg');
+const ratioNeeded = neededIn('kg/kg');
