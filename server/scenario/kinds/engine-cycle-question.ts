@@ -5,14 +5,13 @@
 
 import { oxidantForLambda } from '../../core/burn/charge.ts';
 import type { BurnFault, BurnStream } from '../../core/burn/burn.ts';
-import { frozenMixture, type FrozenMixture, type MixturePart } from '../../core/engine/frozen-mixture.ts';
+import { frozenMixture, type MixturePart } from '../../core/engine/frozen-mixture.ts';
 import type { EngineFuel, HeatRelease, ReciprocatingInput } from '../../core/engine/reciprocating.ts';
-import { phaseOfId } from '../../core/substance/phases.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
-import { kgPerMolOf } from '../fuel-vapour.ts';
 import type { PilotEntry } from '../machinery.ts';
 import type { Material } from '../material.ts';
+import { gasOfOxidant } from '../oxidant-gas.ts';
 import type { OxidantStream } from '../oxidant-stream.ts';
 
 /** A fuel as it comes in. */
@@ -142,7 +141,7 @@ function inputOf(
       compression: { law: 'isentropic' },
       heatRelease: heatReleaseOf(written.cycle, scalars.maximumFiringPressure),
       fuels,
-      freshGas: freshGasOf(written.oxidant, oxidantKgPerKg),
+      freshGas: gasOfOxidant(written.oxidant, oxidantKgPerKg),
       intakeTemperatureK: scalars.intakeTemperature,
       intakePressurePa: scalars.intakePressure,
       exhaustPressurePa: scalars.exhaustPressure,
@@ -186,18 +185,4 @@ function summed(fuels: readonly EngineFuel[]): ReadonlyMap<string, number> {
 function heatReleaseOf(cycle: WrittenCycle['cycle'], maximumPressurePa: number): HeatRelease {
   if (cycle === 'otto') return { at: 'volume' };
   return cycle === 'diesel' ? { at: 'pressure' } : { at: 'limited', maximumPressurePa };
-}
-
-/** So many kilograms of an oxidant, all of whose species are gases of the tables (`foreignSpecies` tells those that are not). */
-function freshGasOf({ moleShares }: OxidantStream, massKg: number): FrozenMixture {
-  const parts = [...moleShares].map(([id, share]) => ({ species: phaseOfId(id), share: share.value }));
-  const kgPerMol = parts.reduce((sum, { species, share }) => sum + (species?.molarMassKgPerMol ?? 0) * share, 0);
-  return frozenMixture(
-    parts.flatMap(({ species, share }) => (species ? [{ species, mol: (share * massKg) / kgPerMol }] : [])),
-  );
-}
-
-/** Species of an oxidant that no engine can draw in as a gas of the tables. */
-export function foreignSpecies({ moleShares }: OxidantStream): readonly string[] {
-  return [...moleShares.keys()].filter((id) => phaseOfId(id)?.formula.phase !== 'g' || kgPerMolOf(id) === undefined);
 }

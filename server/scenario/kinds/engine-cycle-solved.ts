@@ -13,6 +13,8 @@ import { consumptionOfEngine, netIndicatedEfficiency } from './engine-cycle-figu
 import { questionOfCycle, type CycleInput, type CycleQuestion, type WrittenCycle } from './engine-cycle-question.ts';
 import { writtenCycle } from './engine-cycle-written.ts';
 import type { EngineRead } from './engine-entries.ts';
+import { engineMachine, slipsOf } from './engine-machine.ts';
+import { answerAt } from './kept-answer.ts';
 
 export interface CycleAt {
   readonly engine: SolvedEngine;
@@ -29,8 +31,7 @@ export interface SolvedCycleQuestion extends CycleAt {
 /** The cycle at the values as written, or why there is none. */
 export function solvedOf(written: WrittenCycle): SolvedCycleQuestion | CycleFault | BurnFault {
   const question = questionOfCycle(written);
-  const centre = question.quantities.map(({ value }) => value);
-  const input = question.input(centre);
+  const input = question.input(question.quantities.map(({ value }) => value));
   if (input.kind === 'fault') return input;
   const engine = solveEngine(input.reciprocating);
   if (engine.kind === 'fault') return engine;
@@ -39,34 +40,29 @@ export function solvedOf(written: WrittenCycle): SolvedCycleQuestion | CycleFaul
     kind: 'solved',
     question,
     ...own,
-    at(values) {
-      if (values.every((value, index) => Object.is(value, centre[index]))) return own;
+    at: answerAt<CycleAt>(question.quantities, own, (values) => {
       const moved = question.input(values);
       if (moved.kind === 'fault') return null;
       const solved = solveEngine(moved.reciprocating);
       return solved.kind === 'fault' ? null : { engine: solved, input: moved };
-    },
+    }),
   };
 }
 
 /** What the figures of a cycle rest on. */
 export function cycleAssumptions({ engine }: CycleAt): readonly AssumptionId[] {
-  const { peakPa, hasCorners } = {
-    peakPa: engine.cautious.cycle.burnt.pressurePa,
-    hasCorners: engine.cycles.length > 1,
-  };
   return [
     'lower-heating-value-basis',
     'instant-combustion',
     'mean-temperature',
-    ...(hasCorners ? (['particle-corners'] as const) : []),
+    ...(engine.cycles.length > 1 ? (['particle-corners'] as const) : []),
     ...(engine.charge.input.wallLossShare > 0 ? (['early-wall-heat'] as const) : []),
     'frozen-exhaust',
     'no-short-circuit',
     'turbocharger-outside',
     'complete-equilibrium',
     'ideal-gas',
-    ...(peakPa > densePa ? (['dense-gas'] as const) : []),
+    ...(engine.cautious.cycle.burnt.pressurePa > densePa ? (['dense-gas'] as const) : []),
   ];
 }
 
@@ -74,18 +70,7 @@ const densePa = 1e7;
 
 /** The engine as others use it. */
 export function machineOf(name: string, read: EngineRead, fuel: Material, own: SolvedCycleQuestion): EngineMachine {
-  const known = new Map<Material, BurningEngine | NotBurning>();
-  return {
-    machinery: 'engine',
-    name,
-    fuel,
-    ratedPower: read.maximumContinuousRating?.value.quantity ?? null,
-    burning(other) {
-      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other), read);
-      known.set(other, found);
-      return found;
-    },
-  };
+  return engineMachine(name, read, fuel, (other) => burningOn(other === fuel ? own : onFuel(read, other), read));
 }
 
 function onFuel(read: EngineRead, fuel: Material): SolvedCycleQuestion | NotBurning {
@@ -110,12 +95,7 @@ function burningOn(solved: SolvedCycleQuestion | NotBurning, read: EngineRead): 
     uncertain: solved.question.quantities,
     consumptionAt: (values) => consumptionOf(solved.at(values)),
     pilot: read.pilot?.value ?? null,
-    slips: {
-      methane: read.methaneSlip?.value ?? null,
-      nitrousOxide: read.nitrousOxide?.value ?? null,
-      ammonia: read.ammoniaSlip?.value ?? null,
-      urea: read.urea?.value ?? null,
-    },
+    slips: slipsOf(read),
     assumptions: [...cycleAssumptions(solved), 'friction-kept'],
   };
 }

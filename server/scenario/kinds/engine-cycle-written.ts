@@ -10,10 +10,11 @@ import { dryAir } from '../dry-air.ts';
 import { vapourOf } from '../fuel-vapour.ts';
 import { lowerHeatingValueOf } from '../heat-above-exhaust.ts';
 import type { Material } from '../material.ts';
-import { foreignSpecies, type WrittenCycle, type WrittenFuel } from './engine-cycle-question.ts';
+import { foreignSpecies } from '../oxidant-gas.ts';
+import type { WrittenCycle, WrittenFuel } from './engine-cycle-question.ts';
 import type { EngineAsked, EngineRead } from './engine-entries.ts';
 
-/** Of a two-stroke engine with uniflow scavenging, where none is given. */
+/** Of a two-stroke engine with uniflow scavenging, where none is given (common practice). */
 export const twoStrokeResidualShare = 0.05;
 
 /** What a cycle cannot do without and is not written. */

@@ -6,8 +6,8 @@
 import { measuredConsumption, scaledConsumption, type Consumption } from '../../core/engine/consumption.ts';
 import { celsiusZeroK } from '../../core/quantity/constants.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
-import { findSubstance } from '../../core/substance/catalogue.ts';
 import type { Context } from '../context.ts';
+import { dryAir } from '../dry-air.ts';
 import { consumptionFigures, consumptionValues, loadTable } from '../engine-consumption.ts';
 import type { AtLoad } from '../engine-readers.ts';
 import type { ReadEntry } from '../entries.ts';
@@ -16,15 +16,14 @@ import { lazily } from '../lazily.ts';
 import type { BurningEngine, EngineMachine, EngineSlips, NotBurning } from '../machinery.ts';
 import type { Material } from '../material.ts';
 import { figuresOfMaterial } from '../material-figures.ts';
-import { materialOfSubstance } from '../materials.ts';
-import { streamOfMaterial, type OxidantStream } from '../oxidant-stream.ts';
 import { propagatedFigures } from '../propagated-figures.ts';
 import type { Absent, Figure } from '../scenario.ts';
 import type { AssumptionId, Working } from '../working.ts';
 import type { EngineAsked, EngineRead } from './engine-entries.ts';
+import { engineMachine, slipsOf } from './engine-machine.ts';
 import { unknownAnswer, type KindAnswer } from './kind.ts';
 
-/** λ of a measured engine where none is given; stated in the help of the entry. */
+/** λ and exhaust of a measured engine where none is given (common practice of diesels at load); stated in the entries' help. */
 export const measuredLambda = 2.2;
 export const measuredExhaustC = 350;
 
@@ -46,7 +45,6 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
   if (!points || !rating || !fuel || broken.size > 0) return nothing;
   const oxidant = read.oxidant?.value ?? dryAir();
   const measured: Measured = {
-    name: context.owner,
     points,
     isEfficiency: read.specificFuelConsumption === undefined,
     rating,
@@ -69,7 +67,8 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
   const given = read.measuredOn?.value;
   const higher = given?.basis === 'higher' ? given.heatingValue : null;
   const condensationJPerKg = higher === null ? 0 : higher.value - heatingValue.value;
-  const machine = machineOf({ ...measured, onHeatingValue: heatingValue, condensationJPerKg });
+  const whole: Measured = { ...measured, onHeatingValue: heatingValue, condensationJPerKg };
+  const machine = engineMachine(context.owner, read, fuel, (other) => burningOn(other, whole));
   const own = machine.burning(fuel);
   if (own.kind === 'not-burning' || !own.consumption) {
     const missing = own.kind === 'not-burning' ? own.missing : [];
@@ -79,7 +78,6 @@ export function evaluateMeasured({ read, broken, context, definition }: EngineAs
 }
 
 interface Measured {
-  readonly name: string;
   readonly points: readonly AtLoad[];
   readonly isEfficiency: boolean;
   readonly rating: Quantity;
@@ -139,7 +137,7 @@ function measuredHeatingValue(read: EngineRead, { on, fuel }: Measured, context:
   return lower;
 }
 
-/** Fuels of one kind differ by less in their heating values: marine gas oils lie within 2 % of each other. */
+/** Fuels of one kind differ by less in their heating values: marine gas oils lie within 2 % of each other (common practice). */
 const nearHeatingValue = 0.05;
 
 /** A higher heating value less the heat of the water that the fuel makes. */
@@ -154,39 +152,6 @@ function onLowerBasis(higher: Quantity, fuel: Material): Quantity | null {
 function missingHeatingValue(fuel: Material): Absent {
   const missing = [`the lower heating value of ${fuel.name}`];
   return new Map(consumptionFigures.map(({ id }) => [id, missing]));
-}
-
-function slipsOf(read: EngineRead): EngineSlips {
-  return {
-    methane: read.methaneSlip?.value ?? null,
-    nitrousOxide: read.nitrousOxide?.value ?? null,
-    ammonia: read.ammoniaSlip?.value ?? null,
-    urea: read.urea?.value ?? null,
-  };
-}
-
-function dryAir(): OxidantStream {
-  const air = findSubstance('air');
-  const stream = air && streamOfMaterial(materialOfSubstance(air));
-  if (!stream) throw new Error('the catalogue has no air');
-  return stream;
-}
-
-/** The engine as duties and services use it. */
-function machineOf(measured: Measured): EngineMachine {
-  const { name, fuel, rating } = measured;
-  const known = new Map<Material, BurningEngine | NotBurning>();
-  return {
-    machinery: 'engine',
-    name,
-    fuel,
-    ratedPower: rating,
-    burning(other) {
-      const found = known.get(other) ?? burningOn(other, measured);
-      known.set(other, found);
-      return found;
-    },
-  };
 }
 
 function burningOn(fuel: Material, measured: Measured): BurningEngine | NotBurning {

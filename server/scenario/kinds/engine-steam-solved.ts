@@ -11,6 +11,8 @@ import type { BurningEngine, EngineMachine, NotBurning } from '../machinery.ts';
 import type { Material } from '../material.ts';
 import type { AssumptionId } from '../working.ts';
 import type { EngineRead } from './engine-entries.ts';
+import { engineMachine, slipsOf } from './engine-machine.ts';
+import { answerAt } from './kept-answer.ts';
 import {
   idleFuelOf,
   plantQuestion,
@@ -81,7 +83,6 @@ export function solvedSteamOf(
   idleJPerKg: number | null = null,
 ): SolvedSteamQuestion | NoSteamPlant {
   const question = plantQuestion(written.streams, written.own);
-  const centre = question.quantities.map(({ value }) => value);
   const solveAt = (values: readonly number[]): SteamAt | NoSteamPlant => {
     const numbers = question.numbers(values);
     const plant = steamPlant(inputOf(numbers));
@@ -90,18 +91,17 @@ export function solvedSteamOf(
     const idleFuelW = idleFuelOf(own.idleConsumption, idleJPerKg ?? lowerJPerKg);
     return { plant, lowerJPerKg, higherJPerKg, ratedPowerW: own.maximumContinuousRating, idleFuelW };
   };
-  const own = solveAt(centre);
+  const own = solveAt(question.quantities.map(({ value }) => value));
   if ('kind' in own) return own;
   return {
     kind: 'solved',
     written,
     question,
     ...own,
-    at(values) {
-      if (values.every((value, index) => Object.is(value, centre[index]))) return own;
+    at: answerAt<SteamAt>(question.quantities, own, (values) => {
       const moved = solveAt(values);
       return 'kind' in moved ? null : moved;
-    },
+    }),
   };
 }
 
@@ -161,18 +161,7 @@ export function steamAssumptions({ own }: WrittenSteam): readonly AssumptionId[]
 
 /** The engine as others use it. */
 export function steamMachine(name: string, read: EngineRead, fuel: Material, own: SolvedSteamQuestion): EngineMachine {
-  const known = new Map<Material, BurningEngine | NotBurning>();
-  return {
-    machinery: 'engine',
-    name,
-    fuel,
-    ratedPower: read.maximumContinuousRating?.value.quantity ?? null,
-    burning(other) {
-      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other, own), read);
-      known.set(other, found);
-      return found;
-    },
-  };
+  return engineMachine(name, read, fuel, (other) => burningOn(other === fuel ? own : onFuel(read, other, own), read));
 }
 
 function onFuel(read: EngineRead, fuel: Material, own: SolvedSteamQuestion): SolvedSteamQuestion | NotBurning {
@@ -196,12 +185,7 @@ function burningOn(own: SolvedSteamQuestion | NotBurning, read: EngineRead): Bur
     uncertain: own.question.quantities,
     consumptionAt: (values) => consumptionOf(own.at(values)),
     pilot: null,
-    slips: {
-      methane: read.methaneSlip?.value ?? null,
-      nitrousOxide: read.nitrousOxide?.value ?? null,
-      ammonia: read.ammoniaSlip?.value ?? null,
-      urea: read.urea?.value ?? null,
-    },
+    slips: slipsOf(read),
     assumptions: steamAssumptions(own.written),
   };
 }

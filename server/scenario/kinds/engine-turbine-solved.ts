@@ -10,12 +10,13 @@ import { solveTurbine, type SolvedTurbine } from '../../core/engine/turbine/solv
 import type { Quantity } from '../../core/quantity/quantity.ts';
 import type { BurningEngine, EngineMachine, NotBurning } from '../machinery.ts';
 import type { Material } from '../material.ts';
+import { foreignSpecies, gasOfOxidant } from '../oxidant-gas.ts';
 import type { AssumptionId } from '../working.ts';
-import { foreignSpecies } from './engine-cycle-question.ts';
 import type { EngineRead } from './engine-entries.ts';
+import { engineMachine, slipsOf } from './engine-machine.ts';
+import { answerAt } from './kept-answer.ts';
 import {
   idleFuelOf,
-  kilogramOf,
   plantQuestion,
   plantStreams,
   type PlantNumbers,
@@ -88,7 +89,6 @@ export function solvedTurbineOf(
   idleJPerKg: number | null = null,
 ): SolvedTurbineQuestion | TurbineFault | BurnFault {
   const question = plantQuestion(written.streams, written.own);
-  const centre = question.quantities.map(({ value }) => value);
   const solveAt = (values: readonly number[]): TurbineAt | TurbineFault | BurnFault => {
     const numbers = question.numbers(values);
     const stoichiometric = oxidantForLambda(numbers.fuel, numbers.oxidant);
@@ -103,18 +103,17 @@ export function solvedTurbineOf(
       idleFuelW: idleFuelOf(numbers.own.idleConsumption, idleJPerKg ?? numbers.lowerJPerKg),
     };
   };
-  const own = solveAt(centre);
+  const own = solveAt(question.quantities.map(({ value }) => value));
   if ('kind' in own) return own;
   return {
     kind: 'solved',
     written,
     question,
     ...own,
-    at(values) {
-      if (values.every((value, index) => Object.is(value, centre[index]))) return own;
+    at: answerAt<TurbineAt>(question.quantities, own, (values) => {
       const moved = solveAt(values);
       return 'kind' in moved ? null : moved;
-    },
+    }),
   };
 }
 
@@ -131,7 +130,7 @@ function inputOf(
       referenceEnthalpyJ: fuel.referenceEnthalpyJPerKg ?? NaN,
       lowerHeatingValueJ: lowerJPerKg,
     },
-    air: kilogramOf(streams.oxidant),
+    air: gasOfOxidant(streams.oxidant, 1),
     airTemperatureK: oxidant.temperatureK,
     ambientPressurePa: own.pressure ?? NaN,
     compressor: {
@@ -194,18 +193,7 @@ export function turbineMachine(
   fuel: Material,
   own: SolvedTurbineQuestion,
 ): EngineMachine {
-  const known = new Map<Material, BurningEngine | NotBurning>();
-  return {
-    machinery: 'engine',
-    name,
-    fuel,
-    ratedPower: read.maximumContinuousRating?.value.quantity ?? null,
-    burning(other) {
-      const found = known.get(other) ?? burningOn(other === fuel ? own : onFuel(read, other, own), read);
-      known.set(other, found);
-      return found;
-    },
-  };
+  return engineMachine(name, read, fuel, (other) => burningOn(other === fuel ? own : onFuel(read, other, own), read));
 }
 
 function onFuel(read: EngineRead, fuel: Material, own: SolvedTurbineQuestion): SolvedTurbineQuestion | NotBurning {
@@ -228,12 +216,7 @@ function burningOn(own: SolvedTurbineQuestion | NotBurning, read: EngineRead): B
     uncertain: own.question.quantities,
     consumptionAt: (values) => consumptionOf(own.at(values)),
     pilot: null,
-    slips: {
-      methane: read.methaneSlip?.value ?? null,
-      nitrousOxide: read.nitrousOxide?.value ?? null,
-      ammonia: read.ammoniaSlip?.value ?? null,
-      urea: read.urea?.value ?? null,
-    },
+    slips: slipsOf(read),
     assumptions: turbineAssumptions(own),
   };
 }

@@ -4,10 +4,8 @@
 // null among the numbers.
 
 import type { BurnStream } from '../../core/burn/burn.ts';
-import { frozenMixture, type FrozenMixture } from '../../core/engine/frozen-mixture.ts';
 import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
-import { phaseOfId } from '../../core/substance/phases.ts';
 import { referenceTemperatureK } from '../../core/substance/substance.ts';
 import { fuelStream, oxidantStream, quantitiesOf, streamNumbers, type UncertainStream } from '../burn-streams.ts';
 import { dryAir } from '../dry-air.ts';
@@ -94,13 +92,6 @@ export function plantQuestion<Key extends string>(
       };
     },
   };
-}
-
-/** 1 kg of an oxidant, all of whose species are gases of the tables. */
-export function kilogramOf({ moleShares }: OxidantStream): FrozenMixture {
-  const parts = [...moleShares].map(([id, share]) => ({ species: phaseOfId(id), share: share.value }));
-  const kgPerMol = parts.reduce((sum, { species, share }) => sum + (species?.molarMassKgPerMol ?? 0) * share, 0);
-  return frozenMixture(parts.flatMap(({ species, share }) => (species ? [{ species, mol: share / kgPerMol }] : [])));
 }
 
 /** W of fuel running without load, out of kg/s and J/kg; null where it is not given. */
