@@ -4,9 +4,9 @@
 // indication from equilibrium and published windows of temperature, never a rate of corrosion.
 // Invariant: metal is looked at in the products' equilibrium at its own temperature, as what meets it is cooled to that.
 // Sources: windows of type I and II hot corrosion by N. Eliaz, G. Shemesh, R. M. Latanision, Eng. Fail. Anal. 9 (2002) 31 (from
-// memory: about 800 to 950 °C, 650 to 800 °C); vanadates of sodium melt from about 535 °C on and attack from about 590 °C on
-// (common practice); molten alkali carbonates and hydroxides flux protective oxides basically (R. A. Rapp, Corros. Sci. 44
-// (2002) 209, from memory).
+// memory: about 800 to 950 °C, 650 to 800 °C; a conference abstract of 2011 that was seen has 850 to 950 °C and 600 to 800 °C);
+// vanadates of sodium melt from about 535 °C on and attack from about 590 °C on (common practice); molten alkali carbonates and
+// hydroxides flux protective oxides basically (R. A. Rapp, Corros. Sci. 44 (2002) 209, from memory).
 
 import type { MatterState } from '../burn/burn.ts';
 import { depositOf } from '../burn/deposit.ts';
@@ -33,7 +33,7 @@ export interface Attack {
   readonly melting: SaltMelting | null;
 }
 
-/** Metal is looked at at both ends and at what lies evenly between them. */
+/** Metal is looked at at both ends and at what lies evenly between them; how many is a matter of time, not of a source. */
 const mostPlaces = 7;
 
 /** K, from the sources above. */
@@ -42,7 +42,7 @@ const windowsK: readonly { readonly kind: AttackKind; readonly fromK: number; re
   { kind: 'sulphate-type-1', fromK: 800 + celsiusZeroK, toK: 950 + celsiusZeroK },
 ];
 const vanadateK = { fromK: 590 + celsiusZeroK, toK: 950 + celsiusZeroK } as const;
-/** A share of a deposit's mass that matters. */
+/** A share of a deposit's mass that matters: chosen here, no source. */
 const leastShare = 0.02;
 
 /**

@@ -37,7 +37,9 @@ export const burnTurn = 40 / 360;
 
 /**
  * How much of the rise of pressure the end gas sees: fire that takes time meets a piston that goes down already, and peaks at
- * about two thirds of the rise at constant volume (common practice).
+ * about two thirds of the rise at constant volume (common practice; no source was seen for it). With no heat lost to the walls
+ * the integral errs towards knock all the same: petrol of 95 octane at λ = 1 and a ratio of 9, from 300 K, gives 1.7 at
+ * 3000 rpm, where engines run without.
  */
 const reachedRise = 2 / 3;
 

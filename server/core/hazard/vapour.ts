@@ -25,7 +25,10 @@ export interface Ullage {
 
 export const atmospherePa = 101325;
 const referenceK = 298.15;
-/** Lower limit of heavy oils' vapour, where none is recorded. */
+/**
+ * Lower limit of heavy oils' vapour, where none is recorded (common practice: 0.6 to 0.8 %). It nearly drops out of what is told,
+ * as the line of vapour pressure starts from it at the flash point.
+ */
 const oilLowerLimit = 0.007;
 /** Oxygen below which tanks count as inert where no better number is known: 8 % by volume, as of cargo tanks. */
 const usualLimitingOxygen = 0.08;

@@ -176,7 +176,7 @@ function reportLean({ cautious, charge }: SolvedEngine, { fuel }: WrittenCycle, 
   });
 }
 
-/** A spray that lights later than this turn of the crankshaft lights in the expansion, if at all. */
+/** A spray that lights later than this turn of the crankshaft lights in the expansion, if at all (common practice). */
 const latestDegrees = 20;
 
 function reportSpray(

@@ -41,8 +41,27 @@ describe('hot metal', () => {
     expect(kindsAt(salty, 700)).not.toContain('sulphate-type-1');
     expect(kindsAt(salty, 860)).toContain('sulphate-type-1');
     expect(kindsAt(salty, 860)).not.toContain('sulphate-type-2');
+    // The windows' ends as they are written down, 650, 800 and 950 °C.
+    expect(kindsAt(salty, 645)).not.toContain('sulphate-type-2');
+    expect(kindsAt(salty, 655)).toContain('sulphate-type-2');
+    expect(kindsAt(salty, 795)).not.toContain('sulphate-type-1');
+    expect(kindsAt(salty, 805)).toContain('sulphate-type-1');
     // Sulphate of so little alkali has evaporated there.
     expect(kindsAt(salty, 1300)).toEqual([]);
+  });
+
+  test('meets sulphate where it is at least 2 % of the deposit', () => {
+    const withSulphur = (share: number): readonly (readonly [number, BurnStream])[] => [
+      [0.7 - share, stream('gas_oil')],
+      [share, stream('sulfur')],
+      [0.3, stream('sodium')],
+    ];
+    // 13 mol of sodium make 690 g of carbonate; 0.07 mol of sulphur makes 10 g of sulphate of it, 0.18 mol 26 g.
+    expect(kindsAt(withSulphur(0.0022), 700)).not.toContain('sulphate-type-2');
+    expect(kindsAt(withSulphur(0.0058), 700)).toContain('sulphate-type-2');
+    // Enough that it lasts to the end of its window.
+    expect(kindsAt(withSulphur(0.1), 945)).toContain('sulphate-type-1');
+    expect(kindsAt(withSulphur(0.1), 955)).not.toContain('sulphate-type-1');
   });
 
   test('is attacked by carbonate where it melts, which is no matter of sulphur', () => {
@@ -55,7 +74,10 @@ describe('hot metal', () => {
 
   test('meets vanadates where the fuel has vanadium, whatever else it has', () => {
     expect(kindsAt(clean, 700, 1e-3)).toEqual(['vanadate']);
-    expect(kindsAt(clean, 500, 1e-3)).toEqual([]);
+    expect(kindsAt(clean, 585, 1e-3)).toEqual([]);
+    expect(kindsAt(clean, 595, 1e-3)).toEqual(['vanadate']);
+    expect(kindsAt(clean, 945, 1e-3)).toEqual(['vanadate']);
+    expect(kindsAt(clean, 955, 1e-3)).toEqual([]);
   });
 
   test('is looked at between its ends, and tells where it is met', () => {

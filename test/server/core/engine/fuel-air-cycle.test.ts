@@ -1,4 +1,5 @@
-// The cycle on the real charge beside the air standard, in the bands that texts give for its price.
+// The cycle on the real charge beside the air standard, in bands about what texts give for its price: coarse, and common practice,
+// so they would not tell an error of some per cent. Energy and mass are closed in work-cycle.test.ts.
 
 import { readFileSync } from 'node:fs';
 import { expect, test } from 'vitest';

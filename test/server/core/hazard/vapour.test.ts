@@ -56,7 +56,7 @@ describe('flash points', () => {
 
 describe('vapour over a liquid at 25 °C', () => {
   // Antoine's constants for log10 of mmHg over °C (Poling et al. 2001 and its forerunners) and vapour pressures at 25 °C in
-  // kPa (CRC Handbook, 95th ed., section 6), both from memory; they agree within 1 %.
+  // kPa (CRC Handbook, 95th ed., section 6), both from memory; they agree within 1 % (decane's two digits: 3 %).
   const antoine = {
     methanol: [8.08097, 1582.271, 239.726, 16.9],
     ethanol: [8.20417, 1642.89, 230.3, 7.87],
@@ -72,14 +72,15 @@ describe('vapour over a liquid at 25 °C', () => {
   // reasons, and for no other. A cup flashes a little late: there the true pressure is 5 to 16 % above the recorded limit
   // (hexane 62 %: its flash point and its limit are from different apparatus; decane 4 % below). And the curve is bent, as
   // the heat of vaporisation falls with temperature: by an eighth of that fall, times the step in 1/T, over R, which is at
-  // most 7 % between the two points; below the flash point the line runs on above the curve.
+  // most 7 % between the two points; below the flash point the line runs on above the curve. The bounds on that side (20 %) and
+  // on how late a cup flashes are what these records show: no source sets them, they hold the records and the line together.
   test.each(Object.entries(antoine))('%s', (name, [a, b, c, kPaAt25]) => {
     const store = storeOf({ percent: { [name]: 100 } });
     const [portion] = store.portions;
     const { flashPointK: flash, boilingPointK: boiling, flammableLimits } = portion ?? {};
     if (!flash || !boiling || !flammableLimits) throw new Error(`no flash point, boiling point or limits of ${name}`);
     const truePa = (temperatureK: number): number => (10 ** (a - b / (temperatureK - 273.15 + c)) * 101325) / 760;
-    expect(truePa(298.15) / 1000 / kPaAt25).toBeCloseTo(1, 1);
+    expect(Math.abs(truePa(298.15) / 1000 / kPaAt25 - 1)).toBeLessThan(kPaAt25 < 1 ? 0.03 : 0.01);
     // How far the line starts beside the curve, and what is left of that at 25 °C.
     const late = truePa(flash) / (flammableLimits.lower * 101325);
     const left = (1 / 298.15 - 1 / boiling) / (1 / flash - 1 / boiling);

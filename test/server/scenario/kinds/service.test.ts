@@ -3,11 +3,9 @@ import { describe, expect, test } from 'vitest';
 import rules from '../../../reference/fuel-rules.json' with { type: 'json' };
 import { checkFacts, figureOf } from '../../../support/facts.ts';
 
-/** The rule's own heating value and carbon content, so that what comes out is its factor times the fuel. */
+/** Fuels of the rule with a factor of carbon; without ethane, whose heating value of the rule lies 2.3 % below the tables'. */
 const ruled = rules.rows.flatMap(({ substance, rule, carbonDioxideFactor, mJPerKg }) =>
-  rule === 'MEPC.364(79)' &&
-  carbonDioxideFactor !== undefined &&
-  ['gas_oil', 'heavy_fuel_oil', 'methanol', 'ethanol'].includes(substance)
+  rule === 'MEPC.364(79)' && carbonDioxideFactor !== undefined && substance !== 'ethane'
     ? [{ substance, carbonDioxideFactor, mJPerKg }]
     : [],
 );
@@ -36,9 +34,13 @@ describe('a service', () => {
       const scenario = checkFacts(service(substance));
       const fuel = figureOf(scenario, 'line', 'fuel-mass') ?? NaN;
       const carbon = figureOf(scenario, 'line', 'carbon-dioxide') ?? NaN;
-      // The rule's factors have four digits of a carbon content; the catalogue's fuels have compositions of their own.
-      expect(Math.abs(carbon / fuel / carbonDioxideFactor - 1)).toBeLessThan(0.012);
-      expect(Math.abs((fuel * mJPerKg) / (2 * 10 * 10 * 3.6) - 1)).toBeLessThan(0.012);
+      // The rule counts with whole atomic weights: 44/12 is 0.07 % above 44.01/12.011, and hydrogen of 1 in place of 1.008 makes
+      // up to 0.13 % more carbon of a pure fuel (propane); its factors are higher by both, and rounded.
+      const isHigher = 1 - carbon / fuel / carbonDioxideFactor;
+      expect(isHigher).toBeGreaterThan(-0.0002);
+      expect(isHigher).toBeLessThan(0.0022);
+      // Half the last digit of the rule's heating values.
+      expect(Math.abs((2 * 10 * 10 * 3.6) / fuel - mJPerKg)).toBeLessThan(0.05);
       expect(figureOf(scenario, 'line', 'annual-carbon-dioxide')).toBeCloseTo(100 * carbon, 6);
     },
   );

@@ -281,8 +281,9 @@ describe('uptake', () => {
   const published = (of: string): number => rows.find((row) => row.of === of)?.value ?? NaN;
 
   test('is what is published', () => {
-    // Surface water of the world's mean: 18 °C, salinity 34.7. The mean of a curve is not the curve of the mean: 0.02.
-    expect(Math.abs(uptakePerAlkalinity(oceanWater(18)) - published('uptake, global mean'))).toBeLessThan(0.02);
+    // Surface water of the world's mean, 18 °C and salinity 34.7, gives 0.847. The source names neither its water nor its air:
+    // half a digit of 0.84, 0.004 for a kelvin, 0.006 for 25 µatm.
+    expect(Math.abs(uptakePerAlkalinity(oceanWater(18)) - published('uptake, global mean'))).toBeLessThan(0.015);
     for (const celsius of [5, 12, 20, 28]) {
       const found = uptakePerAlkalinity(oceanWater(celsius));
       expect(found).toBeGreaterThan(published('uptake, least measured'));
