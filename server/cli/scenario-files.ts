@@ -154,7 +154,7 @@ function faultOf(error: unknown): { readonly kind: 'missing' | 'unreadable'; rea
     case 'EPERM':
       return { kind: 'unreadable', words: 'It may not be read by this user.' };
     case 'ELOOP':
-      return { kind: 'unreadable', words: 'Its links go round in a ring.' };
+      return { kind: 'unreadable', words: 'Its links form a loop.' };
     case 'ERR_ENCODING_INVALID_ENCODED_DATA':
       return { kind: 'unreadable', words: 'It is not UTF-8 text.' };
     default:

@@ -9,5 +9,5 @@ import type { FactOf, Rule } from './rule.ts';
 export const dutySpeed: Rule<FactOf<'duty/speed'>> = {
   severity: 'warning',
   message: ({ leg, speed, service }) =>
-    `${quoted(leg)} goes ${quantityText(speed, 'kn')}, above the service speed of ${quantityText(service, 'kn')}. The propeller law says too little power there.`,
+    `${quoted(leg)} goes ${quantityText(speed, 'kn')}, above the service speed of ${quantityText(service, 'kn')}. The propeller law underestimates the power there. Lower the speed, or raise the \`exponent\` of the service speed.`,
 };

@@ -10,5 +10,5 @@ import type { FactOf, Rule } from './rule.ts';
 export const engineBasicAttack: Rule<FactOf<'engine/basic-attack'>> = {
   severity: 'warning',
   message: ({ from, to, salts, firstMelting }) =>
-    `${listed(salts)} ${salts.length > 1 ? 'lie' : 'lies'} molten on ${metalText(from, to)}${firstMelting ? ` (first melting at ${celsiusText(firstMelting)})` : ''} and ${salts.length > 1 ? 'dissolve' : 'dissolves'} its oxide. Keep the metal below first melting, or take the solids out before it.`,
+    `${listed(salts)} ${salts.length > 1 ? 'lie' : 'lies'} molten on ${metalText(from, to)}${firstMelting ? ` (first melting at ${celsiusText(firstMelting)})` : ''} and ${salts.length > 1 ? 'dissolve' : 'dissolves'} its oxide (basic fluxing). Keep the metal below first melting, or take the solids out before it.`,
 };

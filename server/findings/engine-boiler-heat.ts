@@ -9,7 +9,7 @@ export const engineBoilerHeat: Rule<FactOf<'engine/boiler-heat'>> = {
       case 'none-left':
         return 'Down to that exhaust temperature the gas gives the steam nothing: it leaves hotter than the flame, or the walls take all. Lower the exhaust temperature or the heat loss.';
       case 'cold-stack':
-        return `The gas cannot leave with ${celsiusText(fact.stack)}: the coldest water it meets, the feed water, has ${celsiusText(fact.feedwater)}. Raise the exhaust temperature or take colder feed water.`;
+        return `The gas cannot leave with ${celsiusText(fact.stack)}: the coldest water it meets, the feedwater, has ${celsiusText(fact.feedwater)}. Raise the exhaust temperature or take colder feedwater.`;
       case 'pinch':
         return `The gas above the boiling water's ${celsiusText(fact.boils)} gives only ${shareText(fact.share)} of the heat that evaporating and superheating take. Use less air, a lower boiler pressure, or let the gas leave hotter.`;
     }

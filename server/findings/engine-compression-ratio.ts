@@ -1,5 +1,5 @@
 /**
- * The compression ratio is the largest over the smallest volume of the cylinder, so it is above 1. At 1 or below nothing is
+ * The compression ratio is the cylinder volume at bottom dead centre over the clearance volume, so it is above 1. At 1 or below nothing is
  * compressed and the engine has no cycle.
  */
 import { quantityText } from '../wording/quantities.ts';
@@ -8,5 +8,5 @@ import type { FactOf, Rule } from './rule.ts';
 export const engineCompressionRatio: Rule<FactOf<'engine/compression-ratio'>> = {
   severity: 'error',
   message: ({ ratio }) =>
-    `A compression ratio is the largest over the smallest volume of the cylinder, so it is above 1; ${quantityText(ratio, '1')} is not. Write for example \`16.5\`.`,
+    `A compression ratio is the cylinder volume at bottom dead centre over the clearance volume, so it is above 1; ${quantityText(ratio, '1')} is not. Write for example \`16.5\`.`,
 };

@@ -10,5 +10,5 @@ export const engineFiringPressure: Rule<FactOf<'engine/firing-pressure'>> = {
   message: ({ by, peak, maximum }) =>
     by === 'compression'
       ? `Compression alone reaches ${quantityText(peak, 'bar')}, above the maximum firing pressure of ${quantityText(maximum, 'bar')}. Lower the compression ratio or the boost pressure.`
-      : `It burns up to ${quantityText(peak, 'bar')}, above the maximum firing pressure of ${quantityText(maximum, 'bar')}. Lower the compression ratio or the boost pressure, or take \`cycle: dual\`, which holds that pressure.`,
+      : `The peak pressure is ${quantityText(peak, 'bar')}, above the maximum firing pressure of ${quantityText(maximum, 'bar')}. Lower the compression ratio or the boost pressure, or take \`cycle: dual\`, which holds that pressure.`,
 };

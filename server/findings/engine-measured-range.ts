@@ -1,5 +1,5 @@
 /**
- * A leg runs an engine at a load at which its consumption was not measured. Its fuel is carried on in a straight line with
+ * A leg runs an engine at a load at which its consumption was not measured. Its fuel is extrapolated in a straight line with
  * the load from the nearest measured points, which is a guess.
  */
 import { formatPercent } from '../wording/numbers.ts';
@@ -14,6 +14,6 @@ export const engineMeasuredRange: Rule<FactOf<'engine/measured-range'>> = {
         ? `only at ${formatPercent(fromLoad)}`
         : `from ${formatPercent(fromLoad)} to ${formatPercent(toLoad)}`;
     const mend = load < fromLoad ? 'Add a point there, or `idle consumption`.' : 'Add a point there.';
-    return `${quoted(leg)} runs ${quoted(engine)} at a load of ${formatPercent(load)}, but its consumption is known ${known}. It is carried on in a straight line. ${mend}`;
+    return `${quoted(leg)} runs ${quoted(engine)} at a load of ${formatPercent(load)}, but its consumption is known ${known}. It is extrapolated in a straight line. ${mend}`;
   },
 };

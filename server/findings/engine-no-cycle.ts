@@ -23,7 +23,7 @@ export const engineNoCycle: Rule<FactOf<'engine/no-cycle'>> = {
     }
     const { state, side, limit } = fact;
     return side === null || limit === null
-      ? `There is no state for ${states[state]} with these entries.`
+      ? `There is no state for ${states[state]} with these entries. Check temperatures, λ and the compression ratio.`
       : `For ${states[state]} it would be ${side === 'below' ? 'colder' : 'hotter'} than all data (${celsiusText(limit)}). Check temperatures, λ and the compression ratio.`;
   },
 };

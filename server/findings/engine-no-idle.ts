@@ -1,5 +1,5 @@
 /**
- * An engine runs without load, as in the idle mode of a test cycle, and what it takes then is not known. The fuel of the
+ * An engine runs without load, as in the idle mode of a test cycle, and its consumption at idle is not known. The fuel of the
  * duty is not known either.
  */
 import { quoted } from '../wording/words.ts';
@@ -8,5 +8,5 @@ import type { FactOf, Rule } from './rule.ts';
 export const engineNoIdle: Rule<FactOf<'engine/no-idle'>> = {
   severity: 'warning',
   message: ({ leg, engine }) =>
-    `${quoted(leg)} runs ${quoted(engine)} without load, and what it takes then is not known. Give its \`idle consumption\`.`,
+    `${quoted(leg)} runs ${quoted(engine)} without load, and its consumption at idle is not known. Give its \`idle consumption\`.`,
 };

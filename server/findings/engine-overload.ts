@@ -1,5 +1,5 @@
 /**
- * A leg asks an engine for more than its maximum continuous rating. Its consumption there is carried on in a straight line;
+ * A leg asks an engine for more than its maximum continuous rating. Its consumption there is extrapolated in a straight line;
  * no engine gives that power for long.
  */
 import { formatPercent } from '../wording/numbers.ts';

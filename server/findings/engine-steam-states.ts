@@ -15,11 +15,11 @@ export const engineSteamStates: Rule<FactOf<'engine/steam-states'>> = {
       case 'pressures':
         return 'The pressures do not fall from the boiler (over the reheater) to the condenser. Are two of them exchanged, or is one gauge instead of absolute?';
       case 'not-steam':
-        return `Live steam of ${celsiusText(fact.asked)} would be water: at that pressure it boils at ${celsiusText(fact.boils)}. Raise the temperature or lower the boiler pressure.`;
+        return `Live steam of ${celsiusText(fact.asked)} is below saturation: at that pressure water boils at ${celsiusText(fact.boils)}. Raise the temperature or lower the boiler pressure.`;
       case 'reheat':
         return `Steam comes to the reheater with ${celsiusText(fact.from)} and would leave it with ${celsiusText(fact.asked)}. Reheat to more, or at a lower pressure.`;
       case 'feedwater':
-        return `Feed water of ${celsiusText(fact.asked)} is impossible here: it leaves the pump with ${celsiusText(fact.from)} and boils in the boiler at ${celsiusText(fact.to)}. Give a temperature between, or leave it out.`;
+        return `Feedwater of ${celsiusText(fact.asked)} is impossible here: it leaves the pump with ${celsiusText(fact.from)} and boils in the boiler at ${celsiusText(fact.to)}. Give a temperature between, or leave it out.`;
       case 'outside':
         return `The state at the ${fact.at} ${limits[fact.limit]}, where the formulation of water used here has no equation. Move the pressure or the temperature.`;
     }

@@ -12,7 +12,7 @@ export const engineTurbineInlet: Rule<FactOf<'engine/turbine-inlet'>> = {
     if (fact.why === 'not-hot-enough') {
       const mend =
         fact.of === 'inlet' ? 'Ask for less.' : 'Ask for less, or for a colder turbine inlet that leaves more oxygen.';
-      return `${where} cannot have ${celsiusText(fact.asked)}: with all oxygen burnt it reaches ${celsiusText(fact.reaches)}. ${mend}`;
+      return `${where} cannot reach ${celsiusText(fact.asked)}: with all its oxygen burnt the gas has ${celsiusText(fact.reaches)}. ${mend}`;
     }
     const comes = fact.of === 'inlet' ? 'the air already comes' : 'the gas already comes';
     return `${where} is to have ${celsiusText(fact.asked)}, but ${comes} with ${celsiusText(fact.comes)}. Ask for more.`;

@@ -8,5 +8,5 @@ import type { FactOf, Rule } from './rule.ts';
 export const engineTurbineSolids: Rule<FactOf<'engine/turbine-solids'>> = {
   severity: 'warning',
   message: ({ share, inlet }) =>
-    `${shareText(share)} of the gas by mass is solid or molten as it enters the turbine at ${celsiusText(inlet)}; blades stand some parts per million. Such a fuel is outside gas-turbine practice: take the solids out before the turbine, or heat the air through a wall.`,
+    `${shareText(share)} of the gas by mass is solid or molten as it enters the turbine at ${celsiusText(inlet)}; blades stand some parts per million. Such a fuel is outside gas-turbine practice: take the solids out before the turbine, or fire it externally through an air heater.`,
 };

@@ -1,6 +1,6 @@
 /**
  * A definition or value needs itself, directly or through others, so there is nothing to start from. Reported once, at
- * the name that closes the ring; everything on the ring stays unknown until it is broken.
+ * the name that closes the circle; everything in it stays unknown until it is broken.
  */
 import { listed, quoted } from '../wording/words.ts';
 import type { FactOf, Rule } from './rule.ts';
@@ -14,6 +14,6 @@ export const nameCycle: Rule<FactOf<'name/cycle'>> = {
     // The last step of a long ring leads over those that are left out.
     if (leftOut > 0) steps.splice(-1, 1, `so on through ${leftOut} more`);
     const closing = `${quoted(path.at(-2) ?? second ?? '')} needs ${quoted(path.at(-1) ?? first)} again`;
-    return `These definitions go round in a ring: ${listed([...steps, closing])}. Break it at one of them.`;
+    return `These definitions depend on each other in a circle: ${listed([...steps, closing])}. Break the circle at one of them.`;
   },
 };

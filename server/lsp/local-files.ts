@@ -56,7 +56,7 @@ function asFault(error: unknown): FileAnswer {
     case 'EPERM':
       return { fault: 'unreadable', detail: 'It may not be read by this user.' };
     case 'ELOOP':
-      return { fault: 'unreadable', detail: 'Its links go round in a ring.' };
+      return { fault: 'unreadable', detail: 'Its links form a loop.' };
     case 'ERR_ENCODING_INVALID_ENCODED_DATA':
       return { fault: 'unreadable', detail: 'It is not UTF-8 text.' };
     case 'ERR_INVALID_URL_SCHEME':

@@ -4,9 +4,9 @@
 import { hazardCodes, hazardRuleWords } from '../scenario/hazard-fact.ts';
 
 const causes = {
-  alone: 'by what it is',
-  storage: 'by how it is kept',
-  meeting: 'by what it meets',
+  alone: 'of the substance itself',
+  storage: 'of how it is stored',
+  meeting: 'of what it meets',
 } as const;
 
 export function hazardsPage(command: string): string {
@@ -30,7 +30,7 @@ export function hazardsPage(command: string): string {
     'A code is accepted with a reason inside its definition: `acknowledge hazard/water-reactive: "closed tanks; note 7"`.',
   ];
   for (const [code, { cause, says }] of Object.entries(hazardCodes)) {
-    lines.push('', `## \`${code}\``, '', `${says} Earned ${causes[cause]}.`, '');
+    lines.push('', `## \`${code}\``, '', `${says} A hazard ${causes[cause]}.`, '');
     for (const rule of hazardRuleWords.filter((one) => one.code === code)) {
       lines.push(`- ${rule.happens} ${rule.mend} Source: ${rule.source}.`);
     }

@@ -39,7 +39,7 @@ export const hazardFigures = [
   },
   {
     id: 'limiting-oxygen-share',
-    label: 'Least oxygen for a flame, by volume, the rest nitrogen',
+    label: 'Limiting oxygen concentration with nitrogen, by volume',
     unit: '1',
     method: 'limiting-oxygen',
   },

@@ -30,13 +30,13 @@ export const consumptionFigures = [
   },
   {
     id: 'least-specific-consumption',
-    label: 'Least brake specific energy consumption over the load, on the lower heating value',
+    label: 'Lowest brake specific energy consumption over the load, on the lower heating value',
     unit: 'MJ/kWh',
     method: 'measured-consumption',
   },
   {
     id: 'best-load',
-    label: 'Load of the least consumption, of the rating',
+    label: 'Load of the lowest specific consumption, of the rating',
     unit: '1',
     method: 'measured-consumption',
   },

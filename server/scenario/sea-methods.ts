@@ -9,7 +9,7 @@ export type SeaMethodId =
   | 'effluent-sums'
   | 'near-field-mixing'
   | 'equilibrium-uptake'
-  | 'settling-time'
+  | 'equilibration-time'
   | 'mixed-layer-share'
   | 'sea-density'
   | 'hydrostatic-pressure';

@@ -218,8 +218,8 @@ export function hazardRows(hazards: Hazards): readonly HazardRow[] {
         ]
       : []),
     ...hazards.limitingOxygen.map(({ inert, moleFraction, source }) => ({
-      label: 'Least oxygen for a flame',
-      text: `${formatNumber(moleFraction * 100)} % by volume, the rest thinned with ${inert.replace('-', ' ')}`,
+      label: 'Limiting oxygen concentration',
+      text: `${formatNumber(moleFraction * 100)} % by volume, with ${inert.replace('-', ' ')}`,
       source: sourceText(source),
     })),
     ...exposureRows(hazards),

@@ -88,6 +88,6 @@ export const plantAssumptions: Readonly<Record<PlantAssumptionId, string>> = {
     'Where solids are in the gas the figure is a band: particles keep their heat or follow the gas, the composition follows or stays. The least work counts.',
   'no-cooling-air': 'No air is bled off to cool blades; with it, the same inlet temperature gives some points less.',
   'no-pressure-loss-in-pipes': 'No pressure is lost in pipes, boiler, reheater and valves of the water and steam.',
-  'mixing-heater': 'Feed water is warmed in one mixing heater by steam bled at its own pressure.',
+  'mixing-heater': 'Feedwater is warmed in one mixing heater by steam bled at its own pressure.',
   'losses-before-steam': 'Heat through the walls and fuel that does not burn are lost before the steam has its heat.',
 };

@@ -28,11 +28,11 @@ export const seaMethods: Readonly<Record<SeaMethodId, MethodText>> = {
   },
   'uptake-efficiency': {
     words:
-      'The carbon that the water holds more in the end per alkalinity, its fugacity being what it was, less the carbon that was delivered.',
+      'The carbon that the water holds more per alkalinity once its fugacity is what it was, less the carbon that was delivered.',
     equation: 'u = a (∂C/∂A at constant f) − c',
     symbols:
       'u CO2 taken up, a alkalinity and c dissolved carbon delivered, C dissolved inorganic carbon, A total alkalinity, f fugacity of CO2',
-    validity: 'Once it is well diluted and has settled with the air, which takes weeks to months.',
+    validity: 'Once it is well diluted and at equilibrium with the air, which takes weeks to months.',
   },
   'effluent-sums': {
     words: 'Alkalinity and dissolved carbon that the effluent brings, form by form.',
@@ -53,9 +53,9 @@ export const seaMethods: Readonly<Record<SeaMethodId, MethodText>> = {
     symbols:
       "u CO2 taken up, C dissolved inorganic carbon at an alkalinity and fugacity, A and A' alkalinity before and after, f fugacity before, c carbon a kg of effluent brings, D kg of sea water per kg of effluent",
     validity:
-      'If the water stays as it is mixed until it has settled; it takes up a little more if it is diluted further.',
+      'If the water stays as it is mixed until it is at equilibrium with the air; it takes up a little more if it is diluted further.',
   },
-  'settling-time': {
+  'equilibration-time': {
     words:
       'The depth of the layer over the transfer velocity, times the carbon that has to move for each mole of dissolved CO2.',
     equation: 'τ = (h / k) (∂C/∂[CO₂] at constant A); k = 0.251 U² (Sc/660)^−½ cm/h',
@@ -64,9 +64,10 @@ export const seaMethods: Readonly<Record<SeaMethodId, MethodText>> = {
     validity: 'An open, even layer at winds of 3 to 15 m/s; the transfer velocity itself is known to 20 %.',
   },
   'mixed-layer-share': {
-    words: 'Water that leaves the layer at random, on average after its residence, has settled so far.',
+    words:
+      'Water that leaves the layer at random, on average after its residence, has come so far towards equilibrium.',
     equation: 's = T / (T + τ)',
-    symbols: 's share of the uptake, T mean residence in the mixed layer, τ time to settle to 1/e',
+    symbols: 's share of the uptake, T mean residence in the mixed layer, τ equilibration time',
     validity: 'Water that comes back to the surface takes up the rest later.',
   },
   'sea-density': {

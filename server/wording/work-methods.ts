@@ -14,7 +14,7 @@ export const workMethods: Readonly<Record<WorkMethodId, MethodText>> = {
     symbols:
       'h fuel energy for the work, b measured consumption, H₀ heating value it was measured on, s₀ and s shares of the heating value set free above exhaust temperature by the fuel measured and the fuel burnt',
     validity:
-      'Between measured loads a monotone cubic is laid (Fritsch and Carlson); outside them the line of Willans is continued, which is a guess.',
+      'Between measured loads it is interpolated by a monotone cubic (Fritsch and Carlson); outside them it is extrapolated along the Willans line, which is a guess.',
   },
   'brake-efficiency': {
     words: 'Work at the shaft over the energy of all fuel, on the lower heating value.',
@@ -99,7 +99,7 @@ export const workAssumptions: Readonly<Record<WorkAssumptionId, string>> = {
     'Consumption holds at 25 °C and 100 kPa unless said otherwise; it is not carried over to other air.',
   'friction-kept':
     'Friction takes the same power at every load, and the indicated efficiency stays that of the rating.',
-  'beyond-measured': 'At a load that was not measured, fuel goes on in a straight line with the load.',
+  'beyond-measured': 'At a load that was not measured, fuel is extrapolated in a straight line over the load.',
   'all-carbon-to-dioxide': 'All carbon of the fuel counts as carbon dioxide, also what ends in carbonate.',
   'slate-as-residue':
     'Residue is what is solid or liquid at 25 °C of the products of complete combustion, water apart.',

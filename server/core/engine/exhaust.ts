@@ -11,7 +11,7 @@ import type { MatterState } from '../burn/burn.ts';
 import type { SolvedCycle } from './work-cycle.ts';
 
 export interface ExhaustRow extends ProductRow {
-  /** Of the dry gas diluted, or thickened, to 15 % of oxygen; null for what is condensed or water. */
+  /** Of the dry gas diluted, or thickened, to 15 % of oxygen; null for what is condensed or water, or what air is made of. */
   readonly shareAt15: number | null;
 }
 
@@ -29,9 +29,11 @@ export function exhaustRows(state: MatterState, contentTimes: number, leastMassS
     ...row,
     mol: row.mol / contentTimes,
     massKg: row.massKg / contentTimes,
-    shareAt15: row.dryMoleShare === null || factor === null ? null : row.dryMoleShare * factor,
+    // Diluting with air brings more of what air is made of, so those have no such share.
+    shareAt15: row.dryMoleShare === null || factor === null || ofAir.has(row.id) ? null : row.dryMoleShare * factor,
   }));
 }
 
+const ofAir = new Set(['N2(g)', 'O2(g)', 'Ar(g)']);
 const oxygenOfAir = 0.20946;
 const oxygenReference = 0.15;

@@ -149,7 +149,7 @@ export const aloneRules: readonly HazardRule[] = [
   {
     id: 'unstable',
     code: 'hazard/unstable',
-    happens: 'It can fall apart with heat and gas by itself.',
+    happens: 'It can decompose by itself, with heat and gas.',
     mend: 'Keep it cool, clean and vented, and away from what sets it off.',
     source: ruleSources.bretherick,
     find: (store) =>

@@ -111,7 +111,7 @@ const reactions: readonly BlanketReaction[] = [
     id: 'carbon-dioxide-over-base',
     gas: 'CO2',
     leastShare: traceCarbonDioxide,
-    happens: 'The blend swallows the gas: the tank draws a vacuum, and solids form.',
+    happens: 'The blend absorbs the gas: the tank draws a vacuum, and solids form.',
     mend: 'Blanket it with nitrogen.',
     source: ruleSources.igc,
     judge: (portion, store) => {

@@ -111,7 +111,7 @@ export const contactRules: readonly HazardRule[] = [
     id: 'wrong-agent',
     code: 'hazard/extinguishing',
     happens: 'This agent feeds or spreads its fire.',
-    mend: 'Keep the agent its safety data sheet names.',
+    mend: 'Keep ready the agent its safety data sheet names.',
     source: ruleSources.practice,
     find: (store) =>
       store.portions.flatMap(({ hazards }, index) =>

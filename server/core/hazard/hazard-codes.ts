@@ -20,7 +20,7 @@ export const hazardCodes = {
   'hazard/pyrophoric': { cause: 'alone', says: 'A portion takes fire in air by itself.' },
   'hazard/unstable': {
     cause: 'alone',
-    says: 'A portion can fall apart or polymerise with heat by itself; worse where it is warm or meets a catalyst.',
+    says: 'A portion can decompose or polymerise by itself, with heat; worse where it is warm or meets a catalyst.',
   },
   'hazard/oxidiser': { cause: 'alone', says: 'A portion makes other things burn without air.' },
   'hazard/peroxide-former': {
@@ -50,7 +50,7 @@ export const hazardCodes = {
     cause: 'storage',
     says: 'More oxygen than in air, or walls so cold that air condenses on them.',
   },
-  'hazard/blanket': { cause: 'storage', says: 'The gas over it reacts with a portion, or is swallowed by it.' },
+  'hazard/blanket': { cause: 'storage', says: 'The gas over it reacts with a portion, or is absorbed by it.' },
   'hazard/superoxide': {
     cause: 'storage',
     says: 'Potassium or its alloy where oxygen reaches it: a superoxide crust that explodes with metal and oil.',

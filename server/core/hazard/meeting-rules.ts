@@ -120,7 +120,7 @@ export const meetingRules: readonly MeetingRule[] = [
   {
     id: 'metal-with-halogen',
     code: 'hazard/metal-and-halogen',
-    happens: 'The metal takes the halogen, at a knock or at once, with white heat.',
+    happens: 'The metal reacts with the halogen, on impact or at once, with white heat.',
     mend: 'Use a fluid without chlorine, bromine or fluorine; never clean with halogenated solvent.',
     source: ruleSources.bretherick,
     first: (portion, store) =>
@@ -185,7 +185,7 @@ export const meetingRules: readonly MeetingRule[] = [
     id: 'metal-with-carbonyl',
     code: 'hazard/metal-and-carbonyl',
     happens: 'The metal or hydride reduces and condenses it, hot and sometimes late.',
-    mend: 'Use a carrier that is neither ester, fat, ketone nor aldehyde: biodiesel is none.',
+    mend: 'Use a carrier that is neither ester, fat, ketone nor aldehyde; biodiesel is an ester.',
     source: ruleSources.bretherick,
     first: (portion) =>
       isIn(portion, 'alkali-metal') || (isIn(portion, 'metal-hydride') && isIn(portion, 'strong-reducer')),
@@ -304,7 +304,7 @@ export const meetingRules: readonly MeetingRule[] = [
     id: 'acid-with-base',
     code: 'hazard/acid-and-base',
     happens: 'They neutralise each other with heat.',
-    mend: 'Mix them only thinned, cooled and stirred, one slowly into the other.',
+    mend: 'Mix them only diluted, cooled and stirred, one slowly into the other.',
     source: ruleSources.practice,
     first: (portion) => isIn(portion, 'mineral-acid', 'organic-acid') && !dissolvesAsSalt(portion),
     second: (portion) => isIn(portion, 'caustic', 'basic-oxide', 'amine', 'ammonia') && causticMolPerKg(portion) > 0,

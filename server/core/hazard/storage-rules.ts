@@ -40,7 +40,7 @@ export const storageRules: readonly HazardRule[] = [
   {
     id: 'near-flash-point',
     code: 'hazard/near-flash-point',
-    happens: 'Little more warmth brings its vapour to the lower limit.',
+    happens: 'A little more heat brings its vapour to the lower flammable limit.',
     mend: 'Store it at least 10 K below its flash point, or under inert gas.',
     source: ruleSources.solas,
     find: (store) => {
@@ -62,7 +62,7 @@ export const storageRules: readonly HazardRule[] = [
     id: 'flammable-gas',
     code: 'hazard/flammable-range',
     happens: 'The gas burns or explodes at a spark as it is.',
-    mend: 'Keep fuel gas and air apart, or thin it below its lower limit.',
+    mend: 'Keep fuel gas and air apart, or dilute it below its lower limit.',
     source: ruleSources.crowl,
     find: (store) => {
       const mixture = isGas(store) && store.kind === 'tank' ? gasMixtureOf(store) : null;

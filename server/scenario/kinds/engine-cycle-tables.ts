@@ -117,7 +117,7 @@ function cornersTable(engine: SolvedEngine): Table {
     { id: 'condensed-share', label: 'Condensed in the exhaust, by mass', unit: '1' },
     { id: 'counts', label: '', unit: null },
   ];
-  return lazyTable({ id: 'particle-corners', label: 'Corners of what particles and reactions do', columns }, () =>
+  return lazyTable({ id: 'particle-corners', label: 'Limiting cases of particles and reactions', columns }, () =>
     engine.cycles.map((solved): Row => {
       const { corner, balance, exhaustTemperatureK } = solved.cycle;
       const { lowerHeatingValueJ, input } = engine.charge;
@@ -142,7 +142,7 @@ function exhaustTable(engine: SolvedEngine): Table {
     { id: 'mass-share', label: 'by mass', unit: '1' },
     { id: 'wet-mole-share', label: 'by mole, wet gas', unit: '1' },
     { id: 'dry-mole-share', label: 'by mole, dry gas', unit: '1' },
-    { id: 'share-at-oxygen', label: 'dry, referred to 15 % oxygen', unit: '1' },
+    { id: 'reference-mole-share', label: 'by mole, dry, at 15 % O2', unit: '1' },
     { id: 'remark', label: 'Remark', unit: null },
   ];
   const rows = (keeps: (massShare: number, isGas: boolean) => boolean): Row[] => {

@@ -35,7 +35,7 @@ export const engineEntries = {
   specificFuelConsumption: {
     name: 'specific fuel consumption',
     reader: atLoadsReader('g/kWh', 'masses of fuel for the work at the shaft, such as `209 g/kWh at 50 %`', 'positive'),
-    help: 'Measured consumption against load. Between the points a monotone cubic is laid; outside them nothing is known.',
+    help: 'Measured consumption against load. Between the points it is interpolated by a monotone cubic; outside them it is not known.',
   },
   efficiency: {
     name: 'efficiency',
@@ -54,7 +54,7 @@ export const engineEntries = {
   idleConsumption: {
     name: 'idle consumption',
     reader: quantityReader('kg/h', 'a mass flow of fuel, such as `14 kg/h`', { range: 'positive' }),
-    help: 'What it takes running without load.',
+    help: 'Fuel consumption at idle.',
   },
   maximumContinuousRating: {
     name: 'maximum continuous rating',
@@ -101,7 +101,7 @@ export const engineEntries = {
   compressionRatio: {
     name: 'compression ratio',
     reader: ratio('16.5'),
-    help: 'Largest over smallest volume of the cylinder.',
+    help: 'Cylinder volume at bottom dead centre over that at top dead centre (clearance volume).',
   },
   cutOffRatio: {
     name: 'cut-off ratio',
@@ -305,7 +305,7 @@ export const engineEntries = {
   urea: {
     name: 'urea',
     reader: slipReader,
-    help: 'Urea (as pure urea) that the treatment of the exhaust takes. Its carbon leaves as carbon dioxide.',
+    help: 'Urea (as pure urea) consumed by the exhaust treatment. Its carbon leaves as carbon dioxide.',
     default: { text: 'none', source: convention },
   },
 };

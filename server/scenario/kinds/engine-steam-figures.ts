@@ -25,7 +25,7 @@ export const steamOwnFigures = [
   row('steam-fuel-ratio', 'Live steam, per kg of fuel', 'kg/kg', 'steam-flow'),
   row('steam-consumption', 'Specific steam consumption', 'kg/kWh', 'steam-flow'),
   row('steam-flow', 'Live steam flow at the rating', 'kg/s', 'steam-flow'),
-  row('turbine-end-wetness', 'Wetness of the steam at the turbine exhaust, by mass', '1', 'steam-state'),
+  row('turbine-exhaust-wetness', 'Wetness of the steam at the turbine exhaust, by mass', '1', 'steam-state'),
   row('feedwater-temperature', 'Feedwater temperature', 'K', 'steam-state'),
   row('flame-temperature', 'Flame temperature, of the whole charge before it gives off heat', 'K', 'boiler-flame'),
   row('excess-air-ratio', 'Excess-air ratio λ', '1', 'boiler-flame'),
@@ -71,7 +71,7 @@ export function steamValues(at: SteamAt): FigureValues {
     'steam-fuel-ratio': steamKgPerKg,
     'steam-consumption': steamKgPerKg / brakeWorkJ,
     'steam-flow': ratedPowerW === null ? undefined : (ratedPowerW * steamKgPerKg) / brakeWorkJ,
-    'turbine-end-wetness': cycle.endWetness,
+    'turbine-exhaust-wetness': cycle.endWetness,
     'feedwater-temperature': cycle.feedwaterTemperatureK,
     'flame-temperature': boiler.flame.temperatureK,
     'excess-air-ratio': boiler.lambda ?? undefined,
@@ -99,7 +99,7 @@ export const steamPointNames: Readonly<Record<SteamPoint, string>> = {
   'bled-steam': 'bled steam',
   'before-reheat': 'before the reheater',
   reheated: 'behind the reheater',
-  'turbine-end': 'end of the turbine',
+  'turbine-end': 'turbine exhaust',
 };
 
 function statesTable({ cycle }: SteamPlant): Table {
@@ -109,7 +109,7 @@ function statesTable({ cycle }: SteamPlant): Table {
     { id: 'temperature', label: 'Temperature', unit: 'K' },
     { id: 'enthalpy', label: 'Enthalpy, per kg of water', unit: 'kJ/kg' },
     { id: 'entropy', label: 'Entropy, per kg of water', unit: 'kJ/(kg K)' },
-    { id: 'dryness', label: 'Steam, by mass', unit: '1' },
+    { id: 'dryness', label: 'Dryness fraction', unit: '1' },
     { id: 'flow', label: 'Flow, per kg of live steam', unit: 'kg/kg' },
   ];
   return lazyTable({ id: 'steam-states', label: 'States of water and steam', columns }, () =>

@@ -13,7 +13,12 @@ import { bandOverTurbine, consumptionOfTurbine, type TurbineAt } from './engine-
 
 /** Those besides consumption. Ids and units are the contract: they never change. */
 export const turbineOwnFigures = [
-  row('net-efficiency', 'Work of the turbine less the compressor’s, over the lower heating value', '1', 'turbine-work'),
+  row(
+    'net-efficiency',
+    'Net efficiency (turbine less compressor work), on the lower heating value',
+    '1',
+    'turbine-work',
+  ),
   row('turbine-inlet-temperature', 'Temperature of the gas at the turbine inlet', 'K', 'turbine-state'),
   row('turbine-outlet-temperature', 'Temperature of the gas behind the turbine', 'K', 'turbine-exhaust'),
   row('exhaust-temperature', 'Temperature of the exhaust as it leaves', 'K', 'turbine-exhaust'),

@@ -70,7 +70,7 @@ function cornersTable({ cycles, cautious }: SolvedTurbine): Table {
     { id: 'condensed-share', label: 'Condensed in the exhaust, by mass', unit: '1' },
     { id: 'counts', label: '', unit: null },
   ];
-  return lazyTable({ id: 'turbine-corners', label: 'Corners of what particles and reactions do', columns }, () =>
+  return lazyTable({ id: 'turbine-corners', label: 'Limiting cases of particles and reactions', columns }, () =>
     cycles.map((cycle): Row => {
       const { corner, brakeEfficiency, netEfficiency, exhaust } = cycle;
       return [

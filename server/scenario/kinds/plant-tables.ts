@@ -54,7 +54,7 @@ export function plantExhaustTable(matter: () => MatterState, fuelKg: number): Ta
     { id: 'mass-share', label: 'by mass', unit: '1' },
     { id: 'wet-mole-share', label: 'by mole, wet gas', unit: '1' },
     { id: 'dry-mole-share', label: 'by mole, dry gas', unit: '1' },
-    { id: 'share-at-oxygen', label: 'dry, referred to 15 % oxygen', unit: '1' },
+    { id: 'reference-mole-share', label: 'by mole, dry, at 15 % O2', unit: '1' },
     { id: 'remark', label: 'Remark', unit: null },
   ];
   const rows = (keeps: (isShown: boolean) => boolean): Row[] => {

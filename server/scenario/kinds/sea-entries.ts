@@ -115,7 +115,7 @@ export const seaEntries = {
   mixedLayer: {
     name: 'mixed layer',
     reader: quantityReader('m', 'a depth, such as `40 m`', { range: 'positive' }),
-    help: 'The depth to which the water is mixed; with the wind, how long it takes to settle with the air.',
+    help: 'The depth to which the water is mixed; with the wind, how long it takes to come to equilibrium with the air.',
   },
   wind: {
     name: 'wind',

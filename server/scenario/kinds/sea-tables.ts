@@ -56,11 +56,11 @@ function speciesTable(state: CarbonateState): Table {
 function uptakeTable(state: CarbonateState): Table {
   return {
     id: 'uptake',
-    label: 'What a mole delivered comes to in the end, per mole',
+    label: 'Response to what is added, at equilibrium with the air, per mole',
     columns: [
       { id: 'delivered', label: 'Delivered', unit: null },
       { id: 'alkalinity', label: 'alkalinity', unit: 'mol/mol' },
-      { id: 'response', label: 'carbon held in the end', unit: 'mol/mol' },
+      { id: 'response', label: 'carbon held at equilibrium', unit: 'mol/mol' },
       { id: 'carbon', label: 'carbon delivered', unit: 'mol/mol' },
       { id: 'uptake', label: 'CO2 taken up', unit: 'mol/mol' },
     ],
@@ -99,7 +99,7 @@ function constantsTable({ constants }: SolvedSea): Table {
   ] as const;
   return {
     id: 'constants',
-    label: 'Constants at its place, total scale, per kg of sea water: pK = -log10 K',
+    label: 'Constants in situ, total scale, per kg of sea water: pK = -log10 K',
     columns: [
       { id: 'constant', label: 'Constant', unit: null },
       { id: 'pk', label: 'pK', unit: '1' },
@@ -146,7 +146,7 @@ const budgetColumns: readonly {
   {
     of: 'ln-aragonite-saturation',
     id: 'aragonite-saturation',
-    label: 'aragonite',
+    label: 'Ω aragonite',
     unit: '1',
     value: ({ aragoniteSaturation }) => aragoniteSaturation,
     scale: ({ aragoniteSaturation }) => aragoniteSaturation,
@@ -190,7 +190,7 @@ function budgetTable(
   );
   return {
     id: 'uncertainty-budget',
-    label: 'Where the standard uncertainty comes from: the change each input makes, moved by its own',
+    label: 'Uncertainty budget: change made by one standard uncertainty of each input',
     columns: [
       { id: 'input', label: 'Input', unit: null },
       ...budgetColumns.map(({ id, label, unit }) => ({ id, label, unit })),

@@ -90,7 +90,7 @@ function assumptionsOf(method: MethodId, { inputs }: SeaQuestion): readonly Assu
       return [...scale, 'air-held', 'carbon-once', 'nothing-precipitates', 'effluent-water'];
     case 'near-field-mixing':
       return [...scale, 'effluent-water', 'no-gas-yet', 'nothing-precipitates'];
-    case 'settling-time':
+    case 'equilibration-time':
     case 'mixed-layer-share':
       return [...scale, 'even-layer'];
     default:

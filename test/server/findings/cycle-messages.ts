@@ -6,7 +6,7 @@ import { quantity } from '../../support/scenario-builder.ts';
 export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
   [
     { code: 'engine/compression-ratio', ratio: quantity(0.9, '1') },
-    'A compression ratio is the largest over the smallest volume of the cylinder, so it is above 1; 0.9 is not. Write for example `16.5`.',
+    'A compression ratio is the cylinder volume at bottom dead centre over the clearance volume, so it is above 1; 0.9 is not. Write for example `16.5`.',
   ],
   [
     {
@@ -15,7 +15,7 @@ export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
       peak: quantity(75.35, 'bar'),
       maximum: quantity(60, 'bar'),
     },
-    'It burns up to 75.35 bar, above the maximum firing pressure of 60 bar. Lower the compression ratio or the boost pressure, or take `cycle: dual`, which holds that pressure.',
+    'The peak pressure is 75.35 bar, above the maximum firing pressure of 60 bar. Lower the compression ratio or the boost pressure, or take `cycle: dual`, which holds that pressure.',
   ],
   [
     {
@@ -42,7 +42,7 @@ export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/no-cycle', why: 'no-state', state: 'combustion', side: null, limit: null },
-    'There is no state for combustion with these entries.',
+    'There is no state for combustion with these entries. Check temperatures, λ and the compression ratio.',
   ],
   [
     {
@@ -51,7 +51,7 @@ export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
       endGas: quantity(950, 'K', 0, 'temperature'),
       octaneNumber: quantity(85, '1'),
     },
-    'Knock is likely: at 676.9 °C and an octane number of 85 the end gas has 1.62 times the time it takes to light by itself (Livengood and Wu, delays of Douaud and Eyzat). Lower the compression ratio, the boost or its temperature, or burn leaner.',
+    'Knock is likely: at 676.9 °C and an octane number of 85 the ignition integral of the end gas reaches 1.62, and it ignites at 1 (Livengood and Wu, delays of Douaud and Eyzat). Lower the compression ratio, the boost or its temperature, or burn leaner.',
   ],
   [
     {
@@ -70,7 +70,7 @@ export const CYCLE_ROWS: readonly (readonly [Fact, string])[] = [
       degrees: 60.3,
       temperature: quantity(720, 'K', 0, 'temperature'),
     },
-    'At 446.9 °C the spray takes 6.7 ms to light (Wolfer), 60.3 degrees of the crankshaft at its speed: it is likely to misfire. Raise the compression ratio or the boost temperature.',
+    'At 446.9 °C the ignition delay of the spray is 6.7 ms (Wolfer), 60.3 degrees of the crankshaft at its speed: it is likely to misfire. Raise the compression ratio or the boost temperature.',
   ],
   [
     {

@@ -10,19 +10,19 @@ export const DUTY_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/measured-range', leg: 'wait', engine: 'main', load: 0.12, fromLoad: 0.25, toLoad: 1 },
-    '`wait` runs `main` at a load of 12 %, but its consumption is known from 25 % to 100 %. It is carried on in a straight line. Add a point there, or `idle consumption`.',
+    '`wait` runs `main` at a load of 12 %, but its consumption is known from 25 % to 100 %. It is extrapolated in a straight line. Add a point there, or `idle consumption`.',
   ],
   [
     { code: 'engine/measured-range', leg: 'push', engine: 'main', load: 1, fromLoad: 0.85, toLoad: 0.85 },
-    '`push` runs `main` at a load of 100 %, but its consumption is known only at 85 %. It is carried on in a straight line. Add a point there.',
+    '`push` runs `main` at a load of 100 %, but its consumption is known only at 85 %. It is extrapolated in a straight line. Add a point there.',
   ],
   [
     { code: 'engine/no-idle', leg: 'mode 5', engine: 'main' },
-    '`mode 5` runs `main` without load, and what it takes then is not known. Give its `idle consumption`.',
+    '`mode 5` runs `main` without load, and its consumption at idle is not known. Give its `idle consumption`.',
   ],
   [
     { code: 'duty/speed', leg: 'sail', speed: quantity(13.5, 'kn'), service: quantity(13, 'kn') },
-    '`sail` goes 13.5 kn, above the service speed of 13 kn. The propeller law says too little power there.',
+    '`sail` goes 13.5 kn, above the service speed of 13 kn. The propeller law underestimates the power there. Lower the speed, or raise the `exponent` of the service speed.',
   ],
   [
     { code: 'duty/leg-name', leg: 'boilr', near: ['boiler'] },

@@ -78,11 +78,11 @@ export const LANGUAGE_ROWS: readonly (readonly [Fact, string])[] = [
   [{ code: 'name/cycle', path: ['a', 'a'] }, '`a` is defined by itself. Give it a value that does not need it.'],
   [
     { code: 'name/cycle', path: ['a', 'b', 'c', 'a'] },
-    'These definitions go round in a ring: `a` needs `b`, `b` needs `c` and `c` needs `a` again. Break it at one of them.',
+    'These definitions depend on each other in a circle: `a` needs `b`, `b` needs `c` and `c` needs `a` again. Break the circle at one of them.',
   ],
   [
     { code: 'name/use-cycle', path: ['x/a.stoke', 'x/b.stoke', 'x/a.stoke'] },
-    'These files use each other in a ring: `a.stoke`, then `b.stoke`, then `a.stoke`. Remove one of the `use` lines.',
+    'These files use each other in a circle: `a.stoke`, then `b.stoke`, then `a.stoke`. Remove one of the `use` lines.',
   ],
   [{ code: 'name/use-cycle', path: ['a.stoke', 'a.stoke'] }, 'This file uses itself. Remove the `use`.'],
   [

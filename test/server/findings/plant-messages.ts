@@ -19,7 +19,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
       asked: celsius(2600),
       reaches: celsius(2220),
     },
-    'The turbine inlet cannot have 2600 °C: with all oxygen burnt it reaches 2220 °C. Ask for less.',
+    'The turbine inlet cannot reach 2600 °C: with all its oxygen burnt the gas has 2220 °C. Ask for less.',
   ],
   [
     {
@@ -29,7 +29,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
       asked: celsius(2000),
       reaches: celsius(1700),
     },
-    'The reheat cannot have 2000 °C: with all oxygen burnt it reaches 1700 °C. Ask for less, or for a colder turbine inlet that leaves more oxygen.',
+    'The reheat cannot reach 2000 °C: with all its oxygen burnt the gas has 1700 °C. Ask for less, or for a colder turbine inlet that leaves more oxygen.',
   ],
   [
     { code: 'engine/turbine-inlet', why: 'comes-hotter', of: 'inlet', asked: celsius(300), comes: celsius(410) },
@@ -41,11 +41,11 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/turbine-solids', share: share(0.0165), inlet: celsius(1250) },
-    '1.65 % of the gas by mass is solid or molten as it enters the turbine at 1250 °C; blades stand some parts per million. Such a fuel is outside gas-turbine practice: take the solids out before the turbine, or heat the air through a wall.',
+    '1.65 % of the gas by mass is solid or molten as it enters the turbine at 1250 °C; blades stand some parts per million. Such a fuel is outside gas-turbine practice: take the solids out before the turbine, or fire it externally through an air heater.',
   ],
   [
     { code: 'engine/no-plant', why: 'no-work' },
-    'It gives no work: its compressor takes all that the turbine gives. Raise the turbine inlet temperature or the efficiencies, or lower the pressure ratio.',
+    'There is no net work: the compressor takes all that the turbine gives. Raise the turbine inlet temperature or the efficiencies, or lower the pressure ratio.',
   ],
   [
     { code: 'engine/no-plant', why: 'no-state', stage: 'turbine', side: 'below', limit: celsius(-73.15) },
@@ -53,7 +53,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/no-plant', why: 'no-state', stage: 'furnace', side: null, limit: null },
-    'There is no state for the furnace with these entries.',
+    'There is no state for the furnace with these entries. Check temperatures, pressures and λ.',
   ],
   [
     { code: 'engine/steam-states', why: 'pressures' },
@@ -61,7 +61,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/steam-states', why: 'not-steam', asked: celsius(280), boils: celsius(311) },
-    'Live steam of 280 °C would be water: at that pressure it boils at 311 °C. Raise the temperature or lower the boiler pressure.',
+    'Live steam of 280 °C is below saturation: at that pressure water boils at 311 °C. Raise the temperature or lower the boiler pressure.',
   ],
   [
     { code: 'engine/steam-states', why: 'reheat', asked: celsius(300), from: celsius(350) },
@@ -69,7 +69,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/steam-states', why: 'feedwater', asked: celsius(320), from: celsius(34), to: celsius(311) },
-    'Feed water of 320 °C is impossible here: it leaves the pump with 34 °C and boils in the boiler at 311 °C. Give a temperature between, or leave it out.',
+    'Feedwater of 320 °C is impossible here: it leaves the pump with 34 °C and boils in the boiler at 311 °C. Give a temperature between, or leave it out.',
   ],
   [
     { code: 'engine/steam-states', why: 'outside', at: 'boiler', limit: 'near-critical' },
@@ -81,7 +81,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
   ],
   [
     { code: 'engine/boiler-heat', why: 'cold-stack', stack: celsius(120), feedwater: celsius(160) },
-    'The gas cannot leave with 120 °C: the coldest water it meets, the feed water, has 160 °C. Raise the exhaust temperature or take colder feed water.',
+    'The gas cannot leave with 120 °C: the coldest water it meets, the feedwater, has 160 °C. Raise the exhaust temperature or take colder feedwater.',
   ],
   [
     { code: 'engine/boiler-heat', why: 'pinch', boils: celsius(276), share: share(0.82) },
@@ -149,7 +149,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
       salts: ['Na2CO3'],
       firstMelting: celsius(632),
     },
-    'Na2CO3 lies molten on metal of 660 °C (first melting at 632 °C) and dissolves its oxide. Keep the metal below first melting, or take the solids out before it.',
+    'Na2CO3 lies molten on metal of 660 °C (first melting at 632 °C) and dissolves its oxide (basic fluxing). Keep the metal below first melting, or take the solids out before it.',
   ],
   [
     {
@@ -159,7 +159,7 @@ export const PLANT_ROWS: readonly (readonly [Fact, string])[] = [
       salts: ['Na2CO3', 'NaOH'],
       firstMelting: null,
     },
-    'Na2CO3 and NaOH lie molten on metal from 860 °C to 900 °C and dissolve its oxide. Keep the metal below first melting, or take the solids out before it.',
+    'Na2CO3 and NaOH lie molten on metal from 860 °C to 900 °C and dissolve its oxide (basic fluxing). Keep the metal below first melting, or take the solids out before it.',
   ],
 ];
 

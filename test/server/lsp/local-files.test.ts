@@ -48,10 +48,10 @@ describe.runIf(process.platform !== 'win32')('a link', () => {
     ['that the limit itself is reached by is followed', 'alias/in.stoke', 'alias/', { text: 'let open = 1\n' }],
     ['out of such a limit is not', 'alias/out.stoke', 'alias', outside],
     [
-      'that goes round in a ring is a fault',
+      'that links to itself in a loop is a fault',
       'ship/ring.stoke',
       'ship',
-      { fault: 'unreadable', detail: 'Its links go round in a ring.' },
+      { fault: 'unreadable', detail: 'Its links form a loop.' },
     ],
     ['to nothing is a missing file', 'ship/dangling.stoke', 'ship', { fault: 'missing' }],
     ['in a limit that is not there leads nowhere', 'ship/in.stoke', 'nowhere', outside],

@@ -32,8 +32,8 @@ describe('names', () => {
     const [finding, ...others] = findingsOf(evaluate('ring.stoke', () => ({ text })));
     expect(others).toEqual([]);
     expect(finding?.message).toBe(
-      'These definitions go round in a ring: `a0` needs `a1`, `a1` needs `a2`, `a2` needs `a3`, so on through 4 more and ' +
-        '`a8` needs `a0` again. Break it at one of them.',
+      'These definitions depend on each other in a circle: `a0` needs `a1`, `a1` needs `a2`, `a2` needs `a3`, so on through 4 more and ' +
+        '`a8` needs `a0` again. Break the circle at one of them.',
     );
   });
 

@@ -140,7 +140,7 @@ describe('an effluent', () => {
     expect(figureOf(scenario, 'one', 'effluent-uptake')).toBeCloseTo(31 * perMole - 7, 9);
     expect(figureOf(scenario, 'one', 'near-field-uptake')).toBeCloseTo(31 * perMole - 7, 1);
     expect(figureOf(scenario, 'one', 'near-field-ph-change')).toBeGreaterThan(0);
-    expect(figureOf(scenario, 'one', 'settled-ph-change')).toBeLessThan(
+    expect(figureOf(scenario, 'one', 'equilibrium-ph-change')).toBeLessThan(
       figureOf(scenario, 'one', 'near-field-ph-change') ?? 0,
     );
   });
@@ -198,12 +198,12 @@ describe('an effluent', () => {
         mixed-layer residence: 200 d
       }
     `);
-    const time = figureOf(scenario, 'one', 'settling-time') ?? NaN;
+    const time = figureOf(scenario, 'one', 'equilibration-time') ?? NaN;
     // Weeks to months.
     expect(time).toBeGreaterThan(30);
     expect(time).toBeLessThan(365);
     // The transfer velocity is known to 20 %.
-    expect((uncertaintyOf(scenario, 'one', 'settling-time') ?? NaN) / time).toBeCloseTo(0.2, 1);
+    expect((uncertaintyOf(scenario, 'one', 'equilibration-time') ?? NaN) / time).toBeCloseTo(0.2, 1);
     expect(figureOf(scenario, 'one', 'mixed-layer-share')).toBeCloseTo(200 / (200 + time), 12);
   });
 });
