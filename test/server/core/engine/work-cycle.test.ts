@@ -119,6 +119,18 @@ describe('the residual gas', () => {
     expect(filled.temperatureK).toBeGreaterThan(300);
   });
 
+  // The losses close whatever the cylinder is filled with, as the exhaust is what is left of the balance; this does not.
+  test('and the fresh gas fill the cylinder by the first law, the piston drawing them in', () => {
+    const [intakePressurePa, exhaustPressurePa] = [3e5, 2e5];
+    const charge = engine(gasOil, 2, { intakePressurePa, exhaustPressurePa });
+    const { blownDown, filled, residualShare } = solvedCycle(charge).cycle;
+    const clearanceM3 = residualShare * blownDown.volumeM3;
+    const stayingJ = residualShare * blownDown.enthalpyJ - exhaustPressurePa * clearanceM3;
+    const pistonJ = intakePressurePa * (filled.volumeM3 - clearanceM3);
+    const energyJ = filled.enthalpyJ - intakePressurePa * filled.volumeM3;
+    expect((energyJ - stayingJ - charge.fresh.enthalpyJ + pistonJ) / pistonJ).toBeCloseTo(0, 9);
+  });
+
   test('is the share that is asked for, or none', () => {
     const share = solvedCycle(engine(gasOil, 2, { residual: { by: 'share', share: 0.1 } }));
     expect(share.cycle.residualShare).toBeCloseTo(0.1, 12);
