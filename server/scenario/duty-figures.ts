@@ -6,6 +6,8 @@ import { loadHistogram, sumsOf, type PlannedLeg } from '../core/duty/plan.ts';
 import type { TestCycle } from '../core/duty/test-cycles.ts';
 import { loadsOfModes } from '../core/duty/test-cycles.ts';
 import { fuelPowerAt, type Band, type Consumption } from '../core/engine/consumption.ts';
+import { total } from '../core/quantity/total.ts';
+import { finiteCell } from './finite-cell.ts';
 import { lowerHeatingValueOf } from './heat-above-exhaust.ts';
 import type { BurningEngine, DutyMachine, PilotEntry } from './machinery.ts';
 import type { Material } from './material.ts';
@@ -94,13 +96,13 @@ function heatingValueIn(fuel: Material | null, pilot: PilotEntry | null, list: Q
 }
 
 function planValues(plan: readonly PlannedLeg[], rated: readonly number[]): FigureValues {
-  const timeS = sum(plan.map((leg) => leg.timeS));
+  const timeS = total(plan.map((leg) => leg.timeS));
   const { energyJ, weightedLoad } = sumsOf(plan, rated);
   const distances = plan.flatMap(({ distanceM }) => (distanceM === null ? [] : [distanceM]));
-  const [shoreJ, boilerJ] = [sum(plan.map((leg) => leg.shoreJ)), sum(plan.flatMap((leg) => leg.boilerJ))];
+  const [shoreJ, boilerJ] = [total(plan.map((leg) => leg.shoreJ)), total(plan.flatMap((leg) => leg.boilerJ))];
   return {
     hours: timeS,
-    distance: distances.length > 0 ? sum(distances) : undefined,
+    distance: distances.length > 0 ? total(distances) : undefined,
     energy: energyJ,
     'mean-power': energyJ / timeS,
     'weighted-load': weightedLoad,
@@ -135,7 +137,7 @@ function fuelValues(
 /** The loads of a test cycle's modes, weighted: known without an engine. */
 export function weightedLoadOf(cycle: TestCycle, intermediate: number): number {
   const loads = loadsOfModes(cycle, intermediate);
-  return sum(cycle.modes.map(({ weight }, index) => weight * (loads[index] ?? NaN)));
+  return total(cycle.modes.map(({ weight }, index) => weight * (loads[index] ?? NaN)));
 }
 
 export function dutyTables(duty: DutyMachine): readonly Table[] {
@@ -165,21 +167,21 @@ function legTable(
       { id: 'energy', label: 'Work', unit: 'kWh' },
     ],
     rows: plan.flatMap((leg, index) => {
-      const speed = leg.speedMPerS === null ? null : finite(leg.speedMPerS / knotMPerS);
+      const speed = leg.speedMPerS === null ? null : finiteCell(leg.speedMPerS / knotMPerS);
       const ofEngines = [...new Set(leg.demands.map(({ engine }) => engine))].map((engine) => {
         const { runningS, energyJ, weightedLoad } = sumsOf([leg], rated, engine);
         return [
           duty.legNames[index] ?? '',
           nameOf(engine),
-          finite(runningS / 3600),
+          finiteCell(runningS / 3600),
           speed,
-          finite(energyJ / runningS / 1e3),
-          finite(weightedLoad),
-          finite(energyJ / kwhJ),
+          finiteCell(energyJ / runningS / 1e3),
+          finiteCell(weightedLoad),
+          finiteCell(energyJ / kwhJ),
         ];
       });
-      const shore = [duty.legNames[index] ?? '', 'shore', finite(leg.timeS / 3600), null];
-      const fromShore = [finite(leg.shoreJ / leg.timeS / 1e3), null, finite(leg.shoreJ / kwhJ)];
+      const shore = [duty.legNames[index] ?? '', 'shore', finiteCell(leg.timeS / 3600), null];
+      const fromShore = [finiteCell(leg.shoreJ / leg.timeS / 1e3), null, finiteCell(leg.shoreJ / kwhJ)];
       return [...ofEngines, ...(leg.shoreJ > 0 ? [[...shore, ...fromShore]] : [])];
     }),
   };
@@ -197,7 +199,7 @@ function engineTable(duty: DutyMachine, plan: readonly PlannedLeg[], rated: read
     ],
     rows: duty.engines.map(({ name }, engine) => {
       const { runningS, energyJ, weightedLoad } = sumsOf(plan, rated, engine);
-      return [name, finite(runningS / 3600), finite(energyJ / kwhJ), finite(weightedLoad)];
+      return [name, finiteCell(runningS / 3600), finiteCell(energyJ / kwhJ), finiteCell(weightedLoad)];
     }),
   };
 }
@@ -254,14 +256,6 @@ const nothing: Band = { value: 0, low: 0, high: 0 };
 const kwhJ = 3.6e6;
 const knotMPerS = 1852 / 3600;
 
-function plus(total: Band, { value, low, high }: Band, times: number): Band {
-  return { value: total.value + value * times, low: total.low + low * times, high: total.high + high * times };
-}
-
-function sum(numbers: readonly number[]): number {
-  return numbers.reduce((total, one) => total + one, 0);
-}
-
-function finite(value: number): number | null {
-  return Number.isFinite(value) ? value : null;
+function plus(before: Band, { value, low, high }: Band, times: number): Band {
+  return { value: before.value + value * times, low: before.low + low * times, high: before.high + high * times };
 }

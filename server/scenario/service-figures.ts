@@ -4,6 +4,8 @@
 
 import type { Corner, ServiceSums } from '../core/service/service.ts';
 import type { Band } from '../core/engine/consumption.ts';
+import { total } from '../core/quantity/total.ts';
+import { finiteCell } from './finite-cell.ts';
 import type { FigureRow } from './material-figures.ts';
 import type { FigureValues } from './propagated-figures.ts';
 import type { FuelledService } from './service-machine.ts';
@@ -202,9 +204,9 @@ export function fuelTable(service: FuelledService, sums: ServiceSums, repeated: 
       const kg = sums.fuelKg[index] ?? 0;
       return [
         name,
-        finite(kg / 1e3),
-        finite(kg / total(sums.fuelKg)),
-        repeated === null ? null : finite((kg * repeated * yearS) / 1e3),
+        finiteCell(kg / 1e3),
+        finiteCell(kg / total(sums.fuelKg)),
+        repeated === null ? null : finiteCell((kg * repeated * yearS) / 1e3),
       ];
     }),
   };
@@ -223,9 +225,9 @@ export function onBoardTable(legs: readonly string[], sums: ServiceSums): Table 
     ],
     rows: sums.afterLegs.map(({ fuelKg, residueKg }, index) => [
       legs[index] ?? '',
-      finite(fuelKg / 1e3),
-      finite(residueKg / 1e3),
-      finite((fuelKg + residueKg) / 1e3),
+      finiteCell(fuelKg / 1e3),
+      finiteCell(residueKg / 1e3),
+      finiteCell((fuelKg + residueKg) / 1e3),
     ]),
   };
 }
@@ -260,25 +262,17 @@ export function compareTable(
     ],
     rows: compared.map(({ name, sums }) => [
       name,
-      finite(total(sums.fuelKg) / 1e3),
-      finite(sums.fuelJ / 1e9),
-      finite(sums.carbonDioxideKg / 1e3),
-      repeated === null ? null : finite((sums.carbonDioxideKg * repeated * yearS) / 1e3),
-      finite((sums.alkaliSaltKg + sums.ashKg) / 1e3),
-      finite(sums.tankM3),
-      finite(sums.heaviestKg / 1e3),
-      baseline && finite((sums.heaviestKg - baseline.heaviestKg) / 1e3),
-      finite(sums.enduranceS / 86400),
+      finiteCell(total(sums.fuelKg) / 1e3),
+      finiteCell(sums.fuelJ / 1e9),
+      finiteCell(sums.carbonDioxideKg / 1e3),
+      repeated === null ? null : finiteCell((sums.carbonDioxideKg * repeated * yearS) / 1e3),
+      finiteCell((sums.alkaliSaltKg + sums.ashKg) / 1e3),
+      finiteCell(sums.tankM3),
+      finiteCell(sums.heaviestKg / 1e3),
+      baseline && finiteCell((sums.heaviestKg - baseline.heaviestKg) / 1e3),
+      finiteCell(sums.enduranceS / 86400),
     ]),
   };
 }
 
 const yearS = 365.25 * 86400;
-
-function total(numbers: readonly number[]): number {
-  return numbers.reduce((sum, one) => sum + one, 0);
-}
-
-function finite(value: number): number | null {
-  return Number.isFinite(value) ? value : null;
-}

@@ -4,6 +4,7 @@
 // common divisor. Method: null space of the element matrix over the rationals; smallest sum by search from an exact bound.
 
 import Fraction from 'fraction.js';
+import { total } from '../quantity/total.ts';
 import type { Formula } from '../substance/formula.ts';
 import { countOfElement, elementsOfFormulas } from './elements.ts';
 import { minimise, nullSpace, one, reduceRows, zero } from './exact-linear.ts';
@@ -139,7 +140,7 @@ function smallestWholeBalance(
   const free = Array.from({ length: columnCount }, (_, column) => column).filter((column) => !pivots.includes(column));
   const weights = rows.map((row) => free.map((column) => (row[column] ?? zero).neg().valueOf()));
   let best = start;
-  let bestSum = start === undefined ? Infinity : sumOf(start);
+  let bestSum = start === undefined ? Infinity : total(start);
   let trials = 0;
   for (let freeSum = free.length; freeSum + pivots.length <= bestSum; freeSum += 1) {
     for (const values of compositionsOfSum(freeSum, free.length)) {
@@ -150,12 +151,12 @@ function smallestWholeBalance(
       );
       // Weights are exact small ratios turned to doubles; a whole number is off by rounding only.
       if (!pivotValues.every((value) => value > 0.5 && Math.abs(value - Math.round(value)) < 1e-9)) continue;
-      const total = freeSum + sumOf(pivotValues.map(Math.round));
-      if (total >= bestSum) continue;
+      const sum = freeSum + total(pivotValues.map(Math.round));
+      if (sum >= bestSum) continue;
       const candidate = new Array<number>(columnCount).fill(0);
       free.forEach((column, index) => (candidate[column] = values[index] ?? 0));
       pivots.forEach((column, index) => (candidate[column] = Math.round(pivotValues[index] ?? 0)));
-      [best, bestSum] = [candidate, total];
+      [best, bestSum] = [candidate, sum];
       if (bestSum <= lowerBound) return { best, proven: true };
     }
   }
@@ -210,8 +211,4 @@ function wholeNumbers(fractions: readonly Fraction[]): readonly number[] | undef
 function splitSides(coefficients: readonly number[], places: readonly SpeciesPlace[]): BalancedCoefficients {
   const leftCount = places.filter((place) => place.side === 'left').length;
   return { left: coefficients.slice(0, leftCount), right: coefficients.slice(leftCount) };
-}
-
-function sumOf(values: readonly number[]): number {
-  return values.reduce((sum, value) => sum + value, 0);
 }

@@ -5,6 +5,7 @@
 
 import type { PlannedLeg } from '../duty/plan.ts';
 import { fuelPowerAt, type Band, type Consumption } from '../engine/consumption.ts';
+import { total } from '../quantity/total.ts';
 
 /** What a kilogram of a fuel is and gives; NaN where that is not known. */
 export interface FuelNumbers {
@@ -240,8 +241,4 @@ function overFuels(
 function sumSlips(byLeg: readonly LegFuel[]): Readonly<Record<SlipName, number>> {
   const of = (name: SlipName): number => total(byLeg.map(({ slipKg }) => slipKg[name]));
   return { methane: of('methane'), nitrousOxide: of('nitrousOxide'), ammonia: of('ammonia'), urea: of('urea') };
-}
-
-function total(numbers: readonly number[]): number {
-  return numbers.reduce((sum, one) => sum + one, 0);
 }

@@ -21,6 +21,7 @@ import { longestBurnOutS } from './burn-out-times.ts';
 import { readingsOf, solvedBurn, type AskedOfBurn, type BurnReadings, type SolvedBurn } from './burn-solved.ts';
 import { carbonateShare } from './burn-tables.ts';
 import { partsBySlope } from './burn-uncertainty.ts';
+import { answerAt } from './kept-answer.ts';
 
 /** Which states a figure needs: where states are solved anew, those of one group are solved together. */
 type Group = 'flame' | 'zone' | 'slate' | 'exhaust' | 'burn-out';
@@ -285,10 +286,9 @@ function propagateGroup(
   asked: AskedOfBurn,
 ): ReadonlyMap<string, Propagated> {
   const rows = burnFigures.filter((row) => row.group === group);
-  const centre = quantities.map(({ value }) => value);
+  const at = answerAt(quantities, solved, (values) => solveAt(input(values), { ...asked, ...askedAt(values) }));
   const outcomes = propagate(quantities, (values) => {
-    const isCentre = values.every((value, index) => Object.is(value, centre[index]));
-    const states = isCentre ? solved : solveAt(input(values), { ...asked, ...askedAt(values) });
+    const states = at(values);
     const readings = states && readingsOf(states);
     return rows.map(({ value }) => (readings && value(readings)) ?? NaN);
   });

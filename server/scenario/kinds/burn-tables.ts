@@ -9,6 +9,7 @@ import { depositOf } from '../../core/burn/deposit.ts';
 import { alkaliFates, carbonFate, carbonFormOf, shareOfForm, type Fate } from '../../core/burn/fates.ts';
 import { gasOfState } from '../../core/burn/gas-of-state.ts';
 import type { Equilibrium } from '../../core/equilibrium/equilibrium.ts';
+import { finiteCell } from '../finite-cell.ts';
 import { lazily } from '../lazily.ts';
 import { burnPathTables } from './burn-path-tables.ts';
 import { peakGasColumns, peakGasRows } from './burn-peak-gases.ts';
@@ -212,7 +213,7 @@ function certificateTable({ certificate }: Equilibrium): Table {
     { id: 'residual', label: 'Residual', unit: '1' },
   ];
   return lazyTable({ id: 'certificate', label: 'Certificate of the equilibrium', columns }, () =>
-    certificateRows.map(([key, label]) => [label, finite(certificate[key])]),
+    certificateRows.map(([key, label]) => [label, finiteCell(certificate[key])]),
   );
 }
 
@@ -229,8 +230,4 @@ function lazyTable(
 
 function inGrams(kg: number | undefined): number | null {
   return kg === undefined ? null : kg * 1000;
-}
-
-function finite(value: number): number | null {
-  return Number.isFinite(value) ? value : null;
 }

@@ -13,7 +13,6 @@ import { reportFuelHazards } from '../blend-hazards.ts';
 import { fuelStream, oxidantStream } from '../burn-streams.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type DefinitionRead, type EntriesRead } from '../entries.ts';
-import { lazily } from '../lazily.ts';
 import { figuresOfMaterial } from '../material-figures.ts';
 import type { Absent } from '../scenario.ts';
 import { burnEntries, defaultExhaustC } from './burn-entries.ts';
@@ -33,7 +32,7 @@ import { questionOf, type WrittenAmount, type WrittenBurn } from './burn-questio
 import { solvedBurn, type AskedOfBurn, type SolvedBurn } from './burn-solved.ts';
 import { burnTables } from './burn-tables.ts';
 import { burnWorking, workingPlaces } from './burn-working.ts';
-import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 const evaluated: EvaluatedKind = { entries: burnEntries, lines: [], figures: burnFigures, evaluate };
 
@@ -86,8 +85,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   reportCooledBeyondData(burning, flame, places.cooled, context);
   const hasSize = asked.sizes.dropletSize !== null || asked.sizes.particleSize !== null;
   const entryPlaces = workingPlaces(read, context);
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, screening },
+  return lazyAnswer(
+    { screening },
     {
       figures: () => figuresOf(solved, question, asked, (row) => burnWorking(row, written, solved, names, entryPlaces)),
       tables: () => [

@@ -4,9 +4,8 @@
 import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines } from '../entries.ts';
-import { lazily } from '../lazily.ts';
 import { compareTable } from '../service-figures.ts';
-import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 import { compareEntries } from './service-entries.ts';
 
 const evaluated: EvaluatedKind = { entries: compareEntries, lines: [], figures: [], evaluate };
@@ -32,8 +31,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
       missing,
     });
   }
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null },
+  return lazyAnswer(
+    {},
     {
       tables: () => {
         const compared = fuels.map((fuel) => {

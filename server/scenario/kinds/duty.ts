@@ -11,14 +11,13 @@ import { dutyFigures, dutyTables, figuresOfDuty, modeTable, weightedLoadOf } fro
 import { dutyMachineOf, type NamedLeg, type WrittenDuty } from '../duty-machine.ts';
 import { legReader, startsWithExtent } from '../duty-readers.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
-import { lazily } from '../lazily.ts';
 import type { DutyMachine } from '../machinery.ts';
 import type { Figure } from '../scenario.ts';
 import { unmeasuredLoads } from '../unmeasured-loads.ts';
 import type { Working, WorkingInput } from '../working.ts';
 import { defaultExponent, defaultIntermediate, dutyEntries } from './duty-entries.ts';
 import { reportDuty, reportLegName, type LegPlaces } from './duty-facts.ts';
-import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 
 const evaluated: EvaluatedKind = { entries: dutyEntries, legs: legReader, lines: [], figures: dutyFigures, evaluate };
 
@@ -85,15 +84,14 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const machine = dutyMachineOf(written);
   reportDuty(machine, written, placesOf(read, legs, header), context);
   const working = workingOf(written, machine, read, context);
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
+  return lazyAnswer(
+    { machinery: machine },
     {
       figures: () => [...withCycleLoad(figuresOfDuty(machine, working), written, working)],
       tables: () => [
         ...(written.cycle ? [modeTable(written.cycle.cycle, written.intermediate.value)] : []),
         ...(written.cycle && !written.cycle.engine ? [] : dutyTables(machine)),
       ],
-      absent: () => new Map(),
     },
   );
 }

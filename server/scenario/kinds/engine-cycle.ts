@@ -4,7 +4,6 @@
 // diagram and the exhaust's table wait until somebody reads them.
 
 import { loadTable } from '../engine-consumption.ts';
-import { lazily } from '../lazily.ts';
 import { propagatedFigures } from '../propagated-figures.ts';
 import type { Figure } from '../scenario.ts';
 import { cyclePlaces, reportCycle, reportNoCycle } from './engine-cycle-facts.ts';
@@ -14,7 +13,7 @@ import { cycleTables } from './engine-cycle-tables.ts';
 import { cycleWorking, placesOfEntries } from './engine-cycle-working.ts';
 import { missingEntries, writtenCycle } from './engine-cycle-written.ts';
 import type { EngineAsked } from './engine-entries.ts';
-import { unknownAnswer, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type KindAnswer } from './kind.ts';
 
 export function evaluateCycle(asked: EngineAsked): KindAnswer {
   const { read, broken, context, definition } = asked;
@@ -70,8 +69,8 @@ export function evaluateCycle(asked: EngineAsked): KindAnswer {
       (row) => cycleWorking(row, written, solved, entryPlaces),
     );
   const loads = [0.25, 0.5, 0.75, 0.85, 1];
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
+  return lazyAnswer(
+    { machinery: machine },
     {
       figures,
       tables: () => {

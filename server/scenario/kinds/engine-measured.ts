@@ -12,7 +12,6 @@ import { consumptionFigures, consumptionValues, loadTable } from '../engine-cons
 import type { AtLoad } from '../engine-readers.ts';
 import type { ReadEntry } from '../entries.ts';
 import { lowerHeatingValueOf, shareAboveExhaust, workFrozenBelowC, type LeanBurning } from '../heat-above-exhaust.ts';
-import { lazily } from '../lazily.ts';
 import type { BurningEngine, EngineMachine, EngineSlips, NotBurning } from '../machinery.ts';
 import type { Material } from '../material.ts';
 import { figuresOfMaterial } from '../material-figures.ts';
@@ -21,7 +20,7 @@ import type { Absent, Figure } from '../scenario.ts';
 import type { AssumptionId, Working } from '../working.ts';
 import type { EngineAsked, EngineRead } from './engine-entries.ts';
 import { engineMachine, slipsOf } from './engine-machine.ts';
-import { unknownAnswer, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type KindAnswer } from './kind.ts';
 
 /** λ and exhaust of a measured engine where none is given (common practice of diesels at load); stated in the entries' help. */
 export const measuredLambda = 2.2;
@@ -235,8 +234,8 @@ function answerOf(
       },
       working,
     );
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
+  return lazyAnswer(
+    { machinery: machine },
     {
       figures,
       tables: () => (own.consumption ? [loadTable(own.consumption, ownHeatingValue.value, loads)] : []),

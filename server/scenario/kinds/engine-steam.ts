@@ -11,7 +11,6 @@ import { knownUnit } from '../../core/quantity/convert.ts';
 import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import type { Context } from '../context.ts';
 import { loadTable } from '../engine-consumption.ts';
-import { lazily } from '../lazily.ts';
 import { propagatedFigures } from '../propagated-figures.ts';
 import { reportMetal } from '../report-metal.ts';
 import type { Figure } from '../scenario.ts';
@@ -27,7 +26,7 @@ import {
   type SolvedSteamQuestion,
   type WrittenSteam,
 } from './engine-steam-solved.ts';
-import { unknownAnswer, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type KindAnswer } from './kind.ts';
 import { reportNoState } from './plant-facts.ts';
 import { kelvin } from './plant-question.ts';
 import { plantWorking } from './plant-working.ts';
@@ -80,8 +79,8 @@ export function evaluateSteam({ read, broken, context, definition }: EngineAsked
           assumptions: steamAssumptions(written),
         }),
     );
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
+  return lazyAnswer(
+    { machinery: machine },
     {
       figures,
       tables: () => {

@@ -13,7 +13,6 @@ import { quantityOf, type Quantity } from '../../core/quantity/quantity.ts';
 import { celsiusZeroK } from '../../core/quantity/constants.ts';
 import type { Context } from '../context.ts';
 import { loadTable } from '../engine-consumption.ts';
-import { lazily } from '../lazily.ts';
 import { propagatedFigures } from '../propagated-figures.ts';
 import { reportMetal } from '../report-metal.ts';
 import type { Figure } from '../scenario.ts';
@@ -30,7 +29,7 @@ import {
   type WrittenTurbine,
 } from './engine-turbine-solved.ts';
 import { turbineTables } from './engine-turbine-tables.ts';
-import { unknownAnswer, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type KindAnswer } from './kind.ts';
 import { reportNoState } from './plant-facts.ts';
 import { kelvin } from './plant-question.ts';
 import { plantWorking, type WorkingPoint } from './plant-working.ts';
@@ -98,8 +97,8 @@ export function evaluateTurbine({ read, broken, context, definition }: EngineAsk
           assumptions: turbineAssumptions(own),
         }),
     );
-  return lazily<KindAnswer>(
-    { figures: [], tables: [], absent: new Map(), lines: [], material: null, machinery: machine },
+  return lazyAnswer(
+    { machinery: machine },
     {
       figures,
       tables: () => {

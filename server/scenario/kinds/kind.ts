@@ -4,6 +4,7 @@
 import type { Definition } from '../../../grammar/tree.ts';
 import type { Context } from '../context.ts';
 import type { EntryTable, Reader } from '../entries.ts';
+import { lazily } from '../lazily.ts';
 import type { Material } from '../material.ts';
 import type { Machinery } from '../machinery.ts';
 import type { FigureRow } from '../material-figures.ts';
@@ -51,4 +52,12 @@ export function unknownAnswer(kind: Pick<EvaluatedKind, 'figures'>): KindAnswer 
     lines: [],
     material: null,
   };
+}
+
+/** An answer whose parts are worked out when somebody reads them; what is not given is empty. `parts` is taken over. */
+export function lazyAnswer(
+  given: Partial<KindAnswer>,
+  parts: { readonly [Key in keyof KindAnswer]?: () => KindAnswer[Key] },
+): KindAnswer {
+  return lazily<KindAnswer>({ figures: [], tables: [], absent: new Map(), lines: [], material: null, ...given }, parts);
 }

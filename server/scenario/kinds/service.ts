@@ -8,7 +8,6 @@ import { quantityOf } from '../../core/quantity/quantity.ts';
 import type { ServiceSums } from '../../core/service/service.ts';
 import type { Context } from '../context.ts';
 import { readEntries, refuseLines, type EntriesRead } from '../entries.ts';
-import { lazily } from '../lazily.ts';
 import type { FigureRow } from '../material-figures.ts';
 import { propagatedFigures } from '../propagated-figures.ts';
 import { QuantityList } from '../quantity-list.ts';
@@ -24,7 +23,7 @@ import {
 } from '../service-machine.ts';
 import { unmeasuredLoads } from '../unmeasured-loads.ts';
 import type { AssumptionId, Working, WorkingInput } from '../working.ts';
-import { unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
+import { lazyAnswer, unknownAnswer, type EvaluatedKind, type Kind, type KindAnswer } from './kind.ts';
 import { defaultFilling, serviceEntries } from './service-entries.ts';
 
 const evaluated: EvaluatedKind = { entries: serviceEntries, lines: [], figures: serviceFigures, evaluate };
@@ -65,13 +64,8 @@ function evaluate(definition: Definition, context: Context): KindAnswer {
   const sums = own.sumsAt(list.values, 'value');
   reportTanks(own, sums, written, read.tanks?.entry.span ?? definition.header, context);
   const working = workingOf(written, read, context);
-  return lazily<KindAnswer>(
+  return lazyAnswer(
     {
-      figures: [],
-      tables: [],
-      absent: new Map(),
-      lines: [],
-      material: null,
       machinery: serviceMachineOf(
         written,
         mainFuelOf(own, list.values),
